@@ -1,0 +1,105 @@
+import { asciiText } from './ascii.js';
+import { plainText, roundToDigits, type Digits, type Rounding } from './decimal.js';
+
+export interface FormatOptions {
+  /** Significant digits, 3 by default. Trailing zeros are never shown. */
+  readonly digits?: number;
+  /** `up` is toward plus infinity, `down` toward minus infinity: the unsafe side is the caller's to name. */
+  readonly round?: Rounding;
+  /** uV, ohm, nV/rtHz. */
+  readonly ascii?: boolean;
+}
+
+/**
+ * A value in SI units as a person reads it (rule Q-20): number, blank, unit with an engineering prefix. The minus is the
+ * ASCII hyphen; U+2212 belongs to HTML and to `Quantity.echo`. `1/K` is shown as ppm/°C, `V/K` as V/°C; `%` takes percent;
+ * the unit `1` or an empty one shows the number alone. Throws RangeError when the value is not finite.
+ */
+export function formatQuantity(value: number, unit: string, options: FormatOptions = {}): string {
+  const digits = roundToDigits(value, options.digits ?? 3, options.round ?? 'nearest');
+  const { shift, text } = scaledUnit(digits, unit);
+  const number = plainText(digits, shift);
+  const whole = text === '' ? number : `${number} ${text}`;
+  return options.ascii ? asciiText(whole) : whole;
+}
+
+/** Both ends with their own prefix: `900 mV..1.2 V`. */
+export function formatRange(min: number, max: number, unit: string, options: FormatOptions = {}): string {
+  return `${formatQuantity(min, unit, options)}..${formatQuantity(max, unit, options)}`;
+}
+
+/** A voltage ratio in decibels, 20·log10 of its magnitude. Throws RangeError for a ratio of zero. */
+export function formatDecibels(ratio: number, options: FormatOptions = {}): string {
+  return formatQuantity(20 * Math.log10(Math.abs(ratio)), 'dB', options);
+}
+
+/** A fraction (0.05) in percent: `5 %`. */
+export function formatPercent(fraction: number, options: FormatOptions = {}): string {
+  const digits = roundToDigits(fraction, options.digits ?? 3, options.round ?? 'nearest');
+  return `${plainText(digits, 2)} %`;
+}
+
+const PREFIXED = new Set(['V', 'A', 'Ω', 'F', 'Hz', 's', 'W', 'H', 'S', 'J', 'V/√Hz', 'A/√Hz', 'V/Hz', 'A/Hz', 'V/K', 'Vpk', 'Vpp', 'Vrms']);
+const SYMBOLS = new Map([[-15, 'f'], [-12, 'p'], [-9, 'n'], [-6, 'µ'], [-3, 'm'], [0, ''], [3, 'k'], [6, 'M'], [9, 'G'], [12, 'T']]);
+
+interface ScaledUnit {
+  /** Power of ten the digits are multiplied with. */
+  readonly shift: number;
+  readonly text: string;
+}
+
+function scaledUnit(digits: Digits, unit: string): ScaledUnit {
+  if (unit === '1') return { shift: 0, text: '' };
+  if (unit === '1/K') return { shift: 6, text: 'ppm/°C' };
+  if (unit === 'V/s') return slewUnit(digits);
+  if (!PREFIXED.has(unit)) return { shift: 0, text: unit };
+  const { shift, symbol } = engineering(digits, 0);
+  return { shift, text: symbol + (unit === 'V/K' ? 'V/°C' : unit) };
+}
+
+/** Slew rates are spoken per microsecond from 10 mV/µs up, per millisecond from 1 V/ms up, per second below. */
+function slewUnit(digits: Digits): ScaledUnit {
+  const [per, decades]: [string, number] = digits.exponent >= 4 ? ['µs', 6] : digits.exponent >= 3 ? ['ms', 3] : ['s', 0];
+  const { shift, symbol } = engineering(digits, -decades);
+  return { shift, text: `${symbol}V/${per}` };
+}
+
+/** The prefix that leaves one to three digits before the point, after multiplying with 10^offset. */
+function engineering(digits: Digits, offset: number): { shift: number; symbol: string } {
+  if (digits.digits === '0') return { shift: offset, symbol: '' };
+  const power = Math.max(-15, Math.min(12, Math.floor((digits.exponent + offset) / 3) * 3));
+  return { shift: offset - power, symbol: SYMBOLS.get(power) ?? '' };
+}
+
+/** Two printed numbers whose comparison reads as it is: offered, required. */
+export type PrintedComparison = readonly [offered: string, required: string];
+
+/** Digits of a binary64 number that always tell it from its neighbours. */
+const ALL_DIGITS = 17;
+
+/**
+ * Offered against required, rounded toward the unsafe side (rule Q-20): for at-least the offered number down and the
+ * required one up, for at-most the other way round; three digits, and more where fewer would show a pass as a fail or a fail as a pass.
+ * Equal numbers read equal.
+ */
+export function formatComparison(offered: number, required: number, unit: string, sense: 'at-least' | 'at-most', ascii = false): PrintedComparison {
+  const [offeredSide, requiredSide] = sense === 'at-least' ? (['down', 'up'] as const) : (['up', 'down'] as const);
+  const met = sense === 'at-least' ? offered >= required : offered <= required;
+  const print = (value: number, round: 'up' | 'down' | 'nearest', digits: number): string => formatQuantity(value, unit, { digits, round, ascii });
+  if (offered === required) return [print(offered, 'nearest', 3), print(required, 'nearest', 3)];
+  for (let digits = 3; digits < ALL_DIGITS; digits++) {
+    if (printedMet(offered, required, { digits, sense }) !== met) continue;
+    return [print(offered, offeredSide, digits), print(required, requiredSide, digits)];
+  }
+  return [print(offered, 'nearest', ALL_DIGITS), print(required, 'nearest', ALL_DIGITS)];
+}
+
+/** Whether the two numbers as printed say that the comparison is met. */
+function printedMet(offered: number, required: number, how: { digits: number; sense: 'at-least' | 'at-most' }): boolean {
+  const atLeast = how.sense === 'at-least';
+  const printedOffered = printed(offered, how.digits, atLeast ? 'down' : 'up');
+  const printedRequired = printed(required, how.digits, atLeast ? 'up' : 'down');
+  return atLeast ? printedOffered >= printedRequired : printedOffered <= printedRequired;
+}
+
+const printed = (value: number, digits: number, round: Rounding): number => Number(plainText(roundToDigits(value, digits, round), 0));
