@@ -1,0 +1,15 @@
+import { describe, expect, it } from 'vitest';
+import { inputCrossoverDistortion } from '../../src/formulas/input-crossover.js';
+import { example, refuses } from '../support/examples.js';
+
+describe('input crossover', () => {
+  const swing = { step: 1e-3, crossover: 3.5, level: 2.5, peak: 2 };
+  example('inputCrossoverDistortion', () => inputCrossoverDistortion(swing), 1.87404e-4);
+  it('vanishes where the swing just touches the crossover', () => {
+    expect(inputCrossoverDistortion({ ...swing, crossover: 4.5 })).toBe(0);
+  });
+  refuses(
+    () => inputCrossoverDistortion({ ...swing, crossover: 5 }),
+    'inputCrossoverDistortion: crossover must be finite, at least 0.5, at most 4.5, but is 5',
+  );
+});
