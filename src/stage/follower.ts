@@ -1,0 +1,27 @@
+import { inputOf, UNITY, type Circuit, type RatioCorner, type Surroundings } from './circuit.js';
+
+/** Unity-gain follower: output and both inputs move with the signal (method.md 1). */
+export function follower(around: Surroundings): Circuit {
+  const level = around.ac
+    ? (input: number, reference: number): number => reference + input
+    : (input: number): number => input;
+  const corner: RatioCorner = {
+    noiseGain: 1,
+    output: (point, reference) => level(inputOf(point, 'input'), reference),
+    commonMode: (point, reference) => level(inputOf(point, 'input'), reference),
+  };
+  return {
+    gain: 1,
+    noiseGain: UNITY,
+    dcNoiseGain: UNITY,
+    resistors: null,
+    nominal: corner,
+    corners: [corner],
+    networkConductance: 0,
+    networkEnd: (_commonMode, reference) => reference,
+    seriesPositive: around.ac ? around.referenceResistance : around.sourceResistance,
+    seriesNegative: 0,
+    resistorRejection: null,
+    notes: [],
+  };
+}
