@@ -1,0 +1,57 @@
+import type { DcErrorDemand } from '../demands/index.js';
+import { rootSumSquare, worstCaseSum } from '../formulas/dc-error.js';
+import { weakest } from '../parts/basis.js';
+import type { OffsetReading } from '../parts/offset.js';
+import type { Readings } from '../parts/readings.js';
+import type { BoundFinding, Finding, Term } from '../verdicts/finding.js';
+import type { Check } from './check.js';
+import { commonModeTerm, currentTerms, driftTerm, offsetTerm, outputTerm, supplyTerm, type ErrorTerm } from './dc-error-terms.js';
+
+/** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (method.md 5). */
+export const dcError: Check<DcErrorDemand> = {
+  id: 'dc-error',
+  title: 'DC error',
+  unit: 'V',
+  reads: ['offsetVoltage', 'offsetDrift', 'biasCurrent', 'offsetCurrent', 'commonModeRejection', 'supplyRejection', 'openLoopGain'],
+  hasMargin: true,
+  asks: (demands) => demands['dc-error'],
+  judge: judgeDcError,
+};
+
+function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
+  const offset = readings.offset();
+  const all = termsOf(asked, offset, readings);
+  const terms = all.flatMap((one) => (one.kind === 'value' ? [one.term] : []));
+  const known = worstCaseSum(terms.map((term) => term.value));
+  const missing = all.filter((one) => one.kind === 'missing');
+  const { required, unit, sense } = asked;
+  const corner = { temperature: asked.temperature, supply: fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal) };
+  const common = { required, unit, sense, terms, corner, basis: weakest(terms.map((term) => term.basis)) };
+  const [first] = missing;
+  if (first !== undefined) {
+    const turnsAt = missing.length === 1 && known < required ? first.turnsAt(required - known) : null;
+    return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
+  }
+  return { kind: 'numbers', ...common, offered: known, rss: rootSumSquare(terms.map((term) => term.value)), borrowed: borrowedSum(terms) };
+}
+
+/** The supply end farther from the one the offset is rated at. */
+function fartherEnd(asked: DcErrorDemand, rated: number): number {
+  const { min, max } = asked.supply;
+  return Math.abs(min - rated) > Math.abs(max - rated) ? min : max;
+}
+
+function termsOf(asked: DcErrorDemand, offset: OffsetReading | null, readings: Readings): ErrorTerm[] {
+  return [
+    offsetTerm(asked, offset),
+    driftTerm(asked, offset, readings),
+    ...currentTerms(asked, readings),
+    commonModeTerm(asked, readings),
+    supplyTerm(asked, offset, readings),
+    outputTerm(asked, readings),
+  ];
+}
+
+function borrowedSum(terms: readonly Term[]): number {
+  return worstCaseSum(terms.filter((term) => term.basis === 'borrowed').map((term) => term.value));
+}

@@ -1,0 +1,101 @@
+import type { HeadroomDemand, HeadroomVertex } from '../demands/index.js';
+import { weakest } from '../parts/basis.js';
+import type { Side } from '../parts/headroom.js';
+import type { HeadroomReading } from '../parts/headroom-curve.js';
+import type { Readings } from '../parts/readings.js';
+import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
+import { formatQuantity } from '../quantities/format.js';
+
+/** Head-room needed at every vertex: the part's curve at the current flowing there, plus the offset's share (method.md 1 and 6). */
+export function judgeHeadroom(asked: HeadroomDemand, side: Side, readings: Readings): VertexFindings {
+  const curve = readings.headroom(side);
+  const share = offsetShare(asked, readings);
+  return {
+    kind: 'vertices',
+    findings: asked.vertices.map((vertex) => findingAt(vertex, { side, share, reading: curve(vertex) })),
+  };
+}
+
+interface Share {
+  /** What the offset takes of the room at the output, V; only the part that is known. */
+  readonly terms: readonly Term[];
+  readonly value: number;
+  /** Caution when offset or drift is not known, given the spare left. */
+  caution(spare: number): string | null;
+}
+
+function offsetShare(asked: HeadroomDemand, readings: Readings): Share {
+  const { noiseGain, kelvin } = asked;
+  const offset = readings.offset();
+  const perKelvin = offset?.overTemperature === true || kelvin === 0 ? null : readings.figure('offsetDrift');
+  const terms: Term[] = [];
+  const times = `× noise gain ${Number(noiseGain.toPrecision(4))}`;
+  if (offset !== null) {
+    const how = [offset.how, times].filter((step) => step !== null).join(', ');
+    terms.push({ name: 'offset', value: noiseGain * offset.value, slot: offset.slot, basis: offset.basis, figure: { value: offset.printed ?? offset.value, unit: 'V' }, how });
+  }
+  if (perKelvin !== null && offset !== null) {
+    const how = [perKelvin.how, `× ${kelvin} K`, times].filter((step) => step !== null).join(', ');
+    terms.push({ name: 'offset drift', value: noiseGain * perKelvin.value * kelvin, slot: perKelvin.slot, basis: perKelvin.basis, figure: { value: perKelvin.printed ?? perKelvin.value, unit: 'V/K' }, how });
+  }
+  const driftKnown = offset?.overTemperature === true || kelvin === 0 || perKelvin !== null;
+  return {
+    terms,
+    value: terms.reduce((sum, term) => sum + term.value, 0),
+    caution: (spare) => cautionFor(spare, { noiseGain, offsetKnown: offset !== null, driftKnown, kelvin }),
+  };
+}
+
+interface Unknowns {
+  readonly noiseGain: number;
+  readonly offsetKnown: boolean;
+  readonly driftKnown: boolean;
+  readonly kelvin: number;
+}
+
+/** Where offset or drift is not known: at which value the spare is used up. */
+function cautionFor(spare: number, unknowns: Unknowns): string | null {
+  if (spare < 0) return null;
+  const left = spare / unknowns.noiseGain;
+  if (!unknowns.offsetKnown) return `offset not known and not charged: ${formatQuantity(left, 'V', { round: 'down' })} of offset uses the spare up`;
+  if (unknowns.driftKnown) return null;
+  return `offset drift not known and not charged: ${formatQuantity(left / unknowns.kelvin, 'V/K', { round: 'down' })} uses the spare up`;
+}
+
+interface At {
+  readonly side: Side;
+  readonly share: Share;
+  readonly reading: HeadroomReading;
+}
+
+function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
+  const { share, reading } = at;
+  const common = { unit: 'V', sense: 'at-most' as const, required: vertex.room, corner: vertex.corner, turnsAt: turnsAt(vertex, at) };
+  const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
+  if (reading.value === null) return bound(at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
+  const offered = reading.value + share.value;
+  const caution = share.caution(vertex.room - offered);
+  return {
+    kind: 'numbers', ...common, offered, basis, slot: reading.slot, how: reading.how,
+    terms: [headroomTerm(reading, reading.value, vertex), ...share.terms],
+    cautions: caution === null ? [] : [caution],
+  } satisfies NumberFinding;
+}
+
+function bound(at: At, common: Pick<BoundFinding, 'unit' | 'sense' | 'required' | 'corner' | 'turnsAt' | 'basis' | 'known'>): BoundFinding {
+  const figure = at.side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom';
+  const cause = at.reading.bound === null ? 'missing-figure' : 'beyond-data';
+  return { kind: 'bound', ...common, terms: at.share.terms, missing: [{ figure, kind: 'max' }], cause };
+}
+
+function headroomTerm(reading: HeadroomReading, value: number, vertex: HeadroomVertex): Term {
+  const at = vertex.current === 0 ? 'no current towards this rail' : `at ${formatQuantity(vertex.current, 'A')}`;
+  const how = [at, reading.how].filter((step) => step !== null).join(', ');
+  return { name: 'head-room', value, slot: reading.slot, basis: reading.basis, figure: null, how };
+}
+
+/** The head-room at this vertex' current that would just pass. */
+function turnsAt(vertex: HeadroomVertex, at: At): TurningPoint {
+  const figure = at.side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom';
+  return { figure, kind: 'max', value: vertex.room - at.share.value, unit: 'V' };
+}

@@ -1,0 +1,1 @@
+export { whyAhead, type Difference, type WhyAhead } from './why-ahead.js';

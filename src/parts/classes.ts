@@ -1,0 +1,30 @@
+import { PARAMETERS, type Parameter } from './figures.js';
+import type { Part } from './part.js';
+import { readingsOf } from './readings.js';
+import type { ClassWorst, Operating } from './reading.js';
+
+/** Figures that may be borrowed from a class: terms of the DC error and of the noise. */
+export const BORROWABLE = ['commonModeRejection', 'supplyRejection', 'openLoopGain', 'offsetDrift', 'offsetCurrent', 'noiseCorner', 'currentNoise'] as const satisfies readonly Parameter[];
+
+/** Per class, the worst figure of its generic sets under the stage's conditions. */
+export function classesOf(parts: readonly Part[], operating: Operating): ReadonlyMap<string, ClassWorst> {
+  const classes = new Map<string, Partial<Record<Parameter, number>>>();
+  for (const part of parts) {
+    if (part.tier !== 'generic' || part.class === null) continue;
+    const worst = classes.get(part.class) ?? {};
+    widen(worst, part, operating);
+    classes.set(part.class, worst);
+  }
+  return classes;
+}
+
+function widen(worst: Partial<Record<Parameter, number>>, part: Part, operating: Operating): void {
+  const readings = readingsOf({ part, operating, strict: false, classWorst: null, outlook: 'pessimistic' });
+  for (const parameter of BORROWABLE) {
+    const value = readings.figure(parameter)?.value;
+    if (value === undefined) continue;
+    const smallerIsWorse = (PARAMETERS[parameter].kinds as readonly string[]).includes('min');
+    const known = worst[parameter];
+    worst[parameter] = known === undefined ? value : smallerIsWorse ? Math.min(known, value) : Math.max(known, value);
+  }
+}

@@ -1,0 +1,49 @@
+import { weakest } from './basis.js';
+import { DOUBLING_KELVIN, FET_BIAS_LIMIT } from './derating.js';
+import { figureSlot, type Figure } from './figures.js';
+import type { PartUnderTest, Reading } from './reading.js';
+import { basisOf, bestPossible, derate, factorText, limitsFirst, nearestSupply, usable } from './select.js';
+
+type InputCurrent = 'biasCurrent' | 'offsetCurrent';
+
+/**
+ * Input currents over temperature: the figure rated at the lowest temperature at or above the stage's top; no stated
+ * temperature means 25 °C. If only a cooler one exists, FET inputs double per 10 K.
+ */
+export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent): Reading | null {
+  const all = nearestSupply(usable(test, parameter), test.operating.nominalSupply);
+  const temperatures = all.map(ratedAt);
+  const covering = temperatures.filter((rated) => rated >= test.operating.hottest);
+  const rated = covering.length > 0 ? Math.min(...covering) : Math.max(...temperatures);
+  const figure = limitsFirst(all.filter((one) => ratedAt(one) === rated))[0];
+  if (figure === undefined) return null;
+  return readCurrent(test, figure, covering.length === 0 && doubles(test) ? test.operating.hottest - rated : 0);
+}
+
+/** Degrees Celsius; the whole specified range counts as hot enough for anything. */
+function ratedAt(figure: Figure): number {
+  const rated = figure.condition.temperature;
+  return rated === 'over' ? Number.POSITIVE_INFINITY : (rated ?? 25);
+}
+
+/** FET inputs, or inputs of unknown type whose bias current at its lowest temperature is below 1 nA. */
+function doubles(test: PartUnderTest): boolean {
+  if (test.part.inputType !== null) return test.part.inputType === 'fet';
+  const printed = usable(test, 'biasCurrent');
+  const coolest = Math.min(...printed.map(ratedAt));
+  const first = limitsFirst(printed.filter((figure) => ratedAt(figure) === coolest))[0];
+  return first !== undefined && first.value < FET_BIAS_LIMIT;
+}
+
+function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Reading {
+  const growth = 2 ** (kelvin / DOUBLING_KELVIN);
+  const best = figure.assumed === true ? bestPossible(figure.parameter) : figure.value;
+  const worst = figure.kind === 'typ' ? derate(figure) : figure.value;
+  const value = test.outlook === 'optimistic' ? best : worst * growth;
+  const steps = [
+    ...(figure.kind === 'typ' ? [`typical ${factorText(derate({ ...figure, value: 1 }))}`] : []),
+    ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, doubling per ${DOUBLING_KELVIN} K`] : []),
+  ];
+  const basis = weakest([basisOf(figure, test.operating), ...(kelvin > 0 ? (['estimated'] as const) : [])]);
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: steps.length === 0 ? null : steps.join(', ') };
+}

@@ -1,0 +1,128 @@
+import { BASES, weakest, type Basis } from './basis.js';
+import { COLD_HOT_FACTOR, derateHeadroom, SUPPLY_REACH, TEMPERATURE_REACH, TYPICAL_FACTOR } from './derating.js';
+import { figureSlot, PARAMETERS, type Figure, type Parameter } from './figures.js';
+import type { Operating, PartUnderTest, Reading } from './reading.js';
+
+/** The reading of a parameter by the ordinary rules: limits first, then nearest supply, strongest basis, temperature. Null when missing. */
+export function scalarReading(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): Reading | null {
+  const all = usable(test, parameter).filter((figure) => end === undefined || figure.kind === end);
+  const figures = nearestSupply(limitsFirst(all), test.operating.nominalSupply);
+  const keyed = figures.map((figure) => ({ reading: readScalar(test, figure), key: preference(figure, test.operating) }));
+  return keyed.sort((a, b) => compareKeys(a.key, b.key))[0]?.reading ?? null;
+}
+
+/** A typical figure counts only where no limit is known. */
+export function limitsFirst(figures: readonly Figure[]): readonly Figure[] {
+  const limits = figures.filter((figure) => figure.kind !== 'typ');
+  return limits.length > 0 ? limits : figures;
+}
+
+/** Which end of a range parameter (supply, temperature) is meant; parameters with one limit need none. */
+export type RangeEnd = 'min' | 'max';
+
+/** Figures of a parameter that count at all: with `--strict`, limits only. */
+export function usable(test: PartUnderTest, parameter: Parameter): Figure[] {
+  return test.part.figures.filter(
+    (figure) => figure.parameter === parameter && !(test.strict && (figure.kind === 'typ' || figure.assumed === true)),
+  );
+}
+
+/** Of figures rated at several supplies, those rated nearest (as a ratio) to the nominal one; unstated counts as rated there. */
+export function nearestSupply(figures: readonly Figure[], nominal: number): Figure[] {
+  const distance = (figure: Figure): number => Math.abs(Math.log((figure.condition.supply ?? nominal) / nominal));
+  const least = Math.min(...figures.map(distance));
+  return figures.filter((figure) => distance(figure) <= least + 1e-9);
+}
+
+/** Largest distance of the stage's temperatures from a rated one, K. */
+export function distanceFrom(rated: number, operating: Operating): number {
+  return Math.max(Math.abs(operating.coldest - rated), Math.abs(operating.hottest - rated));
+}
+
+/** True for a figure stated at 25 °C while the stage goes more than 15 K away. */
+export function isAway(figure: Figure, operating: Operating): boolean {
+  return figure.condition.temperature === 25 && distanceFrom(25, operating) > TEMPERATURE_REACH;
+}
+
+/** A figure rated at a supply outside half to twice the nominal one is only assumed to hold. */
+export function isFarSupply(figure: Figure, nominal: number): boolean {
+  const rated = figure.condition.supply;
+  if (rated === undefined) return false;
+  return rated < (nominal / SUPPLY_REACH) * (1 - 1e-9) || rated > nominal * SUPPLY_REACH * (1 + 1e-9);
+}
+
+/** Basis of a figure before temperature is looked at. */
+export function basisOf(figure: Figure, operating: Operating): Basis {
+  const bases: Basis[] = [figure.kind === 'typ' ? 'derated' : 'guaranteed'];
+  if (figure.assumed === true || isFarSupply(figure, operating.nominalSupply)) bases.push('assumed');
+  return weakest(bases);
+}
+
+function readScalar(test: PartUnderTest, figure: Figure): Reading {
+  const away = isAway(figure, test.operating) ? COLD_HOT_FACTOR[figure.parameter] : undefined;
+  const basis = weakest([basisOf(figure, test.operating), ...(away === undefined ? [] : (['estimated'] as const))]);
+  const typical = figure.kind === 'typ' ? derate(figure) : figure.value;
+  const best = figure.assumed === true ? bestPossible(figure.parameter) : figure.value;
+  const value = test.outlook === 'optimistic' ? best : typical * (away ?? 1);
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howOf(figure, away) };
+}
+
+/** An assumed value can pass a check, not fail it: on the best reading it is as good as can be. */
+export function bestPossible(parameter: Parameter): number {
+  if (parameter === 'inputLowHeadroom' || parameter === 'inputHighHeadroom') return Number.NEGATIVE_INFINITY;
+  return TYP_MAX_PARAMETERS.has(parameter) ? 0 : Number.POSITIVE_INFINITY;
+}
+
+/** The pessimistic value of a typical figure. */
+export function derate(figure: Figure): number {
+  const parameter = figure.parameter;
+  if (parameter === 'inputLowHeadroom' || parameter === 'inputHighHeadroom') return derateHeadroom(figure.value);
+  return figure.value * (TYPICAL_FACTOR[parameter] ?? 1);
+}
+
+function howOf(figure: Figure, away: number | undefined): string | null {
+  const steps: string[] = [];
+  const isInput = figure.parameter === 'inputLowHeadroom' || figure.parameter === 'inputHighHeadroom';
+  const factor = TYPICAL_FACTOR[figure.parameter];
+  if (figure.kind === 'typ') steps.push(isInput ? 'typical + half its magnitude' : factor === undefined ? 'typical' : `typical ${factorText(factor)}`);
+  if (away !== undefined) steps.push(`25 °C figure ${factorText(away)}`);
+  return steps.length === 0 ? null : steps.join(', ');
+}
+
+/** A factor as engineers say it: × 3, ÷ 3.16. */
+export function factorText(factor: number): string {
+  return factor < 0.5 ? `÷ ${Number((1 / factor).toPrecision(3))}` : `× ${Number(factor.toPrecision(3))}`;
+}
+
+/** Smaller is preferred: strongest basis, then the temperature that covers the stage most closely, then the worse value. */
+function preference(figure: Figure, operating: Operating): readonly number[] {
+  const away = isAway(figure, operating) && COLD_HOT_FACTOR[figure.parameter] !== undefined;
+  const basis = weakest([basisOf(figure, operating), ...(away ? (['estimated'] as const) : [])]);
+  const worse = figure.kind === 'max' || TYP_MAX_PARAMETERS.has(figure.parameter) ? -figure.value : figure.value;
+  return [BASES.indexOf(basis), temperatureRank(figure, operating), worse];
+}
+
+const OVER_RANK = 1e4;
+
+/**
+ * Smaller is preferred: a 25 °C figure within its reach, then stated temperatures at or above the stage's top, lowest
+ * first, then the whole range, then cooler ones.
+ */
+export function temperatureRank(figure: Figure, operating: Operating): number {
+  const rated = figure.condition.temperature;
+  if (rated === undefined || rated === 'over') return OVER_RANK;
+  if (rated === 25 && !isAway(figure, operating)) return -OVER_RANK;
+  return rated >= operating.hottest ? rated : 2 * OVER_RANK - rated;
+}
+
+function compareKeys(a: readonly number[], b: readonly number[]): number {
+  for (const [at, value] of a.entries()) {
+    const difference = value - (b[at] ?? 0);
+    if (difference !== 0) return difference;
+  }
+  return 0;
+}
+
+const TYP_MAX_PARAMETERS: ReadonlySet<Parameter> = new Set(
+  (Object.keys(PARAMETERS) as Parameter[]).filter((name) => (PARAMETERS[name].kinds as readonly string[]).includes('max')),
+);

@@ -1,0 +1,42 @@
+import { smallerIsBetter, weightedGeometricMean } from '../formulas/desirability.js';
+import type { JudgedPart } from '../screening/index.js';
+import { comfortOf, FLOOR } from './comfort.js';
+
+/** Fixed scales, so that adding or removing a part never reorders the rest: EUR, and A. */
+const PRICE = { target: 0.05, worst: 20 };
+const CURRENT = { target: 0.1e-6, worst: 20e-3 };
+
+/** The three equal shares of the merit, each FLOOR..1. */
+export interface Merit {
+  readonly total: number;
+  readonly margins: number;
+  readonly price: number;
+  readonly current: number;
+}
+
+/** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (method.md 10). */
+export function meritOf(judged: JudgedPart): Merit {
+  const margins = marginShare(judged);
+  const price = onLogScale(priceInEuro(judged), PRICE);
+  const current = onLogScale(judged.current, CURRENT);
+  const total = weightedGeometricMean([margins, price, current].map((score) => ({ score, weight: 1 })));
+  return { total, margins, price, current };
+}
+
+/** Price for the order, EUR; another currency is not converted and counts as not known. */
+export function priceInEuro({ part }: JudgedPart): number | null {
+  return part.price?.currency === 'EUR' ? part.price.amount : null;
+}
+
+function marginShare(judged: JudgedPart): number {
+  const scores = judged.verdicts.map(comfortOf).filter((score) => score !== null);
+  return scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
+}
+
+/** Unknown counts as the floor. */
+function onLogScale(value: number | null, scale: { target: number; worst: number }): number {
+  if (value === null) return FLOOR;
+  if (value <= scale.target) return 1;
+  const logs = { value: Math.log(value), worst: Math.log(scale.worst), target: Math.log(scale.target) };
+  return Math.max(FLOOR, smallerIsBetter(logs));
+}

@@ -1,0 +1,72 @@
+import type { JudgedPart } from '../screening/index.js';
+import { comfortOf, marginForOrder } from './comfort.js';
+import { dominatorOf } from './dominance.js';
+import { meritOf, priceInEuro, type Merit } from './merit.js';
+
+export const ORDERS = ['merit', 'price', 'current', 'margin'] as const;
+export type Order = (typeof ORDERS)[number];
+
+/** A part that fits, with its place and what put it there. */
+export interface RankedPart extends JudgedPart {
+  readonly rank: number;
+  readonly merit: Merit;
+  /** The check with the least comfortable margin; null when none has one. */
+  readonly tightest: string | null;
+  /** Id of a part that is at least as good in every clamped margin, price and current, and better in one. */
+  readonly dominatedBy: string | null;
+}
+
+type Candidate = Omit<RankedPart, 'rank' | 'dominatedBy'>;
+
+/** Total order of what fits: approved before generic, limits before typical, then merit; never depends on who else is there. */
+export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): RankedPart[] {
+  const candidates: Candidate[] = fit.map((judged) => ({ ...judged, merit: meritOf(judged), tightest: tightestOf(judged) }));
+  candidates.sort((a, b) => compareIn(order, a, b));
+  return candidates.map((one, at) => ({ ...one, rank: at + 1, dominatedBy: dominatorOf(one, candidates)?.part.id ?? null }));
+}
+
+/** What decides between two: the steps of the order, each 0 when they are equal there. */
+export const STEPS: readonly { readonly name: string; readonly compare: (a: Candidate, b: Candidate) => number }[] = [
+  { name: 'tier', compare: (a, b) => Number(a.part.tier === 'generic') - Number(b.part.tier === 'generic') },
+  { name: 'proof', compare: (a, b) => Number(a.proof === 'typical') - Number(b.proof === 'typical') },
+  { name: 'merit', compare: (a, b) => b.merit.total - a.merit.total },
+  { name: 'price', compare: (a, b) => unknownLast(priceInEuro(a), priceInEuro(b)) },
+  { name: 'current', compare: (a, b) => unknownLast(a.current, b.current) },
+  { name: 'estimates', compare: (a, b) => a.confirm.length - b.confirm.length },
+  { name: 'id', compare: (a, b) => (a.part.id < b.part.id ? -1 : a.part.id > b.part.id ? 1 : 0) },
+];
+
+const FIRST: Record<Order, (a: Candidate, b: Candidate) => number> = {
+  merit: () => 0,
+  price: (a, b) => unknownLast(priceInEuro(a), priceInEuro(b)),
+  current: (a, b) => unknownLast(a.current, b.current),
+  margin: (a, b) => leastMargin(b) - leastMargin(a),
+};
+
+function compareIn(order: Order, a: Candidate, b: Candidate): number {
+  const first = FIRST[order](a, b);
+  if (first !== 0) return first;
+  return STEPS.map((step) => step.compare(a, b)).find((difference) => difference !== 0) ?? 0;
+}
+
+function unknownLast(a: number | null, b: number | null): number {
+  if (a === null || b === null) return Number(a === null) - Number(b === null);
+  return a - b;
+}
+
+function leastMargin(judged: JudgedPart): number {
+  const margins = judged.verdicts.map(marginForOrder).filter((margin) => margin !== null);
+  return Math.min(...margins, Number.MAX_VALUE);
+}
+
+function tightestOf(judged: JudgedPart): string | null {
+  const scored = judged.verdicts.flatMap((verdict) => {
+    const score = comfortOf(verdict);
+    return score === null ? [] : [{ check: verdict.check, score, margin: marginForOrder(verdict) ?? 0 }];
+  });
+  scored.sort((a, b) => a.score - b.score || a.margin - b.margin);
+  const budget = judged.verdicts.find((verdict) => verdict.check === 'supply-current' && verdict.margin !== null);
+  const least = scored[0];
+  if (budget?.margin != null && (least === undefined || budget.margin < least.margin)) return budget.check;
+  return least?.check ?? null;
+}

@@ -1,0 +1,40 @@
+import type { Verdict } from '../verdicts/verdict.js';
+import type { Confirmation } from './judged-part.js';
+
+/** Everything a fit rests on that is not a limit, once each, with the checks that rest on it. */
+export function confirmations(verdicts: readonly Verdict[]): Confirmation[] {
+  const found = new Map<string, Confirmation>();
+  for (const verdict of verdicts) {
+    if (verdict.basis === 'guaranteed') continue;
+    for (const one of weakPoints(verdict)) {
+      const key = one.slot ?? `${one.figure}/${verdict.check}`;
+      const known = found.get(key);
+      found.set(key, known === undefined ? one : merged(known, one));
+    }
+  }
+  return [...found.values()];
+}
+
+function merged(known: Confirmation, one: Confirmation): Confirmation {
+  const checks = known.checks.includes(one.checks[0] ?? '') ? known.checks : [...known.checks, ...one.checks];
+  return { ...known, checks };
+}
+
+function weakPoints(verdict: Verdict): Confirmation[] {
+  const needed = verdict.turnsAt === null ? null : { kind: verdict.turnsAt.kind, value: verdict.turnsAt.value, unit: verdict.turnsAt.unit };
+  const checks = [verdict.check];
+  const terms = verdict.terms.filter((term) => term.basis !== 'guaranteed');
+  if (terms.length > 0) {
+    return terms.map((term) => {
+      const isHeadroom = term.name === 'head-room';
+      return { figure: parameterOf(term.slot) ?? term.name, slot: term.slot, basis: term.basis, how: term.how, checks, needed: isHeadroom ? needed : null };
+    });
+  }
+  const figure = parameterOf(verdict.slot) ?? verdict.turnsAt?.figure ?? verdict.check;
+  return [{ figure, slot: verdict.slot, basis: verdict.basis ?? 'assumed', how: verdict.how, checks, needed }];
+}
+
+/** `slewRate.typ@V5` → slewRate. */
+function parameterOf(slot: string | null): string | null {
+  return slot === null ? null : (slot.split('.')[0] ?? null);
+}

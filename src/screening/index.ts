@@ -1,0 +1,3 @@
+export { judgePart, judging, type Judging } from './judge.js';
+export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
+export { screen, type Rejection, type Screened } from './screen.js';

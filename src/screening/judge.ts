@@ -1,0 +1,85 @@
+import { CHECKS } from '../checks/index.js';
+import { CHECK_IDS, type Demands, type UnbuiltDemand } from '../demands/index.js';
+import { classesOf } from '../parts/classes.js';
+import type { Part } from '../parts/part.js';
+import type { ClassWorst, ReadingRules } from '../parts/reading.js';
+import { readingsOf, type Readings } from '../parts/readings.js';
+import { decide, standingOf } from '../verdicts/decide.js';
+import type { Verdict } from '../verdicts/verdict.js';
+import { completions } from './completion.js';
+import type { JudgedPart, PartOutcome } from './judged-part.js';
+import { confirmations } from './confirm.js';
+
+/** What stays the same for all parts of one run. */
+export interface Judging {
+  readonly demands: Demands;
+  readonly strict: boolean;
+  readonly classes: ReadonlyMap<string, ClassWorst>;
+  /** Generic sets by class, to complete an undecided part with. */
+  readonly sets: ReadonlyMap<string, readonly Part[]>;
+}
+
+/** Prepares one run: what can be borrowed from the generic sets among the parts. */
+export function judging(demands: Demands, parts: readonly Part[], strict: boolean): Judging {
+  const sets = new Map<string, Part[]>();
+  for (const part of parts) {
+    if (part.tier === 'generic' && part.class !== null) sets.set(part.class, [...(sets.get(part.class) ?? []), part]);
+  }
+  return { demands, strict, classes: classesOf(parts, demands.operating), sets };
+}
+
+/** Every check of one part; none stops another. */
+export function judgePart(run: Judging, part: Part): JudgedPart {
+  const verdicts = verdictsOf(run, part);
+  const outcome = outcomeOf(verdicts);
+  return {
+    part,
+    outcome,
+    proof: outcome === 'fits' ? (verdicts.every((verdict) => verdict.basis === 'guaranteed') ? 'limits' : 'typical') : null,
+    likely: outcome === 'undecided' && isLikely(run, part),
+    verdicts,
+    confirm: outcome === 'fits' ? confirmations(verdicts) : [],
+    current: readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' }).figure('quiescentCurrent')?.value ?? null,
+  };
+}
+
+function verdictsOf(run: Judging, part: Part): Verdict[] {
+  const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
+  const best = readingsOf({ part, ...rulesFor(run, part), outlook: 'optimistic' });
+  const built = CHECKS.flatMap((check) => {
+    const pessimistic = check.judge(run.demands, worst);
+    const optimistic = check.judge(run.demands, best);
+    return pessimistic === null || optimistic === null ? [] : [decide(check, pessimistic, optimistic)];
+  });
+  const order = (verdict: Verdict): number => (CHECK_IDS as readonly string[]).indexOf(verdict.check);
+  return [...built, ...run.demands.unbuilt.map(notBuilt)].sort((a, b) => order(a) - order(b));
+}
+
+function rulesFor(run: Judging, part: Part): ReadingRules {
+  const classWorst = part.class === null ? null : (run.classes.get(part.class) ?? null);
+  return { operating: run.demands.operating, strict: run.strict, classWorst };
+}
+
+function notBuilt(demand: UnbuiltDemand): Verdict {
+  const finding = { kind: 'undecided', required: demand.required, unit: demand.unit, sense: demand.sense, cause: 'not-built', missing: [] } as const;
+  return decide({ id: demand.check, title: demand.check.replaceAll('-', ' '), hasMargin: true }, finding, finding);
+}
+
+function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
+  if (verdicts.some((verdict) => verdict.outcome === 'fail')) return 'does-not-fit';
+  return verdicts.some((verdict) => verdict.outcome === 'unknown') ? 'undecided' : 'fits';
+}
+
+/** Likely: with every missing figure taken from its class, each generic set of the class in turn, all checks would pass. */
+function isLikely(run: Judging, part: Part): boolean {
+  if (run.demands.unbuilt.length > 0 || run.strict) return false;
+  const completed = completions(part, part.class === null ? [] : (run.sets.get(part.class) ?? []));
+  return completed.length > 0 && completed.every((whole) => passes(run, readingsOf({ part: whole, ...rulesFor(run, whole), outlook: 'pessimistic' })));
+}
+
+function passes(run: Judging, readings: Readings): boolean {
+  return CHECKS.every((check) => {
+    const finding = check.judge(run.demands, readings);
+    return finding === null || standingOf(finding) === 'pass';
+  });
+}

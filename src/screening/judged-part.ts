@@ -1,0 +1,33 @@
+import type { Basis } from '../parts/basis.js';
+import type { LimitKind } from '../parts/figures.js';
+import type { Part } from '../parts/part.js';
+import type { Verdict } from '../verdicts/verdict.js';
+
+export type PartOutcome = 'fits' | 'undecided' | 'does-not-fit';
+
+/** A figure to confirm before release: what a fit rests on that is not a limit. */
+export interface Confirmation {
+  /** Parameter, or the name of the term where no single figure stands behind it. */
+  readonly figure: string;
+  readonly slot: string | null;
+  readonly basis: Basis;
+  readonly how: string | null;
+  /** Checks that rest on it. */
+  readonly checks: readonly string[];
+  /** The limit that would still pass, SI, where one figure decides. */
+  readonly needed: { readonly kind: LimitKind; readonly value: number; readonly unit: string } | null;
+}
+
+/** One part with all its verdicts, in the order of the checks. */
+export interface JudgedPart {
+  readonly part: Part;
+  readonly outcome: PartOutcome;
+  /** Fits only: every deciding figure a limit, or some derated, estimated, assumed or borrowed. */
+  readonly proof: 'limits' | 'typical' | null;
+  /** Undecided only: with its class's figures it would pass. */
+  readonly likely: boolean;
+  readonly verdicts: readonly Verdict[];
+  readonly confirm: readonly Confirmation[];
+  /** Quiescent current per amplifier on the pessimistic reading, A; for the order, asked or not. */
+  readonly current: number | null;
+}

@@ -1,0 +1,147 @@
+import { weakest, type Basis } from '../parts/basis.js';
+import { equal, marginOf, meets, spareOf } from './compare.js';
+import type { Finding, SingleFinding, WordFinding } from './finding.js';
+import type { Outcome, Reason, Verdict } from './verdict.js';
+
+/** What decide needs to know of a check to word its verdict. */
+export interface CheckIdentity {
+  readonly id: string;
+  readonly title: string;
+  /** False for head-rooms and temperatures: a ratio says nothing there. */
+  readonly hasMargin: boolean;
+}
+
+/** Share of a limit that borrowed terms may make up in a pass. */
+const BORROWED_SHARE = 0.1;
+
+type Standing = 'pass' | 'fail' | 'open';
+
+/** The only place findings become verdicts: pass on both readings passes, fail on the best reading fails, all else is unknown. */
+export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: Finding): Verdict {
+  const worst = standingOf(pessimistic);
+  const best = standingOf(optimistic);
+  const outcome: Outcome = worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
+  const [shown, other] = outcome === 'fail' ? [optimistic, pessimistic] : [pessimistic, optimistic];
+  if (shown.kind === 'words') return wordVerdict(check, outcome, shown);
+  const basis = basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
+  return verdictOf(check, { outcome, shown: shownOf(shown, outcome), other, basis });
+}
+
+/** How one reading stands by itself. */
+export function standingOf(finding: Finding): Standing {
+  if (finding.kind === 'words') return finding.required.some((word) => same(word, finding.offered)) ? 'pass' : 'fail';
+  if (finding.kind === 'undecided') return 'open';
+  if (finding.kind === 'bound') return meets(finding.required, finding.known, finding.sense) ? 'open' : 'fail';
+  if (finding.kind === 'vertices') {
+    const standings = finding.findings.map(standingOf);
+    if (standings.includes('fail')) return 'fail';
+    return standings.includes('open') ? 'open' : 'pass';
+  }
+  if (!meets(finding.required, finding.offered, finding.sense)) return 'fail';
+  const tooMuch = (finding.borrowed ?? 0) > BORROWED_SHARE * Math.abs(finding.required) * (1 + 1e-9);
+  return tooMuch ? 'open' : 'pass';
+}
+
+const same = (a: string, b: string): boolean => a.trim().toLowerCase() === b.trim().toLowerCase();
+
+/** Of the vertices that decide, the one of least spare; one with a number before one with a bound. */
+function shownOf(finding: Exclude<Finding, WordFinding>, outcome: Outcome): SingleFinding {
+  if (finding.kind !== 'vertices') return finding;
+  const ranked = deciding(finding.findings, outcome).sort((a, b) => rank(a) - rank(b) || spare(a) - spare(b));
+  const first = ranked[0];
+  if (first === undefined) throw new RangeError('a check over vertices has none');
+  return first;
+}
+
+/** A fail is decided by the vertices that fail, an unknown by those that do not pass, a pass by all. */
+function deciding(findings: readonly SingleFinding[], outcome: Outcome): SingleFinding[] {
+  const standings = findings.map((finding) => ({ finding, standing: standingOf(finding) }));
+  const chosen = standings.filter(({ standing }) => (outcome === 'fail' ? standing === 'fail' : outcome === 'unknown' ? standing !== 'pass' : true));
+  return (chosen.length > 0 ? chosen : standings).map(({ finding }) => finding);
+}
+
+const rank = (finding: SingleFinding): number => ({ numbers: 0, bound: 1, undecided: 2 })[finding.kind];
+
+function spare(finding: SingleFinding): number {
+  if (finding.kind === 'numbers') return spareOf(finding.required, finding.offered, finding.sense);
+  if (finding.kind === 'bound') return spareOf(finding.required, finding.known, finding.sense);
+  return typeof finding.required === 'number' ? finding.required : 0;
+}
+
+/** Weakest basis, over all vertices for head-rooms. */
+function basisOf(finding: Exclude<Finding, WordFinding>): Basis {
+  if (finding.kind === 'vertices') return weakest(finding.findings.map(basisOf));
+  return finding.kind === 'undecided' ? 'guaranteed' : finding.basis;
+}
+
+interface Decided {
+  readonly outcome: Outcome;
+  readonly shown: SingleFinding;
+  readonly other: Finding;
+  readonly basis: Basis;
+}
+
+function verdictOf(check: CheckIdentity, { outcome, shown, other, basis }: Decided): Verdict {
+  const offered = shown.kind === 'numbers' ? finite(shown.offered) : null;
+  const compared = offered !== null && typeof shown.required === 'number' && shown.sense !== null;
+  return {
+    check: check.id,
+    title: check.title,
+    outcome,
+    required: shown.required,
+    offered,
+    offeredBest: offeredOf(other),
+    unit: shown.unit,
+    sense: shown.sense ?? (Array.isArray(shown.required) ? 'one-of' : null),
+    margin: compared && check.hasMargin ? marginOf(shown.required, offered, shown.sense) : null,
+    spare: compared ? tidy(spareOf(shown.required, offered, shown.sense), shown.required, offered) : null,
+    basis: outcome === 'unknown' ? null : basis,
+    standsOn: shown.kind === 'undecided' ? null : basis,
+    worstAt: shown.corner ?? null,
+    terms: shown.kind === 'undecided' ? [] : (shown.terms ?? []),
+    rss: shown.kind === 'numbers' ? (shown.rss ?? null) : null,
+    known: shown.kind === 'bound' && (shown.known !== 0 || outcome === 'fail') ? shown.known : null,
+    reason: outcome === 'unknown' ? reasonOf(shown, basis) : null,
+    missing: shown.kind === 'numbers' ? [] : shown.missing,
+    decidesAt: outcome === 'unknown' ? (shown.turnsAt ?? null) : null,
+    turnsAt: shown.turnsAt ?? null,
+    cautions: shown.cautions ?? [],
+    slot: shown.kind === 'numbers' ? (shown.slot ?? null) : null,
+    how: shown.kind === 'numbers' ? (shown.how ?? null) : null,
+  };
+}
+
+const finite = (value: number): number | null => (Number.isFinite(value) ? value : null);
+
+/** A spare that is zero but for rounding is zero. */
+function tidy(left: number, required: number, offered: number): number {
+  return equal(required, offered) ? 0 : left;
+}
+
+const AS_OUTCOME: Record<Standing, Outcome> = { pass: 'pass', fail: 'fail', open: 'unknown' };
+
+function offeredOf(finding: Finding): number | string | null {
+  if (finding.kind === 'words') return finding.offered;
+  const shown = shownOf(finding, AS_OUTCOME[standingOf(finding)]);
+  return shown.kind === 'numbers' ? finite(shown.offered) : null;
+}
+
+const REASONS: Record<Basis, Reason> = {
+  guaranteed: 'beyond-data',
+  derated: 'typical-only',
+  estimated: 'estimated',
+  assumed: 'assumed',
+  borrowed: 'borrowed',
+};
+
+function reasonOf(shown: SingleFinding, basis: Basis): Reason {
+  return shown.kind === 'numbers' ? REASONS[basis] : shown.cause;
+}
+
+function wordVerdict(check: CheckIdentity, outcome: Outcome, finding: WordFinding): Verdict {
+  return {
+    check: check.id, title: check.title, outcome, required: finding.required, offered: finding.offered, offeredBest: finding.offered,
+    unit: null, sense: 'one-of', margin: null, spare: null, basis: 'guaranteed', standsOn: 'guaranteed', worstAt: null, terms: [], rss: null,
+    known: null, reason: null, missing: [], decidesAt: null, turnsAt: null, cautions: [], slot: null, how: null,
+  };
+}

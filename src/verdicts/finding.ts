@@ -1,0 +1,93 @@
+import type { Basis } from '../parts/basis.js';
+import type { LimitKind, Parameter } from '../parts/figures.js';
+
+export type Sense = 'at-least' | 'at-most';
+
+/** One addend of an offered value. SI unit of its check; the origin is joined on its slot later. */
+export interface Term {
+  readonly name: string;
+  readonly value: number;
+  readonly slot: string | null;
+  readonly basis: Basis;
+  /** The figure as it counts, and what it is multiplied by, in words: `3 mV`, `noise gain 8.14`. */
+  readonly figure: { readonly value: number; readonly unit: string } | null;
+  readonly how: string | null;
+}
+
+/** The value of one figure at which the verdict turns. */
+export interface TurningPoint {
+  readonly figure: Parameter;
+  readonly kind: LimitKind;
+  readonly value: number;
+  readonly unit: string;
+}
+
+/** A missing figure that kept a check from being decided. */
+export interface Missing {
+  readonly figure: Parameter | 'channels' | 'package' | 'qualification' | 'status' | 'lifecycle' | 'price';
+  readonly kind: LimitKind | null;
+}
+
+interface Common {
+  readonly unit: string;
+  readonly sense: Sense;
+  readonly required: number;
+  readonly terms?: readonly Term[];
+  readonly corner?: Readonly<Record<string, number>>;
+  readonly turnsAt?: TurningPoint | null;
+  readonly cautions?: readonly string[];
+}
+
+/** Two numbers side by side. */
+export interface NumberFinding extends Common {
+  readonly kind: 'numbers';
+  readonly offered: number;
+  readonly basis: Basis;
+  readonly slot?: string | null;
+  readonly how?: string | null;
+  /** Root-sum-square of the terms, shown beside their sum. */
+  readonly rss?: number;
+  /** Sum of borrowed terms: more than a tenth of the limit cannot pass. */
+  readonly borrowed?: number;
+}
+
+/** Only a bound is known: the part offers at least this much (of something that must be small). */
+export interface BoundFinding extends Common {
+  readonly kind: 'bound';
+  readonly known: number;
+  readonly basis: Basis;
+  readonly missing: readonly Missing[];
+  readonly cause: Cause;
+}
+
+export type Cause = 'missing-figure' | 'beyond-data' | 'no-counting-point' | 'currency' | 'not-built';
+
+/** Nothing to compare. */
+export interface UndecidedFinding {
+  readonly kind: 'undecided';
+  readonly required: number | readonly string[] | null;
+  readonly unit: string | null;
+  readonly sense: Sense | null;
+  readonly cause: Cause;
+  readonly missing: readonly Missing[];
+  readonly turnsAt?: TurningPoint | null;
+  readonly corner?: Readonly<Record<string, number>>;
+  readonly cautions?: readonly string[];
+}
+
+/** Words: the part's word must be one of those required. */
+export interface WordFinding {
+  readonly kind: 'words';
+  readonly required: readonly string[];
+  readonly offered: string;
+}
+
+export type SingleFinding = NumberFinding | BoundFinding | UndecidedFinding;
+
+/** The same question asked at every vertex of the stage; all must hold. */
+export interface VertexFindings {
+  readonly kind: 'vertices';
+  readonly findings: readonly SingleFinding[];
+}
+
+export type Finding = SingleFinding | WordFinding | VertexFindings;
