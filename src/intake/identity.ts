@@ -1,0 +1,97 @@
+import { foldId, suggest } from '../quantities/suggest.js';
+import type { Part } from '../parts/part.js';
+import type { CellFault } from './cell-fault.js';
+import { columnLetter } from './column-letter.js';
+import type { ListOptions, ListRecord } from './list.js';
+
+/** A part with the record it was read from. */
+export interface ReadPart {
+  readonly part: Part;
+  readonly record: ListRecord;
+}
+
+export interface IdentityFault {
+  readonly record: ListRecord;
+  readonly part: string;
+  readonly field: 'id' | 'class';
+  readonly fault: CellFault;
+  readonly severity: 'error' | 'warning';
+}
+
+export interface Identities {
+  /** Without identical repetitions. */
+  readonly kept: readonly ReadPart[];
+  readonly faults: readonly IdentityFault[];
+}
+
+/** Compares the ids of a list with each other and with the generic sets. Parts without a readable id take no part in it. */
+export function checkIdentities(read: readonly ReadPart[], options: ListOptions): Identities {
+  const seen = new Map<string, ReadPart>();
+  const faults: IdentityFault[] = [];
+  const kept = read.filter((one) => {
+    const { fault, repeated } = compareIds(one, seen);
+    const all = [fault, reserved(one.part, options), unknownClass(one.part, options.classes)];
+    for (const found of all) if (found !== null) faults.push({ record: one.record, part: one.part.id, ...found });
+    return !repeated;
+  });
+  return { kept, faults };
+}
+
+type Found = Pick<IdentityFault, 'field' | 'fault' | 'severity'>;
+
+function compareIds(one: ReadPart, seen: Map<string, ReadPart>): { fault: Found | null; repeated: boolean } {
+  const { id } = one.part;
+  const key = foldId(id.replace(/\s+/gu, ''));
+  const earlier = id === '' ? undefined : seen.get(key);
+  if (earlier === undefined) {
+    if (id !== '') seen.set(key, one);
+    return { fault: null, repeated: false };
+  }
+  if (earlier.part.id === id) return sameId(one, earlier);
+  return { fault: sameLetters(earlier.part.id, id) ? clash(id, earlier) : lookAlike(id, earlier), repeated: false };
+}
+
+function sameLetters(a: string, b: string): boolean {
+  const plain = (id: string): string => id.toLowerCase().replace(/\s+/gu, '');
+  return plain(a) === plain(b);
+}
+
+function sameId(one: ReadPart, earlier: ReadPart): { fault: Found; repeated: boolean } {
+  const differing = one.record.cells.flatMap((cell, index) => {
+    const other = earlier.record.cells[index] ?? '';
+    return cell.trim() === other.trim() ? [] : [`${columnLetter(index + 1)} (${other.trim()}, ${cell.trim()})`];
+  });
+  const row = earlier.record.row;
+  if (differing.length > 0) {
+    const reason = `${one.part.id} is also in row ${row} and differs in ${differing.slice(0, 6).join(', ')}`;
+    return { fault: error('I402', reason, 'keep one of the two rows'), repeated: true };
+  }
+  const fault = { code: 'I401', reason: `identical to row ${row}; kept once`, fix: `delete row ${one.record.row}` };
+  return { fault: { field: 'id', severity: 'warning', fault }, repeated: true };
+}
+
+function clash(id: string, earlier: ReadPart): Found {
+  return error('I403', `${id} is ${earlier.part.id} of row ${earlier.record.row} apart from case or spaces`, earlier.part.id);
+}
+
+function lookAlike(id: string, earlier: ReadPart): Found {
+  const reason = `${id} looks like ${earlier.part.id} of row ${earlier.record.row}: O and 0, I and 1 are easily mistaken`;
+  return { field: 'id', severity: 'warning', fault: { code: 'I404', reason, fix: earlier.part.id } };
+}
+
+function reserved({ id }: Part, { tier, genericIds }: ListOptions): Found | null {
+  if (tier === 'generic' || genericIds?.has(id) !== true) return null;
+  return error('I405', `${id} is the id of a generic set that comes with railfit`, 'another id; name the set in a class column');
+}
+
+function unknownClass(part: Part, classes: ReadonlySet<string> | undefined): Found | null {
+  if (part.class === null || classes === undefined || classes.has(part.class)) return null;
+  const [near] = suggest(part.class, [...classes]);
+  const reason = `${part.class} is no class of the generic sets, so nothing can be borrowed from it`;
+  const fault = { code: 'I511', reason, ...(near === undefined ? {} : { fix: near }) };
+  return { field: 'class', severity: 'warning', fault };
+}
+
+function error(code: string, reason: string, fix: string): Found {
+  return { field: 'id', severity: 'error', fault: { code, reason, fix } };
+}

@@ -1,0 +1,32 @@
+// What a list writes where nothing is known. Compared without case; an own word goes to the list owner as an error.
+const MISSING: ReadonlySet<string> = new Set(['', '-', '–', 'n/a', 'n.a.', 'na', '#n/a', 'null', 'tbd', '?']);
+
+/** The text of a cell, or null where it says that nothing is known. Removes the mark `guardCell` put in front. */
+export function readText(cell: string): string | null {
+  const text = cell.trim();
+  return isMissing(text) ? null : unguard(text);
+}
+
+export function isMissing(cell: string): boolean {
+  const text = cell.trim();
+  return text.length <= 4 && MISSING.has(text.toLowerCase());
+}
+
+/**
+ * A text made safe for a spreadsheet, which would run a cell starting like a formula (OWASP, "CSV Injection"): such a cell gets
+ * an apostrophe in front unless the whole of it is a strict number. Reading removes it again.
+ */
+export function guardCell(text: string): string {
+  return FORMULA.test(text) && !STRICT_NUMBER.test(text) ? `'${text}` : text;
+}
+
+/** Digits with an optional sign, decimal point and exponent, and nothing else. */
+const STRICT_NUMBER = /^-?\d+(?:\.\d+)?(?:[eE][+-]?\d+)?$/u;
+
+// Also behind apostrophes, so that a text which has one of its own comes back with it.
+const FORMULA = /^'*[=+\-@\t\r\n＝＋－＠]/u;
+const GUARDED = /^'+[=+\-@\t\r\n＝＋－＠]/u;
+
+function unguard(text: string): string {
+  return GUARDED.test(text) ? text.slice(1) : text;
+}

@@ -1,0 +1,76 @@
+import { readFileSync } from 'node:fs';
+import { describe, expect, it } from 'vitest';
+import { readCondition } from '../../src/intake/condition.js';
+import { readList } from '../../src/intake/read-list.js';
+import { PARAMETERS } from '../../src/parts/figures.js';
+
+const bytes = readFileSync(new URL('../../catalog/generic.csv', import.meta.url));
+const readme = readFileSync(new URL('../../catalog/README.md', import.meta.url), 'utf8');
+
+const list = readList(bytes, { file: 'generic.csv', tier: 'generic' });
+if (!list.ok) throw new Error(list.problems.map(({ message }) => message).join('\n'));
+const { columns, parts } = list;
+
+/** Cells of the table rows below a heading, without the header row and the rule under it. */
+function table(heading: string): string[][] {
+  const section = readme.split(/^#+ /m).find((text) => text.startsWith(heading));
+  if (section === undefined) throw new Error(`catalog/README.md has no section "${heading}"`);
+  const rows = section.split('\n').filter((line) => line.startsWith('|'));
+  return rows.slice(2).map((line) => line.split('|').slice(1, -1).map((cell) => cell.trim()));
+}
+
+const quoted = (cell: string | undefined): string[] => [...(cell ?? '').matchAll(/`([^`]+)`/g)].map(([, text]) => text ?? '');
+
+describe('catalog/README.md', () => {
+  it('describes every parameter by its words, unit and kinds, in the order of the columns', () => {
+    const described = table('Figures').map(([words, unit, kinds]) => ({
+      words: quoted(words)[0],
+      unit,
+      kinds: (kinds ?? '').replace(/\(.*\)/, '').trim().split(', '),
+    }));
+    const wanted = Object.values(PARAMETERS).map(({ words, headerUnit, kinds }) => ({ words, unit: headerUnit, kinds: [...kinds] }));
+    expect(described, 'src/parts/figures.ts and the table "Figures" of catalog/README.md differ').toEqual(wanted);
+  });
+
+  it('says of every parameter what it means and where it stands in a datasheet', () => {
+    for (const [words, , , meaning, where] of table('Figures')) {
+      expect((meaning ?? '').length, words).toBeGreaterThan(10);
+      expect((where ?? '').length, words).toBeGreaterThan(10);
+    }
+  });
+
+  it('describes every column that is not a figure', () => {
+    const described = table('Identity columns').flatMap(([header]) => quoted(header));
+    const others = columns.filter(({ reading }) => reading.kind !== 'figure').map(({ header }) => header);
+    expect(new Set(described)).toEqual(new Set(others));
+  });
+
+  it('teaches only conditions that are read', () => {
+    const taught = table('Conditions').flatMap(([written]) => quoted(written));
+    expect(taught.length).toBeGreaterThan(6);
+    for (const text of taught) expect(readCondition(text), text).toMatchObject({ ok: true });
+  });
+
+  it('gives reasons for every set, under its id and class, in the order of the file', () => {
+    const reasoned = [...readme.matchAll(/^\*\*(GX-[A-Z0-9-]+) · ([a-z0-9-]+)\.\*\*/gm)].map(([, id, word]) => [id, word]);
+    expect(reasoned).toEqual(parts.map((part) => [part.id, part.class]));
+  });
+
+  it('tells the thermal resistance of each package as the file has it', () => {
+    const resistance = new Map<string, number>();
+    for (const part of parts) {
+      const figure = part.figures.find(({ parameter }) => parameter === 'thermalResistance');
+      if (part.package === null || figure === undefined) throw new Error(`${part.id}: package or thermal resistance missing`);
+      expect(resistance.get(part.package) ?? figure.value, part.package).toBe(figure.value);
+      resistance.set(part.package, figure.value);
+    }
+    const told = /\*Thermal resistance\* goes by package: (.*) K\/W/.exec(readme)?.[1]?.split(', ').map((text) => text.split(' '));
+    expect(new Map(told?.map(([name = '', kelvin]) => [name, Number(kelvin)]))).toEqual(resistance);
+  });
+
+  it('carries the three cautions', () => {
+    expect(readme).toContain('The datasheet of the part you choose governs.');
+    expect(readme).toContain('Prototypes are measured');
+    expect(readme).toContain('qualified review and the applicable codes decide');
+  });
+});

@@ -1,0 +1,43 @@
+import { describe, expect, it } from 'vitest';
+import { splitList } from '../../src/intake/split.js';
+
+const split = (text: string): ReturnType<typeof splitList> => splitList(text, new TextEncoder().encode(text));
+const places = (text: string): (string | number)[][] => split(text).records.map(({ line, lineEnd, row, cells }) => [line, lineEnd, row, ...cells]);
+
+describe('splitList', () => {
+  it.each(['\n', '\r\n', '\r'])('finds line and row of records that span lines (%j)', (eol) => {
+    const text = ['a,b', '1,2', '', '"x', 'µ', 'y",3', '4,5', ''].join(eol);
+    expect(places(text)).toEqual([
+      [1, 1, 1, 'a', 'b'],
+      [2, 2, 2, '1', '2'],
+      [3, 3, 3, ''],
+      [4, 6, 4, `x${eol}µ${eol}y`, '3'],
+      [7, 7, 5, '4', '5'],
+    ]);
+  });
+
+  it('takes the last record also without a line end', () => {
+    expect(places('a\n1').at(-1)).toEqual([2, 2, 2, '1']);
+  });
+
+  it.each([
+    ['a,b;c', ','],
+    ['a;b', ';'],
+    ['a\tb;c', ';'],
+    ['a\tb', '\t'],
+    ['a', ','],
+    ['"a,b";c', ';'],
+  ])('separates %j by %j', (header, delimiter) => {
+    expect(split(`${header}\n`).delimiter).toBe(delimiter);
+  });
+
+  it('tells stray and open quotes with the place, and goes on behind them', () => {
+    const { faults, records } = split('a,b\n1,"x 5" y"\n2,5" z\n3,4\n4,"open\n5,6');
+    expect(faults).toEqual([
+      { code: 'I304', line: 2, row: 2, column: 2 },
+      { code: 'I304', line: 3, row: 3, column: 2 },
+      { code: 'I303', line: 5, row: 5, column: 2 },
+    ]);
+    expect(records.map(({ line, row }) => [line, row])).toEqual([[1, 1], [4, 4]]);
+  });
+});

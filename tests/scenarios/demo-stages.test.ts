@@ -1,0 +1,123 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { describe, expect, it } from 'vitest';
+import { shortlist } from '../../src/engine.js';
+import { readList } from '../../src/intake/read-list.js';
+import type { PartSource } from '../../src/parts/part.js';
+import type { Report } from '../../src/report.js';
+import type { Override } from '../../src/spec/spec.js';
+import { BUILT_TOPOLOGIES } from '../../src/spec/spec.js';
+import { readStage } from '../../src/spec/read.js';
+import { buildStage } from '../../src/stage/index.js';
+
+// What the comment of each demo stage tells the reader to look for. Fits and failing checks were worked out beforehand by
+// hand from the published relations the checks quote; a change here means that the comment in the stage file is wrong too.
+
+const folder = new URL('../../catalog/stages/', import.meta.url);
+const files = readdirSync(folder).filter((name) => name.endsWith('.yaml'));
+const list = readList(readFileSync(new URL('../generic.csv', folder)), { file: 'generic.csv', tier: 'generic' });
+if (!list.ok) throw new Error(list.problems.map(({ message }) => message).join('\n'));
+const source: PartSource = { parts: list.parts, sha256: list.sha256, origin: () => null };
+
+function judged(name: string, overrides: readonly Override[] = []): Report {
+  const read = readStage(readFileSync(new URL(`${name}.yaml`, folder), 'utf8'), { file: name, overrides });
+  if (!read.ok) throw new Error(JSON.stringify(read.problems, null, 2));
+  const built = buildStage(read.spec);
+  if (!built.ok) throw new Error(JSON.stringify(built.problems, null, 2));
+  return shortlist(built.stage, source);
+}
+
+const fitting = (report: Report): string[] => report.fit.map(({ part }) => part.id).sort();
+
+/** Ids and outcomes of the checks a set does not pass. */
+function failing(report: Report, id: string): string[] {
+  const found = [...report.fit, ...report.undecided, ...report.rejected].find(({ part }) => part.id === id);
+  if (found === undefined) throw new Error(`${id} was not judged`);
+  return found.verdicts.filter(({ outcome }) => outcome !== 'pass').map(({ check, outcome }) => `${check} ${outcome}`);
+}
+
+describe('catalog/stages', () => {
+  it('has a stage for every topology that is built', () => {
+    const topologies = files.map((name) => /^topology: (.*)$/m.exec(readFileSync(new URL(name, folder), 'utf8'))?.[1]);
+    expect(new Set(topologies)).toEqual(new Set(BUILT_TOPOLOGIES));
+  });
+
+  it.each(files)('%s opens with a comment that says what it is and what to look for', (name) => {
+    const text = readFileSync(new URL(name, folder), 'utf8');
+    expect(text).toMatch(/^# .{20,}\n#\n/);
+    expect(text).toContain('# What to look for:');
+  });
+
+  it.each(files)('%s is answered: sets fit and sets fail', (name) => {
+    const { fit, rejected } = judged(name.replace('.yaml', ''));
+    expect(fit.length).toBeGreaterThan(1);
+    expect(rejected.length).toBeGreaterThan(1);
+  });
+});
+
+describe('soil-moisture-probe', () => {
+  const report = judged('soil-moisture-probe');
+  it('is for three sets', () => expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-1M-GS', 'GX-ZD-MICRO']));
+  it('parts the two 1 MHz sets by DC error alone', () => expect(failing(report, 'GX-CMOS-1M-RRIO')).toEqual(['dc-error fail']));
+  it('is too fast for the micropower CMOS set', () => expect(failing(report, 'GX-CMOS-MICRO')).toContain('gain-bandwidth fail'));
+});
+
+describe('thermistor-bridge', () => {
+  const report = judged('thermistor-bridge');
+  it('is for five sets with inputs to both rails', () => {
+    expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-10M-RRIO', 'GX-CMOS-MICRO', 'GX-HV-BIP-RRIO', 'GX-ZD-MICRO']);
+  });
+  it('leaves no room for inputs that stop 1 V short of V+', () => {
+    for (const part of list.parts) {
+      const short = part.figures.some(({ parameter, value }) => parameter === 'inputHighHeadroom' && value >= 1);
+      if (short) expect(failing(report, part.id), part.id).toContain('input-high fail');
+    }
+  });
+  it('multiplies offset by a noise gain of 11', () => {
+    for (const id of ['GX-NANO', 'GX-CMOS-1M-RRIO']) expect(failing(report, id), id).toEqual(['dc-error fail']);
+    expect(failing(report, 'GX-CMOS-50M')).toContain('dc-error fail');
+  });
+  it('has no current for the fast zero-drift set and the one without crossover', () => {
+    for (const id of ['GX-ZD-FAST', 'GX-CMOS-20M-NX']) expect(failing(report, id), id).toEqual(['supply-current fail']);
+  });
+});
+
+describe('vent-motor-control', () => {
+  const report = judged('vent-motor-control');
+  it('is for three sets with their swing rated at 10 mA or more', () => {
+    expect(fitting(report)).toEqual(['GX-BIP-LN', 'GX-CMOS-50M', 'GX-DRIVE']);
+  });
+  it('cannot decide sets whose swing is printed at a third of the current', () => {
+    for (const id of ['GX-CMOS-10M-RRIO', 'GX-CMOS-20M-NX', 'GX-CMOS-TRIM', 'GX-ZD-FAST']) {
+      expect(failing(report, id), id).toEqual(['output-low unknown', 'output-high unknown']);
+    }
+  });
+  it('makes the decompensated set unstable', () => expect(failing(report, 'GX-CMOS-DEC')).toContain('stable-gain fail'));
+  it('loses the ground-sensing bipolar set at both rails', () => {
+    expect(failing(report, 'GX-BIP-GS')).toEqual(expect.arrayContaining(['output-low fail', 'output-high fail']));
+  });
+  it('fails the fast bipolar set on bias current, until the resistors are halved', () => {
+    expect(failing(report, 'GX-BIP-200M')).toEqual(['dc-error fail']);
+    const halved = (['feedback', 'input'] as const).map((name, index) => ({ path: `resistors.${name}`, text: ['10 kΩ', '5 kΩ'][index] ?? '', option: '--set' }));
+    expect(fitting(judged('vent-motor-control', halved))).toContain('GX-BIP-200M');
+  });
+});
+
+describe('reference-buffer', () => {
+  const report = judged('reference-buffer');
+  it('is for three micropower sets', () => expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-MICRO', 'GX-ZD-MICRO']));
+  it('needs inputs nearer to V+ than ground-sensing ones', () => {
+    for (const id of ['GX-CMOS-1M-GS', 'GX-ELECTRO']) expect(failing(report, id), id).toEqual(['input-high fail']);
+  });
+  it('is too exact for the cheap rail-to-rail set, and too heavy for the nanopower one', () => {
+    expect(failing(report, 'GX-CMOS-1M-RRIO')).toEqual(['dc-error fail']);
+    expect(failing(report, 'GX-NANO')).toContain('output-current fail');
+  });
+});
+
+describe('vent-vibration-pickup', () => {
+  const report = judged('vent-vibration-pickup');
+  it('is for four sets', () => expect(fitting(report)).toEqual(['GX-CMOS-10M-RRIO', 'GX-CMOS-TRIM', 'GX-ELECTRO', 'GX-HV-BIP-RRIO']));
+  it('cannot decide the 1 MHz sets on a typical bandwidth', () => {
+    for (const id of ['GX-CMOS-1M-RRIO', 'GX-CMOS-1M-GS']) expect(failing(report, id), id).toEqual(['gain-bandwidth unknown']);
+  });
+});
