@@ -1,0 +1,72 @@
+import { SPEC_CODES } from '../index.js';
+import { INTAKE_CODES } from '../intake/codes.js';
+
+/** What a message code means, with something that is refused and something that is accepted. */
+export interface CodePage {
+  readonly code: string;
+  readonly title: string;
+  readonly why: string;
+  readonly refused: string;
+  readonly accepted: string;
+}
+
+const page = (code: string, title: string, why: string, pair: readonly [string, string]): CodePage => ({ code, title, why, refused: pair[0], accepted: pair[1] });
+
+const QUANTITIES: readonly CodePage[] = [
+  page('Q001', 'no unit', 'A bare number has no scale; only zero, gains, counts, letter codes and k, meg, p, n, u on resistors and capacitors go without.', ['supply: 5', 'supply: 5 V']),
+  page('Q002', 'm or M without a unit', 'SI reads M as mega, circuit simulators read it as milli: a factor of a thousand million.', ['load: 10M', 'load: 10 MΩ, 10meg or 10 mΩ']),
+  page('Q003', 'letter case that proves nothing', 'When the unit itself is in the wrong case, m and M cannot be told apart; P is peta.', ['1mhz, 22PF', '1 MHz, 22 pF']),
+  page('Q004', 'wrong kind of quantity', 'A current stands where a voltage is expected, or a square root is missing.', ['15 nV/Hz', '15 nV/√Hz or 15 nV/rtHz']),
+  page('Q005', 'comma or grouping with two readings', '1,000 is one thousand with grouping and one with a decimal comma.', ['1,000 ohm', '1000 ohm or 1.0 ohm']),
+  page('Q006', 'tolerance unit or letter', 'K and M as tolerance letters are too easily read as kilo and mega; other letters mean nothing.', ['4k7K', '4.7 kΩ ±10 %']),
+  page('Q007', 'order of a range', 'A range runs upwards; a hyphen after a minus could be a subtraction.', ['4.2..3.0 V', '3.0..4.2 V']),
+  page('Q008', 'one prefix for both ends', 'A shared prefixed unit may belong to the second figure only.', ['20..20 kHz', '20 Hz..20 kHz']),
+  page('Q009', 'two values with a slash', 'Minimum and maximum, typical and maximum, or two options.', ['2.5/3.6 V', '2.5..3.6 V']),
+  page('Q010', 'implausible size', 'The figure is far outside anything this field can be: usually a prefix slip.', ['5 MV', '5 V']),
+  page('Q011', 'unknown unit', 'The unit is not one of this field.', ['600 rpm', '10 Hz']),
+  page('Q012', 'two scale factors', 'An exponent and a prefix, or a prefix on top of the prefix of the column header.', ['1e-3m', '1 µA']),
+  page('Q013', 'not a number, or approximate', 'An approximate figure cannot prove anything.', ['~1 mV', 'typ 1 mV, or 1 mV ± 10 %']),
+  page('Q014', 'amplitude of which kind', 'Peak, peak-to-peak and rms differ by up to 2.8.', ['1 V', '1 Vpk, 1 Vpp or 1 Vrms']),
+  page('Q015', 'split supply', 'railfit covers one supply and ground.', ['±5 V', '10 V, or the single rail']),
+  page('Q016', 'character that does not belong', 'An invisible or foreign character is named by code point and position.', ['5 V with U+200B', '5 V']),
+  page('Q017', 'spreadsheet damage', 'A date or a row of hashes was a number once.', ['5-Mar', 'restore the cell as text']),
+  page('Q019', 'sign', 'The quantity cannot be negative.', ['-5 V supply', '5 V']),
+  page('Q020', 'empty', 'Nothing, or a word for nothing: unknown and not applicable are different.', ['N/A', 'leave the field out']),
+  page('Q021', 'tolerance without a value', 'A tolerance belongs to a value.', ['±5 %', '5 V ±5 %']),
+];
+
+const CONTRADICTIONS: readonly CodePage[] = [
+  page('S201', 'output beyond the supply', 'At nominal values the output is asked to leave the supply: no amplifier does it.', ['gain 8 with 25 mV..1 V on 3.6 V', 'gain 3, or a smaller input']),
+  page('S202', 'output does not follow from the rest', 'With a gain, signal.output is a cross-check.', ['gain: 8, input: 0..330 mV, output: 0..2 V', 'output: 0..2.64 V']),
+  page('S203', 'gain and resistors disagree', 'They must agree within the resistor tolerance; then the resistors rule.', ['gain: 8 with 80 kΩ and 10 kΩ', 'gain: 9, or 70 kΩ']),
+  page('S204', 'input below ground with no reference', 'A ground-referenced stage on one supply cannot put out what lies below ground.', ['input: -100..100 mV, reference: ground', 'reference: mid-supply']),
+  page('S205', 'no stage maps the input onto the output', 'The gain or the reference that would be needed cannot be had.', ['input 0..1 V to output 3..2 V, non-inverting', 'topology: inverting']),
+  page('S206', 'supply peak below the supply', 'The transient peak is at least the top of the supply.', ['supply: 5 V ±5 %, supplyPeak: 5 V', 'supplyPeak: 5.25 V']),
+  page('S208', 'gain not given', 'Gain, resistors or the wanted output must say it.', ['topology: inverting, nothing else', 'gain: 8']),
+  page('S209', 'no resistors for this gain', 'No pair of E96 values with a reasonable feedback path gives it.', ['gain: 1000000', 'resistors: {feedback: 1 MΩ, input: 1 Ω}']),
+];
+
+const COMMANDS: readonly CodePage[] = [
+  page('C100', 'unknown command', 'The first word names what to do.', ['railfit shortlsit', 'railfit shortlist']),
+  page('C101', 'unknown option', 'Options are never guessed.', ['--gian 8', '--gain 8']),
+  page('C102', 'operands', 'A command was given too few or too many words.', ['railfit explain stage.yaml', 'railfit explain PART stage.yaml']),
+  page('C103', 'no stage', 'A stage is a file, - for standard input, or options that say it all.', ['railfit shortlist', 'railfit shortlist stage.yaml']),
+  page('C104', 'option without a usable value', 'The value is missing or not one of those listed.', ['--order best', '--order price']),
+  page('C105', '--set without field and value', 'The form is path=value.', ['--set dcError', '--set limits.dcError="20 mV"']),
+  page('C106', 'options that need each other', 'A failing check can only be named on a stage.', ['--failing dc-error', '--failing dc-error --stage stage.yaml']),
+  page('C107', '--assume', 'The form is PART.figure=VALUE; figures are named as in railfit help figures.', ['--assume drift=10', '--assume PART.offsetDrift=10µV/K']),
+  page('C108', 'no such part', 'Ids are compared exactly; near ones are offered.', ['railfit part ORG-OA-OO12', 'railfit part ORG-OA-0012']),
+  page('C109', 'no such help topic', 'Topics, commands and message codes have pages.', ['railfit help figrues', 'railfit help figures']),
+  page('E501', 'the catalog cannot be used', 'The file is locked, unreadable, not a catalog, or from a newer version. It was left as it is.', ['--catalog /etc/hosts', '--catalog team.sqlite']),
+  page('E502', 'file cannot be read', 'The path or its permissions.', ['stage.yml for stage.yaml', 'the path as ls shows it']),
+  page('E503', 'file cannot be written', 'The folder does not exist or may not be written.', ['--errors /nowhere/e.csv', '--errors e.csv']),
+];
+
+/** Every code a message can carry, in order. A test holds this list against the source. */
+export const CODE_PAGES: readonly CodePage[] = [
+  ...QUANTITIES,
+  ...SPEC_CODES.map(({ code, title, cause, refused, accepted }) => ({ code, title, why: cause, refused, accepted })),
+  ...CONTRADICTIONS,
+  ...Object.entries(INTAKE_CODES).map(([code, { title, why, example, fix }]) => ({ code, title, why, refused: example, accepted: fix })),
+  ...COMMANDS,
+];

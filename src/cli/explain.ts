@@ -1,0 +1,34 @@
+import { explain, explanationJson, renderExplanation } from '../index.js';
+import type { Problem } from '../quantities/problem.js';
+import { withCatalog } from './catalog-file.js';
+import { EXIT, exitOfOutcome } from './exit-code.js';
+import { findPart } from './find-part.js';
+import { judgingInput, type JudgingOptions } from './judging-input.js';
+import { commandProblem, RequestError } from './request-error.js';
+import { styleFor, type Outcome, type Session } from './session.js';
+import { readStageOf } from './stage-input.js';
+
+/** What `explain` is asked: a part and a stage. */
+export interface ExplainOperands {
+  readonly part: string | undefined;
+  readonly stage: string | undefined;
+}
+
+/** `railfit explain PART [STAGE]`: every check of one part on this stage. */
+export async function runExplain(session: Session, operands: ExplainOperands, options: JudgingOptions): Promise<Outcome> {
+  const already = [...(options.already ?? []), ...(operands.part === undefined ? [noPart()] : [])];
+  const { stage, file } = readStageOf(operands.stage, { ...options, already });
+  return withCatalog(session, options, (catalog) => {
+    const { source, asking } = judgingInput(catalog, options);
+    const found = findPart(source.parts, operands.part ?? '');
+    if (!found.ok) throw new RequestError([found.problem], EXIT.request);
+    const explanation = explain(stage, source, { part: found.part, asking });
+    const exit = exitOfOutcome(explanation.judged.outcome);
+    if (options.json === true) return { text: explanationJson(explanation), exit };
+    return { text: renderExplanation(explanation, styleFor(session, options), { command: 'railfit', stageFile: file }), exit };
+  });
+}
+
+function noPart(): Problem {
+  return commandProblem('C102', 'explain: no PART', { fix: 'railfit explain PART stage.yaml' });
+}

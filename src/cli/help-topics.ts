@@ -1,0 +1,81 @@
+import { CHECKS, PARAMETERS, renderStageHelp, type Parameter } from '../index.js';
+import { CODE_PAGES } from './code-pages.js';
+
+/** A help page: blocks of text, each a paragraph or an indented list of pairs. */
+export type Block = { readonly text: string } | { readonly pairs: readonly (readonly [string, string])[] } | { readonly code: readonly string[] };
+
+const EXITS: readonly (readonly [string, string])[] = [
+  ['0', 'yes, or done: something fits, imported, shown'],
+  ['1', 'answered "no": nothing fits, the part does not fit, nothing matched'],
+  ['2', 'the request itself is wrong: option, quantity, stage file, unknown part'],
+  ['3', 'data refused: the list was not imported'],
+  ['4', 'cannot be decided: nothing fits, but some parts lack a figure'],
+  ['5', 'surroundings: file unreadable, disk full, database locked'],
+  ['70', 'fault in railfit itself'],
+  ['130', 'interrupted'],
+];
+
+const CAUTIONS: Block = {
+  text: "The chosen part's datasheet governs; prototypes are measured. Where failure can hurt someone (medical, mains-connected, automotive, machinery), qualified review and the applicable codes decide.",
+};
+
+const STAGE_EXAMPLE = [
+  'topology: non-inverting',
+  'supply: 3.0..4.2 V',
+  'gain: 8',
+  'signal: {input: 25 mV..330 mV, frequency: 2 kHz}',
+  'load: {resistance: 10 kΩ, to: ground}',
+  'temperature: -20..60 °C',
+  'limits: {dcError: 35 mV, supplyCurrent: 90 µA}',
+];
+
+/** Long help by topic. */
+export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
+  stage: () => [
+    { text: 'The stage file is YAML (JSON is a subset). Values are written as engineers write them, with their unit. What is left out takes its default, and every default is printed as an assumption. Options override the file, so that a what-if is one option.' },
+    { code: STAGE_EXAMPLE },
+    { pairs: renderStageHelp().map(({ path, accepted, example, meaning }) => [path, `${meaning} — ${accepted}; for example ${example}`] as const) },
+    { text: 'Required: topology, supply, and what the stage is fed (signal.input, signal.amplitude, or both inputs of a difference stage). Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said.' },
+  ],
+  figures: () => [
+    { text: 'What is known about a part: a number with a limit kind (min, typ, max) and a condition. Names as --assume and JSON use them, and the words of the canonical CSV header.' },
+    { pairs: (Object.keys(PARAMETERS) as Parameter[]).map((name) => [name, `${PARAMETERS[name].words} (${PARAMETERS[name].headerUnit}), ${PARAMETERS[name].kinds.join(', ')}`] as const) },
+    { text: 'A limit is never a typical: a typical figure counts after the derating that is printed beside it, and proves nothing by itself.' },
+  ],
+  checks: () => [
+    { text: 'Every check is judged twice, on the pessimistic and on the optimistic reading of the figures it reads. Both pass: pass. Both fail: fail. Otherwise it cannot be decided, and the value at which it turns is told. Unknown is never a pass.' },
+    { pairs: CHECKS.map((check) => [check.id, `${check.title}; reads ${check.reads.join(', ')}`] as const) },
+    { text: 'Not built yet, and undecided for every part when the stage writes them: noise, distortion, phase-margin, settling, and the hazards of avoid.' },
+  ],
+  'exit-codes': () => [{ text: 'Exit codes are frozen.' }, { pairs: EXITS }],
+  quantities: () => [
+    { text: 'A quantity is read when it has one reading. It is refused when two readings exist and both are usable; railfit never chooses between milli and mega by what looks likely.' },
+    {
+      pairs: [
+        ['resistance', '4k7, 4.7 kΩ, 4.7 kohm, 10meg; not 10M'],
+        ['supply', '5 V, 3V3, 5 V ±5 %, 5 V +5/-10 %, 3.0..4.2 V'],
+        ['amplitude', '500 mVpk, 1 Vpp, 70 mVrms (sine)'],
+        ['noise', '15 nV/√Hz, 15 nV/rtHz'],
+        ['slew rate', '1.5 V/µs, 3 V/ms'],
+        ['ratio', '86 dB, 100 V/mV, 50 µV/V'],
+        ['temperature', '25 °C, -40..85C'],
+        ['limits', '"<5 mV" or max 5mV (in a shell < and > need quotes), typ 1 mV'],
+      ],
+    },
+    { text: 'Hard-to-type signs have word forms: u for µ, ohm for Ω, rtHz for √Hz, +/- for ±, .. or to for a range. In batch files % is written twice.' },
+  ],
+  lists: () => [
+    { text: 'railfit import reads the approved list as canonical CSV: one row a part, a figure named by its parameter, limit kind and unit, with conditions behind @. Nothing is stored unless every cell is understood.' },
+    { code: ['id,status,package,supply voltage min (V),supply voltage max (V),slew rate min (V/µs),output high headroom max (mV) @ 1 mA', 'ORG-OA-0101,approved,SOT-23-5,1.8,5.5,0.4,60'] },
+    { text: 'railfit parts --csv writes the same form. catalog/README.md tells how to read each value out of a datasheet.' },
+  ],
+  codes: () => [{ pairs: CODE_PAGES.map(({ code, title }) => [code, title] as const) }, { text: 'railfit help CODE shows one of them.' }],
+  cautions: () => [CAUTIONS, { text: 'Not modelled: layout, electromagnetic interference, long-term drift, self-heating. Generic sets are invented classes of parts, not something to order.' }],
+};
+
+/** Page of one message code; null when there is no such code. */
+export function codeBlocks(code: string): readonly Block[] | null {
+  const found = CODE_PAGES.find((one) => one.code === code.toUpperCase());
+  if (found === undefined) return null;
+  return [{ text: `${found.code}: ${found.title}` }, { text: found.why }, { pairs: [['refused', found.refused], ['instead', found.accepted]] }];
+}

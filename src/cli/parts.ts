@@ -1,0 +1,48 @@
+import { partsJson, renderParts, shortlist, type Part, type PartLine, type Tier } from '../index.js';
+import { writeList } from '../intake/write-list.js';
+import { withCatalog } from './catalog-file.js';
+import { EXIT } from './exit-code.js';
+import { commandProblem, RequestError } from './request-error.js';
+import { styleFor, type CommonOptions, type Outcome, type Session } from './session.js';
+import { readStageOf } from './stage-input.js';
+
+export interface PartsOptions extends CommonOptions {
+  readonly tier?: Tier;
+  /** A check, with the stage it is asked for. */
+  readonly failing?: string;
+  readonly stage?: string;
+}
+
+/** `railfit parts [WORD…]`: the catalog, or the parts whose id, class or description has every word. */
+export async function runParts(session: Session, words: readonly string[], options: PartsOptions): Promise<Outcome> {
+  const stage = stageOf(options);
+  return withCatalog(session, options, (catalog) => {
+    const source = catalog.source();
+    const failing = stage === null ? null : failingChecks(shortlist(stage, source));
+    const tier = options.tier ?? (options.csv === true ? 'approved' : undefined);
+    const wanted = (part: Part): boolean => matches(part, words) && (tier === undefined || part.tier === tier);
+    const lines: PartLine[] = source.parts.filter(wanted).map((part) => ({ part, ...(failing === null ? {} : { failing: failing.get(part.id) ?? [] }) }));
+    const shown = lines.filter((line) => options.failing === undefined || line.failing?.includes(options.failing) === true);
+    const exit = shown.length === 0 ? EXIT.no : EXIT.yes;
+    if (options.csv === true) return { text: writeList(shown.map(({ part }) => part)), exit };
+    const list = { total: source.parts.length, parts: shown };
+    if (options.json === true) return { text: partsJson(list), exit };
+    return { text: renderParts(list, styleFor(session, options)), exit };
+  });
+}
+
+function stageOf(options: PartsOptions): ReturnType<typeof readStageOf>['stage'] | null {
+  if (options.failing !== undefined && options.stage === undefined) {
+    throw new RequestError([commandProblem('C106', '--failing asks for a stage', { fix: '--failing dc-error --stage stage.yaml', path: '--failing' })], EXIT.request);
+  }
+  return options.stage === undefined ? null : readStageOf(options.stage, {}).stage;
+}
+
+function failingChecks(report: ReturnType<typeof shortlist>): Map<string, string[]> {
+  return new Map(report.rejected.map((one) => [one.part.id, one.verdicts.filter((verdict) => verdict.outcome === 'fail').map((verdict) => verdict.check)]));
+}
+
+function matches(part: Part, words: readonly string[]): boolean {
+  const text = [part.id, part.class, part.family, part.description].join(' ').toLowerCase();
+  return words.every((word) => text.includes(word.toLowerCase()));
+}

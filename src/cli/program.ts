@@ -1,0 +1,145 @@
+import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
+import type { CheckId } from '../index.js';
+import type { JudgingOptions } from './judging-input.js';
+import type { ImportCommandOptions } from './import.js';
+import type { PartsOptions } from './parts.js';
+import type { CommonOptions, Outcome, Session } from './session.js';
+import type { StageOptions } from './stage-input.js';
+import { onlyOperands, operandsOf } from './operands.js';
+import { VERSION } from './version.js';
+
+/** Commands load their rooms only when they run: start-up stays short. */
+export type Deliver = (outcome: Outcome) => void;
+
+/** The command line: every command, every option, one line of help each. */
+export function makeProgram(session: Session, deliver: Deliver): Command {
+  const program = quiet(new Command('railfit'));
+  program
+    .description('Ranks operational amplifiers for one single-supply stage, proves each verdict with worst-case numbers, and explains every rejection.')
+    .version(VERSION, '-V, --version', 'tool and rules version')
+    .addHelpCommand(false)
+    .addHelpText('after', AFTER);
+
+  judging(add(program, 'shortlist', '[STAGE]', 'derive, judge the whole catalog, rank, explain'))
+    .action(async (...received) => {
+      const { command, options } = lastOf<JudgingOptions>(received);
+      const { operands, problems } = operandsOf(command, 1);
+      deliver(await (await import('./shortlist.js')).runShortlist(session, operands[0], { ...options, already: problems }));
+    });
+  judging(add(program, 'explain', '[PART] [STAGE]', 'every check of one part on this stage'))
+    .action(async (...received) => {
+      const { command, options } = lastOf<JudgingOptions>(received);
+      const { operands, problems } = operandsOf(command, 2);
+      const wanted = { part: operands[0], stage: operands[1] };
+      deliver(await (await import('./explain.js')).runExplain(session, wanted, { ...options, already: problems }));
+    });
+  staging(add(program, 'demands', '[STAGE]', 'what the stage asks of any amplifier; looks at no part'))
+    .action(async (...received) => {
+      const { command, options } = lastOf<CommonOptions & StageOptions>(received);
+      const { operands, problems } = operandsOf(command, 1);
+      deliver((await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
+    });
+  add(program, 'parts', '[WORDS...]', 'list the catalog, or the parts whose id, class or description has every word')
+    .addOption(new Option('--tier <TIER>', 'only this tier').choices(['approved', 'generic']))
+    .option('--stage <STAGE>', 'a stage to judge them on')
+    .option('--failing <CHECK>', 'only parts that fail this check on --stage', checkId)
+    .option('--csv', 'canonical CSV, as import reads it (approved list unless --tier)')
+    .action(async (...received) => {
+      const { command, options } = lastOf<PartsOptions>(received);
+      deliver(await (await import('./parts.js')).runParts(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
+    });
+  add(program, 'part', '[ID]', 'every figure of one part with kind, condition and origin')
+    .option('--sources', 'file, hash, line, row and cell of each figure')
+    .action(async (...received) => {
+      const { command, options } = lastOf<CommonOptions>(received);
+      deliver(await (await import('./part.js')).runPart(session, onlyOperands(command, 1)[0], options));
+    });
+  add(program, 'import', '[FILE]', "read the team's approved list: canonical CSV, all or nothing")
+    .option('-n, --dry-run', 'the same report, nothing is written')
+    .option('--undo', 'return to the list before the last import')
+    .option('--errors <FILE>', 'one line per faulty cell, for the owner of the list')
+    .action(async (...received) => {
+      const { command, options } = lastOf<ImportCommandOptions>(received);
+      deliver(await (await import('./import.js')).runImport(session, onlyOperands(command, 1)[0], options));
+    });
+  add(program, 'help', '[TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
+    .action(async (...received) => {
+      const { command, options } = lastOf<CommonOptions>(received);
+      const asked = { topic: onlyOperands(command, 1)[0], overview: () => program.helpInformation(), commandHelp: (name: string) => helpOf(program, name) };
+      deliver(await (await import('./help.js')).runHelp(session, asked, options));
+    });
+  return program;
+}
+
+/** Commander hands operands first, then options, then the command; operands are sorted by `operandsOf`. */
+function lastOf<Options>(received: readonly unknown[]): { command: Command; options: Options } {
+  return { command: received.at(-1) as Command, options: received.at(-2) as Options };
+}
+
+function helpOf(program: Command, name: string): string | null {
+  return program.commands.find((command) => command.name() === name)?.helpInformation() ?? null;
+}
+
+const AFTER = `
+The chosen part's datasheet governs; prototypes are measured. Where failure can hurt someone
+(medical, mains-connected, automotive, machinery), qualified review and the applicable codes decide.
+Normal text may change between versions; scripts read --json.  Long help: railfit help TOPIC`;
+
+function quiet(command: Command): Command {
+  return command
+    .exitOverride()
+    .configureOutput({ writeErr: () => undefined, outputError: () => undefined })
+    .allowUnknownOption()
+    .allowExcessArguments();
+}
+
+function add(program: Command, name: string, operands: string, description: string): Command {
+  const command = quiet(program.command(name));
+  for (const operand of operands.split(' ')) command.argument(operand);
+  return command
+    .description(description)
+    .option('--json', 'the answer as JSON (schemas ship with the package)')
+    .addOption(new Option('--color <WHEN>', 'colour on a terminal').choices(['auto', 'always', 'never']).default('auto'))
+    .option('--ascii', 'ASCII only: uV, ohm, nV/rtHz')
+    .option('--catalog <FILE>', 'catalog file (else RAILFIT_CATALOG, else the user data folder)')
+    .option('--debug', 'stack trace of an internal fault');
+}
+
+const collect = (value: string, all: readonly string[] = []): string[] => [...all, value];
+
+/** Options that stand for fields of the stage file. */
+function staging(command: Command): Command {
+  return command
+    .option('--topology <NAME>', 'follower, non-inverting, inverting, difference')
+    .option('--supply <SUPPLY>', '"3.0..4.2 V", "5 V ± 5 %"')
+    .option('--gain <GAIN>', 'V/V or dB')
+    .option('--reference <REFERENCE>', 'ground, mid-supply, or a voltage')
+    .option('--input <RANGE>', 'signal.input: "25 mV..330 mV"')
+    .option('--frequency <FREQUENCY>', 'signal.frequency: "2 kHz"')
+    .option('--load <LOAD>', '"10 kΩ to ground, 100 pF"')
+    .option('--temperature <RANGE>', '-40..85C')
+    .option('--set <PATH=VALUE>', 'any other field: --set limits.dcError="20 mV"', collect);
+}
+
+function judging(command: Command): Command {
+  return staging(command)
+    .option('--top <N>', 'how many parts to show (20)', count)
+    .option('--all', 'rejected parts too, and passing checks in full')
+    .option('--strict', 'only limits count: every other figure counts as missing')
+    .option('--sources', 'where each figure comes from')
+    .option('--csv', 'the list as a table')
+    .option('--assume <PART.figure=VALUE>', 'a figure for this run only (or =class), carried into the output', collect)
+    .addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
+}
+
+function count(text: string): number {
+  if (!/^[1-9]\d{0,6}$/u.test(text)) throw new InvalidArgumentError('a whole number of parts is expected, such as 20');
+  return Number(text);
+}
+
+function checkId(text: string): CheckId {
+  if (!/^[a-z-]+$/u.test(text)) throw new InvalidArgumentError('a check such as dc-error is expected');
+  return text as CheckId;
+}
+
+export { CommanderError };

@@ -1,0 +1,76 @@
+import { CommanderError } from 'commander';
+import { problemsJson, renderProblems } from '../index.js';
+import type { Problem } from '../quantities/problem.js';
+import { suggest } from '../quantities/suggest.js';
+import { EXIT } from './exit-code.js';
+import { reportFault } from './fault.js';
+import { makeProgram } from './program.js';
+import { commandProblem, RequestError } from './request-error.js';
+import { styleFor, type CommonOptions, type Session } from './session.js';
+import type { ColourWish } from './terminal.js';
+
+/** The process as the command line sees it. */
+export interface Process extends Omit<Session, 'tell'> {
+  write(stream: 'stdout' | 'stderr', text: string): void;
+}
+
+/** Runs one command line and answers its exit code; never ends the process, so that what was written is delivered. */
+export async function runCommandLine(argv: readonly string[], world: Process): Promise<number> {
+  const session: Session = { ...world, tell: (line) => world.write('stderr', `${line}\n`) };
+  let exit: number = EXIT.yes;
+  const program = makeProgram(session, (outcome) => {
+    if (outcome.talk !== undefined) world.write('stderr', outcome.talk);
+    world.write('stdout', outcome.text);
+    exit = outcome.exit;
+  });
+  if (argv.length === 0) {
+    world.write('stdout', program.helpInformation());
+    return EXIT.yes;
+  }
+  try {
+    await program.parseAsync([...argv], { from: 'user' });
+    return exit;
+  } catch (error) {
+    return answerFor(error, { argv, session, world, names: program.commands.map((command) => command.name()) });
+  }
+}
+
+interface Failure {
+  readonly argv: readonly string[];
+  readonly session: Session;
+  readonly world: Process;
+  readonly names: readonly string[];
+}
+
+function answerFor(error: unknown, failure: Failure): number {
+  if (error instanceof RequestError) return refuse(error, failure);
+  if (!(error instanceof CommanderError)) return reportFault(error, failure.argv, failure.session);
+  // Help and version have been written by then and are an answer.
+  if (error.exitCode === 0) return EXIT.yes;
+  return refuse(new RequestError([fromCommander(error, failure)], EXIT.request), failure);
+}
+
+function refuse(error: RequestError, { argv, session, world }: Failure): number {
+  if (argv.includes('--json')) {
+    world.write('stdout', problemsJson(error.problems));
+    return error.exit;
+  }
+  world.write('stderr', renderProblems(error.problems, styleFor(session, colourOf(argv), 'stderr'), error.summary));
+  return error.exit;
+}
+
+/** The options that matter for how problems are written, read from the raw words since parsing may have failed. */
+function colourOf(argv: readonly string[]): CommonOptions {
+  const at = argv.findIndex((word) => word === '--color' || word.startsWith('--color='));
+  const said = at < 0 ? undefined : (argv[at]?.split('=')[1] ?? argv[at + 1]);
+  const color: ColourWish = said === 'always' || said === 'never' ? said : 'auto';
+  return { color, ascii: argv.includes('--ascii') };
+}
+
+function fromCommander(error: CommanderError, { argv, names }: Failure): Problem {
+  const plain = error.message.replace(/^error: /u, '').replace(/\.$/u, '');
+  if (error.code !== 'commander.unknownCommand') return commandProblem('C104', plain, { fix: `railfit help ${argv[0] ?? ''}`.trim() });
+  const word = argv.find((one) => !one.startsWith('-')) ?? '';
+  const near = suggest(word, names);
+  return commandProblem('C100', `unknown command ${word}`, { fix: near.length === 0 ? `one of ${names.join(', ')}` : `did you mean ${near.join(', ')}?` });
+}

@@ -1,0 +1,101 @@
+import type { Verdict } from '../verdicts/verdict.js';
+import { amount, compared } from './amounts.js';
+import { flow, padded, paragraph, displayWidth } from './layout.js';
+import { GLUE, glued } from './spelling.js';
+import { toned, type Style } from './style.js';
+import { termLines, type Origins } from './term-text.js';
+import { comparisonText, cornerText, shortfall, spareText, turningText } from './verdict-words.js';
+import { BASIS_WORDS, figureWords, passingSide, REASON_WORDS } from './words.js';
+import { safeLine } from './safe-text.js';
+import { spelled } from './spelling.js';
+
+const INDENT = 6;
+const inside = { lead: ' '.repeat(INDENT) };
+
+/** A failing check: value, limit, by how much, at which corner, and what adds up to it. */
+export function failingCheck(verdict: Verdict, origins: Origins, style: Style): string[] {
+  const numbers = compared(verdict);
+  const what = numbers === null ? shortfall(verdict) : `${comparisonText(verdict)}: ${shortfall(verdict)}`;
+  return [
+    ...headline(toned('FAIL', 'bad', style), `${verdict.title}${GLUE}${GLUE} ${what}`, style),
+    ...cornerLines(verdict, style),
+    ...termLines(verdict, origins, style),
+    ...readingLines(verdict, style),
+    ...cautionLines(verdict, style),
+  ];
+}
+
+/** An open check: what is known, what is missing, where it would turn. */
+export function openCheck(verdict: Verdict, origins: Origins, style: Style): string[] {
+  const known = comparisonText(verdict);
+  const reason = verdict.reason === null ? '' : REASON_WORDS[verdict.reason];
+  return [
+    ...headline(`${toned('?', 'open', style)}   `, `${verdict.title}${GLUE}${GLUE} ${[known, reason].filter((words) => words !== '').join(': ')}`, style),
+    ...cornerLines(verdict, style),
+    ...termLines(verdict, origins, style),
+    ...turningLines(verdict, style),
+    ...cautionLines(verdict, style),
+  ];
+}
+
+/** A passing check in full. */
+export function passingCheck(verdict: Verdict, origins: Origins, style: Style): string[] {
+  const numbers = compared(verdict) === null || verdict.unit === '1' ? spareText(verdict) : `${comparisonText(verdict)}: ${spareText(verdict)}`;
+  return [
+    ...headline(toned('PASS', 'good', style), `${verdict.title}${GLUE}${GLUE} ${numbers}${basisMark(verdict)}`, style),
+    ...cornerLines(verdict, style),
+    ...termLines(verdict, origins, style),
+    ...cautionLines(verdict, style),
+  ];
+}
+
+/** Passing checks side by side, with what each has left. */
+export function passingInShort(verdicts: readonly Verdict[], style: Style): string[] {
+  if (verdicts.length === 0) return [];
+  const cells = verdicts.map((verdict) => ({ title: spelled(verdict.title, style), left: spelled(spareText(verdict) + basisMark(verdict), style) }));
+  const titles = Math.max(...cells.map(({ title }) => displayWidth(title)));
+  const widest = Math.max(...cells.map(({ left }) => displayWidth(left)));
+  const pieces = cells.map(({ title, left }) => padded(`${padded(title, titles)}  ${left}`, titles + 2 + widest));
+  const lines = flow(pieces, style, { lead: `${toned('PASS', 'good', style)}  ` });
+  return [...lines, ...verdicts.flatMap((verdict) => verdict.cautions.flatMap((caution) => cautionLine(`${verdict.title}: ${caution}`, style)))];
+}
+
+function basisMark({ basis }: Verdict): string {
+  return basis === null || basis === 'guaranteed' ? '' : ` (${BASIS_WORDS[basis]})`;
+}
+
+function headline(mark: string, text: string, style: Style): string[] {
+  return paragraph(text, style, { lead: `${mark}  `, indent: INDENT });
+}
+
+function cornerLines({ worstAt }: Verdict, style: Style): string[] {
+  const corner = worstAt === null ? '' : cornerText(worstAt);
+  return corner === '' ? [] : paragraph(`Worst case ${corner}`, style, inside);
+}
+
+/** A fail stands on the best reading; what the worst one gives stands beside it. */
+function readingLines(verdict: Verdict, style: Style): string[] {
+  const { offered, offeredBest, unit, terms } = verdict;
+  const lines: string[] = [];
+  if (typeof offered === 'number' && typeof offeredBest === 'number' && unit !== null && offered !== offeredBest) {
+    lines.push(`Figures read at their best; at their worst ${amount(offeredBest, unit)}.`);
+  }
+  if (terms.some((term) => term.basis === 'borrowed')) lines.push('Borrowed terms count as nothing here: the verdict does not depend on them.');
+  return lines.flatMap((line) => paragraph(line, style, inside));
+}
+
+function turningLines({ decidesAt, offered, offeredBest, unit }: Verdict, style: Style): string[] {
+  const best = typeof offered === 'number' && typeof offeredBest === 'number' && unit !== null && offered !== offeredBest ? [`Read at its best the figure gives ${amount(offeredBest, unit)}.`] : [];
+  const side = decidesAt === null ? 'less' : passingSide(decidesAt.figure, decidesAt.kind);
+  const [within, outside] = side === 'less' ? ['below', 'above'] : ['above', 'below'];
+  const turn = decidesAt === null ? [] : [`Decides at: ${figureWords(decidesAt.figure, decidesAt.kind)} of ${turningText(decidesAt).replace(/ or\u00a0(?:less|more)$/u, '')}. At or ${within} it this check passes, ${outside} it does not.`];
+  return [...best, ...turn].flatMap((line) => paragraph(line, style, inside));
+}
+
+function cautionLines({ cautions }: Verdict, style: Style): string[] {
+  return cautions.flatMap((caution) => cautionLine(caution, style));
+}
+
+export function cautionLine(caution: string, style: Style): string[] {
+  return paragraph(glued(safeLine(caution)), style, { lead: `${' '.repeat(INDENT)}caution: `, indent: INDENT + 2 });
+}

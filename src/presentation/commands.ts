@@ -1,0 +1,51 @@
+import { displayWidth, padded } from './layout.js';
+import { safeLine } from './safe-text.js';
+import { PASTE, spelled } from './spelling.js';
+import { isNarrow, type CommandContext, type Style } from './style.js';
+
+/** A command to paste, with what it is for. */
+export interface Offer {
+  readonly words: readonly string[];
+  readonly why: string;
+}
+
+/** `railfit explain PART stage.yaml`, every word quoted for a shell where it must be. */
+export function commandOf(context: CommandContext, command: readonly string[], more: readonly string[] = []): string[] {
+  const stage = context.stageFile === null ? [] : [context.stageFile === 'standard input' ? '-' : context.stageFile];
+  return [context.command, ...command, ...stage, ...more].map(shellWord);
+}
+
+/** POSIX quoting; left alone when no shell would change it. */
+function shellWord(word: string): string {
+  const safe = safeLine(word);
+  return /^[\w./:=+@%,-]+$/u.test(safe) ? safe : `'${safe.replaceAll("'", String.raw`'\''`)}'`;
+}
+
+/** Commands under `Next`, each pasteable: a long one goes on after a backslash. What it is for stands beside where there is room. */
+export function nextLines(offers: readonly Offer[], style: Style): string[] {
+  const width = Math.max(0, ...offers.map(({ words }) => displayWidth(words.join(' '))));
+  return offers.flatMap(({ words, why }, at) => {
+    const lead = padded(at === 0 ? 'Next' : '', LEAD);
+    const beside = [width, displayWidth(words.join(' '))].map((column) => `${lead}${padded(spelled(words.join(PASTE), style), column)}${' '.repeat(GAP)}${spelled(why, style)}`);
+    return beside.find((line) => !isNarrow(style) && displayWidth(line) <= style.width) ?? commandLines(words, style, lead);
+  });
+}
+
+const LEAD = 8;
+const GAP = 4;
+
+/** One command in as many lines as it takes. */
+export function commandLines(words: readonly string[], style: Style, lead: string): string[] {
+  const lines: string[] = [];
+  let line = lead;
+  let isEmpty = true;
+  for (const word of words.map((one) => spelled(one.replaceAll(' ', PASTE), style))) {
+    const joined = isEmpty ? line + word : `${line}${PASTE}${word}`;
+    if (!isEmpty && displayWidth(joined) + 2 > style.width) {
+      lines.push(`${line}${PASTE}\\`);
+      line = ' '.repeat(displayWidth(lead) + 2) + word;
+    } else line = joined;
+    isEmpty = false;
+  }
+  return [...lines, line];
+}

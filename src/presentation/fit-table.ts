@@ -1,0 +1,77 @@
+import type { Part } from '../parts/part.js';
+import type { RankedPart } from '../ranking/index.js';
+import type { Report } from '../report.js';
+import { amount, priceText } from './amounts.js';
+import { paragraph } from './layout.js';
+import { safeLine } from './safe-text.js';
+import { GLUE } from './spelling.js';
+import type { Style } from './style.js';
+import { tableLines, type Column } from './table.js';
+import { spareText } from './verdict-words.js';
+import { checkWords } from './words.js';
+
+/** What fits, in its order. */
+export function fitLines(report: Report, style: Style): string[] {
+  const shown = report.fit.slice(0, style.top);
+  if (shown.length === 0) return [];
+  const rows = shown.map((one) => rowOf(one));
+  return [...tableLines({ columns: columnsOf(report), rows }, style), ...more(report.fit.length - shown.length, 'fit', style)];
+}
+
+/** How many were cut off; nothing is cut silently. */
+export function more(left: number, verb: string, style: Style): string[] {
+  return left <= 0 ? [] : paragraph(`… and ${left} more that ${verb} (--top ${left + style.top} shows all)`, style, { lead: ' ' });
+}
+
+function columnsOf({ fit }: Report): Column[] {
+  const quantities = new Set(fit.map(({ part }) => part.price?.quantity ?? null).filter((quantity) => quantity !== null));
+  const [quantity] = quantities;
+  return [
+    { title: '#', align: 'right', key: true },
+    { title: 'Part', key: true },
+    { title: '', key: true },
+    { title: 'Class', moves: 1, name: '' },
+    { title: 'Tightest check', name: 'tightest' },
+    { title: 'worst case', name: '' },
+    { title: 'DC error\nat output', align: 'right', name: 'DC error at the output', moves: 3 },
+    { title: 'Current\nmax', align: 'right', name: 'current', moves: 4 },
+    { title: quantities.size === 1 ? `Price\nat ${quantity}` : 'Price', align: 'right', name: quantities.size === 1 ? `price at ${quantity}:` : 'price' },
+    { title: 'Proof', name: 'proof', moves: 2 },
+  ];
+}
+
+function rowOf(one: RankedPart): string[] {
+  const tightest = one.verdicts.find((verdict) => verdict.check === one.tightest);
+  const error = one.verdicts.find((verdict) => verdict.check === 'dc-error')?.offered;
+  return [
+    String(one.rank),
+    safeLine(one.part.id),
+    tierMark(one.part),
+    aboutPart(one.part),
+    tightest === undefined ? '' : checkWords(tightest.check),
+    tightest === undefined ? '' : spareText(tightest),
+    typeof error === 'number' ? amount(error, 'V', { round: 'up' }) : '',
+    one.current === null ? '' : amount(one.current, 'A', { round: 'up' }),
+    priceText(one.part.price),
+    one.proof === 'limits' ? 'limits' : `typical${GLUE}(${one.confirm.length})`,
+  ];
+}
+
+export const tierMark = ({ tier }: Pick<Part, 'tier'>): string => (tier === 'approved' ? 'A' : 'G');
+
+/** What kind of part it is, in the list's own words. */
+export const aboutPart = (part: Part): string => safeLine(part.description ?? part.class ?? '');
+
+/** What the marks mean; only those that occur. */
+export function legendLine(report: Report, style: Style): string[] {
+  const shown = [...report.fit.slice(0, style.top), ...report.undecided.slice(0, style.top)];
+  const tiers = new Set(shown.map(({ part }) => part.tier));
+  const typical = report.fit.slice(0, style.top).some(({ proof }) => proof === 'typical');
+  const meanings = [
+    ...(tiers.has('approved') ? ['A on the approved list'] : []),
+    ...(tiers.has('generic') ? ['G generic set: a class of parts, not something to order'] : []),
+    ...(typical ? ['typical (n): rests on n figures that are not limits'] : []),
+    ...(report.undecided.length > 0 ? ['? cannot be decided'] : []),
+  ];
+  return meanings.length === 0 ? [] : paragraph(meanings.join('; '), style, { lead: ' ' });
+}

@@ -1,0 +1,109 @@
+import type { AnyDemand } from '../demands/index.js';
+import type { Problem } from '../quantities/problem.js';
+import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js';
+import type { Confirmation, JudgedPart } from '../screening/index.js';
+import type { RankedPart } from '../ranking/index.js';
+import { problemJson } from './problem-json.js';
+import { stageJson } from './stage-json.js';
+import { verdictJson, type OriginOf } from './verdict-json.js';
+
+/** Schema names and versions; within a version only additions. */
+const SCHEMA_VERSION = 1;
+
+/** A JSON document: SI base units as numbers, unknown as null with a reason. Ends with one newline. */
+export function document(schema: string, body: Readonly<Record<string, unknown>>): string {
+  return `${JSON.stringify({ schema: `railfit/${schema}`, schemaVersion: SCHEMA_VERSION, ...body }, null, 2)}\n`;
+}
+
+export function shortlistJson(report: Report, options: { readonly top: number; readonly all: boolean }): string {
+  const origin: OriginOf = (part, slot) => report.origin(part, slot);
+  const judged = (one: JudgedPart): object => judgedJson(one, origin);
+  return document('shortlist', {
+    ...demandsBody(report),
+    counts: report.counts,
+    fit: report.fit.slice(0, options.top).map((one) => rankedJson(one, origin)),
+    undecided: report.undecided.slice(0, options.top).map(judged),
+    rejections: report.rejections,
+    nearest: report.nearest.map(judged),
+    ahead: report.ahead,
+    ...(options.all ? { rejected: report.rejected.map(judged) } : {}),
+    asking: report.asking,
+    data: dataJson(report.data),
+  });
+}
+
+export function explanationJson(explanation: Explanation): string {
+  const { judged, data } = explanation;
+  const { part } = judged;
+  const origin: OriginOf = (id, slot) => explanation.origin(id, slot);
+  return document('explanation', {
+    stage: stageJson(explanation.stage),
+    part: { id: part.id, tier: part.tier, class: part.class, description: part.description, family: part.family, package: part.package, channels: part.channels, price: part.price },
+    outcome: judged.outcome,
+    proof: judged.proof,
+    rank: explanation.rank,
+    ...(judged.outcome === 'undecided' ? { likely: judged.likely } : {}),
+    verdicts: judged.verdicts.map((verdict) => verdictJson(verdict, part.id, origin)),
+    confirm: judged.confirm.map(confirmJson),
+    changes: null,
+    changesReason: 'not-built',
+    cautions: cautionsOf(judged),
+    fitting: explanation.fitting.map((one) => one.part.id),
+    asking: explanation.asking,
+    data: dataJson(data),
+  });
+}
+
+export function demandsJson(report: DemandsReport): string {
+  return document('demands', demandsBody(report));
+}
+
+export function problemsJson(problems: readonly Problem[]): string {
+  return document('problems', { problems: problems.map(problemJson) });
+}
+
+function demandsBody(report: DemandsReport): { stage: object; demands: object[] } {
+  return { stage: stageJson(report.stage), demands: report.demands.map(demandJson) };
+}
+
+function demandJson(demand: AnyDemand): object {
+  const { check, required, unit, sense, because, source } = demand;
+  const built = 'built' in demand ? { reason: 'not-built' } : {};
+  return { check, required, unit, sense, because, source, ...built };
+}
+
+function rankedJson(one: RankedPart, origin: OriginOf): object {
+  const { merit, tightest, dominatedBy } = one;
+  const shares = { margins: merit.margins, price: merit.price, current: merit.current };
+  return { rank: one.rank, ...identity(one), merit: merit.total, meritShares: shares, tightest, dominatedBy, proof: one.proof, confirm: one.confirm.map(confirmJson), ...verdicts(one, origin) };
+}
+
+function judgedJson(one: JudgedPart, origin: OriginOf): object {
+  return { ...identity(one), outcome: one.outcome, ...(one.outcome === 'undecided' ? { likely: one.likely } : {}), ...verdicts(one, origin) };
+}
+
+function identity({ part }: JudgedPart): object {
+  return { part: part.id, tier: part.tier, class: part.class, description: part.description };
+}
+
+function verdicts(one: JudgedPart, origin: OriginOf): object {
+  return { cautions: cautionsOf(one), verdicts: one.verdicts.map((verdict) => verdictJson(verdict, one.part.id, origin)) };
+}
+
+function confirmJson({ figure, basis, how, checks, needed }: Confirmation): object {
+  return { figure, basis, how, checks, needed };
+}
+
+/** Cautions of the part as a whole; those of a check stand beside its verdict. */
+export function cautionsOf({ part, verdicts: all }: JudgedPart): string[] {
+  const asked = all.find((verdict) => verdict.check === 'channels');
+  const idle = part.channels !== null && typeof asked?.required === 'number' ? part.channels - asked.required : 0;
+  return [
+    ...(part.tier === 'generic' ? ['a generic set: a class of parts, not something to order'] : []),
+    ...(idle > 0 ? [`${idle} section${idle === 1 ? '' : 's'} of ${part.channels ?? 0} idle: each draws its quiescent current and must be tied off`] : []),
+  ];
+}
+
+function dataJson(data: DataUsed): object {
+  return { catalog: data.catalog, rules: data.rules };
+}

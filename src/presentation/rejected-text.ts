@@ -1,0 +1,24 @@
+import type { Report } from '../report.js';
+import type { JudgedPart } from '../screening/index.js';
+import { tierMark } from './fit-table.js';
+import { paragraph } from './layout.js';
+import { safeLine } from './safe-text.js';
+import type { Style } from './style.js';
+import { shortfall } from './verdict-words.js';
+import { checkWords } from './words.js';
+
+/** Every part that does not fit, with the checks it fails. */
+export function rejectedLines({ rejected }: Report, style: Style): string[] {
+  if (rejected.length === 0) return [];
+  return ['Do not fit:', ...rejected.flatMap((one) => failingLine(one, style))];
+}
+
+/** One part with what it fails by. */
+export function failingLine(one: JudgedPart, style: Style): string[] {
+  return paragraph(`${safeLine(one.part.id)} ${tierMark(one.part)} ${failures(one)}`, style, { lead: '  ', indent: 6 });
+}
+
+export function failures({ verdicts }: JudgedPart): string {
+  const failing = verdicts.filter((verdict) => verdict.outcome === 'fail');
+  return failing.map((verdict) => `${checkWords(verdict.check)} ${shortfall(verdict)}`).join('; ');
+}

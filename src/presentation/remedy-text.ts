@@ -1,0 +1,66 @@
+import { figureSlot } from '../parts/figures.js';
+import { asciiText } from '../quantities/ascii.js';
+import type { Explanation } from '../report.js';
+import type { Verdict } from '../verdicts/verdict.js';
+import { figureAmount } from './amounts.js';
+import { commandLines, commandOf } from './commands.js';
+import { paragraph } from './layout.js';
+import { safeLine } from './safe-text.js';
+import { GLUE } from './spelling.js';
+import type { CommandContext, Style } from './style.js';
+import { figureWords, passingSide } from './words.js';
+
+/** What to do about open checks: look the figure up, assume it for one run, or measure it. */
+export function remedyLines(explanation: Explanation, style: Style, context: CommandContext): string[] {
+  const open = explanation.judged.verdicts.filter((verdict) => verdict.outcome === 'unknown');
+  const steps = [...lookups(open, explanation), ...unbuilt(open)];
+  const assumption = assumeWords(open, explanation);
+  const measured = open.flatMap(({ decidesAt }) => (decidesAt !== null && MEASURABLE.has(decidesAt.figure) ? [figureWords(decidesAt.figure)] : []));
+  const numbered: string[][] = steps.map((step) => [step]).map(([step = '']) => paragraph(step, style, { lead: '  - ', indent: 4 }));
+  if (assumption !== null) {
+    numbered.push([
+      ...paragraph('or take a value for this run; it is written into the answer as an assumption:', style, { lead: '  - ', indent: 4 }),
+      ...commandLines(commandOf(context, ['explain', explanation.judged.part.id], ['--assume', assumption]), style, '    '),
+    ]);
+  }
+  if (measured.length > 0) {
+    numbered.push(paragraph(`or measure ${[...new Set(measured)].join(' and ')} on a few samples at the corner above; samples do not replace a limit`, style, { lead: '  - ', indent: 4 }));
+  }
+  return numbered.length === 0 ? [] : ['What to do', ...numbered.flat()];
+}
+
+const MEASURABLE: ReadonlySet<string> = new Set(['offsetVoltage', 'offsetDrift', 'biasCurrent', 'slewRate', 'gainBandwidth', 'outputLowHeadroom', 'outputHighHeadroom', 'quiescentCurrent', 'outputCurrent']);
+
+/** Which limit to look up, and the cell it belongs in. */
+function lookups(open: readonly Verdict[], explanation: Explanation): string[] {
+  const sought = new Map<string, string>();
+  for (const verdict of open) {
+    const wanted = verdict.missing.length > 0 ? verdict.missing : verdict.decidesAt === null ? [] : [verdict.decidesAt];
+    for (const { figure, kind } of wanted) sought.set(`${figure}.${kind ?? ''}`, lookup({ figure, kind }, explanation));
+  }
+  return [...sought.values()];
+}
+
+function lookup({ figure, kind }: Verdict['missing'][number], explanation: Explanation): string {
+  const { judged } = explanation;
+  const slot = kind === null ? null : `${figure}.${kind}`;
+  const origin = slot === null ? null : explanation.origin(judged.part.id, slot);
+  const words = figureWords(figure, kind);
+  if (origin?.kind === 'cell') return `look up the ${words} and put it in column ${origin.columnLetter} of row${GLUE}${origin.row} in ${safeLine(origin.file)}, then import the list again`;
+  if (judged.part.tier === 'generic') return `a generic set states no ${words}: look at a part of your own`;
+  return `look up the ${words}, give it a column in your list, then import the list again`;
+}
+
+function unbuilt(open: readonly Verdict[]): string[] {
+  return open.filter(({ reason }) => reason === 'not-built').map(({ title }) => `${title}: no figure settles it in this version; judge it by hand, or take the limit out of the stage`);
+}
+
+/** `PART.offsetDrift=29.8uV/C`: the value at which the first open check turns, or the class's own. */
+function assumeWords(open: readonly Verdict[], { judged }: Explanation): string | null {
+  const point = open.find(({ decidesAt }) => decidesAt !== null && decidesAt.figure !== 'temperature' && decidesAt.figure !== 'supplyVoltage')?.decidesAt ?? null;
+  if (point === null || !(point.value > 0)) return null;
+  const known = judged.part.figures.some((figure) => figureSlot(figure).startsWith(`${point.figure}.`));
+  if (known) return null;
+  const round = passingSide(point.figure, point.kind) === 'less' ? 'down' : 'up';
+  return `${judged.part.id}.${point.figure}=${asciiText(figureAmount(point.figure, point, { round })).replaceAll(' ', '')}`;
+}

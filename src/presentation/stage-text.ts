@@ -1,0 +1,110 @@
+import type { Stage } from '../stage/index.js';
+import { amount, range } from './amounts.js';
+import { flow, LABEL, labelled, padded } from './layout.js';
+import { safeLine } from './safe-text.js';
+import { GLUE, glued, held } from './spelling.js';
+import type { Style } from './style.js';
+import { counted } from './words.js';
+
+/** The stage as it was understood, so that a reader sees at once what was judged. */
+export function stageLines(stage: Stage, style: Style): string[] {
+  const title = stage.name === null ? [] : labelled('Stage', safeLine(stage.name), style);
+  const asked = askedOf(stage);
+  return [
+    ...title,
+    ...labelled(stage.name === null ? 'Stage' : '', circuitOf(stage).join(', '), style),
+    ...flow(surroundingsOf(stage), style, { lead: padded('Supply', LABEL) }),
+    ...(asked.length === 0 ? [] : labelled('Limits', asked.join(', '), style)),
+  ];
+}
+
+/** The stage in one short sentence. */
+export function stageInShort(stage: Stage): string {
+  return [...(stage.name === null ? [] : [`${safeLine(stage.name)}:`]), circuitOf(stage).join(', '), `on ${range(stage.supply.min, stage.supply.max, 'V')}`].join(' ');
+}
+
+/** Assumptions of the stage, one sentence each, then what the user assumed and how it was judged. */
+export function assumptionLines(sentences: readonly string[], style: Style): string[] {
+  const all = sentences.map((sentence) => glued(safeLine(sentence)));
+  return all.length === 0 ? [] : labelled('Assumed', all.join('; '), style);
+}
+
+function circuitOf(stage: Stage): string[] {
+  const { gain, noiseGain, output, outputNominal } = stage;
+  const coupled = stage.coupling === 'ac' ? `, AC-coupled` : '';
+  const corners = output.min === outputNominal.min && output.max === outputNominal.max ? '' : ` (${range(output.min, output.max, 'V')} at the corners)`;
+  return [
+    `${stage.topology}${coupled}`,
+    `gain ${amount(gain, 'V/V')}`,
+    `noise gain ${amount(noiseGain.nominal, 'V/V')}`,
+    ...inputsOf(stage),
+    `output ${range(outputNominal.min, outputNominal.max, 'V')}${corners}`,
+    stage.frequency === null ? 'no frequency given' : `up to ${amount(stage.frequency, 'Hz')}`,
+    ...referenceOf(stage),
+  ];
+}
+
+/** Extremes at each input; AC-coupled the peak about the bias. */
+function inputsOf({ vertices, coupling }: Stage): string[] {
+  const names = Object.keys(vertices[0]?.inputs ?? {});
+  return names.map((name) => {
+    const values = vertices.map((vertex) => vertex.inputs[name] ?? 0);
+    const [low, high] = [Math.min(...values), Math.max(...values)];
+    const words = name === 'positive' ? '+ input' : name === 'negative' ? '- input' : 'input';
+    return coupling === 'ac' ? `${words} ${amount(high, 'V')} peak` : `${words} ${range(low, high, 'V')}`;
+  });
+}
+
+function referenceOf({ vertices }: Stage): string[] {
+  const values = vertices.map((vertex) => vertex.reference);
+  const [low, high] = [Math.min(...values), Math.max(...values)];
+  return low === 0 && high === 0 ? [] : [`reference ${range(low, high, 'V')}`];
+}
+
+function surroundingsOf(stage: Stage): string[] {
+  const { supply, supplyPeak, load, temperature } = stage;
+  const peak = supplyPeak > supply.max ? `, peak ${amount(supplyPeak, 'V')}` : '';
+  return [`${range(supply.min, supply.max, 'V')} single${peak}`, `Load${GLUE}${GLUE}${loadOf(load)}`, `Temperature${GLUE}${GLUE}${range(temperature.min, temperature.max, '°C')}`];
+}
+
+function loadOf(load: Stage['load']): string {
+  if (load === null) return 'none';
+  const parts = [
+    ...(load.resistance === null ? [] : [`${amount(load.resistance, 'Ω')} to ${load.to}`]),
+    ...(load.capacitance === 0 ? [] : [amount(load.capacitance, 'F')]),
+  ];
+  return parts.length === 0 ? 'none' : parts.join(', ');
+}
+
+function askedOf({ asked }: Stage): string[] {
+  const { limits, wishes, margins } = asked;
+  const most = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≤${GLUE}${glued(safeLine(text))}`]);
+  const least = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≥${GLUE}${glued(safeLine(text))}`]);
+  const settling = limits.settling === undefined ? [] : [`settling to ${glued(safeLine(limits.settling.to.text))} within ${glued(safeLine(limits.settling.within.text))}`];
+  const times = (words: string, factor: number | undefined): string[] => (factor === undefined || factor === 1 ? [] : [`${words} with a margin of ×${GLUE}${factor}`]);
+  return [
+    ...most('DC error at the output', limits.dcError?.text),
+    ...most(`supply current per ${limits.supplyCurrentPer ?? 'amplifier'}`, limits.supplyCurrent?.text),
+    ...most('gain error', limits.gainError?.text),
+    ...most('swing loss', limits.swingLoss?.value === 0 ? undefined : limits.swingLoss?.text),
+    ...most('output noise', limits.outputNoise?.text),
+    ...least('signal to noise', limits.snr?.text),
+    ...most('distortion', limits.distortion?.text),
+    ...settling,
+    ...least('phase margin', limits.phaseMargin?.text),
+    ...times('slew rate', margins.slewRate),
+    ...times('gain bandwidth', margins.gainBandwidth),
+    ...(margins.outputHeadroom === undefined || margins.outputHeadroom.value === 0 ? [] : [`${glued(safeLine(margins.outputHeadroom.text))} kept free at each rail`]),
+    ...(wishes.channels === undefined ? [] : [held(counted(wishes.channels, 'channel'))]),
+    ...most('price', wishes.price?.text),
+    ...listed('package', wishes.package),
+    ...(wishes.qualification === undefined ? [] : [safeLine(wishes.qualification)]),
+    ...listed('status', wishes.status),
+    ...listed('lifecycle', wishes.lifecycle),
+    ...asked.avoid.map((hazard) => `no ${hazard}`),
+  ];
+}
+
+function listed(words: string, wanted: readonly string[] | undefined): string[] {
+  return wanted === undefined || wanted.length === 0 ? [] : [`${words} ${wanted.map(safeLine).join(' or ')}`];
+}

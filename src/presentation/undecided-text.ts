@@ -1,0 +1,44 @@
+import type { Report } from '../report.js';
+import type { JudgedPart } from '../screening/index.js';
+import type { Verdict } from '../verdicts/verdict.js';
+import { aboutPart, more, tierMark } from './fit-table.js';
+import { paragraph } from './layout.js';
+import { safeLine } from './safe-text.js';
+import { toned, type Style } from './style.js';
+import { unknownText } from './verdict-words.js';
+import { checkWords } from './words.js';
+
+/** What cannot be decided, likely parts first: what is missing, and what it would have to be. */
+export function undecidedLines({ undecided }: Report, style: Style): string[] {
+  const ordered = [...undecided].sort((a, b) => Number(b.likely) - Number(a.likely));
+  const shown = ordered.slice(0, style.top);
+  return [
+    ...unbuiltLines(undecided, style),
+    ...shown.flatMap((one) => undecidedPart(one, style)),
+    ...more(undecided.length - shown.length, 'cannot be decided', style),
+  ];
+}
+
+/** A check this version lacks leaves every part open: said once. */
+function unbuiltLines(undecided: readonly JudgedPart[], style: Style): string[] {
+  const checks = new Set(undecided.flatMap(({ verdicts }) => verdicts.filter(isUnbuilt).map(({ check }) => checkWords(check))));
+  return checks.size === 0 ? [] : paragraph(`This version does not judge ${[...checks].join(', ')}: while the stage asks for it no part is proven to fit.`, style, { lead: ' ' });
+}
+
+const isUnbuilt = ({ reason }: Verdict): boolean => reason === 'not-built';
+
+function undecidedPart(one: JudgedPart, style: Style): string[] {
+  const open = one.verdicts.filter((verdict) => verdict.outcome === 'unknown');
+  const built = open.filter((verdict) => !isUnbuilt(verdict));
+  const reasons = built.map((verdict) => unknownText(verdict, checkWords(verdict.check)));
+  const about = aboutPart(one.part);
+  const likely = one.likely ? 'likely to fit (its class would); ' : '';
+  const lead = ` ${toned('?', 'open', style)}  `;
+  const why = reasons.length === 0 ? 'passes every check that is judged' : withFits(reasons, open.length);
+  return paragraph(`${safeLine(one.part.id)} ${tierMark(one.part)}${about === '' ? '' : ` ${about}`} - ${likely}${why}`, style, { lead, indent: 6 });
+}
+
+/** One open check decides the part; several only themselves. */
+function withFits(reasons: readonly string[], open: number): string {
+  return open === 1 ? reasons.join('').replace('passes if', 'fits if') : reasons.join('; ');
+}

@@ -1,0 +1,40 @@
+import { formatComparison, } from '../quantities/format.js';
+import type { Verdict } from '../verdicts/verdict.js';
+
+const RELATION = { 'at-least': 'needs at least', 'at-most': 'allowed at most' } as const;
+
+/** One verdict in one plain sentence, quoting only numbers that are in it. */
+export function verdictSentence(verdict: Verdict): string {
+  if (verdict.sense === 'one-of' || Array.isArray(verdict.required)) return wordSentence(verdict);
+  const { required, offered, unit, sense } = verdict;
+  if (typeof required !== 'number' || unit === null || sense === null) return `${verdict.title}: ${why(verdict)}`;
+  const value = typeof offered === 'number' ? offered : verdict.known;
+  if (value === null) return `${verdict.title}: ${why(verdict)}; ${RELATION[sense]} ${formatComparison(required, required, unit, sense)[1]}`;
+  const [shown, limit] = formatComparison(value, required, unit, sense);
+  const partly = typeof offered === 'number' ? '' : 'at least ';
+  const ending = verdict.outcome === 'unknown' ? `: ${why(verdict)}` : verdict.outcome === 'fail' ? ': does not hold' : '';
+  return `${verdict.title} ${partly}${shown}, ${RELATION[sense]} ${limit}${ending}`;
+}
+
+function wordSentence(verdict: Verdict): string {
+  const wanted = Array.isArray(verdict.required) ? verdict.required.join(' or ') : '';
+  return `${verdict.title} ${String(verdict.offered)}, wanted ${wanted}`;
+}
+
+const REASONS: Readonly<Record<string, string>> = {
+  'missing-figure': 'a figure is missing',
+  'beyond-data': 'beyond what the data cover',
+  'no-counting-point': 'no point counts here',
+  currency: 'another currency',
+  'not-built': 'this check is not built yet',
+  'typical-only': 'only a typical figure, too close after derating',
+  estimated: 'an estimate, too close to decide',
+  assumed: 'an assumed value, which cannot fail a part',
+  borrowed: 'borrowed figures make up more than a tenth of the limit',
+};
+
+function why(verdict: Verdict): string {
+  const reason = verdict.reason === null ? 'not decided' : (REASONS[verdict.reason] ?? verdict.reason);
+  const missing = verdict.missing.map((one) => [one.figure, one.kind].filter((word) => word !== null).join(' '));
+  return missing.length === 0 ? reason : `${reason} (${missing.join(', ')})`;
+}
