@@ -38,7 +38,7 @@ export interface Report extends DemandsReport {
   readonly asking: Asking;
   readonly data: DataUsed;
   /** Origin of a figure by part and slot; null where none is kept. */
-  origin(partId: string, slot: string): Origin | null;
+  readonly origin: (partId: string, slot: string) => Origin | null;
 }
 
 /** One part on one stage. */
@@ -51,5 +51,5 @@ export interface Explanation extends DemandsReport {
   readonly fitting: readonly RankedPart[];
   readonly asking: Asking;
   readonly data: DataUsed;
-  origin(partId: string, slot: string): Origin | null;
+  readonly origin: (partId: string, slot: string) => Origin | null;
 }

@@ -9,7 +9,7 @@ export async function migrate(database: Database.Database, migrations: Readonly<
   const db = new Kysely<unknown>({ dialect: new TransactionalDialect({ database }) });
   const provider = { getMigrations: () => Promise.resolve({ ...migrations }) };
   const { error } = await new Migrator({ db, provider }).migrateToLatest();
-  if (error !== undefined) throw error instanceof Error ? error : new Error(String(error));
+  if (error !== undefined) throw error instanceof Error ? error : new Error('a migration failed', { cause: error });
 }
 
 // SQLite rolls back DDL, but Kysely's adapter says it does not, and a migration that fails half-way would leave its first tables.

@@ -10,7 +10,8 @@ export interface CodePage {
   readonly accepted: string;
 }
 
-const page = (code: string, title: string, why: string, pair: readonly [string, string]): CodePage => ({ code, title, why, refused: pair[0], accepted: pair[1] });
+/** Code, title, why, something refused, something accepted. */
+const page = (...[code, title, why, [refused, accepted]]: [string, string, string, readonly [string, string]]): CodePage => ({ code, title, why, refused, accepted });
 
 const QUANTITIES: readonly CodePage[] = [
   page('Q001', 'no unit', 'A bare number has no scale; only zero, gains, counts, letter codes and k, meg, p, n, u on resistors and capacitors go without.', ['supply: 5', 'supply: 5 V']),

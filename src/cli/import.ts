@@ -23,7 +23,7 @@ export async function runImport(session: Session, file: string | undefined, opti
   if (file === undefined) throw new RequestError([commandProblem('C102', 'import: no FILE', { fix: 'railfit import approved.csv' })], EXIT.request);
   const bytes = bytesOf(file);
   return withCatalog(session, options, (catalog) => {
-    const list = readList(bytes, { file: basename(file), tier: 'approved', genericIds: catalog.genericIds() });
+    const list = readList(bytes, { file: basename(file), tier: 'approved', genericIds: catalog.genericIds(), classes: catalog.classes() });
     const report = list.ok ? imported(catalog, list, options) : refused(list);
     if (options.errors !== undefined) writeProblems(options.errors, report);
     return said(report, session, options);

@@ -17,29 +17,29 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
   program
     .description('Ranks operational amplifiers for one single-supply stage, proves each verdict with worst-case numbers, and explains every rejection.')
     .version(VERSION, '-V, --version', 'tool and rules version')
-    .addHelpCommand(false)
+    .helpCommand(false)
     .addHelpText('after', AFTER);
 
-  judging(add(program, 'shortlist', '[STAGE]', 'derive, judge the whole catalog, rank, explain'))
+  judging(add(program, 'shortlist [STAGE]', 'derive, judge the whole catalog, rank, explain'))
     .action(async (...received) => {
       const { command, options } = lastOf<JudgingOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver(await (await import('./shortlist.js')).runShortlist(session, operands[0], { ...options, already: problems }));
     });
-  judging(add(program, 'explain', '[PART] [STAGE]', 'every check of one part on this stage'))
+  judging(add(program, 'explain [PART] [STAGE]', 'every check of one part on this stage'))
     .action(async (...received) => {
       const { command, options } = lastOf<JudgingOptions>(received);
       const { operands, problems } = operandsOf(command, 2);
       const wanted = { part: operands[0], stage: operands[1] };
       deliver(await (await import('./explain.js')).runExplain(session, wanted, { ...options, already: problems }));
     });
-  staging(add(program, 'demands', '[STAGE]', 'what the stage asks of any amplifier; looks at no part'))
+  staging(add(program, 'demands [STAGE]', 'what the stage asks of any amplifier; looks at no part'))
     .action(async (...received) => {
       const { command, options } = lastOf<CommonOptions & StageOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver((await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
     });
-  add(program, 'parts', '[WORDS...]', 'list the catalog, or the parts whose id, class or description has every word')
+  add(program, 'parts [WORDS...]', 'list the catalog, or the parts whose id, class or description has every word')
     .addOption(new Option('--tier <TIER>', 'only this tier').choices(['approved', 'generic']))
     .option('--stage <STAGE>', 'a stage to judge them on')
     .option('--failing <CHECK>', 'only parts that fail this check on --stage', checkId)
@@ -48,13 +48,13 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
       const { command, options } = lastOf<PartsOptions>(received);
       deliver(await (await import('./parts.js')).runParts(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
     });
-  add(program, 'part', '[ID]', 'every figure of one part with kind, condition and origin')
+  add(program, 'part [ID]', 'every figure of one part with kind, condition and origin')
     .option('--sources', 'file, hash, line, row and cell of each figure')
     .action(async (...received) => {
       const { command, options } = lastOf<CommonOptions>(received);
       deliver(await (await import('./part.js')).runPart(session, onlyOperands(command, 1)[0], options));
     });
-  add(program, 'import', '[FILE]', "read the team's approved list: canonical CSV, all or nothing")
+  add(program, 'import [FILE]', "read the team's approved list: canonical CSV, all or nothing")
     .option('-n, --dry-run', 'the same report, nothing is written')
     .option('--undo', 'return to the list before the last import')
     .option('--errors <FILE>', 'one line per faulty cell, for the owner of the list')
@@ -62,16 +62,17 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
       const { command, options } = lastOf<ImportCommandOptions>(received);
       deliver(await (await import('./import.js')).runImport(session, onlyOperands(command, 1)[0], options));
     });
-  add(program, 'help', '[TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
+  add(program, 'help [TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
     .action(async (...received) => {
       const { command, options } = lastOf<CommonOptions>(received);
       const asked = { topic: onlyOperands(command, 1)[0], overview: () => program.helpInformation(), commandHelp: (name: string) => helpOf(program, name) };
-      deliver(await (await import('./help.js')).runHelp(session, asked, options));
+      deliver((await import('./help.js')).runHelp(session, asked, options));
     });
   return program;
 }
 
 /** Commander hands operands first, then options, then the command; operands are sorted by `operandsOf`. */
+// eslint-disable-next-line @typescript-eslint/no-unnecessary-type-parameters -- commander does not type what it hands over; the caller declared it
 function lastOf<Options>(received: readonly unknown[]): { command: Command; options: Options } {
   return { command: received.at(-1) as Command, options: received.at(-2) as Options };
 }
@@ -93,9 +94,11 @@ function quiet(command: Command): Command {
     .allowExcessArguments();
 }
 
-function add(program: Command, name: string, operands: string, description: string): Command {
+/** `usage` is the name and the operands. */
+function add(program: Command, usage: string, description: string): Command {
+  const [name = '', ...operands] = usage.split(' ');
   const command = quiet(program.command(name));
-  for (const operand of operands.split(' ')) command.argument(operand);
+  for (const operand of operands) command.argument(operand);
   return command
     .description(description)
     .option('--json', 'the answer as JSON (schemas ship with the package)')

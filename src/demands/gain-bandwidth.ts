@@ -1,5 +1,5 @@
-import { gainBandwidthForMagnitudeError, gainBandwidthForVectorError } from '../formulas/gain-bandwidth.js';
-import { formatQuantity } from '../quantities/format.js';
+import { gainBandwidthForMagnitudeError, gainBandwidthForVectorError, vectorErrorAt } from '../formulas/gain-bandwidth.js';
+import { formatDecibels, formatQuantity } from '../quantities/format.js';
 import type { Stage } from '../stage/index.js';
 import type { NumberDemand } from './demand.js';
 
@@ -27,12 +27,13 @@ export function gainBandwidth(stage: Stage): NumberDemand | null {
 }
 
 /**
- * Difference stage: with the least gain bandwidth the vector error at the top frequency is what the two paths differ by
- * at most, so it bounds how well common mode cancels there.
+ * Difference stage: the vector error of the amplifier multiplies both paths alike, so common mode still cancels; what is
+ * left of it comes from the resistors (method.md 1, resistor-limited rejection).
  */
 function vectorNote(stage: Stage, required: number): string {
   if (stage.topology !== 'difference' || stage.frequency === null) return '';
-  const ratio = (stage.noiseGain.nominal * stage.frequency) / required;
-  const vector = ratio / Math.sqrt(1 + ratio * ratio);
-  return `; at that bandwidth the vector error is ${formatQuantity(vector * 100, '%')}, which counts where this output is subtracted from another or closes a loop`;
+  const error = vectorErrorAt(stage.noiseGain.nominal, stage.frequency, required);
+  const rejection = stage.resistorRejection;
+  const resistors = rejection === null || !Number.isFinite(rejection) ? '' : `, which the resistors limit to ${formatDecibels(rejection)}`;
+  return `; the vector error of ${formatQuantity(error * 100, '%')} there acts on both inputs alike and leaves the common-mode rejection${resistors}`;
 }

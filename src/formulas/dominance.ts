@@ -13,7 +13,8 @@ export function dominates(one: readonly number[], other: readonly number[]): boo
   if (one.length !== other.length) {
     throw new RangeError(`dominates: both must have equally many scores, but have ${one.length} and ${other.length}`);
   }
-  return one.every((score, k) => score >= other[k]!) && one.some((score, k) => score > other[k]!);
+  const gains = one.map((score, at) => score - (other[at] ?? score));
+  return gains.every((gain) => gain >= 0) && gains.some((gain) => gain > 0);
 }
 
 /**

@@ -6,7 +6,7 @@ export interface CodePage {
   readonly fix: string;
 }
 
-const page = (title: string, why: string, example: string, fix: string): CodePage => ({ title, why, example, fix });
+const page = (...[title, why, example, fix]: [string, string, string, string]): CodePage => ({ title, why, example, fix });
 
 /** Every code an import can report beside those of quantities (Q…). I1xx file, I2xx headers, I3xx structure, I4xx ids, I5xx cells. */
 export const INTAKE_CODES: Readonly<Record<string, CodePage>> = {

@@ -20,7 +20,7 @@ export function decodeList(bytes: Uint8Array): DecodeResult {
 
 const SAVE_AS = 'save the file as "CSV UTF-8"';
 
-function refuse(code: string, reason: string, fix: string, line = 1): DecodeResult {
+function refuse(...[code, reason, fix, line = 1]: [string, string, string, number?]): DecodeResult {
   return { ok: false, code, reason, fix, line };
 }
 

@@ -2,7 +2,7 @@ import { weakest } from './basis.js';
 import { DOUBLING_KELVIN, FET_BIAS_LIMIT } from './derating.js';
 import { figureSlot, type Figure } from './figures.js';
 import type { PartUnderTest, Reading } from './reading.js';
-import { basisOf, bestPossible, derate, factorText, limitsFirst, nearestSupply, usable } from './select.js';
+import { basisOf, bestPossible, derate, factorText, howRead, limitsFirst, nearestSupply, usable } from './select.js';
 
 type InputCurrent = 'biasCurrent' | 'offsetCurrent';
 
@@ -45,5 +45,5 @@ function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Readi
     ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, doubling per ${DOUBLING_KELVIN} K`] : []),
   ];
   const basis = weakest([basisOf(figure, test.operating), ...(kelvin > 0 ? (['estimated'] as const) : [])]);
-  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: steps.length === 0 ? null : steps.join(', ') };
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, steps.length === 0 ? null : steps.join(', ')) };
 }

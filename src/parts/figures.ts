@@ -13,12 +13,9 @@ export interface ParameterDescription {
   readonly kinds: readonly LimitKind[];
 }
 
+/** Words, SI unit, header unit, field, kinds: one row of the table below. */
 const describe = (
-  words: string,
-  unit: string,
-  headerUnit: string,
-  field: FieldKind,
-  kinds: readonly LimitKind[],
+  ...[words, unit, headerUnit, field, kinds]: [string, string, string, FieldKind, readonly LimitKind[]]
 ): ParameterDescription => ({ words, unit, headerUnit, field, kinds });
 
 const TYP_MAX = ['typ', 'max'] as const;

@@ -93,7 +93,7 @@ function readSet(set: PointSet, outlook: Outlook, question: HeadroomQuestion): S
   const points = set.points.map((point) => ({ ...point, value: point.value * scale }));
   const heaviest = points.at(-1);
   if (heaviest === undefined) throw new RangeError('a head-room set without points');
-  const scaled = set.scale === 1 ? [] : [`scaled from a higher supply × ${Number(set.scale.toPrecision(4))}`];
+  const scaled = set.scale === 1 ? [] : [scale === 1 ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(set.scale.toPrecision(4))}`];
   const estimated: Basis[] = set.scale === 1 ? [] : ['estimated'];
   const covers = question.current <= heaviest.current * (1 + TIGHT);
   const inside = covers ? interpolate(points, question.current) : beyond(points, outlook, question.current);
@@ -127,14 +127,16 @@ function interpolate(points: readonly Placed[], current: number): Inside {
 
 /** A straight line on from the last two points (one point: through the origin), never below the heaviest point's own value. */
 function beyond(points: readonly Placed[], outlook: Outlook, current: number): Inside {
-  const heaviest = points.at(-1) as Placed;
+  const heaviest = points.at(-1);
+  if (heaviest === undefined) throw new RangeError('a head-room set without points');
   const before = points.at(-2) ?? { current: 0, value: 0, basis: heaviest.basis };
   const known = { basis: [heaviest.basis, before.basis, 'estimated'] as const, slot: heaviest.slot };
   if (current > heaviest.current * REACH * (1 + TIGHT)) return { ...known, value: null, how: [heaviest.how, 'beyond 1.5 × the heaviest load point'] };
   const slope = (heaviest.value - before.value) / (heaviest.current - before.current);
   const line = heaviest.value + slope * (current - heaviest.current);
   const value = outlook === 'optimistic' ? heaviest.value : Math.max(heaviest.value, line);
-  return { ...known, value, how: [heaviest.how, 'drawn on beyond the heaviest load point'] };
+  const drawn = outlook === 'optimistic' ? 'the heaviest load point, as printed' : 'drawn on beyond the heaviest load point';
+  return { ...known, value, how: [heaviest.how, drawn] };
 }
 
 /** The smaller of the bounding sets; one that ends before the current counts only if all do. */

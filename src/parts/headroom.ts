@@ -1,8 +1,8 @@
 import { weakest, type Basis } from './basis.js';
 import { derateHeadroom, HEADROOM_PER_KELVIN } from './derating.js';
 import { figureSlot, type Figure, type LoadCondition } from './figures.js';
-import type { PartUnderTest } from './reading.js';
-import { basisOf, distanceFrom, isAway, limitsFirst, temperatureRank, usable } from './select.js';
+import type { Outlook, PartUnderTest } from './reading.js';
+import { basisOf, distanceFrom, howRead, isAway, limitsFirst, temperatureRank, usable } from './select.js';
 
 export type Side = 'low' | 'high';
 
@@ -60,15 +60,19 @@ function pointOf(test: PartUnderTest, side: Side, figure: Figure): HeadroomPoint
     value: test.outlook === 'optimistic' ? best : pessimistic,
     basis: weakest(bases),
     slot: figureSlot(figure),
-    how: howOf(figure, factor),
+    how: howOf(test.outlook, figure, factor),
     assisted: load?.kind === 'resistance' && load.to === (side === 'low' ? 'ground' : 'supply'),
   };
 }
 
-function howOf(figure: Figure, factor: number): string | null {
-  const steps = [
+function howOf(outlook: Outlook, figure: Figure, factor: number): string | null {
+  const derated = [
     ...(figure.kind === 'typ' ? ['typical + half its magnitude'] : []),
     ...(factor === 1 ? [] : [`25 °C figure × ${Number(factor.toPrecision(4))}`]),
+  ];
+  const read = howRead(outlook, figure, derated.length === 0 ? null : derated.join(', '));
+  const steps = [
+    ...(read === null ? [] : [read]),
     ...(figure.condition.load === undefined ? ['load not stated: 10 kΩ to mid-supply'] : []),
     ...(figure.condition.supply === undefined ? ['supply not stated: as at the stage'] : []),
   ];

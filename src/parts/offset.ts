@@ -1,6 +1,6 @@
 import { figureSlot, type Figure } from './figures.js';
 import type { PartUnderTest, Reading } from './reading.js';
-import { basisOf, derate, factorText, limitsFirst, nearestSupply, usable } from './select.js';
+import { basisOf, derate, factorText, howRead, limitsFirst, nearestSupply, usable } from './select.js';
 
 /** The offset that counts, whether it already holds over temperature, and the supply it is rated at (null: not stated). */
 export interface OffsetReading extends Reading {
@@ -24,7 +24,7 @@ export function offsetReading(test: PartUnderTest): OffsetReading | null {
     kind: figure.kind,
     basis: basisOf(figure, test.operating),
     slot: figureSlot(figure),
-    how: figure.kind === 'typ' ? `typical ${factorText(derate({ ...figure, value: 1 }))}` : null,
+    how: howRead(test.outlook, figure, figure.kind === 'typ' ? `typical ${factorText(derate({ ...figure, value: 1 }))}` : null),
     overTemperature: rated === 'over',
     ratedSupply: figure.condition.supply ?? null,
   };

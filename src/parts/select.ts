@@ -1,7 +1,7 @@
 import { BASES, weakest, type Basis } from './basis.js';
 import { COLD_HOT_FACTOR, derateHeadroom, SUPPLY_REACH, TEMPERATURE_REACH, TYPICAL_FACTOR } from './derating.js';
 import { figureSlot, PARAMETERS, type Figure, type Parameter } from './figures.js';
-import type { Operating, PartUnderTest, Reading } from './reading.js';
+import type { Operating, Outlook, PartUnderTest, Reading } from './reading.js';
 
 /** The reading of a parameter by the ordinary rules: limits first, then nearest supply, strongest basis, temperature. Null when missing. */
 export function scalarReading(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): Reading | null {
@@ -64,7 +64,7 @@ function readScalar(test: PartUnderTest, figure: Figure): Reading {
   const typical = figure.kind === 'typ' ? derate(figure) : figure.value;
   const best = figure.assumed === true ? bestPossible(figure.parameter) : figure.value;
   const value = test.outlook === 'optimistic' ? best : typical * (away ?? 1);
-  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howOf(figure, away) };
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, howOf(figure, away)) };
 }
 
 /** An assumed value can pass a check, not fail it: on the best reading it is as good as can be. */
@@ -87,6 +87,12 @@ function howOf(figure: Figure, away: number | undefined): string | null {
   if (figure.kind === 'typ') steps.push(isInput ? 'typical + half its magnitude' : factor === undefined ? 'typical' : `typical ${factorText(factor)}`);
   if (away !== undefined) steps.push(`25 °C figure ${factorText(away)}`);
   return steps.length === 0 ? null : steps.join(', ');
+}
+
+/** How a value came about: on the optimistic reading it stands as printed, whatever the pessimistic one does to it. */
+export function howRead(outlook: Outlook, figure: Figure, steps: string | null): string | null {
+  if (outlook === 'pessimistic' || steps === null) return steps;
+  return figure.kind === 'typ' ? 'typical as printed' : 'as printed';
 }
 
 /** A factor as engineers say it: × 3, ÷ 3.16. */

@@ -50,14 +50,14 @@ function around({ text, start, end }: Spanned, width: number, style: Style): Mar
 
 function cutEnd(text: string, width: number, dots: string): string {
   if (displayWidth(text) <= width) return text;
-  const characters = [...text];
+  const characters = Array.from(text);
   while (characters.length > 0 && displayWidth(characters.join('')) + dots.length > width) characters.pop();
   return width < dots.length ? '' : characters.join('') + dots;
 }
 
 function cutStart(text: string, width: number, dots: string): string {
   if (displayWidth(text) <= width) return text;
-  const characters = [...text];
+  const characters = Array.from(text);
   while (characters.length > 0 && displayWidth(characters.join('')) + dots.length > width) characters.shift();
   return width < dots.length ? '' : dots + characters.join('');
 }

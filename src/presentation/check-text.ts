@@ -1,13 +1,13 @@
+import type { Basis } from '../parts/basis.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { amount, compared } from './amounts.js';
 import { flow, padded, paragraph, displayWidth } from './layout.js';
-import { GLUE, glued } from './spelling.js';
+import { safeLine } from './safe-text.js';
+import { GLUE, glued, spelled } from './spelling.js';
 import { toned, type Style } from './style.js';
 import { termLines, type Origins } from './term-text.js';
 import { comparisonText, cornerText, shortfall, spareText, turningText } from './verdict-words.js';
-import { BASIS_WORDS, figureWords, passingSide, REASON_WORDS } from './words.js';
-import { safeLine } from './safe-text.js';
-import { spelled } from './spelling.js';
+import { figureWords, passingSide, REASON_WORDS } from './words.js';
 
 const INDENT = 6;
 const inside = { lead: ' '.repeat(INDENT) };
@@ -61,8 +61,11 @@ export function passingInShort(verdicts: readonly Verdict[], style: Style): stri
 }
 
 function basisMark({ basis }: Verdict): string {
-  return basis === null || basis === 'guaranteed' ? '' : ` (${BASIS_WORDS[basis]})`;
+  return basis === null || basis === 'guaranteed' ? '' : ` (${MARKS[basis]})`;
 }
+
+/** The basis in one word. */
+const MARKS: Readonly<Record<Basis, string>> = { guaranteed: 'limit', derated: 'typical', estimated: 'estimate', assumed: 'assumed', borrowed: 'class' };
 
 function headline(mark: string, text: string, style: Style): string[] {
   return paragraph(text, style, { lead: `${mark}  `, indent: INDENT });
@@ -78,18 +81,26 @@ function readingLines(verdict: Verdict, style: Style): string[] {
   const { offered, offeredBest, unit, terms } = verdict;
   const lines: string[] = [];
   if (typeof offered === 'number' && typeof offeredBest === 'number' && unit !== null && offered !== offeredBest) {
-    lines.push(`Figures read at their best; at their worst ${amount(offeredBest, unit)}.`);
+    lines.push(`Figures count as printed here; with deratings and estimates it would be ${amount(offeredBest, unit)}.`);
   }
   if (terms.some((term) => term.basis === 'borrowed')) lines.push('Borrowed terms count as nothing here: the verdict does not depend on them.');
   return lines.flatMap((line) => paragraph(line, style, inside));
 }
 
-function turningLines({ decidesAt, offered, offeredBest, unit }: Verdict, style: Style): string[] {
-  const best = typeof offered === 'number' && typeof offeredBest === 'number' && unit !== null && offered !== offeredBest ? [`Read at its best the figure gives ${amount(offeredBest, unit)}.`] : [];
-  const side = decidesAt === null ? 'less' : passingSide(decidesAt.figure, decidesAt.kind);
-  const [within, outside] = side === 'less' ? ['below', 'above'] : ['above', 'below'];
-  const turn = decidesAt === null ? [] : [`Decides at: ${figureWords(decidesAt.figure, decidesAt.kind)} of ${turningText(decidesAt).replace(/ or\u00a0(?:less|more)$/u, '')}. At or ${within} it this check passes, ${outside} it does not.`];
-  return [...best, ...turn].flatMap((line) => paragraph(line, style, inside));
+function turningLines(verdict: Verdict, style: Style): string[] {
+  return [...bestReading(verdict), ...turning(verdict)].flatMap((line) => paragraph(line, style, inside));
+}
+
+function bestReading({ offered, offeredBest, unit }: Verdict): string[] {
+  if (typeof offered !== 'number' || typeof offeredBest !== 'number' || unit === null || offered === offeredBest) return [];
+  return [`Read at its best the figure gives ${amount(offeredBest, unit)}.`];
+}
+
+function turning({ decidesAt }: Verdict): string[] {
+  if (decidesAt === null) return [];
+  const [within, outside] = passingSide(decidesAt.figure, decidesAt.kind) === 'less' ? ['below', 'above'] : ['above', 'below'];
+  const value = turningText(decidesAt).replace(/ or\u00a0(?:less|more)$/u, '');
+  return [`Decides at: ${figureWords(decidesAt.figure, decidesAt.kind)} of ${value}. At or ${within} it this check passes, ${outside} it does not.`];
 }
 
 function cautionLines({ cautions }: Verdict, style: Style): string[] {

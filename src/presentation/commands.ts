@@ -21,14 +21,15 @@ function shellWord(word: string): string {
   return /^[\w./:=+@%,-]+$/u.test(safe) ? safe : `'${safe.replaceAll("'", String.raw`'\''`)}'`;
 }
 
-/** Commands under `Next`, each pasteable: a long one goes on after a backslash. What it is for stands beside where there is room. */
+/** Commands under `Next`, each pasteable: a long one goes on after a backslash. What it is for stands beside where all have room. */
 export function nextLines(offers: readonly Offer[], style: Style): string[] {
-  const width = Math.max(0, ...offers.map(({ words }) => displayWidth(words.join(' '))));
-  return offers.flatMap(({ words, why }, at) => {
-    const lead = padded(at === 0 ? 'Next' : '', LEAD);
-    const beside = [width, displayWidth(words.join(' '))].map((column) => `${lead}${padded(spelled(words.join(PASTE), style), column)}${' '.repeat(GAP)}${spelled(why, style)}`);
-    return beside.find((line) => !isNarrow(style) && displayWidth(line) <= style.width) ?? commandLines(words, style, lead);
-  });
+  const commands = offers.map(({ words }) => spelled(words.join(PASTE), style));
+  const widest = Math.max(0, ...commands.map(displayWidth));
+  const lead = (at: number): string => padded(at === 0 ? 'Next' : '', LEAD);
+  const line = (at: number, width: number): string => `${lead(at)}${padded(commands[at] ?? '', width)}${' '.repeat(GAP)}${spelled(offers[at]?.why ?? '', style)}`;
+  const fits = (text: string): boolean => !isNarrow(style) && displayWidth(text) <= style.width;
+  const width = offers.every((_, at) => fits(line(at, widest))) ? widest : 0;
+  return offers.flatMap(({ words }, at) => (fits(line(at, width)) ? [line(at, width)] : commandLines(words, style, lead(at))));
 }
 
 const LEAD = 8;

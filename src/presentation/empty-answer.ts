@@ -2,7 +2,7 @@ import type { Report } from '../report.js';
 import type { JudgedPart } from '../screening/index.js';
 import type { Stage, Vertex } from '../stage/index.js';
 import { amount } from './amounts.js';
-import { tierMark } from './fit-table.js';
+import { partName } from './fit-table.js';
 import { paragraph } from './layout.js';
 import { failingLine, failures } from './rejected-text.js';
 import { safeLine } from './safe-text.js';
@@ -19,15 +19,17 @@ export function emptyReason(report: Report, style: Style): string[] {
 export function nearestLines({ nearest, fit }: Report, style: Style): string[] {
   if (nearest.length === 0) return [];
   const title = fit.length === 0 ? 'Nearest to fitting:' : 'Nearest of those that do not fit:';
-  return [title, ...nearest.flatMap((one) => failingLine(one, style))];
+  return [...paragraph(title, style), ...nearest.flatMap((one) => failingLine(one, style))];
 }
 
 function commonReason({ counts, rejections, nearest }: Report): string {
   if (counts.parts === 0) return 'No part fits: the catalog is empty.';
   const out = rejections.map(({ check, parts }) => `${checkWords(check)} (${parts})`);
-  const most = out.length === 0 ? '' : ` ${counts.undecided > 0 ? 'The others fail' : 'They fail'} ${out.slice(0, MOST).join(', ')}${out.length > MOST ? ` and ${counted(out.length - MOST, 'more check')}` : ''}.`;
+  const who = counts.undecided > 0 ? 'The others fail' : 'They fail';
+  const rest = out.length > MOST ? ` and ${counted(out.length - MOST, 'more check')}` : '';
+  const most = out.length === 0 ? '' : ` ${who} ${out.slice(0, MOST).join(', ')}${rest}.`;
   const first = nearest[0];
-  const near = first === undefined ? '' : ` Nearest is ${safeLine(first.part.id)} ${tierMark(first.part)}: ${failures(first)}.`;
+  const near = first === undefined ? '' : ` Nearest is ${partName(first.part)}: ${failures(first)}.`;
   const open = counts.undecided > 0 ? `No part is proven to fit; ${counts.undecided} of ${counted(counts.parts, 'part')} cannot be decided.` : `No part of ${counts.parts} fits.`;
   return `${open}${most}${near}`;
 }
@@ -48,7 +50,7 @@ function railReason(report: Report, check: 'output-low' | 'output-high'): string
   const asked = check === 'output-low' ? lowest(stage) : highest(stage);
   const kept = stage.asked.margins.outputHeadroom;
   const margin = kept === undefined || kept.value === 0 ? '' : `, with ${amount(kept.value, 'V')} kept free`;
-  const nearest = reach === null ? '' : ` ${reach.otherwise ? 'Of the parts that fail nothing else,' : 'Of all parts,'} ${safeLine(reach.part.part.id)} comes nearest: it needs ${amount(reach.needs, 'V', { round: 'up' })} there.`;
+  const nearest = reach === null ? '' : reachSentence(reach);
   return `No amplifier on this supply reaches ${asked}${margin}: an output stage always keeps a little of the rail. limits.swingLoss may give up that end of the swing.${nearest}`;
 }
 
@@ -61,6 +63,11 @@ function highest({ vertices }: Stage): string {
   const room = (at: Vertex): number => at.supply - at.output;
   const least = vertices.reduce((best, next) => (room(next) < room(best) ? next : best));
   return `${amount(least.output, 'V')} from a supply of ${amount(least.supply, 'V')}`;
+}
+
+function reachSentence({ part, needs, otherwise }: Reach): string {
+  const among = otherwise ? 'Of the parts that fail nothing else,' : 'Of all parts,';
+  return ` ${among} ${safeLine(part.part.id)} comes nearest: it needs ${amount(needs, 'V', { round: 'up' })} there.`;
 }
 
 interface Reach {

@@ -8,7 +8,7 @@ import { cautionsOf } from './json.js';
 import { paragraph } from './layout.js';
 import { remedyLines } from './remedy-text.js';
 import { safeLine } from './safe-text.js';
-import { finished, held } from './spelling.js';
+import { finished, glued, held } from './spelling.js';
 import { assumptionLines, stageInShort } from './stage-text.js';
 import { toned, type CommandContext, type Style } from './style.js';
 import type { Origins } from './term-text.js';
@@ -62,7 +62,7 @@ function aboutLines({ judged, stage }: Explanation, style: Style): string[] {
   const { part } = judged;
   const words = [
     part.tier === 'approved' ? 'approved list' : 'generic set',
-    ...[part.description, part.class === null ? null : `class ${part.class}`, part.package, part.status, part.lifecycle].flatMap((word) => (word === null ? [] : [safeLine(word)])),
+    ...[part.description, part.class === null ? null : `class ${part.class}`, part.package, part.status, part.lifecycle].flatMap((word) => (word === null ? [] : [glued(safeLine(word))])),
     ...(part.channels === null ? [] : [held(counted(part.channels, 'channel'))]),
     ...(part.price === null ? [] : [priceText(part.price)]),
   ];

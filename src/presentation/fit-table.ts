@@ -4,7 +4,7 @@ import type { Report } from '../report.js';
 import { amount, priceText } from './amounts.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
-import { GLUE } from './spelling.js';
+import { GLUE, glued } from './spelling.js';
 import type { Style } from './style.js';
 import { tableLines, type Column } from './table.js';
 import { spareText } from './verdict-words.js';
@@ -59,8 +59,11 @@ function rowOf(one: RankedPart): string[] {
 
 export const tierMark = ({ tier }: Pick<Part, 'tier'>): string => (tier === 'approved' ? 'A' : 'G');
 
+/** A part inside a sentence, its mark in parentheses: after a number a bare A would read as amperes. */
+export const partName = (part: Part): string => `${safeLine(part.id)} (${tierMark(part)})`;
+
 /** What kind of part it is, in the list's own words. */
-export const aboutPart = (part: Part): string => safeLine(part.description ?? part.class ?? '');
+export const aboutPart = (part: Part): string => glued(safeLine(part.description ?? part.class ?? ''));
 
 /** What the marks mean; only those that occur. */
 export function legendLine(report: Report, style: Style): string[] {

@@ -29,7 +29,10 @@ function checkCautions({ verdicts }: JudgedPart): string[] {
 }
 
 function confirmNotes(shown: readonly RankedPart[]): string[] {
-  return grouped(shown.filter((one) => one.confirm.length > 0), (one) => [`${one.confirm.length === 1 ? 'this one' : `these ${one.confirm.length}`} before release: ${one.confirm.map(confirmationText).join('; ')}`]);
+  return grouped(shown.filter(({ confirm }) => confirm.length > 0), ({ confirm }) => {
+    const which = confirm.length === 1 ? 'this one' : `these ${confirm.length}`;
+    return [`${which} before release: ${confirm.map(confirmationText).join('; ')}`];
+  });
 }
 
 function dominatedNotes(shown: readonly RankedPart[]): string[] {

@@ -5,7 +5,7 @@ import { conditionText } from './condition-text.js';
 import { padded, paragraph } from './layout.js';
 import { originWords } from './origin-text.js';
 import { safeLine } from './safe-text.js';
-import { finished } from './spelling.js';
+import { finished, glued } from './spelling.js';
 import type { Style } from './style.js';
 import { tableLines } from './table.js';
 import { capital, counted, figureWords } from './words.js';
@@ -58,7 +58,7 @@ function identityOf(part: Part): [string, string][] {
     ['phase reversal', yesNo(part.phaseReversal)],
     ['input clamp', yesNo(part.inputClamp)],
   ];
-  return all.filter(([, text]) => text !== '').map(([label, text]) => [capital(label), safeLine(text)]);
+  return all.filter(([, text]) => text !== '').map(([label, text]) => [capital(label), glued(safeLine(text))]);
 }
 
 function identityLine(label: string, text: string, style: Style): string[] {

@@ -1,8 +1,7 @@
 import type { Report } from '../report.js';
 import type { JudgedPart } from '../screening/index.js';
-import { tierMark } from './fit-table.js';
+import { partName } from './fit-table.js';
 import { paragraph } from './layout.js';
-import { safeLine } from './safe-text.js';
 import type { Style } from './style.js';
 import { shortfall } from './verdict-words.js';
 import { checkWords } from './words.js';
@@ -15,7 +14,7 @@ export function rejectedLines({ rejected }: Report, style: Style): string[] {
 
 /** One part with what it fails by. */
 export function failingLine(one: JudgedPart, style: Style): string[] {
-  return paragraph(`${safeLine(one.part.id)} ${tierMark(one.part)} ${failures(one)}`, style, { lead: '  ', indent: 6 });
+  return paragraph(`${partName(one.part)} ${failures(one)}`, style, { lead: '  ', indent: 6 });
 }
 
 export function failures({ verdicts }: JudgedPart): string {

@@ -16,17 +16,17 @@ export function remedyLines(explanation: Explanation, style: Style, context: Com
   const steps = [...lookups(open, explanation), ...unbuilt(open)];
   const assumption = assumeWords(open, explanation);
   const measured = open.flatMap(({ decidesAt }) => (decidesAt !== null && MEASURABLE.has(decidesAt.figure) ? [figureWords(decidesAt.figure)] : []));
-  const numbered: string[][] = steps.map((step) => [step]).map(([step = '']) => paragraph(step, style, { lead: '  - ', indent: 4 }));
+  const listed: string[][] = steps.map((step) => paragraph(step, style, { lead: '  - ', indent: 4 }));
   if (assumption !== null) {
-    numbered.push([
+    listed.push([
       ...paragraph('or take a value for this run; it is written into the answer as an assumption:', style, { lead: '  - ', indent: 4 }),
       ...commandLines(commandOf(context, ['explain', explanation.judged.part.id], ['--assume', assumption]), style, '    '),
     ]);
   }
   if (measured.length > 0) {
-    numbered.push(paragraph(`or measure ${[...new Set(measured)].join(' and ')} on a few samples at the corner above; samples do not replace a limit`, style, { lead: '  - ', indent: 4 }));
+    listed.push(paragraph(`or measure ${[...new Set(measured)].join(' and ')} on a few samples at the corner above; samples do not replace a limit`, style, { lead: '  - ', indent: 4 }));
   }
-  return numbered.length === 0 ? [] : ['What to do', ...numbered.flat()];
+  return listed.length === 0 ? [] : ['What to do', ...listed.flat()];
 }
 
 const MEASURABLE: ReadonlySet<string> = new Set(['offsetVoltage', 'offsetDrift', 'biasCurrent', 'slewRate', 'gainBandwidth', 'outputLowHeadroom', 'outputHighHeadroom', 'quiescentCurrent', 'outputCurrent']);

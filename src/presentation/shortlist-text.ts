@@ -20,9 +20,9 @@ import { checkWords, counted } from './words.js';
 export function renderShortlist(report: Report, style: Style, context: CommandContext): string {
   const fits = report.fit.length > 0;
   const blocks = [
-    fits ? [] : [...emptyReason(report, style), countsLine(report)],
+    fits ? [] : [...emptyReason(report, style), ...paragraph(countsLine(report), style)],
     stageLines(report.stage, style),
-    fits ? [...paragraph(countsLine(report), style)] : [],
+    fits ? paragraph(countsLine(report), style) : [],
     [...fitLines(report, style), ...undecidedLines(report, style)],
     [...legendLine(report, style), ...orderLine(report, style)],
     aheadLines(report, style),
@@ -80,7 +80,7 @@ function offers(report: Report, context: CommandContext): Offer[] {
   const listing = context.stageFile === null || context.stageFile === 'standard input' ? null : context.stageFile;
   return [
     ...(first === undefined ? [] : [{ words: commandOf(context, ['explain', first.part.id]), why: 'every check of the first' }]),
-    ...(first === undefined && undecided[0] !== undefined ? [{ words: commandOf(context, ['explain', undecided[0].part.id]), why: 'what is missing, and where it would decide' }] : []),
+    ...(first === undefined && undecided[0] !== undefined ? [{ words: commandOf(context, ['explain', undecided[0].part.id]), why: 'what is missing' }] : []),
     ...lossOffer(report, context),
     ...(out === undefined ? [] : [{ words: commandOf(context, ['explain', out.part.id]), why: 'the nearest that is out' }]),
     ...(often === undefined || listing === null ? [] : [{ words: commandOf({ ...context, stageFile: null }, ['parts', '--failing', often.check, '--stage', listing]), why: `all that fail on ${checkWords(often.check)}` }]),

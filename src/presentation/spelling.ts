@@ -18,12 +18,11 @@ export function spelled(text: string, style: Style): string {
 }
 
 function asciiOnly(text: string): string {
-  return [...asciiText(text.replaceAll('µ', 'µ'))].map((character) => SIGNS.get(character) ?? inAscii(character)).join('');
+  return asciiText(text.replaceAll('\u03bc', 'µ')).replace(/[^\p{ASCII}]/gu, (character) => SIGNS.get(character) ?? inAscii(character));
 }
 
 function inAscii(character: string): string {
-  const isPlain = character === PASTE || (character.codePointAt(0) ?? 0) < 0x80;
-  return isPlain ? character : `\\u{${(character.codePointAt(0) ?? 0).toString(16)}}`;
+  return character === PASTE ? character : `\\u{${(character.codePointAt(0) ?? 0).toString(16)}}`;
 }
 
 /** Lines as the stream gets them: joints become blanks, ends are trimmed, one newline at the end. */
@@ -38,7 +37,7 @@ export const held = (text: string): string => text.replaceAll(' ', GLUE);
 
 const NUMBER = String.raw`[-−+±]?\d[\d.,]*(?:[eE][+-]?\d+)?`;
 const UNIT = String.raw`(?:[fpnuµmkMGT]?(?:V|A|Ω|ohm|F|Hz|s|W|H|S|J|K|C)(?:/(?:[nµum]?s|√Hz|rtHz|V|K|°C|W|Hz))?|[µmn]?V(?:pk|pp|rms)|dB[Vu]?|%|°C|°|ppm(?:/°C)?|[A-Z]{3})`;
-const PAIR = new RegExp(`(?<![\\w.])(${NUMBER}) (?=${UNIT}(?![\\w/]))`, 'gu');
+const PAIR = new RegExp(`(?<!\\w)(?<!\\d[.,])(?<!\\w-)(${NUMBER}) (?=${UNIT}(?![\\w/]))`, 'gu');
 const FACTOR = /([×÷≤≥±]) (?=[-−]?\d)/gu;
 
 /** Sentences from elsewhere with number and unit, and sign and number, held together. */

@@ -1,5 +1,5 @@
 import { displayWidth, padded, padStart, paragraph } from './layout.js';
-import { spelled } from './spelling.js';
+import { GLUE, spelled } from './spelling.js';
 import { isNarrow, type Style } from './style.js';
 
 export interface Column {
@@ -109,9 +109,13 @@ function rowLines(table: Table, row: readonly string[], { kept, style }: { reado
 
 const isRight = (table: Table, at: number | undefined): boolean => at !== undefined && table.columns[at]?.align === 'right';
 
+/** Cells shorter than this stay with the name of their column. */
+const SHORT = 8;
+
 function named(column: Column, cell: string): string {
   const name = column.name ?? column.title.replace('\n', ' ').trim();
-  return name === '' ? cell : `${name} ${cell}`;
+  const joint = displayWidth(cell) < SHORT ? GLUE : ' ';
+  return name === '' ? cell : `${name}${joint}${cell}`;
 }
 
 /** One part under the other: what names it first, then the rest with the names of their columns. */
@@ -121,7 +125,8 @@ function upright(table: Table, style: Style): string[] {
   return rows.flatMap((row) => {
     const cells = columns.map((column, at) => ({ column, cell: row[at] ?? '' })).filter(({ cell }) => cell !== '');
     const key = cells.filter(({ column }) => column.key).map(({ cell }) => cell);
-    const rest = cells.filter(({ column }) => !column.key).map(({ column, cell }) => named(column, cell));
+    const others = cells.filter(({ column }) => !column.key);
+    const rest = [...others.filter(({ column }) => column.wraps), ...others.filter(({ column }) => !column.wraps)].map(({ column, cell }) => named(column, cell));
     const first = paragraph(key.join(' '), style, { lead, indent: lead.length + 3 });
     return rest.length === 0 ? first : [...first, ...paragraph(rest.join('; '), style, { lead: `${lead}   ` })];
   });

@@ -57,13 +57,16 @@ interface At {
 function termRow(term: Term, { verdict, origins, style }: At): string[] {
   const figure = figureAt(origins.part, term.slot);
   const printed = term.figure === null ? printedText(figure) : printedOf(term.figure, figure);
-  return [term.name, amount(term.value, verdict.unit ?? '1', { round: 'up' }), madeFrom(printed, figure, term.how), originOf(term, origins, style)];
+  return [term.name, amount(term.value, verdict.unit ?? '1', { round: 'up' }), madeFrom(printed, figure, stepsOf(term, verdict)), originOf(term, origins, style)];
 }
 
+/** On the best reading, which a fail shows, a figure of the class counts as nothing. */
+const stepsOf = (term: Term, { outcome }: Verdict): string => (outcome === 'fail' && term.basis === 'borrowed' ? 'counted as nothing' : (term.how ?? ''));
+
 /** `3 mV typical × 3, × noise gain 8.14` or `3 mV limit, × noise gain 8.14`. */
-function madeFrom(printed: string, figure: Figure | null, how: string | null): string {
-  const steps = glued(how ?? '');
-  const kind = figure === null || figure.kind === 'typ' || figure.assumed === true ? '' : 'limit';
+function madeFrom(printed: string, figure: Figure | null, how: string): string {
+  const steps = glued(how);
+  const kind = figure === null || figure.assumed === true || steps.startsWith('typical') ? '' : figure.kind === 'typ' ? 'typical' : 'limit';
   const condition = figure === null ? '' : conditionText(figure.condition);
   const stated = [printed, kind, condition === '' ? '' : `(${condition})`].filter((word) => word !== '').join(' ');
   const joint = stated === '' || steps === '' ? '' : /^(?:typical|over|through|×|÷)/u.test(steps) ? ' ' : ', ';
@@ -76,9 +79,10 @@ function printedOf(value: { readonly value: number; readonly unit: string }, fig
 
 const printedText = (figure: Figure | null): string => (figure === null ? '' : figureAmount(figure.parameter, { value: figure.value, unit: unitOf(figure) }));
 
-function originOf(term: Pick<Term, 'slot' | 'basis'>, { part, origin }: Origins, style: Style): string {
+function originOf(term: Pick<Term, 'slot' | 'basis'>, origins: Origins, style: Style): string {
+  const { part } = origins;
   if (figureAt(part, term.slot)?.assumed === true) return 'assumed for this run';
-  const known = term.slot === null ? null : origin(part.id, term.slot);
+  const known = term.slot === null ? null : origins.origin(part.id, term.slot);
   if (known !== null) return originWords(known, style);
   if (term.basis === 'borrowed') return `class ${safeLine(part.class ?? '')}, worst of its sets`;
   return term.basis === 'guaranteed' ? '' : BASIS_WORDS[term.basis];
@@ -88,8 +92,8 @@ export function figureAt(part: Part, slot: string | null): Figure | null {
   return slot === null ? null : (part.figures.find((figure) => figureSlot(figure) === slot) ?? null);
 }
 
-function missingRow({ figure, kind }: Verdict['missing'][number], { part, origin }: Origins, style: Style): string[] {
-  const where = kind === null ? null : origin(part.id, `${figure}.${kind}`);
+function missingRow({ figure, kind }: Verdict['missing'][number], origins: Origins, style: Style): string[] {
+  const where = kind === null ? null : origins.origin(origins.part.id, `${figure}.${kind}`);
   const said = where === null || (where.kind !== 'cell' && where.kind !== 'generic') ? 'not in the list' : where.cell.trim() === '' ? 'cell is empty' : `cell is "${safeLine(where.cell)}"`;
   return [figureWords(figure), 'unknown', said, where === null ? '' : originWords(where, style)];
 }
@@ -105,7 +109,7 @@ function sumRow({ terms, offered, known, unit, rss }: Verdict): string[][] {
 function singleFigure(verdict: Verdict, origins: Origins, style: Style): string[] {
   const figure = figureAt(origins.part, verdict.slot);
   const basis = verdict.standsOn ?? 'guaranteed';
-  const made = madeFrom(printedText(figure), figure, verdict.how);
+  const made = madeFrom(printedText(figure), figure, verdict.how ?? '');
   const origin = verdict.slot === null ? '' : originOf({ slot: verdict.slot, basis }, origins, style);
   const text = [made, origin].filter((words) => words !== '').join('; ');
   return text === '' ? [] : paragraph(text, style, { lead: ' '.repeat(INDENT) });

@@ -1,9 +1,8 @@
 import type { Report } from '../report.js';
 import type { JudgedPart } from '../screening/index.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { aboutPart, more, tierMark } from './fit-table.js';
+import { aboutPart, more, partName } from './fit-table.js';
 import { paragraph } from './layout.js';
-import { safeLine } from './safe-text.js';
 import { toned, type Style } from './style.js';
 import { unknownText } from './verdict-words.js';
 import { checkWords } from './words.js';
@@ -35,7 +34,7 @@ function undecidedPart(one: JudgedPart, style: Style): string[] {
   const likely = one.likely ? 'likely to fit (its class would); ' : '';
   const lead = ` ${toned('?', 'open', style)}  `;
   const why = reasons.length === 0 ? 'passes every check that is judged' : withFits(reasons, open.length);
-  return paragraph(`${safeLine(one.part.id)} ${tierMark(one.part)}${about === '' ? '' : ` ${about}`} - ${likely}${why}`, style, { lead, indent: 6 });
+  return paragraph(`${partName(one.part)}${about === '' ? '' : ` ${about}`} - ${likely}${why}`, style, { lead, indent: 6 });
 }
 
 /** One open check decides the part; several only themselves. */

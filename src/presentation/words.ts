@@ -131,15 +131,18 @@ export function passingSide(parameter: string, kind: LimitKind): 'less' | 'more'
 export const DECIBEL_FIGURES: ReadonlySet<string> = new Set(['commonModeRejection', 'supplyRejection', 'openLoopGain']);
 
 export function checkWords(check: string): string {
-  return CHECK_WORDS[check as CheckId] ?? check.replaceAll('-', ' ');
+  return isCheck(check) ? CHECK_WORDS[check] : check.replaceAll('-', ' ');
 }
 
 /** A figure's words, `offset drift maximum` where the limit kind matters; identity columns are words already. */
 export function figureWords(figure: string, kind: LimitKind | null = null): string {
-  const words = PARAMETER_WORDS[figure as Parameter] ?? figure;
+  const words = isParameter(figure) ? PARAMETER_WORDS[figure] : figure;
   return kind === null ? words : `${words} ${KIND_WORDS[kind]}`;
 }
 
 export const counted = (count: number, noun: string, more = `${noun}s`): string => `${count} ${count === 1 ? noun : more}`;
 
 export const capital = (text: string): string => text.slice(0, 1).toUpperCase() + text.slice(1);
+
+const isCheck = (word: string): word is CheckId => word in CHECK_WORDS;
+const isParameter = (word: string): word is Parameter => word in PARAMETER_WORDS;

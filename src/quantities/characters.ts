@@ -17,7 +17,7 @@ export function normaliseCharacters(typed: string): Normalised {
   for (let index = 0; index < typed.length; ) {
     const character = String.fromCodePoint(typed.codePointAt(index) ?? 0);
     const mapped = mapCharacter(character) ?? refuse(character, index);
-    for (let i = 0; i < mapped.length; i++) origin.push(index);
+    origin.push(...Array.from({ length: mapped.length }, () => index));
     text += mapped;
     index += character.length;
   }

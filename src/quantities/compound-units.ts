@@ -36,7 +36,7 @@ export function readNoise(text: string): UnitReading | null {
   const match = ROOT_HERTZ.exec(text) ?? HERTZ_TO_MINUS_HALF.exec(text);
   const term = match === null ? null : readTerm(match[1] ?? '');
   if (match === null || (term?.symbol !== 'V' && term?.symbol !== 'A')) return null;
-  const hertz = match.slice(2).find((group) => group !== undefined) ?? 'Hz';
+  const hertz = match.slice(2).find(Boolean) ?? 'Hz';
   const unit: UnitReading = { ...term, dimension: `${term.symbol}/√Hz`, canonical: `${term.canonical}/√Hz` };
   return hertz === 'Hz' || term.wrongCase !== undefined ? unit : { ...unit, wrongCase: hertz };
 }

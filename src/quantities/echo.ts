@@ -1,4 +1,4 @@
-import { formatPercent, formatQuantity, formatRange } from './format.js';
+import { formatPercent, formatQuantity } from './format.js';
 import type { FieldKind } from './kinds.js';
 import type { Measured } from './measure.js';
 import { ends, type Side, type Toleranced } from './tolerance.js';
@@ -67,8 +67,7 @@ export function echoFigures(figures: { min?: number; nominal?: number; max?: num
 
 /** `3 V..4.2 V`. */
 export function echoRange(min: number, max: number, how: { kind: FieldKind; unit: string }): string {
-  if (how.kind === 'fraction' || how.kind === 'ratio') return `${echoNumber(min, how.kind, how.unit)}..${echoNumber(max, how.kind, how.unit)}`;
-  return typographic(formatRange(min, max, how.unit, EXACT));
+  return `${echoNumber(min, how.kind, how.unit)}..${echoNumber(max, how.kind, how.unit)}`;
 }
 
 /** `5 V ±5 % (4.75 V..5.25 V)`; for components, which are named by value and tolerance, without the ends. */

@@ -24,8 +24,8 @@ export function formatQuantity(value: number, unit: string, options: FormatOptio
 }
 
 /** Both ends with their own prefix: `900 mV..1.2 V`. */
-export function formatRange(min: number, max: number, unit: string, options: FormatOptions = {}): string {
-  return `${formatQuantity(min, unit, options)}..${formatQuantity(max, unit, options)}`;
+export function formatRange(min: number, max: number, unit: string): string {
+  return `${formatQuantity(min, unit)}..${formatQuantity(max, unit)}`;
 }
 
 /** A voltage ratio in decibels, 20·log10 of its magnitude. Throws RangeError for a ratio of zero. */
@@ -82,10 +82,12 @@ const ALL_DIGITS = 17;
  * required one up, for at-most the other way round; three digits, and more where fewer would show a pass as a fail or a fail as a pass.
  * Equal numbers read equal.
  */
-export function formatComparison(offered: number, required: number, unit: string, sense: 'at-least' | 'at-most', ascii = false): PrintedComparison {
+// Two numbers, their unit and the sense are what a comparison is; bundling them would only rename the four.
+// eslint-disable-next-line max-params
+export function formatComparison(offered: number, required: number, unit: string, sense: 'at-least' | 'at-most'): PrintedComparison {
   const [offeredSide, requiredSide] = sense === 'at-least' ? (['down', 'up'] as const) : (['up', 'down'] as const);
   const met = sense === 'at-least' ? offered >= required : offered <= required;
-  const print = (value: number, round: 'up' | 'down' | 'nearest', digits: number): string => formatQuantity(value, unit, { digits, round, ascii });
+  const print = (value: number, round: 'up' | 'down' | 'nearest', digits: number): string => formatQuantity(value, unit, { digits, round });
   if (offered === required) return [print(offered, 'nearest', 3), print(required, 'nearest', 3)];
   for (let digits = 3; digits < ALL_DIGITS; digits++) {
     if (printedMet(offered, required, { digits, sense }) !== met) continue;

@@ -46,7 +46,7 @@ export function readNumber(text: string, place: NumberPlace): DecimalText {
 const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 
 function exponentOf(match: RegExpExecArray): number {
-  const plain = match[1] ?? [...(match[2] ?? '0')].map(plainDigit).join('');
+  const plain = match[1] ?? (match[2] ?? '0').replace(/./gu, plainDigit);
   // Anything beyond a thousand decades overflows or vanishes either way; the cap keeps the arithmetic on exponents exact.
   return Math.max(-1000, Math.min(1000, Number(plain)));
 }

@@ -64,7 +64,7 @@ export function plausibleSpellings(unit: KnownUnit, read: ReadFigure, reading: R
 /** The figure's number read with another unit, in the kind's SI unit; NaN when the unit is none. */
 export function valueIn(spelling: string, read: ReadFigure, reading: Reading): number {
   const unit = readUnit(spelling, reading.kind);
-  if (unit === null || unit.dimension === null) return Number.NaN;
+  if (unit?.dimension == null) return Number.NaN;
   const size = toNumber(read.number.mantissa, read.number.exponent + unit.exponent);
   return convert(read.figure.sign === '-' ? -size : size, unit.dimension, reading.kind);
 }

@@ -1,3 +1,4 @@
+import { dominates } from '../formulas/dominance.js';
 import type { JudgedPart } from '../screening/index.js';
 import { comfortOf } from './comfort.js';
 import { priceInEuro } from './merit.js';
@@ -9,7 +10,7 @@ import { priceInEuro } from './merit.js';
 export function dominatorOf<P extends JudgedPart>(one: P, all: readonly P[]): P | null {
   const mine = scores(one);
   if (mine === null) return null;
-  return all.find((other) => other !== one && dominates(scores(other), mine)) ?? null;
+  return all.find((other) => other !== one && isAhead(scores(other), mine)) ?? null;
 }
 
 /** Larger is better throughout; null when price or current is not known: then nothing can be said. */
@@ -21,7 +22,4 @@ function scores(judged: JudgedPart): number[] | null {
   return [tier, proof, -price, -judged.current, ...judged.verdicts.map((verdict) => comfortOf(verdict) ?? 1)];
 }
 
-function dominates(theirs: number[] | null, mine: readonly number[]): boolean {
-  if (theirs === null || theirs.length !== mine.length) return false;
-  return theirs.every((score, at) => score >= (mine[at] ?? 0)) && theirs.some((score, at) => score > (mine[at] ?? 0));
-}
+const isAhead = (theirs: number[] | null, mine: readonly number[]): boolean => theirs?.length === mine.length && dominates(theirs, mine);

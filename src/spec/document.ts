@@ -42,7 +42,8 @@ export function parseTree(source: Source): DocumentResult {
 }
 
 function positions(source: Source, counter: LineCounter): (offset: number) => Position {
-  if (source.option !== undefined) return () => ({ option: source.option as string });
+  const { option } = source;
+  if (option !== undefined) return () => ({ option });
   return (offset) => {
     const { line, col } = counter.linePos(offset);
     return { line: Math.max(line, 1), column: Math.max(col, 1) };

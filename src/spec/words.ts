@@ -9,6 +9,7 @@ import { unknownPath } from './unknown-key.js';
 import { leafAt, refuse } from './refuse.js';
 
 /** A field that takes one of a few words. */
+// eslint-disable-next-line @typescript-eslint/no-unnecessary-type-parameters -- the table of fields holds the words as text
 export function readChoice<Word extends string>(draft: Draft, path: string): Word | undefined {
   const leaf = leafAt(draft, path);
   if (leaf === undefined) return undefined;
@@ -18,6 +19,7 @@ export function readChoice<Word extends string>(draft: Draft, path: string): Wor
 }
 
 /** A field that takes a list of a few words, or one of them; `a, b` is a list too. */
+// eslint-disable-next-line @typescript-eslint/no-unnecessary-type-parameters -- the table of fields holds the words as text
 export function readChoices<Word extends string>(draft: Draft, path: string): readonly Word[] | undefined {
   const { words = [] } = field(path);
   return readItems(draft, path, (word) => (words.includes(word) ? null : unknownWord(word, path))) as readonly Word[] | undefined;

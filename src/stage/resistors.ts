@@ -16,6 +16,8 @@ const LEAST_PATH = 50e3;
 const MOST_PATH = 200e3;
 const AIM = 100e3;
 const DECADES = [1, 10, 100, 1e3, 1e4, 1e5, 1e6, 1e7];
+/** E96 steps are at most 2.6 %: where the values bracket a ratio, the nearest pair is closer than this. */
+const REACHED = 0.02;
 /** Errors closer than this are one error in different rounding. */
 const SAME = 1e-9;
 
@@ -32,6 +34,7 @@ export function choosePair(wish: PairWish): Pair | null {
     const path = wish.path(pair.feedback, pair.input);
     if (path < LEAST_PATH || path > MOST_PATH) continue;
     const error = Math.abs(pair.feedback / pair.input / wish.ratio - 1);
+    if (error > REACHED) continue;
     const next = { ...pair, error, distance: Math.abs(Math.log(path / AIM)) };
     if (best === null || isBetter(next, best)) best = next;
   }

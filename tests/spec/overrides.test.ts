@@ -57,7 +57,7 @@ describe('an override', () => {
          fix: 10 MΩ, 10meg or 10 mΩ
       error[Q013]: --input: 1 V to ends where a number is expected; accepted: a voltage or a range: 25 mV..330 mV
          1 V to
-               ^
+              ^
          fix: 25 mV..330 mV
       error[S101]: --set gian: gian is not a field of the stage file, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, signal, source, load, temperature, limits, wishes, margins, mayChange, avoid
          fix: gain

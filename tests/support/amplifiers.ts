@@ -12,8 +12,21 @@ export type Amplifier = (pins: Pins) => string[];
 
 const SLEW_NODE_FARAD = 1e-9;
 
-/** As good as ideal: gain 1e9 at every frequency. */
-export const ideal: Amplifier = ({ plus, minus, drive, tag }) => [`e${tag} ${drive} 0 ${plus} ${minus} 1e9`];
+/** More than this, and the rounding of the solution shows at the output: up to 1e-7 V at 1e9. */
+const ENDLESS = 1e8;
+const GAIN_NODE_OHM = 1e3;
+
+/** As good as ideal: the same gain at every frequency. */
+export const ideal: Amplifier = ({ plus, minus, drive, tag }) => gainStage([plus, minus], [drive, '0'], { gain: ENDLESS, tag });
+
+/** Gain as a current into a resistor: it rounds less than one controlled source of the whole gain. */
+function gainStage(input: readonly [string, string], output: readonly [string, string], { gain, tag }: { gain: number; tag: string }): string[] {
+  return [
+    `g${tag} 0 y${tag} ${input.join(' ')} ${gain / GAIN_NODE_OHM}`,
+    `ry${tag} y${tag} 0 ${GAIN_NODE_OHM}`,
+    `e${tag} ${output.join(' ')} y${tag} 0 1`,
+  ];
+}
 
 /** One pole: transconductance of 1 S into R and C, DC gain 1e9, unity-gain crossover at `gainBandwidth` Hz. */
 export function onePole(gainBandwidth: number): Amplifier {
@@ -64,18 +77,20 @@ export interface Imperfections {
 }
 
 /**
- * Offset (moving with common mode and supply), currents into both pins and finite gain about half the supply. `rated` is the
- * supply the offset is rated at.
+ * Offset (moving with common mode and supply) in series with the + input, currents into both pins, and finite gain about half
+ * the supply. Controlled sources only, so that the operating point is one linear solution. `rated` is the supply of the offset, V.
  */
 export function imperfect(errors: Imperfections, rated: number): Amplifier {
-  const { offset = 0, intoPlus = 0, intoMinus = 0, openLoopGain = 1e9 } = errors;
+  const { offset = 0, intoPlus = 0, intoMinus = 0, openLoopGain = ENDLESS } = errors;
   const per = (rejection: number | undefined): number => (rejection === undefined ? 0 : 1 / rejection);
-  return ({ plus, minus, drive, supply, tag }) => {
-    const moved = `${offset}+${per(errors.commonModeRejection)}*(v(${plus})-v(${supply})/2)+${per(errors.supplyRejection)}*(v(${supply})-${rated})`;
-    return [
-      `b${tag} ${drive} 0 v=v(${supply})/2+${openLoopGain}*(v(${plus})-v(${minus})+${moved})`,
-      `ip${tag} ${plus} 0 dc ${intoPlus}`,
-      `im${tag} ${minus} 0 dc ${intoMinus}`,
-    ];
-  };
+  return ({ plus, minus, drive, supply, tag }) => [
+    `eh${tag} half${tag} 0 ${supply} 0 0.5`,
+    `vr${tag} rated${tag} 0 ${rated}`,
+    `vos${tag} a${tag} ${plus} ${offset}`,
+    `ec${tag} b${tag} a${tag} ${plus} half${tag} ${per(errors.commonModeRejection)}`,
+    `es${tag} c${tag} b${tag} ${supply} rated${tag} ${per(errors.supplyRejection)}`,
+    ...gainStage([`c${tag}`, minus], [drive, `half${tag}`], { gain: openLoopGain, tag }),
+    `ip${tag} ${plus} 0 dc ${intoPlus}`,
+    `im${tag} ${minus} 0 dc ${intoMinus}`,
+  ];
 }

@@ -9,6 +9,9 @@ export interface Analysis {
   value(name: string): number;
 }
 
+/** Options of a group of simulations: starting the simulator alone takes seconds on a busy machine. */
+export const SIMULATED = { timeout: 60_000 };
+
 let started: Promise<Simulation> | undefined;
 
 /**
