@@ -24,7 +24,7 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
   return {
     stage,
     demands: listDemands(demands),
-    counts: { parts: source.parts.length, fit: fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
+    counts: { parts: source.parts.length, fit: screened.fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
     fit,
     undecided: screened.undecided,
     rejected: screened.rejected,
@@ -40,9 +40,10 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
 /** One part of the catalog on the stage, with its place in the shortlist. The part must be in the source. */
 export function explain(stage: Stage, source: PartSource, request: { readonly part: Part; readonly asking?: Asking }): Explanation {
   const report = shortlist(stage, source, request.asking ?? PLAIN);
-  const judged = [...report.fit, ...report.undecided, ...report.rejected].find((one) => one.part.id === request.part.id);
+  const fits = report.fit.flatMap((line) => [line, ...line.variants]);
+  const judged = [...fits, ...report.undecided, ...report.rejected].find((one) => one.part.id === request.part.id);
   if (judged === undefined) throw new RangeError(`part ${request.part.id} is not in the catalog that was judged`);
-  const ranked = report.fit.find((one) => one.part.id === request.part.id);
+  const ranked = report.fit.find((line) => line === judged || line.variants.some((one) => one === judged));
   const { demands, counts, asking, data, origin } = report;
   const fitting = report.fit.filter((one) => one !== ranked).slice(0, 3);
   return { stage, demands, judged, rank: ranked?.rank ?? null, counts, fitting, asking, data, origin };

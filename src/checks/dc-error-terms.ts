@@ -23,9 +23,12 @@ interface Multiplied {
   readonly how: string;
 }
 
+/** Only rounding is left of a multiplier below this: a move of a picovolt, and far less of any other. */
+const NOTHING = 1e-12;
+
 /** A term that is a figure times (or a move over) something; nothing when the multiplier is zero: it needs no figure then. */
 function multiplied(of: Multiplied, reading: Reading | null): ErrorTerm {
-  if (of.multiplier === 0) return { kind: 'nothing' };
+  if (of.multiplier <= NOTHING) return { kind: 'nothing' };
   if (reading === null) {
     const turn = (left: number): number => (of.divides ? of.multiplier / left : left / of.multiplier);
     const turnsAt = (left: number): TurningPoint => ({ figure: of.figure, kind: of.kind, value: turn(left), unit: of.unit });
@@ -96,11 +99,12 @@ export function currentTerms(asked: DcErrorDemand, readings: Readings): ErrorTer
   const half = asked.noiseGain * (sum / 2);
   const offset = readings.figure('offsetCurrent');
   if (offset !== null) return [biasTerm, offsetCurrentTerm(asked, half, offset)];
-  if (bias === null) return [biasTerm];
+  // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
+  if (bias === null) return [matched <= NOTHING ? offsetCurrentTerm(asked, half, readings.figureOrClass('offsetCurrent')) : biasTerm];
   return unknownOffsetCurrent({ asked, bias, biasTerm, matched, half, sum }, readings);
 }
 
-function offsetCurrentTerm(asked: DcErrorDemand, half: number, reading: Reading): ErrorTerm {
+function offsetCurrentTerm(asked: DcErrorDemand, half: number, reading: Reading | null): ErrorTerm {
   const how = `half of it through ${formatQuantity((2 * half) / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
   return multiplied({ name: 'offset current', figure: 'offsetCurrent', kind: 'max', unit: 'A', multiplier: half, how }, reading);
 }

@@ -1,4 +1,5 @@
 import type { DcErrorDemand } from '../demands/index.js';
+import { formatQuantity } from '../quantities/format.js';
 import { rootSumSquare, worstCaseSum } from '../formulas/dc-error.js';
 import { weakest } from '../parts/basis.js';
 import type { OffsetReading } from '../parts/offset.js';
@@ -26,13 +27,22 @@ function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
   const missing = all.filter((one) => one.kind === 'missing');
   const { required, unit, sense } = asked;
   const corner = { temperature: asked.temperature, supply: fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal) };
-  const common = { required, unit, sense, terms, corner, basis: weakest(terms.map((term) => term.basis)) };
+  const cautions = sourceCaution(asked, readings);
+  const common = { required, unit, sense, terms, corner, cautions, basis: weakest(terms.map((term) => term.basis)) };
   const [first] = missing;
   if (first !== undefined) {
     const turnsAt = missing.length === 1 && known < required ? first.turnsAt(required - known) : null;
     return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
   }
   return { kind: 'numbers', ...common, offered: known, rss: rootSumSquare(terms.map((term) => term.value)), borrowed: borrowedSum(terms) };
+}
+
+/** The tolerance of the source is not among the terms of the sum; what it could add is told. */
+function sourceCaution(asked: DcErrorDemand, readings: Readings): string[] {
+  const bias = readings.figure('biasCurrent')?.value;
+  if (asked.sourceSpread === 0 || bias === undefined) return [];
+  const added = asked.noiseGain * bias * asked.sourceSpread;
+  return [`the tolerance of the source resistance may add ${formatQuantity(added, 'V', { round: 'up' })} of bias-current error, not charged`];
 }
 
 /** The supply end farther from the one the offset is rated at. */

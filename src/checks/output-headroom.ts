@@ -3,6 +3,7 @@ import { weakest } from '../parts/basis.js';
 import type { Side } from '../parts/headroom.js';
 import type { HeadroomReading } from '../parts/headroom-curve.js';
 import type { Readings } from '../parts/readings.js';
+import { meets } from '../verdicts/compare.js';
 import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
@@ -74,6 +75,8 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
   if (reading.value === null) return bound(at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
   const offered = reading.value + share.value;
+  // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
+  if (!meets(vertex.room, 0, 'at-most') && meets(vertex.room, offered, 'at-most')) return bound(at, { ...common, basis, known: share.value });
   const caution = share.caution(vertex.room - offered);
   return {
     kind: 'numbers', ...common, offered, basis, slot: reading.slot, how: reading.how,

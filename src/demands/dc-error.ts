@@ -24,6 +24,7 @@ export function dcError(stage: Stage): DcErrorDemand | null {
     positive: stage.seriesPositive,
     negative: stage.seriesNegative,
     tolerance: stage.resistorTolerance,
+    sourceSpread: stage.sourceSpread,
     commonModeMove: distance('commonMode'),
     outputMove: distance('output'),
     supply: stage.supply,

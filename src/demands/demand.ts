@@ -92,6 +92,8 @@ export interface DcErrorDemand extends NumberDemand {
   readonly positive: number;
   readonly negative: number;
   readonly tolerance: number;
+  /** How much the source resistance may be off, Ω; told, not charged. */
+  readonly sourceSpread: number;
   /** Largest distance of common mode and output from half the supply at their corner, V. */
   readonly commonModeMove: number;
   readonly outputMove: number;

@@ -37,7 +37,7 @@ function doubles(test: PartUnderTest): boolean {
 
 function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Reading {
   const growth = 2 ** (kelvin / DOUBLING_KELVIN);
-  const best = figure.assumed === true ? bestPossible(figure.parameter) : figure.value;
+  const best = figure.assumed === true ? bestPossible(figure) : figure.value;
   const worst = figure.kind === 'typ' ? derate(figure) : figure.value;
   const value = test.outlook === 'optimistic' ? best : worst * growth;
   const steps = [

@@ -30,8 +30,8 @@ export function offsetReading(test: PartUnderTest): OffsetReading | null {
   };
 }
 
-/** The nearest supply, then 25 °C before other temperatures. */
+/** The nearest supply, then 25 °C before other temperatures, then the larger. */
 function pick(figures: readonly Figure[], test: PartUnderTest): Figure | undefined {
-  const near = nearestSupply(figures, test.operating.nominalSupply);
+  const near = nearestSupply(figures, test.operating.nominalSupply).sort((a, b) => b.value - a.value);
   return near.find((figure) => (figure.condition.temperature ?? 25) === 25) ?? near[0];
 }

@@ -62,15 +62,26 @@ function readScalar(test: PartUnderTest, figure: Figure): Reading {
   const away = isAway(figure, test.operating) ? COLD_HOT_FACTOR[figure.parameter] : undefined;
   const basis = weakest([basisOf(figure, test.operating), ...(away === undefined ? [] : (['estimated'] as const))]);
   const typical = figure.kind === 'typ' ? derate(figure) : figure.value;
-  const best = figure.assumed === true ? bestPossible(figure.parameter) : figure.value;
+  const best = figure.assumed === true ? bestPossible(figure) : figure.value;
   const value = test.outlook === 'optimistic' ? best : typical * (away ?? 1);
   return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, howOf(figure, away)) };
 }
 
 /** An assumed value can pass a check, not fail it: on the best reading it is as good as can be. */
-export function bestPossible(parameter: Parameter): number {
-  if (parameter === 'inputLowHeadroom' || parameter === 'inputHighHeadroom') return Number.NEGATIVE_INFINITY;
-  return TYP_MAX_PARAMETERS.has(parameter) ? 0 : Number.POSITIVE_INFINITY;
+export function bestPossible(figure: Pick<Figure, 'parameter' | 'kind'>): number {
+  if (isMoreBetter(figure)) return Number.POSITIVE_INFINITY;
+  return BELOW_ZERO.has(figure.parameter) ? Number.NEGATIVE_INFINITY : 0;
+}
+
+/** Parameters whose good end lies below zero: head-room beyond the rail, a range that begins in the cold. */
+const BELOW_ZERO: ReadonlySet<Parameter> = new Set(['inputLowHeadroom', 'inputHighHeadroom', 'temperature']);
+/** Parameters whose maximum is what a part endures: more of it is better. */
+const ENDURED: ReadonlySet<Parameter> = new Set(['supplyVoltage', 'supplyAbsoluteMaximum', 'temperature', 'junctionTemperature', 'capacitiveLoad']);
+
+/** Whether a larger value of this figure is the better one. */
+function isMoreBetter({ parameter, kind }: Pick<Figure, 'parameter' | 'kind'>): boolean {
+  if (ENDURED.has(parameter)) return kind === 'max';
+  return !TYP_MAX_PARAMETERS.has(parameter);
 }
 
 /** The pessimistic value of a typical figure. */
@@ -104,7 +115,7 @@ export function factorText(factor: number): string {
 function preference(figure: Figure, operating: Operating): readonly number[] {
   const away = isAway(figure, operating) && COLD_HOT_FACTOR[figure.parameter] !== undefined;
   const basis = weakest([basisOf(figure, operating), ...(away ? (['estimated'] as const) : [])]);
-  const worse = figure.kind === 'max' || TYP_MAX_PARAMETERS.has(figure.parameter) ? -figure.value : figure.value;
+  const worse = isMoreBetter(figure) ? figure.value : -figure.value;
   return [BASES.indexOf(basis), temperatureRank(figure, operating), worse];
 }
 
@@ -117,7 +128,7 @@ const OVER_RANK = 1e4;
 export function temperatureRank(figure: Figure, operating: Operating): number {
   const rated = figure.condition.temperature;
   if (rated === undefined || rated === 'over') return OVER_RANK;
-  if (rated === 25 && !isAway(figure, operating)) return -OVER_RANK;
+  if (rated === 25) return isAway(figure, operating) ? 2 * OVER_RANK - rated : -OVER_RANK;
   return rated >= operating.hottest ? rated : 2 * OVER_RANK - rated;
 }
 

@@ -47,7 +47,7 @@ function rowOf(one: RankedPart): string[] {
     String(one.rank),
     safeLine(one.part.id),
     tierMark(one.part),
-    aboutPart(one.part),
+    [aboutPart(one.part), ...variantWords(one)].filter((words) => words !== '').join('; '),
     tightest === undefined ? '' : checkWords(tightest.check),
     tightest === undefined ? '' : spareText(tightest),
     typeof error === 'number' ? amount(error, 'V', { round: 'up' }) : '',
@@ -56,6 +56,15 @@ function rowOf(one: RankedPart): string[] {
     one.proof === 'limits' ? 'limits' : `typical${GLUE}(${one.confirm.length})`,
   ];
 }
+
+/** Variants of one die stand in one line and are told as such. */
+function variantWords({ variants }: RankedPart): string[] {
+  if (variants.length === 0) return [];
+  const told = variants.map(({ part }) => [safeLine(part.id), part.package === null ? '' : safeLine(part.package), part.channels === null ? '' : sections(part.channels)].filter((word) => word !== '').join(' '));
+  return [`same die: ${told.join(', ')}`];
+}
+
+const sections = (channels: number): string => ({ 1: 'single', 2: 'dual', 4: 'quad' })[channels] ?? `${channels} channels`;
 
 export const tierMark = ({ tier }: Pick<Part, 'tier'>): string => (tier === 'approved' ? 'A' : 'G');
 

@@ -1,4 +1,5 @@
 import type { AnyDemand } from '../demands/index.js';
+import { formatQuantity } from '../quantities/format.js';
 import type { Problem } from '../quantities/problem.js';
 import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js';
 import type { Confirmation, JudgedPart } from '../screening/index.js';
@@ -75,7 +76,12 @@ function demandJson(demand: AnyDemand): object {
 function rankedJson(one: RankedPart, origin: OriginOf): object {
   const { merit, tightest, dominatedBy } = one;
   const shares = { margins: merit.margins, price: merit.price, current: merit.current };
-  return { rank: one.rank, ...identity(one), merit: merit.total, meritShares: shares, tightest, dominatedBy, proof: one.proof, confirm: one.confirm.map(confirmJson), ...verdicts(one, origin) };
+  return { rank: one.rank, ...identity(one), merit: merit.total, meritShares: shares, tightest, dominatedBy, variants: one.variants.map(variantJson), proof: one.proof, confirm: one.confirm.map(confirmJson), ...verdicts(one, origin) };
+}
+
+/** Another package or channel count of the same die. */
+function variantJson({ part, current }: JudgedPart): object {
+  return { part: part.id, package: part.package, channels: part.channels, price: part.price, current };
 }
 
 function judgedJson(one: JudgedPart, origin: OriginOf): object {
@@ -95,15 +101,22 @@ function confirmJson({ figure, basis, how, checks, needed }: Confirmation): obje
 }
 
 /** Cautions of the part as a whole; those of a check stand beside its verdict. */
-export function cautionsOf({ part, verdicts: all }: JudgedPart): string[] {
-  const asked = all.find((verdict) => verdict.check === 'channels');
-  const idle = part.channels !== null && typeof asked?.required === 'number' ? part.channels - asked.required : 0;
+export function cautionsOf({ part, verdicts: all, current }: JudgedPart): string[] {
+  const wanted = all.find((verdict) => verdict.check === 'channels')?.required;
   return [
     ...(part.tier === 'generic' ? ['a generic set: a class of parts, not something to order'] : []),
-    ...(idle > 0 ? [`${idle} section${idle === 1 ? '' : 's'} of ${part.channels ?? 0} idle: each draws its quiescent current and must be tied off`] : []),
+    ...idleSections(part.channels ?? 1, typeof wanted === 'number' ? wanted : 1, current),
   ];
 }
 
 function dataJson(data: DataUsed): object {
   return { catalog: data.catalog, rules: data.rules };
+}
+
+/** A dual or quad for one stage: its other sections draw current too. `current` is the pessimistic quiescent current of one, A. */
+function idleSections(channels: number, wanted: number, current: number | null): string[] {
+  const idle = channels - wanted;
+  if (idle <= 0) return [];
+  const drawn = current === null ? 'each draws its quiescent current' : `they draw ${formatQuantity(idle * current, 'A', { round: 'up' })} of the ${formatQuantity(channels * current, 'A', { round: 'up' })} of the package`;
+  return [`${idle} of ${channels} sections idle: ${idle === 1 ? drawn.replace('they draw', 'it draws') : drawn}; an idle section is tied off as a follower inside its input range`];
 }

@@ -39,9 +39,10 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
 /** With fewer parts than this the nearest of the others are shown. */
 const FEW = 3;
 
-function countsLine({ counts }: Report): string {
-  const { parts, fit, undecided, rejected } = counts;
-  return `${fit} of ${counted(parts, 'part')} ${fit === 1 && parts === 1 ? 'fits' : 'fit'}, ${undecided} cannot be decided, ${rejected} ${rejected === 1 ? 'does' : 'do'} not fit.`;
+function countsLine(report: Report): string {
+  const { parts, fit, undecided, rejected } = report.counts;
+  const lines = report.fit.length === fit ? '' : ` (${counted(report.fit.length, 'line')}: variants of one die stand together)`;
+  return `${fit} of ${counted(parts, 'part')} ${fit === 1 && parts === 1 ? 'fits' : 'fit'}${lines}, ${undecided} cannot be decided, ${rejected} ${rejected === 1 ? 'does' : 'do'} not fit.`;
 }
 
 const ORDERS = {

@@ -19,7 +19,8 @@ export function formatQuantity(value: number, unit: string, options: FormatOptio
   const digits = roundToDigits(value, options.digits ?? 3, options.round ?? 'nearest');
   const { shift, text } = scaledUnit(digits, unit);
   const number = plainText(digits, shift);
-  const whole = text === '' ? number : `${number} ${text}`;
+  // The SI writes a blank before every unit but the degree of angle.
+  const whole = text === '' || text === '°' ? number + text : `${number} ${text}`;
   return options.ascii ? asciiText(whole) : whole;
 }
 

@@ -1,6 +1,7 @@
 import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, marginForOrder } from './comfort.js';
 import { dominatorOf } from './dominance.js';
+import { linesOf } from './family.js';
 import { meritOf, priceInEuro, type Merit } from './merit.js';
 
 export const ORDERS = ['merit', 'price', 'current', 'margin'] as const;
@@ -14,15 +15,19 @@ export interface RankedPart extends JudgedPart {
   readonly tightest: string | null;
   /** Id of a part that is at least as good in every clamped margin, price and current, and better in one. */
   readonly dominatedBy: string | null;
+  /** Other packages and channel counts of the same die that fit, in their order; they share this rank. */
+  readonly variants: readonly JudgedPart[];
 }
 
-type Candidate = Omit<RankedPart, 'rank' | 'dominatedBy'>;
+type Candidate = Omit<RankedPart, 'rank' | 'dominatedBy' | 'variants'>;
 
-/** Total order of what fits: approved before generic, limits before typical, then merit; never depends on who else is there. */
+/** Total order of what fits, one line a family: approved before generic, limits before typical, then merit; never depends on who else is there. */
 export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): RankedPart[] {
   const candidates: Candidate[] = fit.map((judged) => ({ ...judged, merit: meritOf(judged), tightest: tightestOf(judged) }));
   candidates.sort((a, b) => compareIn(order, a, b));
-  return candidates.map((one, at) => ({ ...one, rank: at + 1, dominatedBy: dominatorOf(one, candidates)?.part.id ?? null }));
+  const lines = linesOf(candidates);
+  const firsts = lines.map(({ first }) => first);
+  return lines.map(({ first, variants }, at) => ({ ...first, rank: at + 1, dominatedBy: dominatorOf(first, firsts)?.part.id ?? null, variants }));
 }
 
 /** What decides between two: the steps of the order, each 0 when they are equal there. */

@@ -126,6 +126,7 @@ function assemble(spec: StageSpec, made: Settled & Fitted): Stage {
     seriesPositive: circuit.seriesPositive,
     seriesNegative: circuit.seriesNegative,
     resistorTolerance: toleranceOf(spec),
+    sourceSpread: spec.signal.coupling === 'ac' ? 0 : (spec.source?.resistance.value ?? 0) * (spec.source?.tolerance?.value ?? 0),
     load: spec.load === undefined ? null : { resistance: spec.load.resistance?.value ?? null, to: spec.load.to, capacitance: spec.load.capacitance?.value ?? 0 },
     loadConductance: spec.load?.resistance === undefined ? 0 : 1 / spec.load.resistance.value,
     networkConductance: circuit.networkConductance,

@@ -79,6 +79,8 @@ export interface Stage {
   readonly seriesPositive: number;
   readonly seriesNegative: number;
   readonly resistorTolerance: number;
+  /** How much the source resistance in series with an input may itself be off, Ω; listed beside the DC error, not charged. */
+  readonly sourceSpread: number;
   readonly load: StageLoad | null;
   /** Siemens: how load and feedback current change with the output voltage. */
   readonly loadConductance: number;

@@ -30,9 +30,15 @@ const BENCHES: readonly (readonly [string, Bench])[] = [
 
 const FREQUENCY = 2e3;
 
+const SWINGS: Readonly<Record<Bench['topology'], string>> = {
+  follower: 'input: 1..2 V',
+  'non-inverting': 'input: 2.49..2.51 V',
+  inverting: 'input: 2.49..2.51 V',
+  difference: 'differential: -10..10 mV, commonMode: 2.5..2.5 V',
+};
+
 function asked(bench: Bench, limits: string): Asked {
-  const swing = bench.topology === 'difference' ? 'differential: -10..10 mV, commonMode: 2.5..2.5 V' : bench.topology === 'follower' ? 'input: 1..2 V' : 'input: 2.49..2.51 V';
-  return { supply: '5 V', reference: '2.5 V', signal: `${swing}, frequency: 2 kHz`, more: [`limits: {${limits}}`] };
+  return { supply: '5 V', reference: '2.5 V', signal: `${SWINGS[bench.topology]}, frequency: 2 kHz`, more: [`limits: {${limits}}`] };
 }
 
 function required(bench: Bench, limits: string): number {

@@ -87,8 +87,6 @@ function points(inputs: Case['inputs']): Record<string, number>[] {
   );
 }
 
-const withLoad = (circuit: Circuit, load: Load | undefined): Circuit => (load === undefined ? circuit : { ...circuit, load });
-
 interface Found {
   readonly supply: number;
   readonly output: number;

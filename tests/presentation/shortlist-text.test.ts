@@ -40,7 +40,7 @@ describe('a shortlist with something that fits', () => {
         current; 16 % spare; DC error at the
         output 24.8 mV; current 75 uA; price
         at 1000: 0.21 EUR; proof typical (3)
-     ?  TEAM-0031 A 1 MHz, 1 mV offset -
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset -
           offset drift unknown: fits if
           80.5 uV/C or less
 
@@ -119,7 +119,7 @@ describe('a shortlist with something that fits', () => {
      3  GX-LV-1M   G  supply current  16 % spare    0.21 EUR
         1 MHz, 2 mV offset; DC error at the output 24.8 mV;
         current 75 µA; proof typical (3)
-     ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown:
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown:
           fits if 80.5 µV/°C or less
 
      A on the approved list; G generic set: a class of parts,
@@ -178,7 +178,7 @@ describe('a shortlist with something that fits', () => {
         1 MHz, low offset; proof typical (3)
      3  GX-LV-1M   G  supply current  16 % spare      24.8 mV    75 µA  0.21 EUR
         1 MHz, 2 mV offset; proof typical (3)
-     ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C
           or less
 
      A on the approved list; G generic set: a class of parts, not something to
@@ -227,7 +227,7 @@ describe('a shortlist with something that fits', () => {
         1 MHz, low offset
      3  GX-LV-1M   G  supply current  16 % spare      24.8 mV    75 µA  0.21 EUR  typical (3)
         1 MHz, 2 mV offset
-     ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
 
      A on the approved list; G generic set: a class of parts, not something to order; typical (n): rests
      on n figures that are not limits; ? cannot be decided
@@ -270,7 +270,7 @@ describe('a shortlist with something that fits', () => {
      1  TEAM-0005  A  350 kHz, zero-drift  output low      171 mV spare     966 µV    35 µA  0.72 EUR  limits
      2  TEAM-0012  A  1 MHz, low offset    supply current  31 % spare      8.61 mV    62 µA  0.34 EUR  typical (3)
      3  GX-LV-1M   G  1 MHz, 2 mV offset   supply current  16 % spare      24.8 mV    75 µA  0.21 EUR  typical (3)
-     ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
 
      A on the approved list; G generic set: a class of parts, not something to order; typical (n): rests on n figures that
      are not limits; ? cannot be decided
@@ -285,8 +285,9 @@ describe('a shortlist with something that fits', () => {
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
 
     Do not fit:
-      TEAM-0001 A DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted approved
-      TEAM-0007 A slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
+      TEAM-0001 (A) DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted
+          approved
+      TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
 
     caution: TEAM-0012: 1 section of 2 idle: each draws its quiescent current and must be tied off
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset drift (typical only); slew rate (15.7 mV/µs or more); gain
@@ -314,7 +315,7 @@ describe('a shortlist with something that fits', () => {
      1  TEAM-0005  A  350 kHz, zero-drift  output low      171 mV spare     966 µV    35 µA  0.72 EUR  limits
      2  TEAM-0012  A  1 MHz, low offset    supply current  31 % spare      8.61 mV    62 µA  0.34 EUR  typical (3)
      3  GX-LV-1M   G  1 MHz, 2 mV offset   supply current  16 % spare      24.8 mV    75 µA  0.21 EUR  typical (3)
-     ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
+     ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
 
      A on the approved list; G generic set: a class of parts, not something to order; typical (n): rests on n figures that are not limits; ? cannot be decided
      Order: approved before generic, all limits before some typical, then merit: margins, price and current in equal shares.
@@ -340,7 +341,7 @@ describe('a shortlist with something that fits', () => {
     const lines = shown(100, { colour: true }).split('\n').filter((line) => line.includes('\u001b'));
     expect(lines).toMatchInlineSnapshot(`
       [
-        " [33m?[39m  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less",
+        " [33m?[39m  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less",
       ]
     `);
   });
@@ -357,7 +358,7 @@ describe('a shortlist where nothing fits', () => {
     expect(shown(100, {}, { 'limits.supplyCurrent': '0.5 µA' })).toMatchInlineSnapshot(`
       "
       No part of 6 fits. They fail supply current (6), slew rate (1), gain bandwidth (1), DC error (1) and
-      1 more check. Nearest is TEAM-0005 A: supply current over by 34.5 µA (69 times).
+      1 more check. Nearest is TEAM-0005 (A): supply current over by 34.5 µA (69 times).
       0 of 6 parts fit, 0 cannot be decided, 6 do not fit.
 
       Stage   Soil-moisture probe
@@ -368,10 +369,10 @@ describe('a shortlist where nothing fits', () => {
               1 channel, status approved
 
       Nearest to fitting:
-        TEAM-0005 A supply current over by 34.5 µA (69 times)
-        TEAM-0007 A slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %); supply
+        TEAM-0005 (A) supply current over by 34.5 µA (69 times)
+        TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %); supply
             current over by 500 nA (100 %)
-        TEAM-0012 A supply current over by 61.5 µA (130 times)
+        TEAM-0012 (A) supply current over by 61.5 µA (130 times)
 
       Why all 6 are out (one part can fail several checks):
         supply current 6    slew rate 1    gain bandwidth 1    DC error 1    status 1
@@ -401,9 +402,9 @@ describe('a shortlist where nothing fits', () => {
               1 channel, status approved
 
       Nearest to fitting:
-        TEAM-0005 A output low short by 25.2 mV
-        TEAM-0012 A output low short by 29.9 mV
-        TEAM-0031 A output low short by 33.2 mV
+        TEAM-0005 (A) output low short by 25.2 mV
+        TEAM-0012 (A) output low short by 29.9 mV
+        TEAM-0031 (A) output low short by 33.2 mV
 
       Why all 6 are out (one part can fail several checks):
         output low 6    slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -430,7 +431,7 @@ describe('a shortlist where nothing fits', () => {
     expect(shown(100, {}, { 'limits.outputNoise': '300 µVrms' })).toMatchInlineSnapshot(`
       "
       No part is proven to fit; 4 of 6 parts cannot be decided. The others fail slew rate (1), gain
-      bandwidth (1), DC error (1), supply current (1) and 1 more check. Nearest is TEAM-0001 A: DC error
+      bandwidth (1), DC error (1), supply current (1) and 1 more check. Nearest is TEAM-0001 (A): DC error
       over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted approved.
       0 of 6 parts fit, 4 cannot be decided, 2 do not fit.
 
@@ -442,18 +443,18 @@ describe('a shortlist where nothing fits', () => {
               output noise ≤ 300 µVrms, 1 channel, status approved
 
        This version does not judge noise: while the stage asks for it no part is proven to fit.
-       ?  TEAM-0005 A 350 kHz, zero-drift - passes every check that is judged
-       ?  TEAM-0012 A 1 MHz, low offset - passes every check that is judged
-       ?  TEAM-0031 A 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less
-       ?  GX-LV-1M G 1 MHz, 2 mV offset - passes every check that is judged
+       ?  TEAM-0005 (A) 350 kHz, zero-drift - passes every check that is judged
+       ?  TEAM-0012 (A) 1 MHz, low offset - passes every check that is judged
+       ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less
+       ?  GX-LV-1M (G) 1 MHz, 2 mV offset - passes every check that is judged
 
        A on the approved list; G generic set: a class of parts, not something to order; ? cannot be
        decided
 
       Nearest to fitting:
-        TEAM-0001 A DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status
+        TEAM-0001 (A) DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status
             conditional, wanted approved
-        TEAM-0007 A slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
+        TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
 
       Why the other 2 are out (one part can fail several checks):
         slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1

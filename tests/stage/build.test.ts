@@ -10,7 +10,9 @@ interface Bench {
   readonly r2: number;
   readonly r3: number;
   readonly r4: number;
+  /** Resistance of the source in the leg to the - input, and in the one to the + input: two resistors. */
   readonly rs: number;
+  readonly rp: number;
   readonly reference: number;
   readonly a: number;
   readonly b: number;
@@ -21,8 +23,8 @@ const SOLVED: Record<Topology, (at: Bench) => { output: number; pins: number }> 
   follower: ({ a }) => ({ output: a, pins: a }),
   'non-inverting': ({ r1, r2, reference, a }) => ({ output: a + (r2 * (a - reference)) / (r1 + REFERENCE_OHMS), pins: a }),
   inverting: ({ r1, r2, rs, reference, a }) => ({ output: reference + (r2 * (reference - a)) / (r1 + rs), pins: reference }),
-  difference: ({ r1, r2, r3, r4, rs, reference, a, b }) => {
-    const top = 1 / (r3 + rs);
+  difference: ({ r1, r2, r3, r4, rs, rp, reference, a, b }) => {
+    const top = 1 / (r3 + rp);
     const bottom = 1 / (r4 + REFERENCE_OHMS);
     const pins = (a * top + reference * bottom) / (top + bottom);
     return { output: pins + (r2 * (pins - b)) / (r1 + rs), pins };
@@ -35,7 +37,7 @@ const SOURCE_TOLERANCE = 0.1;
 interface Case {
   readonly topology: Topology;
   readonly tolerance: number;
-  readonly nominal: Bench;
+  readonly nominal: Omit<Bench, 'rp'>;
   readonly referenceTolerance: number;
   readonly width: number;
 }
@@ -64,16 +66,17 @@ function specOf({ topology, tolerance, nominal, referenceTolerance, width }: Cas
   });
 }
 
-const NAMES = ['r1', 'r2', 'r3', 'r4', 'rs', 'reference', 'a', 'b'] as const;
+const NAMES = ['r1', 'r2', 'r3', 'r4', 'rs', 'rp', 'reference', 'a', 'b'] as const;
 
 /** The bench with each component moved by itself: −1 and 1 are the ends of its box. */
-function benchAt({ nominal, tolerance, referenceTolerance, width }: Case, where: readonly number[]): Bench {
-  const half = { r1: tolerance, r2: tolerance, r3: tolerance, r4: tolerance, rs: SOURCE_TOLERANCE, reference: referenceTolerance };
+function benchAt({ nominal: typed, tolerance, referenceTolerance, width }: Case, where: readonly number[]): Bench {
+  const nominal = { ...typed, rp: typed.rs };
+  const half = { r1: tolerance, r2: tolerance, r3: tolerance, r4: tolerance, rs: SOURCE_TOLERANCE, rp: SOURCE_TOLERANCE, reference: referenceTolerance };
   const moved = NAMES.map((name, at) => {
     const by = where[at] ?? 0;
     return [name, name === 'a' || name === 'b' ? nominal[name] + ((by + 1) / 2) * width : nominal[name] * (1 + by * half[name])];
   });
-  return Object.fromEntries(moved) as unknown as Bench;
+  return Object.fromEntries(moved) as Bench;
 }
 
 const ROUNDING = 1e-11;

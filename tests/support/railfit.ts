@@ -16,6 +16,8 @@ export interface RunOptions {
   readonly env?: Readonly<Record<string, string | undefined>>;
   /** Standard input; closed at once when absent. */
   readonly input?: string | Uint8Array;
+  /** Run by a user whom permissions bind. */
+  readonly unprivileged?: boolean;
 }
 
 /** A temporary folder with the demo stages, the house lists and a catalog of its own, where the built command runs. */
@@ -28,6 +30,10 @@ export interface Workplace {
   remove(): void;
 }
 
+const isRoot = process.getuid?.() === 0;
+/** The user and group without rights of most systems. */
+const NOBODY = 65534;
+
 export function makeWorkplace(): Workplace {
   const folder = mkdtempSync(join(tmpdir(), 'railfit-'));
   cpSync(join(ROOT, 'catalog', 'stages'), folder, { recursive: true });
@@ -35,7 +41,12 @@ export function makeWorkplace(): Workplace {
   mkdirSync(join(folder, 'home'));
   const catalog = join(folder, 'catalog.sqlite');
   const start = (words: readonly string[], options: RunOptions = {}): ChildProcess =>
-    spawn(process.execPath, [BUILT, ...words], { cwd: folder, env: environment(folder, { RAILFIT_CATALOG: catalog, ...options.env }), stdio: 'pipe' });
+    spawn(process.execPath, [BUILT, ...words], {
+      cwd: folder,
+      env: environment(folder, { RAILFIT_CATALOG: catalog, ...options.env }),
+      stdio: 'pipe',
+      ...(options.unprivileged === true && isRoot ? { uid: NOBODY, gid: NOBODY } : {}),
+    });
   return {
     folder,
     catalog,
@@ -51,7 +62,8 @@ function environment(folder: string, more: Readonly<Record<string, string | unde
   return Object.fromEntries(Object.entries(all).filter(([, value]) => value !== undefined)) as NodeJS.ProcessEnv;
 }
 
-function ended(child: ChildProcess, input: string | Uint8Array | undefined): Promise<Ran> {
+/** Waits for a command that was started, with all it writes. */
+export function ended(child: ChildProcess, input?: string | Uint8Array): Promise<Ran> {
   const out: Buffer[] = [];
   const err: Buffer[] = [];
   child.stdout?.on('data', (chunk: Buffer) => out.push(chunk));

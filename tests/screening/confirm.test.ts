@@ -1,0 +1,28 @@
+import { describe, expect, it } from 'vitest';
+import { confirmations } from '../../src/screening/confirm.js';
+import { passing } from '../support/fitting.js';
+
+const turnsAt = { figure: 'slewRate', kind: 'min', value: 5, unit: 'V/s' } as const;
+
+describe('figures to confirm before release', () => {
+  it('are none behind a guaranteed verdict', () => {
+    expect(confirmations([passing('slew-rate', 2)])).toEqual([]);
+  });
+
+  it('are the figure that decides, with the limit that would still pass', () => {
+    expect(confirmations([passing('slew-rate', 2, { basis: 'derated', slot: 'slewRate.typ', how: 'typical × 0.6', turnsAt })])).toEqual([
+      { figure: 'slewRate', slot: 'slewRate.typ', basis: 'derated', how: 'typical × 0.6', checks: ['slew-rate'], needed: { kind: 'min', value: 5, unit: 'V/s' } },
+    ]);
+  });
+
+  it('are the weak terms of a sum, guaranteed ones apart', () => {
+    const term = (name: string, basis: 'guaranteed' | 'derated' | 'borrowed', slot: string | null): object => ({ name, basis, slot, value: 1, figure: null, how: null });
+    const terms = [term('offset', 'guaranteed', 'offsetVoltage.max'), term('offset drift', 'derated', 'offsetDrift.typ'), term('common mode', 'borrowed', null)] as never;
+    expect(confirmations([passing('dc-error', 2, { basis: 'borrowed', terms })]).map(({ figure, basis }) => [figure, basis])).toEqual([['offsetDrift', 'derated'], ['common mode', 'borrowed']]);
+  });
+
+  it('are named once, with every check that rests on them', () => {
+    const both = ['output-low', 'dc-error'].map((check) => passing(check, 2, { basis: 'derated', slot: 'offsetVoltage.typ' }));
+    expect(confirmations(both)).toMatchObject([{ figure: 'offsetVoltage', checks: ['output-low', 'dc-error'] }]);
+  });
+});
