@@ -29,7 +29,7 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
     packages: ['better-sqlite3', 'kysely', 'node:fs', 'node:path', 'node:crypto'],
   },
   'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'engine.ts', 'report.ts', 'presentation'], packages: [] },
-  cli: { rooms: ['index.ts', 'catalog', 'intake', 'quantities'], packages: ['commander', 'node:'] },
+  cli: { rooms: ['index.ts', 'catalog', 'intake', 'quantities'], packages: ['commander', '@inquirer/prompts', 'node:'] },
   migrations: { rooms: [], packages: ['kysely'] },
 };
 

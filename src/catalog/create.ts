@@ -26,12 +26,25 @@ export async function createCatalog(file: string, migrations?: Readonly<Record<s
 
 function prepare(file: string, draft: string): void {
   try {
-    mkdirSync(dirname(file), { recursive: true });
+    makeFolder(dirname(file));
     closeSync(openSync(draft, 'wx'));
   } catch (error) {
     const { code } = error as { code?: string };
     if (code !== 'EACCES' && code !== 'EPERM') throw error;
     throw new CatalogError('readOnly', file, { message: 'the folder cannot be written', cause: error });
+  }
+}
+
+/** Folder by folder: Node's own recursive form never returns where the system refuses a folder with ENOENT, as under /proc. */
+function makeFolder(folder: string): void {
+  if (existsSync(folder)) return;
+  const parent = dirname(folder);
+  if (parent !== folder) makeFolder(parent);
+  try {
+    mkdirSync(folder);
+  } catch (error) {
+    // Another process may have made it meanwhile.
+    if ((error as { code?: string }).code !== 'EEXIST') throw error;
   }
 }
 

@@ -43,6 +43,11 @@ export function insertImport(database: Database.Database, { counts, columns, ...
   return Number(insert.run({ ...values, ...counts, columns: JSON.stringify(columns) }).lastInsertRowid);
 }
 
+/** The file an import is read from now. */
+export function updateOrigin(database: Database.Database, importId: number, { file, sha256, columns }: Pick<NewImport, 'file' | 'sha256' | 'columns'>): void {
+  database.prepare('update list_import set file = ?, sha256 = ?, columns = ? where id = ?').run(file, sha256, JSON.stringify(columns), importId);
+}
+
 export function importColumns(database: Database.Database, importId: number): readonly ListColumn[] {
   const query = database.prepare<[number], string>('select columns from list_import where id = ?').pluck();
   return JSON.parse(query.get(importId) ?? '[]') as ListColumn[];

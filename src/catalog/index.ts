@@ -7,12 +7,14 @@ import { openDatabase } from './database.js';
 import type { ImportCounts } from './imports.js';
 import { currentImport } from './imports.js';
 import { partSource } from './source.js';
-import { classesInForce, compareLists, idsInForce, undoImport, writeDifference } from './store.js';
+import type { ChangedPart } from './store.js';
+import { classesInForce, compareLists, idsInForce, refreshOrigins, undoImport, writeDifference } from './store.js';
 
 export { CatalogError } from './catalog-error.js';
 export type { CatalogErrorCode } from './catalog-error.js';
 export type { OpenOptions } from './database.js';
 export type { ImportCounts } from './imports.js';
+export type { ChangedPart } from './store.js';
 
 export interface ImportOptions {
   /** When it was imported, ISO 8601; kept as told, never read from a clock. */
@@ -24,6 +26,10 @@ export interface ImportOptions {
 export interface ImportResult {
   readonly outcome: 'imported' | 'no-change' | 'dry-run';
   readonly counts: ImportCounts;
+  /** Parts that are in both lists and differ, before and after. */
+  readonly changed: readonly ChangedPart[];
+  /** Ids that are not in the new list any more. */
+  readonly removed: readonly string[];
 }
 
 /** The file that keeps the parts. Every method throws `CatalogError` when the surroundings do not allow it. */
@@ -37,7 +43,7 @@ export interface Catalog {
   genericIds(): ReadonlySet<string>;
   /** Classes of the generic sets, from which a part may borrow. */
   classes(): ReadonlySet<string>;
-  /** Replaces the approved list in one transaction; the same file again is no change. */
+  /** Replaces the approved list in one transaction; the same parts again are no change: only where they came from is kept anew. */
   importList(list: ReadList, options?: ImportOptions): ImportResult;
   /** Returns to the approved list before the last import; false when there was none. */
   undo(): boolean;
@@ -73,16 +79,22 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
 
 function importList(database: Database.Database, list: ReadList, { now, dryRun = false }: ImportOptions): ImportResult {
   const work = database.transaction((): ImportResult => {
-    if (currentImport(database, list.tier)?.sha256 === list.sha256) {
-      const { length } = list.parts;
-      return { outcome: 'no-change', counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: length } };
-    }
+    const current = currentImport(database, list.tier);
+    if (current?.sha256 === list.sha256) return unchanged(list);
     const difference = compareLists(database, list);
-    if (dryRun) return { outcome: 'dry-run', counts: difference.counts };
-    writeDifference(database, list, { difference, now: now ?? null });
-    return { outcome: 'imported', counts: difference.counts };
+    const { counts, changed, removed } = difference;
+    if (current !== null && counts.added + counts.changed + counts.removed === 0) {
+      if (!dryRun) refreshOrigins(database, list, current.id);
+      return unchanged(list);
+    }
+    if (!dryRun) writeDifference(database, list, { difference, now: now ?? null });
+    return { outcome: dryRun ? 'dry-run' : 'imported', counts, changed, removed };
   });
   return dryRun ? work.deferred() : work.immediate();
+}
+
+function unchanged({ parts: { length } }: ReadList): ImportResult {
+  return { outcome: 'no-change', counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: length }, changed: [], removed: [] };
 }
 
 function asTier(list: ReadList, tier: ReadList['tier']): ReadList {

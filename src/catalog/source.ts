@@ -32,7 +32,7 @@ function readSource(database: Database.Database, file: string): PartSource {
       if (kept === undefined || kept.current === null) return null;
       const { tier, current } = kept;
       return guarded(file, () => {
-        const column = columnsOf(current.id).get(slot);
+        const column = columnOf(columnsOf(current.id), slot);
         return column === undefined ? null : originOf(database, partId, { tier, current, column });
       });
     },
@@ -41,6 +41,13 @@ function readSource(database: Database.Database, file: string): PartSource {
 
 function readTier(database: Database.Database, tier: Tier): KeptTier {
   return { tier, current: currentImport(database, tier), parts: partsInForce(database, tier) };
+}
+
+/** The column of a slot. A figure that is missing is asked for without condition: then the first of its columns, whose cell is empty. */
+function columnOf(columns: ReadonlyMap<string, ListColumn>, slot: string): ListColumn | undefined {
+  const exact = columns.get(slot);
+  if (exact !== undefined || slot.includes('@')) return exact;
+  return [...columns].find(([one]) => one.startsWith(`${slot}@`))?.[1];
 }
 
 interface RecordRow {

@@ -3,13 +3,22 @@ import type { ReadList } from '../intake/list.js';
 import type { Part, Tier } from '../parts/part.js';
 import { contentHash, partContent } from './content.js';
 import type { ImportCounts } from './imports.js';
-import { currentImport, insertImport } from './imports.js';
+import { currentImport, insertImport, updateOrigin } from './imports.js';
 import { PART_COLUMNS } from './part-columns.js';
 import type { Cell } from './part-row.js';
 import { partToRow, rowToPart } from './part-row.js';
 
+export interface ChangedPart {
+  readonly before: Part;
+  readonly after: Part;
+}
+
 /** The difference between the list in force and a new one. Ids are compared, then everything that can change an answer. */
 export interface Difference {
+  /** The parts whose version changes, by id, before and after. */
+  readonly changed: readonly ChangedPart[];
+  /** Ids in force that are not in the new list. */
+  readonly removed: readonly string[];
   /** New or changed: to be written. */
   readonly written: readonly Part[];
   /** Ids of the versions in force that end. */
@@ -19,11 +28,11 @@ export interface Difference {
 }
 
 export function compareLists(database: Database.Database, list: ReadList): Difference {
-  const before = new Map(partsInForce(database, list.tier).map((part) => [part.id, partContent(part)]));
+  const before = new Map(partsInForce(database, list.tier).map((part) => [part.id, part]));
   const contents = list.parts.map(partContent);
   const after = new Set(list.parts.map(({ id }) => id));
-  const written = list.parts.filter(({ id }, index) => before.get(id) !== contents[index]);
-  const changed = written.filter(({ id }) => before.has(id)).map(({ id }) => id);
+  const written = list.parts.filter(({ id }, index) => contentOf(before.get(id)) !== contents[index]);
+  const changed = written.flatMap((part) => changeOf(before.get(part.id), part));
   const removed = [...before.keys()].filter((id) => !after.has(id));
   const counts = {
     rows: list.parts.length,
@@ -32,7 +41,19 @@ export function compareLists(database: Database.Database, list: ReadList): Diffe
     removed: removed.length,
     unchanged: list.parts.length - written.length,
   };
-  return { written, withdrawn: [...changed, ...removed], counts, contentSha256: contentHash(contents) };
+  const withdrawn = [...changed.map((change) => change.after.id), ...removed];
+  return { written, changed, removed, withdrawn, counts, contentSha256: contentHash(contents) };
+}
+
+const contentOf = (part: Part | undefined): string | null => (part === undefined ? null : partContent(part));
+
+const changeOf = (before: Part | undefined, after: Part): ChangedPart[] => (before === undefined ? [] : [{ before, after }]);
+
+/** The same parts in other bytes: where each figure came from is now this file. No version is made, so undo takes back what it did before. */
+export function refreshOrigins(database: Database.Database, list: ReadList, importId: number): void {
+  updateOrigin(database, importId, list);
+  database.prepare('delete from record where import_id = ?').run(importId);
+  writeRecords(database, list, importId);
 }
 
 interface Writing {

@@ -1,7 +1,8 @@
-import type { DcErrorDemand } from '../demands/index.js';
+import type { Corner, DcErrorDemand } from '../demands/index.js';
 import { formatQuantity } from '../quantities/format.js';
 import { rootSumSquare, worstCaseSum } from '../formulas/dc-error.js';
 import { weakest } from '../parts/basis.js';
+import { DOUBLING } from '../parts/currents.js';
 import type { OffsetReading } from '../parts/offset.js';
 import type { Readings } from '../parts/readings.js';
 import type { BoundFinding, Finding, Term } from '../verdicts/finding.js';
@@ -26,7 +27,7 @@ function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
   const known = worstCaseSum(terms.map((term) => term.value));
   const missing = all.filter((one) => one.kind === 'missing');
   const { required, unit, sense } = asked;
-  const corner = { temperature: asked.temperature, supply: fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal) };
+  const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
   const cautions = sourceCaution(asked, readings);
   const common = { required, unit, sense, terms, corner, cautions, basis: weakest(terms.map((term) => term.basis)) };
   const [first] = missing;
@@ -35,6 +36,12 @@ function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
     return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
   }
   return { kind: 'numbers', ...common, offered: known, rss: rootSumSquare(terms.map((term) => term.value)), borrowed: borrowedSum(terms) };
+}
+
+/** One temperature, unless the offset stands at the cold end and currents that double at the hot one. */
+function cornerOf({ temperature, hottest }: DcErrorDemand, supply: number, terms: readonly Term[]): Corner {
+  const doubled = terms.some(({ how }) => how?.includes(DOUBLING) === true);
+  return doubled && temperature !== hottest ? { supply, temperature, currentTemperature: hottest } : { temperature, supply };
 }
 
 /** The tolerance of the source is not among the terms of the sum; what it could add is told. */

@@ -73,7 +73,7 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const { share, reading } = at;
   const common = { unit: 'V', sense: 'at-most' as const, required: vertex.room, corner: vertex.corner, turnsAt: turnsAt(vertex, at) };
   const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
-  if (reading.value === null) return bound(at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
+  if (reading.value === null) return beyond(vertex, at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
   if (!meets(vertex.room, 0, 'at-most') && meets(vertex.room, offered, 'at-most')) return bound(at, { ...common, basis, known: share.value });
@@ -85,11 +85,23 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   } satisfies NumberFinding;
 }
 
-function bound(at: At, common: Pick<BoundFinding, 'unit' | 'sense' | 'required' | 'corner' | 'turnsAt' | 'basis' | 'known'>): BoundFinding {
+function bound(at: At, common: Common): BoundFinding {
   const figure = at.side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom';
   const cause = at.reading.bound === null ? 'missing-figure' : 'beyond-data';
   return { kind: 'bound', ...common, terms: at.share.terms, missing: [{ figure, kind: 'max' }], cause };
 }
+
+/** No point reaches the current that flows: the heaviest one's own head-room is the least it can be. */
+function beyond(vertex: HeadroomVertex, at: At, common: Common): BoundFinding {
+  const finding = bound(at, common);
+  const { bound: least, covers, slot, basis } = at.reading;
+  if (least === null || covers === null) return finding;
+  const { current, supply } = vertex;
+  const term: Term = { name: 'head-room of the heaviest point', value: least, slot, basis, figure: null, how: at.reading.how };
+  return { ...finding, terms: [term, ...at.share.terms], missing: finding.missing.map((one) => ({ ...one, beyond: { covers, current, supply } })) };
+}
+
+type Common = Pick<BoundFinding, 'unit' | 'sense' | 'required' | 'corner' | 'turnsAt' | 'basis' | 'known'>;
 
 function headroomTerm(reading: HeadroomReading, value: number, vertex: HeadroomVertex): Term {
   const at = vertex.current === 0 ? 'no current towards this rail' : `at ${formatQuantity(vertex.current, 'A')}`;
@@ -100,5 +112,5 @@ function headroomTerm(reading: HeadroomReading, value: number, vertex: HeadroomV
 /** The head-room at this vertex' current that would just pass. */
 function turnsAt(vertex: HeadroomVertex, at: At): TurningPoint {
   const figure = at.side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom';
-  return { figure, kind: 'max', value: vertex.room - at.share.value, unit: 'V' };
+  return { figure, kind: 'max', value: vertex.room - at.share.value, unit: 'V', condition: { current: vertex.current, supply: vertex.supply } };
 }

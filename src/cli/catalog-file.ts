@@ -10,6 +10,7 @@ import type { CommonOptions, Session } from './session.js';
 
 /** The catalog file: `--catalog`, else RAILFIT_CATALOG, else the user data folder per the XDG base directories. */
 export function catalogFile(options: CommonOptions, env: Session['env']): string {
+  if (options.catalog === '') throw new RequestError([commandProblem('C104', '--catalog names no file', { fix: '--catalog team.sqlite', path: '--catalog' })], EXIT.request);
   if (options.catalog !== undefined) return options.catalog;
   if ((env['RAILFIT_CATALOG'] ?? '') !== '') return env['RAILFIT_CATALOG'] ?? '';
   const data = env['XDG_DATA_HOME'] || join(env['HOME'] || homedir(), '.local', 'share');

@@ -43,6 +43,7 @@ const CONTRADICTIONS: readonly CodePage[] = [
   page('S204', 'input below ground with no reference', 'A ground-referenced stage on one supply cannot put out what lies below ground.', ['input: -100..100 mV, reference: ground', 'reference: mid-supply']),
   page('S205', 'no stage maps the input onto the output', 'The gain or the reference that would be needed cannot be had.', ['input 0..1 V to output 3..2 V, non-inverting', 'topology: inverting']),
   page('S206', 'supply peak below the supply', 'The transient peak is at least the top of the supply.', ['supply: 5 V ±5 %, supplyPeak: 5 V', 'supplyPeak: 5.25 V']),
+  page('S207', 'reference outside the supply', 'What a single supply gives lies between ground and that supply.', ['supply: 5 V, reference: 6 V', 'reference: mid-supply']),
   page('S208', 'gain not given', 'Gain, resistors or the wanted output must say it.', ['topology: inverting, nothing else', 'gain: 8']),
   page('S209', 'no resistors for this gain', 'No pair of E96 values with a reasonable feedback path gives it.', ['gain: 1000000', 'resistors: {feedback: 1 MΩ, input: 1 Ω}']),
 ];
@@ -54,13 +55,16 @@ const COMMANDS: readonly CodePage[] = [
   page('C103', 'no stage', 'A stage is a file, - for standard input, or options that say it all.', ['railfit shortlist', 'railfit shortlist stage.yaml']),
   page('C104', 'option without a usable value', 'The value is missing or not one of those listed.', ['--order best', '--order price']),
   page('C105', '--set without field and value', 'The form is path=value.', ['--set dcError', '--set limits.dcError="20 mV"']),
-  page('C106', 'options that need each other', 'A failing check can only be named on a stage.', ['--failing dc-error', '--failing dc-error --stage stage.yaml']),
+  page('C106', 'options that need or exclude each other', 'A failing check can only be named on a stage; an answer has one form.', ['--failing dc-error', '--failing dc-error --stage stage.yaml']),
   page('C107', '--assume', 'The form is PART.figure=VALUE; figures are named as in railfit help figures.', ['--assume drift=10', '--assume PART.offsetDrift=10µV/K']),
   page('C108', 'no such part', 'Ids are compared exactly; near ones are offered.', ['railfit part ORG-OA-OO12', 'railfit part ORG-OA-0012']),
   page('C109', 'no such help topic', 'Topics, commands and message codes have pages.', ['railfit help figrues', 'railfit help figures']),
+  page('C110', 'the file exists', 'A draft is never written over another file unless that is asked for.', ['railfit draft -o stage.yaml, a second time', 'railfit draft -o other.yaml, or --force']),
+  page('C111', 'no terminal to ask on', 'Guided entry needs a person at a terminal; everything it asks can be written in a file or given as options.', ['railfit draft --ask < answers.txt', 'railfit draft non-inverting -o stage.yaml']),
   page('E501', 'the catalog cannot be used', 'The file is locked, unreadable, not a catalog, or from a newer version. It was left as it is.', ['--catalog /etc/hosts', '--catalog team.sqlite']),
   page('E502', 'file cannot be read', 'The path or its permissions.', ['stage.yml for stage.yaml', 'the path as ls shows it']),
   page('E503', 'file cannot be written', 'The folder does not exist or may not be written.', ['--errors /nowhere/e.csv', '--errors e.csv']),
+  page('E504', 'the answer cannot be written', 'What the output was sent to takes no more: usually a full disk.', ['railfit shortlist stage.yaml > /full/list.txt', 'railfit shortlist stage.yaml > /elsewhere/list.txt']),
 ];
 
 /** Every code a message can carry, in order. A test holds this list against the source. */

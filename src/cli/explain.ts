@@ -1,6 +1,7 @@
 import { explain, explanationJson, renderExplanation } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { withCatalog } from './catalog-file.js';
+import { commandContext } from './command-context.js';
 import { EXIT, exitOfOutcome } from './exit-code.js';
 import { findPart } from './find-part.js';
 import { judgingInput, type JudgingOptions } from './judging-input.js';
@@ -16,19 +17,25 @@ export interface ExplainOperands {
 
 /** `railfit explain PART [STAGE]`: every check of one part on this stage. */
 export async function runExplain(session: Session, operands: ExplainOperands, options: JudgingOptions): Promise<Outcome> {
-  const already = [...(options.already ?? []), ...(operands.part === undefined ? [noPart()] : [])];
-  const { stage, file } = readStageOf(operands.stage, { ...options, already });
+  const { part, stage: stageFile } = withoutPart(operands) ? { part: undefined, stage: operands.part } : operands;
+  const already = [...(options.already ?? []), ...(part === undefined ? [noPart(stageFile)] : [])];
+  const { stage, file } = await readStageOf(stageFile, { ...options, already });
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
-    const found = findPart(source.parts, operands.part ?? '');
+    const found = findPart(source.parts, part ?? '');
     if (!found.ok) throw new RequestError([found.problem], EXIT.request);
     const explanation = explain(stage, source, { part: found.part, asking });
     const exit = exitOfOutcome(explanation.judged.outcome);
     if (options.json === true) return { text: explanationJson(explanation), exit };
-    return { text: renderExplanation(explanation, styleFor(session, options), { command: 'railfit', stageFile: file }), exit };
+    return { text: renderExplanation(explanation, styleFor(session, options), commandContext(file, options)), exit };
   });
 }
 
-function noPart(): Problem {
-  return commandProblem('C102', 'explain: no PART', { fix: 'railfit explain PART stage.yaml' });
+/** A stage file alone: the part was forgotten, not the stage. */
+function withoutPart({ part, stage }: ExplainOperands): boolean {
+  return part !== undefined && stage === undefined && /\.(?:ya?ml|json)$/iu.test(part);
+}
+
+function noPart(stageFile = 'stage.yaml'): Problem {
+  return commandProblem('C102', 'explain: no PART', { fix: `railfit explain PART ${stageFile}` });
 }

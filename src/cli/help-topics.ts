@@ -34,7 +34,7 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   stage: () => [
     { text: 'The stage file is YAML (JSON is a subset). Values are written as engineers write them, with their unit. What is left out takes its default, and every default is printed as an assumption. Options override the file, so that a what-if is one option.' },
     { code: STAGE_EXAMPLE },
-    { pairs: renderStageHelp().map(({ path, accepted, example, meaning }) => [path, `${meaning} — ${accepted}; for example ${example}`] as const) },
+    { pairs: renderStageHelp().map(({ path, accepted, example, meaning }) => [path, `${meaning}: ${accepted}; for example ${example}`] as const) },
     { text: 'Required: topology, supply, and what the stage is fed (signal.input, signal.amplitude, or both inputs of a difference stage). Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said.' },
   ],
   figures: () => [
@@ -62,7 +62,7 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
         ['limits', '"<5 mV" or max 5mV (in a shell < and > need quotes), typ 1 mV'],
       ],
     },
-    { text: 'Hard-to-type signs have word forms: u for µ, ohm for Ω, rtHz for √Hz, +/- for ±, .. or to for a range. In batch files % is written twice.' },
+    { text: 'Signs that are hard to type have word forms: u (micro), ohm, rtHz (root hertz), +/- before a tolerance, .. or to in a range. In batch files % is written twice.' },
   ],
   lists: () => [
     { text: 'railfit import reads the approved list as canonical CSV: one row a part, a figure named by its parameter, limit kind and unit, with conditions behind @. Nothing is stored unless every cell is understood.' },

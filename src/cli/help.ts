@@ -12,33 +12,36 @@ export interface HelpQuestion {
   commandHelp(name: string): string | null;
 }
 
-const COMMANDS = ['shortlist', 'explain', 'demands', 'parts', 'part', 'import', 'help'];
+const COMMANDS = ['shortlist', 'explain', 'demands', 'draft', 'parts', 'part', 'import', 'help'];
 
 /** `railfit help TOPIC`: long help, also for every message code. */
 export function runHelp(session: Session, question: HelpQuestion, options: CommonOptions): Outcome {
-  const text = textFor(question, styleFor(session, options).width);
   const style = styleFor(session, options);
+  const text = textFor(question, style);
   if (options.json === true) return { text: `${JSON.stringify({ schema: 'railfit/help', schemaVersion: 1, topic: question.topic ?? null, text }, null, 2)}\n`, exit: EXIT.yes };
-  return { text: style.ascii ? asciiText(text) : text, exit: EXIT.yes };
+  return { text, exit: EXIT.yes };
 }
 
-function textFor(question: HelpQuestion, width: number): string {
+function textFor(question: HelpQuestion, style: HelpStyle): string {
   const { topic } = question;
   if (topic === undefined) return `${question.overview()}\nTopics: ${Object.keys(TOPICS).join(', ')}, a command, or a message code such as Q002.\n`;
   const command = question.commandHelp(topic);
   if (command !== null) return command;
   const blocks = TOPICS[topic]?.() ?? codeBlocks(topic);
-  if (blocks !== null) return `${blocks.map((block) => render(block, width)).join('\n\n')}\n`;
+  if (blocks !== null) return `${blocks.map((block) => render(block, style)).join('\n\n')}\n`;
   const near = suggest(topic, [...Object.keys(TOPICS), ...COMMANDS]);
   const fix = near.length === 0 ? `one of ${Object.keys(TOPICS).join(', ')}, a command, or a message code` : `did you mean ${near.join(', ')}?`;
   throw new RequestError([commandProblem('C109', `no help on ${topic}`, { fix })], EXIT.request);
 }
 
-function render(block: Block, width: number): string {
-  if ('text' in block) return wrap(block.text, width).join('\n');
-  if ('code' in block) return block.code.map((line) => `    ${line}`).join('\n');
+type HelpStyle = Pick<ReturnType<typeof styleFor>, 'width' | 'ascii'>;
+
+function render(block: Block, { width, ascii }: HelpStyle): string {
+  const spelled = (text: string): string => (ascii ? asciiText(text) : text.replaceAll('−', '-'));
+  if ('text' in block) return wrap(spelled(block.text), width).join('\n');
+  if ('code' in block) return block.code.map((line) => `    ${spelled(line)}`).join('\n');
   const widest = Math.min(28, Math.max(...block.pairs.map(([name]) => name.length)));
-  return block.pairs.flatMap(([name, text]) => pairLines([name, text], widest, width)).join('\n');
+  return block.pairs.flatMap(([name, text]) => pairLines([name, spelled(text)], widest, width)).join('\n');
 }
 
 /** Name and text side by side; a long name, or a narrow terminal, puts the text below. */

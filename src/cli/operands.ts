@@ -12,14 +12,16 @@ export interface Operands {
 
 /** Sorts the words commander left over. `most` is how many operands the command takes. */
 export function operandsOf(command: Command, most: number): Operands {
+  const literal = literalWords(command);
   const operands: string[] = [];
   const problems: Problem[] = [];
   let isValue = false;
-  for (const word of command.args) {
+  for (const word of command.args.slice(0, command.args.length - literal.length)) {
     if (isUnknownOption(word)) problems.push(unknownOption(command, word));
-    else if (!isValue || looksLikeFile(word)) operands.push(word);
+    else if (word !== '--' && (!isValue || looksLikeFile(word))) operands.push(word);
     isValue = isUnknownOption(word) && !word.includes('=');
   }
+  operands.push(...literal);
   const extra = operands.slice(most).map((operand) =>
     commandProblem('C102', `${operand}: ${command.name()} takes ${most === 1 ? 'one operand' : `${most} operands`}`, { fix: `railfit help ${command.name()}`, path: operand }),
   );
@@ -33,7 +35,14 @@ export function onlyOperands(command: Command, most: number): readonly string[] 
   return operands;
 }
 
-const isUnknownOption = (word: string): boolean => word.length > 1 && word.startsWith('-') && !/^-[\d.]/u.test(word);
+/** What stands behind `--` is an operand, whatever it looks like. */
+function literalWords({ args, parent }: Command): readonly string[] {
+  const { rawArgs = [] } = (parent ?? {}) as { readonly rawArgs?: readonly string[] };
+  const end = rawArgs.indexOf('--');
+  return end < 0 ? [] : args.slice(Math.max(0, args.length - (rawArgs.length - end - 1)));
+}
+
+const isUnknownOption = (word: string): boolean => word.length > 1 && word !== '--' && word.startsWith('-') && !/^-[\d.]/u.test(word);
 /** What follows an unknown option is taken as its value, unless it is plainly the stage or the list. */
 const looksLikeFile = (word: string): boolean => word === '-' || /\.(?:ya?ml|json|csv)$/iu.test(word);
 

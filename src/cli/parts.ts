@@ -1,8 +1,9 @@
-import { partsJson, renderParts, shortlist, type Part, type PartLine, type Tier } from '../index.js';
+import { CHECK_IDS, partsJson, renderParts, shortlist, suggest, type Part, type PartLine, type Stage, type Tier } from '../index.js';
+import type { Problem } from '../quantities/problem.js';
 import { writeList } from '../intake/write-list.js';
 import { withCatalog } from './catalog-file.js';
 import { EXIT } from './exit-code.js';
-import { commandProblem, RequestError } from './request-error.js';
+import { commandProblem, RequestError, twoForms } from './request-error.js';
 import { styleFor, type CommonOptions, type Outcome, type Session } from './session.js';
 import { readStageOf } from './stage-input.js';
 
@@ -15,7 +16,7 @@ export interface PartsOptions extends CommonOptions {
 
 /** `railfit parts [WORD…]`: the catalog, or the parts whose id, class or description has every word. */
 export async function runParts(session: Session, words: readonly string[], options: PartsOptions): Promise<Outcome> {
-  const stage = stageOf(options);
+  const stage = await stageOf(options);
   return withCatalog(session, options, (catalog) => {
     const source = catalog.source();
     const failing = stage === null ? null : failingChecks(shortlist(stage, source));
@@ -31,11 +32,24 @@ export async function runParts(session: Session, words: readonly string[], optio
   });
 }
 
-function stageOf(options: PartsOptions): ReturnType<typeof readStageOf>['stage'] | null {
-  if (options.failing !== undefined && options.stage === undefined) {
-    throw new RequestError([commandProblem('C106', '--failing asks for a stage', { fix: '--failing dc-error --stage stage.yaml', path: '--failing' })], EXIT.request);
+async function stageOf(options: PartsOptions): Promise<Stage | null> {
+  const { failing, stage } = options;
+  const already = [...twoForms(options), ...(failing === undefined ? [] : failingProblems(failing, stage))];
+  if (stage !== undefined) return (await readStageOf(stage, { already })).stage;
+  if (already.length > 0) throw new RequestError(already, EXIT.request);
+  return null;
+}
+
+/** What is wrong with `--failing CHECK`: no stage to fail on, or no such check. */
+function failingProblems(check: string, stage: string | undefined): Problem[] {
+  const problems: Problem[] = [];
+  if (stage === undefined) problems.push(commandProblem('C106', '--failing asks for a stage', { fix: '--failing dc-error --stage stage.yaml', path: '--failing' }));
+  if (!(CHECK_IDS as readonly string[]).includes(check)) {
+    const near = suggest(check, CHECK_IDS);
+    const fix = near.length === 0 ? 'railfit help checks lists them' : `did you mean ${near.join(', ')}?`;
+    problems.push(commandProblem('C104', `--failing ${check}: no such check`, { fix, path: '--failing' }));
   }
-  return options.stage === undefined ? null : readStageOf(options.stage, {}).stage;
+  return problems;
 }
 
 function failingChecks(report: ReturnType<typeof shortlist>): Map<string, string[]> {

@@ -1,6 +1,6 @@
 import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
-import type { CheckId } from '../index.js';
 import type { JudgingOptions } from './judging-input.js';
+import type { DraftOptions } from './draft.js';
 import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
@@ -18,9 +18,12 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     .description('Ranks operational amplifiers for one single-supply stage, proves each verdict with worst-case numbers, and explains every rejection.')
     .version(VERSION, '-V, --version', 'tool and rules version')
     .helpCommand(false)
+    // So that -- reaches the command it belongs to.
+    .enablePositionalOptions()
     .addHelpText('after', AFTER);
 
   judging(add(program, 'shortlist [STAGE]', 'derive, judge the whole catalog, rank, explain'))
+    .option('--csv', 'the list as a table')
     .action(async (...received) => {
       const { command, options } = lastOf<JudgingOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
@@ -37,12 +40,21 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     .action(async (...received) => {
       const { command, options } = lastOf<CommonOptions & StageOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
-      deliver((await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
+      deliver(await (await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
+    });
+  add(program, 'draft [TOPOLOGY]', 'a commented stage file with every field, or guided entry with --ask')
+    .option('--ask', 'ask on the terminal: each answer checked, demands shown; ends with the file and its shortlist')
+    .option('--ac', 'an AC-coupled stage')
+    .option('-o, --output <FILE>', 'a new file instead of stdout')
+    .option('--force', 'write over an existing file')
+    .action(async (...received) => {
+      const { command, options } = lastOf<DraftOptions>(received);
+      deliver(await (await import('./draft.js')).runDraft(session, onlyOperands(command, 1)[0], options));
     });
   add(program, 'parts [WORDS...]', 'list the catalog, or the parts whose id, class or description has every word')
     .addOption(new Option('--tier <TIER>', 'only this tier').choices(['approved', 'generic']))
     .option('--stage <STAGE>', 'a stage to judge them on')
-    .option('--failing <CHECK>', 'only parts that fail this check on --stage', checkId)
+    .option('--failing <CHECK>', 'only parts that fail this check on --stage')
     .option('--csv', 'canonical CSV, as import reads it (approved list unless --tier)')
     .action(async (...received) => {
       const { command, options } = lastOf<PartsOptions>(received);
@@ -130,7 +142,6 @@ function judging(command: Command): Command {
     .option('--all', 'rejected parts too, and passing checks in full')
     .option('--strict', 'only limits count: every other figure counts as missing')
     .option('--sources', 'where each figure comes from')
-    .option('--csv', 'the list as a table')
     .option('--assume <PART.figure=VALUE>', 'a figure for this run only (or =class), carried into the output', collect)
     .addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
 }
@@ -138,11 +149,6 @@ function judging(command: Command): Command {
 function count(text: string): number {
   if (!/^[1-9]\d{0,6}$/u.test(text)) throw new InvalidArgumentError('a whole number of parts is expected, such as 20');
   return Number(text);
-}
-
-function checkId(text: string): CheckId {
-  if (!/^[a-z-]+$/u.test(text)) throw new InvalidArgumentError('a check such as dc-error is expected');
-  return text as CheckId;
 }
 
 export { CommanderError };

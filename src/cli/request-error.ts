@@ -16,6 +16,11 @@ export class RequestError extends Error {
   }
 }
 
+/** An answer has one form. */
+export function twoForms({ json, csv }: { readonly json?: boolean; readonly csv?: boolean }): Problem[] {
+  return json === true && csv === true ? [commandProblem('C106', '--json and --csv: an answer has one form', { fix: 'one of the two', path: '--csv' })] : [];
+}
+
 /** One problem of the command line. */
 export function commandProblem(code: string, message: string, more: { readonly fix?: string; readonly path?: string } = {}): Problem {
   const place = more.path === undefined ? {} : { place: { path: more.path } };

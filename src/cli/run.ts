@@ -51,12 +51,18 @@ function answerFor(error: unknown, failure: Failure): number {
 }
 
 function refuse(error: RequestError, { argv, session, world }: Failure): number {
-  if (argv.includes('--json')) {
+  if (asksForJson(argv)) {
     world.write('stdout', problemsJson(error.problems));
     return error.exit;
   }
   world.write('stderr', renderProblems(error.problems, styleFor(session, colourOf(argv), 'stderr'), error.summary));
   return error.exit;
+}
+
+/** `--json` behind `--` is an operand. */
+function asksForJson(argv: readonly string[]): boolean {
+  const end = argv.indexOf('--');
+  return argv.slice(0, end < 0 ? argv.length : end).includes('--json');
 }
 
 /** The options that matter for how problems are written, read from the raw words since parsing may have failed. */
@@ -68,9 +74,17 @@ function colourOf(argv: readonly string[]): CommonOptions {
 }
 
 function fromCommander(error: CommanderError, { argv, names }: Failure): Problem {
+  if (error.code === 'commander.help') return noCommand(argv, names);
   const plain = error.message.replace(/^error: /u, '').replace(/\.$/u, '');
+  const value = /^option '(?:-\w, )?(--[\w-]+)[^']*' argument '(.*)' is invalid\.\s*(.*)$/su.exec(plain);
+  if (value !== null) return commandProblem('C104', `${value[1] ?? ''} ${value[2] ?? ''}: ${(value[3] ?? '').replace(/^Allowed choices are /u, 'accepted: ')}`, { fix: `railfit help ${argv[0] ?? ''}`.trim(), path: value[1] ?? '' });
   if (error.code !== 'commander.unknownCommand') return commandProblem('C104', plain, { fix: `railfit help ${argv[0] ?? ''}`.trim() });
   const word = argv.find((one) => !one.startsWith('-')) ?? '';
   const near = suggest(word, names);
   return commandProblem('C100', `unknown command ${word}`, { fix: near.length === 0 ? `one of ${names.join(', ')}` : `did you mean ${near.join(', ')}?` });
+}
+
+/** Options alone. */
+function noCommand(argv: readonly string[], names: readonly string[]): Problem {
+  return commandProblem('C100', `no command: ${argv.join(' ')} says how, not what`, { fix: `one of ${names.join(', ')}` });
 }

@@ -1,8 +1,10 @@
-import { readFileSync } from 'node:fs';
+import { readFile } from 'node:fs/promises';
 import { buildStage, readStage, type Override, type Stage, type StageSpec } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { EXIT } from './exit-code.js';
 import { commandProblem, RequestError } from './request-error.js';
+import { decodeStage } from './decode-stage.js';
+import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
 /** The options that override the stage file. */
 export interface StageOptions {
@@ -47,11 +49,11 @@ export function overridesOf(options: StageOptions): { overrides: Override[]; pro
 }
 
 /** Reads the stage of a command: a file, `-` for standard input, or options alone. Everything wrong is reported at once. */
-export function readStageOf(operand: string | undefined, options: StageOptions): { spec: StageSpec; stage: Stage; file: string | null } {
+export async function readStageOf(operand: string | undefined, options: StageOptions): Promise<{ spec: StageSpec; stage: Stage; file: string | null }> {
   const { overrides, problems } = overridesOf(options);
   const before = [...(options.already ?? []), ...problems];
-  const text = operand === undefined ? null : textOf(operand);
-  const file = operand === undefined ? null : operand === '-' ? 'standard input' : operand;
+  const text = operand === undefined ? null : await textOf(operand);
+  const file = operand === undefined ? null : operand === STDIN ? STDIN_NAME : operand;
   if (text === null && overrides.length === 0) throw refused([...before, noStage()]);
   const read = readStage(text, { overrides, ...(file === null ? {} : { file }) });
   if (!read.ok) throw refused([...before, ...read.problems]);
@@ -74,10 +76,11 @@ function noStage(): Problem {
   return commandProblem('C103', 'no stage: neither a file nor options that describe one', { fix: 'railfit shortlist stage.yaml, or --topology follower --supply "5 V" --input "1..4 V"' });
 }
 
-function textOf(operand: string): string {
+async function textOf(operand: string): Promise<string> {
   try {
-    return readFileSync(operand === '-' ? 0 : operand, 'utf8');
+    return decodeStage(operand === STDIN ? await readStandardInput() : await readFile(operand), operand === STDIN ? STDIN_NAME : operand);
   } catch (error) {
+    if (error instanceof RequestError) throw error;
     throw new RequestError([unreadable(operand, error)], EXIT.surroundings, `The stage could not be read. (exit ${EXIT.surroundings})`);
   }
 }

@@ -21,6 +21,7 @@ export function dcError(stage: Stage): DcErrorDemand | null {
     noiseGain: stage.dcNoiseGain.max,
     kelvin: far.kelvin,
     temperature: far.at,
+    hottest: stage.temperature.max,
     positive: stage.seriesPositive,
     negative: stage.seriesNegative,
     tolerance: stage.resistorTolerance,

@@ -70,6 +70,12 @@ export interface OutputCurrentDemand extends NumberDemand {
   readonly corner: Corner;
 }
 
+/** Room the stage leaves between the inputs and V+, and how far below it they come at most, V. */
+export interface InputHighDemand extends NumberDemand {
+  readonly corner: Corner;
+  readonly farthest: number;
+}
+
 /** A peak current towards one rail: `high` is sourced, `low` is sunk. */
 export interface DirectedPeak {
   readonly side: 'low' | 'high';
@@ -100,6 +106,8 @@ export interface DcErrorDemand extends NumberDemand {
   readonly supply: { readonly min: number; readonly nominal: number; readonly max: number };
   /** °C farthest from 25 °C. */
   readonly temperature: number;
+  /** °C: there currents that double count. */
+  readonly hottest: number;
 }
 
 export interface SupplyCurrentDemand extends NumberDemand {
@@ -117,7 +125,7 @@ export interface Demands {
   readonly 'supply-high': NumberDemand;
   readonly 'supply-peak': NumberDemand;
   readonly 'input-low': NumberDemand;
-  readonly 'input-high': NumberDemand;
+  readonly 'input-high': InputHighDemand;
   readonly 'output-low': HeadroomDemand;
   readonly 'output-high': HeadroomDemand;
   readonly 'output-current': OutputCurrentDemand;

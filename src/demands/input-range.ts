@@ -1,7 +1,7 @@
 import { formatQuantity } from '../quantities/format.js';
 import type { Stage, Vertex } from '../stage/index.js';
 import { cornerOf } from './corner.js';
-import type { Corner, NumberDemand } from './demand.js';
+import type { Corner, InputHighDemand, NumberDemand } from './demand.js';
 
 const SOURCE = 'M1: common mode at the pins over all corners (Franco, Design with Operational Amplifiers and Analog Integrated Circuits, 3rd ed. 2002, ch. 1-2, from memory)';
 
@@ -18,11 +18,12 @@ export function inputLow(stage: Stage): CornerDemand {
 }
 
 /** Room the stage leaves between the input pins and V+, V. */
-export function inputHigh(stage: Stage): CornerDemand {
+export function inputHigh(stage: Stage): InputHighDemand {
   const room = (at: Vertex): number => at.supply - at.commonMode;
+  const farthest = Math.max(...stage.vertices.map(room));
   const vertex = least(stage.vertices, room);
   const because = `common mode ${formatQuantity(vertex.commonMode, 'V')} on a supply of ${formatQuantity(vertex.supply, 'V')}`;
-  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex) };
+  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex), farthest };
 }
 
 function least(vertices: readonly Vertex[], measure: (vertex: Vertex) => number): Vertex {

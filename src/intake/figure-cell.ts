@@ -32,7 +32,7 @@ function readFigureCell(cell: string, column: FigureColumn, decimal: 'point' | '
   if (isMissing(cell)) return UNKNOWN;
   const { field } = PARAMETERS[column.parameter];
   const number = readNumber(cell, field, contextOf(column.unit, decimal));
-  if (!number.ok) return number;
+  if (!number.ok) return { ok: false, fault: withUnit(number.fault, cell, column) };
   const stated = number.quantity.limit ?? number.end;
   if (stated !== null && stated !== column.limit) return { ok: false, fault: kindFault(cell, stated, column.limit) };
   const kept = possible(column.parameter, number.value);
@@ -40,6 +40,21 @@ function readFigureCell(cell: string, column: FigureColumn, decimal: 'point' | '
   const notes = [number.quantity.note, kept.note];
   return { ok: true, value: kept.value, notes: notes.filter((note) => note !== undefined) };
 }
+
+/** A wrong unit without a fix gets the first that can be read: per volt (`80 µV/V`), the prefix kept (100 mA → `100 mV`), the header's unit. */
+function withUnit(fault: CellFault, cell: string, { parameter, unit }: FigureColumn): CellFault {
+  if (fault.code !== 'Q004' || fault.fix !== undefined) return fault;
+  const { field, headerUnit, unit: si } = PARAMETERS[parameter];
+  const [, number, prefix = ''] = /^([<>≤≥]?\s*[+-]?[\d.]+)\s*([fpnµumkMG](?=\p{L}|Ω))?/u.exec(cell.trim()) ?? [];
+  if (number === undefined) return fault;
+  const kept = prefix !== '' && SIMPLE.has(si) ? [`${number} ${prefix}${si}`] : [];
+  const offers = [...(field === 'ratio' ? [`${cell.trim()}/V`] : []), ...kept, `${number} ${unit ?? headerUnit}`];
+  const fix = offers.find((offer) => parseQuantity(offer, field, {}).ok);
+  return fix === undefined ? fault : { ...fault, fix };
+}
+
+/** Units that take every prefix. */
+const SIMPLE: ReadonlySet<string> = new Set(['V', 'A', 'Hz', 'Ω', 'F']);
 
 export type NumberCell =
   | { readonly ok: true; readonly value: number; readonly end: 'min' | 'max' | null; readonly quantity: Quantity }

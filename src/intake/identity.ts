@@ -59,7 +59,7 @@ function sameLetters(a: string, b: string): boolean {
 function sameId(one: ReadPart, earlier: ReadPart): { fault: Found; repeated: boolean } {
   const differing = one.record.cells.flatMap((cell, index) => {
     const other = earlier.record.cells[index] ?? '';
-    return cell.trim() === other.trim() ? [] : [`${columnLetter(index + 1)} (${other.trim()}, ${cell.trim()})`];
+    return cell.trim() === other.trim() ? [] : [`${columnLetter(index + 1)} (${quoted(other)}, then ${quoted(cell)})`];
   });
   const row = earlier.record.row;
   if (differing.length > 0) {
@@ -69,6 +69,9 @@ function sameId(one: ReadPart, earlier: ReadPart): { fault: Found; repeated: boo
   const fault = { code: 'I401', reason: `identical to row ${row}; kept once`, fix: `delete row ${one.record.row}` };
   return { fault: { field: 'id', severity: 'warning', fault }, repeated: true };
 }
+
+/** A cell in quotes, so that commas inside it do not run into the list. */
+const quoted = (cell: string): string => `"${cell.trim()}"`;
 
 function clash(id: string, earlier: ReadPart): Found {
   return error('I403', `${id} is ${earlier.part.id} of row ${earlier.record.row} apart from case or spaces`, earlier.part.id);
@@ -80,9 +83,13 @@ function lookAlike(id: string, earlier: ReadPart): Found {
 }
 
 function reserved({ id }: Part, { tier, genericIds }: ListOptions): Found | null {
-  if (tier === 'generic' || genericIds?.has(id) !== true) return null;
-  return error('I405', `${id} is the id of a generic set that comes with railfit`, 'another id; name the set in a class column');
+  if (tier === 'generic') return null;
+  const fix = 'another id; name the set in a class column';
+  if (genericIds?.has(id) === true) return error('I405', `${id} is the id of a generic set that comes with railfit`, fix);
+  return RESERVED.test(id) ? error('I405', `${id}: GX- is reserved for generic sets, also for those to come`, fix) : null;
 }
+
+const RESERVED = /^GX-/iu;
 
 function unknownClass(part: Part, classes: ReadonlySet<string> | undefined): Found | null {
   if (part.class === null || classes === undefined || classes.has(part.class)) return null;

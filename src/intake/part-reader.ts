@@ -49,10 +49,13 @@ function identityReader(field: IdentityField, { tier }: ListOptions): CellReader
 const channelsCell: CellReader = (draft, cell, report) => {
   if (isMissing(cell)) return;
   const number = readNumber(cell, 'count', {});
-  if (!number.ok) return report(number.fault, 'error');
-  if (Number.isInteger(number.value) && number.value > 0) draft.channels = number.value;
-  else report({ code: 'I513', reason: `${cell.trim()} is not a number of amplifiers in one package`, fix: '1' }, 'error');
+  if (!number.ok && /[^\d.,]/u.test(cell.trim())) return report(number.fault, 'error');
+  if (number.ok && Number.isInteger(number.value) && number.value > 0 && number.value <= MOST_CHANNELS) draft.channels = number.value;
+  else report({ code: 'I513', reason: `${cell.trim()} is not a number of amplifiers in one package`, fix: '1, 2 or 4; empty if unknown' }, 'error');
 };
+
+/** No package holds more amplifiers than this (common practice: one, two or four). */
+const MOST_CHANNELS = 8;
 
 function figureCell(column: FigureColumn, decimal: 'point' | 'comma'): CellReader {
   const { parameter, limit: kind, condition } = column;

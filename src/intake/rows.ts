@@ -1,4 +1,5 @@
 import type { Figure } from '../parts/figures.js';
+import { PARAMETERS } from '../parts/figures.js';
 import type { CellFault } from './cell-fault.js';
 import { cellProblem } from './cell-fault.js';
 import { contradictions } from './figure-rules.js';
@@ -35,13 +36,22 @@ interface PartReading extends Pick<RowReading, 'columns' | 'log'> {
 function readRow(record: ListRecord, { readPart, columns, log }: PartReading): ReadPart {
   const found: [ListColumn, CellFault, 'error' | 'warning'][] = [];
   const part = readPart(record, (column, fault, severity) => void found.push([column, fault, severity]));
-  for (const { figure, fault, severity } of contradictions(part.figures)) {
+  for (const { figure, fault, severity } of contradictions(part.figures, (one) => asWritten(one, record, columns))) {
     const column = columns.find((one) => isColumnOf(one, figure));
     if (column !== undefined) found.push([column, fault, severity]);
   }
   const place = { file: log.file, record, part: part.id === '' ? null : part.id };
   for (const [column, fault, severity] of found) log.add(cellProblem(fault, { ...place, column }, severity));
   return { part, record };
+}
+
+/** `3 mV (B2)`: the cell as written, the unit of the header where it has none, and where it stands. */
+function asWritten(figure: Figure, { cells, row }: ListRecord, columns: readonly ListColumn[]): string {
+  const column = columns.find((one) => isColumnOf(one, figure));
+  if (column?.reading.kind !== 'figure') return '';
+  const cell = (cells[column.number - 1] ?? '').trim();
+  const unit = /\p{L}|[%°Ω]/u.test(cell) ? null : (column.reading.unit ?? PARAMETERS[figure.parameter].headerUnit);
+  return `${cell}${unit === null ? '' : ` ${unit}`} (${column.letter}${row})`;
 }
 
 function isColumnOf({ reading }: ListColumn, { parameter, kind, condition }: Figure): boolean {

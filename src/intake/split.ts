@@ -1,5 +1,7 @@
 import { parse } from 'csv-parse/sync';
 import type { CsvError, Info } from 'csv-parse/sync';
+import type { Trial } from './delimiter.js';
+import { bestTrial } from './delimiter.js';
 import type { Delimiter, ListRecord } from './list.js';
 
 /** A record that could not be taken apart. */
@@ -16,6 +18,8 @@ export interface SplitText {
   /** Header first. Blank rows are records with one empty cell. */
   readonly records: readonly ListRecord[];
   readonly faults: readonly SplitFault[];
+  /** Present when it cannot be told what separates the cells: what each delimiter of the header gives. */
+  readonly undecided?: readonly Trial[];
 }
 
 interface Parsed {
@@ -23,10 +27,21 @@ interface Parsed {
   readonly info: Info;
 }
 
-/** Takes a CSV apart (RFC 4180, with `;` or tab where the header has no comma) and finds the physical line of every record. */
+/** Takes a CSV apart (RFC 4180, also with `;` or tab) and finds the physical line of every record. */
 export function splitList(text: string, bytes: Uint8Array): SplitText {
-  const delimiter = delimiterOf(text);
+  const [first, ...others] = delimitersOf(text);
   const lineAt = lineFinder(bytes);
+  const split = splitAt(first, bytes, lineAt);
+  if (others.length === 0) return split;
+  const splits = [split, ...others.map((delimiter) => splitAt(delimiter, bytes, lineAt))];
+  const trials = splits.map(trialOf);
+  // A header alone is refused anyway, for having no rows.
+  if (trials.every(({ rows }) => rows === 0)) return split;
+  const best = bestTrial(trials);
+  return splits.find(({ delimiter }) => delimiter === best?.delimiter) ?? { ...split, undecided: trials };
+}
+
+function splitAt(delimiter: Delimiter, bytes: Uint8Array, lineAt: (offset: number) => number): SplitText {
   const faults: SplitFault[] = [];
   const parsed = parse(bytes, {
     delimiter,
@@ -39,11 +54,25 @@ export function splitList(text: string, bytes: Uint8Array): SplitText {
   return { delimiter, records: place(parsed, faults, lineAt), faults };
 }
 
-function delimiterOf(text: string): Delimiter {
+/** The delimiters that stand in the header. Any of them may be part of a name: `(mV) @ 10 kΩ, 5 V`. */
+function delimitersOf(text: string): [Delimiter, ...Delimiter[]] {
   const header = headerText(text);
-  if (header.includes(',')) return ',';
-  if (header.includes(';')) return ';';
-  return header.includes('\t') ? '\t' : ',';
+  const [first = ',', ...others] = DELIMITERS.filter((delimiter) => header.includes(delimiter));
+  return [first, ...others];
+}
+
+const DELIMITERS = [',', ';', '\t'] as const;
+
+function trialOf({ delimiter, records, faults }: SplitText): Trial {
+  const header = records.find(({ row }) => row === 1)?.cells ?? [];
+  const columns = header.length;
+  const hasId = header.some((cell) => cell.trim().toLowerCase() === 'id');
+  const counts = records.filter(({ row, cells }) => row > 1 && cells.some((cell) => cell.trim() !== '')).map(({ cells }) => cells.length);
+  const often = new Map<number, number>();
+  for (const count of counts) often.set(count, (often.get(count) ?? 0) + 1);
+  const [usual = null] = [...often].sort((a, b) => b[1] - a[1]).map(([count]) => count);
+  const broken = faults.filter(({ row }) => row > 1).length;
+  return { delimiter, columns, rows: counts.length + broken, fitting: often.get(columns) ?? 0, usual, hasId };
 }
 
 /** The first record without what stands in quotes. */

@@ -1,13 +1,16 @@
 import type { Problem } from '../quantities/problem.js';
 import { cellProblem } from './cell-fault.js';
 import { columnLetter } from './column-letter.js';
+import type { Trial } from './delimiter.js';
+import { trialWords } from './delimiter.js';
 import type { ListColumn, ListRecord } from './list.js';
 import type { ProblemLog } from './problem-log.js';
 import { LIMITS } from './list.js';
 import type { SplitFault, SplitText } from './split.js';
 
 /** Faults of the file's structure. While there is one, no cell is read: its errors would be noise. */
-export function structureProblems({ records, faults }: SplitText, file: string): Problem[] {
+export function structureProblems({ records, faults, undecided }: SplitText, file: string): Problem[] {
+  if (undecided !== undefined) return [delimiterProblem(undecided, file)];
   const [header, ...rows] = records;
   const width = header === undefined ? null : { all: header.cells.length, named: namedWidth(header), id: idIndex(header) };
   return [
@@ -68,6 +71,11 @@ function quoteProblem({ code, line, row, column }: SplitFault, file: string): Pr
       : `a quote in the middle of column ${letter}: inside a cell it is doubled, and the whole cell is quoted`;
   const fix = code === 'I303' ? 'close the quote at the end of the cell' : 'write 5" reel as "5"" reel"';
   return { code, severity: 'error', message, fix, place: { file, line, row, column, columnLetter: letter } };
+}
+
+function delimiterProblem(trials: readonly Trial[], file: string): Problem {
+  const message = `what separates the cells cannot be told; split ${trials.map(trialWords).join('; ')}`;
+  return { code: 'I306', severity: 'error', message, fix: 'one separator in the whole file, and quotes around a cell or header that holds it', place: { file, line: 1 } };
 }
 
 function raggedProblem(record: ListRecord, width: Width, file: string): Problem | null {

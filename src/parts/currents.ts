@@ -35,6 +35,9 @@ function doubles(test: PartUnderTest): boolean {
   return first !== undefined && first.value < FET_BIAS_LIMIT;
 }
 
+/** The word that tells a doubled current from a printed one. */
+export const DOUBLING = 'doubling';
+
 function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Reading {
   const growth = 2 ** (kelvin / DOUBLING_KELVIN);
   const best = figure.assumed === true ? bestPossible(figure) : figure.value;
@@ -42,7 +45,7 @@ function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Readi
   const value = test.outlook === 'optimistic' ? best : worst * growth;
   const steps = [
     ...(figure.kind === 'typ' ? [`typical ${factorText(derate({ ...figure, value: 1 }))}`] : []),
-    ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, doubling per ${DOUBLING_KELVIN} K`] : []),
+    ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, ${DOUBLING} per ${DOUBLING_KELVIN} K`] : []),
   ];
   const basis = weakest([basisOf(figure, test.operating), ...(kelvin > 0 ? (['estimated'] as const) : [])]);
   return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, steps.length === 0 ? null : steps.join(', ')) };

@@ -15,6 +15,8 @@ export interface HeadroomQuestion {
 export interface HeadroomReading {
   readonly value: number | null;
   readonly bound: number | null;
+  /** Heaviest current the points that count here were measured at, A; null without points, and for a value assumed at any current. */
+  readonly covers: number | null;
   readonly basis: Basis;
   readonly slot: string | null;
   readonly how: string | null;
@@ -30,7 +32,7 @@ interface Placed {
 
 interface SetReading extends HeadroomReading {
   /** The set's heaviest point lies at or beyond the current asked. */
-  readonly covers: boolean;
+  readonly reached: boolean;
 }
 
 /** How far beyond its heaviest point a set may be drawn on, as a factor of that point's current. */
@@ -42,6 +44,8 @@ const TIGHT = 1e-9;
 /** Reads a part's head-room curves once, then answers for any vertex. */
 export function headroomCurve(test: PartUnderTest, side: Side): (question: HeadroomQuestion) => HeadroomReading {
   const points = headroomPoints(test, side);
+  const assumed = points.find(({ anywhere }) => anywhere);
+  if (assumed !== undefined) return () => ({ value: assumed.value, bound: null, covers: null, basis: assumed.basis, slot: assumed.slot, how: assumed.how });
   return (question) => combine(setsAround(points, side, question).map((set) => readSet(set, test.outlook, question)));
 }
 
@@ -95,10 +99,11 @@ function readSet(set: PointSet, outlook: Outlook, question: HeadroomQuestion): S
   if (heaviest === undefined) throw new RangeError('a head-room set without points');
   const scaled = set.scale === 1 ? [] : [scale === 1 ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(set.scale.toPrecision(4))}`];
   const estimated: Basis[] = set.scale === 1 ? [] : ['estimated'];
-  const covers = question.current <= heaviest.current * (1 + TIGHT);
-  const inside = covers ? interpolate(points, question.current) : beyond(points, outlook, question.current);
+  const reached = question.current <= heaviest.current * (1 + TIGHT);
+  const inside = reached ? interpolate(points, question.current) : beyond(points, outlook, question.current);
   return {
-    covers,
+    reached,
+    covers: heaviest.current,
     value: inside.value,
     bound: heaviest.value,
     basis: weakest([...inside.basis, ...estimated]),
@@ -141,14 +146,14 @@ function beyond(points: readonly Placed[], outlook: Outlook, current: number): I
 
 /** The smaller of the bounding sets; one that ends before the current counts only if all do. */
 function combine(sets: readonly SetReading[]): HeadroomReading {
-  const covering = sets.filter((set) => set.covers);
+  const covering = sets.filter((set) => set.reached);
   const counting = covering.length > 0 ? covering : sets;
   const size = (set: SetReading): number => set.value ?? Number.POSITIVE_INFINITY;
   const least = counting.reduce<SetReading | null>((best, next) => (best === null || size(next) < size(best) ? next : best), null);
-  if (least === null) return { value: null, bound: null, basis: 'guaranteed', slot: null, how: null };
+  if (least === null) return { value: null, bound: null, covers: null, basis: 'guaranteed', slot: null, how: null };
   if (least.value !== null) return least;
-  const bound = Math.min(...counting.map((set) => set.bound ?? Number.POSITIVE_INFINITY));
-  return { ...least, bound };
+  const lowest = counting.reduce((best, next) => ((next.bound ?? 0) < (best.bound ?? 0) ? next : best));
+  return { ...lowest, covers: Math.max(...counting.map((set) => set.covers ?? 0)) };
 }
 
 function joined(steps: readonly (string | null)[]): string | null {

@@ -19,6 +19,8 @@ export interface HeadroomPoint {
   readonly how: string | null;
   /** Measured with the load helping towards the rail. */
   readonly assisted: boolean;
+  /** Assumed for this run without a load: it holds at whatever current flows. */
+  readonly anywhere: boolean;
 }
 
 /** A point that states no load is taken as 10 kΩ to mid-supply (assumed; the best possible is no loss at all). */
@@ -50,6 +52,7 @@ function pointOf(test: PartUnderTest, side: Side, figure: Figure): HeadroomPoint
   const factor = away ? 1 + HEADROOM_PER_KELVIN * distanceFrom(25, test.operating) : 1;
   const bases: Basis[] = [basisOf(figure, test.operating)];
   if (away) bases.push('estimated');
+  const anywhere = isAnywhere(figure);
   if (load === undefined || supply === undefined) bases.push('assumed');
   const pessimistic = (figure.kind === 'typ' ? derateHeadroom(figure.value) : figure.value) * factor;
   const best = load === undefined || figure.assumed === true ? 0 : figure.value;
@@ -62,8 +65,11 @@ function pointOf(test: PartUnderTest, side: Side, figure: Figure): HeadroomPoint
     slot: figureSlot(figure),
     how: howOf(test.outlook, figure, factor),
     assisted: load?.kind === 'resistance' && load.to === (side === 'low' ? 'ground' : 'supply'),
+    anywhere,
   };
 }
+
+const isAnywhere = (figure: Figure): boolean => figure.assumed === true && figure.condition.load === undefined;
 
 function howOf(outlook: Outlook, figure: Figure, factor: number): string | null {
   const derated = [
@@ -71,6 +77,7 @@ function howOf(outlook: Outlook, figure: Figure, factor: number): string | null 
     ...(factor === 1 ? [] : [`25 °C figure × ${Number(factor.toPrecision(4))}`]),
   ];
   const read = howRead(outlook, figure, derated.length === 0 ? null : derated.join(', '));
+  if (isAnywhere(figure)) return 'at whatever current flows';
   const steps = [
     ...(read === null ? [] : [read]),
     ...(figure.condition.load === undefined ? ['load not stated: 10 kΩ to mid-supply'] : []),

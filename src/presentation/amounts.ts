@@ -1,4 +1,4 @@
-import { formatComparison, formatDecibels, formatPercent, formatQuantity, formatRange, type FormatOptions } from '../quantities/format.js';
+import { formatComparison, formatDecibels, formatPercent, formatQuantity, type FormatOptions } from '../quantities/format.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import type { Price } from '../parts/part.js';
 import { GLUE, held } from './spelling.js';
@@ -7,12 +7,26 @@ import { DECIBEL_FIGURES } from './words.js';
 /** A number with its unit, held together. */
 export function amount(value: number, unit: string, options: FormatOptions = {}): string {
   if (!Number.isFinite(value)) return 'no limit';
-  return held(formatQuantity(value, unit, options));
+  return held(inCents(formatQuantity(value, unit, options), unit));
 }
 
-export function range(min: number, max: number, unit: string): string {
-  return min === max ? amount(min, unit) : held(formatRange(min, max, unit));
+/** Money has two decimals or more: 0.10 EUR, not 0.1 EUR. */
+function inCents(text: string, unit: string): string {
+  if (!/^[A-Z]{3}$/u.test(unit)) return text;
+  const [number = '', ...rest] = text.split(' ');
+  const [whole = '', decimals = ''] = number.split('.');
+  return [`${whole}.${decimals.padEnd(2, '0')}`, ...rest].join(' ');
 }
+
+/** Both ends; of a narrow range with the digits that tell them apart: 2.495 V..2.505 V. */
+export function range(min: number, max: number, unit: string): string {
+  if (min === max) return amount(min, unit);
+  const digits = Math.ceil(Math.log10(Math.max(Math.abs(min), Math.abs(max)) / (max - min))) + 1;
+  return held(`${formatQuantity(min, unit, { digits: within(digits) })}..${formatQuantity(max, unit, { digits: within(digits) })}`);
+}
+
+/** Three digits as everywhere, never more than a voltage is known to. */
+const within = (digits: number): number => Math.min(6, Math.max(3, digits));
 
 /** A figure of a part: rejections and gains in decibels. */
 export function figureAmount(figure: string, value: { readonly value: number; readonly unit: string }, options: FormatOptions = {}): string {
@@ -20,13 +34,23 @@ export function figureAmount(figure: string, value: { readonly value: number; re
   return amount(value.value, value.unit, options);
 }
 
-/** Offered and required as they compare; null when one is missing. `known` stands in for an offered bound. */
-export function compared(verdict: Verdict): { readonly offered: string; readonly required: string } | null {
+/** Offered and required as they compare; null when one is missing. `known` stands in for an offered bound, and what is met exactly reads equal. */
+export function compared(verdict: Verdict): Comparison | null {
   const value = typeof verdict.offered === 'number' ? verdict.offered : verdict.known;
   if (value === null || typeof verdict.required !== 'number' || verdict.unit === null) return null;
   if (verdict.sense !== 'at-least' && verdict.sense !== 'at-most') return null;
-  const [offered, required] = formatComparison(value, verdict.required, verdict.unit, verdict.sense).map(held);
-  return { offered: offered ?? '', required: required ?? '' };
+  const counts = verdict.spare === 0 ? verdict.required : value;
+  const [offered, required, difference] = formatComparison(counts, verdict.required, verdict.unit, verdict.sense);
+  const { unit } = verdict;
+  const print = (text: string): string => held(inCents(text, unit));
+  return { offered: print(offered), required: print(required), difference: print(difference) };
+}
+
+/** Two numbers as printed, and what lies between them. */
+export interface Comparison {
+  readonly offered: string;
+  readonly required: string;
+  readonly difference: string;
 }
 
 /** A fraction in percent, or as a multiple where percent says little. */

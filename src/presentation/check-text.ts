@@ -6,7 +6,7 @@ import { safeLine } from './safe-text.js';
 import { GLUE, glued, spelled } from './spelling.js';
 import { toned, type Style } from './style.js';
 import { termLines, type Origins } from './term-text.js';
-import { comparisonText, cornerText, shortfall, spareText, turningText } from './verdict-words.js';
+import { comparisonText, conditionOf, cornerText, shortfall, spareText, turningValue } from './verdict-words.js';
 import { figureWords, passingSide, REASON_WORDS } from './words.js';
 
 const INDENT = 6;
@@ -78,10 +78,11 @@ function cornerLines({ worstAt }: Verdict, style: Style): string[] {
 
 /** A fail stands on the best reading; what the worst one gives stands beside it. */
 function readingLines(verdict: Verdict, style: Style): string[] {
-  const { offered, offeredBest, unit, terms } = verdict;
+  const { offered, unit, terms } = verdict;
+  const other = otherReading(verdict);
   const lines: string[] = [];
-  if (typeof offered === 'number' && typeof offeredBest === 'number' && unit !== null && offered !== offeredBest) {
-    lines.push(`Figures count as printed here; with deratings and estimates it would be ${amount(offeredBest, unit)}.`);
+  if (typeof offered === 'number' && other !== null && unit !== null && offered !== other) {
+    lines.push(`Figures count as printed here; with deratings and estimates it would be ${amount(other, unit)}.`);
   }
   if (terms.some((term) => term.basis === 'borrowed')) lines.push('Borrowed terms count as nothing here: the verdict does not depend on them.');
   return lines.flatMap((line) => paragraph(line, style, inside));
@@ -91,15 +92,23 @@ function turningLines(verdict: Verdict, style: Style): string[] {
   return [...bestReading(verdict), ...turning(verdict)].flatMap((line) => paragraph(line, style, inside));
 }
 
-function bestReading({ offered, offeredBest, unit }: Verdict): string[] {
-  if (typeof offered !== 'number' || typeof offeredBest !== 'number' || unit === null || offered === offeredBest) return [];
-  return [`Read at its best the figure gives ${amount(offeredBest, unit)}.`];
+function bestReading(verdict: Verdict): string[] {
+  const { offered, unit } = verdict;
+  const best = otherReading(verdict);
+  if (typeof offered !== 'number' || best === null || unit === null || offered === best) return [];
+  return [`Read at its best the figure gives ${amount(best, unit)}.`];
+}
+
+/** The other reading at the corner that is shown. */
+function otherReading({ otherThere, offeredBest }: Verdict): number | null {
+  if (otherThere !== undefined) return otherThere;
+  return typeof offeredBest === 'number' ? offeredBest : null;
 }
 
 function turning({ decidesAt }: Verdict): string[] {
   if (decidesAt === null) return [];
   const [within, outside] = passingSide(decidesAt.figure, decidesAt.kind) === 'less' ? ['below', 'above'] : ['above', 'below'];
-  const value = turningText(decidesAt).replace(/ or\u00a0(?:less|more)$/u, '');
+  const value = `${turningValue(decidesAt)}${conditionOf(decidesAt)}`;
   return [`Decides at: ${figureWords(decidesAt.figure, decidesAt.kind)} of ${value}. At or ${within} it this check passes, ${outside} it does not.`];
 }
 

@@ -9,10 +9,10 @@ export interface Offer {
   readonly why: string;
 }
 
-/** `railfit explain PART stage.yaml`, every word quoted for a shell where it must be. */
+/** `railfit explain PART stage.yaml`, with the options of the answer it follows; every word quoted for a shell where it must be. */
 export function commandOf(context: CommandContext, command: readonly string[], more: readonly string[] = []): string[] {
   const stage = context.stageFile === null ? [] : [context.stageFile === 'standard input' ? '-' : context.stageFile];
-  return [context.command, ...command, ...stage, ...more].map(shellWord);
+  return [context.command, ...command, ...stage, ...(context.changes ?? []), ...more, ...(context.catalog ?? [])].map(shellWord);
 }
 
 /** POSIX quoting; left alone when no shell would change it. */
@@ -24,11 +24,12 @@ function shellWord(word: string): string {
 /** Commands under `Next`, each pasteable: a long one goes on after a backslash. What it is for stands beside where all have room. */
 export function nextLines(offers: readonly Offer[], style: Style): string[] {
   const commands = offers.map(({ words }) => spelled(words.join(PASTE), style));
-  const widest = Math.max(0, ...commands.map(displayWidth));
   const lead = (at: number): string => padded(at === 0 ? 'Next' : '', LEAD);
   const line = (at: number, width: number): string => `${lead(at)}${padded(commands[at] ?? '', width)}${' '.repeat(GAP)}${spelled(offers[at]?.why ?? '', style)}`;
   const fits = (text: string): boolean => !isNarrow(style) && displayWidth(text) <= style.width;
-  const width = offers.every((_, at) => fits(line(at, widest))) ? widest : 0;
+  const widths = commands.map(displayWidth).sort((a, b) => b - a);
+  // The widest column in which every command not wider than it keeps its reason on the line.
+  const width = widths.find((one) => commands.every((command, at) => displayWidth(command) > one || fits(line(at, one)))) ?? 0;
   return offers.flatMap(({ words }, at) => (fits(line(at, width)) ? [line(at, width)] : commandLines(words, style, lead(at))));
 }
 

@@ -5,7 +5,7 @@ import { amount, range } from './amounts.js';
 import { displayWidth, flow, LABEL, padded, paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { finished, glued } from './spelling.js';
-import { assumptionLines, stageLines } from './stage-text.js';
+import { assumptionLines, stageCautions, stageLines } from './stage-text.js';
 import type { Style } from './style.js';
 import { tableLines } from './table.js';
 import { checkWords } from './words.js';
@@ -21,7 +21,7 @@ export function renderDemands({ stage, demands }: DemandsReport, style: Style): 
     { title: 'because', name: '', wraps: true },
   ] as const;
   const blocks = [
-    stageLines(stage, style),
+    [...stageLines(stage, style), ...stageCautions(stage, style)],
     cornerLines(stage, style),
     tableLines({ columns, rows }, style),
     noRoom(demands, style),
@@ -31,13 +31,13 @@ export function renderDemands({ stage, demands }: DemandsReport, style: Style): 
   return finished(blocks.flatMap((block) => (block.length === 0 ? [] : [...block, ''])), style);
 }
 
-/** Rounded to the unsafe side: what is asked is never printed smaller than it is. */
-function requiredText(demand: AnyDemand): string {
+/** To nearest, as in the sentence beside it: the same number reads the same. */
+export function requiredText(demand: AnyDemand): string {
   if (demand.sense === 'one-of') return demand.required.map(safeLine).join(' or ');
   if (typeof demand.required !== 'number' || demand.unit === null) return 'not judged by this version';
   const words = demand.sense === 'at-least' ? 'at least' : 'at most';
   const unbuilt = 'built' in demand ? ' (not judged by this version)' : '';
-  return `${words} ${amount(demand.required, demand.unit, { round: demand.sense === 'at-least' ? 'up' : 'down' })}${unbuilt}`;
+  return `${words} ${amount(demand.required, demand.unit)}${unbuilt}`;
 }
 
 function cornerLines(stage: Stage, style: Style): string[] {

@@ -46,12 +46,27 @@ function railReasons(report: Report): string[] {
 
 function railReason(report: Report, check: 'output-low' | 'output-high'): string {
   const { stage } = report;
+  const beyond = beyondRail(stage, check);
+  if (beyond !== null) return beyondReason(beyond, check);
   const reach = reachOf(report, check);
   const asked = check === 'output-low' ? lowest(stage) : highest(stage);
   const kept = stage.asked.margins.outputHeadroom;
   const margin = kept === undefined || kept.value === 0 ? '' : `, with ${amount(kept.value, 'V')} kept free`;
   const nearest = reach === null ? '' : reachSentence(reach);
   return `No amplifier on this supply reaches ${asked}${margin}: an output stage always keeps a little of the rail. limits.swingLoss may give up that end of the swing.${nearest}`;
+}
+
+/** The worst corner, where the output asked for lies outside the supply itself; null where it lies inside. */
+function beyondRail({ vertices }: Stage, check: 'output-low' | 'output-high'): Vertex | null {
+  const room = (at: Vertex): number => (check === 'output-low' ? at.output : at.supply - at.output);
+  const worst = vertices.reduce((best, next) => (room(next) < room(best) ? next : best));
+  return room(worst) < -1e-9 * worst.supply ? worst : null;
+}
+
+function beyondReason({ supply, reference, output }: Vertex, check: 'output-low' | 'output-high'): string {
+  const corner = [`supply ${amount(supply, 'V')}`, ...(reference === 0 ? [] : [`reference ${amount(reference, 'V')}`]), 'resistors at their ends'];
+  const end = check === 'output-low' ? 'below ground' : 'above the supply';
+  return `At the worst corner (${corner.join(', ')}) the output is asked to ${amount(output, 'V')}, ${end}: lower the gain, tighten the tolerance, or let input and reference share one source.`;
 }
 
 function lowest({ vertices }: Stage): string {
@@ -94,6 +109,7 @@ const RAILS: ReadonlySet<string> = new Set(['output-low', 'output-high']);
 
 /** What would have to be given up at the rails for a part that fails nothing else, V, rounded up; null when there is none. */
 export function swingLossToTry(report: Report): number | null {
+  if (beyondRail(report.stage, 'output-low') !== null || beyondRail(report.stage, 'output-high') !== null) return null;
   const short = report.rejected.flatMap((part) => {
     const failing = part.verdicts.filter((one) => one.outcome === 'fail');
     if (!failing.every((one) => RAILS.has(one.check))) return [];

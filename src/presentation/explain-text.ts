@@ -9,7 +9,7 @@ import { paragraph } from './layout.js';
 import { remedyLines } from './remedy-text.js';
 import { safeLine } from './safe-text.js';
 import { finished, glued, held } from './spelling.js';
-import { assumptionLines, stageInShort } from './stage-text.js';
+import { assumptionLines, stageCautions, stageInShort } from './stage-text.js';
 import { toned, type CommandContext, type Style } from './style.js';
 import type { Origins } from './term-text.js';
 import { counted } from './words.js';
@@ -20,7 +20,7 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
   const origins: Origins = { part: judged.part, origin: (partId, slot) => explanation.origin(partId, slot) };
   const of = (outcome: string): typeof judged.verdicts => judged.verdicts.filter((verdict) => verdict.outcome === outcome);
   const blocks = [
-    [...paragraph(verdictLine(explanation, style), style), ...aboutLines(explanation, style)],
+    [...paragraph(verdictLine(explanation, style), style), ...aboutLines(explanation, style), ...stageCautions(stage, style)],
     ...of('fail').map((verdict) => failingCheck(verdict, origins, style)),
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
     ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
@@ -54,8 +54,8 @@ function verdictLine({ judged, rank, counts }: Explanation, style: Style): strin
     const likely = judged.likely ? ' Likely to fit: with the figures of its class every check would pass.' : '';
     return `${id} ${toned('cannot be decided', 'open', style)}: ${number('pass')} of ${counted(total, 'check')} pass, ${open} open, ${fails(failing)}. It is not counted as fitting.${likely}`;
   }
-  const proof = judged.proof === 'limits' ? 'all of it on limits' : `${counted(judged.confirm.length, 'figure')} to confirm`;
-  return `${id} ${toned('fits', 'good', style)}: all ${counted(total, 'check')} pass, ${proof}. Rank ${rank ?? '?'} of ${counts.fit}.`;
+  const proof = judged.proof === 'limits' ? 'all of it on limits' : `${judged.confirm.length === 0 ? 'nothing' : counted(judged.confirm.length, 'figure')} to confirm`;
+  return `${id} ${toned('fits', 'good', style)}: all ${counted(total, 'check')} pass, ${proof}. Rank ${rank ?? '?'}; ${counted(counts.fit, 'part')} ${counts.fit === 1 ? 'fits' : 'fit'}.`;
 }
 
 function aboutLines({ judged, stage }: Explanation, style: Style): string[] {

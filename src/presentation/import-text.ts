@@ -1,10 +1,11 @@
-import type { ImportReport } from './import-json.js';
+import type { ImportReport, PartChange } from './import-json.js';
 import { safeText } from './safe-text.js';
+import { GLUE, spelled } from './spelling.js';
 import type { Style } from './style.js';
 
 /** What an import did, or why it did nothing; the faults themselves are listed apart. */
 export function renderImport(report: ImportReport, style: Style): string {
-  const lines = linesOf(report).map((line) => safeText(line));
+  const lines = linesOf(report).map((line) => spelled(safeText(line), style));
   return `${lines.flatMap((line) => wrapped(line, style.width)).join('\n')}\n`;
 }
 
@@ -16,14 +17,33 @@ function linesOf(report: ImportReport): string[] {
   if (report.outcome === 'no-change') {
     return file === '' ? ['Nothing to take back: no list was imported before. Nothing was changed.'] : [`${file}${hash}: no change. ${plural(counts.rows, 'part')}, as imported before.`];
   }
-  const tally = `${counts.added} added, ${counts.changed} changed, ${counts.removed} withdrawn, ${counts.unchanged} unchanged`;
-  if (report.outcome === 'dry-run') return [`${file}${hash}: ${plural(counts.rows, 'part')}; ${tally}.`, 'Dry run: nothing was written. Run again without --dry-run to import.'];
-  return [`Imported ${plural(counts.rows, 'part')} from ${file}${hash}: ${tally}.`, 'Next  railfit shortlist STAGE     railfit parts --tier approved     railfit import --undo'];
+  const named = [...changeLines(report.changes ?? []), ...withdrawnLines(report.withdrawn ?? [])];
+  if (report.outcome === 'dry-run') return [`${file}${hash}: ${plural(counts.rows, 'part')}; ${tally(counts)}.`, ...named, 'Dry run: nothing was written. Run again without --dry-run to import.'];
+  return [`Imported ${plural(counts.rows, 'part')} from ${file}${hash}: ${tally(counts)}.`, ...named, 'Next  railfit shortlist STAGE     railfit parts --tier approved     railfit import --undo'];
+}
+
+/** Counts that are not zero. */
+function tally({ added, changed, removed, unchanged }: ImportReport['counts']): string {
+  const all = [[added, 'added'], [changed, 'changed'], [removed, 'withdrawn'], [unchanged, 'unchanged']] as const;
+  return all.filter(([count]) => count > 0).map(([count, word]) => `${count} ${word}`).join(', ');
+}
+
+const NAMED = 10;
+
+function changeLines(changes: readonly PartChange[]): string[] {
+  const lines = changes.slice(0, NAMED).map(({ part, field, was, now }) => `  changed  ${part}: ${field}: ${was ?? 'empty'} → ${now ?? 'empty'}`);
+  return changes.length <= NAMED ? lines : [...lines, `  … and ${plural(changes.length - NAMED, 'more field')} changed`];
+}
+
+function withdrawnLines(ids: readonly string[]): string[] {
+  if (ids.length === 0) return [];
+  const more = ids.length <= NAMED ? '' : `, … and ${ids.length - NAMED} more`;
+  return [`  withdrawn  ${ids.slice(0, NAMED).join(', ')}${more}`];
 }
 
 function refusal({ refused, file }: ImportReport): string {
   const what = refused === undefined || refused.cells === 0 ? 'the file must be corrected first' : `${plural(refused.cells, 'cell')} in ${plural(refused.parts, 'part')} must be corrected first`;
-  return `${file} was not imported: ${what}. Nothing was changed. (exit 3)`;
+  return `${file} was not imported: ${what}. Nothing was changed. (exit${GLUE}3)`;
 }
 
 const plural = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? '' : 's'}`;

@@ -4,6 +4,7 @@ import type { Problem } from '../quantities/problem.js';
 import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js';
 import type { Confirmation, JudgedPart } from '../screening/index.js';
 import type { RankedPart } from '../ranking/index.js';
+import { hazardText } from './hazard-text.js';
 import { problemJson } from './problem-json.js';
 import { stageJson } from './stage-json.js';
 import { verdictJson, type OriginOf } from './verdict-json.js';
@@ -101,10 +102,11 @@ function confirmJson({ figure, basis, how, checks, needed }: Confirmation): obje
 }
 
 /** Cautions of the part as a whole; those of a check stand beside its verdict. */
-export function cautionsOf({ part, verdicts: all, current }: JudgedPart): string[] {
+export function cautionsOf({ part, verdicts: all, current, hazards }: JudgedPart): string[] {
   const wanted = all.find((verdict) => verdict.check === 'channels')?.required;
   return [
     ...(part.tier === 'generic' ? ['a generic set: a class of parts, not something to order'] : []),
+    ...hazards.map(hazardText),
     ...idleSections(part.channels ?? 1, typeof wanted === 'number' ? wanted : 1, current),
   ];
 }

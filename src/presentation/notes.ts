@@ -7,7 +7,7 @@ import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { glued } from './spelling.js';
 import type { Style } from './style.js';
-import { checkWords } from './words.js';
+import { checkWords, counted } from './words.js';
 
 /** What qualifies the answer: cautions, figures to confirm, parts that another one beats everywhere. */
 export function noteLines(report: Report, style: Style): string[] {
@@ -28,11 +28,17 @@ function checkCautions({ verdicts }: JudgedPart): string[] {
   return verdicts.flatMap((verdict) => verdict.cautions.map((caution) => `${checkWords(verdict.check)}: ${caution}`));
 }
 
-function confirmNotes(shown: readonly RankedPart[]): string[] {
-  return grouped(shown.filter(({ confirm }) => confirm.length > 0), ({ confirm }) => {
+/** Of so many parts the figures to confirm are listed. */
+const CONFIRMED = 3;
+
+function confirmNotes(all: readonly RankedPart[]): string[] {
+  const open = all.filter(({ confirm }) => confirm.length > 0);
+  const notes = grouped(open.slice(0, CONFIRMED), ({ confirm }) => {
     const which = confirm.length === 1 ? 'this one' : `these ${confirm.length}`;
     return [`${which} before release: ${confirm.map(confirmationText).join('; ')}`];
   });
+  const rest = open.length - CONFIRMED;
+  return rest > 0 ? [...notes, `${counted(rest, 'more part')} ${rest === 1 ? 'has' : 'have'} figures to confirm; "railfit explain PART" lists them`] : notes;
 }
 
 function dominatedNotes(shown: readonly RankedPart[]): string[] {

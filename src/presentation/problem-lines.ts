@@ -11,6 +11,11 @@ export function problemLines(problem: Problem, style: Style): string[] {
   return [...headLines(problem, sentenceOf(problem), style), ...whereLines(problem, style), ...caretLines(problem, style), ...fixLines(problem.fix, style)];
 }
 
+/** One problem of an answer: the place is the question, and the text stands above. */
+export function refusalLines({ place: _place, ...problem }: Problem, style: Style): string[] {
+  return [...headLines(problem, sentenceOf(problem), style), ...fixLines(problem.fix, style)];
+}
+
 /** One cause with its places, each with what stands there and what to put instead. */
 export function groupLines({ problems, total }: Cause, style: Style): string[] {
   const [first] = problems;

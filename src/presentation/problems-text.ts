@@ -2,24 +2,37 @@ import type { Problem } from '../quantities/problem.js';
 import { paragraph } from './layout.js';
 import { causesOf, type Cause } from './problem-causes.js';
 import { problemLines, groupLines } from './problem-lines.js';
-import { finished, glued } from './spelling.js';
+import { safeLine } from './safe-text.js';
+import { finished, GLUE, glued } from './spelling.js';
 import type { Style } from './style.js';
 
 const SHOWN = 10;
 
+/** What stands below the problems. */
+export interface ProblemsEnding {
+  readonly summary: string;
+  /** File that got every problem, when there is one. */
+  readonly written?: string;
+}
+
 /** Problems in the order given: what, where, the text with carets, the fix. One cause once; ten shown, the rest counted; the summary last. */
-export function renderProblems(problems: readonly Problem[], style: Style, summary: string): string {
+export function renderProblems(problems: readonly Problem[], style: Style, ending: string | ProblemsEnding): string {
+  const { summary, written }: ProblemsEnding = typeof ending === 'string' ? { summary: ending } : ending;
   const causes = causesOf(problems);
   const most = style.all ? Number.POSITIVE_INFINITY : SHOWN;
   const { shown, left } = cut(causes, most);
   const lines = shown.flatMap((cause) => [...causeLines(cause, style), '']);
-  const file = problems.some(({ place }) => place?.row !== undefined) ? ' (the full list: --errors FILE)' : ' (--all shows them)';
+  const all = written === undefined ? '' : `${problems.length === 1 ? '' : `all ${problems.length} `}written to ${safeLine(written)}`;
+  const file = all !== '' ? ` (${all})` : problems.some(({ place }) => place?.row !== undefined) ? ' (the full list: --errors FILE)' : ' (--all shows them)';
   return finished([
     ...lines,
     ...(left === 0 ? [] : [...paragraph(`… and ${left} more${file}`, style), '']),
-    ...(summary === '' ? [] : paragraph(glued(summary), style)),
+    ...(left === 0 && all !== '' ? [...paragraph(capital(all), style), ''] : []),
+    ...(summary === '' ? [] : paragraph(glued(summary).replace('(exit ', `(exit${GLUE}`), style)),
   ], style);
 }
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
 function causeLines(cause: Cause, style: Style): string[] {
   const [only] = cause.problems;

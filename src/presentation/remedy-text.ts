@@ -1,12 +1,14 @@
-import { figureSlot } from '../parts/figures.js';
+import { figureSlot, PARAMETERS, type Parameter } from '../parts/figures.js';
 import { asciiText } from '../quantities/ascii.js';
+import { formatQuantity } from '../quantities/format.js';
 import type { Explanation } from '../report.js';
+import type { TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { figureAmount } from './amounts.js';
 import { commandLines, commandOf } from './commands.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
-import { GLUE } from './spelling.js';
+import { GLUE, held } from './spelling.js';
 import type { CommandContext, Style } from './style.js';
 import { figureWords, passingSide } from './words.js';
 
@@ -36,19 +38,37 @@ function lookups(open: readonly Verdict[], explanation: Explanation): string[] {
   const sought = new Map<string, string>();
   for (const verdict of open) {
     const wanted = verdict.missing.length > 0 ? verdict.missing : verdict.decidesAt === null ? [] : [verdict.decidesAt];
-    for (const { figure, kind } of wanted) sought.set(`${figure}.${kind ?? ''}`, lookup({ figure, kind }, explanation));
+    for (const one of wanted) sought.set(`${one.figure}.${one.kind ?? ''}`, lookup(one, explanation));
   }
   return [...sought.values()];
 }
 
-function lookup({ figure, kind }: Verdict['missing'][number], explanation: Explanation): string {
+type Sought = Verdict['missing'][number] & Partial<Pick<TurningPoint, 'condition'>>;
+
+function lookup(sought: Sought, explanation: Explanation): string {
+  const { figure, kind } = sought;
   const { judged } = explanation;
   const slot = kind === null ? null : `${figure}.${kind}`;
   const origin = slot === null ? null : explanation.origin(judged.part.id, slot);
   const words = figureWords(figure, kind);
+  const header = pointHeader(sought);
+  if (header !== null && judged.part.tier === 'approved') return `look up the ${words} there, add the column "${header}" to your list, then import the list again`;
   if (origin?.kind === 'cell') return `look up the ${words} and put it in column ${origin.columnLetter} of row${GLUE}${origin.row} in ${safeLine(origin.file)}, then import the list again`;
-  if (judged.part.tier === 'generic') return `a generic set states no ${words}: look at a part of your own`;
+  if (judged.part.tier === 'generic') {
+    const states = judged.part.figures.some((known) => known.parameter === figure);
+    return states ? `what the generic set states of ${figureWords(figure)} does not settle it: look at a part of your own` : `a generic set states no ${words}: look at a part of your own`;
+  }
   return `look up the ${words}, give it a column in your list, then import the list again`;
+}
+
+/** Canonical header of a head-room point that would settle it: `output high headroom max (mV) @ 500 µA, 5 V`. */
+function pointHeader({ figure, kind, beyond, condition }: Sought): string | null {
+  const at = beyond ?? condition;
+  if (at === undefined || !(figure in PARAMETERS) || kind === null) return null;
+  const { words, headerUnit } = PARAMETERS[figure as Parameter];
+  // A point counts up to its own current and from its own supply on.
+  const load = at.current > 0 ? `${formatQuantity(at.current, 'A', { digits: 1, round: 'up' })}, ` : '';
+  return held(`${words} ${kind} (${headerUnit}) @ ${load}${formatQuantity(at.supply, 'V', { round: 'down' })}`);
 }
 
 function unbuilt(open: readonly Verdict[]): string[] {

@@ -10,7 +10,7 @@ import { legendLine, fitLines } from './fit-table.js';
 import { flow, paragraph } from './layout.js';
 import { noteLines } from './notes.js';
 import { finished, GLUE } from './spelling.js';
-import { assumptionLines, stageLines } from './stage-text.js';
+import { assumptionLines, stageCautions, stageLines } from './stage-text.js';
 import type { CommandContext, Style } from './style.js';
 import { undecidedLines } from './undecided-text.js';
 import { rejectedLines } from './rejected-text.js';
@@ -21,7 +21,7 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
   const fits = report.fit.length > 0;
   const blocks = [
     fits ? [] : [...emptyReason(report, style), ...paragraph(countsLine(report), style)],
-    stageLines(report.stage, style),
+    [...stageLines(report.stage, style), ...stageCautions(report.stage, style)],
     fits ? paragraph(countsLine(report), style) : [],
     [...fitLines(report, style), ...undecidedLines(report, style)],
     [...legendLine(report, style), ...orderLine(report, style)],
@@ -41,7 +41,7 @@ const FEW = 3;
 
 function countsLine(report: Report): string {
   const { parts, fit, undecided, rejected } = report.counts;
-  const lines = report.fit.length === fit ? '' : ` (${counted(report.fit.length, 'line')}: variants of one die stand together)`;
+  const lines = report.fit.length === fit ? '' : `, on ${counted(report.fit.length, 'line')} (packages of one die share a line)`;
   return `${fit} of ${counted(parts, 'part')} ${fit === 1 && parts === 1 ? 'fits' : 'fit'}${lines}, ${undecided} cannot be decided, ${rejected} ${rejected === 1 ? 'does' : 'do'} not fit.`;
 }
 
@@ -78,7 +78,9 @@ function offers(report: Report, context: CommandContext): Offer[] {
   const out = report.nearest[0] ?? report.rejected[0];
   const first: RankedPart | undefined = fit[0];
   const often = rejections[0];
-  const listing = context.stageFile === null || context.stageFile === 'standard input' ? null : context.stageFile;
+  // `parts` takes the stage as it stands in its file.
+  const asFiled = context.stageFile !== 'standard input' && (context.changes ?? []).length === 0;
+  const listing = asFiled ? context.stageFile : null;
   return [
     ...(first === undefined ? [] : [{ words: commandOf(context, ['explain', first.part.id]), why: 'every check of the first' }]),
     ...(first === undefined && undecided[0] !== undefined ? [{ words: commandOf(context, ['explain', undecided[0].part.id]), why: 'what is missing' }] : []),
@@ -93,5 +95,5 @@ function lossOffer(report: Report, context: CommandContext): Offer[] {
   const loss = report.fit.length > 0 ? null : swingLossToTry(report);
   if (loss === null) return [];
   const text = asciiText(formatQuantity(loss, 'V', { digits: 2, round: 'up' }));
-  return [{ words: commandOf(context, ['shortlist'], ['--set', `limits.swingLoss=${text.replace(' ', '')}`]), why: `to try: ${text} given up at each rail` }];
+  return [{ words: commandOf(context, ['shortlist'], ['--set', `limits.swingLoss=${text.replace(' ', '')}`]), why: `to try: gives up ${text} of swing at each rail` }];
 }

@@ -1,6 +1,6 @@
 import type { Stage } from '../stage/index.js';
 import { amount, range } from './amounts.js';
-import { flow, LABEL, labelled, padded } from './layout.js';
+import { flow, LABEL, labelled, padded, paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { GLUE, glued, held } from './spelling.js';
 import type { Style } from './style.js';
@@ -21,6 +21,11 @@ export function stageLines(stage: Stage, style: Style): string[] {
 /** The stage in one short sentence. */
 export function stageInShort(stage: Stage): string {
   return [...(stage.name === null ? [] : [`${safeLine(stage.name)}:`]), circuitOf(stage).join(', '), `on ${range(stage.supply.min, stage.supply.max, 'V')}`].join(' ');
+}
+
+/** What the stage does not do as asked, before anything is judged on it. */
+export function stageCautions({ cautions }: Stage, style: Style): string[] {
+  return cautions.flatMap((sentence) => paragraph(glued(safeLine(sentence)), style, { lead: 'caution: ', indent: 9 }));
 }
 
 /** Assumptions of the stage, one sentence each, then what the user assumed and how it was judged. */
@@ -50,15 +55,17 @@ function inputsOf({ vertices, coupling }: Stage): string[] {
   return names.map((name) => {
     const values = vertices.map((vertex) => vertex.inputs[name] ?? 0);
     const [low, high] = [Math.min(...values), Math.max(...values)];
-    const words = name === 'positive' ? '+ input' : name === 'negative' ? '- input' : 'input';
+    const words = held(name === 'positive' ? '+ input' : name === 'negative' ? '- input' : 'input');
     return coupling === 'ac' ? `${words} ${amount(high, 'V')} peak` : `${words} ${range(low, high, 'V')}`;
   });
 }
 
-function referenceOf({ vertices }: Stage): string[] {
+function referenceOf({ vertices, referenceTolerance, referenceResistance }: Stage): string[] {
   const values = vertices.map((vertex) => vertex.reference);
   const [low, high] = [Math.min(...values), Math.max(...values)];
-  return low === 0 && high === 0 ? [] : [`reference ${range(low, high, 'V')}`];
+  const tolerance = referenceTolerance === 0 ? '' : ` ±${amount(referenceTolerance * 100, '%')}`;
+  const resistance = referenceResistance === 0 ? '' : ` behind ${amount(referenceResistance, 'Ω')}`;
+  return low === 0 && high === 0 ? [] : [`reference ${range(low, high, 'V')}${tolerance === '' ? '' : ` (${held(tolerance.trim())})`}${resistance}`];
 }
 
 function surroundingsOf(stage: Stage): string[] {

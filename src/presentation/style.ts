@@ -18,6 +18,10 @@ export interface CommandContext {
   readonly command: string;
   /** Null when options alone describe the stage. */
   readonly stageFile: string | null;
+  /** Options that changed the stage or the judging, as typed: another command about the same answer repeats them. */
+  readonly changes?: readonly string[];
+  /** `--catalog FILE`, as typed. */
+  readonly catalog?: readonly string[];
 }
 
 const NARROW = 60;

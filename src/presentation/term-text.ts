@@ -2,7 +2,7 @@ import { figureSlot, PARAMETERS, type Figure } from '../parts/figures.js';
 import type { Origin, Part } from '../parts/part.js';
 import type { Term } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { amount, figureAmount } from './amounts.js';
+import { amount, compared, figureAmount } from './amounts.js';
 import { conditionText } from './condition-text.js';
 import { originWords } from './origin-text.js';
 import { paragraph } from './layout.js';
@@ -10,6 +10,7 @@ import { safeLine } from './safe-text.js';
 import { glued } from './spelling.js';
 import type { Style } from './style.js';
 import { tableLines } from './table.js';
+import { beyondText } from './verdict-words.js';
 import { BASIS_WORDS, figureWords } from './words.js';
 
 /** The part a verdict is about, with the origins of its figures. */
@@ -26,7 +27,7 @@ export function termLines(verdict: Verdict, origins: Origins, style: Style): str
   const factor = commonFactor(verdict.terms);
   const rows = [
     ...verdict.terms.map((term) => termRow(withoutFactor(term, factor), { verdict, origins, style })),
-    ...(verdict.outcome === 'unknown' ? verdict.missing.map((missing) => missingRow(missing, origins, style)) : []),
+    ...(verdict.outcome === 'unknown' ? verdict.missing.map((missing) => (missing.beyond === undefined ? missingRow(missing, origins, style) : beyondRow(missing.figure, beyondText(missing.beyond, origins.part.tier)))) : []),
     ...sumRow(verdict),
   ];
   if (rows.length === 0) return singleFigure(verdict, origins, style);
@@ -57,7 +58,7 @@ interface At {
 function termRow(term: Term, { verdict, origins, style }: At): string[] {
   const figure = figureAt(origins.part, term.slot);
   const printed = term.figure === null ? printedText(figure) : printedOf(term.figure, figure);
-  return [term.name, amount(term.value, verdict.unit ?? '1', { round: 'up' }), madeFrom(printed, figure, stepsOf(term, verdict)), originOf(term, origins, style)];
+  return [term.name, amount(term.value, verdict.unit ?? '1'), madeFrom(printed, figure, stepsOf(term, verdict)), originOf(term, origins, style)];
 }
 
 /** On the best reading, which a fail shows, a figure of the class counts as nothing. */
@@ -98,11 +99,16 @@ function missingRow({ figure, kind }: Verdict['missing'][number], origins: Origi
   return [figureWords(figure), 'unknown', said, where === null ? '' : originWords(where, style)];
 }
 
-function sumRow({ terms, offered, known, unit, rss }: Verdict): string[][] {
+/** Points are known, but none near this current. */
+const beyondRow = (figure: string, text: string): string[] => [figureWords(figure), 'unknown', text, ''];
+
+/** The sum reads as in the line above it. */
+function sumRow(verdict: Verdict): string[][] {
+  const { terms, offered, known, unit, rss } = verdict;
   const total = typeof offered === 'number' ? offered : known;
   if (terms.length < 2 || total === null || unit === null) return [];
   const beside = rss === null ? '' : `root-sum-square ${amount(rss, unit)}, shown for scale`;
-  return [[typeof offered === 'number' ? 'sum' : 'known', amount(total, unit, { round: 'up' }), beside, '']];
+  return [[typeof offered === 'number' ? 'sum' : 'known', compared(verdict)?.offered ?? amount(total, unit), beside, '']];
 }
 
 /** A check that compares one figure: where that figure stands. */

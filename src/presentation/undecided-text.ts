@@ -29,12 +29,22 @@ const isUnbuilt = ({ reason }: Verdict): boolean => reason === 'not-built';
 function undecidedPart(one: JudgedPart, style: Style): string[] {
   const open = one.verdicts.filter((verdict) => verdict.outcome === 'unknown');
   const built = open.filter((verdict) => !isUnbuilt(verdict));
-  const reasons = built.map((verdict) => unknownText(verdict, checkWords(verdict.check)));
+  const reasons = reasonsOf(built);
   const about = aboutPart(one.part);
   const likely = one.likely ? 'likely to fit (its class would); ' : '';
   const lead = ` ${toned('?', 'open', style)}  `;
   const why = reasons.length === 0 ? 'passes every check that is judged' : withFits(reasons, open.length);
   return paragraph(`${partName(one.part)}${about === '' ? '' : ` ${about}`} - ${likely}${why}`, style, { lead, indent: 6 });
+}
+
+/** The same reason of several checks once. */
+function reasonsOf(verdicts: readonly Verdict[]): string[] {
+  const alike = new Map<string, Verdict[]>();
+  for (const verdict of verdicts) {
+    const key = verdict.reason === null || verdict.reason === 'missing-figure' ? verdict.check : verdict.reason;
+    alike.set(key, [...(alike.get(key) ?? []), verdict]);
+  }
+  return [...alike.values()].map(unknownText);
 }
 
 /** One open check decides the part; several only themselves. */

@@ -1,4 +1,4 @@
-import { formatComparison, } from '../quantities/format.js';
+import { formatComparison } from '../quantities/format.js';
 import type { Verdict } from '../verdicts/verdict.js';
 
 const RELATION = { 'at-least': 'needs at least', 'at-most': 'allowed at most' } as const;
@@ -10,7 +10,7 @@ export function verdictSentence(verdict: Verdict): string {
   if (typeof required !== 'number' || unit === null || sense === null) return `${verdict.title}: ${why(verdict)}`;
   const value = typeof offered === 'number' ? offered : verdict.known;
   if (value === null) return `${verdict.title}: ${why(verdict)}; ${RELATION[sense]} ${formatComparison(required, required, unit, sense)[1]}`;
-  const [shown, limit] = formatComparison(value, required, unit, sense);
+  const [shown, limit] = formatComparison(verdict.spare === 0 ? required : value, required, unit, sense);
   const partly = typeof offered === 'number' ? '' : 'at least ';
   const ending = verdict.outcome === 'unknown' ? `: ${why(verdict)}` : verdict.outcome === 'fail' ? ': does not hold' : '';
   return `${verdict.title} ${partly}${shown}, ${RELATION[sense]} ${limit}${ending}`;

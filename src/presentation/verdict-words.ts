@@ -1,9 +1,12 @@
-import type { TurningPoint } from '../verdicts/finding.js';
+import type { Tier } from '../parts/part.js';
+import { REACH } from '../parts/headroom-curve.js';
+import { formatComparison } from '../quantities/format.js';
+import type { Beyond, TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { amount, compared, figureAmount, share } from './amounts.js';
 import { safeLine } from './safe-text.js';
-import { GLUE } from './spelling.js';
-import { figureWords, OVER, passingSide, REASON_WORDS, SAYINGS } from './words.js';
+import { GLUE, held } from './spelling.js';
+import { checkWords, figureWords, OVER, passingSide, REASON_WORDS, SAYINGS } from './words.js';
 
 /** `27.4 mV, allowed 20 mV`, or for words `conditional, wanted approved`. */
 export function comparisonText(verdict: Verdict): string {
@@ -20,7 +23,7 @@ function requirementText(verdict: Verdict): string {
   if (Array.isArray(verdict.required)) return `wanted ${wanted(verdict)}`;
   if (typeof verdict.required !== 'number' || verdict.unit === null) return '';
   const [, against] = SAYINGS[verdict.check] ?? ['', 'allowed'];
-  return `${against} ${amount(verdict.required, verdict.unit, { round: verdict.sense === 'at-least' ? 'up' : 'down' })}`;
+  return `${against} ${amount(verdict.required, verdict.unit)}`;
 }
 
 const wanted = ({ required }: Verdict): string => (Array.isArray(required) ? required.map((word: string) => safeLine(word)).join(' or ') : '');
@@ -32,7 +35,7 @@ export function shortfall(verdict: Verdict): string {
   if (left === null || verdict.unit === null) return comparisonText(verdict);
   const word = `${OVER.has(verdict.check) ? 'over' : 'short'} by ${verdict.offered === null ? `at${GLUE}least ` : ''}`;
   const relative = relativeTo(verdict, Math.abs(left), 'up');
-  return `${word}${amount(Math.abs(left), verdict.unit, { round: 'up' })}${relative === null ? '' : ` (${relative})`}`;
+  return `${word}${compared(verdict)?.difference ?? amount(Math.abs(left), verdict.unit)}${relative === null ? '' : ` (${relative})`}`;
 }
 
 /** SI, negative when short; of a bound what is known. */
@@ -59,43 +62,67 @@ export function spareText(verdict: Verdict): string {
   if (spare === null || unit === null || typeof verdict.offered !== 'number') return 'no limit known';
   if (unit === '1') return `has ${amount(verdict.offered, unit)}`;
   if (spare === 0) return 'met exactly';
-  const inUnits = `${amount(spare, unit, { round: 'down' })}${GLUE}spare`;
+  const inUnits = `${compared(verdict)?.difference ?? amount(spare, unit)}${GLUE}spare`;
   if (margin === null || (IN_UNITS.has(unit) && !OVER.has(check))) return inUnits;
   if (margin >= MULTIPLE && !OVER.has(check)) return `${amount(margin, '1', { digits: 2, round: 'down' })}${GLUE}times`;
   const relative = relativeTo(verdict, spare, 'down');
   return relative === null ? inUnits : `${relative}${GLUE}spare`;
 }
 
-/** Why a check is open and where it would turn: `offset drift unknown: fits if 29.8 µV/°C or less`. */
-export function unknownText(verdict: Verdict, title: string): string {
+/** Why checks of one reason are open and where each would turn: `offset drift unknown: passes if 29.8 µV/°C or less`. */
+export function unknownText(verdicts: readonly Verdict[]): string {
+  const [verdict] = verdicts;
+  if (verdict === undefined) return '';
   const point = verdict.decidesAt;
-  const condition = point === null ? '' : `: passes if ${turningText(point)}`;
-  if (verdict.reason === 'missing-figure') return `${missingText(verdict)} unknown${condition}`;
+  if (verdict.reason === 'missing-figure') return `${missingText(verdict)} unknown${point === null ? '' : `: passes if ${turningText(point)}`}`;
+  const titles = verdicts.map(({ check }) => checkWords(check)).join(' and ');
   const reason = verdict.reason === null ? 'not decided' : REASON_WORDS[verdict.reason];
-  const ending = point === null ? '' : `; passes if ${figureWords(point.figure)} is ${turningText(point)}`;
-  return `${title}: ${reason}${ending}`;
+  const turns = verdicts.flatMap(({ decidesAt }) => (decidesAt === null ? [] : [`${figureWords(decidesAt.figure)} is ${turningText(decidesAt)}`]));
+  return `${titles}: ${reason}${turns.length === 0 ? '' : `; ${turns.length === 1 ? 'passes' : 'pass'} if ${turns.join(' and ')}`}`;
 }
 
 export function missingText({ missing }: Verdict): string {
   return missing.map((one) => figureWords(one.figure)).join(' and ') || 'a figure';
 }
 
-/** `29.8 µV/°C or less`, rounded to the safe side. */
-export function turningText(point: Omit<TurningPoint, 'figure'> & { readonly figure: string }): string {
+/** `29.8 µV/°C or less`, `299 mV or less at 1.45 mA, 3.2 V`, rounded to the safe side. */
+export function turningText(point: Turning): string {
   const side = passingSide(point.figure, point.kind);
-  return `${figureAmount(point.figure, point, { round: side === 'less' ? 'down' : 'up' })} or${GLUE}${side}`;
+  return `${turningValue(point)} or${GLUE}${side}${conditionOf(point)}`;
 }
+
+/** The value alone, rounded to the safe side. */
+export function turningValue(point: Turning): string {
+  return figureAmount(point.figure, point, { round: passingSide(point.figure, point.kind) === 'less' ? 'down' : 'up' });
+}
+
+/** ` at 1.45 mA, 3.2 V`, or nothing. */
+export function conditionOf({ condition }: Turning): string {
+  return condition === undefined ? '' : ` at ${amount(condition.current, 'A')}, ${amount(condition.supply, 'V')}`;
+}
+
+/** `the list covers up to 248 µA (1.5 × = 372 µA); 463 µA flows here`. */
+export function beyondText({ covers, current }: Beyond, tier: Tier): string {
+  const [flows, reach] = formatComparison(current, REACH * covers, 'A', 'at-most').map(held);
+  return `the ${tier === 'approved' ? 'list' : 'set'} covers up to ${amount(covers, 'A')} (${REACH}${GLUE}×${GLUE}= ${reach}); ${flows} flows here`;
+}
+
+type Turning = Omit<TurningPoint, 'figure'> & { readonly figure: string };
 
 /** The corner a verdict stands at: `at 4.2 V supply, 330 mV input, -20 °C, 245 µA sourced`. */
 export function cornerText(corner: Readonly<Record<string, number>>): string {
-  const words = Object.entries(corner).map(([key, value]) => (key === 'reference' && value === 0 ? null : cornerWord(key, value)));
+  const words = Object.entries(corner).map(([key, value]) => {
+    if (key === 'reference' && value === 0) return null;
+    return key === 'temperature' && 'currentTemperature' in corner ? `offset at ${cornerWord(key, value)}` : cornerWord(key, value);
+  });
   const said = words.filter((word) => word !== null);
   return said.length === 0 ? '' : `at ${said.join(', ')}`;
 }
 
 const CORNER_WORDS: Readonly<Record<string, string>> = { supply: 'supply', reference: 'reference', input: 'input', positive: 'at the + input', negative: 'at the - input' };
 
-function cornerWord(key: string, value: number): string | null {
+function cornerWord(key: string, value: number): string {
+  if (key === 'currentTemperature') return `currents at ${amount(value, '°C')}`;
   if (key === 'temperature') return amount(value, '°C');
   if (key !== 'load') return `${amount(value, 'V')} ${CORNER_WORDS[key] ?? key}`;
   if (Math.abs(value) <= 1e-12) return 'no output current';

@@ -72,37 +72,52 @@ function engineering(digits: Digits, offset: number): { shift: number; symbol: s
   return { shift: offset - power, symbol: SYMBOLS.get(power) ?? '' };
 }
 
-/** Two printed numbers whose comparison reads as it is: offered, required. */
-export type PrintedComparison = readonly [offered: string, required: string];
+/** Two printed numbers whose comparison reads as it is, and what lies between them as printed: offered, required, difference. */
+export type PrintedComparison = readonly [offered: string, required: string, difference: string];
 
 /** Digits of a binary64 number that always tell it from its neighbours. */
 const ALL_DIGITS = 17;
+/** How far the printed difference may be from the true one, as a fraction of it. */
+const DIFFERENCE_ERROR = 0.02;
 
 /**
- * Offered against required, rounded toward the unsafe side (rule Q-20): for at-least the offered number down and the
- * required one up, for at-most the other way round; three digits, and more where fewer would show a pass as a fail or a fail as a pass.
- * Equal numbers read equal.
+ * Offered against required (rule Q-20): both to nearest with the same digits, three and as many more as it takes that a
+ * fail reads as a fail, a pass as a pass, and the difference as what it is. The difference, without its sign, is that of
+ * the printed numbers, so that the three add up to three digits. Equal numbers read equal. Throws RangeError when a value is not finite.
  */
 // Two numbers, their unit and the sense are what a comparison is; bundling them would only rename the four.
 // eslint-disable-next-line max-params
 export function formatComparison(offered: number, required: number, unit: string, sense: 'at-least' | 'at-most'): PrintedComparison {
-  const [offeredSide, requiredSide] = sense === 'at-least' ? (['down', 'up'] as const) : (['up', 'down'] as const);
-  const met = sense === 'at-least' ? offered >= required : offered <= required;
-  const print = (value: number, round: 'up' | 'down' | 'nearest', digits: number): string => formatQuantity(value, unit, { digits, round });
-  if (offered === required) return [print(offered, 'nearest', 3), print(required, 'nearest', 3)];
+  const digits = offered === required ? 3 : digitsToCompare(offered, required, sense);
+  const print = (value: number): string => formatQuantity(value, unit, { digits });
+  return [print(offered), print(required), formatQuantity(printedDifference(offered, required, digits), unit)];
+}
+
+function digitsToCompare(offered: number, required: number, sense: 'at-least' | 'at-most'): number {
+  const distance = Math.abs(offered - required);
+  const met = (a: number, b: number): boolean => (sense === 'at-least' ? a >= b : a <= b);
   for (let digits = 3; digits < ALL_DIGITS; digits++) {
-    if (printedMet(offered, required, { digits, sense }) !== met) continue;
-    return [print(offered, offeredSide, digits), print(required, requiredSide, digits)];
+    const [shown, limit] = [printed(offered, digits), printed(required, digits)];
+    if (shown === limit || met(shown, limit) !== met(offered, required)) continue;
+    if (Math.abs(printedDifference(offered, required, digits) - distance) <= DIFFERENCE_ERROR * distance) return digits;
   }
-  return [print(offered, 'nearest', ALL_DIGITS), print(required, 'nearest', ALL_DIGITS)];
+  return ALL_DIGITS;
 }
 
-/** Whether the two numbers as printed say that the comparison is met. */
-function printedMet(offered: number, required: number, how: { digits: number; sense: 'at-least' | 'at-most' }): boolean {
-  const atLeast = how.sense === 'at-least';
-  const printedOffered = printed(offered, how.digits, atLeast ? 'down' : 'up');
-  const printedRequired = printed(required, how.digits, atLeast ? 'up' : 'down');
-  return atLeast ? printedOffered >= printedRequired : printedOffered <= printedRequired;
+/** Rounded to the last place printed, where binary subtraction leaves noise. */
+function printedDifference(offered: number, required: number, digits: number): number {
+  const place = Math.min(lastPlace(offered, digits), lastPlace(required, digits));
+  const difference = Math.abs(printed(offered, digits) - printed(required, digits));
+  return Number(difference.toFixed(Math.min(MOST_PLACES, Math.max(0, -place))));
 }
 
-const printed = (value: number, digits: number, round: Rounding): number => Number(plainText(roundToDigits(value, digits, round), 0));
+/** What toFixed can do. */
+const MOST_PLACES = 100;
+
+/** Power of ten of the last significant digit printed. */
+function lastPlace(value: number, count: number): number {
+  const { digits, exponent } = roundToDigits(value, count, 'nearest');
+  return exponent - digits.length + 1;
+}
+
+const printed = (value: number, digits: number): number => Number(plainText(roundToDigits(value, digits, 'nearest'), 0));

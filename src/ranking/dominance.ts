@@ -1,20 +1,18 @@
-import { dominates } from '../formulas/dominance.js';
 import type { JudgedPart } from '../screening/index.js';
 import { comfortOf } from './comfort.js';
 import { priceInEuro } from './merit.js';
 
 /**
- * The first part of the list that is at least as good in every clamped margin, in price, current, tier and proof, and better
- * in one: on clamped margins an over-specified part can be dominated, on raw ones never (method.md 10, RNK-10 and -11).
+ * For each part of the list the first one that is at least as good in every clamped margin, in price, current, tier and proof,
+ * and better in one: on clamped margins an over-specified part can be dominated, on raw ones never (method.md 10, RNK-10, -11).
  */
-export function dominatorOf<P extends JudgedPart>(one: P, all: readonly P[]): P | null {
-  const mine = scores(one);
-  if (mine === null) return null;
-  return all.find((other) => other !== one && isAhead(scores(other), mine)) ?? null;
+export function dominatorsOf<P extends JudgedPart>(all: readonly P[]): (P | null)[] {
+  const scored = all.map((one) => ({ one, scores: scoresOf(one) }));
+  return scored.map(({ scores: mine }) => scored.find(({ scores: theirs }) => dominates(theirs, mine))?.one ?? null);
 }
 
 /** Larger is better throughout; null when price or current is not known: then nothing can be said. */
-function scores(judged: JudgedPart): number[] | null {
+function scoresOf(judged: JudgedPart): readonly number[] | null {
   const price = priceInEuro(judged);
   if (price === null || judged.current === null) return null;
   const tier = judged.part.tier === 'approved' ? 1 : 0;
@@ -22,4 +20,14 @@ function scores(judged: JudgedPart): number[] | null {
   return [tier, proof, -price, -judged.current, ...judged.verdicts.map((verdict) => comfortOf(verdict) ?? 1)];
 }
 
-const isAhead = (theirs: number[] | null, mine: readonly number[]): boolean => theirs?.length === mine.length && dominates(theirs, mine);
+/** As in `formulas/dominance.ts`, without its checks of every score: this runs once per pair of parts. */
+function dominates(theirs: readonly number[] | null, mine: readonly number[] | null): boolean {
+  if (theirs === null || mine?.length !== theirs.length) return false;
+  let better = false;
+  for (const [at, score] of theirs.entries()) {
+    const other = mine[at] ?? score;
+    if (score < other) return false;
+    if (score > other) better = true;
+  }
+  return better;
+}

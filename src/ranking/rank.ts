@@ -1,6 +1,6 @@
 import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, marginForOrder } from './comfort.js';
-import { dominatorOf } from './dominance.js';
+import { dominatorsOf } from './dominance.js';
 import { linesOf } from './family.js';
 import { meritOf, priceInEuro, type Merit } from './merit.js';
 
@@ -26,8 +26,8 @@ export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): Ranked
   const candidates: Candidate[] = fit.map((judged) => ({ ...judged, merit: meritOf(judged), tightest: tightestOf(judged) }));
   candidates.sort((a, b) => compareIn(order, a, b));
   const lines = linesOf(candidates);
-  const firsts = lines.map(({ first }) => first);
-  return lines.map(({ first, variants }, at) => ({ ...first, rank: at + 1, dominatedBy: dominatorOf(first, firsts)?.part.id ?? null, variants }));
+  const dominators = dominatorsOf(lines.map(({ first }) => first));
+  return lines.map(({ first, variants }, at) => ({ ...first, rank: at + 1, dominatedBy: dominators[at]?.part.id ?? null, variants }));
 }
 
 /** What decides between two: the steps of the order, each 0 when they are equal there. */

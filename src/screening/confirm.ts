@@ -30,6 +30,8 @@ function weakPoints(verdict: Verdict): Confirmation[] {
       return { figure: parameterOf(term.slot) ?? term.name, slot: term.slot, basis: term.basis, how: term.how, checks, needed: isHeadroom ? needed : null };
     });
   }
+  // A demand of zero (no frequency above DC) is met by any figure.
+  if (needed?.value === 0 && verdict.sense === 'at-least') return [];
   const figure = parameterOf(verdict.slot) ?? verdict.turnsAt?.figure ?? verdict.check;
   return [{ figure, slot: verdict.slot, basis: verdict.basis ?? 'assumed', how: verdict.how, checks, needed }];
 }

@@ -1,3 +1,4 @@
 export { judgePart, judging, type Judging } from './judge.js';
+export type { PartHazard } from './hazards.js';
 export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
 export { screen, type Rejection, type Screened } from './screen.js';

@@ -9,6 +9,7 @@ import type { Verdict } from '../verdicts/verdict.js';
 import { completions } from './completion.js';
 import type { JudgedPart, PartOutcome } from './judged-part.js';
 import { confirmations } from './confirm.js';
+import { hazardsOf } from './hazards.js';
 
 /** What stays the same for all parts of one run. */
 export interface Judging {
@@ -39,6 +40,7 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
     likely: outcome === 'undecided' && isLikely(run, part),
     verdicts,
     confirm: outcome === 'fits' ? confirmations(verdicts) : [],
+    hazards: hazardsOf(part, run.demands),
     current: readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' }).figure('quiescentCurrent')?.value ?? null,
   };
 }

@@ -2,6 +2,7 @@ import type { Basis } from '../parts/basis.js';
 import type { LimitKind } from '../parts/figures.js';
 import type { Part } from '../parts/part.js';
 import type { Verdict } from '../verdicts/verdict.js';
+import type { PartHazard } from './hazards.js';
 
 export type PartOutcome = 'fits' | 'undecided' | 'does-not-fit';
 
@@ -28,6 +29,8 @@ export interface JudgedPart {
   readonly likely: boolean;
   readonly verdicts: readonly Verdict[];
   readonly confirm: readonly Confirmation[];
+  /** What can go wrong though every check passes. */
+  readonly hazards: readonly PartHazard[];
   /** Quiescent current per amplifier on the pessimistic reading, A; for the order, asked or not. */
   readonly current: number | null;
 }

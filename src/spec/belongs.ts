@@ -15,8 +15,11 @@ interface Complaint {
 export function readTopology(draft: Draft): Topology | undefined {
   const word = readChoice<string>(draft, 'topology');
   if (word === undefined || isBuilt(word)) return word;
-  return refuse(draft, 'topology', { code: 'S105', message: `topology ${word} is not built yet; built: ${BUILT_TOPOLOGIES.join(', ')}`, fix: BUILT_TOPOLOGIES[1] });
+  return refuse(draft, 'topology', { code: 'S105', message: `topology ${word} is not built yet; built: ${BUILT_TOPOLOGIES.join(', ')}`, fix: NOT_BUILT });
 }
+
+/** No built topology is offered: it would be another circuit. */
+const NOT_BUILT = 'none yet for this circuit; railfit help stage lists what is built';
 
 function isBuilt(word: string): word is Topology {
   return (BUILT_TOPOLOGIES as readonly string[]).includes(word);

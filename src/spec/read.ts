@@ -14,6 +14,7 @@ import { readSignal } from './signal.js';
 import type { Hazard, Override, SpecResult, StageSpec } from './spec.js';
 import { flatten } from './structure.js';
 import { isEmpty } from './tree.js';
+import { supplyContradictions } from './supply-contradictions.js';
 import { readLoad, readResistors, readSource } from './surroundings.js';
 import { readMargins, readWishes } from './team.js';
 import { readInterval, readValue } from './value.js';
@@ -68,8 +69,10 @@ function readFields(draft: Draft): StageSpec | null {
   refuseMissing(draft, topology);
   const supply = readInterval(draft, 'supply');
   const written = readOthers(draft, topology);
+  const positions = Object.fromEntries(draft.positions);
+  if (draft.problems.length > 0) draft.problems.push(...supplyContradictions({ ...written, ...present({ supply }), positions, file: draft.file }));
   if (topology === undefined || supply === undefined) return null;
-  return { ...written, topology, supply, notes: draft.notes, positions: Object.fromEntries(draft.positions) };
+  return { ...written, topology, supply, notes: draft.notes, positions };
 }
 
 function readOthers(draft: Draft, topology: StageSpec['topology'] | undefined): Omit<StageSpec, 'topology' | 'supply' | 'notes' | 'positions'> {

@@ -4,14 +4,16 @@ import { field } from './schema.js';
 import type { MarginsSpec, WishesSpec } from './spec.js';
 import { refuse } from './refuse.js';
 import { readQuantity, readValue, valueFrom } from './value.js';
-import { readChoices, readText, readTexts } from './words.js';
+import { QUALIFICATIONS } from './team-fields.js';
+import { fold } from './nearest.js';
+import { readChoices, readText, readTexts, unknownWord } from './words.js';
 
 /** Everything under `wishes`. */
 export function readWishes(draft: Draft): WishesSpec {
   return present({
     channels: readChannels(draft),
     package: readTexts(draft, 'wishes.package'),
-    qualification: readText(draft, 'wishes.qualification'),
+    qualification: readQualification(draft),
     status: readChoices(draft, 'wishes.status'),
     lifecycle: readChoices(draft, 'wishes.lifecycle'),
     price: readPrice(draft),
@@ -25,6 +27,14 @@ export function readMargins(draft: Draft): MarginsSpec {
     gainBandwidth: readValue(draft, 'margins.gainBandwidth')?.value,
     outputHeadroom: readValue(draft, 'margins.outputHeadroom'),
   });
+}
+
+/** A grade as it is spelled in the standard; `none` asks for none. */
+function readQualification(draft: Draft): string | undefined {
+  const text = readText(draft, 'wishes.qualification');
+  if (text === undefined || text.toLowerCase() === 'none') return undefined;
+  const grade = QUALIFICATIONS.find((one) => fold(one) === fold(text));
+  return grade ?? refuse(draft, 'wishes.qualification', unknownWord(text, 'wishes.qualification'));
 }
 
 function readChannels(draft: Draft): number | undefined {

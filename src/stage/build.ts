@@ -1,9 +1,11 @@
 import { formatQuantity } from '../quantities/format.js';
 import type { Problem } from '../quantities/problem.js';
+import { contradiction } from '../spec/contradiction.js';
 import type { ReferenceSpec, StageSpec } from '../spec/spec.js';
-import { assumptionsOf } from './assumptions.js';
+import { supplyContradictions } from '../spec/supply-contradictions.js';
+import { assumptionsOf, gainCautions } from './assumptions.js';
 import type { Circuit } from './circuit.js';
-import { contradiction, contradictionsOf } from './contradictions.js';
+import { contradictionsOf } from './contradictions.js';
 import { difference } from './difference.js';
 import { excitation, type Excitation } from './excitation.js';
 import { fitResistors, gainAgainstResistors, toleranceOf, writtenGain } from './fitted.js';
@@ -24,15 +26,26 @@ const WITH_RESISTORS = { 'non-inverting': nonInverting, inverting, difference } 
 
 /** The circuit a specification implies, or every contradiction in it. Errors are problems, never exceptions. */
 export function buildStage(spec: StageSpec): StageResult {
+  const built = impliedBy(spec);
+  if (!built.ok) return { ok: false, problems: [...built.problems, ...supplyContradictions(spec)] };
+  const problems = contradictionsOf(spec, built.stage, rebuilt);
+  return problems.length > 0 ? { ok: false, problems } : built;
+}
+
+function rebuilt(spec: StageSpec): Stage | null {
+  const built = impliedBy(spec);
+  return built.ok ? built.stage : null;
+}
+
+/** The circuit, wherever its output may lie. */
+function impliedBy(spec: StageSpec): StageResult {
   const disagreement = gainAgainstResistors(spec);
   if (disagreement !== null) return { ok: false, problems: [disagreement] };
   const settled = settle(spec);
   if ('problem' in settled) return { ok: false, problems: [settled.problem] };
   const circuit = circuitOf(spec, settled);
   if ('problems' in circuit) return { ok: false, problems: circuit.problems };
-  const stage = assemble(spec, { ...settled, ...circuit });
-  const problems = contradictionsOf(spec, stage);
-  return problems.length > 0 ? { ok: false, problems } : { ok: true, stage };
+  return { ok: true, stage: assemble(spec, { ...settled, ...circuit }) };
 }
 
 interface Settled {
@@ -132,6 +145,9 @@ function assemble(spec: StageSpec, made: Settled & Fitted): Stage {
     networkConductance: circuit.networkConductance,
     resistorRejection: circuit.resistorRejection,
     asked: { limits: spec.limits, wishes: spec.wishes, margins: spec.margins, avoid: spec.avoid },
+    referenceTolerance: reference.value.nominal === 0 ? 0 : (reference.value.max - reference.value.min) / 2 / reference.value.nominal,
+    referenceResistance: reference.resistance?.value ?? 0,
+    cautions: gainCautions(spec, circuit),
     assumptions: assumptionsOf(spec, circuit, [...made.notes, ...made.fitNotes]),
   };
 }

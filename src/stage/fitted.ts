@@ -1,7 +1,7 @@
 import type { Problem } from '../quantities/problem.js';
 import { formatQuantity } from '../quantities/format.js';
+import { contradiction } from '../spec/contradiction.js';
 import type { StageSpec } from '../spec/spec.js';
-import { contradiction } from './contradictions.js';
 import { choosePair, type Pair } from './resistors.js';
 import type { StageResistors } from './stage.js';
 

@@ -87,6 +87,11 @@ export interface Stage {
   readonly networkConductance: number;
   /** Difference only: the worst matching of the resistor ratios, relative; its effect on common-mode rejection is listed. */
   readonly resistorRejection: number | null;
+  /** Relative half-width of the reference and its series resistance, Ω; 0 of a stiff, exact one. */
+  readonly referenceTolerance: number;
+  readonly referenceResistance: number;
+  /** What the stage does not do as it was asked, one sentence each. */
+  readonly cautions: readonly string[];
   readonly assumptions: readonly string[];
   /** What the team asks beyond the circuit, as written. */
   readonly asked: Asked;

@@ -24,7 +24,7 @@ export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: F
   const [shown, other] = outcome === 'fail' ? [optimistic, pessimistic] : [pessimistic, optimistic];
   if (shown.kind === 'words') return wordVerdict(check, outcome, shown);
   const basis = basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
-  return verdictOf(check, { outcome, shown: shownOf(shown, outcome), other, basis });
+  return verdictOf(check, { outcome, shown: shownOf(shown, outcome), whole: shown, other, basis });
 }
 
 /** How one reading stands by itself. */
@@ -77,11 +77,13 @@ function basisOf(finding: Exclude<Finding, WordFinding>): Basis {
 interface Decided {
   readonly outcome: Outcome;
   readonly shown: SingleFinding;
+  /** What `shown` was taken from. */
+  readonly whole: Finding;
   readonly other: Finding;
   readonly basis: Basis;
 }
 
-function verdictOf(check: CheckIdentity, { outcome, shown, other, basis }: Decided): Verdict {
+function verdictOf(check: CheckIdentity, { outcome, shown, whole, other, basis }: Decided): Verdict {
   const offered = shown.kind === 'numbers' ? finite(shown.offered) : null;
   const compared = offered !== null && typeof shown.required === 'number' && shown.sense !== null;
   return {
@@ -91,6 +93,7 @@ function verdictOf(check: CheckIdentity, { outcome, shown, other, basis }: Decid
     required: shown.required,
     offered,
     offeredBest: offeredOf(other),
+    ...(whole.kind === 'vertices' && other.kind === 'vertices' ? { otherThere: numberOf(other.findings[whole.findings.indexOf(shown)]) } : {}),
     unit: shown.unit,
     sense: shown.sense ?? (Array.isArray(shown.required) ? 'one-of' : null),
     margin: compared && check.hasMargin ? marginOf(shown.required, offered, shown.sense) : null,
@@ -110,6 +113,9 @@ function verdictOf(check: CheckIdentity, { outcome, shown, other, basis }: Decid
     how: shown.kind === 'numbers' ? (shown.how ?? null) : null,
   };
 }
+
+/** Both readings have their vertices in the same order. */
+const numberOf = (finding: SingleFinding | undefined): number | null => (finding?.kind === 'numbers' ? finite(finding.offered) : null);
 
 const finite = (value: number): number | null => (Number.isFinite(value) ? value : null);
 

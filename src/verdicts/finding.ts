@@ -20,12 +20,23 @@ export interface TurningPoint {
   readonly kind: LimitKind;
   readonly value: number;
   readonly unit: string;
+  /** Of a head-room: the current towards the rail, A, and the supply, V, it must hold at. */
+  readonly condition?: { readonly current: number; readonly supply: number };
 }
 
 /** A missing figure that kept a check from being decided. */
 export interface Missing {
   readonly figure: Parameter | 'channels' | 'package' | 'qualification' | 'status' | 'lifecycle' | 'price';
   readonly kind: LimitKind | null;
+  /** Points are known, but none that reaches the current that flows. */
+  readonly beyond?: Beyond;
+}
+
+/** How far head-room points reach: heaviest current known and current asked, A, at this supply, V. */
+export interface Beyond {
+  readonly covers: number;
+  readonly current: number;
+  readonly supply: number;
 }
 
 interface Common {

@@ -17,6 +17,8 @@ export interface Verdict {
   readonly required: number | readonly string[] | null;
   readonly offered: number | string | null;
   readonly offeredBest: number | string | null;
+  /** Checks over vertices only: the other reading at the vertex shown; `offeredBest` stands at the vertex worst for it. */
+  readonly otherThere?: number | null;
   readonly unit: string | null;
   readonly sense: Sense | 'one-of' | null;
   /** Ratio to the limit, 1 = met exactly; null for head-rooms, temperatures and words. */

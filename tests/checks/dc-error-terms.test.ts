@@ -8,7 +8,7 @@ import { max, under } from '../support/parts.js';
 
 const ASKED: DcErrorDemand = {
   check: 'dc-error', required: 1, unit: 'V', sense: 'at-most', because: '', source: '', noiseGain: 2, kelvin: 0, positive: 1e3, negative: 3e3, tolerance: 0.01,
-  commonModeMove: 0, outputMove: 0, sourceSpread: 0, supply: { min: 5, nominal: 5, max: 5 }, temperature: 25,
+  commonModeMove: 0, outputMove: 0, sourceSpread: 0, supply: { min: 5, nominal: 5, max: 5 }, temperature: 25, hottest: 25,
 };
 
 interface Asked {

@@ -91,6 +91,12 @@ describe('the supply term', () => {
   const over = (min_: number, max_: number): StageSpec => stageSpec('inverting', dc(2, 2), { supply: between(min_, max_), resistors: resistors(1e4, 1e4, 0), reference: midSupply(), limits: { dcError: value(1) } });
   const moved = (figure: Figure): number => judge(over(4, 6), [figure, max('biasCurrent', 0), max('offsetCurrent', 0), min('openLoopGain', 1e9), min('supplyRejection', 1e3)]).terms.find(({ name }) => name === 'supply')!.value;
 
+  it('names both temperatures where the offset is worst in the cold and the currents when hot', () => {
+    const of = (temperature: number): object | null => judge(within(1), replacing('biasCurrent', max('biasCurrent', 20e-12, { temperature }))).worstAt;
+    expect(of(25)).toEqual({ supply: 4.2, temperature: -20, currentTemperature: 60 });
+    expect(of(85)).toEqual({ supply: 4.2, temperature: -20 });
+  });
+
   it('goes from the supply the offset is rated at, else from the nominal', () => {
     expect(moved(max('offsetVoltage', 1e-3))).toBeCloseTo((2 * 1) / 1e3, 12);
     expect(moved(max('offsetVoltage', 1e-3, { supply: 4 }))).toBeCloseTo((2 * 2) / 1e3, 12);

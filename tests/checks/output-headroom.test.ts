@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { StageSpec } from '../../src/spec/spec.js';
 import type { Figure } from '../../src/parts/figures.js';
-import { amperes, max, typ } from '../support/parts.js';
+import { amperes, assumed, max, typ } from '../support/parts.js';
 import { judgingBy } from '../support/judged.js';
 import { ac, between, dc, midSupply, resistors, stageSpec, value } from '../support/stages.js';
 
@@ -71,7 +71,39 @@ describe("the offset's share", () => {
     const exact = (ROOM - 0.1) / NG;
     expect(of(exact * 0.99)).toMatchObject({ outcome: 'unknown', offered: null });
     expect(of(exact * 1.01)).toMatchObject({ outcome: 'fail', offered: null });
+    const { known, terms, missing, decidesAt } = of(exact * 0.99);
     expect(of(exact * 1.01).known).toBeCloseTo(0.1 + NG * exact * 1.01, 12);
+    expect(terms.map(({ name }) => name)).toEqual(['head-room of the heaviest point', 'offset']);
+    expect(terms.reduce((sum, term) => sum + term.value, 0)).toBe(known);
+    expect(missing).toMatchObject([{ figure: 'outputLowHeadroom', beyond: { covers: 1e-3, supply: 5 } }]);
+    const flows = missing[0]?.beyond?.current ?? 0;
+    expect(flows).toBeGreaterThan(1.5e-3);
+    expect(decidesAt?.condition).toEqual({ current: flows, supply: 5 });
+  });
+});
+
+describe('an assumed head-room', () => {
+  const heavy = { ...SPEC, load: { resistance: value(1e3), to: 'supply' } } as const;
+
+  it('holds at whatever current flows, so the value that decides passes', () => {
+    const open = judge(heavy, [max('offsetVoltage', 1e-3, { temperature: 'over' })]);
+    expect(open).toMatchObject({ outcome: 'unknown', reason: 'missing-figure' });
+    const of = (volts: number): ReturnType<typeof judge> => judge(heavy, [assumed(max('outputLowHeadroom', volts)), max('offsetVoltage', 1e-3, { temperature: 'over' })]);
+    const turns = open.decidesAt?.value ?? 0;
+    expect(of(turns)).toMatchObject({ outcome: 'pass', basis: 'assumed' });
+    expect(of(turns * 1.001)).toMatchObject({ outcome: 'unknown', reason: 'assumed' });
+  });
+});
+
+describe('the other reading', () => {
+  it('is told at the vertex shown, too', () => {
+    // Scaling makes 3 V the worst; as printed the larger current at 5 V is.
+    const spec = { ...SPEC, supply: between(3, 5), load: { resistance: value(2e3), to: 'supply' } } as const;
+    const verdict = judge(spec, [typ('outputLowHeadroom', 0.1, amperes(1e-3, 5)), typ('outputLowHeadroom', 0.15, amperes(2.6e-3, 5))]);
+    expect(verdict.outcome).toBe('unknown');
+    expect(verdict.worstAt).toMatchObject({ supply: 3 });
+    expect(verdict.otherThere).toBeLessThan(Number(verdict.offeredBest));
+    expect(verdict.offered).toBeCloseTo(((1.5 * (5 - 0.7)) / (3 - 0.7)) * (verdict.otherThere ?? 0), 12);
   });
 });
 

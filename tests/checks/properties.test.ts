@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { CHECKS } from '../../src/checks/index.js';
 import type { Demands } from '../../src/demands/index.js';
 import type { Figure, Parameter } from '../../src/parts/figures.js';
@@ -13,6 +13,9 @@ import type { Outcome, Verdict } from '../../src/verdicts/verdict.js';
 import { arbitraryParts } from '../support/arbitrary-part.js';
 import { FULL, max, partOf, typ } from '../support/parts.js';
 import { ac, between, coupled, dc, demandsOf, fourResistors, load, midSupply, resistors, source, stageSpec, swing, value } from '../support/stages.js';
+
+// Many cases a test: slow on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 const SETTINGS = { seed: 5, numRuns: 150 };
 const LIMITS: LimitsSpec = { dcError: value(0.02), supplyCurrent: value(80e-6), swingLoss: value(0.02) };

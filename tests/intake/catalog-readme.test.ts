@@ -3,13 +3,12 @@ import { describe, expect, it } from 'vitest';
 import { readCondition } from '../../src/intake/condition.js';
 import { readList } from '../../src/intake/read-list.js';
 import { PARAMETERS } from '../../src/parts/figures.js';
+import { central, from, stated } from '../support/band-figures.js';
+import { RELATIONS } from '../support/bands.js';
+import { DIES, genericList } from '../support/generic-list.js';
 
-const bytes = readFileSync(new URL('../../catalog/generic.csv', import.meta.url));
 const readme = readFileSync(new URL('../../catalog/README.md', import.meta.url), 'utf8');
-
-const list = readList(bytes, { file: 'generic.csv', tier: 'generic' });
-if (!list.ok) throw new Error(list.problems.map(({ message }) => message).join('\n'));
-const { columns, parts } = list;
+const { columns, parts } = genericList;
 
 /** Cells of the table rows below a heading, without the header row and the rule under it. */
 function table(heading: string): string[][] {
@@ -51,9 +50,42 @@ describe('catalog/README.md', () => {
     for (const text of taught) expect(readCondition(text), text).toMatchObject({ ok: true });
   });
 
-  it('gives reasons for every set, under its id and class, in the order of the file', () => {
-    const reasoned = [...readme.matchAll(/^\*\*(GX-[A-Z0-9-]+) · ([a-z0-9-]+)\.\*\*/gm)].map(([, id, word]) => [id, word]);
-    expect(reasoned).toEqual(parts.map((part) => [part.id, part.class]));
+  it('gives reasons for every set, under its class, in the order of the file', () => {
+    const told = readme.split(/^### /m).flatMap((section) => [...section.matchAll(/^\*\*(GX-[A-Z0-9-]+)\.\*\* (.+)$/gm)].map(([, id, why]) => ({ class: section.split('\n')[0], id, why: why ?? '' })));
+    expect(told.map((one) => [one.class, one.id])).toEqual(DIES.map((part) => [part.class, part.id]));
+    for (const { id, why } of told) expect(why.split(' ').length, id).toBeGreaterThan(20);
+    expect(new Set(told.map(({ why }) => why)).size).toBe(told.length);
+  });
+
+  it('names the other packages of a die as the file has them', () => {
+    const told = table('Families').map(([id, name, channels, first]) => [id, name, Number(channels), first]);
+    const variants = parts.filter((part) => !DIES.includes(part));
+    expect(told).toEqual(variants.map((part) => [part.id, part.package, part.channels, part.family]));
+  });
+
+  it('counts rows, sets and classes', () => {
+    expect(readme).toContain(`holds ${parts.length} rows`);
+    expect(readme).toContain(`of ${DIES.length} amplifiers in ${new Set(parts.map((part) => part.class)).size} classes`);
+  });
+
+  it('names every relation the sets keep', () => {
+    expect(table('Relations every set keeps').map(([name]) => name)).toEqual(RELATIONS.map(({ name }) => name));
+  });
+
+  it('tells how far the short-circuit current stands above the usable one', () => {
+    const ratios = parts.flatMap((part) => from([central(part, 'shortCircuitCurrent'), stated(part, 'outputCurrent', 'min')], (short, usable) => short / usable));
+    const told = /\*Short-circuit current\* is ([\d.]+) to ([\d.]+) times/.exec(readme)?.slice(1).map(Number) ?? [];
+    expect([Math.floor(10 * Math.min(...ratios)) / 10, Math.ceil(10 * Math.max(...ratios)) / 10]).toEqual(told);
+  });
+
+  it('teaches by an example that is read as it says', () => {
+    const rows = table('Example').map(([, header, cell]) => ({ header: quoted(header)[0] ?? '', cell: cell ?? '' }));
+    expect(rows.length).toBeGreaterThan(12);
+    const line = (cells: readonly string[]): string => cells.map((cell) => `"${cell}"`).join(',');
+    const text = `${line(['id', ...rows.map(({ header }) => header)])}\n${line(['EXAMPLE', ...rows.map(({ cell }) => cell)])}\n`;
+    const example = readList(Buffer.from(text), { file: 'example.csv', tier: 'approved' });
+    if (!example.ok) throw new Error(example.problems.map(({ message }) => message).join('\n'));
+    expect(example.parts[0]?.figures).toHaveLength(rows.length);
   });
 
   it('tells the thermal resistance of each package as the file has it', () => {

@@ -72,6 +72,13 @@ describe('a list that is read', () => {
     expect(list.parts[0]?.figures.map(({ value }) => value)).toEqual([1.8, 5.5]);
   });
 
+  it('reads semicolons under canonical headers that hold commas', () => {
+    const header = 'id;description;supply voltage min (V);output low headroom max (mV) @ 10 kΩ, 5 V;output high headroom max (mV) @ 10 kΩ, 5 V';
+    const list = accepted(`${header}\nA;House part, dual-use;1,8;16;21\nB;"one; two";1,8;17;\n`);
+    expect(list).toMatchObject({ delimiter: ';', decimal: 'comma' });
+    expect(list.parts.map(({ description, figures: all }) => [description, all.map(({ value }) => value)])).toEqual([['House part, dual-use', [1.8, 0.016, 0.021]], ['one; two', [1.8, 0.017]]]);
+  });
+
   it('keeps unknown columns as text and lists each once', () => {
     const list = accepted('id,where used,pakage\nA,pump,SO-8\nB,fan,SO-8');
     expect(list.columns.map(({ reading }) => reading.kind)).toEqual(['identity', 'text', 'text']);
@@ -153,7 +160,9 @@ describe('a list that is refused', () => {
     ['a negative current', 'id,quiescent current max (µA)\nA,-5\n', 'I504'],
     ['a noise gain below 1', 'id,minimum stable gain max (V/V)\nA,0.5\n', 'I505'],
     ['no channel', 'id,channels\nA,0\n', 'I513'],
-    ['a fraction of a channel', 'id,channels\nA,1.5\n', 'Q013'],
+    ['a fraction of a channel', 'id,channels\nA,1.5\n', 'I513'],
+    ['more channels than a package holds', 'id,channels\nA,9\n', 'I513'],
+    ['a separator that cannot be told', 'id;a,b\nA;1;2\nB\n', 'I306'],
     ['min above typ', 'id,slew rate min (V/µs),slew rate typ (V/µs)\nA,2,1\n', 'I512'],
     ['typ above max', 'id,offset voltage typ (mV),offset voltage max (mV)\nA,2,1\n', 'I512'],
     ['lowest supply above the highest', 'id,supply voltage min (V),supply voltage max (V)\nA,5.5,1.8\n', 'I512'],
@@ -176,6 +185,35 @@ describe('a list that is refused', () => {
     expect(places(refused('id\nGX-1\n', options).problems)).toEqual(['I405 2 2 A']);
     expect(accepted('id,class\nA,cmos\n', options).warnings).toEqual([]);
     expect(accepted('id\nGX-1\n', { ...options, tier: 'generic' }).parts).toHaveLength(1);
+  });
+
+  it('when an approved part has the prefix of generic sets to come, in any case', () => {
+    const { problems } = refused('id\nGX-NEW\ngx-new-2\nAGX-1\n');
+    expect(places(problems)).toEqual(['I405 2 2 A', 'I405 3 3 A']);
+    expect(problems[0]?.message).toBe('GX-NEW: GX- is reserved for generic sets, also for those to come');
+  });
+
+  it('offers a unit that can be pasted for one that does not fit', () => {
+    const { problems } = refused('id,supply rejection min (dB),offset voltage max (mV),quiescent current max (µA),slew rate typ\nA,80 µV,2 mA,70 V,5 Hz\n');
+    expect(problems.map(({ code, fix }) => [code, fix])).toEqual([['Q004', '80 µV/V'], ['Q004', '2 mV'], ['Q004', '70 µA'], ['Q004', '5 V/µs']]);
+  });
+
+  it('quotes figures in the wrong order as they are written', () => {
+    const { problems } = refused('id,offset voltage typ (mV),offset voltage max (mV)\nA,3,1\nB,2,900 µV\n');
+    expect(problems.filter(({ code }) => code === 'I512').map(({ message }) => message)).toEqual([
+      'offset voltage: typ 3 mV (B2) is above max 1 mV (C2)',
+      'offset voltage: typ 2 mV (B3) is above max 900 µV (C3)',
+    ]);
+  });
+
+  it('quotes the cells in which two rows of one id differ', () => {
+    const { problems } = refused('id,description,package\nA,"low, slow",SO-8\nA,"fast, dear",SO-8\n');
+    expect(problems.map(({ message }) => message)).toEqual(['A is also in row 2 and differs in B ("low, slow", then "fast, dear")']);
+  });
+
+  it('offers what the channels may be', () => {
+    const { problems } = refused('id,channels\nA,0\nB,2.5\nC,3\n');
+    expect(problems.map(({ message, fix }) => [message, fix])).toEqual(['0', '2.5'].map((cell) => [`${cell} is not a number of amplifiers in one package`, '1, 2 or 4; empty if unknown']));
   });
 
   it('over a limit of size', () => {

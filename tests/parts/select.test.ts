@@ -37,6 +37,10 @@ describe('a figure on both readings', () => {
     expect(read('slewRate', [typ('slewRate', 9e6), min('slewRate', 1e6)])).toEqual([1e6, 1e6, 'guaranteed']);
   });
 
+  it('is the limit even where a typical one stands at the nominal supply', () => {
+    expect(read('slewRate', [typ('slewRate', 9e6, { supply: 5 }), min('slewRate', 1e6, { supply: 30 })])).toEqual([1e6, 1e6, 'assumed']);
+  });
+
   it('is missing when not printed', () => {
     expect(read('slewRate', [])).toEqual([undefined, undefined, undefined]);
   });

@@ -21,13 +21,13 @@ describe('what a stage asks', () => {
      supply peak          at least 4.5 V         supply peak 4.5 V; method [1]
      input range low      at most 25 mV          lowest common mode 25 mV; method [2]
      input range high     at most 2.67 V         common mode 330 mV on a supply of 3 V; method [2]
-     output low           at most 196 mV         lowest output 197 mV; method [3]
+     output low           at most 197 mV         lowest output 197 mV; method [3]
      output high          at most 313 mV         highest output 2.69 V, least room on a supply of 3 V;
                                                  method [3]
      output current       at least 297 µA        297 µA out of the output at the peak, feedback network
                                                  included; method [4]
-     slew rate            at least 15.7 mV/µs    1.242 V peak at 2 kHz; method [5]
-     gain bandwidth       at least 113 kHz       noise gain 8 V/V, magnitude error 1 % at 2 kHz;
+     slew rate            at least 15.6 mV/µs    1.242 V peak at 2 kHz; method [5]
+     gain bandwidth       at least 112 kHz       noise gain 8 V/V, magnitude error 1 % at 2 kHz;
                                                  method [6]
      minimum stable gain  at most 7.86 V/V       noise gain 7.86 V/V at its lower corner; method [7]
      DC error             at most 40 mV          DC error 40 mV allowed at the output, noise gain
@@ -84,7 +84,7 @@ describe('what a stage asks', () => {
         lowest common mode 25 mV; method [2]
      input range high at most 2.67 V
         common mode 330 mV on a supply of 3 V; method [2]
-     output low at most 196 mV
+     output low at most 197 mV
         lowest output 197 mV; method [3]
      output high at most 313 mV
         highest output 2.69 V, least room on a supply of 3 V;
@@ -92,9 +92,9 @@ describe('what a stage asks', () => {
      output current at least 297 uA
         297 uA out of the output at the peak, feedback network
         included; method [4]
-     slew rate at least 15.7 mV/us
+     slew rate at least 15.6 mV/us
         1.242 V peak at 2 kHz; method [5]
-     gain bandwidth at least 113 kHz
+     gain bandwidth at least 112 kHz
         noise gain 8 V/V, magnitude error 1 % at 2 kHz;
         method [6]
      minimum stable gain at most 7.86 V/V

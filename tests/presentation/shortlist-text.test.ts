@@ -27,7 +27,7 @@ describe('a shortlist with something that fits', () => {
 
      1 TEAM-0005 A
         350 kHz, zero-drift; tightest output
-        low; 171 mV spare; DC error at the
+        low; 172 mV spare; DC error at the
         output 966 uV; current 35 uA; price
         at 1000: 0.72 EUR; proof limits
      2 TEAM-0012 A
@@ -71,9 +71,11 @@ describe('a shortlist with something that fits', () => {
       DC error 1    supply current 1
       status 1
 
-    caution: TEAM-0012: 1 section of 2 idle:
-             each draws its quiescent
-             current and must be tied off
+    caution: TEAM-0012: 1 of 2 sections
+             idle: it draws 62 uA of the
+             124 uA of the package; an idle
+             section is tied off as a
+             follower inside its input range
     confirm: TEAM-0012, GX-LV-1M: these 3
              before release: offset drift
              (typical only); slew rate
@@ -110,7 +112,7 @@ describe('a shortlist with something that fits', () => {
 
      #  Part          Tightest check  worst case       Price
                                                      at 1000
-     1  TEAM-0005  A  output low      171 mV spare  0.72 EUR
+     1  TEAM-0005  A  output low      172 mV spare  0.72 EUR
         350 kHz, zero-drift; DC error at the output 966 µV;
         current 35 µA; proof limits
      2  TEAM-0012  A  supply current  31 % spare    0.34 EUR
@@ -141,8 +143,9 @@ describe('a shortlist with something that fits', () => {
       slew rate 1    gain bandwidth 1    DC error 1
       supply current 1    status 1
 
-    caution: TEAM-0012: 1 section of 2 idle: each draws its
-             quiescent current and must be tied off
+    caution: TEAM-0012: 1 of 2 sections idle: it draws 62 µA of
+             the 124 µA of the package; an idle section is tied
+             off as a follower inside its input range
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset
              drift (typical only); slew rate (15.7 mV/µs
              or more); gain bandwidth (113 kHz or more)
@@ -172,7 +175,7 @@ describe('a shortlist with something that fits', () => {
 
      #  Part          Tightest check  worst case     DC error  Current     Price
                                                     at output      max   at 1000
-     1  TEAM-0005  A  output low      171 mV spare     966 µV    35 µA  0.72 EUR
+     1  TEAM-0005  A  output low      172 mV spare     966 µV    35 µA  0.72 EUR
         350 kHz, zero-drift; proof limits
      2  TEAM-0012  A  supply current  31 % spare      8.61 mV    62 µA  0.34 EUR
         1 MHz, low offset; proof typical (3)
@@ -195,8 +198,9 @@ describe('a shortlist with something that fits', () => {
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
 
-    caution: TEAM-0012: 1 section of 2 idle: each draws its quiescent current and
-             must be tied off
+    caution: TEAM-0012: 1 of 2 sections idle: it draws 62 µA of the 124 µA of the
+             package; an idle section is tied off as a follower inside its input
+             range
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset drift (typical
              only); slew rate (15.7 mV/µs or more); gain bandwidth (113 kHz or more)
 
@@ -221,7 +225,7 @@ describe('a shortlist with something that fits', () => {
 
      #  Part          Tightest check  worst case     DC error  Current     Price  Proof
                                                     at output      max   at 1000
-     1  TEAM-0005  A  output low      171 mV spare     966 µV    35 µA  0.72 EUR  limits
+     1  TEAM-0005  A  output low      172 mV spare     966 µV    35 µA  0.72 EUR  limits
         350 kHz, zero-drift
      2  TEAM-0012  A  supply current  31 % spare      8.61 mV    62 µA  0.34 EUR  typical (3)
         1 MHz, low offset
@@ -242,7 +246,8 @@ describe('a shortlist with something that fits', () => {
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
 
-    caution: TEAM-0012: 1 section of 2 idle: each draws its quiescent current and must be tied off
+    caution: TEAM-0012: 1 of 2 sections idle: it draws 62 µA of the 124 µA of the package; an idle
+             section is tied off as a follower inside its input range
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset drift (typical only); slew rate
              (15.7 mV/µs or more); gain bandwidth (113 kHz or more)
 
@@ -267,7 +272,7 @@ describe('a shortlist with something that fits', () => {
 
      #  Part          Class                Tightest check  worst case     DC error  Current     Price  Proof
                                                                          at output      max   at 1000
-     1  TEAM-0005  A  350 kHz, zero-drift  output low      171 mV spare     966 µV    35 µA  0.72 EUR  limits
+     1  TEAM-0005  A  350 kHz, zero-drift  output low      172 mV spare     966 µV    35 µA  0.72 EUR  limits
      2  TEAM-0012  A  1 MHz, low offset    supply current  31 % spare      8.61 mV    62 µA  0.34 EUR  typical (3)
      3  GX-LV-1M   G  1 MHz, 2 mV offset   supply current  16 % spare      24.8 mV    75 µA  0.21 EUR  typical (3)
      ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
@@ -285,11 +290,11 @@ describe('a shortlist with something that fits', () => {
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
 
     Do not fit:
-      TEAM-0001 (A) DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted
-          approved
-      TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
+      TEAM-0001 (A) DC error over by 7.7 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted approved
+      TEAM-0007 (A) slew rate short by 11.6 mV/µs (75 %); gain bandwidth short by 102 kHz (92 %)
 
-    caution: TEAM-0012: 1 section of 2 idle: each draws its quiescent current and must be tied off
+    caution: TEAM-0012: 1 of 2 sections idle: it draws 62 µA of the 124 µA of the package; an idle section is tied off as a
+             follower inside its input range
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset drift (typical only); slew rate (15.7 mV/µs or more); gain
              bandwidth (113 kHz or more)
 
@@ -312,7 +317,7 @@ describe('a shortlist with something that fits', () => {
 
      #  Part          Class                Tightest check  worst case     DC error  Current     Price  Proof
                                                                          at output      max   at 1000
-     1  TEAM-0005  A  350 kHz, zero-drift  output low      171 mV spare     966 µV    35 µA  0.72 EUR  limits
+     1  TEAM-0005  A  350 kHz, zero-drift  output low      172 mV spare     966 µV    35 µA  0.72 EUR  limits
      2  TEAM-0012  A  1 MHz, low offset    supply current  31 % spare      8.61 mV    62 µA  0.34 EUR  typical (3)
      3  GX-LV-1M   G  1 MHz, 2 mV offset   supply current  16 % spare      24.8 mV    75 µA  0.21 EUR  typical (3)
      ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less
@@ -326,7 +331,7 @@ describe('a shortlist with something that fits', () => {
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
 
-    caution: TEAM-0012: 1 section of 2 idle: each draws its quiescent current and must be tied off
+    caution: TEAM-0012: 1 of 2 sections idle: it draws 62 µA of the 124 µA of the package; an idle section is tied off as a follower inside its input range
     confirm: TEAM-0012, GX-LV-1M: these 3 before release: offset drift (typical only); slew rate (15.7 mV/µs or more); gain bandwidth (113 kHz or more)
 
     Assumed stability: the part's own compensation is assumed to hold
@@ -344,6 +349,13 @@ describe('a shortlist with something that fits', () => {
         " [33m?[39m  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: fits if 80.5 µV/°C or less",
       ]
     `);
+  });
+  it('lists what to confirm for the first three only', () => {
+    const [typical] = SAMPLE_PARTS.filter((part) => part.id === 'TEAM-0012');
+    const parts = [1, 2, 3, 4, 5].flatMap((number) => (typical === undefined ? [] : [{ ...typical, id: `SAME-${number}` }]));
+    const text = renderShortlist(sampleReport({}, parts), styleOf(200), CONTEXT);
+    expect(text).toContain('confirm: SAME-1, SAME-2, SAME-3: these 3 before release');
+    expect(text).toContain('confirm: 2 more parts have figures to confirm; "railfit explain PART" lists them');
   });
   it('cut to one line says how many more there are, and the counts stay complete', () => {
     const text = shown(100, { top: 1 });
@@ -370,7 +382,7 @@ describe('a shortlist where nothing fits', () => {
 
       Nearest to fitting:
         TEAM-0005 (A) supply current over by 34.5 µA (69 times)
-        TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %); supply
+        TEAM-0007 (A) slew rate short by 11.6 mV/µs (75 %); gain bandwidth short by 102 kHz (92 %); supply
             current over by 500 nA (100 %)
         TEAM-0012 (A) supply current over by 61.5 µA (130 times)
 
@@ -403,8 +415,8 @@ describe('a shortlist where nothing fits', () => {
 
       Nearest to fitting:
         TEAM-0005 (A) output low short by 25.2 mV
-        TEAM-0012 (A) output low short by 29.9 mV
-        TEAM-0031 (A) output low short by 33.2 mV
+        TEAM-0012 (A) output low short by 29.8 mV
+        TEAM-0031 (A) output low short by 33.1 mV
 
       Why all 6 are out (one part can fail several checks):
         output low 6    slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -413,7 +425,7 @@ describe('a shortlist where nothing fits', () => {
       Data    catalog of 6 parts (5 approved, 1 generic, sha256 9f2c1e40), rules 1
 
       Next    railfit shortlist probe.yaml --set limits.swingLoss=26mV
-              railfit explain TEAM-0005 probe.yaml    the nearest that is out
+              railfit explain TEAM-0005 probe.yaml                     the nearest that is out
               railfit parts --failing output-low --stage probe.yaml    all that fail on output low
       "
     `);
@@ -432,7 +444,7 @@ describe('a shortlist where nothing fits', () => {
       "
       No part is proven to fit; 4 of 6 parts cannot be decided. The others fail slew rate (1), gain
       bandwidth (1), DC error (1), supply current (1) and 1 more check. Nearest is TEAM-0001 (A): DC error
-      over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted approved.
+      over by 7.7 mV (20 %); supply current over by 8 µA (8.9 %); status conditional, wanted approved.
       0 of 6 parts fit, 4 cannot be decided, 2 do not fit.
 
       Stage   Soil-moisture probe
@@ -452,9 +464,9 @@ describe('a shortlist where nothing fits', () => {
        decided
 
       Nearest to fitting:
-        TEAM-0001 (A) DC error over by 7.72 mV (20 %); supply current over by 8 µA (8.9 %); status
+        TEAM-0001 (A) DC error over by 7.7 mV (20 %); supply current over by 8 µA (8.9 %); status
             conditional, wanted approved
-        TEAM-0007 (A) slew rate short by 11.7 mV/µs (75 %); gain bandwidth short by 103 kHz (92 %)
+        TEAM-0007 (A) slew rate short by 11.6 mV/µs (75 %); gain bandwidth short by 102 kHz (92 %)
 
       Why the other 2 are out (one part can fail several checks):
         slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { GLUE } from '../../src/presentation/spelling.js';
-import { comparisonText, cornerText, shortfall, spareText, turningText } from '../../src/presentation/verdict-words.js';
+import { beyondText, comparisonText, cornerText, shortfall, spareText, turningText, unknownText } from '../../src/presentation/verdict-words.js';
 import type { Verdict } from '../../src/verdicts/verdict.js';
 
 const BLANK: Verdict = {
@@ -41,7 +41,7 @@ describe('by how much a failing check misses', () => {
   ] as const)('%j', (more, expected) => { expect(plain(shortfall(verdict({ outcome: 'fail', ...more })))).toBe(expected); });
 
   it('never prints a fail as met', () => {
-    expect(plain(comparisonText(verdict({ outcome: 'fail', offered: 0.0200001, spare: -1e-7 })))).toBe('20.1 mV, allowed 20 mV');
+    expect(plain(comparisonText(verdict({ outcome: 'fail', offered: 0.0200001, spare: -1e-7 })))).toBe('20.0001 mV, allowed 20 mV');
   });
 });
 
@@ -54,7 +54,30 @@ describe('where a verdict turns', () => {
   ] as const)('%j', (point, expected) => { expect(plain(turningText(point))).toBe(expected); });
 });
 
+it('a head-room turns at its current and supply', () => {
+  const point = { figure: 'outputLowHeadroom', kind: 'max', value: 0.2999, unit: 'V', condition: { current: 1.4505e-3, supply: 3.2 } } as const;
+  expect(plain(turningText(point))).toBe('299 mV or less at 1.45 mA, 3.2 V');
+});
+
+it('a reason that two checks share is said once', () => {
+  const open = (check: string, figure: 'outputLowHeadroom' | 'outputHighHeadroom', value: number): Verdict =>
+    verdict({ check, outcome: 'unknown', reason: 'beyond-data', decidesAt: { figure, kind: 'max', value, unit: 'V' } });
+  const both = [open('output-low', 'outputLowHeadroom', 0.3), open('output-high', 'outputHighHeadroom', 0.4)];
+  expect(plain(unknownText(both))).toBe(
+    'output low and output high: the current lies beyond what the figures cover; pass if output head-room to V- is 300 mV or less and output head-room to V+ is 400 mV or less',
+  );
+});
+
+it('how far the points reach, and what flows', () => {
+  expect(plain(beyondText({ covers: 248e-6, current: 463e-6, supply: 5 }, 'approved'))).toBe('the list covers up to 248 µA (1.5 × = 372 µA); 463 µA flows here');
+});
+
+it('what is met but for rounding reads equal', () => {
+  expect(plain(comparisonText(verdict({ offered: 0.02 * (1 + 1e-12), spare: 0 })))).toBe('20 mV, allowed 20 mV');
+});
+
 it('a corner in words', () => {
+  expect(plain(cornerText({ supply: 4.2, temperature: -20, currentTemperature: 60 }))).toBe('at 4.2 V supply, offset at -20 °C, currents at 60 °C');
   expect(plain(cornerText({ supply: 4.2, reference: 0, input: 0.33, temperature: -20, load: 3e-4 }))).toBe('at 4.2 V supply, 330 mV input, -20 °C, 300 µA sourced');
   expect(plain(cornerText({ supply: 5, reference: 2.5, positive: 1, negative: 2, load: -1e-3 }))).toBe('at 5 V supply, 2.5 V reference, 1 V at the + input, 2 V at the - input, 1 mA sunk');
   expect(cornerText({})).toBe('');

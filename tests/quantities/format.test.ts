@@ -30,7 +30,7 @@ describe('formatQuantity', () => {
     [120, 'K/W', '120 K/W'],
     [2, '1', '2'],
     [5, '%', '5 %'],
-    [45, '°', '45 °'],
+    [45, '°', '45°'],
     [0.42, 'EUR', '0.42 EUR'],
     [0.5, 'Vpk', '500 mVpk'],
   ])('%d %s is %s', (value, unit, text) => expect(formatQuantity(value, unit)).toBe(text));

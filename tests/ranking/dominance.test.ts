@@ -1,8 +1,15 @@
 import { describe, expect, it } from 'vitest';
-import { dominatorOf } from '../../src/ranking/dominance.js';
+import { dominatorsOf } from '../../src/ranking/dominance.js';
+import type { JudgedPart } from '../../src/screening/index.js';
 import { fitting, passing } from '../support/fitting.js';
 
 const with_ = (margin: number): { verdicts: ReturnType<typeof passing>[] } => ({ verdicts: [passing('slew-rate', margin)] });
+
+/** The part that dominates `one` in a list; `one` is put in front when it is not in it. */
+function dominatorOf(one: JudgedPart, list: readonly JudgedPart[]): JudgedPart | null {
+  const all = list.includes(one) ? list : [one, ...list];
+  return dominatorsOf(all)[all.indexOf(one)] ?? null;
+}
 
 describe('dominance', () => {
   const plain = fitting('PLAIN', { price: 0.5, current: 50e-6, ...with_(2) });

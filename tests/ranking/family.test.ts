@@ -34,7 +34,7 @@ describe('a family', () => {
 
   it('tells its members on the line', () => {
     const text = renderShortlist(report, styleOf(100), CONTEXT);
-    expect(text).toContain('4 of 4 parts fit (2 lines: variants of one die stand together)');
+    expect(text).toContain('4 of 4 parts fit, on 2 lines (packages of one die share a line)');
     expect(text.replaceAll(/\s+/gu, ' ')).toContain('same die: DIE-2 VSSOP-8 dual, DIE-4 TSSOP-14 quad');
   });
 

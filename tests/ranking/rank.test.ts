@@ -1,8 +1,11 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { ORDERS, rank } from '../../src/ranking/index.js';
 import type { JudgedPart } from '../../src/screening/index.js';
 import { fitting, passing } from '../support/fitting.js';
+
+// Many cases a test: slow on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 const order = (...parts: JudgedPart[]): string[] => rank(parts).map(({ part }) => part.id);
 const confirmation = { figure: 'slewRate', slot: null, basis: 'derated', how: null, checks: ['slew-rate'], needed: null } as const;

@@ -26,11 +26,13 @@ function judged(name: string, overrides: readonly Override[] = []): Report {
   return shortlist(built.stage, source);
 }
 
+/** The first of each line: package and channel variants of one die stand behind it. */
 const fitting = (report: Report): string[] => report.fit.map(({ part }) => part.id).sort();
 
 /** Ids and outcomes of the checks a set does not pass. */
 function failing(report: Report, id: string): string[] {
-  const found = [...report.fit, ...report.undecided, ...report.rejected].find(({ part }) => part.id === id);
+  const fits = report.fit.flatMap((line) => [line, ...line.variants]);
+  const found = [...fits, ...report.undecided, ...report.rejected].find(({ part }) => part.id === id);
   if (found === undefined) throw new Error(`${id} was not judged`);
   return found.verdicts.filter(({ outcome }) => outcome !== 'pass').map(({ check, outcome }) => `${check} ${outcome}`);
 }
@@ -56,15 +58,33 @@ describe('catalog/stages', () => {
 
 describe('soil-moisture-probe', () => {
   const report = judged('soil-moisture-probe');
-  it('is for three sets', () => expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-1M-GS', 'GX-ZD-MICRO']));
-  it('parts the two 1 MHz sets by DC error alone', () => expect(failing(report, 'GX-CMOS-1M-RRIO')).toEqual(['dc-error fail']));
+  it('is for six sets', () => {
+    expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-1M-GS-S', 'GX-CMOS-1M-RRIO-FINE', 'GX-CMOS-MICRO-FINE', 'GX-ZD-MICRO', 'GX-ZD-MICRO-FINE']);
+  });
+  it('shows a die once, with its other packages behind it', () => {
+    const variants = report.fit.map(({ part, variants: others }) => [part.id, ...others.map((one) => one.part.id)]).filter((line) => line.length > 1);
+    expect(variants).toEqual([['GX-CMOS-1M-GS-S', 'GX-CMOS-1M-GS'], ['GX-ZD-MICRO', 'GX-ZD-MICRO-D']]);
+  });
+  it('parts the two plain 1 MHz sets by DC error alone', () => expect(failing(report, 'GX-CMOS-1M-RRIO')).toEqual(['dc-error fail']));
+  it('misses by little with two of the finer ones', () => {
+    expect(failing(report, 'GX-BIP-MICRO-FINE')).toEqual(['supply-current fail']);
+    expect(failing(report, 'GX-ZD-MICRO-ECO')).toEqual(['gain-bandwidth fail']);
+  });
   it('is too fast for the micropower CMOS set', () => expect(failing(report, 'GX-CMOS-MICRO')).toContain('gain-bandwidth fail'));
 });
 
 describe('thermistor-bridge', () => {
   const report = judged('thermistor-bridge');
-  it('is for five sets with inputs to both rails', () => {
-    expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-10M-RRIO', 'GX-CMOS-MICRO', 'GX-HV-BIP-RRIO', 'GX-ZD-MICRO']);
+  it('is for fourteen sets, all with inputs to both rails', () => {
+    expect(fitting(report)).toEqual([
+      'GX-BIP-MICRO', 'GX-BIP-MICRO-FINE', 'GX-CMOS-10M-RRIO', 'GX-CMOS-1M-RRIO-FINE', 'GX-CMOS-4M-NX', 'GX-CMOS-MICRO-FINE', 'GX-CMOS-MICRO-S',
+      'GX-HV-BIP-RRIO', 'GX-HV-BIP-RRIO-FINE', 'GX-NANO-FINE', 'GX-ZD-FAST-ECO', 'GX-ZD-MICRO', 'GX-ZD-MICRO-ECO', 'GX-ZD-MICRO-FINE',
+    ]);
+  });
+  it('takes the inputs through the crossover of every set that has one and fits', () => {
+    const told = report.fit.filter(({ hazards }) => hazards.some(({ kind }) => kind === 'crossover')).map(({ part }) => part.id).sort();
+    expect(told).toEqual(report.fit.filter(({ part }) => part.figures.some(({ parameter }) => parameter === 'inputCrossover')).map(({ part }) => part.id).sort());
+    expect(told).toHaveLength(9);
   });
   it('leaves no room for inputs that stop 1 V short of V+', () => {
     for (const part of list.parts) {
@@ -83,17 +103,28 @@ describe('thermistor-bridge', () => {
 
 describe('vent-motor-control', () => {
   const report = judged('vent-motor-control');
-  it('is for three sets with their swing rated at 10 mA or more', () => {
-    expect(fitting(report)).toEqual(['GX-BIP-LN', 'GX-CMOS-50M', 'GX-DRIVE']);
+  it('is for eleven sets with their swing rated at 10 mA or more', () => {
+    expect(fitting(report)).toEqual([
+      'GX-BIP-200M-FINE', 'GX-BIP-LN', 'GX-CMOS-10M-RRIO-FINE', 'GX-CMOS-20M-NX-FINE', 'GX-CMOS-30M', 'GX-CMOS-50M', 'GX-CMOS-LN-QUIET', 'GX-CMOS-TRIM-FINE',
+      'GX-DRIVE', 'GX-DRIVE-ECO', 'GX-ZD-FAST-FINE',
+    ]);
+    for (const { part } of report.fit) {
+      const heaviest = Math.max(...part.figures.flatMap(({ parameter, condition: { load } }) => (parameter === 'outputLowHeadroom' && load?.kind === 'current' ? [load.amperes] : [])));
+      expect(heaviest, part.id).toBeGreaterThanOrEqual(10e-3);
+    }
   });
   it('cannot decide sets whose swing is printed at a third of the current', () => {
     for (const id of ['GX-CMOS-10M-RRIO', 'GX-CMOS-20M-NX', 'GX-CMOS-TRIM', 'GX-ZD-FAST']) {
       expect(failing(report, id), id).toEqual(['output-low unknown', 'output-high unknown']);
     }
   });
-  it('makes the decompensated set unstable', () => expect(failing(report, 'GX-CMOS-DEC')).toContain('stable-gain fail'));
+  it('makes the decompensated sets unstable, the one for a noise gain of 3 by the tolerance of the resistors', () => {
+    for (const id of ['GX-CMOS-DEC', 'GX-CMOS-DEC-3', 'GX-CMOS-DEC-10']) expect(failing(report, id), id).toContain('stable-gain fail');
+  });
   it('loses the ground-sensing bipolar set at both rails', () => {
     expect(failing(report, 'GX-BIP-GS')).toEqual(expect.arrayContaining(['output-low fail', 'output-high fail']));
+    const found = report.rejected.find(({ part }) => part.id === 'GX-BIP-GS');
+    expect(found?.hazards).toEqual([{ kind: 'phase-reversal' }, { kind: 'sink-limit', current: 30e-6, within: 0.02, beyond: 0.9 }]);
   });
   it('fails the fast bipolar set on bias current, until the resistors are halved', () => {
     expect(failing(report, 'GX-BIP-200M')).toEqual(['dc-error fail']);
@@ -104,7 +135,10 @@ describe('vent-motor-control', () => {
 
 describe('reference-buffer', () => {
   const report = judged('reference-buffer');
-  it('is for three micropower sets', () => expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-CMOS-MICRO', 'GX-ZD-MICRO']));
+  it('is for seven sets, one of them on limits alone', () => {
+    expect(fitting(report)).toEqual(['GX-BIP-MICRO', 'GX-BIP-MICRO-FINE', 'GX-CMOS-1M-RRIO-FINE', 'GX-CMOS-MICRO-FINE', 'GX-CMOS-MICRO-S', 'GX-ZD-MICRO', 'GX-ZD-MICRO-FINE']);
+    expect(report.fit.filter(({ proof }) => proof === 'limits').map(({ part }) => part.id)).toEqual(['GX-BIP-MICRO-FINE']);
+  });
   it('needs inputs nearer to V+ than ground-sensing ones', () => {
     for (const id of ['GX-CMOS-1M-GS', 'GX-ELECTRO']) expect(failing(report, id), id).toEqual(['input-high fail']);
   });
@@ -116,8 +150,14 @@ describe('reference-buffer', () => {
 
 describe('vent-vibration-pickup', () => {
   const report = judged('vent-vibration-pickup');
-  it('is for four sets', () => expect(fitting(report)).toEqual(['GX-CMOS-10M-RRIO', 'GX-CMOS-TRIM', 'GX-ELECTRO', 'GX-HV-BIP-RRIO']));
-  it('cannot decide the 1 MHz sets on a typical bandwidth', () => {
+  it('is for eleven sets', () => {
+    expect(fitting(report)).toEqual([
+      'GX-CMOS-10M-RRIO', 'GX-CMOS-10M-RRIO-A1', 'GX-CMOS-1M-GS-FINE', 'GX-CMOS-1M-RRIO-FINE', 'GX-CMOS-4M-NX', 'GX-CMOS-TRIM', 'GX-CMOS-TRIM-ECO', 'GX-ELECTRO',
+      'GX-HV-BIP-RRIO', 'GX-HV-BIP-RRIO-FINE', 'GX-ZD-FAST-ECO',
+    ]);
+  });
+  it('cannot decide the plain 1 MHz sets on a typical bandwidth, and rejects those whose tested one is too low', () => {
     for (const id of ['GX-CMOS-1M-RRIO', 'GX-CMOS-1M-GS']) expect(failing(report, id), id).toEqual(['gain-bandwidth unknown']);
+    for (const id of ['GX-CMOS-1M-RRIO-A1', 'GX-CMOS-1M-RRIO-A0']) expect(failing(report, id), id).toEqual(['gain-bandwidth fail']);
   });
 });

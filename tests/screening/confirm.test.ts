@@ -15,6 +15,12 @@ describe('figures to confirm before release', () => {
     ]);
   });
 
+  it('are not what is asked to be nothing', () => {
+    const weak = { basis: 'derated', slot: 'slewRate.typ', unit: 'V/s', sense: 'at-least', turnsAt: { ...turnsAt, value: 0 } } as const;
+    expect(confirmations([passing('slew-rate', 2, weak)])).toEqual([]);
+    expect(confirmations([passing('slew-rate', 2, { ...weak, turnsAt })])).toHaveLength(1);
+  });
+
   it('are the weak terms of a sum, guaranteed ones apart', () => {
     const term = (name: string, basis: 'guaranteed' | 'derated' | 'borrowed', slot: string | null): object => ({ name, basis, slot, value: 1, figure: null, how: null });
     const terms = [term('offset', 'guaranteed', 'offsetVoltage.max'), term('offset drift', 'derated', 'offsetDrift.typ'), term('common mode', 'borrowed', null)] as never;

@@ -137,7 +137,7 @@ describe('fields and words', () => {
         --> stage.yaml:1:11
          transimpedance
          ^^^^^^^^^^^^^^
-         fix: non-inverting
+         fix: none yet for this circuit; railfit help stage lists what is built
       "
     `);
   });

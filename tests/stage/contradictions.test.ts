@@ -1,4 +1,7 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { readStage } from '../../src/spec/read.js';
+import { buildStage } from '../../src/stage/index.js';
 import { between, contradictionCodes, dc, midSupply, resistors, stageOf, stageSpec, value, voltage } from '../support/stages.js';
 
 const TIMES_8 = { resistors: resistors(70e3, 10e3) };
@@ -40,5 +43,59 @@ describe('contradictions of a stage', () => {
 
   it('reports all at once', () => {
     expect(contradictionCodes(stageSpec('inverting', dc(0, 5), { ...TIMES_8, reference: midSupply(), supplyPeak: value(4) }))).toEqual(['S201', 'S206']);
+  });
+});
+
+/** Problems of a stage file: what reading or building it refuses. */
+function problemsOf(lines: readonly string[]): readonly { readonly code: string; readonly fix?: string }[] {
+  const read = readStage(lines.join('\n'));
+  if (!read.ok) return read.problems;
+  const built = buildStage(read.spec);
+  return built.ok ? [] : built.problems;
+}
+
+/** The file with the lines of a fix in place of its own; null when the fix is a sentence. */
+function pasted(lines: readonly string[], fix: string): readonly string[] | null {
+  const match = /^write (.*)$/u.exec(fix);
+  if (match?.[1] === undefined) return null;
+  const wanted = match[1].split(/ and (?=reference:)/u);
+  return [...lines.filter((line) => !wanted.some((one) => one.split(':')[0] === line.split(':')[0])), ...wanted];
+}
+
+const BEYOND = ['S201', 'S204'];
+const beyond = (lines: readonly string[]) => problemsOf(lines).find(({ code }) => BEYOND.includes(code));
+
+describe('the fix of an output beyond the supply', () => {
+  it('takes the contradiction away when it is pasted, for any stage', () => {
+    let offered = 0;
+    const levels = fc.integer({ min: -500, max: 2000 });
+    fc.assert(
+      fc.property(fc.constantFrom('inverting', 'non-inverting'), fc.integer({ min: 2, max: 30 }), levels, levels, fc.constantFrom('', 'mid-supply', '0.4 V', '6 V', '{value: 4 V, tolerance: 2 %, resistance: 1 kΩ}'), (topology, gain, a, b, reference) => {
+        fc.pre(a !== b);
+        const input = `${Math.min(a, b)} mV..${Math.max(a, b)} mV`;
+        const lines = [`topology: ${topology}`, 'supply: 5 V', `gain: ${topology === 'inverting' ? '-' : ''}${gain}`, `signal: {input: ${input}}`, ...(reference === '' ? [] : [`reference: ${reference}`])];
+        const found = beyond(lines);
+        const fixed = found === undefined ? null : pasted(lines, found.fix ?? '');
+        if (fixed === null) return;
+        offered += 1;
+        expect(problemsOf(fixed).map(({ code }) => code), fixed.join('\n')).toEqual([]);
+      }),
+      { seed: 7, numRuns: 300 },
+    );
+    expect(offered).toBeGreaterThan(100);
+  });
+
+  it('is the reference that centres the output where mid-supply would not do', () => {
+    expect(beyond(['topology: inverting', 'supply: 5 V', 'gain: -2', 'signal: {input: 0.1..0.8 V}'])?.fix).toBe('write reference: 1.13 V');
+  });
+
+  it('is a sentence where neither reference nor gain does it', () => {
+    expect(beyond(['topology: non-inverting', 'supply: 5 V', 'gain: 10', 'signal: {input: -0.1..0.3 V}'])?.fix).toMatch(/^no reference within the supply and no lower gain/u);
+  });
+
+  it('comes with the reference that no supply gives named as such', () => {
+    const lines = ['topology: inverting', 'supply: 5 V', 'gain: -2', 'reference: 6 V', 'signal: {input: 1..7 V}'];
+    expect(problemsOf(lines).map(({ code }) => code)).toEqual(['S201', 'S207']);
+    expect(problemsOf(['temperature: -300..400 °C', ...lines]).map(({ code }) => code)).toContain('S207');
   });
 });

@@ -1,7 +1,10 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { E96 } from '../../src/quantities/e-series.js';
 import { choosePair } from '../../src/stage/resistors.js';
+
+// Many cases a test: slow on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 const sum = (feedback: number, input: number): number => feedback + input;
 const feedbackOnly = (feedback: number): number => feedback;

@@ -58,8 +58,8 @@ export function makeWorkplace(): Workplace {
 
 /** Nothing of the shell the tests run in: no colour, terminal, locale or catalog variable but those named. */
 function environment(folder: string, more: Readonly<Record<string, string | undefined>>): NodeJS.ProcessEnv {
-  const all = { PATH: process.env['PATH'], HOME: join(folder, 'home'), TMPDIR: folder, LANG: 'C.UTF-8', ...more };
-  return Object.fromEntries(Object.entries(all).filter(([, value]) => value !== undefined)) as NodeJS.ProcessEnv;
+  const all: NodeJS.ProcessEnv = { PATH: process.env['PATH'], HOME: join(folder, 'home'), TMPDIR: folder, LANG: 'C.UTF-8', ...more };
+  return Object.fromEntries(Object.entries(all).filter(([, value]) => value !== undefined));
 }
 
 /** Waits for a command that was started, with all it writes. */
