@@ -298,7 +298,8 @@ describe('relaxation oscillator', () => {
       const limits = { high: threshold(of('Vcc_V'), levels.high), low: threshold(of('Vcc_V'), levels.low) };
       const step = 1e-5;
       let state: 'high' | 'low' = 'high';
-      let [charge, time, marks] = [limits.low, 0, [] as number[]];
+      const marks: number[] = [];
+      let [charge, time] = [limits.low, 0];
       while (marks.length < 5) {
         const middle = charge + (step / 2) * (levels[state] - charge);
         charge += step * (levels[state] - middle);
