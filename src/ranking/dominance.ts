@@ -1,3 +1,4 @@
+import { isAhead } from '../formulas/dominance.js';
 import type { JudgedPart } from '../screening/index.js';
 import { comfortOf } from './comfort.js';
 import { priceInEuro } from './merit.js';
@@ -20,14 +21,5 @@ function scoresOf(judged: JudgedPart): readonly number[] | null {
   return [tier, proof, -price, -judged.current, ...judged.verdicts.map((verdict) => comfortOf(verdict) ?? 1)];
 }
 
-/** As in `formulas/dominance.ts`, without its checks of every score: this runs once per pair of parts. */
-function dominates(theirs: readonly number[] | null, mine: readonly number[] | null): boolean {
-  if (theirs === null || mine?.length !== theirs.length) return false;
-  let better = false;
-  for (const [at, score] of theirs.entries()) {
-    const other = mine[at] ?? score;
-    if (score < other) return false;
-    if (score > other) better = true;
-  }
-  return better;
-}
+const dominates = (theirs: readonly number[] | null, mine: readonly number[] | null): boolean =>
+  theirs !== null && mine?.length === theirs.length && isAhead(theirs, mine);

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { dominates, undominated } from '../../src/formulas/dominance.js';
+import { dominates, isAhead, undominated } from '../../src/formulas/dominance.js';
 import { refuses } from '../support/examples.js';
 
 describe('dominance', () => {
@@ -7,6 +7,11 @@ describe('dominance', () => {
     expect(dominates([2, 1], [1, 1])).toBe(true);
     expect(dominates([2, 0], [1, 1])).toBe(false);
     expect(dominates([1, 1], [1, 1])).toBe(false);
+  });
+  it('compares alone for lists known to be sound', () => {
+    expect(isAhead([2, 1], [1, 1])).toBe(true);
+    expect(isAhead([1, 1], [1, 1])).toBe(false);
+    expect(isAhead([2, 0], [1, 1])).toBe(false);
   });
   it('leaves what nothing dominates, twins included', () => {
     expect(undominated([[2, 1], [1, 1], [1, 2], [1, 2]])).toEqual([0, 2, 3]);
