@@ -9,7 +9,7 @@ import type { BoundFinding, Finding, Term } from '../verdicts/finding.js';
 import type { Check } from './check.js';
 import { commonModeTerm, currentTerms, driftTerm, offsetTerm, outputTerm, supplyTerm, type ErrorTerm } from './dc-error-terms.js';
 
-/** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (method.md 5). */
+/** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (M5). */
 export const dcError: Check<DcErrorDemand> = {
   id: 'dc-error',
   title: 'DC error',

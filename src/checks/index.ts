@@ -1,16 +1,22 @@
 import { channels } from './channels.js';
 import { seal, type AnyCheck } from './check.js';
 import { dcError } from './dc-error.js';
+import { distortion } from './distortion.js';
+import { frequencyError } from './frequency-error.js';
 import { gainBandwidth } from './gain-bandwidth.js';
 import { inputHigh } from './input-high.js';
 import { inputLow } from './input-low.js';
+import { junctionTemperature } from './junction-temperature.js';
 import { lifecycle } from './lifecycle.js';
+import { noise } from './noise.js';
 import { outputCurrent } from './output-current.js';
 import { outputHigh } from './output-high.js';
 import { outputLow } from './output-low.js';
 import { packageWish } from './package.js';
+import { phaseMargin } from './phase-margin.js';
 import { price } from './price.js';
 import { qualification } from './qualification.js';
+import { settling } from './settling.js';
 import { slewRate } from './slew-rate.js';
 import { stableGain } from './stable-gain.js';
 import { status } from './status.js';
@@ -34,10 +40,16 @@ export const CHECKS: readonly AnyCheck[] = [
   seal(slewRate),
   seal(gainBandwidth),
   seal(stableGain),
+  seal(phaseMargin),
+  seal(noise),
+  seal(distortion),
   seal(dcError),
+  seal(settling),
+  seal(frequencyError),
   seal(supplyCurrent),
   seal(temperatureLow),
   seal(temperatureHigh),
+  seal(junctionTemperature),
   seal(channels),
   seal(packageWish),
   seal(qualification),

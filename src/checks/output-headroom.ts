@@ -7,8 +7,11 @@ import { meets } from '../verdicts/compare.js';
 import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
-/** Head-room needed at every vertex: the part's curve at the current flowing there, plus the offset's share (method.md 1 and 6). */
-export function judgeHeadroom(asked: HeadroomDemand, side: Side, readings: Readings): VertexFindings {
+/** Vertices with their room, and what the offset is multiplied by. */
+export type HeadroomVertices = Pick<HeadroomDemand, 'vertices' | 'noiseGain' | 'kelvin'>;
+
+/** Head-room needed at every vertex: the part's curve at the current flowing there, plus the offset's share (M1 and M6). */
+export function judgeHeadroom(asked: HeadroomVertices, side: Side, readings: Readings): VertexFindings {
   const curve = readings.headroom(side);
   const share = offsetShare(asked, readings);
   return {
@@ -25,7 +28,7 @@ interface Share {
   caution(spare: number): string | null;
 }
 
-function offsetShare(asked: HeadroomDemand, readings: Readings): Share {
+function offsetShare(asked: HeadroomVertices, readings: Readings): Share {
   const { noiseGain, kelvin } = asked;
   const offset = readings.offset();
   const perKelvin = offset?.overTemperature === true || kelvin === 0 ? null : readings.figure('offsetDrift');

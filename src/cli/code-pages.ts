@@ -46,6 +46,9 @@ const CONTRADICTIONS: readonly CodePage[] = [
   page('S207', 'reference outside the supply', 'What a single supply gives lies between ground and that supply.', ['supply: 5 V, reference: 6 V', 'reference: mid-supply']),
   page('S208', 'gain not given', 'Gain, resistors or the wanted output must say it.', ['topology: inverting, nothing else', 'gain: 8']),
   page('S209', 'no resistors for this gain', 'No pair of E96 values with a reasonable feedback path gives it.', ['gain: 1000000', 'resistors: {feedback: 1 MΩ, input: 1 Ω}']),
+  page('S210', 'components and frequency disagree', 'Timing or filter components written beside the frequency, corner or Q must give it within their tolerances, and a frequency must be one that preferred values can give.', ['oscillator: {frequency: 2 kHz, resistance: 100 kΩ, capacitance: 1 nF}', 'oscillator: {frequency: 2 kHz, capacitance: 1 nF}']),
+  page('S211', 'no such filter', 'The filter is not said, oscillates with its components or at the ends of their tolerances, has a gain its circuit cannot have, or no preferred values give it.', ['filter: {corner: 10 MHz, q: 20}', 'filter: {corner: 10 kHz, q: 0.707}']),
+  page('S212', 'nothing bounds the integrator', 'What is added up without an end runs into a rail: a reset, a lowest frequency or a resistor across the capacitor bounds it.', ['integrator: {resistance: 100 kΩ, capacitance: 100 nF}', 'integrator: {resistance: 100 kΩ, capacitance: 100 nF, window: 20 ms}']),
 ];
 
 const COMMANDS: readonly CodePage[] = [

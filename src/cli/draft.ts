@@ -27,10 +27,10 @@ interface Wanted {
   readonly coupling: StageSpec['signal']['coupling'];
 }
 
-/** Refused by the reader of stage files, in its words: unknown and unbuilt topologies, and AC coupling where there is none. */
+/** Refused by the reader of stage files, in its words: unknown topologies, and AC coupling where there is none. */
 export function wantedOf(word: string, { ac, output, force }: DraftOptions): Wanted {
   const coupling = ac === true ? 'ac' : 'dc';
-  const read = readStage(null, { overrides: [{ path: 'topology', text: word, option: 'topology' }, { path: 'signal.coupling', text: coupling, option: '--ac' }] });
+  const read = readStage(null, { overrides: [{ path: 'topology', text: word, option: 'topology' }, ...(ac === true ? [{ path: 'signal.coupling', text: coupling, option: '--ac' }] : [])] });
   const own = read.ok ? [] : read.problems.filter(({ place }) => place?.path === 'topology' || place?.path === '--ac');
   const file = output === undefined ? null : newFileProblem(output, force === true);
   if (own.length > 0) throw new RequestError([...own.map(asOption), ...(file === null ? [] : [file])], EXIT.request);

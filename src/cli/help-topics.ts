@@ -1,5 +1,7 @@
-import { CHECKS, PARAMETERS, renderStageHelp, type Parameter } from '../index.js';
+import { CHECKS, PARAMETERS, type Parameter } from '../index.js';
 import { CODE_PAGES } from './code-pages.js';
+import { PHYSICS_PAGE } from './physics-page.js';
+import { fieldGroups, TOPOLOGY_PAIRS } from './stage-help.js';
 
 /** A help page: blocks of text, each a paragraph or an indented list of pairs. */
 export type Block = { readonly text: string } | { readonly pairs: readonly (readonly [string, string])[] } | { readonly code: readonly string[] };
@@ -34,8 +36,10 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   stage: () => [
     { text: 'The stage file is YAML (JSON is a subset). Values are written as engineers write them, with their unit. What is left out takes its default, and every default is printed as an assumption. Options override the file, so that a what-if is one option.' },
     { code: STAGE_EXAMPLE },
-    { pairs: renderStageHelp().map(({ path, accepted, example, meaning }) => [path, `${meaning}: ${accepted}; for example ${example}`] as const) },
-    { text: 'Required: topology, supply, and what the stage is fed (signal.input, signal.amplitude, or both inputs of a difference stage). Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said.' },
+    { text: 'Topologies, and what each needs besides topology and supply. What does not belong to a topology is refused with the reason.' },
+    { pairs: TOPOLOGY_PAIRS },
+    ...fieldGroups(),
+    { text: 'Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said. railfit draft TOPOLOGY prints a file with every field of one topology.' },
   ],
   figures: () => [
     { text: 'What is known about a part: a number with a limit kind (min, typ, max) and a condition. Names as --assume and JSON use them, and the words of the canonical CSV header.' },
@@ -45,8 +49,9 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   checks: () => [
     { text: 'Every check is judged twice, on the pessimistic and on the optimistic reading of the figures it reads. Both pass: pass. Both fail: fail. Otherwise it cannot be decided, and the value at which it turns is told. Unknown is never a pass.' },
     { pairs: CHECKS.map((check) => [check.id, `${check.title}; reads ${check.reads.join(', ')}`] as const) },
-    { text: 'Not built yet, and undecided for every part when the stage writes them: noise, distortion, phase-margin, settling, and the hazards of avoid.' },
+    { text: 'Not built yet, and undecided for every part when the stage writes them: the hazards of avoid. railfit help physics tells how each is modelled and from which source.' },
   ],
+  physics: () => PHYSICS_PAGE,
   'exit-codes': () => [{ text: 'Exit codes are frozen.' }, { pairs: EXITS }],
   quantities: () => [
     { text: 'A quantity is read when it has one reading. It is refused when two readings exist and both are usable; railfit never chooses between milli and mega by what looks likely.' },

@@ -125,7 +125,7 @@ const collect = (value: string, all: readonly string[] = []): string[] => [...al
 /** Options that stand for fields of the stage file. */
 function staging(command: Command): Command {
   return command
-    .option('--topology <NAME>', 'follower, non-inverting, inverting, difference')
+    .option('--topology <NAME>', 'non-inverting, summing, ...: railfit help stage lists all')
     .option('--supply <SUPPLY>', '"3.0..4.2 V", "5 V ± 5 %"')
     .option('--gain <GAIN>', 'V/V or dB')
     .option('--reference <REFERENCE>', 'ground, mid-supply, or a voltage')

@@ -1,11 +1,15 @@
+import type { PhaseMarginDemand, StableGainDemand } from './loop-demand.js';
+import type { NoiseDemand } from './noise-demand.js';
 import type { Operating } from './operating.js';
+import type { BatteryBudget, FrequencyErrorDemand, JunctionDemand } from './power-demand.js';
+import type { DistortionDemand, GainBandwidthDemand, SettlingDemand, SlewRateDemand } from './speed-demand.js';
 
 export type Sense = 'at-least' | 'at-most';
 
 /** All check ids in the order of the contract. Those not built yet still have a demand, so that no limit passes silently. */
 export const CHECK_IDS = [
   'supply-low', 'supply-high', 'supply-peak', 'input-low', 'input-high', 'output-low', 'output-high', 'output-current',
-  'slew-rate', 'gain-bandwidth', 'stable-gain', 'phase-margin', 'noise', 'distortion', 'dc-error', 'settling', 'supply-current',
+  'slew-rate', 'gain-bandwidth', 'stable-gain', 'phase-margin', 'noise', 'distortion', 'dc-error', 'settling', 'frequency-error', 'supply-current',
   'temperature-low', 'temperature-high', 'junction-temperature', 'channels', 'package', 'qualification', 'status', 'lifecycle', 'price',
   'crossover', 'phase-reversal', 'clamp', 'overdrive',
 ] as const;
@@ -70,10 +74,11 @@ export interface OutputCurrentDemand extends NumberDemand {
   readonly corner: Corner;
 }
 
-/** Room the stage leaves between the inputs and V+, and how far below it they come at most, V. */
+/** Room the stage leaves between the inputs and V+, and how far below it they come at most, V; `still`: they rest at the reference, out of reach of any signal. */
 export interface InputHighDemand extends NumberDemand {
   readonly corner: Corner;
   readonly farthest: number;
+  readonly still: boolean;
 }
 
 /** A peak current towards one rail: `high` is sourced, `low` is sunk. */
@@ -82,12 +87,6 @@ export interface DirectedPeak {
   readonly amperes: number;
   readonly supply: number;
   readonly corner: Corner;
-}
-
-export interface SlewRateDemand extends NumberDemand {
-  /** Hz, and nominal noise gain: for the estimate of the distortion near the limit. */
-  readonly frequency: number;
-  readonly noiseGain: number;
 }
 
 export interface DcErrorDemand extends NumberDemand {
@@ -130,18 +129,28 @@ export interface Demands {
   readonly 'output-high': HeadroomDemand;
   readonly 'output-current': OutputCurrentDemand;
   readonly 'slew-rate': SlewRateDemand | null;
-  readonly 'gain-bandwidth': NumberDemand | null;
-  readonly 'stable-gain': NumberDemand;
+  readonly 'gain-bandwidth': GainBandwidthDemand | null;
+  /** Null for the oscillator, which switches. */
+  readonly 'stable-gain': StableGainDemand | null;
+  readonly 'phase-margin': PhaseMarginDemand | null;
+  readonly noise: NoiseDemand | null;
+  readonly distortion: DistortionDemand | null;
   readonly 'dc-error': DcErrorDemand | null;
+  readonly settling: SettlingDemand | null;
+  readonly 'frequency-error': FrequencyErrorDemand | null;
   readonly 'supply-current': SupplyCurrentDemand | null;
   readonly 'temperature-low': NumberDemand;
   readonly 'temperature-high': NumberDemand;
+  /** Asked with a limit, or of parts that state their own. */
+  readonly 'junction-temperature': JunctionDemand;
   readonly channels: NumberDemand | null;
   readonly package: WordDemand | null;
   readonly qualification: WordDemand | null;
   readonly status: WordDemand | null;
   readonly lifecycle: WordDemand | null;
   readonly price: PriceDemand | null;
+  /** No demand but information: null without a battery. */
+  readonly battery: BatteryBudget | null;
   /** Limits written whose check is not built yet. */
   readonly unbuilt: readonly UnbuiltDemand[];
 }
@@ -150,7 +159,13 @@ export type AnyDemand = NumberDemand | WordDemand | UnbuiltDemand;
 
 /** Every demand the stage makes, in the order of the checks. */
 export function listDemands(demands: Demands): AnyDemand[] {
-  const { operating: _operating, unbuilt, ...built } = demands;
-  const all: AnyDemand[] = [...Object.values(built).filter((demand) => demand !== null), ...unbuilt];
+  const { operating: _operating, battery: _battery, 'junction-temperature': junction, unbuilt, ...built } = demands;
+  const all: AnyDemand[] = [...Object.values(built).filter((demand) => demand !== null), ...written(junction), ...unbuilt];
   return all.sort((a, b) => CHECK_IDS.indexOf(a.check) - CHECK_IDS.indexOf(b.check));
+}
+
+/** Only a limit that is written is asked of every part. */
+function written(junction: JunctionDemand): NumberDemand[] {
+  const { required } = junction;
+  return required === null ? [] : [{ ...junction, required }];
 }

@@ -2,6 +2,15 @@ export { deriveDemands } from './derive.js';
 export { CHECK_IDS, listDemands } from './demand.js';
 export type {
   AnyDemand, CheckId, Corner, DcErrorDemand, Demands, DirectedPeak, HeadroomDemand, HeadroomVertex, NumberDemand, OutputCurrentDemand, PriceDemand, Sense,
-  SlewRateDemand, SupplyCurrentDemand, UnbuiltDemand, WordDemand,
+  SupplyCurrentDemand, UnbuiltDemand, WordDemand,
 } from './demand.js';
+export { withFeedbackCapacitor } from './feedback-capacitor.js';
+export { openNoiseGain } from './stable-gain.js';
+export type { FeedbackPlace, OpenTransimpedance, PhaseMarginDemand, StableGainDemand } from './loop-demand.js';
+export type { NoiseDemand, PartCapacitances } from './noise-demand.js';
 export type { Operating } from './operating.js';
+export type { BatteryBudget, FrequencyErrorDemand, JunctionDemand, OscillatorEnd } from './power-demand.js';
+export type {
+  ChargedLoad, ClippingCorner, ClosedLoop, DistortionDemand, EdgeMotion, GainBandwidthDemand, InputSwing, Loop, SettlingDemand, SineMotion, SlewNeed,
+  SlewingDemand, SlewRateDemand,
+} from './speed-demand.js';

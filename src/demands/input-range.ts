@@ -5,6 +5,9 @@ import type { Corner, InputHighDemand, NumberDemand } from './demand.js';
 
 const SOURCE = 'M1: common mode at the pins over all corners (Franco, Design with Operational Amplifiers and Analog Integrated Circuits, 3rd ed. 2002, ch. 1-2, from memory)';
 
+/** Stages whose pins stand at the reference, whatever the signal. */
+const STILL: ReadonlySet<Stage['topology']> = new Set<Stage['topology']>(['inverting', 'summing', 'transimpedance', 'multiple-feedback-low-pass', 'integrator']);
+
 /** A demand with the corner it stands at. */
 export interface CornerDemand extends NumberDemand {
   readonly corner: Corner;
@@ -23,7 +26,7 @@ export function inputHigh(stage: Stage): InputHighDemand {
   const farthest = Math.max(...stage.vertices.map(room));
   const vertex = least(stage.vertices, room);
   const because = `common mode ${formatQuantity(vertex.commonMode, 'V')} on a supply of ${formatQuantity(vertex.supply, 'V')}`;
-  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex), farthest };
+  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex), farthest, still: STILL.has(stage.topology) };
 }
 
 function least(vertices: readonly Vertex[], measure: (vertex: Vertex) => number): Vertex {

@@ -24,8 +24,17 @@ export function outputCurrent(stage: Stage): OutputCurrentDemand {
 }
 
 function withoutFrequency(stage: Stage): string {
-  const capacitive = (stage.load?.capacitance ?? 0) > 0 && stage.frequency === null;
-  return capacitive ? '; no frequency, so the load capacitance is left out' : '';
+  if (stage.response.kind === 'oscillator') return (stage.load?.capacitance ?? 0) > 0 ? '; what charges the load capacitance at the edges is left out' : '';
+  const moves = stage.shape === 'step' || stage.shape === 'pulse' ? stage.edge : stage.frequency;
+  const capacitive = (stage.load?.capacitance ?? 0) > 0 && moves === null;
+  return `${capacitive ? '; neither frequency nor edge, so the load capacitance is left out' : ''}${withoutFilter(stage)}`;
+}
+
+/** The capacitor back from the output of a Sallen-Key filter counts at the top frequency only. */
+function withoutFilter({ response, shape, frequency }: Stage): string {
+  if (response.kind !== 'low-pass' || response.form !== 'sallen-key') return '';
+  if (shape === 'step' || shape === 'pulse') return '; what C1 takes during the edge is left out';
+  return frequency === null ? '; no frequency, so what C1 takes is left out' : ', what C1 takes at the top frequency too';
 }
 
 /** At the centre of the signal, plus its amplitude, towards either rail. */

@@ -15,7 +15,7 @@ export function outputHeadroom(stage: Stage, side: Side): HeadroomDemand {
   const vertices = stage.vertices.map((vertex) => vertexOf(stage, side, vertex));
   const least = vertices.reduce((best, next) => (next.room < best.room ? next : best));
   const output = side === 'high' ? stage.output.max : stage.output.min;
-  const at = side === 'high' ? `highest output ${formatQuantity(output, 'V')}, least room on a supply of ${formatQuantity(least.supply, 'V')}` : `lowest output ${formatQuantity(output, 'V')}`;
+  const at = whereText(stage, side, { output, supply: least.supply });
   return {
     check: side === 'high' ? 'output-high' : 'output-low',
     required: least.room,
@@ -28,6 +28,20 @@ export function outputHeadroom(stage: Stage, side: Side): HeadroomDemand {
     kelvin: farthestFrom25(stage).kelvin,
   };
 }
+
+function whereText({ response }: Stage, side: Side, { output, supply }: { output: number; supply: number }): string {
+  const volts = formatQuantity(output, 'V');
+  const least = `least room on a supply of ${formatQuantity(supply, 'V')}`;
+  if (response.kind === 'oscillator') return `the ${side} level of the logic it drives, ${volts} at ${side === 'high' ? 'most' : 'least'}, ${least}`;
+  return side === 'high' ? `highest output ${volts}, ${least}` : `lowest output ${volts}`;
+}
+
+/** Room at a vertex without what the team adds to or takes from it, V: where the output begins to clip. */
+export function bareVertex(stage: Stage, side: Side, vertex: Vertex): HeadroomVertex {
+  return { ...vertexOf(stage, side, vertex), room: bareRoom(side, vertex) };
+}
+
+const bareRoom = (side: Side, vertex: Vertex): number => (side === 'high' ? vertex.supply - vertex.output : vertex.output);
 
 function extras(stage: Stage): string {
   const loss = swingLoss(stage);
@@ -42,10 +56,9 @@ const swingLoss = (stage: Stage): number => stage.asked.limits.swingLoss?.value 
 const extraMargin = (stage: Stage): number => stage.asked.margins.outputHeadroom?.value ?? 0;
 
 function vertexOf(stage: Stage, side: Side, vertex: Vertex): HeadroomVertex {
-  const bare = side === 'high' ? vertex.supply - vertex.output : vertex.output;
   const towards = (vertex.loadCurrent + vertex.networkCurrent) * (side === 'high' ? 1 : -1);
   return {
-    room: bare + swingLoss(stage) - extraMargin(stage),
+    room: bareRoom(side, vertex) + swingLoss(stage) - extraMargin(stage),
     supply: vertex.supply,
     current: Math.max(0, towards),
     assistingLoad: assistingLoad(stage, side, vertex),

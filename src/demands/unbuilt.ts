@@ -1,15 +1,24 @@
 import type { Stage } from '../stage/index.js';
+import { closedLoopOf } from './closed-loop.js';
 import type { CheckId, UnbuiltDemand } from './demand.js';
 
-/** Limits the stage writes whose check does not exist yet: every part is undecided on them, never silently passed. */
+/**
+ * Limits the stage writes whose check does not exist yet, or not for this topology: every part is undecided on them, never silently
+ * passed.
+ */
 export function unbuilt(stage: Stage): UnbuiltDemand[] {
   const { limits, avoid } = stage.asked;
+  const { distortion, settling, frequencyError, phaseMargin } = limits;
   const noise = limits.outputNoise ?? limits.snr;
+  const oscillates = stage.response.kind === 'oscillator';
   const found: (UnbuiltDemand | null)[] = [
-    limits.phaseMargin === undefined ? null : demand('phase-margin', { required: limits.phaseMargin.value, unit: '°', sense: 'at-least', text: limits.phaseMargin.text }),
-    noise === undefined ? null : demand('noise', limits.outputNoise ? { required: noise.value, unit: 'V', sense: 'at-most', text: noise.text } : { required: noise.value, unit: 'V/V', sense: 'at-least', text: noise.text }),
-    limits.distortion === undefined ? null : demand('distortion', { required: limits.distortion.value, unit: '1', sense: 'at-most', text: limits.distortion.text }),
-    limits.settling === undefined ? null : demand('settling', { required: limits.settling.within.value, unit: 's', sense: 'at-most', text: `${limits.settling.within.text} to ${limits.settling.to.text}` }),
+    phaseMargin !== undefined && oscillates ? demand('phase-margin', { required: phaseMargin.value, unit: '°', sense: 'at-least', text: phaseMargin.text }) : null,
+    noise !== undefined && oscillates ? demand('noise', { required: noise.value, ...(limits.outputNoise ? { unit: 'V', sense: 'at-most' } : { unit: 'V/V', sense: 'at-least' }), text: noise.text }) : null,
+    distortion !== undefined && oscillates ? demand('distortion', { required: distortion.value, unit: '1', sense: 'at-most', text: distortion.text }) : null,
+    settling !== undefined && closedLoopOf(stage) === null
+      ? demand('settling', { required: settling.within.value, unit: 's', sense: 'at-most', text: `${settling.within.text} to ${settling.to.text}` })
+      : null,
+    frequencyError !== undefined && !oscillates ? demand('frequency-error', { required: frequencyError.value, unit: '1', sense: 'at-most', text: frequencyError.text }) : null,
     ...avoid.map((hazard) => demand(hazard, { required: null, unit: null, sense: null, text: 'avoid' })),
   ];
   return found.filter((one) => one !== null);

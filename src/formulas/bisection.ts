@@ -23,3 +23,23 @@ export function turningPoint(condition: (x: number) => boolean, { low, high }: B
   }
   return yes;
 }
+
+/**
+ * From where on a condition holds for good: looked for downwards from a value where it does, in steps of a tenth, then bisected.
+ * For conditions that may hold again further down. Unit of the start.
+ * @example lowestHolding((x) => x >= 3, 1000) is 3
+ * Source: as turningPoint().
+ * @throws RangeError when the condition does not hold at the start.
+ */
+export function lowestHolding(holds: (x: number) => boolean, start: number): number {
+  if (!holds(start)) throw new RangeError(`lowestHolding: the condition must be true at ${start}, but is false there`);
+  let high = start;
+  // 400 steps are 16 decades: below that a demand is nothing.
+  for (let step = 0; step < 400; step += 1) {
+    if (!holds(high / STRIDE)) return turningPoint(holds, { low: high / STRIDE, high });
+    high /= STRIDE;
+  }
+  return 0;
+}
+
+const STRIDE = 1.1;

@@ -19,6 +19,31 @@ export function clippingDistortion(ratio: number): number {
 }
 
 /**
+ * Total harmonic distortion of a sine clipped at a different fraction of its peak at the top and at the bottom; its mean does not count.
+ * @param ratios top and bottom, above 0, at most 1
+ * @returns fraction of the fundamental
+ * @example clippedSineDistortion({top: 0.9, bottom: 1}) is 0.0321
+ * Source: own algebra, Fourier integrals.
+ */
+export function clippedSineDistortion({ top, bottom }: { readonly top: number; readonly bottom: number }): number {
+  requireWithin('clippedSineDistortion', { top, bottom }, { above: 0, to: 1 });
+  if (top === 1 && bottom === 1) return 0;
+  const [up, down] = [halfWave(top), halfWave(bottom)];
+  const mean = (up.area - down.area) / (2 * Math.PI);
+  const meanSquare = (up.square + down.square) / (2 * Math.PI) - mean ** 2;
+  const fundamental = (up.sine + down.sine) / Math.PI;
+  return Math.sqrt(Math.max(0, (2 * meanSquare) / fundamental ** 2 - 1));
+}
+
+/** ∫v, ∫v² and ∫v·sin over one half wave clipped at c. */
+function halfWave(ratio: number): { readonly area: number; readonly square: number; readonly sine: number } {
+  const angle = Math.asin(ratio);
+  const flat = Math.PI - 2 * angle;
+  const round = angle - Math.sin(2 * angle) / 2;
+  return { area: 2 * (1 - Math.cos(angle)) + ratio * flat, square: round + ratio ** 2 * flat, sine: round + 2 * ratio * Math.cos(angle) };
+}
+
+/**
  * Deepest clipping within a distortion limit: the ratio c, by bisection of clippingDistortion().
  * @param distortion fraction, above 1e-6 (rounding hides less) and below 0.48 (a square wave has 0.483)
  * @returns V/V

@@ -1,5 +1,5 @@
 import { turningPoint } from './bisection.js';
-import { requirePositive, requireWithin } from './domain.js';
+import { requireNotNegative, requirePositive, requireWithin } from './domain.js';
 import { halfPowerFrequency, type LowPass } from './low-pass-response.js';
 
 /** r1 source→x, r2 x→+ input, c1 x→output, c2 + input→reference; gain K at least 1. Ω, F, all above 0. */
@@ -101,4 +101,18 @@ function integratorTime(where: string, gainBandwidth: number): number {
   if (gainBandwidth === Infinity) return 0;
   requirePositive(where, { gainBandwidth });
   return 1 / (2 * Math.PI * gainBandwidth);
+}
+
+/**
+ * What C1 takes from the output of a Sallen-Key low-pass about an ideal amplifier. The pin stands at Vo/K, the inner node at (1 + jωR2C2)·Vo/K:
+ * I = jωC1·(1 − (1 + jωR2C2)/K)·Vo, that is ω²·R2·C1·C2/K in phase and C1·(1 − 1/K) as a capacitance.
+ * @param frequency Hz, at least 0
+ * @returns siemens and F
+ * @example 1 V at the corner of 10 kΩ each, Q = 1/√2, K = 1: ω²R2C1C2 = 1/R1, 100 µA
+ * Source: own algebra.
+ */
+export function sallenKeyLoading({ r2, c1, c2, gain }: SallenKey, frequency: number): { readonly conductance: number; readonly capacitance: number } {
+  requireNotNegative('sallenKeyLoading', { frequency });
+  requirePositive('sallenKeyLoading', { r2, c1, c2, gain });
+  return { conductance: ((2 * Math.PI * frequency) ** 2 * r2 * c1 * c2) / gain, capacitance: c1 * (1 - 1 / gain) };
 }

@@ -18,7 +18,7 @@ export function inputCrossoverDistortion(swing: {
   requireNotNegative('inputCrossoverDistortion', { step });
   requirePositive('inputCrossoverDistortion', { peak });
   requireWithin('inputCrossoverDistortion', { crossover }, { from: level - peak, to: level + peak });
-  const duty = Math.acos((crossover - level) / peak) / Math.PI;
+  const duty = Math.acos(Math.max(-1, Math.min(1, (crossover - level) / peak))) / Math.PI;
   const fundamental = (2 * step * Math.sin(Math.PI * duty)) / Math.PI;
   return Math.sqrt(Math.max(0, step ** 2 * duty * (1 - duty) - fundamental ** 2 / 2)) / (peak / Math.SQRT2);
 }

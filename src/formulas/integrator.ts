@@ -33,3 +33,23 @@ export function timeToRail(capacitance: number, distance: number, current: numbe
   requirePositive('timeToRail', { capacitance, current });
   return (capacitance * distance) / current;
 }
+
+/**
+ * Steepest slope of an integrator's output, whatever the waveform: |vi|/(RC), and |vo|/(Rb·C) through a resistor across the capacitor.
+ * @param stage largest input and output about the reference, V, at least 0; resistance Ω, bleed Ω (Infinity: none) and capacitance F, above 0
+ * @returns V/s
+ * @example integratorSlope({input: 1, output: 0, resistance: 100e3, bleed: Infinity, capacitance: 100e-9}) is 100 V/s
+ * Source: I = C·dv/dt at the summing node.
+ */
+export function integratorSlope(stage: {
+  readonly input: number;
+  readonly output: number;
+  readonly resistance: number;
+  readonly bleed: number;
+  readonly capacitance: number;
+}): number {
+  const { input, output, resistance, bleed, capacitance } = stage;
+  requireNotNegative('integratorSlope', { input, output });
+  requirePositive('integratorSlope', { resistance, capacitance });
+  return (input / resistance + output / bleed) / capacitance;
+}

@@ -55,6 +55,24 @@ export function riseTime(edge: { readonly step: number; readonly slewRate: numbe
 }
 
 /**
+ * Smallest slew rate that makes an edge within a time from 10 % to 90 %, by bisection of riseTime(): from 0.8·ΔV/t of a loop much
+ * faster than the edge up to 0.9·ln 9·ΔV/t = 1.98·ΔV/t of one that is just fast enough.
+ * @param edge step V, time s (10 % to 90 %), timeConstant s of the closed loop, all above 0
+ * @returns V/s
+ * @example slewRateForEdge({step: 4, time: 1e-6, timeConstant: 1e-12}) is 3.2 V/µs
+ * Source: riseTime(), which falls steadily as the slew rate rises.
+ * @throws RangeError when the loop alone takes longer, τ·ln 9: then no slew rate makes that edge.
+ */
+export function slewRateForEdge(edge: { readonly step: number; readonly time: number; readonly timeConstant: number }): number {
+  const { step, time, timeConstant } = edge;
+  requirePositive('slewRateForEdge', { step, timeConstant });
+  requireWithin('slewRateForEdge', { time }, { from: timeConstant * Math.log(9) });
+  const makes = (slewRate: number): boolean => riseTime({ step, slewRate, timeConstant }) <= time * (1 + 1e-12);
+  const least = (0.8 * step) / time;
+  return Math.max(least, turningPoint(makes, { low: least * (1 - 1e-9), high: (0.9 * step * (1 + 1e-9)) / timeConstant }));
+}
+
+/**
  * Closed-loop bandwidth for linear settling within a time: f_cl = ln(1/ε)/(2π·T).
  * @param time s, above 0
  * @param tolerance fraction of the step, above 0 and below 1 (half a bit of n: 2^−(n+1))

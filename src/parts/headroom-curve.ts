@@ -37,7 +37,7 @@ interface SetReading extends HeadroomReading {
 
 /** How far beyond its heaviest point a set may be drawn on, as a factor of that point's current. */
 export const REACH = 1.5;
-/** Threshold of a MOS output device that the supply scaling assumes, V (method.md 6, common practice). */
+/** Threshold of a MOS output device that the supply scaling assumes, V (M6, common practice). */
 const THRESHOLD = 0.7;
 const TIGHT = 1e-9;
 

@@ -7,9 +7,10 @@ import { offsetReading, type OffsetReading } from './offset.js';
 import type { Part } from './part.js';
 import type { PartUnderTest, Reading } from './reading.js';
 import { scalarReading, type RangeEnd } from './select.js';
+import { spreadReading, type Spread } from './spread.js';
 
 /** What is known about a part in words and counts, as wishes compare it. */
-export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price'>;
+export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price' | 'inputType' | 'inputClamp'>;
 
 /**
  * A part's figures resolved into one outlook. A check asks for what it reads and never learns which outlook it is given;
@@ -23,6 +24,8 @@ export interface Readings {
   figureOrClass(parameter: Parameter): Reading | null;
   /** The figure, else a value assumed for want of one: it can pass a check, not fail it. */
   figureOrAssumed(parameter: Parameter, assumed: Assumed, end?: RangeEnd): Reading | null;
+  /** The figure with both its ends, for what is not worst at the least of it: a fast part is noisier and harder to load. */
+  spread(parameter: Parameter): Spread | null;
   offset(): OffsetReading | null;
   headroom(side: Side): (question: HeadroomQuestion) => HeadroomReading;
   /** Usable output current of one direction: 1.5 × the heaviest head-room point; null (undecided beyond) without points. */
@@ -48,6 +51,7 @@ export function readingsOf(test: PartUnderTest): Readings {
     figureOrClass: (parameter) => figure(parameter) ?? borrowed(test, parameter),
     figureOrAssumed: (parameter, assumed, end) =>
       figure(parameter, end) ?? (isPrinted(test, parameter, end) ? null : assumedReading(test, assumed)),
+    spread: (parameter) => spreadReading(test, parameter),
     offset: () => offsetReading(test),
     headroom: (side) => headroomCurve(test, side),
     currentFromHeadroom: (side, supply) => fromHeadroom(test, side, supply),

@@ -78,10 +78,13 @@ const BELOW_ZERO: ReadonlySet<Parameter> = new Set(['inputLowHeadroom', 'inputHi
 /** Parameters whose maximum is what a part endures: more of it is better. */
 const ENDURED: ReadonlySet<Parameter> = new Set(['supplyVoltage', 'supplyAbsoluteMaximum', 'temperature', 'junctionTemperature', 'capacitiveLoad']);
 
+/** Parameters known as typical alone of which less is better. */
+const BURDENS: ReadonlySet<Parameter> = new Set(['outputResistance', 'inputCapacitance']);
+
 /** Whether a larger value of this figure is the better one. */
 function isMoreBetter({ parameter, kind }: Pick<Figure, 'parameter' | 'kind'>): boolean {
   if (ENDURED.has(parameter)) return kind === 'max';
-  return !TYP_MAX_PARAMETERS.has(parameter);
+  return !TYP_MAX_PARAMETERS.has(parameter) && !BURDENS.has(parameter);
 }
 
 /** The pessimistic value of a typical figure. */

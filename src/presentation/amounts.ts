@@ -2,6 +2,7 @@ import { formatComparison, formatDecibels, formatPercent, formatQuantity, type F
 import type { Verdict } from '../verdicts/verdict.js';
 import type { Price } from '../parts/part.js';
 import { GLUE, held } from './spelling.js';
+import { spoken } from './spoken.js';
 import { DECIBEL_FIGURES } from './words.js';
 
 /** A number with its unit, held together. */
@@ -16,6 +17,12 @@ function inCents(text: string, unit: string): string {
   const [number = '', ...rest] = text.split(' ');
   const [whole = '', decimals = ''] = number.split('.');
   return [`${whole}.${decimals.padEnd(2, '0')}`, ...rest].join(' ');
+}
+
+/** A number of a check, in the unit it is spoken in. */
+export function checkAmount(of: { readonly check: string; readonly unit: string | null }, value: number): string {
+  const said = spoken(of.check, value, of.unit ?? '1');
+  return amount(said.value, said.unit);
 }
 
 /** Both ends; of a narrow range with the digits that tell them apart: 2.495 V..2.505 V. */
@@ -39,9 +46,10 @@ export function compared(verdict: Verdict): Comparison | null {
   const value = typeof verdict.offered === 'number' ? verdict.offered : verdict.known;
   if (value === null || typeof verdict.required !== 'number' || verdict.unit === null) return null;
   if (verdict.sense !== 'at-least' && verdict.sense !== 'at-most') return null;
-  const counts = verdict.spare === 0 ? verdict.required : value;
-  const [offered, required, difference] = formatComparison(counts, verdict.required, verdict.unit, verdict.sense);
-  const { unit } = verdict;
+  const counts = spoken(verdict.check, verdict.spare === 0 ? verdict.required : value, verdict.unit);
+  const asked = spoken(verdict.check, verdict.required, verdict.unit);
+  const [offered, required, difference] = formatComparison(counts.value, asked.value, counts.unit, verdict.sense);
+  const { unit } = counts;
   const print = (text: string): string => held(inCents(text, unit));
   return { offered: print(offered), required: print(required), difference: print(difference) };
 }

@@ -1,6 +1,6 @@
 import type { Basis } from '../parts/basis.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { amount, compared } from './amounts.js';
+import { checkAmount, compared } from './amounts.js';
 import { flow, padded, paragraph, displayWidth } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { GLUE, glued, spelled } from './spelling.js';
@@ -21,6 +21,7 @@ export function failingCheck(verdict: Verdict, origins: Origins, style: Style): 
     ...cornerLines(verdict, style),
     ...termLines(verdict, origins, style),
     ...readingLines(verdict, style),
+    ...noteLines(verdict, style),
     ...cautionLines(verdict, style),
   ];
 }
@@ -34,17 +35,19 @@ export function openCheck(verdict: Verdict, origins: Origins, style: Style): str
     ...cornerLines(verdict, style),
     ...termLines(verdict, origins, style),
     ...turningLines(verdict, style),
+    ...noteLines(verdict, style),
     ...cautionLines(verdict, style),
   ];
 }
 
 /** A passing check in full. */
 export function passingCheck(verdict: Verdict, origins: Origins, style: Style): string[] {
-  const numbers = compared(verdict) === null || verdict.unit === '1' ? spareText(verdict) : `${comparisonText(verdict)}: ${spareText(verdict)}`;
+  const numbers = compared(verdict) === null || verdict.check === 'channels' ? spareText(verdict) : `${comparisonText(verdict)}: ${spareText(verdict)}`;
   return [
     ...headline(toned('PASS', 'good', style), `${verdict.title}${GLUE}${GLUE} ${numbers}${basisMark(verdict)}`, style),
     ...cornerLines(verdict, style),
     ...termLines(verdict, origins, style),
+    ...noteLines(verdict, style),
     ...cautionLines(verdict, style),
   ];
 }
@@ -82,7 +85,7 @@ function readingLines(verdict: Verdict, style: Style): string[] {
   const other = otherReading(verdict);
   const lines: string[] = [];
   if (typeof offered === 'number' && other !== null && unit !== null && offered !== other) {
-    lines.push(`Figures count as printed here; with deratings and estimates it would be ${amount(other, unit)}.`);
+    lines.push(`Figures count as printed here; with deratings and estimates it would be ${checkAmount(verdict, other)}.`);
   }
   if (terms.some((term) => term.basis === 'borrowed')) lines.push('Borrowed terms count as nothing here: the verdict does not depend on them.');
   return lines.flatMap((line) => paragraph(line, style, inside));
@@ -96,7 +99,7 @@ function bestReading(verdict: Verdict): string[] {
   const { offered, unit } = verdict;
   const best = otherReading(verdict);
   if (typeof offered !== 'number' || best === null || unit === null || offered === best) return [];
-  return [`Read at its best the figure gives ${amount(best, unit)}.`];
+  return [`Read at its best the figure gives ${checkAmount(verdict, best)}.`];
 }
 
 /** The other reading at the corner that is shown. */
@@ -110,6 +113,11 @@ function turning({ decidesAt }: Verdict): string[] {
   const [within, outside] = passingSide(decidesAt.figure, decidesAt.kind) === 'less' ? ['below', 'above'] : ['above', 'below'];
   const value = `${turningValue(decidesAt)}${conditionOf(decidesAt)}`;
   return [`Decides at: ${figureWords(decidesAt.figure, decidesAt.kind)} of ${value}. At or ${within} it this check passes, ${outside} it does not.`];
+}
+
+/** The same result as engineers also say it. */
+function noteLines({ notes }: Verdict, style: Style): string[] {
+  return (notes ?? []).flatMap((note) => paragraph(glued(safeLine(note)), style, inside));
 }
 
 function cautionLines({ cautions }: Verdict, style: Style): string[] {

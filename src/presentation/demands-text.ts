@@ -1,7 +1,7 @@
 import type { AnyDemand } from '../demands/index.js';
 import type { DemandsReport } from '../report.js';
 import type { Stage } from '../stage/index.js';
-import { amount, range } from './amounts.js';
+import { amount, checkAmount, range } from './amounts.js';
 import { displayWidth, flow, LABEL, padded, paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { finished, glued } from './spelling.js';
@@ -37,16 +37,16 @@ export function requiredText(demand: AnyDemand): string {
   if (typeof demand.required !== 'number' || demand.unit === null) return 'not judged by this version';
   const words = demand.sense === 'at-least' ? 'at least' : 'at most';
   const unbuilt = 'built' in demand ? ' (not judged by this version)' : '';
-  return `${words} ${amount(demand.required, demand.unit)}${unbuilt}`;
+  return `${words} ${checkAmount(demand, demand.required)}${unbuilt}`;
 }
 
 function cornerLines(stage: Stage, style: Style): string[] {
-  const { output, commonMode, noiseGain, resistors } = stage;
-  const fitted = resistors === null ? [] : [resistors.feedback, resistors.input, resistors.positiveInput, resistors.toReference].flatMap((ohms) => (ohms === undefined ? [] : [amount(ohms, 'Ω')]));
+  const { output, commonMode, noiseGain, resistors, gainUnit } = stage;
+  const fitted = resistors === null ? [] : [resistors.feedback, resistors.input, resistors.positiveInput, resistors.toReference].flatMap((ohms) => (ohms === undefined || !Number.isFinite(ohms) ? [] : [amount(ohms, 'Ω')]));
   const pieces = [
     `output ${range(output.min, output.max, 'V')}`,
     `common mode ${range(commonMode.min, commonMode.max, 'V')}`,
-    `noise gain ${range(noiseGain.min, noiseGain.max, 'V/V')}`,
+    ...(gainUnit === null ? [] : [`noise gain ${range(noiseGain.min, noiseGain.max, 'V/V')}`]),
     ...(fitted.length === 0 ? [] : [`resistors ${fitted.join(', ')} ±${amount((resistors?.tolerance ?? 0) * 100, '%')}`]),
   ];
   return flow(pieces, style, { lead: padded('Corners', LABEL) });

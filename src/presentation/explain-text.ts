@@ -1,6 +1,7 @@
 import type { Explanation } from '../report.js';
 import { priceText } from './amounts.js';
 import { cautionLine, failingCheck, openCheck, passingCheck, passingInShort } from './check-text.js';
+import { batteryText, swingText } from './budget-text.js';
 import { commandOf, nextLines, type Offer } from './commands.js';
 import { confirmationInFull } from './confirm-text.js';
 import { dataLine } from './data-text.js';
@@ -24,6 +25,7 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     ...of('fail').map((verdict) => failingCheck(verdict, origins, style)),
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
     ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
+    informedLines(judged, style),
     cautionsOf(judged).flatMap((caution) => cautionLine(caution, style)),
     remedyLines(explanation, style, context),
     confirmLines(explanation, style),
@@ -67,6 +69,12 @@ function aboutLines({ judged, stage }: Explanation, style: Style): string[] {
     ...(part.price === null ? [] : [priceText(part.price)]),
   ];
   return [...paragraph(words.join(', '), style, { lead: 'Part    ' }), ...paragraph(stageInShort(stage), style, { lead: 'Stage   ' })];
+}
+
+/** What is told of a part and not judged: swing left by head-room, life of the battery. */
+function informedLines({ dynamicRange, batteryHours }: Explanation['judged'], style: Style): string[] {
+  const swing = dynamicRange === null ? [] : paragraph(swingText(dynamicRange), style, { lead: 'Swing   ', indent: 8 });
+  return [...swing, ...(batteryHours === null ? [] : paragraph(batteryText(batteryHours), style, { lead: 'Battery ', indent: 8 }))];
 }
 
 function confirmLines({ judged }: Explanation, style: Style): string[] {

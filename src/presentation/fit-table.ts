@@ -2,6 +2,7 @@ import type { Part } from '../parts/part.js';
 import type { RankedPart } from '../ranking/index.js';
 import type { Report } from '../report.js';
 import { amount, priceText } from './amounts.js';
+import { lifeText } from './budget-text.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { GLUE, glued } from './spelling.js';
@@ -14,7 +15,8 @@ import { checkWords } from './words.js';
 export function fitLines(report: Report, style: Style): string[] {
   const shown = report.fit.slice(0, style.top);
   if (shown.length === 0) return [];
-  const rows = shown.map((one) => rowOf(one));
+  const hasBattery = report.fit.some(({ batteryHours }) => batteryHours !== null);
+  const rows = shown.map((one) => rowOf(one, hasBattery));
   return [...tableLines({ columns: columnsOf(report), rows }, style), ...more(report.fit.length - shown.length, 'fit', style)];
 }
 
@@ -36,11 +38,12 @@ function columnsOf({ fit }: Report): Column[] {
     { title: 'DC error\nat output', align: 'right', name: 'DC error at the output', moves: 3 },
     { title: 'Current\nmax', align: 'right', name: 'current', moves: 4 },
     { title: quantities.size === 1 ? `Price\nat ${quantity}` : 'Price', align: 'right', name: quantities.size === 1 ? `price at ${quantity}:` : 'price' },
+    ...(fit.some(({ batteryHours }) => batteryHours !== null) ? [{ title: 'Battery', align: 'right', name: 'battery', moves: 5 } as const] : []),
     { title: 'Proof', name: 'proof', moves: 2 },
   ];
 }
 
-function rowOf(one: RankedPart): string[] {
+function rowOf(one: RankedPart, hasBattery: boolean): string[] {
   const tightest = one.verdicts.find((verdict) => verdict.check === one.tightest);
   const error = one.verdicts.find((verdict) => verdict.check === 'dc-error')?.offered;
   return [
@@ -53,6 +56,7 @@ function rowOf(one: RankedPart): string[] {
     typeof error === 'number' ? amount(error, 'V', { round: 'up' }) : '',
     one.current === null ? '' : amount(one.current, 'A', { round: 'up' }),
     priceText(one.part.price),
+    ...(hasBattery ? [one.batteryHours === null ? '' : lifeText(one.batteryHours.hours)] : []),
     one.proof === 'limits' ? 'limits' : `typical${GLUE}(${one.confirm.length})`,
   ];
 }

@@ -47,6 +47,7 @@ export function explanationJson(explanation: Explanation): string {
     ...(judged.outcome === 'undecided' ? { likely: judged.likely } : {}),
     verdicts: judged.verdicts.map((verdict) => verdictJson(verdict, part.id, origin)),
     confirm: judged.confirm.map(confirmJson),
+    ...informed(judged),
     changes: null,
     changesReason: 'not-built',
     cautions: cautionsOf(judged),
@@ -94,7 +95,12 @@ function identity({ part }: JudgedPart): object {
 }
 
 function verdicts(one: JudgedPart, origin: OriginOf): object {
-  return { cautions: cautionsOf(one), verdicts: one.verdicts.map((verdict) => verdictJson(verdict, one.part.id, origin)) };
+  return { ...informed(one), cautions: cautionsOf(one), verdicts: one.verdicts.map((verdict) => verdictJson(verdict, one.part.id, origin)) };
+}
+
+/** What is told and not judged. */
+function informed({ dynamicRange, batteryHours }: JudgedPart): object {
+  return { dynamicRange, ...(batteryHours === null ? {} : { battery: batteryHours }) };
 }
 
 function confirmJson({ figure, basis, how, checks, needed }: Confirmation): object {

@@ -4,11 +4,11 @@ import { formatQuantity } from '../quantities/format.js';
 import type { Explanation } from '../report.js';
 import type { TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { figureAmount } from './amounts.js';
+import { checkAmount, figureAmount } from './amounts.js';
 import { commandLines, commandOf } from './commands.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
-import { GLUE, held } from './spelling.js';
+import { GLUE, glued, held } from './spelling.js';
 import type { CommandContext, Style } from './style.js';
 import { figureWords, passingSide } from './words.js';
 
@@ -16,6 +16,7 @@ import { figureWords, passingSide } from './words.js';
 export function remedyLines(explanation: Explanation, style: Style, context: CommandContext): string[] {
   const open = explanation.judged.verdicts.filter((verdict) => verdict.outcome === 'unknown');
   const steps = [...lookups(open, explanation), ...unbuilt(open)];
+  const fitted = fittings(explanation, style, context);
   const assumption = assumeWords(open, explanation);
   const measured = open.flatMap(({ decidesAt }) => (decidesAt !== null && MEASURABLE.has(decidesAt.figure) ? [figureWords(decidesAt.figure)] : []));
   const listed: string[][] = steps.map((step) => paragraph(step, style, { lead: '  - ', indent: 4 }));
@@ -28,7 +29,17 @@ export function remedyLines(explanation: Explanation, style: Style, context: Com
   if (measured.length > 0) {
     listed.push(paragraph(`or measure ${[...new Set(measured)].join(' and ')} on a few samples at the corner above; samples do not replace a limit`, style, { lead: '  - ', indent: 4 }));
   }
-  return listed.length === 0 ? [] : ['What to do', ...listed.flat()];
+  const all = [...fitted, ...listed.flat()];
+  return all.length === 0 ? [] : ['What to do', ...all];
+}
+
+/** Components that turn a check, as an option that pastes back. */
+function fittings({ judged }: Explanation, style: Style, context: CommandContext): string[] {
+  const offered = judged.verdicts.flatMap((verdict) => (verdict.remedies ?? []).map((remedy) => ({ verdict, remedy })));
+  return offered.flatMap(({ verdict, remedy }) => [
+    ...paragraph(`${remedy.path} ${glued(remedy.text)}: ${verdict.title} ${checkAmount(verdict, remedy.offered)} with it, this check computed again; ${glued(remedy.cost)}`, style, { lead: '  - ', indent: 4 }),
+    ...commandLines(commandOf(context, ['explain', judged.part.id], ['--set', `${remedy.path}=${asciiText(remedy.text).replaceAll(' ', '')}`]), style, '    '),
+  ]);
 }
 
 const MEASURABLE: ReadonlySet<string> = new Set(['offsetVoltage', 'offsetDrift', 'biasCurrent', 'slewRate', 'gainBandwidth', 'outputLowHeadroom', 'outputHighHeadroom', 'quiescentCurrent', 'outputCurrent']);

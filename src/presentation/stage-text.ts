@@ -1,5 +1,6 @@
 import type { Stage } from '../stage/index.js';
 import { amount, range } from './amounts.js';
+import { inputRange } from './input-words.js';
 import { flow, LABEL, labelled, padded, paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
 import { GLUE, glued, held } from './spelling.js';
@@ -35,16 +36,16 @@ export function assumptionLines(sentences: readonly string[], style: Style): str
 }
 
 function circuitOf(stage: Stage): string[] {
-  const { gain, noiseGain, output, outputNominal } = stage;
+  const { output, outputNominal } = stage;
   const coupled = stage.coupling === 'ac' ? `, AC-coupled` : '';
   const corners = output.min === outputNominal.min && output.max === outputNominal.max ? '' : ` (${range(output.min, output.max, 'V')} at the corners)`;
   return [
     `${stage.topology}${coupled}`,
-    `gain ${amount(gain, 'V/V')}`,
-    `noise gain ${amount(noiseGain.nominal, 'V/V')}`,
+    ...gainOf(stage),
     ...inputsOf(stage),
     `output ${range(outputNominal.min, outputNominal.max, 'V')}${corners}`,
-    stage.frequency === null ? 'no frequency given' : `up to ${amount(stage.frequency, 'Hz')}`,
+    ...motionOf(stage),
+    ...responseOf(stage),
     ...referenceOf(stage),
   ];
 }
@@ -52,12 +53,41 @@ function circuitOf(stage: Stage): string[] {
 /** Extremes at each input; AC-coupled the peak about the bias. */
 function inputsOf({ vertices, coupling }: Stage): string[] {
   const names = Object.keys(vertices[0]?.inputs ?? {});
-  return names.map((name) => {
+  return names.flatMap((name) => {
     const values = vertices.map((vertex) => vertex.inputs[name] ?? 0);
-    const [low, high] = [Math.min(...values), Math.max(...values)];
-    const words = held(name === 'positive' ? '+ input' : name === 'negative' ? '- input' : 'input');
-    return coupling === 'ac' ? `${words} ${amount(high, 'V')} peak` : `${words} ${range(low, high, 'V')}`;
+    const words = inputRange(name, { low: Math.min(...values), high: Math.max(...values) }, coupling === 'ac');
+    return words === null ? [] : [words];
   });
+}
+
+/** Signal gain in its own unit, and the noise gain where it says more. */
+function gainOf({ gain, gainUnit, noiseGain }: Stage): string[] {
+  if (gainUnit === null) return [];
+  if (gainUnit === 'V/A') return [`transresistance ${amount(Math.abs(gain), 'Ω')}${gain < 0 ? ', inverting' : ''}`];
+  if (gainUnit === '1/s') return [`time constant ${amount(Math.abs(1 / gain), 's')}`];
+  return [`gain ${amount(gain, 'V/V')}`, `noise gain ${amount(noiseGain.nominal, 'V/V')}`];
+}
+
+function motionOf({ frequency, shape, edge, outputStep, response }: Stage): string[] {
+  if (response.kind === 'oscillator') return [];
+  const steps = shape === 'step' || shape === 'pulse' ? [`${shape} of ${amount(outputStep, 'V')}${edge === null ? '' : ` with an edge of ${amount(edge, 's')}`}`] : [];
+  if (frequency === null) return steps.length > 0 ? steps : ['no frequency given'];
+  return [...steps, `up to ${amount(frequency, 'Hz')}`];
+}
+
+/** What the stage does over frequency, with the components that make it so. */
+function responseOf({ response }: Stage): string[] {
+  if (response.kind === 'low-pass') {
+    const { r1, r2, c1, c2 } = response.parts;
+    const r3 = 'r3' in response.parts ? [`R3 ${amount(response.parts.r3, 'Ω')}`] : [];
+    return [`corner ${amount(response.corner, 'Hz')} at a Q of ${amount(response.q, '1')}`, `R1 ${amount(r1, 'Ω')}`, `R2 ${amount(r2, 'Ω')}`, ...r3, `C1 ${amount(c1, 'F')}`, `C2 ${amount(c2, 'F')}`];
+  }
+  if (response.kind === 'transimpedance') {
+    const { inputCapacitance, feedbackCapacitance } = response;
+    return [`${amount(inputCapacitance, 'F')} at the node`, feedbackCapacitance === null ? 'feedback capacitor by part' : `feedback capacitor ${amount(feedbackCapacitance, 'F')}`];
+  }
+  if (response.kind === 'oscillator') return [`frequency ${amount(response.frequency, 'Hz')}`, `timing ${amount(response.resistance, 'Ω')} with ${amount(response.capacitance, 'F')}`];
+  return [];
 }
 
 function referenceOf({ vertices, referenceTolerance, referenceResistance }: Stage): string[] {
@@ -79,6 +109,7 @@ function loadOf(load: Stage['load']): string {
   const parts = [
     ...(load.resistance === null ? [] : [`${amount(load.resistance, 'Ω')} to ${load.to}`]),
     ...(load.capacitance === 0 ? [] : [amount(load.capacitance, 'F')]),
+    ...(load.isolation === 0 ? [] : [`behind ${amount(load.isolation, 'Ω')}`]),
   ];
   return parts.length === 0 ? 'none' : parts.join(', ');
 }
@@ -99,6 +130,8 @@ function askedOf({ asked }: Stage): string[] {
     ...most('distortion', limits.distortion?.text),
     ...settling,
     ...least('phase margin', limits.phaseMargin?.text),
+    ...most('junction temperature', limits.junctionTemperature?.text),
+    ...most('frequency error', limits.frequencyError?.text),
     ...times('slew rate', margins.slewRate),
     ...times('gain bandwidth', margins.gainBandwidth),
     ...(margins.outputHeadroom === undefined || margins.outputHeadroom.value === 0 ? [] : [`${glued(safeLine(margins.outputHeadroom.text))} kept free at each rail`]),

@@ -2,7 +2,7 @@ import { figureSlot, PARAMETERS, type Figure } from '../parts/figures.js';
 import type { Origin, Part } from '../parts/part.js';
 import type { Term } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { amount, compared, figureAmount } from './amounts.js';
+import { amount, checkAmount, compared, figureAmount } from './amounts.js';
 import { conditionText } from './condition-text.js';
 import { originWords } from './origin-text.js';
 import { paragraph } from './layout.js';
@@ -58,7 +58,7 @@ interface At {
 function termRow(term: Term, { verdict, origins, style }: At): string[] {
   const figure = figureAt(origins.part, term.slot);
   const printed = term.figure === null ? printedText(figure) : printedOf(term.figure, figure);
-  return [term.name, amount(term.value, verdict.unit ?? '1'), madeFrom(printed, figure, stepsOf(term, verdict)), originOf(term, origins, style)];
+  return [term.name, termAmount(verdict, term.value), madeFrom(printed, figure, stepsOf(term, verdict)), originOf(term, origins, style)];
 }
 
 /** On the best reading, which a fail shows, a figure of the class counts as nothing. */
@@ -86,7 +86,8 @@ function originOf(term: Pick<Term, 'slot' | 'basis'>, origins: Origins, style: S
   const known = term.slot === null ? null : origins.origin(part.id, term.slot);
   if (known !== null) return originWords(known, style);
   if (term.basis === 'borrowed') return `class ${safeLine(part.class ?? '')}, worst of its sets`;
-  return term.basis === 'guaranteed' ? '' : BASIS_WORDS[term.basis];
+  // A resistor's own noise is no figure of the list; that its bandwidth is typical is said where the bandwidth stands.
+  return term.basis === 'guaranteed' || ((term.basis === 'derated' || term.basis === 'estimated') && term.slot === null) ? '' : BASIS_WORDS[term.basis];
 }
 
 export function figureAt(part: Part, slot: string | null): Figure | null {
@@ -104,12 +105,21 @@ const beyondRow = (figure: string, text: string): string[] => [figureWords(figur
 
 /** The sum reads as in the line above it. */
 function sumRow(verdict: Verdict): string[][] {
-  const { terms, offered, known, unit, rss } = verdict;
+  const { terms, offered, known, unit, rss, adds } = verdict;
   const total = typeof offered === 'number' ? offered : known;
   if (terms.length < 2 || total === null || unit === null) return [];
   const beside = rss === null ? '' : `root-sum-square ${amount(rss, unit)}, shown for scale`;
-  return [[typeof offered === 'number' ? 'sum' : 'known', compared(verdict)?.offered ?? amount(total, unit), beside, '']];
+  const said = compared(verdict)?.offered ?? termAmount(verdict, total);
+  if (adds === 'squares') return [[typeof offered === 'number' ? 'together' : 'known', verdict.termUnit === undefined ? said : termAmount(verdict, squared(verdict)), 'the terms add as squares', '']];
+  return [[typeof offered === 'number' ? 'sum' : 'known', said, beside, '']];
 }
+
+/** A term is in the unit of its check, unless it says another. */
+function termAmount(verdict: Verdict, value: number): string {
+  return verdict.termUnit === undefined ? checkAmount(verdict, value) : amount(value, verdict.termUnit);
+}
+
+const squared = ({ terms }: Verdict): number => Math.hypot(...terms.map(({ value }) => value));
 
 /** A check that compares one figure: where that figure stands. */
 function singleFigure(verdict: Verdict, origins: Origins, style: Style): string[] {

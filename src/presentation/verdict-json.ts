@@ -25,9 +25,13 @@ export function verdictJson(verdict: Verdict, partId: string, originOf: OriginOf
     ...(verdict.decidesAt === null ? {} : { decidesAt: verdict.decidesAt }),
     worstAt: verdict.worstAt,
     ...(verdict.terms.length === 0 ? {} : { terms: verdict.terms.map((term) => termJson(term, where)) }),
+    ...(verdict.adds === undefined ? {} : { adds: verdict.adds }),
+    ...(verdict.termUnit === undefined ? {} : { termUnit: verdict.termUnit }),
     ...(verdict.rss === null ? {} : { rss: verdict.rss }),
     ...(verdict.slot === null || verdict.terms.length > 0 ? {} : { origin: where(verdict.slot), how: verdict.how }),
     ...(verdict.cautions.length === 0 ? {} : { cautions: verdict.cautions }),
+    ...(verdict.notes === undefined ? {} : { notes: verdict.notes }),
+    ...(verdict.remedies === undefined ? {} : { remedies: verdict.remedies }),
     text: verdictSentence(verdict),
   };
 }

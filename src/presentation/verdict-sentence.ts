@@ -1,4 +1,5 @@
 import { formatComparison } from '../quantities/format.js';
+import { spoken } from './spoken.js';
 import type { Verdict } from '../verdicts/verdict.js';
 
 const RELATION = { 'at-least': 'needs at least', 'at-most': 'allowed at most' } as const;
@@ -9,8 +10,10 @@ export function verdictSentence(verdict: Verdict): string {
   const { required, offered, unit, sense } = verdict;
   if (typeof required !== 'number' || unit === null || sense === null) return `${verdict.title}: ${why(verdict)}`;
   const value = typeof offered === 'number' ? offered : verdict.known;
-  if (value === null) return `${verdict.title}: ${why(verdict)}; ${RELATION[sense]} ${formatComparison(required, required, unit, sense)[1]}`;
-  const [shown, limit] = formatComparison(verdict.spare === 0 ? required : value, required, unit, sense);
+  const limited = spoken(verdict.check, required, unit);
+  if (value === null) return `${verdict.title}: ${why(verdict)}; ${RELATION[sense]} ${formatComparison(limited.value, limited.value, limited.unit, sense)[1]}`;
+  const said = spoken(verdict.check, verdict.spare === 0 ? required : value, unit);
+  const [shown, limit] = formatComparison(said.value, limited.value, said.unit, sense);
   const partly = typeof offered === 'number' ? '' : 'at least ';
   const ending = verdict.outcome === 'unknown' ? `: ${why(verdict)}` : verdict.outcome === 'fail' ? ': does not hold' : '';
   return `${verdict.title} ${partly}${shown}, ${RELATION[sense]} ${limit}${ending}`;

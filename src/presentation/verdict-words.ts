@@ -3,7 +3,9 @@ import { REACH } from '../parts/headroom-curve.js';
 import { formatComparison } from '../quantities/format.js';
 import type { Beyond, TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
-import { amount, compared, figureAmount, share } from './amounts.js';
+import { amount, checkAmount, compared, figureAmount, share } from './amounts.js';
+import { spoken } from './spoken.js';
+import { inputUnit } from './input-words.js';
 import { safeLine } from './safe-text.js';
 import { GLUE, held } from './spelling.js';
 import { checkWords, figureWords, OVER, passingSide, REASON_WORDS, SAYINGS } from './words.js';
@@ -13,17 +15,20 @@ export function comparisonText(verdict: Verdict): string {
   if (typeof verdict.offered === 'string') return `${safeLine(verdict.offered)}, wanted ${wanted(verdict)}`;
   const numbers = compared(verdict);
   if (numbers === null) return requirementText(verdict);
-  const [before, against] = SAYINGS[verdict.check] ?? ['', 'allowed'];
-  const bound = verdict.offered === null ? `at${GLUE}least ` : '';
+  const [before, against] = sayingOf(verdict);
+  const bound = verdict.offered === null ? `at${GLUE}${verdict.sense === 'at-least' ? 'most' : 'least'} ` : '';
   return `${before === '' ? '' : `${before} `}${bound}${numbers.offered}, ${against} ${numbers.required}`;
 }
+
+/** What must be large is needed, what must be small is allowed. */
+const sayingOf = ({ check, sense }: Verdict): readonly [string, string] => SAYINGS[check] ?? ['', sense === 'at-least' ? 'the stage needs' : 'allowed'];
 
 /** What is asked, alone. */
 function requirementText(verdict: Verdict): string {
   if (Array.isArray(verdict.required)) return `wanted ${wanted(verdict)}`;
   if (typeof verdict.required !== 'number' || verdict.unit === null) return '';
-  const [, against] = SAYINGS[verdict.check] ?? ['', 'allowed'];
-  return `${against} ${amount(verdict.required, verdict.unit)}`;
+  const [, against] = sayingOf(verdict);
+  return `${against} ${checkAmount(verdict, verdict.required)}`;
 }
 
 const wanted = ({ required }: Verdict): string => (Array.isArray(required) ? required.map((word: string) => safeLine(word)).join(' or ') : '');
@@ -33,7 +38,7 @@ export function shortfall(verdict: Verdict): string {
   if (typeof verdict.offered === 'string') return `${safeLine(verdict.offered)}, wanted ${wanted(verdict)}`;
   const left = spareOf(verdict);
   if (left === null || verdict.unit === null) return comparisonText(verdict);
-  const word = `${OVER.has(verdict.check) ? 'over' : 'short'} by ${verdict.offered === null ? `at${GLUE}least ` : ''}`;
+  const word = `${OVER.has(verdict.check) && verdict.sense !== 'at-least' ? 'over' : 'short'} by ${verdict.offered === null ? `at${GLUE}least ` : ''}`;
   const relative = relativeTo(verdict, Math.abs(left), 'up');
   return `${word}${compared(verdict)?.difference ?? amount(Math.abs(left), verdict.unit)}${relative === null ? '' : ` (${relative})`}`;
 }
@@ -46,12 +51,12 @@ function spareOf(verdict: Verdict): number | null {
 }
 
 function relativeTo(verdict: Verdict, distance: number, round: 'up' | 'down'): string | null {
-  if (typeof verdict.required !== 'number' || verdict.required <= 0 || verdict.unit === '°C') return null;
+  if (typeof verdict.required !== 'number' || verdict.required <= 0 || verdict.unit === null || IN_UNITS.has(spoken(verdict.check, 1, verdict.unit).unit)) return null;
   return share(distance / verdict.required, round);
 }
 
 /** Checks whose room is spoken in the unit itself. */
-const IN_UNITS: ReadonlySet<string> = new Set(['V', '°C']);
+const IN_UNITS: ReadonlySet<string> = new Set(['°C', 'dB', '%']);
 /** From this ratio on a margin is told as a multiple. */
 const MULTIPLE = 2;
 
@@ -60,10 +65,11 @@ export function spareText(verdict: Verdict): string {
   if (typeof verdict.offered === 'string') return safeLine(verdict.offered);
   const { spare, margin, unit, check } = verdict;
   if (spare === null || unit === null || typeof verdict.offered !== 'number') return 'no limit known';
-  if (unit === '1') return `has ${amount(verdict.offered, unit)}`;
+  if (check === 'channels') return `has ${amount(verdict.offered, unit)}`;
   if (spare === 0) return 'met exactly';
   const inUnits = `${compared(verdict)?.difference ?? amount(spare, unit)}${GLUE}spare`;
-  if (margin === null || (IN_UNITS.has(unit) && !OVER.has(check))) return inUnits;
+  const saidIn = spoken(check, 1, unit).unit;
+  if (margin === null || IN_UNITS.has(saidIn) || (saidIn === 'V' && !OVER.has(check))) return inUnits;
   if (margin >= MULTIPLE && !OVER.has(check)) return `${amount(margin, '1', { digits: 2, round: 'down' })}${GLUE}times`;
   const relative = relativeTo(verdict, spare, 'down');
   return relative === null ? inUnits : `${relative}${GLUE}spare`;
@@ -119,12 +125,14 @@ export function cornerText(corner: Readonly<Record<string, number>>): string {
   return said.length === 0 ? '' : `at ${said.join(', ')}`;
 }
 
-const CORNER_WORDS: Readonly<Record<string, string>> = { supply: 'supply', reference: 'reference', input: 'input', positive: 'at the + input', negative: 'at the - input' };
+const CORNER_WORDS: Readonly<Record<string, string>> = { positive: 'at the + input', negative: 'at the - input', current: 'input current', bus: 'bus' };
 
 function cornerWord(key: string, value: number): string {
   if (key === 'currentTemperature') return `currents at ${amount(value, '°C')}`;
   if (key === 'temperature') return amount(value, '°C');
-  if (key !== 'load') return `${amount(value, 'V')} ${CORNER_WORDS[key] ?? key}`;
+  if (key === 'elapsed') return value === 0 ? 'just after a reset' : `${amount(value, 's')} after a reset`;
+  if (key === 'level') return value === 0 ? 'output low' : 'output high';
+  if (key !== 'load') return `${amount(value, inputUnit(key))} ${CORNER_WORDS[key] ?? safeLine(key)}`;
   if (Math.abs(value) <= 1e-12) return 'no output current';
   return `${amount(Math.abs(value), 'A')} ${value > 0 ? 'sourced' : 'sunk'}`;
 }

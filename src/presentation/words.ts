@@ -55,7 +55,8 @@ export const CHECK_WORDS: Readonly<Record<CheckId, string>> = {
   noise: 'noise',
   distortion: 'distortion',
   'dc-error': 'DC error',
-  settling: 'settling',
+  settling: 'settling time',
+  'frequency-error': 'frequency error',
   'supply-current': 'supply current',
   'temperature-low': 'lowest temperature',
   'temperature-high': 'highest temperature',
@@ -85,13 +86,14 @@ export const SAYINGS: Readonly<Partial<Record<string, readonly [offered: string,
   'slew-rate': ['has', 'the stage needs'],
   'gain-bandwidth': ['has', 'the stage needs'],
   'stable-gain': ['stable from', 'the stage has'],
+  'phase-margin': ['has', 'the stage needs'],
   'temperature-low': ['specified from', 'the stage goes down to'],
   'temperature-high': ['specified up to', 'the stage goes up to'],
   channels: ['has', 'wanted'],
 };
 
 /** Checks whose excess is "over"; of the others a part is "short". */
-export const OVER: ReadonlySet<string> = new Set(['dc-error', 'supply-current', 'price', 'noise', 'distortion', 'settling', 'junction-temperature']);
+export const OVER: ReadonlySet<string> = new Set(['dc-error', 'supply-current', 'price', 'noise', 'distortion', 'settling', 'frequency-error', 'junction-temperature']);
 
 export const KIND_WORDS: Readonly<Record<LimitKind, string>> = { min: 'minimum', typ: 'typical', max: 'maximum' };
 
@@ -107,7 +109,7 @@ export const BASIS_WORDS: Readonly<Record<Basis, string>> = {
 /** Why a check cannot be decided. */
 export const REASON_WORDS: Readonly<Record<Reason, string>> = {
   'missing-figure': 'a figure is not known',
-  'beyond-data': 'the current lies beyond what the figures cover',
+  'beyond-data': 'this lies beyond what the figures cover',
   'no-counting-point': 'no head-room point counts here',
   currency: 'priced in another currency, which is not converted',
   'not-built': 'this version has no such check',

@@ -10,6 +10,8 @@ export const DIMENSIONS = {
   H: 'an inductance',
   S: 'a conductance',
   J: 'an energy',
+  C: 'a charge',
+  Ah: 'a charge',
   Vpk: 'an amplitude',
   Vpp: 'an amplitude',
   Vrms: 'an amplitude',

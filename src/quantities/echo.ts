@@ -13,17 +13,19 @@ const DERIVED = { digits: 4 } as const;
 
 const typographic = (text: string): string => text.replaceAll('-', '−');
 
-/** A number of a kind in its SI unit, exact to 12 digits. */
+/** A number of a kind in its SI unit, exact to 12 digits; a charge as batteries state it. */
 export function echoNumber(value: number, kind: FieldKind, unit: string): string {
   if (kind === 'fraction') return typographic(formatPercent(value, EXACT));
   if (kind === 'ratio') return typographic(formatQuantity(20 * Math.log10(value), 'dB', EXACT));
+  if (kind === 'charge') return formatQuantity(value / 3600, 'Ah', EXACT);
   return typographic(formatQuantity(value, unit, EXACT));
 }
 
-/** A value of its own: with what was typed when that says more (dB, Vpp, rms, V/mV). */
+/** A value of its own: with what was typed when that says more (dB, Vpp, rms, V/mV, C). */
 export function echoValue(measured: Measured, kind: FieldKind, unit: string): string {
   if (kind === 'amplitude') return echoAmplitude(measured);
   if (kind === 'gain') return echoGain(measured);
+  if (kind === 'charge' && measured.unit.dimension === 'C') return formatQuantity(measured.value, 'C', EXACT);
   if (kind === 'ratio' && measured.unit.dimension !== 'dB') return typographic(echoRejection(measured));
   return echoNumber(measured.value, kind, unit);
 }

@@ -51,5 +51,8 @@ export const KIND_RULES: Readonly<Record<FieldKind, KindRule>> = {
   time: { expected: 'a time', unit: 's', dimensions: ['s'], plausible: [1e-15, 1e6], usual: 'µs', sample: '10 µs' },
   price: { expected: 'a price', unit: 'currency', dimensions: ['currency'], plausible: [1e-6, 1e6], usual: 'USD', sample: '0.42 USD' },
   count: { expected: 'a count', unit: '1', dimensions: [], plausible: [1, 1e6], unitless: true, usual: '', sample: '2' },
+  charge: { expected: 'a charge', unit: 'C', dimensions: ['Ah', 'C'], plausible: [1e-3, 1e7], usual: 'mAh', sample: '500 mAh' },
+  share: { expected: 'a share of one', unit: '1', dimensions: ['1'], plausible: [1e-9, 1], unitless: true, usual: '%', sample: '0.3' },
+  number: { expected: 'a plain number', unit: '1', dimensions: [], plausible: [1e-6, 1e6], unitless: true, usual: '', sample: '0.707' },
   angle: { expected: 'an angle', unit: '°', dimensions: ['°'], plausible: [1e-6, 360], signed: true, usual: '°', sample: '45°' },
 };

@@ -80,7 +80,7 @@ export function refuseImplausible(value: number, measured: Measured, reading: Re
 
 function explainSize(value: number, typed: string, { kind, rule }: Reading): string {
   if (!Number.isFinite(value)) return `${typed} is beyond any number`;
-  if (kind === 'fraction' && value > 1) return `${typed} is more than 100 %`;
+  if ((kind === 'fraction' || kind === 'share') && value > 1) return `${typed} is more than 100 %`;
   const unit = kind === 'price' || rule.unit === '1' ? '' : ` ${rule.unit}`;
   const size = Math.abs(value) >= 1e-6 && Math.abs(value) < 1e15 ? grouped(value) : String(value);
   const [low, high] = rule.plausible;

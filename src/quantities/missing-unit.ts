@@ -16,7 +16,7 @@ export function supplyUnit(read: ReadFigure, reading: Reading): KnownUnit {
   if (reading.header !== null) return onHeader(read, reading);
   const { rule } = reading;
   const spelledOut = unit.prefix.length > 1;
-  if (/^[mM]$/.test(unit.prefix)) refuseBareM(read, reading);
+  if (/^[mM]$/.test(unit.prefix) && (rule.unit !== '1' || reading.kind === 'count' || reading.kind === 'fraction')) refuseBareM(read, reading);
   const allowed = rule.barePrefixes?.includes(unit.canonical) ?? (rule.unitless === true && rule.unit === 'V/V' && unit.exponent > 0);
   if (unit.refusedPrefix) refusePetaAlone(read, reading);
   if (!allowed && !(spelledOut && reading.kind === 'resistance')) refuseNone(read, reading);
@@ -88,10 +88,10 @@ function refuseNone(read: ReadFigure, reading: Reading): never {
   if (kind === 'price') {
     throw new Refusal('Q001', `${typed} has no currency`, { start: figure.start, end: figure.end, fix: `${fix}, or set a default currency` });
   }
-  if (kind === 'count' && unit !== null) {
+  if (rule.unit === '1' && kind !== 'fraction' && unit !== null) {
     const value = toNumber(read.number.mantissa, read.number.exponent + unit.exponent);
-    const plain = Number.isInteger(value) ? String(value) : undefined;
-    throw new Refusal('Q011', `${unit.prefix} is not read on a count`, { start: figure.unit?.start ?? figure.start, end: figure.end, fix: plain });
+    const plain = kind !== 'count' || Number.isInteger(value) ? String(value) : undefined;
+    throw new Refusal('Q011', `${unit.prefix} is not read on ${rule.expected}`, { start: figure.unit?.start ?? figure.start, end: figure.end, fix: plain });
   }
   const which = kind === 'ratio' ? ': dB or V/V?' : `; ${rule.expected} is expected`;
   throw new Refusal('Q001', `${typed} has no unit${which}`, { start: figure.start, end: figure.end, fix });

@@ -24,7 +24,7 @@ export function acceptUnit(unit: KnownUnit, read: ReadFigure, reading: Reading):
 function asAccepted(unit: KnownUnit, reading: Reading): KnownUnit | null {
   if (reading.rule.dimensions.includes(unit.dimension)) return unit;
   // A count is a number alone; the unit 1 is supplied, never written.
-  if (reading.kind === 'count' && unit.canonical === '1') return unit;
+  if (reading.rule.dimensions.length === 0 && unit.canonical === '1') return unit;
   const rms = reading.kind === 'voltage' && unit.dimension === 'Vrms' && reading.context.rms === true;
   return rms ? { ...unit, dimension: 'V' } : null;
 }
@@ -55,7 +55,7 @@ function refuseCase(unit: KnownUnit, read: ReadFigure, reading: Reading): never 
 /** The figure with m and with M before its unit, as far as each is plausible; both when neither is. */
 export function plausibleSpellings(unit: KnownUnit, read: ReadFigure, reading: Reading): string[] {
   const number = `${read.figure.sign}${read.figure.number.text}`;
-  const bare = unit.canonical.replace(/^[mM](?=[VAΩFHsWSJ])/, '');
+  const bare = unit.canonical.replace(/^[mM](?=[VAΩFHsWSJC])/, '');
   const spellings = unit.alternatives ?? ['M', 'm'].map((letter) => (bare === unit.canonical && !/^[mM]/.test(unit.prefix) ? unit.canonical : letter + bare));
   const plausible = spellings.filter((spelling) => isPlausible(valueIn(spelling, read, reading), reading.kind));
   return (plausible.length > 0 ? plausible : spellings).map((spelling) => `${number} ${spelling}`);

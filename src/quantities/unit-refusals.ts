@@ -68,6 +68,7 @@ const COMMON: Partial<Record<Reading['kind'], readonly string[]>> = {
   inoise: ['pA/√Hz', 'fA/rtHz'],
   price: ['EUR', 'GBP', 'CHF', 'JPY'],
   time: ['ms', 'ns', 's'],
+  charge: ['Ah', 'µAh', 'A·s'],
 };
 
 function typedNumber(figure: Figure, reading: Reading): number {
@@ -114,6 +115,7 @@ export function wrongKind(unit: UnitReading & { dimension: NonNullable<UnitReadi
   if (kind === 'inoise' && unit.dimension === 'V/√Hz') refuse('Q011', 'voltage noise where current noise is expected');
   if (kind === 'vnoise' && unit.dimension === 'V') refuse('Q004', message, `${whole(`${unit.canonical}/√Hz`)}; peak-to-peak noise has its own field`);
   if (kind === 'inoise' && unit.dimension === 'A') refuse('Q004', message, whole(`${unit.canonical}/√Hz`));
+  if (kind === 'charge' && unit.dimension === 'A') refuse('Q004', message, whole(`${unit.canonical}h`));
   if (kind === 'slew' && unit.dimension === 'V') refuse('Q004', message, whole(`${unit.canonical}/µs`));
   if (kind === 'drift' && unit.dimension === 'V') refuse('Q004', message, whole(`${unit.canonical}/°C`));
   if (kind === 'tempco' && unit.dimension === '1') refuse('Q004', message, whole(`${unit.canonical}/°C`));

@@ -38,6 +38,8 @@ const SPELLINGS: readonly Spelling[] = [
   ...spell('H', 'H', 'H henry'),
   ...spell('S', 'S', 'S siemens'),
   ...spell('J', 'J', 'J joule joules'),
+  ...spell('Ah', 'Ah', 'Ah A·h'),
+  ...spell('C', 'C', 'C As A·s coulomb coulombs'),
 ].sort((a, b) => b.text.length - a.text.length);
 
 /** Reads a prefixed unit; null when it is none. Exact spelling first, then with the letter case ignored. */
@@ -47,8 +49,8 @@ export function readTerm(text: string): UnitTerm | null {
 
 function search(text: string, foldCase: boolean): UnitTerm | null {
   for (const spelling of SPELLINGS) {
-    // h is an hour and j a current density to others; only units that are read anywhere are recognised in the wrong case.
-    if (foldCase && (spelling.symbol === 'H' || spelling.symbol === 'J')) continue;
+    // h is an hour, j a current density and c a Celsius to others; only units that are read anywhere are recognised in the wrong case.
+    if (foldCase && /^[HJC]$/.test(spelling.symbol)) continue;
     const typed = text.slice(Math.max(0, text.length - spelling.text.length));
     // Only capital omega lower-cases to ω; every other letter here is ASCII.
     const same = foldCase ? typed.toLowerCase() === spelling.text.toLowerCase() : typed === spelling.text;

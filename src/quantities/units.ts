@@ -31,6 +31,7 @@ function readForKind(text: string, kind: FieldKind): UnitReading | null {
   if (kind === 'capacitance' && text === 'f') return { ...fixed('F', 'F'), wrongCase: 'f', alternatives: ['F', 'fF'] };
   if (kind === 'resistance' && text === 'L') return fixed('Ω', 'mΩ', -3);
   if (kind === 'gain' && /^[xX]$/.test(text)) return fixed('V/V', 'V/V');
+  if (kind === 'charge' && text.endsWith('C')) return readTerm(text);
   if (kind === 'time') return secondsFromSiemens(readTerm(text));
   if (kind !== 'price') return null;
   const currency = findCurrency(text);

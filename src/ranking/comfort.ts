@@ -3,7 +3,7 @@ import { largerIsBetter } from '../formulas/desirability.js';
 import type { Verdict } from '../verdicts/verdict.js';
 
 /**
- * Margin at which a check is comfortable: beyond it more is worth nothing (method.md 10). Ranges, words, temperatures and
+ * Margin at which a check is comfortable: beyond it more is worth nothing (M10). Ranges, words, temperatures and
  * budgets have none: met is met.
  */
 const COMFORTABLE: Readonly<Record<string, { readonly limits: number; readonly typical: number }>> = {
@@ -18,7 +18,7 @@ const COMFORTABLE: Readonly<Record<string, { readonly limits: number; readonly t
   settling: { limits: 1.25, typical: 1.25 },
 };
 
-/** Margin worth nothing. Below 1, so that a part that passes exactly is not worth nothing (method.md 10, pitfall). */
+/** Margin worth nothing. Below 1, so that a part that passes exactly is not worth nothing (M10, pitfall). */
 const WORTHLESS = 0.8;
 /** No desirability falls below this. */
 export const FLOOR = 0.2;

@@ -5,7 +5,7 @@ import { priceInEuro } from './merit.js';
 
 /**
  * For each part of the list the first one that is at least as good in every clamped margin, in price, current, tier and proof,
- * and better in one: on clamped margins an over-specified part can be dominated, on raw ones never (method.md 10, RNK-10, -11).
+ * and better in one: on clamped margins an over-specified part can be dominated, on raw ones never (M10, RNK-10, -11).
  */
 export function dominatorsOf<P extends JudgedPart>(all: readonly P[]): (P | null)[] {
   const scored = all.map((one) => ({ one, scores: scoresOf(one) }));

@@ -14,7 +14,7 @@ export interface Merit {
   readonly current: number;
 }
 
-/** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (method.md 10). */
+/** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (M10). */
 export function meritOf(judged: JudgedPart): Merit {
   const margins = marginShare(judged);
   const price = onLogScale(priceInEuro(judged), PRICE);

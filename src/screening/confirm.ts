@@ -23,11 +23,14 @@ function merged(known: Confirmation, one: Confirmation): Confirmation {
 function weakPoints(verdict: Verdict): Confirmation[] {
   const needed = verdict.turnsAt === null ? null : { kind: verdict.turnsAt.kind, value: verdict.turnsAt.value, unit: verdict.turnsAt.unit };
   const checks = [verdict.check];
-  const terms = verdict.terms.filter((term) => term.basis !== 'guaranteed');
+  // A term with no figure of its own (the noise of a resistor over a typical bandwidth) is nothing anybody can look up.
+  const terms = verdict.terms.filter((term) => term.basis !== 'guaranteed' && (term.slot !== null || term.basis === 'borrowed' || term.basis === 'assumed'));
   if (terms.length > 0) {
     return terms.map((term) => {
-      const isHeadroom = term.name === 'head-room';
-      return { figure: parameterOf(term.slot) ?? term.name, slot: term.slot, basis: term.basis, how: term.how, checks, needed: isHeadroom ? needed : null };
+      const figure = parameterOf(term.slot);
+      // Only the figure the verdict turns on has a limit that would still pass.
+      const turns = term.name === 'head-room' || (figure !== null && figure === verdict.turnsAt?.figure);
+      return { figure: figure ?? term.name, slot: term.slot, basis: term.basis, how: term.how, checks, needed: turns ? needed : null };
     });
   }
   // A demand of zero (no frequency above DC) is met by any figure.

@@ -18,10 +18,10 @@ interface Span {
   readonly max: number;
 }
 
-/** Hazards of the input and output stages (method.md 9); a word that is not known raises none. */
+/** Hazards of the input and output stages (M9); a word that is not known raises none, and pins that rest at the reference reverse no phase. */
 export function hazardsOf(part: Part, demands: Demands): PartHazard[] {
   return [
-    ...(part.phaseReversal === true ? [{ kind: 'phase-reversal' } as const] : []),
+    ...(part.phaseReversal === true && !demands['input-high'].still ? [{ kind: 'phase-reversal' } as const] : []),
     ...(part.inputClamp === true ? [{ kind: 'clamp' } as const] : []),
     ...crossover(part, demands),
     ...sinkLimit(part, demands),

@@ -1,4 +1,6 @@
 export { judgePart, judging, type Judging } from './judge.js';
+export type { BatteryLife } from './battery.js';
+export type { DynamicRange } from './dynamic-range.js';
 export type { PartHazard } from './hazards.js';
 export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
 export { screen, type Rejection, type Screened } from './screen.js';

@@ -6,9 +6,11 @@ import type { ClassWorst, ReadingRules } from '../parts/reading.js';
 import { readingsOf, type Readings } from '../parts/readings.js';
 import { decide, standingOf } from '../verdicts/decide.js';
 import type { Verdict } from '../verdicts/verdict.js';
+import { batteryHours } from './battery.js';
 import { completions } from './completion.js';
 import type { JudgedPart, PartOutcome } from './judged-part.js';
 import { confirmations } from './confirm.js';
+import { dynamicRange } from './dynamic-range.js';
 import { hazardsOf } from './hazards.js';
 
 /** What stays the same for all parts of one run. */
@@ -33,6 +35,7 @@ export function judging(demands: Demands, parts: readonly Part[], strict: boolea
 export function judgePart(run: Judging, part: Part): JudgedPart {
   const verdicts = verdictsOf(run, part);
   const outcome = outcomeOf(verdicts);
+  const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
   return {
     part,
     outcome,
@@ -41,7 +44,9 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
     verdicts,
     confirm: outcome === 'fits' ? confirmations(verdicts) : [],
     hazards: hazardsOf(part, run.demands),
-    current: readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' }).figure('quiescentCurrent')?.value ?? null,
+    current: worst.figure('quiescentCurrent')?.value ?? null,
+    dynamicRange: dynamicRange(run.demands, worst),
+    batteryHours: batteryHours(run.demands, worst),
   };
 }
 

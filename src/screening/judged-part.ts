@@ -2,6 +2,8 @@ import type { Basis } from '../parts/basis.js';
 import type { LimitKind } from '../parts/figures.js';
 import type { Part } from '../parts/part.js';
 import type { Verdict } from '../verdicts/verdict.js';
+import type { BatteryLife } from './battery.js';
+import type { DynamicRange } from './dynamic-range.js';
 import type { PartHazard } from './hazards.js';
 
 export type PartOutcome = 'fits' | 'undecided' | 'does-not-fit';
@@ -33,4 +35,8 @@ export interface JudgedPart {
   readonly hazards: readonly PartHazard[];
   /** Quiescent current per amplifier on the pessimistic reading, A; for the order, asked or not. */
   readonly current: number | null;
+  /** What head-room leaves of the swing at the lowest supply; null where it is not known. */
+  readonly dynamicRange: DynamicRange | null;
+  /** Null without a battery, or with the quiescent current not known. */
+  readonly batteryHours: BatteryLife | null;
 }

@@ -1,7 +1,8 @@
 import { parseQuantity } from '../quantities/parse.js';
 import type { Draft } from './draft.js';
-import { asTyped } from './overrides.js';
-import { isFromFile, isUnder, leafText, removeField } from './tree.js';
+import { dropOwn } from './consequences-own.js';
+import { drop, giveWay, optionAt } from './give-way.js';
+import { isFromFile, isUnder, leafText } from './tree.js';
 
 /** What an option makes pointless in the file is dropped and told: a what-if stays one option and is no contradiction. */
 export function drawConsequences(draft: Draft): void {
@@ -9,6 +10,7 @@ export function drawConsequences(draft: Draft): void {
   letResistorsRule(draft);
   dropLowPeak(draft);
   replaceSignal(draft);
+  dropOwn(draft);
   dropTolerance(draft);
   dropCrossCheck(draft);
 }
@@ -25,7 +27,7 @@ function keepFeedback(draft: Draft): void {
   draft.keepFeedback = true;
   const toReference = leafText(fields, 'resistors.toReference');
   const kept = toReference === undefined ? `feedback ${feedback}` : `feedback ${feedback} and toReference ${toReference}`;
-  const again = leafText(fields, 'topology') === 'difference' ? 'input resistors' : 'input resistor';
+  const again = ['difference', 'high-side-sense'].includes(leafText(fields, 'topology')?.trim() ?? '') ? 'input resistors' : 'input resistor';
   draft.notes.push(`${by}: ${kept} kept, ${again} derived again`);
 }
 
@@ -83,26 +85,18 @@ function dropTolerance(draft: Draft): void {
   if (by !== undefined && (bringsEnds || text === 'ground')) giveWay(draft, by, ['reference.tolerance']);
 }
 
-function giveWay(draft: Draft, by: string, rivals: readonly string[]): void {
-  const gone = rivals.filter((path) => isFromFile(draft.fields, path));
-  if (gone.length === 0) return;
-  const told = gone.map((path) => `${path} ${leafText(draft.fields, path) ?? ''}`).join(' and ');
-  draft.notes.push(`${by}: ${told} of the file dropped`);
-  for (const path of gone) drop(draft, path);
-}
-
 /** Whatever moves the output at nominal values. */
 const MOVES_OUTPUT = [
   'gain', 'topology', 'resistors.feedback', 'resistors.input', 'resistors.positiveInput', 'resistors.toReference', 'reference', 'source',
   'signal.input', 'signal.amplitude', 'signal.center', 'signal.coupling', 'signal.positive', 'signal.negative', 'signal.differential', 'signal.commonMode',
+  'legs', 'photodiode', 'shunt', 'filter',
 ];
 
 /** An output of the file that only cross-checks a gain would contradict the option: a contradiction the user did not make. */
 function dropCrossCheck(draft: Draft): void {
   const { fields } = draft;
   const output = leafText(fields, 'signal.output');
-  const gainKnown = fields.has('gain') || (fields.has('resistors.feedback') && fields.has('resistors.input'));
-  if (output === undefined || !isFromFile(fields, 'signal.output') || !gainKnown) return;
+  if (output === undefined || !isFromFile(fields, 'signal.output') || !isGainKnown(draft)) return;
   const followsSupply = leafText(fields, 'reference.value')?.startsWith('mid') === true;
   const by = firstOption(draft, followsSupply ? [...MOVES_OUTPUT, 'supply'] : MOVES_OUTPUT);
   if (by === undefined) return;
@@ -110,19 +104,16 @@ function dropCrossCheck(draft: Draft): void {
   draft.notes.push(`${by}: signal.output ${output} of the file dropped, the output follows from the gain`);
 }
 
+/** True when the gain is not what the output is there to say. */
+function isGainKnown({ fields }: Draft): boolean {
+  const has = (...paths: readonly string[]): boolean => paths.every((path) => fields.has(path));
+  const topology = leafText(fields, 'topology')?.trim();
+  if (topology === 'summing') return true;
+  if (topology === 'transimpedance') return has('resistors.feedback');
+  return has('gain') || has('resistors.feedback', 'resistors.input') || (topology === 'multiple-feedback-low-pass' && has('filter.r1', 'filter.r2'));
+}
+
 function firstOption(draft: Draft, paths: readonly string[]): string | undefined {
   const written = [...draft.fields.keys()].filter((path) => paths.some((moved) => isUnder(path, moved)));
   return written.map((path) => optionAt(draft, path)).find((option) => option !== undefined);
-}
-
-/** The option that set a field, as typed; undefined when the file did. */
-function optionAt(draft: Draft, path: string): string | undefined {
-  const node = draft.fields.get(path);
-  if (node?.at.option === undefined) return undefined;
-  return node.kind === 'leaf' ? asTyped(node.at.option, node.whole?.text ?? node.text) : node.at.option;
-}
-
-function drop(draft: Draft, path: string): void {
-  removeField(draft.fields, path);
-  draft.positions.delete(path);
 }

@@ -1,12 +1,14 @@
 import type { FieldRow } from './field.js';
 import { acceptedKeys, field, FIELDS } from './schema.js';
+import { inOneLine } from './one-line.js';
+import { belongsTo, ONE_INPUT } from './ownership.js';
 import type { SignalSpec, Topology } from './spec.js';
 
-/** A field as a draft writes it: in one line (live or left out), as a block of further fields, or told as another way to say it. */
+/** A field as a draft writes it: in one line (live or left out), as a block of further fields, or told as something that goes with another one. */
 export type DraftField =
   | { readonly kind: 'line'; readonly row: FieldRow; readonly text: string; readonly isLive: boolean; readonly parts: readonly FieldRow[] }
   | { readonly kind: 'block'; readonly row: FieldRow; readonly fields: readonly DraftField[] }
-  | { readonly kind: 'instead'; readonly rows: readonly FieldRow[]; readonly of: string };
+  | { readonly kind: 'told'; readonly rows: readonly FieldRow[]; readonly lead: string };
 
 export interface DraftPlan {
   readonly topology: Topology;
@@ -22,21 +24,21 @@ export function draftKeysOf(plan: DraftPlan): readonly DraftField[] {
 }
 
 /** Maps whose keys each stand alone; of the others some keys need another one, so they are written in one line. */
-const BLOCKS: readonly string[] = ['resistors', 'signal', 'limits', 'wishes', 'margins'];
+const BLOCKS: readonly string[] = ['resistors', 'capacitors', 'signal', 'limits', 'wishes', 'margins'];
 
 function fieldsAt(level: string, plan: DraftPlan): readonly DraftField[] {
   const rows = acceptedKeys(level).map((key) => field(level === '' ? key : `${level}.${key}`));
   return rows.filter(({ path }) => belongs(path, plan)).flatMap((row): DraftField[] => {
-    const pair = insteadOf(row.path, plan);
-    if (pair === null) return [draftField(row, plan)];
-    return pair.paths[0] === row.path ? [{ kind: 'instead', rows: pair.paths.map(field), of: pair.of }] : [];
+    const told = toldWith(row.path, plan);
+    if (told === null) return [draftField(row, plan)];
+    return told.paths[0] === row.path ? [{ kind: 'told', rows: told.paths.map(field), lead: told.lead }] : [];
   });
 }
 
 function draftField(row: FieldRow, plan: DraftPlan): DraftField {
   if (BLOCKS.includes(row.path)) return { kind: 'block', row, fields: fieldsAt(row.path, plan) };
-  const written = plan.live.get(row.path);
-  const parts = FIELDS.filter(({ path }) => path.startsWith(`${row.path}.`));
+  const written = plan.live.get(row.path) ?? inOneLine(row.path, plan.live);
+  const parts = FIELDS.filter(({ path }) => path.startsWith(`${row.path}.`) && belongs(path, plan));
   return { kind: 'line', row, text: written ?? plan.examples[row.path] ?? wholeExample(row, parts), isLive: written !== undefined, parts };
 }
 
@@ -46,31 +48,30 @@ function wholeExample(row: FieldRow, parts: readonly FieldRow[]): string {
   return `{${parts.map(({ path, example }) => `${path.slice(row.path.length + 1)}: ${example}`).join(', ')}}`;
 }
 
-const SECOND_INPUTS = ['signal.positive', 'signal.negative', 'signal.differential', 'signal.commonMode'];
-const ONE_INPUT = ['signal.input', 'signal.amplitude', 'signal.center'];
-
 /** False for what this topology or coupling refuses. */
 function belongs(path: string, { topology, coupling }: DraftPlan): boolean {
-  if (topology === 'follower' && path === 'resistors') return false;
-  if (coupling === 'ac' && (path === 'signal.input' || path === 'signal.center')) return false;
-  if (topology === 'difference') return !ONE_INPUT.includes(path);
-  return !SECOND_INPUTS.includes(path) && path !== 'resistors.positiveInput' && path !== 'resistors.toReference';
+  const refused = coupling === 'ac' ? ['signal.input', 'signal.center', 'legs.NAME.input'] : ['legs.NAME.amplitude'];
+  return belongsTo(path, topology) && !refused.includes(path);
 }
 
-interface Instead {
+interface Told {
   readonly paths: readonly string[];
-  readonly of: string;
+  readonly lead: string;
 }
 
-/** Two ways to say one thing: the way that is not taken is told, since its line alone would contradict the other. */
-function insteadOf(path: string, { live, coupling, topology, examples }: DraftPlan): Instead | null {
+/** Two ways to say one thing, and what needs another field: the line alone would be refused, so it is only told. */
+function toldWith(path: string, { live, coupling, topology, examples }: DraftPlan): Told | null {
   const has = (one: string): boolean => live.has(one);
-  const ways: readonly (readonly [boolean, Instead])[] = [
-    [topology !== 'difference' && coupling === 'dc', { paths: ['signal.amplitude', 'signal.center'], of: 'input' }],
-    [has('signal.differential'), { paths: ['signal.positive', 'signal.negative'], of: 'differential and commonMode' }],
-    [has('signal.positive'), { paths: ['signal.differential', 'signal.commonMode'], of: 'positive and negative' }],
-    [has('signal.output') && !has('gain'), { paths: ['gain'], of: 'signal.output' }],
-    [!has('signal.output') && examples['signal.output'] === undefined, { paths: ['signal.output'], of: 'gain, or as a cross-check' }],
+  const ways: readonly (readonly [boolean, Told])[] = [
+    [ONE_INPUT.includes(topology) && coupling === 'dc', { paths: ['signal.amplitude', 'signal.center'], lead: 'In place of input' }],
+    [has('signal.differential'), { paths: ['signal.positive', 'signal.negative'], lead: 'In place of differential and commonMode' }],
+    [has('signal.positive'), { paths: ['signal.differential', 'signal.commonMode'], lead: 'In place of positive and negative' }],
+    [has('signal.output') && !has('gain'), { paths: ['gain'], lead: 'In place of signal.output' }],
+    [!has('signal.output') && examples['signal.output'] === undefined, { paths: ['signal.output'], lead: 'In place of gain, or as a cross-check' }],
+    [topology === 'sallen-key-low-pass', { paths: ['resistors.feedback', 'resistors.input'], lead: 'With a gain above 1' }],
+    [topology === 'integrator' && coupling === 'ac', { paths: ['limits.dcError'], lead: 'With integrator.window' }],
+    [true, { paths: ['signal.edge'], lead: 'With shape step or pulse' }],
+    [true, { paths: ['signal.duty'], lead: 'With shape pulse' }],
   ];
   return ways.find(([applies, { paths }]) => applies && paths.includes(path))?.[1] ?? null;
 }

@@ -14,11 +14,11 @@ export interface DraftRequest {
 
 /**
  * A commented stage file with every field of the topology: what is needed or answered stands there, the rest has a `#` directly
- * before it. Reads back as it is, and with any one of those taken away when nothing was answered. RangeError for what is not built.
+ * before it. Reads back as it is, and with any one of those taken away when nothing was answered. RangeError for what is not coupled so.
  */
 export function draftFile(request: DraftRequest): string {
   const scene = sceneOf(request.topology, request.coupling);
-  if (scene === null) throw new RangeError(`no draft of an AC-coupled ${request.topology} stage: it is not built`);
+  if (scene === null) throw new RangeError(`no draft of an AC-coupled ${request.topology} stage: it is refused`);
   const head = [...(request.values === undefined ? prose(scene.told, '') : []), ...prose(HOW, ''), ''];
   const live = request.values ?? new Map(Object.entries(scene.live));
   const fields = draftKeysOf({ ...request, live, examples: scene.examples });
@@ -29,7 +29,7 @@ const HOW =
   'Values are written as engineers write them, with their unit. A field with # directly before it is left out and takes its default; take the # away to use it. Whatever default is taken is printed as an assumption.';
 
 function fieldLines(one: DraftField, indent: string): string[] {
-  if (one.kind === 'instead') return one.rows.flatMap((row, at) => insteadLines(row, { indent, lead: at === 0 ? `In place of ${one.of}, ` : 'Together with it, ' }));
+  if (one.kind === 'told') return one.rows.flatMap((row, at) => toldLines(row, { indent, lead: at === 0 ? one.lead : 'Together with it' }));
   const told = prose(`${capital(one.row.meaning)}. Accepted: ${one.row.accepted}.`, indent);
   const key = keyOf(one.row);
   if (one.kind === 'block') return [...prose(`${capital(one.row.meaning)}.`, indent), `${indent}${key}:`, ...one.fields.flatMap((field) => fieldLines(field, `${indent}  `))];
@@ -41,8 +41,8 @@ function partLines(row: FieldRow, indent: string): string[] {
   return prose(`${keyOf(row)}: ${row.meaning}. Accepted: ${row.accepted}.`, indent, 2);
 }
 
-function insteadLines(row: FieldRow, { indent, lead }: { indent: string; lead: string }): string[] {
-  return prose(`${lead}${keyOf(row)}: ${row.example} (${row.meaning}). Accepted: ${row.accepted}.`, indent);
+function toldLines(row: FieldRow, { indent, lead }: { indent: string; lead: string }): string[] {
+  return prose(`${lead}, ${keyOf(row)}: ${row.example} (${row.meaning}). Accepted: ${row.accepted}.`, indent);
 }
 
 const keyOf = ({ path }: FieldRow): string => path.slice(path.lastIndexOf('.') + 1);

@@ -14,20 +14,33 @@ export function readGain(draft: Draft, topology: Topology | undefined): Value | 
 }
 
 function impossible(gain: number, topology: Topology | undefined): Omit<Complaint, 'code'> | null {
-  if (topology === 'inverting' || topology === undefined) return null;
-  if (gain < 0) return { message: `a ${topology} stage does not invert: its gain is above 0; ${SIGN[topology]}`, fix: topology === 'follower' ? '1' : String(-gain) };
-  if (topology === 'follower' && gain !== 1) return { message: 'a follower has a gain of exactly 1; a non-inverting stage gains more', fix: '1, or topology: non-inverting' };
-  if (topology !== 'non-inverting') return null;
-  if (gain === 1) return { message: 'a non-inverting stage with a gain of exactly 1 is a follower', fix: 'topology: follower' };
-  if (gain < 1) return { message: 'a non-inverting stage has a gain of 1 + Rf/Rg, never below 1; an inverting or a difference stage can attenuate', fix: 'topology: inverting' };
-  return null;
+  if (topology === undefined || TURNS[topology] === undefined) return null;
+  if (gain < 0) return { message: `a ${topology} stage does not invert: its gain is above 0; ${TURNS[topology]}`, fix: topology === 'follower' ? '1' : String(-gain) };
+  return OUT_OF_REACH[topology]?.(gain) ?? null;
 }
 
-const SIGN = {
-  follower: 'only an inverting stage turns the sign',
-  'non-inverting': 'only an inverting stage turns the sign',
+const ONLY_INVERTING = 'only an inverting stage turns the sign';
+
+/** Where the sign counts: how to turn it. In an inverting stage −8 and 8 mean the same. */
+const TURNS: Readonly<Partial<Record<Topology, string>>> = {
+  follower: ONLY_INVERTING,
+  'non-inverting': ONLY_INVERTING,
   difference: 'exchange positive and negative to turn the sign',
-} as const;
+  'low-side-sense': 'write shunt.current with the other sign to turn it',
+  'high-side-sense': 'write shunt.current with the other sign to turn it',
+  'sallen-key-low-pass': 'only a multiple-feedback filter turns the sign',
+};
+
+const OUT_OF_REACH: Readonly<Partial<Record<Topology, (gain: number) => Omit<Complaint, 'code'> | null>>> = {
+  follower: (gain) => (gain === 1 ? null : { message: 'a follower has a gain of exactly 1; a non-inverting stage gains more', fix: '1, or topology: non-inverting' }),
+  'non-inverting': (gain) => {
+    if (gain > 1) return null;
+    if (gain === 1) return { message: 'a non-inverting stage with a gain of exactly 1 is a follower', fix: 'topology: follower' };
+    return { message: 'a non-inverting stage has a gain of 1 + Rf/Rg, never below 1; an inverting or a difference stage can attenuate', fix: 'topology: inverting' };
+  },
+  'low-side-sense': (gain) => (gain > 1 ? null : { message: 'a low-side stage has a gain of 1 + Rf/Rg, above 1: it makes the small voltage of the shunt larger', fix: '40' }),
+  'sallen-key-low-pass': (gain) => (gain >= 1 ? null : { message: 'a Sallen-Key filter has a gain of 1 or more; a multiple-feedback filter can attenuate', fix: '1, or topology: multiple-feedback-low-pass' }),
+};
 
 /** `−8 V/V (inverting)` → `8 V/V`. */
 function magnitudeText(text: string): string {

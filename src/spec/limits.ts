@@ -1,7 +1,7 @@
 import type { Draft } from './draft.js';
 import { readDistortion, readNoise } from './noise.js';
 import { present } from './present.js';
-import type { LimitsSpec } from './spec.js';
+import type { GainErrorKind, LimitsSpec } from './spec.js';
 import { refuseAbsent } from './refuse.js';
 import { readValue } from './value.js';
 import { readChoice } from './words.js';
@@ -11,7 +11,7 @@ export function readLimits(draft: Draft): LimitsSpec {
   return present({
     swingLoss: readValue(draft, 'limits.swingLoss'),
     gainError: readValue(draft, 'limits.gainError'),
-    gainErrorKind: readChoice<'magnitude' | 'vector'>(draft, 'limits.gainErrorKind'),
+    gainErrorKind: readChoice<GainErrorKind>(draft, 'limits.gainErrorKind'),
     dcError: readValue(draft, 'limits.dcError'),
     outputNoise: readNoise(draft),
     snr: readValue(draft, 'limits.snr'),
@@ -20,6 +20,8 @@ export function readLimits(draft: Draft): LimitsSpec {
     supplyCurrentPer: readChoice<'amplifier' | 'package'>(draft, 'limits.supplyCurrentPer'),
     settling: readSettling(draft),
     phaseMargin: readValue(draft, 'limits.phaseMargin'),
+    junctionTemperature: readValue(draft, 'limits.junctionTemperature'),
+    frequencyError: readValue(draft, 'limits.frequencyError'),
   });
 }
 

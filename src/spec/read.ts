@@ -10,13 +10,15 @@ import { inOrder, problemAt } from './problems.js';
 import { readReference } from './reference.js';
 import { refuseMissing } from './required.js';
 import { present } from './present.js';
-import { readSignal } from './signal.js';
+import { readFed } from './fed.js';
 import type { Hazard, Override, SpecResult, StageSpec } from './spec.js';
 import { flatten } from './structure.js';
 import { isEmpty } from './tree.js';
 import { supplyContradictions } from './supply-contradictions.js';
 import { readLoad, readResistors, readSource } from './surroundings.js';
 import { readMargins, readWishes } from './team.js';
+import { readBattery, readConverter, readFollowing } from './readout.js';
+import { readCapacitors, readDrives, readFilter, readOscillator } from './shaping.js';
 import { readInterval, readValue } from './value.js';
 import { readChoices, readPaths, readText } from './words.js';
 
@@ -83,9 +85,16 @@ function readOthers(draft: Draft, topology: StageSpec['topology'] | undefined): 
     keepFeedback: draft.keepFeedback ? true : undefined,
     resistors: readResistors(draft),
     reference: readReference(draft),
-    signal: readSignal(draft),
+    ...readFed(draft),
+    capacitors: readCapacitors(draft),
+    filter: readFilter(draft),
+    oscillator: readOscillator(draft),
+    drives: readDrives(draft),
     source: readSource(draft),
     load: readLoad(draft),
+    following: readFollowing(draft),
+    converter: readConverter(draft),
+    battery: readBattery(draft),
     temperature: readInterval(draft, 'temperature'),
     limits: readLimits(draft),
     wishes: readWishes(draft),

@@ -3,7 +3,7 @@ import type { Complaint } from './problems.js';
 import { problemAt, problemIn } from './problems.js';
 import { field, howToWrite } from './schema.js';
 import type { Position } from './spec.js';
-import type { Leaf } from './tree.js';
+import { removeField, type Leaf } from './tree.js';
 
 /** Notes a problem at a field, with its text when it has one; always undefined, so that a reader can return it. */
 export function refuse(draft: Draft, path: string, complaint: Complaint & { readonly span?: readonly [number, number] }): undefined {
@@ -14,9 +14,16 @@ export function refuse(draft: Draft, path: string, complaint: Complaint & { read
 }
 
 /** Notes S102 for a field that is not there, at the map that should hold it; the fix is a line, or an option when options do the talking. */
-export function refuseAbsent(draft: Draft, path: string): undefined {
+export function refuseAbsent(draft: Draft, path: string, example?: string): undefined {
   const asLine = draft.hasFile && positionOf(draft, path).option === undefined;
-  return refuse(draft, path, { code: 'S102', message: `${path} is missing; accepted: ${field(path).accepted}`, fix: howToWrite(path, asLine) });
+  return refuse(draft, path, { code: 'S102', message: `${path} is missing; accepted: ${field(path).accepted}`, fix: howToWrite(path, asLine, example) });
+}
+
+/** Notes S108 at a field that is written, and takes it out of the draft. */
+export function stranger(draft: Draft, path: string, reason: { readonly message: string; readonly fix: string }): void {
+  if (!draft.fields.has(path)) return;
+  refuse(draft, path, { code: 'S108', ...reason });
+  removeField(draft.fields, path);
 }
 
 /** Where a field is written; a missing one stands where the map around it does. */

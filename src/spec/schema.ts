@@ -1,5 +1,7 @@
 import { FIELDS } from './fields.js';
 import type { FieldRow } from './field.js';
+import { belongsTo } from './ownership.js';
+import { TOPOLOGIES, type Topology } from './spec.js';
 
 export { FIELDS } from './fields.js';
 export type { FieldRow } from './field.js';
@@ -8,20 +10,41 @@ const BY_PATH: ReadonlyMap<string, FieldRow> = new Map(FIELDS.map((row) => [row.
 
 /** The row of a field by its dotted path; undefined when there is no such field. */
 export function fieldAt(path: string): FieldRow | undefined {
-  return BY_PATH.get(path);
+  return BY_PATH.get(path) ?? BY_PATH.get(rowPath(path));
+}
+
+/** The path as the table has it: a name of the user's own choosing becomes `NAME`. */
+export function rowPath(path: string): string {
+  return path.replace(/^legs\.[^.]*/, 'legs.NAME');
+}
+
+/** True for the map whose keys are names of the user's own choosing. */
+export function takesOwnNames(level: string): boolean {
+  return BY_PATH.has(`${level}.NAME`);
 }
 
 /** The row of a field that is known to exist; a RangeError names a path the table lacks. */
 export function field(path: string): FieldRow {
-  const row = BY_PATH.get(path);
+  const row = fieldAt(path);
   if (row === undefined) throw new RangeError(`no field ${path} in the table of the stage file`);
   return row;
 }
 
-/** Keys accepted in one map of the stage file, in table order: '' is the top level, then `signal`, `limits.settling`, … */
+const KEYS: ReadonlyMap<string, readonly string[]> = keysByLevel();
+
+function keysByLevel(): Map<string, string[]> {
+  const found = new Map<string, string[]>();
+  for (const { path } of FIELDS) {
+    const end = path.lastIndexOf('.');
+    const level = path.slice(0, Math.max(end, 0));
+    found.set(level, [...(found.get(level) ?? []), path.slice(end + 1)]);
+  }
+  return found;
+}
+
+/** Keys accepted in one map of the stage file, in table order: '' is the top level, then `signal`, `limits.settling`, `legs.trim`, … */
 export function acceptedKeys(level: string): readonly string[] {
-  const prefix = level === '' ? '' : `${level}.`;
-  return FIELDS.filter((row) => row.path.startsWith(prefix) && !row.path.slice(prefix.length).includes('.')).map((row) => row.path.slice(prefix.length));
+  return KEYS.get(rowPath(level)) ?? [];
 }
 
 /** Every map of the stage file with its accepted keys. */
@@ -43,6 +66,8 @@ export interface FieldHelp {
   readonly meaning: string;
   /** The option that sets it: its own, else `--set path=…`. */
   readonly option: string;
+  /** Topologies that have it. */
+  readonly topologies: readonly Topology[];
 }
 
 /** One line of help for every field, in the order of the stage file. */
@@ -53,14 +78,15 @@ export function renderStageHelp(): readonly FieldHelp[] {
     example: row.example,
     meaning: row.meaning,
     option: row.option ?? `--set ${row.path}=`,
+    topologies: TOPOLOGIES.filter((topology) => belongsTo(row.path, topology)),
   }));
 }
 
-/** How to write a field that is missing: a line of the file, or the option when there is no file. */
-export function howToWrite(path: string, hasFile: boolean): string {
-  const row = field(path);
-  if (!hasFile) return row.option === undefined ? `--set "${path}=${row.example}"` : `${row.option} "${row.example}"`;
+/** How to write a field that is missing: a line of the file, or the option when there is no file; `example` in place of the one of the table. */
+export function howToWrite(path: string, hasFile: boolean, example = field(path).example): string {
+  const { option } = field(path);
+  if (!hasFile) return option === undefined ? `--set "${path}=${example}"` : `${option} "${example}"`;
   const keys = path.split('.');
   const last = keys.pop() ?? path;
-  return keys.reduceRight((inner, key) => `${key}: {${inner}}`, `${last}: ${row.example}`);
+  return keys.reduceRight((inner, key) => `${key}: {${inner}}`, `${last}: ${example}`);
 }

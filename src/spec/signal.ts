@@ -1,5 +1,5 @@
 import type { Draft } from './draft.js';
-import type { SignalSpec, Swing, Value } from './spec.js';
+import type { SignalShape, SignalSpec, Swing, Value } from './spec.js';
 import { present } from './present.js';
 import { field } from './schema.js';
 import { leafAt, refuse } from './refuse.js';
@@ -9,11 +9,11 @@ import { readChoice } from './words.js';
 /** Everything under `signal`; what does not belong to the topology or coupling is gone from the draft by now. */
 export function readSignal(draft: Draft): SignalSpec {
   const coupling = readChoice<'dc' | 'ac'>(draft, 'signal.coupling') ?? 'dc';
-  const amplitude = readAmplitude(draft);
+  const amplitude = readAmplitude(draft, 'signal.amplitude');
   const input = coupling === 'dc' ? (readSwing(draft, 'signal.input') ?? inputFrom(amplitude, readValue(draft, 'signal.center'))) : undefined;
   return present({
     coupling,
-    shape: readShape(draft),
+    shape: readChoice<SignalShape>(draft, 'signal.shape') ?? 'band-limited',
     input,
     amplitude: coupling === 'ac' ? amplitude : undefined,
     positive: readSwing(draft, 'signal.positive'),
@@ -22,28 +22,24 @@ export function readSignal(draft: Draft): SignalSpec {
     commonMode: readSwing(draft, 'signal.commonMode'),
     output: readSwing(draft, 'signal.output'),
     frequency: readFrequency(draft),
+    edge: readValue(draft, 'signal.edge'),
+    duty: readValue(draft, 'signal.duty'),
+    observation: readValue(draft, 'signal.observation'),
   });
 }
 
 /** Peak volts; an rms figure is that of a sine, which is told unless the signal is one. */
-function readAmplitude(draft: Draft): Value | undefined {
-  const amplitude = readValue(draft, 'signal.amplitude');
-  const typed = leafAt(draft, 'signal.amplitude')?.text ?? '';
+export function readAmplitude(draft: Draft, path: string): Value | undefined {
+  const amplitude = readValue(draft, path);
+  const typed = leafAt(draft, path)?.text ?? '';
   const isRms = /rms|dB[uV]/i.test(typed);
-  if (amplitude !== undefined && isRms && leafAt(draft, 'signal.shape')?.text !== 'sine') draft.notes.push(`signal.amplitude ${amplitude.text}: peak taken as that of a sine`);
+  if (amplitude !== undefined && isRms && leafAt(draft, 'signal.shape')?.text !== 'sine') draft.notes.push(`${path} ${amplitude.text}: peak taken as that of a sine`);
   return amplitude;
 }
 
 function inputFrom(amplitude: Value | undefined, center: Value | undefined): Swing | undefined {
   if (amplitude === undefined || center === undefined) return undefined;
   return { min: center.value - amplitude.value, max: center.value + amplitude.value, text: `${amplitude.text} about ${center.text}` };
-}
-
-function readShape(draft: Draft): 'sine' | 'band-limited' {
-  const shape = readChoice<'sine' | 'band-limited' | 'step' | 'pulse'>(draft, 'signal.shape');
-  if (shape === 'sine') return shape;
-  if (shape === 'step' || shape === 'pulse') refuse(draft, 'signal.shape', { code: 'S106', message: `shape ${shape} is not built yet; built: sine, band-limited`, fix: 'band-limited' });
-  return 'band-limited';
 }
 
 function readFrequency(draft: Draft): SignalSpec['frequency'] | undefined {

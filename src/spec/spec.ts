@@ -14,13 +14,12 @@ export interface Value {
   readonly text: string;
 }
 
-/** All topologies of the contract; those not yet built are refused by name in `read.ts`. */
+/** All topologies of the contract. */
 export const TOPOLOGIES = [
   'follower', 'non-inverting', 'inverting', 'summing', 'difference', 'transimpedance', 'low-side-sense', 'high-side-sense',
   'sallen-key-low-pass', 'multiple-feedback-low-pass', 'integrator', 'relaxation-oscillator',
 ] as const;
-export const BUILT_TOPOLOGIES = ['follower', 'non-inverting', 'inverting', 'difference'] as const;
-export type Topology = (typeof BUILT_TOPOLOGIES)[number];
+export type Topology = (typeof TOPOLOGIES)[number];
 
 export interface ResistorsSpec {
   readonly feedback?: Value;
@@ -51,7 +50,7 @@ export interface Swing {
 
 export interface SignalSpec {
   readonly coupling: 'dc' | 'ac';
-  readonly shape: 'sine' | 'band-limited';
+  readonly shape: SignalShape;
   /** DC-coupled single input, also when given as amplitude with centre. */
   readonly input?: Swing;
   /** AC-coupled: peak volts about the bias. */
@@ -63,8 +62,113 @@ export interface SignalSpec {
   readonly differential?: Swing;
   readonly commonMode?: Swing;
   readonly output?: Swing;
-  /** Hz. */
+  /** Hz. Of a pulse: its repetition. */
   readonly frequency?: { readonly bottom?: number; readonly top: number; readonly text: string };
+  /** Step and pulse: 10 % to 90 % time wanted at the output, s. */
+  readonly edge?: Value;
+  /** Pulse: share of the period spent high, 0..1; absent: free. */
+  readonly duty?: Value;
+  /** How long one looks, s: its inverse is the lowest noise frequency. */
+  readonly observation?: Value;
+}
+
+export type SignalShape = 'sine' | 'band-limited' | 'step' | 'pulse';
+
+/** One leg of a summing stage: a signal or a fixed level through a resistor. */
+export interface LegSpec {
+  readonly name: string;
+  /** `signal`: swing against ground (AC-coupled: about zero). The others move with the supply or rest at the reference. */
+  readonly level: { readonly kind: 'signal'; readonly swing: Swing } | { readonly kind: 'supply' } | { readonly kind: 'reference' };
+  /** One of the two is given: ohm, or the magnitude of the gain from this leg. */
+  readonly resistance?: Value;
+  readonly gain?: Value;
+}
+
+/** Currents in A, capacitance in F, resistance in Ω. */
+export interface PhotodiodeSpec {
+  readonly current: Swing;
+  /** `into-node`: pushed into the summing node (anode there), output goes down; `out-of-node`: cathode there, output goes up. */
+  readonly direction: 'into-node' | 'out-of-node';
+  /** Diode and wiring at the node, without the amplifier's own. */
+  readonly capacitance: Value;
+  /** Dark current at 25 °C; doubles per 10 K. */
+  readonly dark?: Value;
+  /** Light that is always there, as current. */
+  readonly ambient?: Swing;
+}
+
+/** Current in A (negative: reverse), resistance in Ω, bus in V (high side). */
+export interface ShuntSpec {
+  readonly resistance: Value;
+  readonly tolerance?: Value;
+  readonly current: Swing;
+  readonly bus?: Interval;
+}
+
+/** Either corner (Hz) and q, or the components (Ω, F) as fitted. */
+export interface FilterSpec {
+  readonly corner?: Value;
+  readonly q?: Value;
+  readonly r1?: Value;
+  readonly r2?: Value;
+  /** Multiple feedback only. */
+  readonly r3?: Value;
+  readonly c1?: Value;
+  readonly c2?: Value;
+}
+
+/** Capacitors around the amplifier: F, tolerance as a fraction. */
+export interface CapacitorsSpec {
+  /** Output to inverting input. */
+  readonly feedback?: Value;
+  readonly tolerance?: Value;
+}
+
+export interface IntegratorSpec {
+  /** Input resistor Ω and integrating capacitor F. */
+  readonly resistance: Value;
+  readonly capacitance: Value;
+  /** Time from one reset to the next, s; absent: the signal's lowest frequency bounds the swing. */
+  readonly window?: Value;
+}
+
+export interface OscillatorSpec {
+  /** Hz. */
+  readonly frequency: Value;
+  /** Longest edge as a share of the half period; default 5 %. */
+  readonly edge?: Value;
+  /** Timing resistor and capacitor; one or both chosen when absent. */
+  readonly resistance?: Value;
+  readonly capacitance?: Value;
+  /** Threshold resistors to the supply, to ground and to the output. */
+  readonly toSupply?: Value;
+  readonly toGround?: Value;
+  readonly toOutput?: Value;
+}
+
+/** The logic an output drives: thresholds as shares of the supply, longest time allowed between them in s. */
+export interface DrivesSpec {
+  readonly threshold: Swing;
+  readonly maxEdge?: Value;
+}
+
+/** The filter that follows, Hz and order (Butterworth). */
+export interface FollowingSpec {
+  readonly corner: Value;
+  readonly order: number;
+}
+
+export interface ConverterSpec {
+  readonly bits: number;
+  /** Volts. */
+  readonly range: Swing;
+}
+
+/** Capacity in A·s (as written in mAh), what of it is usable as a fraction, what else draws from it in A. */
+export interface BatterySpec {
+  readonly capacity: Value;
+  readonly usable?: Value;
+  readonly others?: Value;
 }
 
 export interface LoadSpec {
@@ -73,12 +177,17 @@ export interface LoadSpec {
   readonly to: 'ground' | 'supply' | 'reference';
   /** Farad. */
   readonly capacitance?: Value;
+  /** Ohm in series between the amplifier and its load, outside the loop. */
+  readonly isolation?: Value;
 }
+
+/** `corner`: shift of the −3 dB frequency of a filter. */
+export type GainErrorKind = 'magnitude' | 'vector' | 'corner';
 
 export interface LimitsSpec {
   readonly swingLoss?: Value;
   readonly gainError?: Value;
-  readonly gainErrorKind?: 'magnitude' | 'vector';
+  readonly gainErrorKind?: GainErrorKind;
   readonly dcError?: Value;
   readonly outputNoise?: Value;
   readonly snr?: Value;
@@ -87,6 +196,10 @@ export interface LimitsSpec {
   readonly supplyCurrentPer?: 'amplifier' | 'package';
   readonly settling?: { readonly within: Value; readonly to: Value };
   readonly phaseMargin?: Value;
+  /** °C. */
+  readonly junctionTemperature?: Value;
+  /** Oscillator: fraction. */
+  readonly frequencyError?: Value;
 }
 
 export interface WishesSpec {
@@ -127,6 +240,18 @@ export interface StageSpec {
   readonly resistors?: ResistorsSpec;
   readonly reference?: ReferenceSpec;
   readonly signal: SignalSpec;
+  readonly capacitors?: CapacitorsSpec;
+  /** Summing, in the order written. */
+  readonly legs?: readonly LegSpec[];
+  readonly photodiode?: PhotodiodeSpec;
+  readonly shunt?: ShuntSpec;
+  readonly filter?: FilterSpec;
+  readonly integrator?: IntegratorSpec;
+  readonly oscillator?: OscillatorSpec;
+  readonly drives?: DrivesSpec;
+  readonly following?: FollowingSpec;
+  readonly converter?: ConverterSpec;
+  readonly battery?: BatterySpec;
   readonly source?: { readonly resistance: Value; readonly tolerance?: Value };
   readonly load?: LoadSpec;
   readonly temperature?: Interval;

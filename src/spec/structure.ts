@@ -1,12 +1,12 @@
 import type { Problem } from '../quantities/problem.js';
-import { problemAt } from './problems.js';
-import { acceptedKeys, field, fieldAt } from './schema.js';
+import { problemAt, type Complaint } from './problems.js';
+import { acceptedKeys, field, fieldAt, takesOwnNames } from './schema.js';
 import { expandShortForm } from './short-forms.js';
 import type { Shape } from './field.js';
 import type { Position } from './spec.js';
 import type { Branch, Entry, Fields, Leaf, List, Node } from './tree.js';
 import { isEmpty } from './tree.js';
-import { OTHER_TOPOLOGIES_KEYS } from './topology-keys.js';
+import { nameComplaint } from './leg-names.js';
 import { unknownKey } from './unknown-key.js';
 
 export interface Flat {
@@ -71,15 +71,17 @@ function visitEntry(item: Entry, around: { wanted: Wanted; flat: Flat; seen: Map
     return;
   }
   seen.set(item.key, item.keyAt);
-  if (Object.hasOwn(OTHER_TOPOLOGIES_KEYS, path)) {
-    flat.fields.set(path, { ...item.node, at: item.keyAt });
-    return;
-  }
-  if (!acceptedKeys(wanted.path).includes(item.key)) {
-    flat.problems.push(problemAt(spot, unknownKey(item.key, wanted.path)));
+  const complaint = keyComplaint(item.key, wanted.path);
+  if (complaint !== null) {
+    flat.problems.push(problemAt(spot, complaint));
     return;
   }
   visit(expandShortForm(path, item.node), { path, keyAt: item.keyAt, file: wanted.file }, flat);
+}
+
+function keyComplaint(key: string, level: string): Complaint | null {
+  if (takesOwnNames(level)) return nameComplaint(key);
+  return acceptedKeys(level).includes(key) ? null : unknownKey(key, level);
 }
 
 const NAMES = { leaf: 'one value', list: 'a list', branch: 'a map' } as const;

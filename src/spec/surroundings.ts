@@ -35,7 +35,7 @@ export function readLoad(draft: Draft): LoadSpec | undefined {
   const [hasResistance, hasTo] = [draft.fields.has('load.resistance'), draft.fields.has('load.to')];
   if (!hasResistance && (hasTo || !draft.fields.has('load.capacitance'))) refuseAbsent(draft, 'load.resistance');
   if (resistance !== undefined && !hasTo) draft.notes.push(`load ${resistance.text} taken to ground`);
-  return present({ resistance, to: to ?? 'ground', capacitance });
+  return present({ resistance, to: to ?? 'ground', capacitance, isolation: readValue(draft, 'load.isolation') });
 }
 
 function isWritten(draft: Draft, path: string): boolean {

@@ -1,6 +1,9 @@
 import { fold, nearest, shown } from './nearest.js';
+import { ownersOf } from './ownership.js';
 import type { Complaint } from './problems.js';
-import { acceptedKeys, fieldAt, howToWrite, knownPaths } from './schema.js';
+import { nameComplaint } from './leg-names.js';
+import { acceptedKeys, fieldAt, howToWrite, knownPaths, takesOwnNames } from './schema.js';
+import { TOPOLOGIES } from './spec.js';
 
 /** S101 for a key: what was probably meant, and all keys accepted at that level. */
 export function unknownKey(key: string, level: string): Complaint {
@@ -15,22 +18,43 @@ export function unknownKey(key: string, level: string): Complaint {
 
 /** S101 for a dotted path given in an option or in a list; null when it is a field. */
 export function unknownPath(path: string): Complaint | null {
+  const name = ownName(path);
+  if (name !== null) return nameComplaint(name) ?? unknownInside(path);
   if (fieldAt(path) !== undefined) return null;
-  const meant = nearest(path, knownPaths()) ?? elsewhere(path);
+  const meant = nearest(path, writtenPaths()) ?? elsewhere(path);
   const above = path.slice(0, Math.max(path.lastIndexOf('.'), 0));
   const level = acceptedKeys(above).length > 0 ? above : '';
   const under = level === '' ? '' : ` under ${level}`;
   return { code: 'S101', message: `${shown(path)} is not a field of the stage file${hint(meant)} accepted${under}: ${acceptedKeys(level).join(', ')}`, fix: meant ?? 'limits.dcError' };
 }
 
+/** The name in a path under a map of own names: `trim` of `legs.trim.resistance`. */
+function ownName(path: string): string | null {
+  const [first = '', name] = path.split('.');
+  return name !== undefined && takesOwnNames(first) ? name : null;
+}
+
+function unknownInside(path: string): Complaint | null {
+  const [level = '', name = '', ...rest] = path.split('.');
+  if (fieldAt(path) !== undefined) return null;
+  const leg = `${level}.${name}`;
+  const { message, fix = '' } = unknownKey(rest.join('.'), leg);
+  return { code: 'S101', message, fix: acceptedKeys(leg).includes(fix) ? `${leg}.${fix}` : fix };
+}
+
+/** Paths without a name of the user's own in them: what can be offered as it stands. */
+const writtenPaths = (): readonly string[] => knownPaths().filter((path) => !path.split('.').includes('NAME'));
+
 function hint(meant: string | undefined): string {
   return meant === undefined ? ';' : `, did you mean ${meant}?`;
 }
 
-/** The same last word at another level: `dcError` is `limits.dcError`. */
+/** The same last word at another level: `dcError` is `limits.dcError`; where several maps have it, the one that most topologies have. */
 function elsewhere(key: string): string | undefined {
   const last = (path: string): string => fold(path.slice(path.lastIndexOf('.') + 1));
-  return knownPaths().find((path) => last(path) === last(key));
+  const owners = (path: string): number => ownersOf(path.split('.')[0] ?? '')?.length ?? TOPOLOGIES.length;
+  const same = writtenPaths().filter((path) => last(path) === last(key));
+  return same.sort((a, b) => owners(b) - owners(a))[0];
 }
 
 /** `{gain:8}` is one key to YAML. */

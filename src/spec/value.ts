@@ -36,6 +36,14 @@ export function readSwing(draft: Draft, path: string): Swing | undefined {
   return interval === undefined ? undefined : { min: interval.min, max: interval.max, text: interval.text };
 }
 
+/** A field that needs two figures that differ; `what` names them. */
+export function readRange(draft: Draft, path: string, what: string): Swing | undefined {
+  const read = readSwing(draft, path);
+  if (read === undefined || read.min < read.max) return read;
+  const { accepted, example } = field(path);
+  return refuse(draft, path, { code: 'S112', message: `${read.text} is one figure where ${what} are expected; accepted: ${accepted}`, fix: example });
+}
+
 export interface ReadAs {
   readonly kind?: FieldKind;
   readonly context?: ReadingContext;
@@ -74,8 +82,8 @@ export function withinBounds(draft: Draft, path: string, figures: readonly numbe
   return false;
 }
 
-function isWithin(figure: number, { above, from, below }: Bounds): boolean {
-  return (above === undefined || figure > above) && (from === undefined || figure >= from) && (below === undefined || figure < below);
+function isWithin(figure: number, { above, from, below, to }: Bounds): boolean {
+  return (above === undefined || figure > above) && (from === undefined || figure >= from) && (below === undefined || figure < below) && (to === undefined || figure <= to);
 }
 
 /** `max 5 mV`, `±300 µV`: one end only. */
@@ -121,7 +129,7 @@ function plainEcho(quantity: Quantity): string {
 function impossible(problem: QuantityProblem, text: string, path: string): Complaint | null {
   const { bounds, example, kind } = field(path);
   const meant = text.slice(...problem.span);
-  const isOut = problem.code === 'Q010' && (kind === 'fraction' || !/[1-9]/.test(meant));
+  const isOut = problem.code === 'Q010' && (kind === 'fraction' || kind === 'share' || !/[1-9]/.test(meant));
   if (bounds === undefined || (problem.code !== 'Q019' && !isOut)) return null;
   return { code: 'S110', message: `${meant}: ${bounds.why}`, fix: problem.code === 'Q019' ? (problem.fix ?? example) : example };
 }

@@ -1,28 +1,46 @@
-import { formatQuantity } from '../quantities/format.js';
 import type { Problem } from '../quantities/problem.js';
-import { contradiction } from '../spec/contradiction.js';
-import type { ReferenceSpec, StageSpec } from '../spec/spec.js';
+import type { StageSpec, Topology } from '../spec/spec.js';
 import { supplyContradictions } from '../spec/supply-contradictions.js';
-import { assumptionsOf, gainCautions } from './assumptions.js';
-import type { Circuit } from './circuit.js';
+import { makeDifference, makeFollower, makeInverting, makeNonInverting } from './amplifier-makers.js';
+import { assumptionsOf, bypassCautions, gainCautions } from './assumptions.js';
+import type { Circuit, RatioCorner } from './circuit.js';
 import { contradictionsOf } from './contradictions.js';
-import { difference } from './difference.js';
-import { excitation, type Excitation } from './excitation.js';
-import { fitResistors, gainAgainstResistors, toleranceOf, writtenGain } from './fitted.js';
-import { follower } from './follower.js';
-import { inverting } from './inverting.js';
-import { nonInverting } from './non-inverting.js';
-import { GROUND, referenceAt } from './reference.js';
-import { solvedReference, solveFromOutput } from './solve.js';
-import type { Stage, StageResistors } from './stage.js';
+import type { Excitation } from './excitation.js';
+import { capacitorTolerance } from './filter-response.js';
+import { gainAgainstResistors, toleranceOf } from './fitted.js';
+import { makeHighSideSense } from './high-side-sense.js';
+import { makeIntegrator } from './integrator.js';
+import { makeLowSideSense } from './low-side-sense.js';
+import type { Made, Maker, Settled } from './making.js';
+import { makeMultipleFeedback } from './multiple-feedback-low-pass.js';
+import { makeOscillator } from './relaxation-oscillator.js';
+import { referenceAt, referenceEnds } from './reference.js';
+import { makeSallenKey } from './sallen-key-low-pass.js';
+import { settle } from './settle.js';
+import type { Stage } from './stage.js';
+import { makeSumming } from './summing.js';
 import { surroundingsOf } from './surroundings.js';
-import { currentPeaks, vertices } from './vertices.js';
+import { makeTransimpedance } from './transimpedance.js';
+import { currentPeaks, vertices, type Corners, type Motion } from './vertices.js';
 
 export type StageResult =
   | { readonly ok: true; readonly stage: Stage }
   | { readonly ok: false; readonly problems: readonly Problem[] };
 
-const WITH_RESISTORS = { 'non-inverting': nonInverting, inverting, difference } as const;
+const MAKERS: Readonly<Record<Topology, Maker>> = {
+  follower: makeFollower,
+  'non-inverting': makeNonInverting,
+  inverting: makeInverting,
+  summing: makeSumming,
+  difference: makeDifference,
+  transimpedance: makeTransimpedance,
+  'low-side-sense': makeLowSideSense,
+  'high-side-sense': makeHighSideSense,
+  'sallen-key-low-pass': makeSallenKey,
+  'multiple-feedback-low-pass': makeMultipleFeedback,
+  integrator: makeIntegrator,
+  'relaxation-oscillator': makeOscillator,
+};
 
 /** The circuit a specification implies, or every contradiction in it. Errors are problems, never exceptions. */
 export function buildStage(spec: StageSpec): StageResult {
@@ -43,81 +61,52 @@ function impliedBy(spec: StageSpec): StageResult {
   if (disagreement !== null) return { ok: false, problems: [disagreement] };
   const settled = settle(spec);
   if ('problem' in settled) return { ok: false, problems: [settled.problem] };
-  const circuit = circuitOf(spec, settled);
-  if ('problems' in circuit) return { ok: false, problems: circuit.problems };
-  return { ok: true, stage: assemble(spec, { ...settled, ...circuit }) };
+  const making = MAKERS[spec.topology](spec, settled, surroundingsOf(spec, settled.reference));
+  if (!making.ok) return making;
+  return { ok: true, stage: assemble(spec, settled, making.made) };
 }
 
-interface Settled {
-  readonly gain: number;
-  readonly reference: ReferenceSpec;
-  readonly notes: readonly string[];
-}
-
-/** Gain and reference: as written, or solved from the wanted output. */
-function settle(spec: StageSpec): Settled | { readonly problem: Problem } {
-  const known = spec.topology === 'follower' ? 1 : (spec.gain?.value ?? writtenGain(spec));
-  const reference = spec.reference ?? GROUND;
-  const solvable = spec.signal.output !== undefined && spec.gain === undefined && spec.topology !== 'follower';
-  if (!solvable) return known === null ? { problem: noGain(spec) } : { gain: known, reference, notes: [] };
-  const solution = solveFromOutput(spec, known);
-  if (solution === null || outsideSupply(spec, solution.reference)) return { problem: noSolution(spec, solution?.reference) };
-  const gain = solution.gain;
-  if (spec.topology === 'non-inverting' && gain < 1) return { problem: noSolution(spec, undefined) };
-  const solvedGain = `gain ${formatQuantity(gain, 'V/V', { digits: 5 })} solved from signal.output`;
-  const gainNote = known === null ? [solvedGain] : [];
-  if (spec.reference !== undefined) return { gain, reference, notes: gainNote };
-  const text = formatQuantity(solution.reference, 'V', { digits: 4 });
-  const solved = solvedReference(solution.reference, spec.supply.nominal, text);
-  return { gain, reference: solved, notes: [...gainNote, `reference ${solved.kind === 'ground' ? 'ground' : text} solved from signal.output`] };
-}
-
-function outsideSupply(spec: StageSpec, reference: number): boolean {
-  return spec.reference === undefined && (reference < -1e-9 * spec.supply.nominal || reference > spec.supply.nominal);
-}
-
-function noGain(spec: StageSpec): Problem {
-  return contradiction(spec, {
-    code: 'S208',
-    paths: ['topology'],
-    message: `the gain of the ${spec.topology} stage is not given`,
-    fix: 'write gain: 8, or resistors: {feedback: 70 kΩ, input: 10 kΩ}, or signal.output to have gain and reference solved',
-  });
-}
-
-function noSolution(spec: StageSpec, reference: number | undefined): Problem {
-  const why =
-    reference === undefined ? 'no gain of this topology does it' : `it would need a reference of ${formatQuantity(reference, 'V', { digits: 4 })}, outside the supply`;
-  return contradiction(spec, {
-    code: 'S205',
-    paths: ['signal.output', 'signal.input', 'signal.amplitude', 'signal.differential', 'signal.positive'],
-    message: `no ${spec.topology} stage maps this input onto output ${spec.signal.output?.text ?? ''}: ${why}`,
-    fix: 'write the gain and the reference, or another output range',
-  });
-}
-
-interface Fitted {
-  readonly circuit: Circuit;
-  readonly fitNotes: readonly string[];
-}
-
-function circuitOf(spec: StageSpec, settled: Settled): Fitted | { readonly problems: readonly Problem[] } {
-  const around = surroundingsOf(spec, settled.reference);
-  if (spec.topology === 'follower') return { circuit: follower(around), fitNotes: [] };
-  const fitted = fitResistors(spec, settled.gain);
-  if (!fitted.ok) return { problems: fitted.problems };
-  return { circuit: WITH_RESISTORS[spec.topology](fitted.resistors, around), fitNotes: fitted.notes };
-}
-
-function assemble(spec: StageSpec, made: Settled & Fitted): Stage {
-  const { circuit, reference } = made;
-  const drive = excitation(spec.signal);
+function assemble(spec: StageSpec, settled: Settled, made: Made): Stage {
+  const { reference } = settled;
+  const { circuit, excitation: drive } = made;
   const corners = { circuit, excitation: drive, supply: spec.supply, reference, load: spec.load ?? null };
   const all = vertices(corners);
-  const frequency = spec.signal.frequency?.top ?? null;
-  const temperature = spec.temperature ?? { min: 25, nominal: 25, max: 25 };
   const outputs = all.map((vertex) => vertex.output);
   const pins = all.map((vertex) => vertex.commonMode);
+  const peak = largestPeak(circuit.corners, drive, corners);
+  const signalPeak = Math.max(peak, largestPeak(circuit.signalCorners ?? [], drive, corners));
+  return {
+    ...placeOf(spec),
+    ...electrical(circuit),
+    ...loadOf(spec),
+    vertices: all,
+    peaks: currentPeaks(corners, motionOf(spec, made, 2 * peak * drive.stepShare)),
+    output: { min: Math.min(...outputs), max: Math.max(...outputs) },
+    outputNominal: nominalOutput(circuit, drive, { reference: referenceAt(reference, spec.supply.nominal, 'nominal'), supply: spec.supply.nominal }),
+    commonMode: { min: Math.min(...pins), max: Math.max(...pins) },
+    outputPeak: peak,
+    signalPeak,
+    outputStep: 2 * signalPeak * drive.stepShare,
+    response: made.response,
+    resistorTolerance: toleranceOf(spec),
+    capacitorTolerance: hasCapacitors(circuit) ? capacitorTolerance(spec) : 0,
+    sourceSpread: spec.signal.coupling === 'ac' ? 0 : (spec.source?.resistance.value ?? 0) * (spec.source?.tolerance?.value ?? 0),
+    referenceTolerance: reference.value.nominal === 0 ? 0 : (reference.value.max - reference.value.min) / 2 / reference.value.nominal,
+    referenceResistance: reference.resistance?.value ?? 0,
+    asked: askedOf(spec),
+    cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...made.cautions],
+    assumptions: assumptionsOf(spec, circuit, [...settled.notes, ...made.fitNotes]),
+  };
+}
+
+/** An oscillator, whose network is no linear one, has its timing capacitor. */
+function hasCapacitors({ network }: Circuit): boolean {
+  return network === null || [network.plus, network.minus].some(({ elements }) => elements.some(({ kind }) => kind === 'capacitor'));
+}
+
+/** What stands in the file as it is: name, surroundings, signal. */
+function placeOf(spec: StageSpec) {
+  const temperature = spec.temperature ?? { min: 25, nominal: 25, max: 25 };
   return {
     name: spec.name ?? null,
     topology: spec.topology,
@@ -125,43 +114,57 @@ function assemble(spec: StageSpec, made: Settled & Fitted): Stage {
     supply: { min: spec.supply.min, nominal: spec.supply.nominal, max: spec.supply.max },
     supplyPeak: spec.supplyPeak?.value ?? spec.supply.max,
     temperature: { min: temperature.min, nominal: temperature.nominal, max: temperature.max },
-    gain: circuit.gain,
-    noiseGain: circuit.noiseGain,
-    dcNoiseGain: circuit.dcNoiseGain,
-    resistors: circuit.resistors satisfies StageResistors | null,
-    vertices: all,
-    peaks: currentPeaks(corners, frequency),
-    output: { min: Math.min(...outputs), max: Math.max(...outputs) },
-    outputNominal: nominalOutput(circuit, drive, referenceAt(reference, spec.supply.nominal, 'nominal')),
-    commonMode: { min: Math.min(...pins), max: Math.max(...pins) },
-    outputPeak: largestPeak(circuit, drive),
-    frequency,
-    seriesPositive: circuit.seriesPositive,
-    seriesNegative: circuit.seriesNegative,
-    resistorTolerance: toleranceOf(spec),
-    sourceSpread: spec.signal.coupling === 'ac' ? 0 : (spec.source?.resistance.value ?? 0) * (spec.source?.tolerance?.value ?? 0),
-    load: spec.load === undefined ? null : { resistance: spec.load.resistance?.value ?? null, to: spec.load.to, capacitance: spec.load.capacitance?.value ?? 0 },
-    loadConductance: spec.load?.resistance === undefined ? 0 : 1 / spec.load.resistance.value,
-    networkConductance: circuit.networkConductance,
-    resistorRejection: circuit.resistorRejection,
-    asked: { limits: spec.limits, wishes: spec.wishes, margins: spec.margins, avoid: spec.avoid },
-    referenceTolerance: reference.value.nominal === 0 ? 0 : (reference.value.max - reference.value.min) / 2 / reference.value.nominal,
-    referenceResistance: reference.resistance?.value ?? 0,
-    cautions: gainCautions(spec, circuit),
-    assumptions: assumptionsOf(spec, circuit, [...made.notes, ...made.fitNotes]),
+    frequency: spec.signal.frequency?.top ?? null,
+    shape: spec.signal.shape,
+    edge: spec.signal.edge?.value ?? null,
+    observation: spec.signal.observation?.value ?? null,
   };
 }
 
-function nominalOutput(circuit: Circuit, drive: Excitation, reference: number): { min: number; max: number } {
-  const outputs = drive.points.map((point) => circuit.nominal.output(point, reference));
+function electrical(circuit: Circuit) {
+  const { gain, gainUnit, noiseGain, dcNoiseGain, resistors, seriesPositive, seriesNegative, networkConductance, resistorRejection, network } = circuit;
+  return { gain, gainUnit, noiseGain, dcNoiseGain, resistors, seriesPositive, seriesNegative, networkConductance, resistorRejection, network };
+}
+
+function loadOf({ load }: StageSpec): Pick<Stage, 'load' | 'loadConductance'> {
+  if (load === undefined) return { load: null, loadConductance: 0 };
+  const isolation = load.isolation?.value ?? 0;
+  const resistance = load.resistance?.value ?? null;
+  return {
+    load: { resistance, to: load.to, capacitance: load.capacitance?.value ?? 0, isolation },
+    loadConductance: resistance === null ? 0 : 1 / (resistance + isolation),
+  };
+}
+
+function motionOf(spec: StageSpec, { response, excitation: drive }: Made, step: number): Motion {
+  const { shape, edge, frequency } = spec.signal;
+  // An oscillator's edges are its amplifier slewing from one level to the other.
+  if (response.kind === 'oscillator') return { kind: 'edge', step, edge: response.edge, form: 'ramp', start: 1 };
+  if (shape !== 'step' && shape !== 'pulse') return { kind: 'sine', frequency: frequency?.top ?? null };
+  // A step may start anywhere between the lowest level and where its own size still ends at the highest.
+  return { kind: 'edge', step, edge: edge?.value ?? null, form: 'singlePole', start: 2 * drive.stepShare - 1 };
+}
+
+function askedOf({ limits, wishes, margins, avoid, following, converter, battery }: StageSpec): Stage['asked'] {
+  return { limits, wishes, margins, avoid, following: following ?? null, converter: converter ?? null, battery: battery ?? null };
+}
+
+function nominalOutput(circuit: Circuit, drive: Excitation, at: { reference: number; supply: number }): { min: number; max: number } {
+  const outputs = drive.points.map((point) => circuit.nominal.output(point, at.reference, at.supply));
   return { min: Math.min(...outputs), max: Math.max(...outputs) };
 }
 
-/** Half the output span at one corner; the corner with the highest gain has the largest. The reference does not change it. */
-function largestPeak(circuit: Circuit, drive: Excitation): number {
-  const peaks = circuit.corners.map((corner) => {
-    const outputs = drive.points.map((point) => corner.output(point, 0));
-    return (Math.max(...outputs) - Math.min(...outputs)) / 2;
-  });
-  return Math.max(...peaks);
+/**
+ * Half the output span at one corner; the corner with the highest gain has the largest. The reference moves all points alike, save
+ * where the signal is measured from it (integrator).
+ */
+function largestPeak(ratios: readonly RatioCorner[], drive: Excitation, { supply, reference }: Pick<Corners, 'supply' | 'reference'>): number {
+  const references = drive.steps.length > 0 ? [0] : [supply.min, supply.max].flatMap((volts) => referenceEnds(reference, volts));
+  const peaks = references.flatMap((at) =>
+    ratios.map((corner) => {
+      const outputs = drive.points.map((point) => corner.output(point, at, supply.max));
+      return (Math.max(...outputs) - Math.min(...outputs)) / 2;
+    }),
+  );
+  return Math.max(0, ...peaks);
 }

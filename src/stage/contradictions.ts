@@ -2,7 +2,8 @@ import { formatQuantity } from '../quantities/format.js';
 import type { Problem } from '../quantities/problem.js';
 import { contradiction } from '../spec/contradiction.js';
 import { supplyContradictions } from '../spec/supply-contradictions.js';
-import type { StageSpec } from '../spec/spec.js';
+import type { StageSpec, Topology } from '../spec/spec.js';
+import { gainForm } from './gain-form.js';
 import type { Stage } from './stage.js';
 import { wayInside, type Rebuild } from './way-inside.js';
 
@@ -38,14 +39,17 @@ function beyondSupply(spec: StageSpec, stage: Stage, fix: () => string): Problem
   const end = below ? 'below ground' : `above the ${top} supply`;
   return contradiction(spec, {
     code: below && inputBelowGround(spec) ? 'S204' : 'S201',
-    paths: ['signal.output', 'signal.input', 'signal.amplitude', 'signal.differential', 'signal.positive', 'gain', 'reference', 'supply'],
+    paths: ['signal.output', ...DRIVES, 'gain', 'filter', 'reference', 'supply'],
     message: `the output is asked to swing ${asked}, ${end}: no amplifier on this supply does that`,
     fix: fix(),
   });
 }
 
+/** Where the stage file says what drives the stage. */
+const DRIVES = ['signal.input', 'signal.amplitude', 'signal.differential', 'signal.positive', 'legs', 'photodiode', 'photodiode.current', 'shunt', 'shunt.current', 'integrator'];
+
 function inputBelowGround(spec: StageSpec): boolean {
-  const least = spec.signal.input?.min ?? spec.signal.positive?.min ?? 0;
+  const least = spec.signal.input?.min ?? spec.signal.positive?.min ?? spec.shunt?.current.min ?? 0;
   return least < 0 && (spec.reference === undefined || spec.reference.kind === 'ground');
 }
 
@@ -53,21 +57,54 @@ function inputBelowGround(spec: StageSpec): boolean {
 function outputDisagrees(spec: StageSpec, stage: Stage): Problem | null {
   const wanted = spec.signal.output;
   if (wanted === undefined) return null;
-  const { min, max } = stage.outputNominal;
-  // Series resistance of source or reference, and the choice of E96 values, move the gain: that is not the user's contradiction.
-  const written = spec.gain?.value ?? bareGain(stage) ?? Math.abs(stage.gain);
-  const slack = (wanted.max - wanted.min) * (0.01 + 2 * Math.abs(Math.abs(stage.gain) / written - 1)) + SLACK;
+  const { min, max } = passed(stage);
+  const slack = (wanted.max - wanted.min) * (0.01 + leeway(spec, stage)) + SLACK;
   if (Math.abs(min - wanted.min) <= slack && Math.abs(max - wanted.max) <= slack) return null;
   return contradiction(spec, {
     code: 'S202',
-    paths: ['signal.output', 'gain', 'resistors', 'signal.input', 'reference'],
-    message: `signal.output says ${wanted.text}, but gain, input and reference give ${volts(min)}..${volts(max)}`,
-    fix: `write output: ${volts(min)}..${volts(max)}, or leave out the gain and the reference to have them solved`,
+    paths: ['signal.output', 'gain', 'resistors', 'filter', ...DRIVES, 'reference'],
+    message: `signal.output says ${wanted.text}, but ${SAYS[stage.topology] ?? 'gain, input and reference'} give ${volts(min)}..${volts(max)}`,
+    fix: `write output: ${volts(min)}..${volts(max)}, or leave out ${SOLVED[stage.topology] ?? 'the gain and the reference to have them solved'}`,
   });
 }
 
+/** What the output follows from, where that is not gain, input and reference. */
+const SAYS: Readonly<Partial<Record<Topology, string>>> = {
+  follower: 'the input and the stage, which passes it on,',
+  summing: 'legs, feedback resistor and reference',
+  transimpedance: 'photodiode, feedback resistor and reference',
+  'low-side-sense': 'gain, shunt and reference',
+  'high-side-sense': 'gain, shunt and reference',
+  integrator: 'components, window, input and reference',
+};
+
+/** What can be left out to have the output as written, where that is not gain and reference. */
+const SOLVED: Readonly<Partial<Record<Topology, string>>> = {
+  follower: 'the output: a follower puts out its input',
+  summing: 'the output: the legs say it',
+  transimpedance: 'the feedback resistor and the reference to have them solved',
+  integrator: 'the output: the components say it',
+};
+
+/** The output without what a filter's own peak or overshoot adds to the swing: that is what signal.output means. */
+function passed({ outputNominal: { min, max }, response }: Stage): Stage['outputNominal'] {
+  if (response.kind !== 'low-pass') return { min, max };
+  const [middle, half] = [(min + max) / 2, (max - min) / 2 / response.growth];
+  return { min: middle - half, max: middle + half };
+}
+
+/** E96 values lie within this of what was solved. */
+const ROUNDED = 0.013;
+
+/** Series resistance of source or reference, and the choice of preferred values, move the gain: that is not the user's contradiction. Fraction of the span. */
+function leeway(spec: StageSpec, stage: Stage): number {
+  if (stage.topology === 'transimpedance') return spec.resistors?.feedback === undefined ? ROUNDED : 0;
+  const written = spec.gain?.value ?? bareGain(stage);
+  return written === null ? 0 : 2 * Math.abs(Math.abs(stage.gain) / written - 1);
+}
+
 function bareGain(stage: Stage): number | null {
-  if (stage.resistors === null) return null;
+  if (stage.resistors === null || gainForm(stage.topology) === null) return null;
   const ratio = stage.resistors.feedback / stage.resistors.input;
-  return stage.topology === 'non-inverting' ? 1 + ratio : ratio;
+  return gainForm(stage.topology) === 'non-inverting' ? 1 + ratio : ratio;
 }

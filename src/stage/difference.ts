@@ -1,9 +1,11 @@
 import { inputOf, parallel, plusOne, ratioSpan, type Circuit, type RatioCorner, type Surroundings } from './circuit.js';
-import type { StageResistors } from './stage.js';
+import { feedbackLeg, pinOf, referenceLeg, signalLeg } from './networks.js';
+import type { Span, StageResistors } from './stage.js';
 
 /**
  * Four-resistor difference stage: feedback R2, input R1, positiveInput R3, toReference R4; the two ratios are independent corners.
- * Common mode at the pins (V2 R4 + Vref R3)/(R3 + R4) (method.md 1). Source resistance adds to R1 and R3, that of the reference to R4.
+ * Common mode at the pins (V2 R4 + Vref R3)/(R3 + R4). Source resistance adds to R1 and R3, that of the reference to R4; a bypass
+ * takes it out of the + leg at signal frequencies.
  */
 export function difference(resistors: StageResistors, around: Surroundings): Circuit {
   const { feedback, input, tolerance } = resistors;
@@ -11,10 +13,8 @@ export function difference(resistors: StageResistors, around: Surroundings): Cir
   const toReference = resistors.toReference ?? feedback;
   const source = { series: around.sourceResistance, seriesTolerance: around.sourceTolerance };
   const lower = ratioSpan({ value: feedback, tolerance }, { value: input, tolerance, ...source });
-  const upper = ratioSpan(
-    { value: toReference, tolerance, exact: around.referenceResistance },
-    { value: positiveInput, tolerance, ...source },
-  );
+  const upperThrough = (exact: number) => ratioSpan({ value: toReference, tolerance, exact }, { value: positiveInput, tolerance, ...source });
+  const upper = upperThrough(around.referenceResistance);
   const corner = (rho: number, k: number): RatioCorner => {
     const pins = (positive: number, reference: number): number => (positive * k + reference) / (1 + k);
     return {
@@ -24,19 +24,26 @@ export function difference(resistors: StageResistors, around: Surroundings): Cir
       commonMode: (point, reference) => pins(inputOf(point, 'positive'), reference),
     };
   };
-  const ends = [lower.min, lower.max].flatMap((rho) => [corner(rho, upper.min), corner(rho, upper.max)]);
+  const endsOf = (k: Span): RatioCorner[] => [lower.min, lower.max].flatMap((rho) => [corner(rho, k.min), corner(rho, k.max)]);
+  const isBypassed = around.signalResistance < around.referenceResistance;
   return {
     gain: lower.nominal,
+    gainUnit: 'V/V',
     noiseGain: plusOne(lower),
     dcNoiseGain: plusOne(lower),
     resistors: { ...resistors, positiveInput, toReference },
     nominal: corner(lower.nominal, upper.nominal),
-    corners: ends,
+    corners: endsOf(upper),
+    ...(isBypassed ? { signalCorners: endsOf(upperThrough(around.signalResistance)) } : {}),
     networkConductance: 1 / feedback,
     networkEnd: (commonMode) => commonMode,
     seriesPositive: parallel(positiveInput + around.sourceResistance, toReference + around.referenceResistance),
     seriesNegative: parallel(feedback, input + around.sourceResistance),
     resistorRejection: worstRejection(lower, upper),
+    network: {
+      plus: pinOf([...signalLeg('positive input', positiveInput, around), ...referenceLeg('to reference', toReference, around)]),
+      minus: pinOf([...feedbackLeg(feedback, around), ...signalLeg('input', input, around)]),
+    },
     notes: [],
   };
 }

@@ -5,43 +5,52 @@ import type { InputPoint } from './stage.js';
 export interface Excitation {
   readonly points: readonly InputPoint[];
   readonly centre: InputPoint;
-  /** From the centre to the end of each independent quantity, all others at their centre. */
+  /** From the centre to the end of each independent quantity, all others at their centre; none: the points say it all. */
   readonly steps: readonly InputPoint[];
+  /** Peak-to-peak size of the signal as a share of the distance between its extreme points: 1 unless a free duty doubles that. */
+  readonly stepShare: number;
 }
 
-/** Turns the signal of a stage into its extreme input points. AC-coupled inputs are deviations from the bias. */
-export function excitation(signal: SignalSpec): Excitation {
-  if (signal.amplitude !== undefined && signal.coupling === 'ac') {
-    const peak = signal.amplitude.value;
-    return { points: [{ input: -peak }, { input: peak }], centre: { input: 0 }, steps: [{ input: peak }] };
-  }
-  if (signal.input !== undefined) return single(signal.input);
-  if (signal.positive !== undefined && signal.negative !== undefined) return independent(signal.positive, signal.negative);
+/**
+ * Turns the signal of a stage into its extreme input points. AC-coupled inputs are deviations from the bias; a pulse stands
+ * (1−D)·Vpp above it and D·Vpp below, each side up to Vpp when its duty D is free, and a lone step as well.
+ */
+export function excitation(signal: SignalSpec, name = 'input'): Excitation {
+  if (signal.amplitude !== undefined && signal.coupling === 'ac') return alternating(signal, signal.amplitude.value);
+  if (signal.input !== undefined) return single(signal.input, name);
+  if (signal.positive !== undefined && signal.negative !== undefined) return pairs({ positive: signal.positive, negative: signal.negative });
   if (signal.differential !== undefined && signal.commonMode !== undefined) return coupled(signal.differential, signal.commonMode);
   throw new RangeError('a stage without a signal reached the circuit');
 }
 
-const ends = (swing: Swing): number[] => (swing.min === swing.max ? [swing.min] : [swing.min, swing.max]);
-const middle = (swing: Swing): number => (swing.min + swing.max) / 2;
-const half = (swing: Swing): number => (swing.max - swing.min) / 2;
-
-function single(swing: Swing): Excitation {
-  return {
-    points: ends(swing).map((input) => ({ input })),
-    centre: { input: middle(swing) },
-    steps: [{ input: half(swing) }],
-  };
+function alternating({ shape, duty }: SignalSpec, peak: number): Excitation {
+  const whole = 2 * peak;
+  if (shape === 'sine' || shape === 'band-limited') return about({ low: -peak, high: peak, share: 1 });
+  if (shape === 'pulse' && duty !== undefined) return about({ low: -duty.value * whole, high: (1 - duty.value) * whole, share: 1 });
+  return about({ low: -whole, high: whole, share: 0.5 });
 }
 
-function independent(positive: Swing, negative: Swing): Excitation {
-  return {
-    points: ends(positive).flatMap((p) => ends(negative).map((n) => ({ positive: p, negative: n }))),
-    centre: { positive: middle(positive), negative: middle(negative) },
-    steps: [
-      { positive: half(positive), negative: 0 },
-      { positive: 0, negative: half(negative) },
-    ],
-  };
+function about({ low, high, share }: { low: number; high: number; share: number }): Excitation {
+  const middleOf = (low + high) / 2;
+  return { points: [{ input: low }, { input: high }], centre: { input: middleOf }, steps: [{ input: (high - low) / 2 }], stepShare: share };
+}
+
+/** Two independent quantities, every combination of their ends. */
+export function pairs(swings: Readonly<Record<string, Pick<Swing, 'min' | 'max'>>>): Excitation {
+  const names = Object.keys(swings);
+  const each = (pick: (swing: Pick<Swing, 'min' | 'max'>) => number): InputPoint =>
+    Object.fromEntries(Object.entries(swings).map(([name, swing]) => [name, pick(swing)]));
+  const points = Object.entries(swings).reduce<InputPoint[]>((all, [name, swing]) => all.flatMap((point) => ends(swing).map((value) => ({ ...point, [name]: value }))), [{}]);
+  const still = each(() => 0);
+  return { points, centre: each(middle), steps: names.map((name) => ({ ...still, [name]: each(half)[name] ?? 0 })), stepShare: 1 };
+}
+
+const ends = (swing: Pick<Swing, 'min' | 'max'>): number[] => (swing.min === swing.max ? [swing.min] : [swing.min, swing.max]);
+const middle = (swing: Pick<Swing, 'min' | 'max'>): number => (swing.min + swing.max) / 2;
+const half = (swing: Pick<Swing, 'min' | 'max'>): number => (swing.max - swing.min) / 2;
+
+function single(swing: Swing, name: string): Excitation {
+  return pairs({ [name]: swing });
 }
 
 function coupled(differential: Swing, commonMode: Swing): Excitation {
@@ -50,6 +59,7 @@ function coupled(differential: Swing, commonMode: Swing): Excitation {
     points: ends(differential).flatMap((d) => ends(commonMode).map((c) => legs(d, c))),
     centre: legs(middle(differential), middle(commonMode)),
     steps: [legs(half(differential), 0), legs(0, half(commonMode))],
+    stepShare: 1,
   };
 }
 

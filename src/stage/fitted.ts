@@ -2,6 +2,7 @@ import type { Problem } from '../quantities/problem.js';
 import { formatQuantity } from '../quantities/format.js';
 import { contradiction } from '../spec/contradiction.js';
 import type { StageSpec } from '../spec/spec.js';
+import { gainForm } from './gain-form.js';
 import { choosePair, type Pair } from './resistors.js';
 import type { StageResistors } from './stage.js';
 
@@ -15,7 +16,7 @@ const DEFAULT_TOLERANCE = 0.01;
 /** Gain magnitude a feedback and an input resistor give, before series resistances. */
 function gainOf(spec: StageSpec, pair: Pair): number {
   const ratio = pair.feedback / pair.input;
-  return spec.topology === 'non-inverting' ? 1 + ratio : ratio;
+  return gainForm(spec.topology) === 'non-inverting' ? 1 + ratio : ratio;
 }
 
 /** Gain of the resistors as written; null unless both are. */
@@ -32,11 +33,11 @@ export function toleranceOf(spec: StageSpec): number {
 export function fitResistors(spec: StageSpec, gain: number): Fitted {
   const written = spec.resistors;
   const tolerance = toleranceOf(spec);
-  const ratio = spec.topology === 'non-inverting' ? gain - 1 : gain;
+  const ratio = gainForm(spec.topology) === 'non-inverting' ? gain - 1 : gain;
   const pair = pairOf(spec, ratio);
   if (pair === null) return { ok: false, problems: [noPair(spec, gain)] };
   const notes = pairNotes(spec, pair);
-  if (spec.topology !== 'difference') return { ok: true, resistors: { ...pair, tolerance }, notes };
+  if (gainForm(spec.topology) !== 'difference') return { ok: true, resistors: { ...pair, tolerance }, notes };
   const toReference = written?.toReference?.value ?? pair.feedback;
   // After a change of gain the kept resistor to the reference rules its own leg.
   const positiveInput = written?.positiveInput?.value ?? (spec.keepFeedback === true ? toReference / ratio : pair.input);
@@ -49,7 +50,7 @@ function pairOf(spec: StageSpec, ratio: number): Pair | null {
   if (feedback !== undefined && input !== undefined) return { feedback, input };
   if (feedback !== undefined) return { feedback, input: feedback / ratio };
   if (input !== undefined) return { feedback: input * ratio, input };
-  const sumsUp = spec.topology === 'non-inverting';
+  const sumsUp = gainForm(spec.topology) === 'non-inverting';
   return choosePair({ ratio, path: (rf, rg) => (sumsUp ? rf + rg : rf) });
 }
 

@@ -1,6 +1,7 @@
+import { biasedPin, FOLLOWING_PIN, sourcePin } from './networks.js';
 import { inputOf, UNITY, type Circuit, type RatioCorner, type Surroundings } from './circuit.js';
 
-/** Unity-gain follower: output and both inputs move with the signal (method.md 1). */
+/** Unity-gain follower: output and both inputs move with the signal. */
 export function follower(around: Surroundings): Circuit {
   const level = around.ac
     ? (input: number, reference: number): number => reference + input
@@ -12,6 +13,7 @@ export function follower(around: Surroundings): Circuit {
   };
   return {
     gain: 1,
+    gainUnit: 'V/V',
     noiseGain: UNITY,
     dcNoiseGain: UNITY,
     resistors: null,
@@ -22,6 +24,7 @@ export function follower(around: Surroundings): Circuit {
     seriesPositive: around.ac ? around.referenceResistance : around.sourceResistance,
     seriesNegative: 0,
     resistorRejection: null,
+    network: { plus: around.ac ? biasedPin(around) : sourcePin(around), minus: FOLLOWING_PIN },
     notes: [],
   };
 }

@@ -1,7 +1,8 @@
 import { inputOf, parallel, plusOne, ratioSpan, UNITY, type Circuit, type RatioCorner, type Surroundings } from './circuit.js';
+import { feedbackLeg, pinOf, referencePin, signalLeg } from './networks.js';
 import type { StageResistors } from './stage.js';
 
-/** Inverting stage, + input at the reference. DC-coupled it idles at Vref(1+rho), AC-coupled at Vref (method.md 1, traps). */
+/** Inverting stage, + input at the reference. DC-coupled it idles at Vref(1+rho), AC-coupled at Vref. */
 export function inverting(resistors: StageResistors, around: Surroundings): Circuit {
   const { feedback, input, tolerance } = resistors;
   const source = { series: around.sourceResistance, seriesTolerance: around.sourceTolerance };
@@ -17,6 +18,7 @@ export function inverting(resistors: StageResistors, around: Surroundings): Circ
   });
   return {
     gain: -ratio.nominal,
+    gainUnit: 'V/V',
     noiseGain,
     dcNoiseGain: around.ac ? UNITY : noiseGain,
     resistors,
@@ -27,6 +29,7 @@ export function inverting(resistors: StageResistors, around: Surroundings): Circ
     seriesPositive: around.referenceResistance,
     seriesNegative: around.ac ? feedback : parallel(feedback, input + around.sourceResistance),
     resistorRejection: null,
+    network: { plus: referencePin(around), minus: pinOf([...feedbackLeg(feedback, around), ...signalLeg('input', input, around)]) },
     notes: [],
   };
 }

@@ -1,4 +1,5 @@
 import { E96 } from '../quantities/e-series.js';
+import { firstAtLeast } from './preferred.js';
 
 /** What a chosen pair must give: the ratio of feedback to input resistor, and what counts as the feedback path. */
 export interface PairWish {
@@ -41,11 +42,12 @@ export function choosePair(wish: PairWish): Pair | null {
   return best === null ? null : { feedback: best.feedback, input: best.input };
 }
 
-/** For every feedback value the input values on both sides of the exact one: no other can be nearer. */
+/** For every feedback value the input values on both sides of the exact one: no other can be nearer. Paths that no near value brings inside are left out. */
 function* candidates(wish: PairWish): Generator<Pair> {
   for (const feedback of VALUES) {
     const exact = feedback / wish.ratio;
-    const above = VALUES.findIndex((value) => value >= exact * (1 - SAME));
+    if (wish.path(feedback, exact * (1 + 2 * REACHED)) < LEAST_PATH || wish.path(feedback, exact * (1 - 2 * REACHED)) > MOST_PATH) continue;
+    const above = firstAtLeast(VALUES, exact);
     for (const at of [above - 1, above]) {
       const input = VALUES[at];
       if (input !== undefined) yield { feedback, input };

@@ -1,6 +1,12 @@
-import type { Hazard, LimitsSpec, MarginsSpec, Topology, WishesSpec } from '../spec/spec.js';
+import type { PinNetwork } from '../formulas/pin-network.js';
+import type { BatterySpec, ConverterSpec, FollowingSpec, Hazard, LimitsSpec, MarginsSpec, SignalShape, Topology, WishesSpec } from '../spec/spec.js';
+import type { GainUnit } from './circuit.js';
+import type { StageResponse } from './response.js';
 
-/** Values at the ends of the stage's inputs at one corner, volts: `input`, or `positive` and `negative`. */
+/**
+ * Values at the ends of the stage's inputs at one corner: `input`, `positive` and `negative`, the name of a leg, `bus` in V; `current`
+ * in A; `level` 0 or 1 of an oscillator's output; `elapsed` in s since the reset of an integrator.
+ */
 export type InputPoint = Readonly<Record<string, number>>;
 
 /** Ends and middle of something that varies. */
@@ -38,7 +44,7 @@ export interface CurrentPeak {
   readonly reference: number;
   /** At the centre of the signal. */
   readonly centre: number;
-  /** Amplitude about it: phasor sum of the resistive and the capacitive part (method.md 6, HDR-08). */
+  /** Amplitude about it: phasor sum of the resistive and the capacitive part (M6). */
   readonly swing: number;
 }
 
@@ -48,6 +54,14 @@ export interface StageLoad {
   readonly to: 'ground' | 'supply' | 'reference';
   /** Farad. */
   readonly capacitance: number;
+  /** Ohm in series with the load, outside the loop; 0 without. */
+  readonly isolation: number;
+}
+
+/** The passive network at each amplifier input, nominal values; AC grounds are ground. */
+export interface AmplifierNetwork {
+  readonly plus: PinNetwork;
+  readonly minus: PinNetwork;
 }
 
 /** The circuit the specification implies: all a demand may ask about. Never knows a part. SI units. */
@@ -58,8 +72,9 @@ export interface Stage {
   readonly supply: Span;
   readonly supplyPeak: number;
   readonly temperature: Span;
-  /** Signed signal gain at nominal resistors, V/V. */
+  /** Signed signal gain at nominal components, in `gainUnit`; 0 with no gain. */
   readonly gain: number;
+  readonly gainUnit: GainUnit;
   /** Noise gain that sets bandwidth and stability, V/V. */
   readonly noiseGain: Span;
   /** Noise gain at DC: what multiplies an offset. 1 when a capacitor blocks DC. */
@@ -73,12 +88,27 @@ export interface Stage {
   readonly commonMode: { readonly min: number; readonly max: number };
   /** Largest peak of the output about its middle at one corner, V. */
   readonly outputPeak: number;
+  /** The same at signal frequencies, V: larger where a bypass takes the resistance of the reference out of the gain, never smaller. */
+  readonly signalPeak: number;
+  /** Largest step of the signal at the output, V: its peak-to-peak size. */
+  readonly outputStep: number;
+  readonly shape: SignalShape;
+  /** Step and pulse: 10 % to 90 % time wanted at the output, s; null when not asked. */
+  readonly edge: number | null;
+  /** Null for the oscillator, which is no linear amplifier. */
+  readonly network: AmplifierNetwork | null;
+  /** What the stage does over frequency beyond a constant gain. */
+  readonly response: StageResponse;
+  /** s; null: not said (0.1 Hz is then the lowest noise frequency). */
+  readonly observation: number | null;
   /** Top of the signal band, Hz; null when not given. */
   readonly frequency: number | null;
   /** Resistance in series with the + and the - input as their bias currents see it, ohm, nominal. */
   readonly seriesPositive: number;
   readonly seriesNegative: number;
   readonly resistorTolerance: number;
+  /** Fraction, of the capacitors around the amplifier; 0 without any. */
+  readonly capacitorTolerance: number;
   /** How much the source resistance in series with an input may itself be off, Ω; listed beside the DC error, not charged. */
   readonly sourceSpread: number;
   readonly load: StageLoad | null;
@@ -103,4 +133,7 @@ export interface Asked {
   readonly wishes: WishesSpec;
   readonly margins: MarginsSpec;
   readonly avoid: readonly Hazard[];
+  readonly following: FollowingSpec | null;
+  readonly converter: ConverterSpec | null;
+  readonly battery: BatterySpec | null;
 }

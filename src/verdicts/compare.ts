@@ -11,6 +11,7 @@ export function meets(required: number, offered: number, sense: Sense): boolean 
 
 export function equal(a: number, b: number): boolean {
   if (a === b) return true;
+  if (!Number.isFinite(a) || !Number.isFinite(b)) return false;
   const difference = Math.abs(a - b);
   return difference <= ABSOLUTE || difference <= RELATIVE * Math.max(Math.abs(a), Math.abs(b));
 }

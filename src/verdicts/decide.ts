@@ -1,6 +1,7 @@
 import { weakest, type Basis } from '../parts/basis.js';
 import { equal, marginOf, meets, spareOf } from './compare.js';
-import type { Finding, SingleFinding, WordFinding } from './finding.js';
+import type { Finding, Remedy, SingleFinding, WordFinding } from './finding.js';
+import { remarksOf, remediesOf } from './remarks.js';
 import type { Outcome, Reason, Verdict } from './verdict.js';
 
 /** What decide needs to know of a check to word its verdict. */
@@ -24,7 +25,8 @@ export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: F
   const [shown, other] = outcome === 'fail' ? [optimistic, pessimistic] : [pessimistic, optimistic];
   if (shown.kind === 'words') return wordVerdict(check, outcome, shown);
   const basis = basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
-  return verdictOf(check, { outcome, shown: shownOf(shown, outcome), whole: shown, other, basis });
+  const remedies = outcome === 'pass' ? [] : remediesOf(pessimistic);
+  return verdictOf(check, { outcome, shown: shownOf(shown, outcome), whole: shown, other, basis, remedies });
 }
 
 /** How one reading stands by itself. */
@@ -81,9 +83,10 @@ interface Decided {
   readonly whole: Finding;
   readonly other: Finding;
   readonly basis: Basis;
+  readonly remedies: readonly Remedy[];
 }
 
-function verdictOf(check: CheckIdentity, { outcome, shown, whole, other, basis }: Decided): Verdict {
+function verdictOf(check: CheckIdentity, { outcome, shown, whole, other, basis, remedies }: Decided): Verdict {
   const offered = shown.kind === 'numbers' ? finite(shown.offered) : null;
   const compared = offered !== null && typeof shown.required === 'number' && shown.sense !== null;
   return {
@@ -111,6 +114,7 @@ function verdictOf(check: CheckIdentity, { outcome, shown, whole, other, basis }
     cautions: shown.cautions ?? [],
     slot: shown.kind === 'numbers' ? (shown.slot ?? null) : null,
     how: shown.kind === 'numbers' ? (shown.how ?? null) : null,
+    ...remarksOf(shown, remedies),
   };
 }
 

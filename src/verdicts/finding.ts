@@ -39,7 +39,30 @@ export interface Beyond {
   readonly supply: number;
 }
 
-interface Common {
+/** What would turn the check, recomputed with it on the worst reading: a field of the stage file and the value to write. */
+export interface Remedy {
+  /** `load.isolation`. */
+  readonly path: string;
+  /** As it is typed: `47 Ω`. */
+  readonly text: string;
+  /** Offered value of the check with it, in the unit of the finding. */
+  readonly offered: number;
+  /** What it costs, in words. */
+  readonly cost: string;
+}
+
+/** What stands beside the numbers of a finding, as it applies. */
+export interface Remarks {
+  /** Terms add as squares (independent noise); otherwise as they are. */
+  readonly adds?: 'squares';
+  /** SI unit of the terms where it is not that of the finding (signal to noise against volts). */
+  readonly termUnit?: string;
+  /** The same result as engineers also say it, one sentence each. */
+  readonly notes?: readonly string[];
+  readonly remedies?: readonly Remedy[];
+}
+
+interface Common extends Remarks {
   readonly unit: string;
   readonly sense: Sense;
   readonly required: number;
@@ -62,7 +85,7 @@ export interface NumberFinding extends Common {
   readonly borrowed?: number;
 }
 
-/** Only a bound is known: the part offers at least this much (of something that must be small). */
+/** Only a bound is known: the part offers at least this much of something that must be small, at most this much of something that must be large. */
 export interface BoundFinding extends Common {
   readonly kind: 'bound';
   readonly known: number;

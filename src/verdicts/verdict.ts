@@ -1,5 +1,5 @@
 import type { Basis } from '../parts/basis.js';
-import type { Cause, Missing, Sense, Term, TurningPoint } from './finding.js';
+import type { Cause, Missing, Remarks, Sense, Term, TurningPoint } from './finding.js';
 
 export type Outcome = 'pass' | 'fail' | 'unknown';
 
@@ -10,7 +10,7 @@ export type Reason = Cause | 'typical-only' | 'estimated' | 'assumed' | 'borrowe
  * One check of one part, decided on both readings. Numbers in SI units. `required` and `offered` show the pessimistic reading
  * for pass and unknown, the optimistic one for fail; `offeredBest` the other.
  */
-export interface Verdict {
+export interface Verdict extends Remarks {
   readonly check: string;
   readonly title: string;
   readonly outcome: Outcome;

@@ -3,6 +3,7 @@ import type { Figure } from '../../src/parts/figures.js';
 import type { StageSpec } from '../../src/spec/spec.js';
 import { FULL, max, min, partOf, replacing, typ } from '../support/parts.js';
 import { judgingBy } from '../support/judged.js';
+import { photodiodeStage } from '../support/shaped-stages.js';
 import { between, dc, demandsOf, exactly, fourResistors, legs, midSupply, resistors, source, stageSpec, swing, value } from '../support/stages.js';
 
 const judge = judgingBy('dc-error');
@@ -157,5 +158,22 @@ describe('figures of other checks', () => {
     expect(all).toMatchObject({ outcome: 'pass' });
     expect(judge(within(0.2), replacing('slewRate')).offered).toBe(all.offered);
     expect(judge(within(0.2), replacing('outputCurrent')).offered).toBe(all.offered);
+  });
+});
+
+describe('currents of stages whose network is one resistor', () => {
+  it('of a transimpedance stage flow through its feedback resistor: 1 pA at 25 °C, 64 times at 85 °C, through 100 MΩ is 6.4 mV (DC-08)', () => {
+    const spec = { ...photodiodeStage({ amperes: 10e-9, farad: 10e-12, ohms: 100e6 }), temperature: between(25, 85), limits: { dcError: value(10e-3) } };
+    const verdict = judge(spec, [max('biasCurrent', 1e-12, { temperature: 25 }), max('offsetCurrent', 0, { temperature: 25 })], { identity: { inputType: 'fet' } });
+    expect(verdict.terms.find(({ name }) => name === 'bias current')!.value).toBeCloseTo(6.4e-3, 9);
+  });
+
+  it('of an integrator with a bleed resistor flow through that one beside the input resistor', () => {
+    const spec = stageSpec('integrator', dc(2.4, 2.6, 1e3), {
+      integrator: { resistance: value(1e5), capacitance: value(10e-9) }, resistors: { feedback: value(1e6), tolerance: value(0) }, reference: midSupply(), limits: { dcError: value(1) },
+    });
+    const demand = demandsOf(spec)['dc-error']!;
+    expect(demand.negative).toBeCloseTo((1e5 * 1e6) / 1.1e6, 3);
+    expect(demand.noiseGain).toBeCloseTo(11, 9);
   });
 });

@@ -167,6 +167,7 @@ describe('guided entry, recorded on a pseudo-terminal', () => {
       supply: 5 V ± 5 %
       gain: 8
       resistors:
+      capacitors:
       signal:
         input: 40 mV..520 mV
         coupling: dc

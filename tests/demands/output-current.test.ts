@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import type { StageSpec } from '../../src/spec/spec.js';
+import { BUTTERWORTH, filterStage, step } from '../support/shaped-stages.js';
 import { between, dc, demandsOf, load, midSupply, resistors, stageSpec, ac } from '../support/stages.js';
 
 describe('peak output current', () => {
@@ -30,7 +32,14 @@ describe('peak output current', () => {
 
   it('says when the capacitance is left out for want of a frequency', () => {
     expect(demandsOf(stageSpec('follower', dc(1, 4), { load: load(1e3, 'ground', 1e-9) }))['output-current'].because).toBe(
-      '4 mA out of the output at the peak, feedback network included; no frequency, so the load capacitance is left out',
+      '4 mA out of the output at the peak, feedback network included; neither frequency nor edge, so the load capacitance is left out',
     );
+  });
+
+  it('says whether what C1 of a Sallen-Key filter takes is counted', () => {
+    const because = (signal: StageSpec['signal']): string => demandsOf(filterStage('sallen-key-low-pass', BUTTERWORTH, { signal }))['output-current'].because;
+    expect(because(dc(2, 3, 1e3))).toMatch(/what C1 takes at the top frequency too/u);
+    expect(because(dc(2, 3))).toMatch(/no frequency, so what C1 takes is left out/u);
+    expect(because(step(2, 3))).toMatch(/what C1 takes during the edge is left out/u);
   });
 });

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { StageSpec } from '../../src/spec/spec.js';
+import { oscillatorStage } from '../support/shaped-stages.js';
 import { ac, between, dc, demandsOf, load, midSupply, resistors, stageSpec, value, voltage } from '../support/stages.js';
 
 const follower = (more: Partial<StageSpec> = {}): StageSpec => stageSpec('follower', dc(0.2, 4.5), more);
@@ -86,5 +87,15 @@ describe('the offset', () => {
     const spec = stageSpec('non-inverting', dc(0.1, 0.3), { resistors: resistors(70e3, 10e3), temperature: between(-20, 60) });
     expect(demandsOf(spec)['output-low'].noiseGain).toBeCloseTo(1 + (7 * 1.01) / 0.99, 12);
     expect(demandsOf(spec)['output-low'].kelvin).toBe(45);
+  });
+});
+
+describe('the output of an oscillator', () => {
+  it('must reach the levels of the logic it drives, and says so', () => {
+    const demands = demandsOf(oscillatorStage(1e3, { supply: between(4, 5) }));
+    expect(demands['output-high'].required).toBeCloseTo(0.3 * 4, 12);
+    expect(demands['output-low'].required).toBeCloseTo(0.3 * 4, 12);
+    expect(demands['output-high'].because).toBe('the high level of the logic it drives, 3.5 V at most, least room on a supply of 4 V');
+    expect(demands['output-low'].because).toMatch(/^the low level of the logic it drives, 1\.2 V at least/u);
   });
 });

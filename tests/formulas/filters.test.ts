@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { gainBandwidthForShift, multipleFeedback, sallenKey, stopBandFloor } from '../../src/formulas/filters.js';
+import { gainBandwidthForShift, multipleFeedback, sallenKey, sallenKeyLoading, stopBandFloor } from '../../src/formulas/filters.js';
 import { halfPowerFrequency } from '../../src/formulas/low-pass-response.js';
 import { example, refuses } from '../support/examples.js';
 
@@ -11,6 +11,8 @@ describe('active filters', () => {
   example('gain of a multiple-feedback stage', () => multipleFeedback(feedback, Infinity).gain, -1);
   example('gainBandwidthForShift of 1 %', () => gainBandwidthForShift((gbw) => sallenKey(butterworth, gbw), 0.01), 132_830);
   example('stopBandFloor(10e3, 10e3, 100)', () => stopBandFloor(10e3, 10e3, 100), 0.0098039);
+  example('sallenKeyLoading at its corner, in phase: 1/R1', () => sallenKeyLoading(butterworth, 10e3).conductance, 1 / 11_253.95);
+  example('sallenKeyLoading with K = 2 as a capacitance: C1/2', () => sallenKeyLoading({ ...butterworth, gain: 2 }, 10e3).capacitance, 1e-9);
   it('stands exactly at the shift it was asked for', () => {
     const responseAt = (gbw: number) => multipleFeedback(feedback, gbw);
     const found = gainBandwidthForShift(responseAt, 0.02);

@@ -8,6 +8,12 @@ describe('input crossover', () => {
   it('vanishes where the swing just touches the crossover', () => {
     expect(inputCrossoverDistortion({ ...swing, crossover: 4.5 })).toBe(0);
   });
+  it('stays a number at both ends, where the quotient may round to a hair beyond 1, and next to nothing', () => {
+    for (let far = 1.3; far < 4; far += 0.1) {
+      const [level, peak] = [(1.2 + far) / 2, (far - 1.2) / 2];
+      for (const crossover of [level - peak, level + peak]) expect(inputCrossoverDistortion({ step: 1e-3, level, peak, crossover })).toBeLessThan(1e-5);
+    }
+  });
   refuses(
     () => inputCrossoverDistortion({ ...swing, crossover: 5 }),
     'inputCrossoverDistortion: crossover must be finite, at least 0.5, at most 4.5, but is 5',

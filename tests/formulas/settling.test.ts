@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { bandwidthForSettling, riseTime, settlingTime, slewRateForSettling } from '../../src/formulas/settling.js';
+import { bandwidthForSettling, riseTime, settlingTime, slewRateForEdge, slewRateForSettling } from '../../src/formulas/settling.js';
 import { example, refuses } from '../support/examples.js';
 
 describe('settling', () => {
@@ -19,6 +19,17 @@ describe('settling', () => {
       expect(settlingTime({ ...slow, slewRate: slewRate * (1 - 1e-6) })).toBeGreaterThan(time);
     }
   });
+  example('slewRateForEdge of a loop much faster than the edge', () => slewRateForEdge({ step: 4, time: 1e-6, timeConstant: 1e-12 }), 3.2e6);
+  example('slewRateForEdge of a loop just fast enough: 0.9·ln 9', () => slewRateForEdge({ step: 4, time: 1e-6, timeConstant: 1e-6 / Math.log(9) }), 4 * 0.9 * Math.log(9) * 1e6);
+
+  it('makes the edge it was asked for, and not with a millionth less', () => {
+    for (const share of [1e-3, 0.1, 0.3, 0.44]) {
+      const edge = { step: 4, timeConstant: share * 1e-6 };
+      const slewRate = slewRateForEdge({ ...edge, time: 1e-6 });
+      expect(riseTime({ ...edge, slewRate })).toBeLessThanOrEqual(1e-6 * (1 + 1e-11));
+      expect(riseTime({ ...edge, slewRate: slewRate * (1 - 1e-6) })).toBeGreaterThan(1e-6);
+    }
+  });
   it('is continuous between its three pieces', () => {
     const at = (slewRate: number): number => settlingTime({ ...step, slewRate });
     const edges = [step.step / step.timeConstant, (step.step * step.tolerance) / step.timeConstant];
@@ -32,5 +43,6 @@ describe('settling', () => {
     'slewRateForSettling: time must be finite, at least 4, but is 3',
   );
   refuses(() => riseTime({ step: 0, slewRate: 1, timeConstant: 1 }), 'settlingTime: step must be finite, above 0, but is 0');
+  refuses(() => slewRateForEdge({ step: 1, time: 1, timeConstant: 1 }), `slewRateForEdge: time must be finite, at least ${Math.log(9)}, but is 1`);
   refuses(() => bandwidthForSettling(0, 0.1), 'bandwidthForSettling: time must be finite, above 0, but is 0');
 });

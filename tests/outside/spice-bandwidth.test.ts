@@ -106,7 +106,7 @@ describe('one-pole amplifier at the least gain bandwidth, ngspice 45 (eecircuit-
       const demands = demandsOf(bench, asked(bench, 'gainError: 1 %'));
       const hertz = demands['gain-bandwidth']!.required;
       // Resistors of tolerance zero, so the lower corner of the noise gain is the nominal one.
-      const noiseGain = demands['stable-gain'].required;
+      const noiseGain = demands['stable-gain']!.required;
       const [found] = await responses([circuit('a', bench, hertz)]);
       expect(Math.abs((found!.bandwidth * noiseGain) / hertz - 1)).toBeLessThan(0.005);
     });

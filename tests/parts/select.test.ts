@@ -123,6 +123,10 @@ describe('a figure the user assumed', () => {
   it('can pass, not fail: at best it is as good as can be', () => {
     expect(read('slewRate', [assumed(min('slewRate', 1e6))])).toEqual([1e6, Infinity, 'assumed']);
     expect(read('quiescentCurrent', [assumed(max('quiescentCurrent', 1e-6))])).toEqual([1e-6, 0, 'assumed']);
+    // Known as typical alone, and yet less of them is better.
+    expect(read('outputResistance', [assumed(typ('outputResistance', 200))])).toEqual([200, 0, 'assumed']);
+    expect(read('inputCapacitance', [assumed(typ('inputCapacitance', 5e-12))])).toEqual([5e-12, 0, 'assumed']);
+    expect(read('phaseMargin', [assumed(typ('phaseMargin', 60))])).toEqual([60, Infinity, 'assumed']);
     expect(read('inputLowHeadroom', [assumed(max('inputLowHeadroom', 0.1))])).toEqual([0.1, -Infinity, 'assumed']);
   });
 });

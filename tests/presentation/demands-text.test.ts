@@ -48,7 +48,8 @@ describe('what a stage asks', () => {
          Functions, 1954, ch. 11, from memory)
      [6] M3: one-pole amplifier, noise gain (Franco, Design with Operational Amplifiers and Analog
          Integrated Circuits, 3rd ed. 2002, ch. 6, from memory)
-     [7] M9: minimum stable gain against the noise gain at high frequency
+     [7] M9: minimum stable gain against the noise gain at high frequency (Graeme, Photodiode
+         Amplifiers: Op Amp Solutions, 1996, from memory)
      [8] M5: sum of magnitudes at the worst corner (Franco, Design with Operational Amplifiers and
          Analog Integrated Circuits, 3rd ed. 2002, ch. 5, from memory)
      [9] M8: quiescent current
@@ -130,7 +131,8 @@ describe('what a stage asks', () => {
          Operational Amplifiers and Analog Integrated Circuits,
          3rd ed. 2002, ch. 6, from memory)
      [7] M9: minimum stable gain against the noise gain at high
-         frequency
+         frequency (Graeme, Photodiode Amplifiers: Op Amp
+         Solutions, 1996, from memory)
      [8] M5: sum of magnitudes at the worst corner (Franco,
          Design with Operational Amplifiers and Analog
          Integrated Circuits, 3rd ed. 2002, ch. 5, from memory)
@@ -144,10 +146,10 @@ describe('what a stage asks', () => {
     "
   `); });
   it('says where no amplifier can help, and what this version does not judge', () => {
-    const text = renderDemands(sampleDemands({ 'signal.input': '0 mV..330 mV', 'limits.outputNoise': '300 µVrms' }), styleOf(100));
-    expect(text.split('\n').filter((line) => /note:|not judged by this version \(|noise  /u.test(line))).toMatchInlineSnapshot(`
+    const text = renderDemands(sampleDemands({ 'signal.input': '0 mV..330 mV', avoid: 'crossover' }), styleOf(100));
+    expect(text.split('\n').filter((line) => /note:|not judged by this version \(|crossover  /u.test(line))).toMatchInlineSnapshot(`
       [
-        " noise                at most 300 µV (not judged by this version)  the stage file writes it:",
+        " input crossover      not judged by this version  the stage file writes it: avoid; method [12]",
         "note: No amplifier meets output low: at the rail no output stage is left any room. limits.swingLoss",
       ]
     `);

@@ -64,7 +64,7 @@ it('a reason that two checks share is said once', () => {
     verdict({ check, outcome: 'unknown', reason: 'beyond-data', decidesAt: { figure, kind: 'max', value, unit: 'V' } });
   const both = [open('output-low', 'outputLowHeadroom', 0.3), open('output-high', 'outputHighHeadroom', 0.4)];
   expect(plain(unknownText(both))).toBe(
-    'output low and output high: the current lies beyond what the figures cover; pass if output head-room to V- is 300 mV or less and output head-room to V+ is 400 mV or less',
+    'output low and output high: this lies beyond what the figures cover; pass if output head-room to V- is 300 mV or less and output head-room to V+ is 400 mV or less',
   );
 });
 

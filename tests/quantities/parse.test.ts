@@ -274,3 +274,41 @@ describe('spans point at the fault', () => {
     ['25 mV..330 mA', 'voltage', 'mA'],
   ] as const)('%j as %s: %j', (text, kind, part) => expect(marked(text, kind)).toBe(part));
 });
+
+describe('charges', () => {
+  it.each([['500 mAh', 1800], ['0.5 Ah', 1800], ['500 µAh', 1.8], ['500 uAh', 1.8], ['1800 C', 1800], ['10 A·s', 10], ['10 As', 10], ['500 mA h', 1800], ['2,5 Ah', 9000]] as const)('%s is %d coulomb', (text, value) => {
+    expect(nominal(text, 'charge')).toBe(value);
+    expect(read(text, 'charge').unit).toBe('C');
+  });
+
+  it('are shown as batteries state them, or as typed', () => {
+    expect(read('0.5 Ah', 'charge').echo).toBe('500 mAh');
+    expect(read('400..500 mAh', 'charge').echo).toBe('400 mAh..500 mAh');
+    expect(read('2 C', 'charge').echo).toBe('2 C');
+  });
+
+  it.each([
+    ['500', 'Q001', '500 mAh'],
+    ['500 mah', 'Q003', '500 mAh'],
+    ['500 mA', 'Q004', '500 mAh'],
+    ['500 mAhh', 'Q011', '500 mAh'],
+    ['-5 Ah', 'Q019', '5 Ah'],
+  ])('%s is refused with %s and offers %s', (text, wanted, fix) => {
+    expect([refused(text, 'charge').code, refused(text, 'charge').fix]).toEqual([wanted, fix]);
+  });
+
+  it('are named where something else is expected', () => expect(refused('20 mAh', 'current').message).toBe('a charge where a current is expected'));
+  it('leave C a temperature elsewhere', () => expect(nominal('25 C', 'temperature')).toBe(25));
+});
+
+describe('plain numbers and shares', () => {
+  it.each(['0.3..0.7', '30..70 %', '30 %..70 %'])('%s are shares', (text) => {
+    expect(read(text, 'share')).toMatchObject({ min: 0.3, max: 0.7, unit: '1', echo: '0.3..0.7' });
+  });
+  it.each([['1.5', 'Q010'], ['150 %', 'Q010'], ['-0.3', 'Q019'], ['0.3 V', 'Q004'], ['300 m', 'Q011']])('%s is no share: %s', (text, wanted) => expect(code(text, 'share')).toBe(wanted));
+  it('a number has no unit and no prefix', () => {
+    expect(nominal('0.707', 'number')).toBe(0.707);
+    expect(code('0.707 V', 'number')).toBe('Q004');
+    expect([refused('2k', 'number').code, refused('2k', 'number').fix]).toEqual(['Q011', '2000']);
+  });
+});

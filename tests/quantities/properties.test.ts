@@ -34,6 +34,9 @@ const PRINTABLE: readonly (readonly [FieldKind, string, number, number])[] = [
   ['time', 's', 2e-15, 9e5],
   ['price', 'EUR', 2e-6, 9e5],
   ['angle', '°', 1e-3, 359],
+  ['charge', 'C', 2e-3, 9e6],
+  ['share', '1', 1e-6, 0.9],
+  ['number', '1', 1e-5, 9e5],
 ];
 
 /** A value spread over the decades of a range. */
@@ -99,6 +102,9 @@ const TYPED: readonly (readonly [FieldKind, readonly string[]])[] = [
   ['time', ['µs', 'ms']],
   ['price', ['EUR', 'USD']],
   ['angle', ['°']],
+  ['charge', ['mAh', 'Ah', 'C', 'A·s']],
+  ['share', ['', '%']],
+  ['number', ['']],
 ];
 
 describe('the canonical echo', () => {

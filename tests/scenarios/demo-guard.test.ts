@@ -1,7 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { BUILT_TOPOLOGIES } from '../../src/spec/spec.js';
+import { TOPOLOGIES } from '../../src/spec/spec.js';
 import { readStage } from '../../src/spec/read.js';
 import { buildStage } from '../../src/stage/index.js';
 import { ROOT } from '../support/built.js';
@@ -14,7 +14,7 @@ const files = readdirSync(FOLDER).sort();
 const textOf = (file: string): string => readFileSync(join(FOLDER, file), 'utf8');
 
 describe('the demo stages', () => {
-  it.each(BUILT_TOPOLOGIES)('show the topology %s', (topology) => {
+  it.each(TOPOLOGIES)('show the topology %s', (topology) => {
     const shown = files.filter((file) => textOf(file).includes(`\ntopology: ${topology}\n`));
     expect(shown.length, `no file in catalog/stages has topology: ${topology}; add one`).toBeGreaterThan(0);
   });

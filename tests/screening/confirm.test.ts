@@ -31,4 +31,10 @@ describe('figures to confirm before release', () => {
     const both = ['output-low', 'dc-error'].map((check) => passing(check, 2, { basis: 'derated', slot: 'offsetVoltage.typ' }));
     expect(confirmations(both)).toMatchObject([{ figure: 'offsetVoltage', checks: ['output-low', 'dc-error'] }]);
   });
+
+  it('of a sum that turns on one of its figures carry the limit of that one only', () => {
+    const term = (name: string, slot: string): object => ({ name, basis: 'derated', slot, value: 1, figure: null, how: null });
+    const terms = [term('slewing', 'slewRate.typ'), term('linear settling', 'gainBandwidth.typ')] as never;
+    expect(confirmations([passing('settling', 2, { basis: 'derated', terms, turnsAt })]).map(({ figure, needed }) => [figure, needed?.value ?? null])).toEqual([['slewRate', 5], ['gainBandwidth', null]]);
+  });
 });

@@ -21,6 +21,14 @@ describe('words', () => {
     expect(hazards(FOLLOWER, FULL, { phaseReversal: false, inputClamp: false })).toEqual([]);
     expect(hazards(FOLLOWER, FULL)).toEqual([]);
   });
+
+  it('raise no phase reversal where the pins rest at the reference; diodes conduct there too', () => {
+    const inverting = stageSpec('inverting', dc(1, 2), { resistors: resistors(1e4, 1e4, 0), reference: midSupply() });
+    const quirks = { phaseReversal: true, inputClamp: true };
+    expect(hazards(inverting, FULL, quirks)).toEqual([{ kind: 'clamp' }]);
+    const nonInverting = stageSpec('non-inverting', dc(1, 2), { resistors: resistors(1e4, 1e4, 0) });
+    expect(hazards(nonInverting, FULL, quirks)).toEqual([{ kind: 'phase-reversal' }, { kind: 'clamp' }]);
+  });
 });
 
 describe('crossover', () => {

@@ -67,9 +67,9 @@ describe('every check', () => {
   });
 
   it('that is not built leaves every part undecided when the stage writes its limit', () => {
-    const spec = { ...SPEC, limits: { ...SPEC.limits, phaseMargin: value(45) } };
+    const spec = { ...SPEC, limits: { ...SPEC.limits, frequencyError: value(0.01) } };
     expect(judged(spec, FULL).outcome).toBe('undecided');
-    expect(verdictOrNull('phase-margin', spec, FULL)).toMatchObject({ outcome: 'unknown', reason: 'not-built', required: 45, sense: 'at-least', offered: null });
+    expect(verdictOrNull('frequency-error', spec, FULL)).toMatchObject({ outcome: 'unknown', reason: 'not-built', required: 0.01, sense: 'at-most', offered: null });
     expect(verdictOrNull('crossover', { ...SPEC, avoid: ['crossover'] }, FULL)).toMatchObject({ outcome: 'unknown', reason: 'not-built' });
   });
 });

@@ -1,13 +1,12 @@
 import { deriveDemands, type Demands } from '../../src/demands/index.js';
 import { readStage } from '../../src/spec/read.js';
-import type { Topology } from '../../src/spec/spec.js';
 import { buildStage } from '../../src/stage/index.js';
 import { stageFile } from '../support/bench.js';
-import type { Bench, Load } from '../support/netlists.js';
+import type { Bench, BenchTopology, Load } from '../support/netlists.js';
 import { written, type Dice } from './random.js';
 import type { DrawnStage, Point } from './stage-drawn.js';
 
-const TOPOLOGIES: readonly Topology[] = ['follower', 'non-inverting', 'inverting', 'difference'];
+const TOPOLOGIES: readonly BenchTopology[] = ['follower', 'non-inverting', 'inverting', 'difference'];
 
 /** A stage the product accepts; stages that contradict themselves are drawn again. */
 export function drawStage(dice: Dice): DrawnStage {
@@ -117,7 +116,7 @@ function drawReference(dice: Dice, nominal: number, isAc: boolean): DrawnReferen
 
 const DECADE = [1e3, 1.5e3, 2.2e3, 3.3e3, 4.7e3, 6.8e3];
 
-function drawBench(dice: Dice, topology: Topology, of: { isAc: boolean; grounded: boolean }): Bench {
+function drawBench(dice: Dice, topology: BenchTopology, of: { isAc: boolean; grounded: boolean }): Bench {
   const ohms = (): number => dice.pick(DECADE) * dice.pick([1, 10]);
   const series = (share: number): number | undefined => (dice.chance(share) ? written(dice.ratio(100, 5e3), 2) : undefined);
   const source = of.isAc && topology !== 'inverting' ? undefined : series(0.4);

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { BASE, DEMO, option, printedAll, specOf } from '../support/stage-file.js';
+import { stageFile } from '../support/topology-stages.js';
 
 const gain = option('gain', '6', '--gain');
 const BRIDGE = `topology: difference
@@ -59,7 +60,7 @@ describe('an override', () => {
          1 V to
               ^
          fix: 25 mV..330 mV
-      error[S101]: --set gian: gian is not a field of the stage file, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, signal, source, load, temperature, limits, wishes, margins, mayChange, avoid
+      error[S101]: --set gian: gian is not a field of the stage file, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
          fix: gain
       error[S102]: --set limits.settling: limits.settling.to is missing; accepted: a percentage: 0.1 %
          fix: --set "limits.settling.to=0.1 %"
@@ -192,5 +193,66 @@ describe('what an override makes pointless', () => {
     const spec = specOf(`${BASE}load: 10 kΩ to supply\nsource: 1 kΩ\n`, [option('load.capacitance', '1 nF'), option('source.tolerance', '5 %')]);
     expect(spec.load).toMatchObject({ resistance: { value: 10e3 }, to: 'supply', capacitance: { value: 1e-9 } });
     expect(spec.source).toMatchObject({ resistance: { value: 1000 }, tolerance: { value: 0.05 } });
+  });
+});
+
+describe('what an option on a topology of its own makes pointless', () => {
+  const notesOf = (text: string, ...overrides: Parameters<typeof option>[]): readonly string[] => specOf(text, overrides.map((one) => option(...one))).notes;
+  const parts = 'filter: {r1: 10k, r2: 11k, c1: 22 nF, c2: 10 nF}';
+
+  it('components, when a response is wanted, and the other way round', () => {
+    const spec = specOf(stageFile('sallen-key-low-pass', parts), [option('filter.corner', '2 kHz'), option('filter.q', '1')]);
+    expect(spec.filter).toEqual({ corner: { value: 2000, text: '2 kHz' }, q: { value: 1, text: '1' } });
+    expect(spec.notes).toEqual(['--set filter.corner=2 kHz: filter.r1 10k and filter.r2 11k and filter.c1 22 nF and filter.c2 10 nF of the file dropped']);
+    const fitted = [['filter.r1', '10k'], ['filter.r2', '10k'], ['filter.c1', '1 nF'], ['filter.c2', '1 nF']] as const;
+    expect(notesOf(stageFile('sallen-key-low-pass'), ...fitted.map(([path, text]): [string, string] => [path, text]))).toEqual(['--set filter.r1=10k: filter.corner 1 kHz and filter.q 0.707 of the file dropped']);
+  });
+
+  it('a response that an option gives in part asks for the rest', () => {
+    expect(printedAll(stageFile('sallen-key-low-pass', parts), [option('filter.corner', '2 kHz')])).toContain('error[S102]');
+  });
+
+  it('the gain of a multiple-feedback filter, when r1 or r2 is named', () => {
+    const file = stageFile('multiple-feedback-low-pass', 'filter: {r1: 10k, r2: 20k, r3: 5k, c1: 22 nF, c2: 2.2 nF}');
+    expect(notesOf(file, ['filter.r2', '10k'])).toEqual(['--set filter.r2=10k: gain -2 of the file dropped, it follows from r2 over r1']);
+    expect(notesOf(file, ['filter.c2', '1 nF'])).toEqual([]);
+  });
+
+  it('one of the timing components of an oscillator, which is chosen again', () => {
+    const file = stageFile('relaxation-oscillator', 'oscillator: {frequency: 2 kHz, resistance: 330k, capacitance: 1.1 nF}');
+    const dropped = (path: string, text: string): unknown => {
+      const { oscillator, notes } = specOf(file, [option(path, text)]);
+      return [oscillator?.resistance?.value, oscillator?.capacitance?.value, notes];
+    };
+    expect(dropped('oscillator.frequency', '5 kHz')).toEqual([undefined, 1.1e-9, ['--set oscillator.frequency=5 kHz: oscillator.resistance 330k of the file dropped, chosen again for the frequency']]);
+    expect(dropped('oscillator.resistance', '100k')).toEqual([100e3, undefined, ['--set oscillator.resistance=100k: oscillator.capacitance 1.1 nF of the file dropped, chosen again for the frequency']]);
+    expect(dropped('oscillator.edge', '3 %')).toEqual([330e3, 1.1e-9, []]);
+  });
+
+  it('edge and duty, when the shape has none', () => {
+    const file = stageFile('follower', 'signal: {input: 1..2 V, shape: pulse, edge: 1 µs, duty: 0.3}');
+    expect(notesOf(file, ['signal.shape', 'sine'])).toEqual(['--set signal.shape=sine: signal.edge 1 µs and signal.duty 0.3 of the file dropped']);
+    expect(notesOf(file, ['signal.shape', 'step'])).toEqual(['--set signal.shape=step: signal.duty 0.3 of the file dropped']);
+  });
+
+  it('an output that cross-checks a shunt, a sum or a photodiode, but not one that the gain is solved from', () => {
+    const low = stageFile('low-side-sense', 'signal: {output: 0..2.4 V}');
+    expect(notesOf(low, ['shunt.current', '0..2 A'])).toEqual(['--set shunt.current=0..2 A: signal.output 0..2.4 V of the file dropped, the output follows from the gain']);
+    expect(specOf(low.replace('gain: 40\n', ''), [option('shunt.current', '0..2 A')]).signal.output?.max).toBe(2.4);
+    expect(notesOf(stageFile('summing', 'signal: {output: 1..2 V}'), ['legs.command.input', '0..2 V'])).toHaveLength(1);
+    const meter = stageFile('transimpedance', 'signal: {output: 0..3 V}');
+    expect(notesOf(meter, ['photodiode.current', '0..1 µA'])).toEqual([]);
+    expect(notesOf(`${meter}resistors: {feedback: 1 MΩ}\n`, ['photodiode.current', '0..1 µA'])).toHaveLength(1);
+  });
+
+  it('the input resistors of a current sense, when gain is given', () => {
+    const file = stageFile('high-side-sense', 'resistors: {feedback: 100k, input: 250k, positiveInput: 250k, toReference: 100k}');
+    const spec = specOf(file, [option('gain', '0.5', '--gain')]);
+    expect(Object.keys(spec.resistors ?? {}).sort()).toEqual(['feedback', 'toReference']);
+    expect([spec.keepFeedback, spec.notes]).toEqual([true, ['--gain 0.5: feedback 100k and toReference 100k kept, input resistors derived again']]);
+  });
+
+  it('nothing: --frequency on an oscillator is refused by its option, and says where the frequency is', () => {
+    expect(printedAll(stageFile('relaxation-oscillator'), [option('signal.frequency', '2 kHz', '--frequency')])).toContain('error[S108]: --frequency: an oscillator makes its own signal: what it runs at is oscillator.frequency');
   });
 });

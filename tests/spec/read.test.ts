@@ -99,7 +99,7 @@ describe('files that hold no stage', () => {
   it('names options, not lines, when there is no file', () => {
     expect(printedAll(null)).toMatchInlineSnapshot(`
       "
-      error[S102]: topology: topology is missing; accepted: follower, non-inverting, inverting, difference
+      error[S102]: topology: topology is missing; accepted: follower, non-inverting, inverting, summing, difference, transimpedance, low-side-sense, high-side-sense, sallen-key-low-pass, multiple-feedback-low-pass, integrator, relaxation-oscillator
          fix: --topology "non-inverting"
       error[S102]: supply: supply is missing; accepted: one voltage, a tolerance or a range: 5 V, 5 V ± 5 %, 3.0..4.2 V
          fix: --supply "5 V ± 5 %"

@@ -6,10 +6,16 @@ import { acceptedKeys, fieldAt, FIELDS, howToWrite, keysPerLevel, renderStageHel
 describe('the table of fields', () => {
   it('lists the keys of every level', () => {
     expect(acceptedKeys('')).toEqual([
-      'name', 'topology', 'supply', 'supplyPeak', 'gain', 'resistors', 'reference', 'signal', 'source', 'load', 'temperature', 'limits', 'wishes', 'margins', 'mayChange', 'avoid',
+      'name', 'topology', 'supply', 'supplyPeak', 'gain', 'resistors', 'reference',
+      'legs', 'photodiode', 'shunt', 'filter', 'integrator', 'oscillator', 'drives', 'capacitors',
+      'signal', 'source', 'load', 'temperature', 'following', 'converter', 'battery', 'limits', 'wishes', 'margins', 'mayChange', 'avoid',
     ]);
     expect(keysPerLevel()['limits.settling']).toEqual(['within', 'to']);
-    expect(Object.keys(keysPerLevel())).toEqual(['', 'resistors', 'reference', 'signal', 'source', 'load', 'limits', 'limits.settling', 'wishes', 'margins']);
+    expect(acceptedKeys('legs.trim')).toEqual(['input', 'amplitude', 'resistance', 'gain']);
+    expect(Object.keys(keysPerLevel())).toEqual([
+      '', 'resistors', 'reference', 'legs', 'legs.NAME', 'photodiode', 'shunt', 'filter', 'integrator', 'oscillator', 'drives', 'capacitors',
+      'signal', 'source', 'load', 'following', 'converter', 'battery', 'limits', 'limits.settling', 'wishes', 'margins',
+    ]);
   });
 
   it('has a map above every nested field, and no path twice', () => {
@@ -21,7 +27,7 @@ describe('the table of fields', () => {
     const help = renderStageHelp();
     expect(help).toHaveLength(FIELDS.length);
     for (const line of help) expect([line.accepted, line.example, line.meaning].every((text) => text.length > 0), line.path).toBe(true);
-    expect(help.find((line) => line.path === 'signal.input')).toEqual({ path: 'signal.input', accepted: 'a voltage or a range: 25 mV..330 mV', example: '25 mV..330 mV', meaning: 'DC-coupled: extremes at the stage input against ground', option: '--input' });
+    expect(help.find((line) => line.path === 'signal.input')).toEqual({ path: 'signal.input', accepted: 'a voltage or a range: 25 mV..330 mV', example: '25 mV..330 mV', meaning: 'DC-coupled: extremes at the stage input against ground', option: '--input', topologies: ['follower', 'non-inverting', 'inverting', 'sallen-key-low-pass', 'multiple-feedback-low-pass', 'integrator'] });
   });
 
   it('shows how to write a field in a file and on the command line', () => {

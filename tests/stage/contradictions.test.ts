@@ -1,8 +1,11 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { readStage } from '../../src/spec/read.js';
 import { buildStage } from '../../src/stage/index.js';
 import { between, contradictionCodes, dc, midSupply, resistors, stageOf, stageSpec, value, voltage } from '../support/stages.js';
+
+// Many cases a test: slow on a busy machine.
+vi.setConfig({ testTimeout: 120_000 });
 
 const TIMES_8 = { resistors: resistors(70e3, 10e3) };
 

@@ -14,7 +14,7 @@ describe('difference stage', () => {
     expect([stage.gain, stage.noiseGain.nominal]).toEqual([2, 3]);
   });
 
-  it('works with any four resistors (method.md 1)', () => {
+  it('works with any four resistors', () => {
     const any = fourResistors({ r1: 10e3, r2: 30e3, r3: 20e3, r4: 5e3 }, 0);
     const stage = stageOf(stageSpec('difference', legs(swing(2, 2), swing(0.5, 0.5)), { resistors: any, reference: voltage(1) }));
     const pins = (2 * 5 + 1 * 20) / (20 + 5);

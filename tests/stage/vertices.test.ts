@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { ac, between, dc, load, midSupply, resistors, stageOf, stageSpec, voltage } from '../support/stages.js';
+import { ac, between, dc, load, midSupply, resistors, stageOf, stageSpec, value, voltage } from '../support/stages.js';
 
 describe('every corner of a stage', () => {
   it('is enumerated: two supplies, two references, two ratios, two signal ends', () => {
@@ -57,5 +57,25 @@ describe('peak output currents', () => {
     const [peak] = stageOf(spec).peaks;
     // Output 2..4 V into 10 kΩ and into 40 kΩ of network.
     expect(peak!.centre + peak!.swing).toBeCloseTo(4 / 10e3 + 4 / 40e3, 12);
+  });
+
+  it('of a step: the load capacitance at the steepest point of a single-pole edge, where the resistive current is still at the other end', () => {
+    const signal = { ...dc(1, 4), shape: 'step', edge: value(1e-6) } as const;
+    const charge = (farad: number): number => (farad * Math.log(9) * 3) / 1e-6;
+    const swing = (farad: number): number => stageOf(stageSpec('follower', signal, { load: load(1e3, 'ground', farad) })).peaks[0]!.swing;
+    expect(swing(1e-9)).toBeCloseTo(charge(1e-9) - 1.5e-3, 12);
+    expect(swing(1e-12)).toBeCloseTo(1.5e-3, 12);
+  });
+
+  it('of a pulse of free duty: its edge may start anywhere, at the bias at worst', () => {
+    const signal = { ...ac(0.5), shape: 'pulse', edge: value(1e-6) } as const;
+    const stage = stageOf(stageSpec('follower', signal, { reference: midSupply(), load: load(1e3, 'reference', 10e-9) }));
+    expect(stage.outputStep).toBeCloseTo(1, 12);
+    expect(stage.peaks[0]!.swing).toBeCloseTo((10e-9 * Math.log(9)) / 1e-6, 12);
+  });
+
+  it('flow into load and isolation resistor together', () => {
+    const isolated = { ...load(1e3, 'ground', 1e-9), isolation: value(1e3) };
+    expect(stageOf(stageSpec('follower', dc(2, 2), { load: isolated })).vertices[0]?.loadCurrent).toBeCloseTo(1e-3, 15);
   });
 });

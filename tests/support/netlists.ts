@@ -1,9 +1,11 @@
-import type { Topology } from '../../src/spec/spec.js';
 import type { Amplifier } from './amplifiers.js';
+
+/** The stages of resistors alone; drawings.ts has all twelve. */
+export type BenchTopology = 'follower' | 'non-inverting' | 'inverting' | 'difference';
 
 /** A stage as it lies on the bench: real resistors, ohm. Written from the drawing of each topology, not from the product. */
 export interface Bench {
-  readonly topology: Topology;
+  readonly topology: BenchTopology;
   /** Non-inverting and inverting: Rf, Rg or Rin. Difference: R2, R1, and R3, R4 at the + input. */
   readonly feedback?: number;
   readonly input?: number;
@@ -64,7 +66,7 @@ function lines({ name, bench, amplifier, drive, load }: Circuit): string[] {
 
 type Join = (label: string, ends: readonly [string, string], ohms: readonly (number | undefined)[]) => string[];
 
-const DRAWINGS: Readonly<Record<Topology, (bench: Bench, join: Join) => string[]>> = {
+const DRAWINGS: Readonly<Record<BenchTopology, (bench: Bench, join: Join) => string[]>> = {
   follower: (bench, join) => [...join('s', ['input', 'plus'], [bench.source]), ...join('f', ['out', 'minus'], [])],
   'non-inverting': (bench, join) => [
     ...join('s', ['input', 'plus'], [bench.source]),

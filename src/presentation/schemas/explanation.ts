@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { asking, data } from './answer.js';
 import { envelope } from './envelope.js';
-import { confirmation, outcome, proof, tier } from './judged-part.js';
+import { confirmation, informed, outcome, proof, tier } from './judged-part.js';
 import { price } from './price.js';
 import { stage } from './stage.js';
 import { verdict } from './verdict.js';
@@ -35,6 +35,7 @@ export const explanation = envelope('explanation', 'Every check of one part on o
   likely: z.boolean().optional().describe('Undecided only: with the worst figures of its class it would pass'),
   verdicts: z.array(verdict),
   confirm: z.array(confirmation),
+  ...informed,
   changes: z.array(change).nullable().describe('What would let it in; null with a reason'),
   changesReason: z.literal('not-built').optional(),
   cautions: z.array(z.string()),

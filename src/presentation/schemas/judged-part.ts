@@ -15,7 +15,29 @@ const identity = {
   description: z.string().nullable(),
 };
 
+/** What is told of a part and not judged. */
+export const informed = {
+  dynamicRange: z
+    .strictObject({
+      available: z.number().describe('Swing at the lowest supply with the currents of the stage, V'),
+      ideal: z.number().describe('From rail to rail, V'),
+      lossDecibels: z.number().describe('What head-room takes of the dynamic range, dB'),
+    })
+    .nullable()
+    .describe('Null where a head-room is not known'),
+  battery: z
+    .strictObject({
+      hours: z.number(),
+      amplifier: z.number().describe('Quiescent current of the whole package, A'),
+      network: z.number().describe('Average current of load and feedback network, A'),
+      others: z.number().describe('What else draws from it, A'),
+    })
+    .optional()
+    .describe('Life of the battery the stage names'),
+};
+
 const judgements = {
+  ...informed,
   cautions: z.array(z.string()).describe('Cautions of the part as a whole; those of a check stand beside its verdict'),
   verdicts: z.array(verdict).describe('In the order of the checks'),
 };

@@ -58,6 +58,13 @@ const numbers = {
   origin: origin.optional(),
   how: z.string().nullable().optional().describe('How the offered value follows from the figure'),
   cautions: z.array(z.string()).optional(),
+  adds: z.literal('squares').optional().describe('Terms add as squares; without it as they are'),
+  termUnit: unit.optional().describe('Unit of the terms where it is not that of the check'),
+  notes: z.array(z.string()).optional().describe('The same result as engineers also say it'),
+  remedies: z
+    .array(z.strictObject({ path: z.string().describe('Field of the stage file'), text: z.string().describe('Value to write there'), offered: z.number().describe('What the check then offers, worst reading'), cost: z.string() }))
+    .optional()
+    .describe('What would turn the check, recomputed with it'),
   text: z.string().describe('The verdict in one sentence'),
 };
 

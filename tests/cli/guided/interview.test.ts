@@ -67,11 +67,11 @@ describe('questions', () => {
 
   it('have examples that their own field takes', () => {
     const base = 'topology: non-inverting\nsupply: 3.0..4.2 V\ngain: 2\nsignal: {input: 0.1..0.2 V}\n';
-    for (const { id, example } of QUESTIONS) {
+    for (const { id, example, field } of QUESTIONS) {
       if (example === undefined || id === 'name') continue;
       const texts = id === 'load' ? [example] : example.split(/, (?:or )?/u);
       for (const text of texts) {
-        const path = id === 'gain' && text.endsWith('V') ? 'signal.output' : id;
+        const path = field?.(text) ?? id;
         const read = readStage(base, { overrides: [{ path, text, option: path }] });
         const own = read.ok ? [] : read.problems.filter(({ code, place }) => place?.path === path && !['S108', 'S102'].includes(code));
         expect(own, `${id} ${text}`).toEqual([]);
@@ -187,5 +187,58 @@ describe('an interview', () => {
     `);
     const told = log.flatMap((entry) => entry.split('\n')).filter((line) => /^ {2}(?:Asks|Assumed|Output) /u.test(line));
     expect(new Set(told).size).toBe(told.length);
+  });
+});
+
+describe('an interview of a topology with a feed of its own', () => {
+  const heldAs = async (texts: readonly string[]): Promise<{ stage: Stage; file: string; log: readonly string[] }> => {
+    const { answers, log } = await hold(texts);
+    const values = fieldsOf(answers);
+    const coupling = values.get('signal.coupling') === 'ac' ? 'ac' : 'dc';
+    return { stage: stageOf(answers), file: draftFile({ topology: values.get('topology') as Topology, coupling, values }), log };
+  };
+  const line = (file: string, key: string): string | undefined => file.split('\n').find((one) => one.startsWith(`${key}:`));
+
+  it('sums as many legs as are told, and one that rests on the supply', async () => {
+    const { stage, file, log } = await heldAs(['summing', '5 V', 'dc', '0.5..4.5 V', '100 kΩ', 'more', 'supply', '100 kΩ', 'last', '30 kΩ', '']);
+    expect(line(file, 'legs')).toBe('legs: {first: {input: 0.5..4.5 V, resistance: 100 kΩ}, second: {input: supply, resistance: 100 kΩ}}');
+    expect([stage.noiseGain.nominal.toFixed(6), stage.outputNominal.max.toFixed(6)]).toEqual(['1.600000', '2.350000']);
+    expect(log.filter((one) => one.includes('third'))).toEqual([]);
+  });
+
+  it('goes back over a leg, and forgets what it led to', async () => {
+    const { file } = await heldAs(['summing', '5 V', 'dc', '0.5..4.5 V', '100 kΩ', 'more', '0..1 V', BACK, BACK, 'last', '', '3 V']);
+    expect(line(file, 'legs')).toBe('legs: {first: {input: 0.5..4.5 V, resistance: 100 kΩ}}');
+  });
+
+  it('asks of a photodiode which end is at the node, and solves the resistor from the output', async () => {
+    const { stage, file } = await heldAs(['transimpedance', '3.0..4.2 V', '0..1.2 µA', 'out-of-node', '80 pF', '', '0.1..1.9 V', '']);
+    expect(line(file, 'photodiode')).toBe('photodiode: {current: 0..1.2 µA, direction: out-of-node, capacitance: 80 pF}');
+    expect([stage.gain.toFixed(0), stage.outputNominal.min.toFixed(6)]).toEqual(['1500000', '0.100000']);
+  });
+
+  it('asks of a shunt in a line which voltage that has', async () => {
+    const { stage, log } = await heldAs(['high-side-sense', '5 V', '0..2 A', '50 mΩ', '10.8..13.2 V', '0.4', '500 mV']);
+    expect(stage.outputNominal.max).toBeCloseTo(0.54, 3);
+    const low = await heldAs(['low-side-sense', '5 V', '0..3 A', '20 mΩ', '40', '']);
+    // E96 resistors give 40.05.
+    expect(low.stage.outputNominal.max).toBeCloseTo(2.403, 3);
+    expect([log, low.log].map((one) => one.some((text) => text.includes('line the shunt sits in')))).toEqual([true, false]);
+  });
+
+  it('asks of a filter its corner and Q, and takes a gain of 1 by Enter', async () => {
+    const { stage, file } = await heldAs(['sallen-key-low-pass', '5 V', 'dc', '1..2 V', '1 kHz', '0.707', '', '']);
+    expect([line(file, 'filter'), stage.gain]).toEqual(['filter: {corner: 1 kHz, q: 0.707}', 1]);
+  });
+
+  it('asks of an integrator what bounds it', async () => {
+    const { file } = await heldAs(['integrator', '5 V', 'dc', '2.5..3 V', '100 kΩ', '100 nF', '20 ms', '']);
+    expect(line(file, 'integrator')).toBe('integrator: {resistance: 100 kΩ, capacitance: 100 nF, window: 20 ms}');
+  });
+
+  it('asks of an oscillator no signal, no source and no error at rest', async () => {
+    const { file, log } = await heldAs(['relaxation-oscillator', '3.0..4.2 V', '2 kHz', '1.1 nF']);
+    expect([line(file, 'oscillator'), line(file, 'signal')]).toEqual(['oscillator: {frequency: 2 kHz, capacitance: 1.1 nF}', undefined]);
+    expect(log.filter((one) => /signal come in|source that drives|at rest|gain/u.test(one))).toEqual([]);
   });
 });

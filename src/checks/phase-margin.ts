@@ -1,0 +1,137 @@
+import type { PhaseMarginDemand } from '../demands/index.js';
+import { weakest, type Basis } from '../parts/basis.js';
+import type { Reading } from '../parts/reading.js';
+import type { Readings } from '../parts/readings.js';
+import type { Spread } from '../parts/spread.js';
+import { formatQuantity } from '../quantities/format.js';
+import { meets } from '../verdicts/compare.js';
+import type { Finding, Term, UndecidedFinding } from '../verdicts/finding.js';
+import type { Check } from './check.js';
+import { byCapacitiveLoad } from './phase-margin-capacitive-load.js';
+import { loopFigures, type LoopFigures } from './phase-margin-figures.js';
+import { atEitherEnd, phaseParts, worstMargin, type Ends, type Loop, type Margin } from './phase-margin-loop.js';
+import { phaseMarginRemedies } from './phase-margin-remedies.js';
+import { turningResistance, unknownInput } from './phase-margin-turns.js';
+
+/** Phase margin at the true crossover, with the load behind the output resistance and the capacitance of the part's input. */
+export const phaseMargin: Check<PhaseMarginDemand> = {
+  id: 'phase-margin',
+  title: 'phase margin',
+  unit: '°',
+  reads: ['gainBandwidth', 'phaseMargin', 'unityCrossover', 'outputResistance', 'capacitiveLoad', 'inputCapacitance', 'minimumStableGain'],
+  hasMargin: true,
+  asks: (demands) => demands['phase-margin'],
+  judge: judgePhaseMargin,
+};
+
+function judgePhaseMargin(asked: PhaseMarginDemand, readings: Readings): Finding {
+  const figures = loopFigures(asked, readings);
+  const { speed, outputResistance } = figures;
+  if (speed === null) return withoutSpeed(asked, figures);
+  if (speed.ends === null) return whateverSuits(asked, speed);
+  const { load } = asked;
+  if (load.capacitance > 0 && outputResistance === null) return withoutOutputResistance(asked, figures, speed.ends);
+  const loop = loopOf(asked, figures, load.capacitance > 0 ? (outputResistance?.value ?? 0) : null);
+  return measured({ asked, figures, speed, ends: speed.ends, loop }, readings);
+}
+
+/** The loop of this stage with this part; output resistance null: nothing to load, or not to be counted. */
+function loopOf({ network, open, load }: PhaseMarginDemand, { own, inputCapacitance, needsInput }: LoopFigures, outputResistance: number | null): Loop {
+  return {
+    network,
+    open,
+    inputCapacitance: needsInput ? (inputCapacitance?.value ?? 0) : 0,
+    ownPole: own.hertz,
+    load: outputResistance === null || outputResistance === 0 ? null : { ...load, outputResistance },
+  };
+}
+
+interface Measured {
+  readonly asked: PhaseMarginDemand;
+  readonly figures: LoopFigures;
+  readonly speed: Spread;
+  readonly ends: Ends;
+  readonly loop: Loop;
+}
+
+function measured(of: Measured, readings: Readings): Finding {
+  const { asked, figures, speed, ends, loop } = of;
+  const worst = worstMargin(loop, ends);
+  const terms = termsOf(of, worst);
+  const { required, unit, sense } = asked;
+  const passes = meets(required, worst.margin, sense);
+  const isUnityStable = (readings.figure('minimumStableGain')?.value ?? 1) <= 1;
+  return {
+    kind: 'numbers', required, unit, sense, offered: worst.margin, slot: speed.slot,
+    basis: weakest([speed.basis, figures.own.basis, ...inputBasis(figures, { loop, ends, required }), ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
+    how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
+    terms,
+    cautions: passes && inputBasis(figures, { loop, ends, required }).includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
+    remedies: passes ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable),
+  };
+}
+
+const basisOf = (reading: Reading | null): Basis[] => (reading === null ? [] : [reading.basis]);
+
+/** No input has more than this (common practice, from memory), F. */
+const MOST_INPUT = 30e-12;
+
+interface At {
+  readonly loop: Loop;
+  readonly ends: Ends;
+  readonly required: number;
+}
+
+/** The capacitance of an input that is not known makes no pole here: an assumption, unless the margin would hold with the most an input has. */
+function inputBasis({ needsInput, inputCapacitance }: LoopFigures, { loop, ends, required }: At): Basis[] {
+  if (!needsInput) return [];
+  if (inputCapacitance !== null) return [inputCapacitance.basis];
+  return atEitherEnd({ ...loop, stray: MOST_INPUT }, ends) >= required ? [] : ['assumed'];
+}
+
+/** Where the phase goes, degrees: the terms add up to the margin. */
+function termsOf({ asked, figures, speed, ends, loop }: Measured, { gainBandwidth }: Margin): Term[] {
+  const parts = phaseParts(loop, gainBandwidth);
+  if (parts === null) return [];
+  const { own, inputCapacitance, needsInput, outputResistance } = figures;
+  const crossover = `crossover at ${formatQuantity(parts.crossover, 'Hz')}`;
+  const term = (name: string, value: number, from: Pick<Term, 'slot' | 'basis' | 'how'>): Term => ({ name, value, figure: null, slot: from.slot, basis: from.basis, how: from.how });
+  const input = inputCapacitance === null ? (needsInput ? 'input capacitance not known, not counted' : null) : `with an input of ${formatQuantity(inputCapacitance.value, 'F')}`;
+  return [
+    term('one-pole amplifier', 90, { slot: speed.slot, basis: speed.basis, how: [speed.how, crossover].filter((step) => step !== null).join(', ') }),
+    ...(needsInput ? [term('feedback network', parts.feedback, { slot: inputCapacitance?.slot ?? null, basis: inputCapacitance?.basis ?? inputBasis(figures, { loop, ends, required: asked.required })[0] ?? 'guaranteed', how: input })] : []),
+    ...(loop.load === null || outputResistance === null ? [] : [term('load behind the output resistance', parts.load, outputResistance)]),
+    term('excess phase of the part', parts.own, own),
+  ];
+}
+
+/** An assumed gain bandwidth at its best: as good as can be, so that it never fails the check. */
+function whateverSuits({ required, unit, sense }: PhaseMarginDemand, { basis, slot, how }: Spread): Finding {
+  return { kind: 'numbers', required, unit, sense, offered: Infinity, basis, slot, how };
+}
+
+function withoutSpeed(asked: PhaseMarginDemand, figures: LoopFigures): Finding {
+  const { load, required, unit, sense } = asked;
+  // With nothing but the load in the loop the maker's limit needs no gain bandwidth.
+  const stated = load.capacitance > 0 && !figures.needsInput && figures.outputResistance === null ? byCapacitiveLoad(asked, figures.capacitiveLoad, { margin: 90, basis: 'guaranteed' }) : null;
+  return stated ?? ({ kind: 'undecided', required, unit, sense, cause: 'missing-figure', missing: [{ figure: 'gainBandwidth', kind: 'min' }] } satisfies UndecidedFinding);
+}
+
+/** The load pole has no figure: the maker's capacitive load decides, else only what is left without that pole is known. */
+function withoutOutputResistance(asked: PhaseMarginDemand, figures: LoopFigures, ends: Ends): Finding {
+  const unloaded = loopOf(asked, figures, null);
+  const known = worstMargin(unloaded, ends).margin;
+  const { required, unit, sense } = asked;
+  const bare = { ...unloaded, ownPole: Infinity };
+  const basis = weakest([figures.own.basis, ...inputBasis(figures, { loop: unloaded, ends, required })]);
+  const without = { margin: worstMargin(bare, ends).margin, basis: weakest(inputBasis(figures, { loop: bare, ends, required })) };
+  const stated = meets(required, known, sense) ? byCapacitiveLoad(asked, figures.capacitiveLoad, without) : null;
+  if (stated !== null) return stated;
+  const missing = [{ figure: 'outputResistance', kind: 'typ' }] as const;
+  return { kind: 'bound', required, unit, sense, known, basis, missing, cause: 'missing-figure', turnsAt: turningResistance({ ...unloaded, load: { ...asked.load, outputResistance: 0 } }, ends, required), cautions: notEnough(asked, figures) };
+}
+
+function notEnough({ load }: PhaseMarginDemand, { capacitiveLoad }: LoopFigures): string[] {
+  if (capacitiveLoad === null) return [];
+  return [`the stated capacitive load of ${formatQuantity(capacitiveLoad.value, 'F')} does not settle ${formatQuantity(load.capacitance, 'F')} here`];
+}

@@ -1,0 +1,33 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { crossoverOf, falsePosition } from '../../src/checks/phase-margin-crossover.js';
+
+describe('the crossover of a loop gain', () => {
+  it('is exact for one pole: GBW/NG', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 1, max: 1e9, noNaN: true }), fc.double({ min: 1, max: 1e6, noNaN: true }), (hertz, gain) => {
+        expect(crossoverOf((frequency) => Math.log(hertz / gain / frequency), hertz)! / (hertz / gain)).toBeCloseTo(1, 11);
+      }),
+    );
+  });
+
+  it('is the highest of several', () => {
+    // 1 at 1, 10 and 100 Hz, below 1 in between.
+    const gain = (frequency: number): number => -Math.log(frequency) * Math.log(frequency / 10) * Math.log(frequency / 100);
+    expect(crossoverOf(gain, 1e3)).toBeCloseTo(100, 8);
+  });
+
+  it('is none where the gain stays below 1', () => {
+    expect(crossoverOf(() => -1, 1e6)).toBeNull();
+  });
+
+  it('lies above the gain bandwidth where the network lifts it', () => {
+    expect(crossoverOf((frequency) => Math.log(1e9 / frequency), 1e6)! / 1e9).toBeCloseTo(1, 11);
+  });
+});
+
+it('regula falsi finds a zero between two places, also of a function that is flat on one side', () => {
+  const flat = (x: number): number => Math.min(1, 3 - x);
+  expect(falsePosition(flat, { position: -50, left: 1 }, { position: 100, left: -97 })).toBeCloseTo(3, 10);
+  expect(falsePosition((x) => x ** 3 - 8, { position: 0, left: -8 }, { position: 50, left: 124_992 })).toBeCloseTo(2, 10);
+});
