@@ -1,6 +1,7 @@
 import { asciiText } from '../quantities/ascii.js';
 import { suggest } from '../quantities/suggest.js';
 import { EXIT } from './exit-code.js';
+import { formulaAscii } from './formula-ascii.js';
 import { codeBlocks, TOPICS, type Block } from './help-topics.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { styleFor, type CommonOptions, type Outcome, type Session } from './session.js';
@@ -37,7 +38,7 @@ function textFor(question: HelpQuestion, style: HelpStyle): string {
 type HelpStyle = Pick<ReturnType<typeof styleFor>, 'width' | 'ascii'>;
 
 function render(block: Block, { width, ascii }: HelpStyle): string {
-  const spelled = (text: string): string => (ascii ? asciiText(text) : text.replaceAll('−', '-'));
+  const spelled = (text: string): string => (ascii ? formulaAscii(asciiText(text)) : text.replaceAll('−', '-'));
   if ('text' in block) return wrap(spelled(block.text), width).join('\n');
   if ('code' in block) return block.code.map((line) => `    ${spelled(line)}`).join('\n');
   const widest = Math.min(28, Math.max(...block.pairs.map(([name]) => name.length)));
