@@ -35,5 +35,4 @@ export function trialWords({ delimiter, columns, rows, fitting, usual }: Trial):
   return fitting === 0 && usual !== null ? `${start}, rows have ${usual}` : `${start} in ${fitting} of ${rows} rows`;
 }
 
-/** How delimiters are called in messages. */
-export const NAMES: Readonly<Record<Delimiter, string>> = { ',': 'commas', ';': 'semicolons', '\t': 'tabs', '|': 'bars' };
+const NAMES: Readonly<Record<Delimiter, string>> = { ',': 'commas', ';': 'semicolons', '\t': 'tabs' };
