@@ -1,17 +1,26 @@
 import { createHash } from 'node:crypto';
 import type { Part } from '../parts/part.js';
-import { partToRow } from './part-row.js';
+import type { Cell } from './part-row.js';
 
-/** Everything of a part that can change an answer, as text: equal texts are equal parts. Independent of file, line and time. */
-export function partContent(part: Part): string {
-  return JSON.stringify(partToRow(part));
+/** SHA-256 over the content of the parts of one tier: rows of `partToRow` in `contentOrder`. Independent of file, line and time. */
+export interface ContentHasher {
+  add(row: readonly Cell[]): void;
+  digest(): string;
 }
 
-/** SHA-256 over the content of the parts of one tier, whatever their order. */
-export function contentHash(contents: readonly string[]): string {
+export function contentHasher(): ContentHasher {
   const hash = createHash('sha256');
-  for (const content of [...contents].sort()) hash.update(content).update('\n');
-  return hash.digest('hex');
+  return {
+    add: (row) => void hash.update(JSON.stringify(row)).update('\n'),
+    digest: () => hash.digest('hex'),
+  };
+}
+
+/** Indices of the parts in the order their content is hashed in, whatever their order in the list: rows as JSON text, which start with tier and id. */
+export function contentOrder(parts: readonly Pick<Part, 'id'>[]): number[] {
+  const keys = parts.map(({ id }) => JSON.stringify(id));
+  const keyOf = (index: number): string => keys[index] ?? '';
+  return parts.map((_, index) => index).sort((a, b) => (keyOf(a) < keyOf(b) ? -1 : Number(keyOf(a) > keyOf(b))));
 }
 
 /** SHA-256 over what is in force: the content of both tiers. */

@@ -55,6 +55,28 @@ async function bringUpToDate(database: Database.Database, file: string): Promise
   const version = Number(database.pragma('user_version', { simple: true }));
   if (version > SCHEMA_VERSION) throw new CatalogError('newerSchema', file);
   if (version === SCHEMA_VERSION) return;
-  const { migrate } = await import('./migrate.js');
-  await migrate(database);
+  try {
+    await migrateInTurn(database);
+  } catch (error) {
+    // The tables of every version so far can be read as they are; what needs the new ones does without.
+    if (version < 1 || (asCatalogError(error, file) as { code?: string }).code !== 'readOnly') throw error;
+  }
 }
+
+/** Of several processes that find old tables at once one brings them up to date; the others find it done. */
+async function migrateInTurn(database: Database.Database): Promise<void> {
+  const { migrate } = await import('./migrate.js');
+  for (let left = ATTEMPTS; ; left -= 1) {
+    try {
+      return await migrate(database);
+    } catch (error) {
+      // Two that have read before either writes cannot both wait: SQLite sends one away at once.
+      if (left <= 1 || !String((error as { code?: unknown }).code).startsWith('SQLITE_BUSY')) throw error;
+      await new Promise((resolve) => setTimeout(resolve, PAUSE));
+    }
+  }
+}
+
+const ATTEMPTS = 40;
+/** Milliseconds. */
+const PAUSE = 50;

@@ -1,6 +1,8 @@
 import type Database from 'better-sqlite3';
 import type { ListColumn } from '../intake/list.js';
+import type { ListSources } from '../intake/list-sources.js';
 import type { Tier } from '../parts/part.js';
+import { sourcesText } from './import-columns.js';
 
 /** The import a tier stands at. */
 export interface CurrentImport {
@@ -22,6 +24,7 @@ export interface ImportCounts {
 export interface NewImport extends Omit<CurrentImport, 'id'> {
   readonly tier: Tier;
   readonly columns: readonly ListColumn[];
+  readonly sources: ListSources;
   /** ISO 8601 as the caller gave it, or null. */
   readonly importedAt: string | null;
   readonly counts: ImportCounts;
@@ -35,20 +38,37 @@ export function currentImport(database: Database.Database, tier: Tier): CurrentI
   return query.get(tier) ?? null;
 }
 
-export function insertImport(database: Database.Database, { counts, columns, ...values }: NewImport): number {
+/** The bytes of this list were in force before, and another list has replaced them since. */
+export function isSuperseded(database: Database.Database, { tier, sha256 }: Pick<NewImport, 'tier' | 'sha256'>): boolean {
+  const query = database.prepare<[Tier, string], number>('select 1 from list_import where tier = ? and sha256 = ? and undone = 0').pluck();
+  return query.get(tier, sha256) !== undefined && currentImport(database, tier)?.sha256 !== sha256;
+}
+
+export function insertImport(database: Database.Database, { counts, columns, sources, ...values }: NewImport): number {
   const insert = database.prepare(
-    `insert into list_import (tier, file, sha256, content_sha256, imported_at, columns, rows, added, changed, removed, unchanged)
-     values (@tier, @file, @sha256, @contentSha256, @importedAt, @columns, @rows, @added, @changed, @removed, @unchanged)`,
+    `insert into list_import (tier, file, sha256, content_sha256, imported_at, columns, sources, rows, added, changed, removed, unchanged)
+     values (@tier, @file, @sha256, @contentSha256, @importedAt, @columns, @sources, @rows, @added, @changed, @removed, @unchanged)`,
   );
-  return Number(insert.run({ ...values, ...counts, columns: JSON.stringify(columns) }).lastInsertRowid);
+  return Number(insert.run({ ...values, ...counts, columns: JSON.stringify(columns), sources: sourcesText(sources) }).lastInsertRowid);
 }
 
-/** The file an import is read from now. */
-export function updateOrigin(database: Database.Database, importId: number, { file, sha256, columns }: Pick<NewImport, 'file' | 'sha256' | 'columns'>): void {
-  database.prepare('update list_import set file = ?, sha256 = ?, columns = ? where id = ?').run(file, sha256, JSON.stringify(columns), importId);
+/** One import by its number. */
+export function importById(database: Database.Database, importId: number): CurrentImport | null {
+  const query = database.prepare<[number], CurrentImport>('select id, file, sha256, content_sha256 as contentSha256 from list_import where id = ?');
+  return query.get(importId) ?? null;
 }
 
-export function importColumns(database: Database.Database, importId: number): readonly ListColumn[] {
-  const query = database.prepare<[number], string>('select columns from list_import where id = ?').pluck();
-  return JSON.parse(query.get(importId) ?? '[]') as ListColumn[];
+type Read = Pick<NewImport, 'file' | 'sha256' | 'columns' | 'sources'>;
+
+/** The file an import is read from now, and how. */
+export function updateOrigin(database: Database.Database, importId: number, { file, sha256, columns, sources }: Read): void {
+  database.prepare('update list_import set file = ?, sha256 = ?, columns = ?, sources = ? where id = ?').run(file, sha256, JSON.stringify(columns), sourcesText(sources), importId);
+}
+
+/** The same bytes read in the same way as this import was. */
+export function isReadAlike(database: Database.Database, { id, sha256 }: CurrentImport, read: Read): boolean {
+  if (sha256 !== read.sha256) return false;
+  const query = database.prepare<[number], readonly [string, string | null]>('select columns, sources from list_import where id = ?').raw();
+  const [columns, sources] = query.get(id) ?? [];
+  return columns === JSON.stringify(read.columns) && sources === sourcesText(read.sources);
 }

@@ -1,36 +1,35 @@
 import type Database from 'better-sqlite3';
-import type { ReadList } from '../intake/list.js';
-import type { PartSource } from '../parts/part.js';
+import type { ListColumn, ReadList } from '../intake/list.js';
+import type { Origin, Part, PartSource } from '../parts/part.js';
 import { guarded } from './catalog-error.js';
 import type { OpenOptions } from './database.js';
 import { openDatabase } from './database.js';
-import type { ImportCounts } from './imports.js';
+import type { ImportOptions, ImportResult } from './import-list.js';
+import { importList } from './import-list.js';
+import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
+import type { CurrentImport } from './imports.js';
+import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
+import { originFinder } from './origins.js';
+import type { SavedStage } from './saved-stages.js';
+import { removeStages, savedStages, saveStages } from './saved-stages.js';
 import { partSource } from './source.js';
-import type { ChangedPart } from './store.js';
-import { classesInForce, compareLists, idsInForce, refreshOrigins, undoImport, writeDifference } from './store.js';
+import { undoImport } from './store.js';
+import type { WithdrawnPart } from './withdrawn.js';
+import { withdrawnPart } from './withdrawn.js';
 
 export { CatalogError } from './catalog-error.js';
 export type { CatalogErrorCode } from './catalog-error.js';
 export type { OpenOptions } from './database.js';
-export type { ImportCounts } from './imports.js';
-export type { ChangedPart } from './store.js';
-
-export interface ImportOptions {
-  /** When it was imported, ISO 8601; kept as told, never read from a clock. */
-  readonly now?: string;
-  /** Compare only; nothing is written. */
-  readonly dryRun?: boolean;
-}
-
-export interface ImportResult {
-  readonly outcome: 'imported' | 'no-change' | 'dry-run';
-  readonly counts: ImportCounts;
-  /** Parts that are in both lists and differ, before and after. */
-  readonly changed: readonly ChangedPart[];
-  /** Ids that are not in the new list any more. */
-  readonly removed: readonly string[];
-}
+export type { ChangedPart } from './difference.js';
+export { GUARDS } from './guards.js';
+export type { Guard, GuardName } from './guards.js';
+export type { ImportOptions, ImportResult } from './import-list.js';
+export type { CurrentImport, ImportCounts } from './imports.js';
+export type { Progress } from './progress.js';
+export type { SavedStage } from './saved-stages.js';
+export type { ColumnSubject, ScaledColumn } from './scaling.js';
+export type { WithdrawnPart } from './withdrawn.js';
 
 /** The file that keeps the parts. Every method throws `CatalogError` when the surroundings do not allow it. */
 export interface Catalog {
@@ -43,12 +42,32 @@ export interface Catalog {
   genericIds(): ReadonlySet<string>;
   /** Classes of the generic sets, from which a part may borrow. */
   classes(): ReadonlySet<string>;
+  /** How many parts the approved list has. */
+  approvedCount(): number;
   /** Replaces the approved list in one transaction; the same parts again are no change: only where they came from is kept anew. */
   importList(list: ReadList, options?: ImportOptions): ImportResult;
+  /** The approved part in force with this id; null when there is none. */
+  approvedPart(partId: string): Part | null;
+  /** The generic sets, by id. */
+  genericParts(): readonly Part[];
+  /** The columns of an earlier import as they were read. */
+  columnsOf(imported: CurrentImport): readonly ListColumn[];
+  /** The column that filled a slot of most parts in an earlier import; null when none did. */
+  columnOf(imported: CurrentImport, slot: string): ListColumn | null;
+  /** Where a figure of an approved part came from in an earlier import. */
+  originIn(imported: CurrentImport, partId: string, slot: string): Origin | null;
   /** Returns to the approved list before the last import; false when there was none. */
   undo(): boolean;
   /** Replaces the generic sets when the file they are read from is another one; true when it did. */
   seedGeneric(list: ReadList): boolean;
+  /** A part that was on the approved list and is not any more; null when it is, or never was. */
+  withdrawn(partId: string): WithdrawnPart | null;
+  /** The stage files the team keeps, by path. */
+  savedStages(): readonly SavedStage[];
+  /** Keeps stage files, or gives them another part, all or none. */
+  saveStages(stages: readonly SavedStage[]): void;
+  /** Forgets stage files; the files are left alone. */
+  removeStages(paths: readonly string[]): void;
   /** The parts in force and where each figure came from. */
   source(): PartSource;
   close(): void;
@@ -61,6 +80,8 @@ export async function openCatalog(file: string, options: OpenOptions = {}): Prom
 }
 
 function catalogOf(database: Database.Database, { file, isNew }: { file: string; isNew: boolean }): Catalog {
+  const origin = originFinder(database);
+  const tableOf = columnTables(database);
   return {
     file,
     isNew,
@@ -69,32 +90,22 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
     },
     genericIds: () => guarded(file, () => new Set(idsInForce(database, 'generic'))),
     classes: () => guarded(file, () => new Set(classesInForce(database, 'generic'))),
+    approvedCount: () => guarded(file, () => countInForce(database, 'approved')),
     importList: (list, options = {}) => guarded(file, () => importList(database, asTier(list, 'approved'), options)),
+    approvedPart: (partId) => guarded(file, () => partInForce(database, 'approved', partId)),
+    genericParts: () => guarded(file, () => partsInForce(database, 'generic')),
+    columnsOf: ({ id }) => guarded(file, () => tableOf(id).all),
+    columnOf: ({ id }, slot) => guarded(file, () => columnOf(tableOf(id), slot)),
+    originIn: (imported, partId, slot) => guarded(file, () => origin({ tier: 'approved', from: imported, partId, slot })),
     undo: () => guarded(file, () => database.transaction(() => undoImport(database, 'approved')).immediate()),
-    seedGeneric: (list) => guarded(file, () => importList(database, asTier(list, 'generic'), {}).outcome === 'imported'),
+    seedGeneric: (list) => guarded(file, () => importList(database, asTier(list, 'generic')).outcome === 'imported'),
+    withdrawn: (partId) => guarded(file, () => withdrawnPart(database, file, partId)),
+    savedStages: () => guarded(file, () => savedStages(database)),
+    saveStages: (stages) => guarded(file, () => saveStages(database, stages)),
+    removeStages: (paths) => guarded(file, () => removeStages(database, paths)),
     source: () => partSource(database, file),
     close: () => void database.close(),
   };
-}
-
-function importList(database: Database.Database, list: ReadList, { now, dryRun = false }: ImportOptions): ImportResult {
-  const work = database.transaction((): ImportResult => {
-    const current = currentImport(database, list.tier);
-    if (current?.sha256 === list.sha256) return unchanged(list);
-    const difference = compareLists(database, list);
-    const { counts, changed, removed } = difference;
-    if (current !== null && counts.added + counts.changed + counts.removed === 0) {
-      if (!dryRun) refreshOrigins(database, list, current.id);
-      return unchanged(list);
-    }
-    if (!dryRun) writeDifference(database, list, { difference, now: now ?? null });
-    return { outcome: dryRun ? 'dry-run' : 'imported', counts, changed, removed };
-  });
-  return dryRun ? work.deferred() : work.immediate();
-}
-
-function unchanged({ parts: { length } }: ReadList): ImportResult {
-  return { outcome: 'no-change', counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: length }, changed: [], removed: [] };
 }
 
 function asTier(list: ReadList, tier: ReadList['tier']): ReadList {

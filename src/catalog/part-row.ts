@@ -1,13 +1,13 @@
 import { compareFigures } from '../parts/figure-order.js';
-import type { Condition, Figure, LimitKind } from '../parts/figures.js';
+import type { Condition, Figure, LimitKind, Parameter } from '../parts/figures.js';
 import type { InputType, Lifecycle, Part, Status, Tier } from '../parts/part.js';
 import type { FigureColumn } from './part-columns.js';
 import { FIGURE_COLUMNS, IDENTITY_COLUMNS } from './part-columns.js';
 
 export type Cell = string | number | null;
 
-/** A figure under a condition within the points of its parameter: kind, value in SI, condition. */
-type Point = readonly [LimitKind, number, Condition];
+/** A figure within the points of its parameter, because it has a condition or is assumed: kind, value in SI, condition, and true when assumed. */
+type Point = readonly [LimitKind, number, Condition, true?];
 
 /** A part as the values of `PART_COLUMNS`. */
 export function partToRow(part: Part): Cell[] {
@@ -16,7 +16,11 @@ export function partToRow(part: Part): Cell[] {
 
 /** The part of a row that `partToRow` made; figures come back in canonical order. */
 export function rowToPart(row: readonly Cell[]): Part {
-  const figures = FIGURE_COLUMNS.flatMap((column, index) => figuresOf(column, row[IDENTITY_COLUMNS.length + index] ?? null));
+  const figures: Figure[] = [];
+  FIGURE_COLUMNS.forEach((column, index) => {
+    const cell = row[IDENTITY_COLUMNS.length + index] ?? null;
+    if (cell !== null) addFigures(figures, column, cell);
+  });
   return { ...identityOf(row), figures: figures.sort(compareFigures) };
 }
 
@@ -42,28 +46,40 @@ function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
 }
 
 function figureCells(figures: readonly Figure[]): Cell[] {
-  const cells = FIGURE_COLUMNS.map((): Cell => null);
+  const cells = new Array<Cell>(FIGURE_COLUMNS.length).fill(null);
   const points = new Map<number, Point[]>();
-  for (const { parameter, kind, value, condition } of figures) {
-    const isPlain = Object.keys(condition).length === 0;
-    const index = COLUMN_INDEX.get(isPlain ? `${parameter}.${kind}` : parameter);
+  for (const { parameter, kind, value, condition, assumed } of figures) {
+    const isOneCell = isPlain(condition) && assumed !== true;
+    const index = COLUMN_INDEX[parameter][isOneCell ? kind : 'points'];
     if (index === undefined) throw new RangeError(`${parameter} ${kind} has no column`);
-    if (isPlain) cells[index] = value;
-    else points.set(index, [...(points.get(index) ?? []), [kind, value, condition]]);
+    if (isOneCell) cells[index] = value;
+    else points.set(index, [...(points.get(index) ?? []), assumed === true ? [kind, value, condition, true] : [kind, value, condition]]);
   }
   for (const [index, list] of points) cells[index] = JSON.stringify(list);
   return cells;
 }
 
-const COLUMN_INDEX: ReadonlyMap<string, number> = new Map(
-  FIGURE_COLUMNS.map(({ parameter, kind }, index) => [kind === null ? parameter : `${parameter}.${kind}`, index]),
-);
+/** Nothing was stated. Asked for every figure of a list, so without making a list of the keys. */
+function isPlain({ supply, load, temperature, gain }: Condition): boolean {
+  return supply === undefined && load === undefined && temperature === undefined && gain === undefined;
+}
 
-function figuresOf({ parameter, kind }: FigureColumn, cell: Cell): Figure[] {
-  if (cell === null) return [];
-  if (kind !== null) return [{ parameter, kind, value: Number(cell), condition: {} }];
-  const points = JSON.parse(String(cell)) as readonly Point[];
-  return points.map(([kind, value, condition]) => ({ parameter, kind, value, condition }));
+const COLUMN_INDEX = columnIndex();
+
+function columnIndex(): Readonly<Record<Parameter, Partial<Record<LimitKind | 'points', number>>>> {
+  const index = Object.fromEntries(FIGURE_COLUMNS.map(({ parameter }) => [parameter, {}])) as Record<Parameter, Partial<Record<LimitKind | 'points', number>>>;
+  FIGURE_COLUMNS.forEach(({ parameter, kind }, at) => { index[parameter][kind ?? 'points'] = at; });
+  return index;
+}
+
+/** One for all figures without condition: a large list has millions of them. */
+const PLAIN: Condition = Object.freeze({});
+
+function addFigures(figures: Figure[], { parameter, kind }: FigureColumn, cell: string | number): void {
+  if (kind !== null) return void figures.push({ parameter, kind, value: Number(cell), condition: PLAIN });
+  for (const [limit, value, condition, assumed] of JSON.parse(String(cell)) as readonly Point[]) {
+    figures.push({ parameter, kind: limit, value, condition, ...(assumed === true ? { assumed } : {}) });
+  }
 }
 
 function text(cell: Cell | undefined): string | null {

@@ -1,4 +1,4 @@
-import { limitKindOf, PARAMETERS, type Figure, type Parameter, type Part, type PartSource } from '../index.js';
+import { figureSlot, limitKindOf, PARAMETERS, type Figure, type Parameter, type Part, type PartSource } from '../index.js';
 import { parseQuantity } from '../quantities/parse.js';
 import type { Problem } from '../quantities/problem.js';
 import { suggest } from '../quantities/suggest.js';
@@ -9,13 +9,21 @@ import { findPart } from './find-part.js';
 export function assumeFigures(source: PartSource, wishes: readonly string[]): { source: PartSource; problems: Problem[] } {
   const problems: Problem[] = [];
   let parts = source.parts;
+  const assumed = new Set<string>();
   for (const wish of wishes) {
     const read = readWish(wish, source);
-    if ('problem' in read) problems.push(read.problem);
-    else parts = parts.map((part) => (part.id === read.part.id ? withFigure(part, read.figure) : part));
+    if ('problem' in read) {
+      problems.push(read.problem);
+      continue;
+    }
+    assumed.add(`${read.part.id} ${figureSlot(read.figure)}`);
+    parts = parts.map((part) => (part.id === read.part.id ? withFigure(part, read.figure) : part));
   }
-  return { source: { ...source, parts, origin: (id, slot) => source.origin(id, slot) }, problems };
+  const origin: PartSource['origin'] = (id, slot) => (assumed.has(`${id} ${slot}`) ? FOR_THIS_RUN : source.origin(id, slot));
+  return { source: { ...source, parts, origin }, problems };
 }
+
+const FOR_THIS_RUN = { kind: 'assumption', text: 'for this run' } as const;
 
 type Wish = { readonly part: Part; readonly figure: Figure } | { readonly problem: Problem };
 

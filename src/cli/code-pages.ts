@@ -64,10 +64,19 @@ const COMMANDS: readonly CodePage[] = [
   page('C109', 'no such help topic', 'Topics, commands and message codes have pages.', ['railfit help figrues', 'railfit help figures']),
   page('C110', 'the file exists', 'A draft is never written over another file unless that is asked for.', ['railfit draft -o stage.yaml, a second time', 'railfit draft -o other.yaml, or --force']),
   page('C111', 'no terminal to ask on', 'Guided entry needs a person at a terminal; everything it asks can be written in a file or given as options.', ['railfit draft --ask < answers.txt', 'railfit draft non-inverting -o stage.yaml']),
+  page('C112', 'no such saved stage', 'What is saved is listed by railfit stages.', ['railfit stages remove probe.yml', 'railfit stages remove probe.yaml']),
+  page('C113', 'a part that was withdrawn', 'It was on an earlier list and is not on this one. Its versions are kept, so that old reports resolve.', ['railfit explain ORG-OA-0008 stage.yaml', 'railfit part ORG-OA-0008, which shows it as it was last']),
   page('E501', 'the catalog cannot be used', 'The file is locked, unreadable, not a catalog, or from a newer version. It was left as it is.', ['--catalog /etc/hosts', '--catalog team.sqlite']),
   page('E502', 'file cannot be read', 'The path or its permissions.', ['stage.yml for stage.yaml', 'the path as ls shows it']),
   page('E503', 'file cannot be written', 'The folder does not exist or may not be written.', ['--errors /nowhere/e.csv', '--errors e.csv']),
   page('E504', 'the answer cannot be written', 'What the output was sent to takes no more: usually a full disk.', ['railfit shortlist stage.yaml > /full/list.txt', 'railfit shortlist stage.yaml > /elsewhere/list.txt']),
+];
+
+/** What a new list may do only when that is said: the guards of an import. */
+const GUARDS: readonly CodePage[] = [
+  page('I701', 'a large part of the list is gone', 'More than a fifth of the parts in force would be withdrawn: usually a filter was left on, or the wrong sheet was saved.', ['9 of 20 parts missing', 'the whole list; railfit import list.csv --accept removed if they are gone']),
+  page('I702', 'lifecycle getting better in bulk', 'Parts seldom come back from the end of their life; many at once are a column that slipped or an old file.', ['obsolete becomes active for 6 of 20 parts', 'the lifecycle the makers publish; --accept lifecycle if it is right']),
+  page('I703', 'an older file', 'These very bytes were in force before and another list has replaced them; importing them again would bring old figures back.', ['march.csv after april.csv', 'railfit import --undo takes the last import back; --accept older imports the old file']),
 ];
 
 /** Every code a message can carry, in order. A test holds this list against the source. */
@@ -76,5 +85,6 @@ export const CODE_PAGES: readonly CodePage[] = [
   ...SPEC_CODES.map(({ code, title, cause, refused, accepted }) => ({ code, title, why: cause, refused, accepted })),
   ...CONTRADICTIONS,
   ...Object.entries(INTAKE_CODES).map(([code, { title, why, example, fix }]) => ({ code, title, why, refused: example, accepted: fix })),
+  ...GUARDS,
   ...COMMANDS,
 ];

@@ -22,7 +22,7 @@ export async function runExplain(session: Session, operands: ExplainOperands, op
   const { stage, file } = await readStageOf(stageFile, { ...options, already });
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
-    const found = findPart(source.parts, part ?? '');
+    const found = findPart(source.parts, part ?? '', (id) => catalog.withdrawn(id));
     if (!found.ok) throw new RequestError([found.problem], EXIT.request);
     const explanation = explain(stage, source, { part: found.part, asking });
     const exit = exitOfOutcome(explanation.judged.outcome);

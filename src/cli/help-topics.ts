@@ -72,7 +72,20 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   lists: () => [
     { text: 'railfit import reads the approved list as canonical CSV: one row a part, a figure named by its parameter, limit kind and unit, with conditions behind @. Nothing is stored unless every cell is understood.' },
     { code: ['id,status,package,supply voltage min (V),supply voltage max (V),slew rate min (V/µs),output high headroom max (mV) @ 1 mA', 'ORG-OA-0101,approved,SOT-23-5,1.8,5.5,0.4,60'] },
-    { text: 'railfit parts --csv writes the same form. catalog/README.md tells how to read each value out of a datasheet.' },
+    { text: 'A list replaces the one before, all or nothing: railfit import tells every figure that changes, parts that are gone are withdrawn and never erased, railfit import --undo goes back, and --dry-run says the same and writes nothing. What looks like a slip of the whole file is held back until it is said:' },
+    {
+      pairs: [
+        ['--accept removed', 'more than a fifth of the parts are gone'],
+        ['--accept scaled', 'a whole column is a power of ten off'],
+        ['--accept lifecycle', 'many parts come back from the end of their life'],
+        ['--accept older', 'the same file was in force before the present one'],
+      ],
+    },
+    { text: 'railfit parts --csv writes the same form; a cell that starts like a formula gets an apostrophe in front, which import takes off again and --raw leaves out. catalog/README.md tells how to read each value out of a datasheet.' },
+  ],
+  saved: () => [
+    { text: "railfit stages add FILE --part ID keeps a stage file by its path, with the part chosen for it; railfit stages lists them, railfit stages remove FILE forgets one. Every import then tells which of them are answered differently: first choice, how many fit, and how the chosen part stands before and after." },
+    { text: 'railfit check tells whether the chosen parts still fit, for the stages named or for every saved one. It exits with the worst of its stages: 2 where the question cannot be asked (no such file, no stage, no such part, no part chosen), 4 where one cannot be decided, 1 where one does not fit or was withdrawn, 0 where all fit.' },
   ],
   codes: () => [{ pairs: CODE_PAGES.map(({ code, title }) => [code, title] as const) }, { text: 'railfit help CODE shows one of them.' }],
   cautions: () => [CAUTIONS, { text: 'Not modelled: layout, electromagnetic interference, long-term drift, self-heating. Generic sets are invented classes of parts, not something to order.' }],

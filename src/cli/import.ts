@@ -1,22 +1,28 @@
 import { writeFileSync } from 'node:fs';
 import { readFile } from 'node:fs/promises';
 import { basename } from 'node:path';
-import { importJson, problemsCsv, renderImport, renderProblems, type ImportReport } from '../index.js';
-import type { Catalog } from '../catalog/index.js';
+import { importJson, problemsCsv, renderDifference, renderImport, renderProblems, type ImportReport } from '../index.js';
+import type { Catalog, GuardName } from '../catalog/index.js';
 import type { Problem } from '../quantities/problem.js';
-import { fieldChanges } from '../intake/part-fields.js';
-import { readList } from '../intake/read-list.js';
 import type { ReadList, RefusedList } from '../intake/list.js';
 import { withCatalog } from './catalog-file.js';
 import { EXIT } from './exit-code.js';
+import { differenceOf } from './import-difference.js';
+import { guardProblems } from './import-guards.js';
+import type { ReadingOptions } from './import-options.js';
+import { importWatched } from './import-watched.js';
+import { watchingStages } from './kept-stages.js';
+import { keepMapping, mappingText, readApproved, tellReading } from './read-approved.js';
 import { commandProblem, RequestError } from './request-error.js';
-import { styleFor, type CommonOptions, type Outcome, type Session } from './session.js';
+import { styleFor, type Outcome, type Session } from './session.js';
 import { unreadable } from './stage-input.js';
 import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
-export interface ImportCommandOptions extends CommonOptions {
+export interface ImportCommandOptions extends ReadingOptions {
   readonly dryRun?: boolean;
   readonly undo?: boolean;
+  /** Guards that are accepted by name. */
+  readonly accept?: readonly GuardName[];
   /** File that gets one line per problem. */
   readonly errors?: string;
 }
@@ -26,11 +32,16 @@ export async function runImport(session: Session, file: string | undefined, opti
   if (options.undo === true) return withCatalog(session, options, (catalog) => said(undone(catalog), session, options));
   if (file === undefined) throw new RequestError([commandProblem('C102', 'import: no FILE', { fix: 'railfit import approved.csv' })], EXIT.request);
   const bytes = await bytesOf(file);
-  return withCatalog(session, options, (catalog) => {
-    const list = readList(bytes, { file: file === STDIN ? STDIN_NAME : basename(file), tier: 'approved', genericIds: catalog.genericIds(), classes: catalog.classes() });
+  return withCatalog(session, options, async (catalog) => {
+    const list = await readApproved({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, catalog, { session, options });
+    if (options.showMapping === true && list.ok) return { text: mappingText(list) ?? '', exit: EXIT.yes };
+    tellReading(list, session, options);
     // Before the import: when the file cannot be written, nothing has been done.
     if (options.errors !== undefined) writeProblems(options.errors, list.ok ? list.warnings : list.problems);
-    return said(list.ok ? imported(catalog, list, options) : refused(list), session, options);
+    const report = list.ok ? await imported(catalog, list, { session, options }) : refused(list);
+    const isIn = list.ok && (report.outcome === 'imported' || report.outcome === 'no-change');
+    const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
+    return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
   });
 }
 
@@ -42,10 +53,14 @@ async function bytesOf(file: string): Promise<Uint8Array> {
   }
 }
 
-function imported(catalog: Catalog, list: ReadList, options: ImportCommandOptions): ImportReport {
-  const { outcome, counts, changed, removed } = catalog.importList(list, { dryRun: options.dryRun === true });
-  const changes = changed.flatMap(({ before, after }) => fieldChanges(before, after).map((change) => ({ part: after.id, ...change })));
-  return { outcome, file: list.file, sha256: list.sha256, counts, problems: list.warnings, changes, withdrawn: removed };
+async function imported(catalog: Catalog, list: ReadList, { session, options }: { session: Session; options: ImportCommandOptions }): Promise<ImportReport> {
+  const accepted = new Set(options.accept ?? []);
+  const { result, stages } = await importWatched(catalog, list, { session, accept: accepted, dryRun: options.dryRun === true });
+  const { outcome, counts } = result;
+  const report = { file: list.file, counts, problems: [...list.warnings, ...guardProblems({ list, result, catalog, accepted })], ...(stages === undefined ? {} : { stages }) };
+  const difference = outcome === 'no-change' ? {} : { difference: differenceOf(list, result, catalog) };
+  if (outcome !== 'held') return { ...report, ...difference, outcome, sha256: list.sha256 };
+  return { ...report, ...difference, outcome: 'refused', sha256: null, held: true };
 }
 
 function refused(list: RefusedList): ImportReport {
@@ -54,9 +69,15 @@ function refused(list: RefusedList): ImportReport {
 }
 
 function undone(catalog: Catalog): ImportReport {
-  const outcome = catalog.undo() ? 'undone' : 'no-change';
-  const rows = catalog.source().parts.filter((part) => part.tier === 'approved').length;
-  return { outcome, file: '', sha256: null, counts: { rows, added: 0, changed: 0, removed: 0, unchanged: rows }, problems: [] };
+  const { result, stages } = watchingStages(catalog, () => catalog.undo(), (did) => (did ? catalog.source() : null));
+  const rows = catalog.approvedCount();
+  const report = { file: '', sha256: null, counts: { rows, added: 0, changed: 0, removed: 0, unchanged: rows }, problems: [], ...(stages === undefined ? {} : { stages }) };
+  return { ...report, outcome: result ? 'undone' : 'no-change' };
+}
+
+/** What stops the list is told before what does not, so that the latter is what is cut. */
+function errorsFirst(problems: readonly Problem[]): readonly Problem[] {
+  return [...problems.filter(({ severity }) => severity === 'error'), ...problems.filter(({ severity }) => severity !== 'error')];
 }
 
 function writeProblems(path: string, problems: readonly Problem[]): void {
@@ -73,6 +94,6 @@ function said(report: ImportReport, session: Session, options: ImportCommandOpti
   const summary = renderImport(report, styleFor(session, options));
   const style = styleFor(session, options, 'stderr');
   const written = options.errors === undefined || report.problems.length === 0 ? {} : { written: options.errors };
-  if (exit === EXIT.data) return { text: '', talk: renderProblems(report.problems, style, { summary: summary.trimEnd(), ...written }), exit };
+  if (exit === EXIT.data) return { text: '', talk: renderDifference(report, style) + renderProblems(errorsFirst(report.problems), style, { summary: summary.trimEnd(), ...written }), exit };
   return { text: summary, exit, ...(report.problems.length === 0 ? {} : { talk: renderProblems(report.problems, style, { summary: '', ...written }) }) };
 }

@@ -1,6 +1,6 @@
 import { CHECK_IDS, partsJson, renderParts, shortlist, suggest, type Part, type PartLine, type Stage, type Tier } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
-import { writeList } from '../intake/write-list.js';
+import { guardedCells, writeList } from '../intake/write-list.js';
 import { withCatalog } from './catalog-file.js';
 import { EXIT } from './exit-code.js';
 import { commandProblem, RequestError, twoForms } from './request-error.js';
@@ -12,6 +12,8 @@ export interface PartsOptions extends CommonOptions {
   /** A check, with the stage it is asked for. */
   readonly failing?: string;
   readonly stage?: string;
+  /** With --csv: no apostrophe before what a spreadsheet would run. */
+  readonly raw?: boolean;
 }
 
 /** `railfit parts [WORD…]`: the catalog, or the parts whose id, class or description has every word. */
@@ -25,16 +27,26 @@ export async function runParts(session: Session, words: readonly string[], optio
     const lines: PartLine[] = source.parts.filter(wanted).map((part) => ({ part, ...(failing === null ? {} : { failing: failing.get(part.id) ?? [] }) }));
     const shown = lines.filter((line) => options.failing === undefined || line.failing?.includes(options.failing) === true);
     const exit = shown.length === 0 ? EXIT.no : EXIT.yes;
-    if (options.csv === true) return { text: writeList(shown.map(({ part }) => part)), exit };
+    if (options.csv === true) return { ...written(shown.map(({ part }) => part), options), exit };
     const list = { total: source.parts.length, parts: shown };
     if (options.json === true) return { text: partsJson(list), exit };
     return { text: renderParts(list, styleFor(session, options)), exit };
   });
 }
 
+/** Canonical CSV, and on stderr how many cells were made safe: whoever reads the file elsewhere must know. */
+function written(parts: readonly Part[], { raw = false }: PartsOptions): Pick<Outcome, 'text' | 'talk'> {
+  const text = writeList(parts, { raw });
+  const guarded = raw ? 0 : guardedCells(parts);
+  if (guarded === 0) return { text };
+  const [cells, start] = guarded === 1 ? ['1 cell', 'starts'] : [`${guarded} cells`, 'start'];
+  return { text, talk: `note: ${cells} ${start} like a formula and got an apostrophe in front; import takes it off again, --raw leaves it out\n` };
+}
+
 async function stageOf(options: PartsOptions): Promise<Stage | null> {
   const { failing, stage } = options;
-  const already = [...twoForms(options), ...(failing === undefined ? [] : failingProblems(failing, stage))];
+  const rawAlone = options.raw === true && options.csv !== true ? [commandProblem('C106', '--raw belongs to --csv', { fix: 'railfit parts --csv --raw', path: '--raw' })] : [];
+  const already = [...twoForms(options), ...rawAlone, ...(failing === undefined ? [] : failingProblems(failing, stage))];
   if (stage !== undefined) return (await readStageOf(stage, { already })).stage;
   if (already.length > 0) throw new RequestError(already, EXIT.request);
   return null;

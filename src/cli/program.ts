@@ -1,11 +1,15 @@
 import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
 import type { JudgingOptions } from './judging-input.js';
+import type { CheckOptions } from './check.js';
 import type { DraftOptions } from './draft.js';
 import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
 import type { StageOptions } from './stage-input.js';
+import type { StagesOptions } from './stages.js';
+import { GUARD_WORDS, guardWord } from './guard-words.js';
 import { onlyOperands, operandsOf } from './operands.js';
+import { withReadingOptions } from './reading-options.js';
 import { VERSION } from './version.js';
 
 /** Commands load their rooms only when they run: start-up stays short. */
@@ -56,6 +60,7 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     .option('--stage <STAGE>', 'a stage to judge them on')
     .option('--failing <CHECK>', 'only parts that fail this check on --stage')
     .option('--csv', 'canonical CSV, as import reads it (approved list unless --tier)')
+    .option('--raw', 'with --csv: cells that start like a formula as they are, without an apostrophe in front')
     .action(async (...received) => {
       const { command, options } = lastOf<PartsOptions>(received);
       deliver(await (await import('./parts.js')).runParts(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
@@ -66,13 +71,28 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
       const { command, options } = lastOf<CommonOptions>(received);
       deliver(await (await import('./part.js')).runPart(session, onlyOperands(command, 1)[0], options));
     });
-  add(program, 'import [FILE]', "read the team's approved list: canonical CSV, all or nothing")
+  withReadingOptions(add(program, 'import [FILE]', "read the team's approved list, all or nothing"))
     .option('-n, --dry-run', 'the same report, nothing is written')
     .option('--undo', 'return to the list before the last import')
+    .option('--accept <WHAT>', `what a guard held back: ${GUARD_WORDS.join(', ')} (again for another)`, guardWord)
     .option('--errors <FILE>', 'one line per faulty cell, for the owner of the list')
     .action(async (...received) => {
       const { command, options } = lastOf<ImportCommandOptions>(received);
       deliver(await (await import('./import.js')).runImport(session, onlyOperands(command, 1)[0], options));
+    });
+  judged(add(program, 'check [STAGES...]', 'do the parts chosen for these stages still fit; without a stage, for every saved one'))
+    .option('--part <ID>', 'this part instead of the chosen ones')
+    .action(async (...received) => {
+      const { command, options } = lastOf<CheckOptions>(received);
+      const { operands, problems } = operandsOf(command, Number.POSITIVE_INFINITY);
+      deliver(await (await import('./check.js')).runCheck(session, operands, { ...options, already: problems }));
+    });
+  add(program, 'stages [ACTION] [FILES...]', "the team's stage files: list, add FILE..., remove FILE...")
+    .option('--part <ID>', 'with add: the part chosen for the stages')
+    .option('--no-part', 'with add: no part is chosen any more')
+    .action(async (...received) => {
+      const { command, options } = lastOf<StagesOptions>(received);
+      deliver(await (await import('./stages.js')).runStages(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
     });
   add(program, 'help [TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
     .action(async (...received) => {
@@ -136,13 +156,19 @@ function staging(command: Command): Command {
     .option('--set <PATH=VALUE>', 'any other field: --set limits.dcError="20 mV"', collect);
 }
 
-function judging(command: Command): Command {
-  return staging(command)
-    .option('--top <N>', 'how many parts to show (20)', count)
-    .option('--all', 'rejected parts too, and passing checks in full')
+/** Options of every command that judges parts. */
+function judged(command: Command): Command {
+  return command
     .option('--strict', 'only limits count: every other figure counts as missing')
     .option('--sources', 'where each figure comes from')
-    .option('--assume <PART.figure=VALUE>', 'a figure for this run only (or =class), carried into the output', collect)
+    .option('--assume <PART.figure=VALUE>', 'a figure for this run only (or =class), carried into the output', collect);
+}
+
+function judging(command: Command): Command {
+  const staged = staging(command)
+    .option('--top <N>', 'how many parts to show (20)', count)
+    .option('--all', 'rejected parts too, and passing checks in full');
+  return judged(staged)
     .addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
 }
 

@@ -1,15 +1,33 @@
 import type { Delimiter, ListColumn, ListRecord } from './list.js';
 
+/** What is settled about the decimal mark: null when each cell is read by itself. */
+export type DecimalRule = 'point' | 'comma' | null;
+
+export interface DecimalMark {
+  readonly mark: 'point' | 'comma';
+  readonly rule: DecimalRule;
+  /** Cells that can be read with this mark only, and with the other only. */
+  readonly proofs: number;
+  readonly against: number;
+  /** The first proof, as written. */
+  readonly sample: string | null;
+  readonly given: boolean;
+}
+
 /**
  * The decimal mark of a whole file. A comma only where the separator is not one and a cell proves it: no grouping ends in one, two
  * or four digits, or starts with 0. A file that also proves a point has no mark of its own, and each cell is read by itself.
  */
-export function decimalMark(delimiter: Delimiter, columns: readonly ListColumn[], rows: readonly ListRecord[]): 'point' | 'comma' {
-  if (delimiter === ',') return 'point';
-  const numeric = columns.filter(({ reading }) => reading.kind === 'figure' || reading.kind === 'price');
-  const proves = (proof: RegExp): boolean => rows.some(({ cells }) => numeric.some(({ number }) => proof.test(cells[number - 1] ?? '')));
-  return proves(COMMA) && !proves(POINT) ? 'comma' : 'point';
+export function decimalMark(delimiter: Delimiter, columns: readonly ListColumn[], { rows, given }: { readonly rows: readonly ListRecord[]; readonly given?: 'point' | 'comma' | undefined }): DecimalMark {
+  const numeric = columns.filter(({ reading }) => NUMERIC.has(reading.kind));
+  const proofs = (proof: RegExp): string[] => rows.flatMap(({ cells }) => numeric.flatMap(({ number }) => (proof.test(cells[number - 1] ?? '') ? [cells[number - 1] ?? ''] : [])));
+  const [commas, points] = [proofs(COMMA), proofs(POINT)];
+  const isComma = given === 'comma' || (given === undefined && delimiter !== ',' && commas.length > 0 && points.length === 0);
+  const [own, other] = isComma ? [commas, points] : [points, commas];
+  return { mark: isComma ? 'comma' : 'point', rule: given ?? (isComma ? 'comma' : null), proofs: own.length, against: other.length, sample: own[0] ?? null, given: given !== undefined };
 }
+
+const NUMERIC: ReadonlySet<string> = new Set(['figure', 'price', 'measured', 'load']);
 
 const COMMA = /(?<![\d.,])(?:0,\d|\d+,(?:\d{1,2}|\d{4,})(?![\d,]))/u;
 const POINT = /(?<![\d.,])(?:0\.\d|\d+\.(?:\d{1,2}|\d{4,})(?![\d.]))/u;

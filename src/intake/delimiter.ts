@@ -35,4 +35,5 @@ export function trialWords({ delimiter, columns, rows, fitting, usual }: Trial):
   return fitting === 0 && usual !== null ? `${start}, rows have ${usual}` : `${start} in ${fitting} of ${rows} rows`;
 }
 
-const NAMES: Readonly<Record<Delimiter, string>> = { ',': 'commas', ';': 'semicolons', '\t': 'tabs' };
+/** How delimiters are called in messages. */
+export const NAMES: Readonly<Record<Delimiter, string>> = { ',': 'commas', ';': 'semicolons', '\t': 'tabs', '|': 'bars' };

@@ -5,8 +5,11 @@ import type { FieldKind } from '../quantities/kinds.js';
 import type { Quantity, ReadingContext } from '../quantities/quantity.js';
 import type { CellFault } from './cell-fault.js';
 import type { ColumnReading } from './header.js';
+import type { DecimalRule } from './decimal-mark.js';
 import { possible } from './possible.js';
+import { spreadsheetDamage } from './spreadsheet-damage.js';
 import { isMissing } from './text-cell.js';
+import { withUnit } from './unit-offer.js';
 
 export type FigureColumn = Extract<ColumnReading, { kind: 'figure' }>;
 
@@ -17,7 +20,7 @@ export type FigureCell =
 const UNKNOWN: FigureCell = { ok: true, value: null, notes: [] };
 
 /** A reader for the cells of one column. Values in a list repeat, so each text is read once. */
-export function figureCellReader(column: FigureColumn, decimal: 'point' | 'comma'): (cell: string) => FigureCell {
+export function figureCellReader(column: FigureColumn, decimal: DecimalRule): (cell: string) => FigureCell {
   const known = new Map<string, FigureCell>();
   return (cell) => {
     const earlier = known.get(cell);
@@ -28,7 +31,7 @@ export function figureCellReader(column: FigureColumn, decimal: 'point' | 'comma
   };
 }
 
-function readFigureCell(cell: string, column: FigureColumn, decimal: 'point' | 'comma'): FigureCell {
+function readFigureCell(cell: string, column: FigureColumn, decimal: DecimalRule): FigureCell {
   if (isMissing(cell)) return UNKNOWN;
   const { field } = PARAMETERS[column.parameter];
   const number = readNumber(cell, field, contextOf(column.unit, decimal));
@@ -40,21 +43,6 @@ function readFigureCell(cell: string, column: FigureColumn, decimal: 'point' | '
   const notes = [number.quantity.note, kept.note];
   return { ok: true, value: kept.value, notes: notes.filter((note) => note !== undefined) };
 }
-
-/** A wrong unit without a fix gets the first that can be read: per volt (`80 µV/V`), the prefix kept (100 mA → `100 mV`), the header's unit. */
-function withUnit(fault: CellFault, cell: string, { parameter, unit }: FigureColumn): CellFault {
-  if (fault.code !== 'Q004' || fault.fix !== undefined) return fault;
-  const { field, headerUnit, unit: si } = PARAMETERS[parameter];
-  const [, number, prefix = ''] = /^([<>≤≥]?\s*[+-]?[\d.]+)\s*([fpnµumkMG](?=\p{L}|Ω))?/u.exec(cell.trim()) ?? [];
-  if (number === undefined) return fault;
-  const kept = prefix !== '' && SIMPLE.has(si) ? [`${number} ${prefix}${si}`] : [];
-  const offers = [...(field === 'ratio' ? [`${cell.trim()}/V`] : []), ...kept, `${number} ${unit ?? headerUnit}`];
-  const fix = offers.find((offer) => parseQuantity(offer, field, {}).ok);
-  return fix === undefined ? fault : { ...fault, fix };
-}
-
-/** Units that take every prefix. */
-const SIMPLE: ReadonlySet<string> = new Set(['V', 'A', 'Hz', 'Ω', 'F']);
 
 export type NumberCell =
   | { readonly ok: true; readonly value: number; readonly end: 'min' | 'max' | null; readonly quantity: Quantity }
@@ -76,11 +64,13 @@ export function readNumber(cell: string, field: FieldKind, context: ReadingConte
   return { ok: true, value, end, quantity: result.quantity };
 }
 
-export function contextOf(unit: string | null, decimal: 'point' | 'comma'): ReadingContext {
-  return { ...(unit === null ? {} : { headerUnit: unit }), ...(decimal === 'comma' ? { decimal } : {}) };
+export function contextOf(unit: string | null, decimal: DecimalRule): ReadingContext {
+  return { ...(unit === null ? {} : { headerUnit: unit }), ...(decimal === null ? {} : { decimal }) };
 }
 
-function wordFault(cell: string, field: FieldKind): CellFault {
+export function wordFault(cell: string, field: FieldKind): CellFault {
+  const damage = spreadsheetDamage(cell);
+  if (damage !== null) return damage;
   const kind = field.replace('_', ' ');
   return {
     code: 'I502',

@@ -1,29 +1,14 @@
-import type { Condition, LimitKind, Parameter } from '../parts/figures.js';
+import type { LimitKind, Parameter } from '../parts/figures.js';
 import { PARAMETERS } from '../parts/figures.js';
 import { parseQuantity } from '../quantities/parse.js';
 import { suggest } from '../quantities/suggest.js';
 import { canonicalHeader, foldWords } from './canonical-header.js';
 import { readCondition } from './condition.js';
 import { allHeaderWords, figureWords, IDENTITY_WORDS, STATEMENT_WORDS } from './header-words.js';
-import type { IdentityField, Statement } from './header-words.js';
+import type { ColumnReading, HeaderReading } from './column-reading.js';
 import { readHeaderUnit } from './header-unit.js';
 
-export type ColumnReading =
-  | { readonly kind: 'identity'; readonly field: IdentityField }
-  | {
-      readonly kind: 'figure';
-      readonly parameter: Parameter;
-      readonly limit: LimitKind;
-      /** As written in the header; null when each cell must bring its own. */
-      readonly unit: string | null;
-      readonly condition: Condition;
-    }
-  | { readonly kind: 'price'; readonly currency: string | null; readonly quantity: number | null }
-  | { readonly kind: 'statement'; readonly statement: Statement }
-  /** Not a column railfit knows: kept in the raw record. */
-  | { readonly kind: 'text'; readonly suggestion?: string };
-
-export type HeaderReading = ColumnReading | { readonly kind: 'problem'; readonly reason: string; readonly fix?: string };
+export type { ColumnReading, HeaderReading } from './column-reading.js';
 
 /** Reads one header of the canonical CSV. Case, spaces and hyphens of the words do not matter. */
 export function readHeader(text: string): HeaderReading {

@@ -1,13 +1,19 @@
-import { foldId, suggest } from '../quantities/suggest.js';
+import { foldId } from '../quantities/suggest.js';
+import { suggest } from '../quantities/suggest.js';
 import type { Part } from '../parts/part.js';
 import type { CellFault } from './cell-fault.js';
 import { columnLetter } from './column-letter.js';
-import type { ListOptions, ListRecord } from './list.js';
+import { idHabits } from './id-habits.js';
+import type { ListColumn, ListOptions, ListRecord } from './list.js';
 
-/** A part with the record it was read from. */
+/** A part with the record it was read from, and the column each figure came from: `sources[i]` is that of `part.figures[i]`, null where the owner of the list declared it. */
 export interface ReadPart {
   readonly part: Part;
   readonly record: ListRecord;
+  readonly sources: readonly (ListColumn | null)[];
+  readonly railOutputs: ListColumn | null;
+  /** What was wrong with its cells. */
+  readonly faults: readonly { readonly column: ListColumn; readonly fault: CellFault }[];
 }
 
 export interface IdentityFault {
@@ -25,13 +31,18 @@ export interface Identities {
 }
 
 /** Compares the ids of a list with each other and with the generic sets. Parts without a readable id take no part in it. */
-export function checkIdentities(read: readonly ReadPart[], options: ListOptions): Identities {
+export function checkIdentities(read: readonly ReadPart[], options: ListOptions, idColumn: number): Identities {
   const seen = new Map<string, ReadPart>();
   const faults: IdentityFault[] = [];
+  const habits = idHabits(read.map(({ part }) => part.id));
+  const add = ({ record, part }: ReadPart, found: Found): void => void faults.push({ record, part: part.id, ...found });
   const kept = read.filter((one) => {
-    const { fault, repeated } = compareIds(one, seen);
-    const all = [fault, reserved(one.part, options), unknownClass(one.part, options.classes)];
-    for (const found of all) if (found !== null) faults.push({ record: one.record, part: one.part.id, ...found });
+    const { at, fault, repeated, twin } = compareIds(one, seen, (other) => oddness(other, { idColumn, habits }));
+    if (fault !== null) add(at ?? one, fault);
+    const habit = repeated || twin ? null : habits.fault(one.part.id);
+    if (habit !== null) add(one, { field: 'id', severity: 'warning', fault: habit });
+    const all = [reserved(one.part, options), unknownClass(one.part, options.classes)];
+    for (const found of all) if (found !== null) add(one, found);
     return !repeated;
   });
   return { kept, faults };
@@ -39,16 +50,33 @@ export function checkIdentities(read: readonly ReadPart[], options: ListOptions)
 
 type Found = Pick<IdentityFault, 'field' | 'fault' | 'severity'>;
 
-function compareIds(one: ReadPart, seen: Map<string, ReadPart>): { fault: Found | null; repeated: boolean } {
+interface Compared {
+  readonly fault: Found | null;
+  /** Where the fault is told, when not at this row. */
+  readonly at?: ReadPart;
+  readonly repeated: boolean;
+  /** Told with its twin already. */
+  readonly twin: boolean;
+}
+
+/** How far an id is written from the habits of its list: stray blanks, another case. */
+function oddness({ part: { id }, record }: ReadPart, { idColumn, habits }: { idColumn: number; habits: ReturnType<typeof idHabits> }): number {
+  const cell = record.cells[idColumn - 1] ?? '';
+  return (cell === cell.trim() ? 0 : 1) + (habits.isOtherCase(id) ? 2 : 0);
+}
+
+function compareIds(one: ReadPart, seen: Map<string, ReadPart>, odd: (part: ReadPart) => number): Compared {
   const { id } = one.part;
   const key = foldId(id.replace(/\s+/gu, ''));
   const earlier = id === '' ? undefined : seen.get(key);
   if (earlier === undefined) {
     if (id !== '') seen.set(key, one);
-    return { fault: null, repeated: false };
+    return { fault: null, repeated: false, twin: false };
   }
-  if (earlier.part.id === id) return sameId(one, earlier);
-  return { fault: sameLetters(earlier.part.id, id) ? clash(id, earlier) : lookAlike(id, earlier), repeated: false };
+  if (earlier.part.id === id) return { ...sameId(one, earlier), twin: false };
+  if (!sameLetters(earlier.part.id, id)) return { fault: lookAlike(id, earlier), repeated: false, twin: true };
+  const [wrong, right] = odd(earlier) > odd(one) ? [earlier, one] : [one, earlier];
+  return { fault: clash(wrong, right), at: wrong, repeated: false, twin: true };
 }
 
 function sameLetters(a: string, b: string): boolean {
@@ -56,7 +84,7 @@ function sameLetters(a: string, b: string): boolean {
   return plain(a) === plain(b);
 }
 
-function sameId(one: ReadPart, earlier: ReadPart): { fault: Found; repeated: boolean } {
+function sameId(one: ReadPart, earlier: ReadPart): Pick<Compared, 'fault' | 'repeated'> {
   const differing = one.record.cells.flatMap((cell, index) => {
     const other = earlier.record.cells[index] ?? '';
     return cell.trim() === other.trim() ? [] : [`${columnLetter(index + 1)} (${quoted(other)}, then ${quoted(cell)})`];
@@ -66,15 +94,15 @@ function sameId(one: ReadPart, earlier: ReadPart): { fault: Found; repeated: boo
     const reason = `${one.part.id} is also in row ${row} and differs in ${differing.slice(0, 6).join(', ')}`;
     return { fault: error('I402', reason, 'keep one of the two rows'), repeated: true };
   }
-  const fault = { code: 'I401', reason: `identical to row ${row}; kept once`, fix: `delete row ${one.record.row}` };
+  const fault = { code: 'I401', reason: `identical to row ${row} in all ${one.record.cells.length} columns; kept once`, fix: `delete row ${one.record.row}` };
   return { fault: { field: 'id', severity: 'warning', fault }, repeated: true };
 }
 
 /** A cell in quotes, so that commas inside it do not run into the list. */
 const quoted = (cell: string): string => `"${cell.trim()}"`;
 
-function clash(id: string, earlier: ReadPart): Found {
-  return error('I403', `${id} is ${earlier.part.id} of row ${earlier.record.row} apart from case or spaces`, earlier.part.id);
+function clash(wrong: ReadPart, right: ReadPart): Found {
+  return error('I403', `${wrong.part.id} is ${right.part.id} of row ${right.record.row} apart from case or spaces`, right.part.id);
 }
 
 function lookAlike(id: string, earlier: ReadPart): Found {

@@ -1,6 +1,12 @@
-import type { Part, Tier } from '../parts/part.js';
+import type { Part, Status, Tier } from '../parts/part.js';
 import type { Problem } from '../quantities/problem.js';
-import type { ColumnReading } from './header.js';
+import type { ColumnReading } from './column-reading.js';
+import type { ClassProposal } from './class-proposal.js';
+import type { Declarations } from './declarations.js';
+import type { Layout } from './layout.js';
+import type { Encoding } from './limits.js';
+import type { ListSources } from './list-sources.js';
+import type { ListMapping } from './mapping.js';
 
 /** One column of a list as it was read: what its cells mean and where they stand. */
 export interface ListColumn {
@@ -32,12 +38,20 @@ export interface ReadList {
   readonly columns: readonly ListColumn[];
   /** `records[i]` is the record of `parts[i]`. */
   readonly records: readonly ListRecord[];
+  /** Where figures stand that no header names. */
+  readonly sources: ListSources;
   /** SHA-256 over the bytes of the file, hexadecimal. */
   readonly sha256: string;
   readonly delimiter: Delimiter;
   /** `comma` when a cell of the file proves it. */
   readonly decimal: 'point' | 'comma';
   readonly warnings: readonly Problem[];
+  /** How the file was taken apart and what its columns were taken for, in sentences; nothing that needs an act. */
+  readonly notes: readonly string[];
+  /** How the list was read, to be kept and reused; null for the canonical CSV, which needs none. */
+  readonly mapping: ListMapping | null;
+  /** Classes the figures of parts without one are near to; not applied. */
+  readonly proposals: readonly ClassProposal[];
 }
 
 /** A list that was refused whole: every fault, in file order. */
@@ -48,6 +62,26 @@ export interface RefusedList {
   readonly counts: RefusedCounts;
   /** How the file was taken apart; null when it could not even be decoded. */
   readonly shape: ListShape | null;
+  readonly notes: readonly string[];
+  /** What a person can answer; without an answer each is one of the problems. */
+  readonly questions: readonly ListQuestion[];
+}
+
+/** One thing only the owner of the list knows, and the answers there are. */
+export interface ListQuestion {
+  readonly words: string;
+  /** Cells the question is about, as written: at most three. */
+  readonly samples: readonly string[];
+  readonly choices: readonly { readonly words: string; readonly answer: ListAnswer }[];
+}
+
+/** An answer as the options carry it. */
+export type ListAnswer = Pick<ListOptions, 'map' | 'layout' | 'delimiter' | 'words'>;
+
+/** A column, by letter or header, and the header it is read as; `text` keeps it unread. */
+export interface ColumnAnswer {
+  readonly column: string;
+  readonly header: string;
 }
 
 export interface ListShape {
@@ -77,9 +111,31 @@ export interface ListOptions {
   readonly genericIds?: ReadonlySet<string>;
   /** Classes of the generic sets; another `class` is warned of. Not judged when absent. */
   readonly classes?: ReadonlySet<string>;
+  /** Answers of the user; each wins over what the file and a mapping say. */
+  readonly encoding?: Encoding;
+  readonly delimiter?: Delimiter;
+  readonly decimal?: 'point' | 'comma';
+  readonly layout?: Layout;
+  readonly map?: readonly ColumnAnswer[];
+  /** Own words of the status column, folded. */
+  readonly words?: ReadonlyMap<string, Status>;
+  /** Own words for "not known". */
+  readonly missing?: readonly string[];
+  readonly declare?: Declarations;
+  /** Lifts the limits of size and number. */
+  readonly large?: boolean;
+  /** Saved mappings, to be looked for the one of this list. */
+  readonly mappings?: readonly ListMapping[];
+  /** The approved part in force with this id, to see whether a changed unit changed the figures; null when there is none. */
+  readonly previous?: (id: string) => Part | null;
+  /** The generic sets, to propose classes from; with `classWithin` those nearer than that are applied. */
+  readonly generic?: readonly Part[];
+  readonly classWithin?: number;
+  /** Told how many records have been read; called often. */
+  readonly progress?: (done: number, total: number) => void;
 }
 
-export type Delimiter = ',' | ';' | '\t';
+export const DELIMITERS = [',', ';', '\t', '|'] as const;
+export type Delimiter = (typeof DELIMITERS)[number];
 
-/** Over one of these a list is refused, naming the limit. */
-export const LIMITS = { bytes: 64 * 1024 * 1024, records: 200_000, columns: 512, cell: 64 * 1024, problems: 10_000 } as const;
+export { LIMITS } from './limits.js';

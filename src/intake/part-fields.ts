@@ -27,7 +27,7 @@ function fieldsOf(part: Part): Map<string, string> {
   return new Map([
     ...words.flatMap(([field, value]): [string, string][] => (value === null ? [] : [[field, wordOf(value)]])),
     ...(price === null ? [] : [['price', `${price.amount} ${price.currency}${price.quantity === null ? '' : ` @ ${price.quantity}`}`] as const]),
-    ...part.figures.map(({ parameter, kind, value, condition }) => [canonicalHeader(parameter, kind, condition), figureText(parameter, value)] as const),
+    ...part.figures.map(({ parameter, kind, value, condition, assumed }) => [canonicalHeader(parameter, kind, condition), `${figureText(parameter, value)}${assumed === true ? ' (assumed)' : ''}`] as const),
   ]);
 }
 

@@ -1,4 +1,5 @@
 import type { CellFault } from './cell-fault.js';
+import { spreadsheetDamage } from './spreadsheet-damage.js';
 import { readText } from './text-cell.js';
 
 /** Reads the id of a part: text end to end (`0012` stays `0012`), trimmed, in Unicode NFC. */
@@ -8,6 +9,8 @@ export function readPartId(draft: { id: string }, cell: string, report: (fault: 
   const bad = INVISIBLE.exec(text)?.[0];
   if (bad !== undefined) return report(invisible(text, bad), 'error');
   draft.id = text;
+  const damage = spreadsheetDamage(text);
+  if (damage !== null) report(damage, 'error');
 }
 
 // Control characters, zero-width characters and marks that change the writing direction.

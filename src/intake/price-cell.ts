@@ -1,4 +1,5 @@
 import type { Price } from '../parts/part.js';
+import type { DecimalRule } from './decimal-mark.js';
 import type { CellFault } from './cell-fault.js';
 import { contextOf, readNumber } from './figure-cell.js';
 import type { ColumnReading } from './header.js';
@@ -6,7 +7,7 @@ import type { CellReader } from './part-draft.js';
 import { isMissing } from './text-cell.js';
 
 /** A reader for one price column: an amount in the currency of the header, or of the cell. */
-export function priceCell(column: Extract<ColumnReading, { kind: 'price' }>, decimal: 'point' | 'comma'): CellReader {
+export function priceCell(column: Extract<ColumnReading, { kind: 'price' }>, decimal: DecimalRule): CellReader {
   const context = contextOf(column.currency, decimal);
   return (draft, cell, report) => {
     if (isMissing(cell)) return;

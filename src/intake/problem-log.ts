@@ -1,5 +1,5 @@
 import type { Problem } from '../quantities/problem.js';
-import type { ListShape, RefusedList } from './list.js';
+import type { ListQuestion, ListShape, RefusedList } from './list.js';
 import { LIMITS } from './list.js';
 
 /** A problem of the whole file. */
@@ -14,8 +14,13 @@ export interface FileFault {
 export class ProblemLog {
   readonly file: string;
   rows = 0;
+  /** Row of the header, once it is found: what is wrong there is wrong in no part. */
+  headerRow = 0;
   errors = 0;
   shape: ListShape | null = null;
+  /** Sentences that need no act. */
+  readonly notes: string[] = [];
+  readonly questions: ListQuestion[] = [];
   readonly #problems: Problem[] = [];
   readonly #cells = new Set<string>();
   readonly #rows = new Set<number>();
@@ -44,7 +49,7 @@ export class ProblemLog {
 
   refused(): RefusedList {
     const counts = { rows: this.rows, errors: this.errors, cells: this.#cells.size, parts: this.#rows.size };
-    return { ok: false, file: this.file, problems: this.list(), counts, shape: this.shape };
+    return { ok: false, file: this.file, problems: this.list(), counts, shape: this.shape, notes: this.notes, questions: this.questions };
   }
 
   refuse({ code, message, fix, line }: FileFault): RefusedList {
@@ -55,7 +60,7 @@ export class ProblemLog {
   #count({ place }: Problem): void {
     this.errors += 1;
     if (place?.row === undefined) return;
-    this.#rows.add(place.row);
+    if (place.row > this.headerRow) this.#rows.add(place.row);
     if (place.column !== undefined) this.#cells.add(`${place.row},${place.column}`);
   }
 

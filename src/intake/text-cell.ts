@@ -1,5 +1,7 @@
+import { MISSING_WORDS } from './vocabulary.js';
+
 // What a list writes where nothing is known. Compared without case; an own word goes to the list owner as an error.
-const MISSING: ReadonlySet<string> = new Set(['', '-', '–', 'n/a', 'n.a.', 'na', '#n/a', 'null', 'tbd', '?']);
+const MISSING: ReadonlySet<string> = new Set(MISSING_WORDS);
 
 /** The text of a cell, or null where it says that nothing is known. Removes the mark `guardCell` put in front. */
 export function readText(cell: string): string | null {
@@ -29,4 +31,9 @@ const GUARDED = /^'+[=+\-@\t\r\n＝＋－＠]/u;
 
 function unguard(text: string): string {
   return GUARDED.test(text) ? text.slice(1) : text;
+}
+
+/** True for a cell that holds one of a list's own words for "not known". */
+export function missingIn(cell: string, own: readonly string[] | undefined): boolean {
+  return isMissing(cell) || (own ?? []).some((word) => word.trim().toLowerCase() === cell.trim().toLowerCase());
 }

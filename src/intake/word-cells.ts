@@ -1,5 +1,7 @@
 import type { CellReader, Draft } from './part-draft.js';
 import type { Statement } from './header-words.js';
+import type { Status } from '../parts/part.js';
+import { foldPhrase } from './header-parts.js';
 import { isMissing } from './text-cell.js';
 import type { WordResult } from './words.js';
 import { readInputType, readLifecycle, readStatus, readYesNo } from './words.js';
@@ -9,12 +11,25 @@ type WordField = 'status' | 'lifecycle' | 'phaseReversal' | 'inputClamp' | 'inpu
 export const statusCell: CellReader = wordCell('status', readStatus);
 export const lifecycleCell: CellReader = wordCell('lifecycle', readLifecycle);
 
-/** Where the column exists, an approved part must have a status. */
-export const requiredStatusCell: CellReader = (draft, cell, report) => {
-  if (!isMissing(cell)) return statusCell(draft, cell, report);
-  const reason = 'status is required in an approved list: without it the part can be neither offered nor excluded';
-  return report({ code: 'I501', reason, fix: 'one of approved, conditional, restricted, not-approved' }, 'error');
-};
+/**
+ * Where the column exists, an approved part must have a status. `words` are the list's own (`Preferred` is approved). A lifecycle
+ * word in it is kept as lifecycle: status and lifecycle are different things, and which was meant is asked.
+ */
+export function requiredStatusCell(words: ReadonlyMap<string, Status>): CellReader {
+  return (draft, cell, report) => {
+    if (isMissing(cell)) return report({ code: 'I501', reason: NO_STATUS, fix: 'one of approved, conditional, restricted, not-approved' }, 'error');
+    const own = words.get(foldPhrase(cell));
+    if (own !== undefined) return void (draft.status = own);
+    const status = readStatus(cell);
+    if (status.ok) return void (draft.status = status.word);
+    const lifecycle = readLifecycle(cell);
+    if (!lifecycle.ok) return report({ ...status.fault, fix: status.fault.fix?.startsWith('one of') === true ? `${status.fault.fix}, or --word "${cell.trim()}=approved"` : status.fault.fix ?? '' }, 'error');
+    draft.lifecycle ??= lifecycle.word;
+    report({ code: 'I519', reason: `${cell.trim()} is a lifecycle word in a status column: kept as lifecycle, and the part has no approval`, fix: 'a status, and the lifecycle in a column of its own' }, 'warning');
+  };
+}
+
+const NO_STATUS = 'status is required in an approved list: without it the part can be neither offered nor excluded';
 
 export const STATEMENT_CELLS: Readonly<Record<Statement, CellReader>> = {
   phaseReversal: wordCell('phaseReversal', readYesNo),

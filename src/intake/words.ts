@@ -2,6 +2,8 @@ import type { InputType, Lifecycle, Status } from '../parts/part.js';
 import { LIFECYCLES, STATUSES } from '../parts/part.js';
 import { suggest } from '../quantities/suggest.js';
 import { foldWords } from './canonical-header.js';
+import { foldPhrase } from './header-parts.js';
+import { LIFECYCLE_TERMS } from './vocabulary.js';
 import type { CellFault } from './cell-fault.js';
 
 export type WordResult<Word> = { readonly ok: true; readonly word: Word } | { readonly ok: false; readonly fault: CellFault };
@@ -10,7 +12,13 @@ export type WordResult<Word> = { readonly ok: true; readonly word: Word } | { re
 type WordReader<Word> = (text: string) => WordResult<Word>;
 
 export const readStatus: WordReader<Status> = reader('I501', 'a status', STATUSES);
-export const readLifecycle: WordReader<Lifecycle> = reader('I509', 'a lifecycle', LIFECYCLES);
+const plainLifecycle: WordReader<Lifecycle> = reader('I509', 'a lifecycle', LIFECYCLES);
+
+/** A lifecycle in the canonical word or another of the trade's (`Not recommended for new designs`). */
+export function readLifecycle(text: string): WordResult<Lifecycle> {
+  const known = LIFECYCLE_TERMS[foldPhrase(text)];
+  return known === undefined ? plainLifecycle(text) : { ok: true, word: known };
+}
 export const readInputType: WordReader<InputType> = reader('I503', 'an input type', ['fet', 'bipolar']);
 
 export function readYesNo(text: string): WordResult<boolean> {

@@ -9,25 +9,47 @@ import type { Statement } from './header-words.js';
 import { IDENTITY_FIELDS, STATEMENTS } from './header-words.js';
 import { guardCell } from './text-cell.js';
 
+export interface WriteOptions {
+  /** Cells that a spreadsheet would run are left as they are. */
+  readonly raw?: boolean;
+}
+
 /**
  * The parts as canonical CSV (RFC 4180: CR LF, quotes where needed) that `readList` reads back with identical figures.
  * Only columns that hold something, always in the same order; parts in the order given.
  */
-export function writeList(parts: readonly Part[]): string {
-  const columns = [...identityColumns(parts), ...priceColumns(parts), ...statementColumns(parts), ...figureColumns(parts)];
-  const rows = parts.map((part) => columns.map(({ cell }) => cell(part)));
-  return [columns.map(({ header }) => header), ...rows].map((cells) => `${cells.map(quote).join(',')}\r\n`).join('');
+export function writeList(parts: readonly Part[], { raw = false }: WriteOptions = {}): string {
+  const columns = [...identityColumns(parts, raw), ...priceColumns(parts), ...statementColumns(parts), ...figureColumns(parts)];
+  const header = lineOf(columns.map((column) => column.header));
+  return header + parts.map((part) => rowOf(part, columns)).join('');
+}
+
+/** How many cells `writeList` keeps a spreadsheet from running. */
+export function guardedCells(parts: readonly Part[]): number {
+  const cells = parts.flatMap((part) => IDENTITY_FIELDS.map((field) => String(part[field] ?? '')));
+  return cells.filter((cell) => guardCell(cell) !== cell).length;
 }
 
 interface OutputColumn {
   readonly header: string;
-  readonly cell: (part: Part) => string;
+  /** `values` are the figures of the part by slot. */
+  readonly cell: (part: Part, values: ReadonlyMap<string, number>) => string;
 }
 
-function identityColumns(parts: readonly Part[]): OutputColumn[] {
+function rowOf(part: Part, columns: readonly OutputColumn[]): string {
+  const values = new Map(printed(part).map((figure) => [figureSlot(figure), figure.value]));
+  return lineOf(columns.map(({ cell }) => cell(part, values)));
+}
+
+function lineOf(cells: readonly string[]): string {
+  return `${cells.map(quote).join(',')}\r\n`;
+}
+
+function identityColumns(parts: readonly Part[], raw: boolean): OutputColumn[] {
+  const written = raw ? (text: string): string => text : guardCell;
   return IDENTITY_FIELDS.filter((field) => field === 'id' || parts.some((part) => part[field] !== null)).map((field) => ({
     header: field,
-    cell: (part) => guardCell(String(part[field] ?? '')),
+    cell: (part) => written(String(part[field] ?? '')),
   }));
 }
 
@@ -56,17 +78,18 @@ function statementText(value: boolean | string | null): string {
 
 function figureColumns(parts: readonly Part[]): OutputColumn[] {
   const slots = new Map<string, Figure>();
-  for (const { figures } of parts) for (const figure of figures) slots.set(figureSlot(figure), figure);
-  const values = new Map(parts.map((part) => [part, new Map(part.figures.map((figure) => [figureSlot(figure), figure.value]))]));
-  return [...slots.values()].sort(compareFigures).map((figure) => {
-    const slot = figureSlot(figure);
-    const cell = (part: Part): string => {
-      const value = values.get(part)?.get(slot);
+  for (const part of parts) for (const figure of printed(part)) slots.set(figureSlot(figure), figure);
+  return [...slots].sort(([, a], [, b]) => compareFigures(a, b)).map(([slot, figure]) => ({
+    header: canonicalHeader(figure.parameter, figure.kind, figure.condition),
+    cell: (_, values) => {
+      const value = values.get(slot);
       return value === undefined ? '' : figureText(figure.parameter, value);
-    };
-    return { header: canonicalHeader(figure.parameter, figure.kind, figure.condition), cell };
-  });
+    },
+  }));
 }
+
+/** The canonical CSV has no word for an assumed figure, and without it one would come back as printed. */
+const printed = ({ figures }: Part): readonly Figure[] => figures.filter(({ assumed }) => assumed !== true);
 
 function quote(cell: string): string {
   return /[",\r\n]/u.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;

@@ -83,7 +83,7 @@ export interface Figure {
   readonly kind: LimitKind;
   readonly value: number;
   readonly condition: Condition;
-  /** Present only on a figure the user assumed for this run (`--assume`), never stored. */
+  /** Present only on a figure nobody printed: assumed for this run (`--assume`), or read from words, declared for a whole list or lent by a class. */
   readonly assumed?: true;
 }
 

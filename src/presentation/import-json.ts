@@ -1,4 +1,6 @@
 import type { Problem } from '../quantities/problem.js';
+import type { ListDifference } from './import-difference.js';
+import type { StageChange } from './import-stages.js';
 import { document } from './json.js';
 import { problemJson } from './problem-json.js';
 
@@ -10,27 +12,32 @@ export interface ImportCounts {
   readonly unchanged: number;
 }
 
-/** A field of a part that another list says differently: canonical header and cells; null where a list says nothing. */
-export interface PartChange {
-  readonly part: string;
-  readonly field: string;
-  readonly was: string | null;
-  readonly now: string | null;
-}
-
 export interface ImportReport {
   readonly outcome: 'imported' | 'no-change' | 'refused' | 'dry-run' | 'undone';
   readonly file: string;
   readonly sha256: string | null;
   readonly counts: ImportCounts;
   readonly problems: readonly Problem[];
-  /** For the text only: what changed, and the ids withdrawn. */
-  readonly changes?: readonly PartChange[];
-  readonly withdrawn?: readonly string[];
-  /** Only when refused: how many cells of how many parts stand in the way. */
+  /** Against the list before; only when the two were compared. */
+  readonly difference?: ListDifference;
+  /** Saved stages before and after; only when there are some and the list was compared. */
+  readonly stages?: readonly StageChange[];
+  /** Only when refused by a guard: the list reads, but changes more than it may without a word. */
+  readonly held?: true;
+  /** Only when refused for its cells: how many cells of how many parts stand in the way. */
   readonly refused?: { readonly cells: number; readonly parts: number };
 }
 
-export function importJson({ problems, changes: _changes, withdrawn: _withdrawn, ...report }: ImportReport): string {
-  return document('import', { ...report, problems: problems.map(problemJson) });
+export function importJson({ outcome, file, sha256, counts, problems, difference, stages, held, refused }: ImportReport): string {
+  return document('import', {
+    outcome,
+    file,
+    sha256,
+    counts,
+    ...(refused === undefined ? {} : { refused }),
+    ...(held === undefined ? {} : { held }),
+    problems: problems.map(problemJson),
+    ...(difference === undefined ? {} : { difference }),
+    ...(stages === undefined ? {} : { stages }),
+  });
 }

@@ -1,23 +1,40 @@
-import type { ImportReport, PartChange } from './import-json.js';
+import { differenceLines } from './import-difference.js';
+import type { ImportReport } from './import-json.js';
+import { stageChangeLines } from './import-stages.js';
 import { safeText } from './safe-text.js';
 import { GLUE, spelled } from './spelling.js';
 import type { Style } from './style.js';
 
 /** What an import did, or why it did nothing; the faults themselves are listed apart. */
 export function renderImport(report: ImportReport, style: Style): string {
-  const lines = linesOf(report).map((line) => spelled(safeText(line), style));
-  return `${lines.flatMap((line) => wrapped(line, style.width)).join('\n')}\n`;
+  return written(linesOf(report), style);
+}
+
+/** What a list that was refused would have changed; empty when it was not compared. */
+export function renderDifference(report: ImportReport, style: Style): string {
+  if (report.difference === undefined) return '';
+  const { file, counts } = report;
+  return `${written([`${file}: ${plural(counts.rows, 'part')}; ${tally(counts)}.`, ...namedLines(report)], style)}\n`;
+}
+
+function namedLines({ difference, counts, stages = [] }: ImportReport): string[] {
+  return [...(difference === undefined ? [] : differenceLines(difference, counts)), ...stageChangeLines(stages)];
+}
+
+function written(lines: readonly string[], style: Style): string {
+  const shown = lines.map((line) => spelled(safeText(line), style));
+  return `${shown.flatMap((line) => wrapped(line, style.width)).join('\n')}\n`;
 }
 
 function linesOf(report: ImportReport): string[] {
   const { file, counts, sha256 } = report;
   const hash = sha256 === null ? '' : ` (sha256 ${sha256.slice(0, 8)})`;
   if (report.outcome === 'refused') return [refusal(report)];
-  if (report.outcome === 'undone') return [`The list before the last import is in force again: ${plural(counts.rows, 'part')}.`];
+  if (report.outcome === 'undone') return [`The list before the last import is in force again: ${plural(counts.rows, 'part')}.`, ...stageChangeLines(report.stages ?? [])];
   if (report.outcome === 'no-change') {
     return file === '' ? ['Nothing to take back: no list was imported before. Nothing was changed.'] : [`${file}${hash}: no change. ${plural(counts.rows, 'part')}, as imported before.`];
   }
-  const named = [...changeLines(report.changes ?? []), ...withdrawnLines(report.withdrawn ?? [])];
+  const named = namedLines(report);
   if (report.outcome === 'dry-run') return [`${file}${hash}: ${plural(counts.rows, 'part')}; ${tally(counts)}.`, ...named, 'Dry run: nothing was written. Run again without --dry-run to import.'];
   return [`Imported ${plural(counts.rows, 'part')} from ${file}${hash}: ${tally(counts)}.`, ...named, 'Next  railfit shortlist STAGE     railfit parts --tier approved     railfit import --undo'];
 }
@@ -28,34 +45,29 @@ function tally({ added, changed, removed, unchanged }: ImportReport['counts']): 
   return all.filter(([count]) => count > 0).map(([count, word]) => `${count} ${word}`).join(', ');
 }
 
-const NAMED = 10;
-
-function changeLines(changes: readonly PartChange[]): string[] {
-  const lines = changes.slice(0, NAMED).map(({ part, field, was, now }) => `  changed  ${part}: ${field}: ${was ?? 'empty'} → ${now ?? 'empty'}`);
-  return changes.length <= NAMED ? lines : [...lines, `  … and ${plural(changes.length - NAMED, 'more field')} changed`];
+function refusal({ refused, held, file }: ImportReport): string {
+  if (held === true) return `${file} was not imported: what it changes must be said in so many words. Nothing was changed. (exit${GLUE}3)`;
+  return `${file} was not imported: ${refused === undefined ? 'the file' : faultyWords(refused)} must be corrected first. Nothing was changed. (exit${GLUE}3)`;
 }
 
-function withdrawnLines(ids: readonly string[]): string[] {
-  if (ids.length === 0) return [];
-  const more = ids.length <= NAMED ? '' : `, … and ${ids.length - NAMED} more`;
-  return [`  withdrawn  ${ids.slice(0, NAMED).join(', ')}${more}`];
-}
-
-function refusal({ refused, file }: ImportReport): string {
-  const what = refused === undefined || refused.cells === 0 ? 'the file must be corrected first' : `${plural(refused.cells, 'cell')} in ${plural(refused.parts, 'part')} must be corrected first`;
-  return `${file} was not imported: ${what}. Nothing was changed. (exit${GLUE}3)`;
+/** Faults of the structure are of whole rows, those of headers of no part. */
+function faultyWords({ cells, parts }: NonNullable<ImportReport['refused']>): string {
+  if (cells === 0 && parts === 0) return 'the file';
+  if (cells < parts) return plural(parts, 'row');
+  return parts === 0 ? plural(cells, 'header') : `${plural(cells, 'cell')} in ${plural(parts, 'part')}`;
 }
 
 const plural = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? '' : 's'}`;
 
 function wrapped(line: string, width: number): string[] {
   const out: string[] = [];
+  const indent = ' '.repeat(line.length - line.trimStart().length + 2);
   let rest = line;
   while (rest.length > width) {
     const at = rest.lastIndexOf(' ', width);
-    if (at <= 0) break;
+    if (at < indent.length) break;
     out.push(rest.slice(0, at).trimEnd());
-    rest = `  ${rest.slice(at + 1).trimStart()}`;
+    rest = indent + rest.slice(at + 1).trimStart();
   }
   return [...out, rest];
 }

@@ -46,7 +46,7 @@ export function explanationJson(explanation: Explanation): string {
     rank: explanation.rank,
     ...(judged.outcome === 'undecided' ? { likely: judged.likely } : {}),
     verdicts: judged.verdicts.map((verdict) => verdictJson(verdict, part.id, origin)),
-    confirm: judged.confirm.map(confirmJson),
+    confirm: judged.confirm.map(confirmationJson),
     ...informed(judged),
     changes: null,
     changesReason: 'not-built',
@@ -78,7 +78,7 @@ function demandJson(demand: AnyDemand): object {
 function rankedJson(one: RankedPart, origin: OriginOf): object {
   const { merit, tightest, dominatedBy } = one;
   const shares = { margins: merit.margins, price: merit.price, current: merit.current };
-  return { rank: one.rank, ...identity(one), merit: merit.total, meritShares: shares, tightest, dominatedBy, variants: one.variants.map(variantJson), proof: one.proof, confirm: one.confirm.map(confirmJson), ...verdicts(one, origin) };
+  return { rank: one.rank, ...identity(one), merit: merit.total, meritShares: shares, tightest, dominatedBy, variants: one.variants.map(variantJson), proof: one.proof, confirm: one.confirm.map(confirmationJson), ...verdicts(one, origin) };
 }
 
 /** Another package or channel count of the same die. */
@@ -103,7 +103,7 @@ function informed({ dynamicRange, batteryHours }: JudgedPart): object {
   return { dynamicRange, ...(batteryHours === null ? {} : { battery: batteryHours }) };
 }
 
-function confirmJson({ figure, basis, how, checks, needed }: Confirmation): object {
+export function confirmationJson({ figure, basis, how, checks, needed }: Confirmation): object {
   return { figure, basis, how, checks, needed };
 }
 

@@ -4,6 +4,7 @@ import { amount, figureAmount } from './amounts.js';
 import { conditionText } from './condition-text.js';
 import { padded, paragraph } from './layout.js';
 import { originWords } from './origin-text.js';
+import type { Withdrawn } from './parts-json.js';
 import { safeLine } from './safe-text.js';
 import { finished, glued } from './spelling.js';
 import type { Style } from './style.js';
@@ -19,11 +20,28 @@ const COLUMNS = [
 ] as const;
 
 /** Everything known about one part: identity, then every figure with kind, condition and origin. */
-export function renderPart(part: Part, origin: (slot: string) => Origin | null, style: Style): string {
-  const tier = part.tier === 'approved' ? 'on the approved list' : 'a generic set: a class of parts, not something to order';
+export function renderPart(part: Part, origin: OriginOfSlot, style: Style): string {
+  return rendered(part, { standing: part.tier === 'approved' ? 'on the approved list' : 'a generic set: a class of parts, not something to order', origin }, style);
+}
+
+/** The same of a part that is on the list no more, as it was last. */
+export function renderWithdrawn(part: Part, { file, takenBack, origin }: Omit<Withdrawn, 'sha256'> & { readonly origin: OriginOfSlot }, style: Style): string {
+  const why = takenBack ? `it came with ${safeLine(file)}, an import that was taken back` : `${safeLine(file)} no longer has it`;
+  return rendered(part, { standing: `withdrawn, on the approved list no more: ${why}. As it was last`, origin }, style);
+}
+
+type OriginOfSlot = (slot: string) => Origin | null;
+
+interface Standing {
+  /** What the part is to the list. */
+  readonly standing: string;
+  readonly origin: OriginOfSlot;
+}
+
+function rendered(part: Part, { standing, origin }: Standing, style: Style): string {
   const rows = part.figures.map((figure) => rowOf(figure, origin(figureSlot(figure)), style));
   const lines = [
-    ...paragraph(`${safeLine(part.id)}: ${tier}`, style, { indent: 2 }),
+    ...paragraph(`${safeLine(part.id)}: ${standing}`, style, { indent: 2 }),
     ...identityOf(part).flatMap(([label, text]) => identityLine(label, text, style)),
     '',
     ...(rows.length === 0 ? ['No figure is known.'] : tableLines({ columns: COLUMNS, rows }, style)),
@@ -35,7 +53,8 @@ export function renderPart(part: Part, origin: (slot: string) => Origin | null, 
 
 function rowOf(figure: Figure, origin: Origin | null, style: Style): string[] {
   const value = figureAmount(figure.parameter, { value: figure.value, unit: PARAMETERS[figure.parameter].unit }, { digits: DIGITS });
-  return [figureWords(figure.parameter), figure.kind, value, conditionText(figure.condition), originWords(origin, style)];
+  const kind = figure.assumed === true ? `${figure.kind}, assumed` : figure.kind;
+  return [figureWords(figure.parameter), kind, value, conditionText(figure.condition), originWords(origin, style)];
 }
 
 /** A figure of a list is shown as it stands there, not rounded. */

@@ -17,16 +17,24 @@ export function partsJson(list: { readonly total: number; readonly parts: readon
   });
 }
 
+/** A part that is on the approved list no more: the import that ended it, or the one taken back that had brought it. */
+export interface Withdrawn {
+  readonly file: string;
+  readonly sha256: string;
+  readonly takenBack: boolean;
+}
+
 /** Every figure of one part with kind, condition and origin. */
-export function partJson(part: Part, originOf: (slot: string) => Origin | null): string {
+export function partJson(part: Part, originOf: (slot: string) => Origin | null, withdrawn?: Withdrawn): string {
   const { figures, id, ...identity } = part;
   return document('part', {
     part: { id, ...identity },
+    ...(withdrawn === undefined ? {} : { withdrawn }),
     figures: figures.map((figure) => {
       const origin = originOf(figureSlot(figure));
-      const { parameter, kind, value } = figure;
+      const { parameter, kind, value, assumed } = figure;
       const cell = origin?.kind === 'cell' || origin?.kind === 'generic' ? origin.cell : null;
-      return { parameter, kind, value, unit: PARAMETERS[parameter].unit, condition: conditionJson(figure.condition), origin: originText(origin), cell };
+      return { parameter, kind, value, unit: PARAMETERS[parameter].unit, condition: conditionJson(figure.condition), ...(assumed === true ? { assumed } : {}), origin: originText(origin), cell };
     }),
   });
 }

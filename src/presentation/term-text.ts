@@ -82,8 +82,9 @@ const printedText = (figure: Figure | null): string => (figure === null ? '' : f
 
 function originOf(term: Pick<Term, 'slot' | 'basis'>, origins: Origins, style: Style): string {
   const { part } = origins;
-  if (figureAt(part, term.slot)?.assumed === true) return 'assumed for this run';
   const known = term.slot === null ? null : origins.origin(part.id, term.slot);
+  // From words, or under a condition that was declared: the cell is there, the figure as such is not.
+  if (figureAt(part, term.slot)?.assumed === true && known?.kind !== 'assumption') return known === null ? 'assumed' : `assumed, from ${originWords(known, style)}`;
   if (known !== null) return originWords(known, style);
   if (term.basis === 'borrowed') return `class ${safeLine(part.class ?? '')}, worst of its sets`;
   // A resistor's own noise is no figure of the list; that its bandwidth is typical is said where the bandwidth stands.

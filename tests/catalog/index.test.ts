@@ -2,7 +2,7 @@ import { existsSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import Database from 'better-sqlite3';
 import { describe, expect, it } from 'vitest';
-import type { Catalog } from '../../src/catalog/index.js';
+import type { Catalog, GuardName } from '../../src/catalog/index.js';
 import { openCatalog } from '../../src/catalog/index.js';
 import { list } from './lists.js';
 import { temporaryFolder } from './temporary.js';
@@ -10,6 +10,8 @@ import { temporaryFolder } from './temporary.js';
 const HEADER = 'id,package,slew rate min (V/µs),output low headroom max (mV) @ 1 mA,output low headroom max (mV) @ 5 mA';
 const FIRST = list([HEADER, 'B,SO-8,0.5,30,150', 'A,SC-70-5,1,20,']);
 const SECOND = list([HEADER, 'A,SC-70-5,2,20,', 'C,SO-8,3,,'], { file: 'second.csv' });
+/** One of two parts goes: the guard has been told. */
+const SAID = { accept: new Set<GuardName>(['removed']) };
 const GENERIC = list(['id,class,slew rate typ (V/µs)', 'GX-2,fast,5', 'GX-1,fast,4'], { tier: 'generic', file: 'generic.csv' });
 
 async function newCatalog(): Promise<Catalog> {
@@ -65,11 +67,11 @@ describe('importing', () => {
     const catalog = await newCatalog();
     catalog.importList(FIRST);
     const counts = { rows: 2, added: 1, changed: 1, removed: 1, unchanged: 0 };
-    const dry = catalog.importList(SECOND, { dryRun: true });
-    expect(dry).toMatchObject({ outcome: 'dry-run', counts, removed: ['B'] });
+    const dry = catalog.importList(SECOND, { ...SAID, dryRun: true });
+    expect(dry).toMatchObject({ outcome: 'dry-run', counts, added: ['C'], removed: ['B'], previous: { file: 'list.csv', sha256: FIRST.sha256 } });
     expect(dry.changed.map(({ before, after }) => [before.id, before.figures.at(-1)?.value, after.figures.at(-1)?.value])).toEqual([['A', 1e6, 2e6]]);
     expect(ids(catalog)).toEqual(['A', 'B']);
-    expect(catalog.importList(SECOND)).toMatchObject({ outcome: 'imported', counts });
+    expect(catalog.importList(SECOND, SAID)).toMatchObject({ outcome: 'imported', counts });
     expect(catalog.source().parts.map(({ id, figures }) => [id, figures.at(-1)?.value])).toEqual([['A', 2e6], ['C', 3e6]]);
     catalog.close();
   });
@@ -77,7 +79,7 @@ describe('importing', () => {
   it('keeps every version: withdrawn, never erased', async () => {
     const catalog = await newCatalog();
     catalog.importList(FIRST);
-    catalog.importList(SECOND);
+    catalog.importList(SECOND, SAID);
     const database = new Database(catalog.file, { readonly: true });
     const versions = database.prepare('select id, import_id, withdrawn_at from part order by id, import_id').raw().all();
     expect(versions).toEqual([['A', 1, 2], ['A', 2, null], ['B', 1, 2], ['C', 2, null]]);
@@ -116,7 +118,7 @@ describe('importing', () => {
     catalog.importList(FIRST);
     const [part] = SECOND.parts;
     if (part === undefined) throw new Error('the second list has parts');
-    expect(() => catalog.importList({ ...SECOND, parts: [part, part] })).toThrow(/UNIQUE/u);
+    expect(() => catalog.importList({ ...SECOND, parts: [part, part] }, SAID)).toThrow(/UNIQUE/u);
     expect(ids(catalog)).toEqual(['A', 'B']);
     expect(catalog.source().parts[0]?.figures.at(-1)?.value).toBe(1e6);
     catalog.close();
@@ -128,11 +130,11 @@ describe('undo', () => {
     const catalog = await newCatalog();
     catalog.importList(FIRST);
     const hash = catalog.source().sha256;
-    catalog.importList(SECOND);
+    catalog.importList(SECOND, SAID);
     expect(catalog.undo()).toBe(true);
     expect(catalog.source()).toMatchObject({ sha256: hash, parts: [{ id: 'A' }, { id: 'B' }] });
     expect(catalog.source().origin('A', 'slewRate.min')).toMatchObject({ file: 'list.csv', line: 3, cell: '1' });
-    expect(catalog.importList(SECOND).outcome).toBe('imported');
+    expect(catalog.importList(SECOND, SAID).outcome).toBe('imported');
     expect(ids(catalog)).toEqual(['A', 'C']);
     expect([catalog.undo(), catalog.undo(), catalog.undo()]).toEqual([true, true, false]);
     expect(ids(catalog)).toEqual([]);

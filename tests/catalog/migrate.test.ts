@@ -38,7 +38,7 @@ describe('the migrations', () => {
     const database = new Database(':memory:');
     await migrate(database);
     const strict = database.prepare("select name from pragma_table_list where strict = 1 and schema = 'main' order by name").pluck().all();
-    expect(strict).toEqual(['list_import', 'part', 'record']);
+    expect(strict).toEqual(['list_import', 'part', 'record', 'saved_stage']);
     expect(database.pragma('application_id', { simple: true })).toBe(APPLICATION_ID);
     expect(database.pragma('user_version', { simple: true })).toBe(SCHEMA_VERSION);
   });
@@ -66,7 +66,7 @@ describe('a migration that fails half-way', () => {
     const database = new Database(':memory:');
     await migrate(database);
     const before = tables(database);
-    await expect(migrate(database, { ...MIGRATIONS, '0002-broken': BROKEN })).rejects.toThrow(/nowhere/u);
+    await expect(migrate(database, { ...MIGRATIONS, '9999-broken': BROKEN })).rejects.toThrow(/nowhere/u);
     expect(tables(database)).toEqual(before);
     expect(database.pragma('user_version', { simple: true })).toBe(SCHEMA_VERSION);
     await migrate(database);
@@ -82,7 +82,7 @@ describe('a migration that fails half-way', () => {
 
   it('leaves no file behind when the catalog was being created', async () => {
     const folder = temporaryFolder();
-    const create = createCatalog(join(folder, 'catalog.sqlite'), { ...MIGRATIONS, '0002-broken': BROKEN });
+    const create = createCatalog(join(folder, 'catalog.sqlite'), { ...MIGRATIONS, '9999-broken': BROKEN });
     await expect(create).rejects.toThrow(/nowhere/u);
     expect(readdirSync(folder)).toEqual([]);
   });

@@ -37,7 +37,7 @@ const NOBODY = 65534;
 export function makeWorkplace(): Workplace {
   const folder = mkdtempSync(join(tmpdir(), 'railfit-'));
   cpSync(join(ROOT, 'catalog', 'stages'), folder, { recursive: true });
-  for (const list of ['approved.csv', 'approved-next.csv', 'refused.csv']) cpSync(join(ROOT, 'tests', 'golden', list), join(folder, list));
+  for (const list of ['approved.csv', 'approved-next.csv', 'approved-short.csv', 'refused.csv']) cpSync(join(ROOT, 'tests', 'golden', list), join(folder, list));
   mkdirSync(join(folder, 'home'));
   const catalog = join(folder, 'catalog.sqlite');
   const start = (words: readonly string[], options: RunOptions = {}): ChildProcess =>

@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { envelope } from './envelope.js';
 import { tier } from './judged-part.js';
-import { unit } from './measures.js';
+import { sha256, unit } from './measures.js';
 import { origin } from './origin.js';
 import { price } from './price.js';
 import { limitKind } from './verdict.js';
@@ -41,6 +41,7 @@ const figure = z.strictObject({
   value: z.number().describe('In the unit beside it, SI'),
   unit,
   condition: condition.nullable().describe('What is null was not stated; null when nothing was'),
+  assumed: z.literal(true).optional().describe('Only of a figure nobody printed: from words, declared for the whole list, or lent by a class'),
   origin,
   cell: z.string().nullable().describe('The cell as written; null when not kept'),
 });
@@ -48,5 +49,9 @@ const figure = z.strictObject({
 /** `railfit part --json` */
 export const part = envelope('part', 'Every figure of one part with kind, condition and origin; null is not known, never a default', {
   part: identity,
+  withdrawn: z
+    .strictObject({ file: z.string().describe('The list that no longer had it, or that had brought it'), sha256: sha256.describe('Of that list'), takenBack: z.boolean().describe('It came with an import that was taken back') })
+    .optional()
+    .describe('Only of a part that is on the approved list no more; its figures are as they were last'),
   figures: z.array(figure),
 });

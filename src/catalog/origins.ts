@@ -1,0 +1,54 @@
+import type Database from 'better-sqlite3';
+import { DECLARED } from '../intake/list-sources.js';
+import type { ListColumn } from '../intake/list.js';
+import type { Origin, Tier } from '../parts/part.js';
+import type { ColumnTable } from './import-columns.js';
+import { columnTables } from './import-columns.js';
+import type { CurrentImport } from './imports.js';
+
+/** A figure as one import had it: the part it belongs to and its slot. */
+export interface OriginQuery {
+  readonly tier: Tier;
+  readonly from: CurrentImport;
+  readonly partId: string;
+  readonly slot: string;
+}
+
+/** Joins the cell of an import to a figure; null where none is kept. Column tables are read once per import. */
+export function originFinder(database: Database.Database): (query: OriginQuery) => Origin | null {
+  const tableOf = columnTables(database);
+  // Everything of the row, since the column of `figures` came with a later version of the tables.
+  const records = database.prepare<[number, string], RecordRow>('select * from record where import_id = ? and part_id = ?');
+  return (query) => {
+    const record = records.get(query.from.id, query.partId);
+    if (record === undefined) return null;
+    const table = tableOf(query.from.id);
+    const number = numberOf(record, query.slot, table);
+    if (number === DECLARED) return { kind: 'assumption', text: `declared for the whole list: ${table.declared ?? ''}` };
+    const column = table.all.find((one) => one.number === number);
+    return column === undefined ? null : originOf(record, query, column);
+  };
+}
+
+function numberOf({ figures }: RecordRow, slot: string, { slots }: ColumnTable): number | undefined {
+  const own = figures == null ? undefined : (JSON.parse(figures) as Readonly<Record<string, number>>)[slot];
+  return own ?? slots.get(slot) ?? firstUnder(slots, slot);
+}
+
+/** A figure that is missing is asked for without condition: then the first of its columns, whose cell is empty. */
+function firstUnder(slots: ReadonlyMap<string, number>, slot: string): number | undefined {
+  return slot.includes('@') ? undefined : [...slots].find(([one, number]) => number !== DECLARED && one.startsWith(`${slot}@`))?.[1];
+}
+
+interface RecordRow {
+  readonly line: number;
+  readonly row: number;
+  readonly cells: string;
+  readonly figures?: string | null;
+}
+
+function originOf({ line, row, cells }: RecordRow, { tier, from, partId }: OriginQuery, { header, number, letter }: ListColumn): Origin {
+  const cell = (JSON.parse(cells) as string[])[number - 1] ?? '';
+  if (tier === 'generic') return { kind: 'generic', id: partId, header, cell };
+  return { kind: 'cell', file: from.file, sha256: from.sha256, line, row, column: number, columnLetter: letter, header, cell };
+}

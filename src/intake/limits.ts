@@ -1,0 +1,21 @@
+/** Encodings a list is read in. */
+export const ENCODINGS = ['utf-8', 'utf-16le', 'utf-16be', 'windows-1252'] as const;
+export type Encoding = (typeof ENCODINGS)[number];
+
+export interface Limits {
+  readonly bytes: number;
+  readonly records: number;
+  readonly columns: number;
+  /** Characters in one cell. */
+  readonly cell: number;
+  /** Stored problems; all are counted. */
+  readonly problems: number;
+}
+
+/** Over one of these a list is refused, naming the limit and, where there is one, the option that lifts it. */
+export const LIMITS: Limits = { bytes: 64 * 1024 * 1024, records: 200_000, columns: 512, cell: 64 * 1024, problems: 10_000 };
+
+/** With `--large`: what a machine with a few gigabytes of memory still holds. */
+const LARGE: Limits = { ...LIMITS, bytes: 384 * 1024 * 1024, records: 2_000_000 };
+
+export const limitsOf = (large: boolean): Limits => (large ? LARGE : LIMITS);

@@ -1,0 +1,145 @@
+import { cellPool } from './cell-pool.js';
+import type { Delimiter, ListRecord } from './list.js';
+
+/** A record that could not be taken apart. */
+export interface SplitFault {
+  readonly code: 'I303' | 'I304';
+  /** Physical line where the record starts, and the one on which the quote stands. */
+  readonly line: number;
+  readonly quoteLine: number;
+  readonly row: number;
+  /** From 1. */
+  readonly column: number;
+  /** Where on its line the quote stands, from 1. */
+  readonly character: number;
+  /** The cell as it can be made out. */
+  readonly text: string;
+}
+
+export interface Records {
+  /** Blank rows are records with one empty cell. */
+  readonly records: readonly ListRecord[];
+  readonly faults: readonly SplitFault[];
+}
+
+/**
+ * Takes a text apart by the quoting rules of RFC 4180, at any delimiter; lines end with LF, CR LF or CR. A record with a stray quote
+ * is a fault and left out, and reading goes on at the next line; a quote that never closes has swallowed the rest.
+ */
+export function recordsOf(text: string, delimiter: Delimiter): Records {
+  const reader = new RecordReader(text, delimiter.charCodeAt(0));
+  const records: ListRecord[] = [];
+  const faults: SplitFault[] = [];
+  for (let row = 1; !reader.isAtEnd(); row += 1) {
+    const line = reader.line;
+    const { cells, fault } = reader.record();
+    if (fault === null) records.push({ line, lineEnd: reader.lineOfEnd, row, cells });
+    else faults.push({ ...fault, line, row });
+  }
+  return { records, faults };
+}
+
+const [QUOTE, CR, LF] = [0x22, 0x0d, 0x0a];
+
+type OpenFault = Omit<SplitFault, 'line' | 'row'>;
+
+class RecordReader {
+  /** Physical line of the place reading has come to. */
+  line = 1;
+  /** Physical line on which the last record ended. */
+  lineOfEnd = 1;
+  readonly #text: string;
+  readonly #delimiter: number;
+  readonly #pooled = cellPool();
+  #at = 0;
+  #lineStart = 0;
+
+  constructor(text: string, delimiter: number) {
+    this.#text = text;
+    this.#delimiter = delimiter;
+  }
+
+  isAtEnd(): boolean {
+    return this.#at >= this.#text.length;
+  }
+
+  record(): { readonly cells: readonly string[]; readonly fault: OpenFault | null } {
+    const cells: string[] = [];
+    let fault: OpenFault | null = null;
+    for (;;) {
+      const found = this.#text.charCodeAt(this.#at) === QUOTE ? this.#quoted(cells.length + 1) : this.#plain(cells.length + 1);
+      cells.push(this.#pooled(found.text));
+      fault ??= found.fault;
+      if (this.#text.charCodeAt(this.#at) !== this.#delimiter || this.isAtEnd()) break;
+      this.#at += 1;
+    }
+    this.lineOfEnd = this.line;
+    this.#lineEnd();
+    return { cells, fault };
+  }
+
+  #plain(column: number): { text: string; fault: OpenFault | null } {
+    const start = this.#at;
+    this.#toCellEnd();
+    const text = this.#text.slice(start, this.#at);
+    const quote = text.indexOf('"');
+    return { text, fault: quote < 0 ? null : this.#fault('I304', { column, at: start + quote, text }) };
+  }
+
+  #quoted(column: number): { text: string; fault: OpenFault | null } {
+    const [open, openLine, openLineStart] = [this.#at, this.line, this.#lineStart];
+    const pieces: string[] = [];
+    for (let from = open + 1; ; ) {
+      const close = this.#text.indexOf('"', from);
+      if (close < 0) {
+        this.#skipTo(this.#text.length);
+        const text = this.#text.slice(open + 1);
+        return { text, fault: { code: 'I303', quoteLine: openLine, column, character: open - openLineStart + 1, text } };
+      }
+      pieces.push(this.#text.slice(from, close));
+      this.#skipTo(close + 1);
+      if (this.#text.charCodeAt(close + 1) !== QUOTE) return this.#closed(pieces.join('"'), column);
+      from = close + 2;
+      this.#at = from;
+    }
+  }
+
+  /** Behind a closing quote only a delimiter, a line end or the end of the text may stand. */
+  #closed(content: string, column: number): { text: string; fault: OpenFault | null } {
+    const quote = this.#at - 1;
+    this.#toCellEnd();
+    if (this.#at === quote + 1) return { text: content, fault: null };
+    const text = content + this.#text.slice(quote + 1, this.#at);
+    return { text, fault: this.#fault('I304', { column, at: quote, text }) };
+  }
+
+  #fault(code: OpenFault['code'], { column, at, text }: { column: number; at: number; text: string }): OpenFault {
+    return { code, quoteLine: this.line, column, character: at - this.#lineStart + 1, text };
+  }
+
+  #toCellEnd(): void {
+    for (; this.#at < this.#text.length; this.#at += 1) {
+      const unit = this.#text.charCodeAt(this.#at);
+      if (unit === this.#delimiter || unit === LF || unit === CR) return;
+    }
+  }
+
+  /** Moves on inside quotes, counting the lines that end there. */
+  #skipTo(end: number): void {
+    for (; this.#at < end; this.#at += 1) {
+      const unit = this.#text.charCodeAt(this.#at);
+      if (unit !== LF && unit !== CR) continue;
+      if (unit === CR && this.#text.charCodeAt(this.#at + 1) === LF) continue;
+      this.line += 1;
+      this.#lineStart = this.#at + 1;
+    }
+  }
+
+  #lineEnd(): void {
+    if (this.isAtEnd()) return;
+    const isPair = this.#text.charCodeAt(this.#at) === CR && this.#text.charCodeAt(this.#at + 1) === LF;
+    this.#at += isPair ? 2 : 1;
+    this.line += 1;
+    this.#lineStart = this.#at;
+  }
+}
