@@ -23,7 +23,7 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
     rooms: ['quantities', 'report.ts', 'parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation'],
     packages: ['string-width', 'zod'],
   },
-  intake: { rooms: ['quantities', 'parts'], packages: ['csv-parse', 'node:crypto'] },
+  intake: { rooms: ['quantities', 'parts'], packages: ['node:crypto', 'read-excel-file'] },
   catalog: {
     rooms: ['quantities', 'parts', 'intake', 'migrations'],
     packages: ['better-sqlite3', 'kysely', 'node:fs', 'node:path', 'node:crypto'],

@@ -7,6 +7,7 @@ import type { Layout } from './layout.js';
 import type { Encoding } from './limits.js';
 import type { ListSources } from './list-sources.js';
 import type { ListMapping } from './mapping.js';
+import type { Workbook } from './workbook.js';
 
 /** One column of a list as it was read: what its cells mean and where they stand. */
 export interface ListColumn {
@@ -76,7 +77,7 @@ export interface ListQuestion {
 }
 
 /** An answer as the options carry it. */
-export type ListAnswer = Pick<ListOptions, 'map' | 'layout' | 'delimiter' | 'words'>;
+export type ListAnswer = Pick<ListOptions, 'map' | 'layout' | 'delimiter' | 'words' | 'sheet'>;
 
 /** A column, by letter or header, and the header it is read as; `text` keeps it unread. */
 export interface ColumnAnswer {
@@ -111,7 +112,10 @@ export interface ListOptions {
   readonly genericIds?: ReadonlySet<string>;
   /** Classes of the generic sets; another `class` is warned of. Not judged when absent. */
   readonly classes?: ReadonlySet<string>;
+  /** The sheets of a workbook, in place of the text in the bytes. */
+  readonly workbook?: Workbook;
   /** Answers of the user; each wins over what the file and a mapping say. */
+  readonly sheet?: string;
   readonly encoding?: Encoding;
   readonly delimiter?: Delimiter;
   readonly decimal?: 'point' | 'comma';
