@@ -39,7 +39,7 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
     { text: 'Topologies, and what each needs besides topology and supply. What does not belong to a topology is refused with the reason.' },
     { pairs: TOPOLOGY_PAIRS },
     ...fieldGroups(),
-    { text: 'Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said. railfit draft TOPOLOGY prints a file with every field of one topology.' },
+    { text: 'Without signal.frequency, slew rate and gain bandwidth are not asked, and that is said. railfit help TOPOLOGY has a page of each; railfit draft TOPOLOGY prints a file with every field.' },
   ],
   figures: () => [
     { text: 'What is known about a part: a number with a limit kind (min, typ, max) and a condition. Names as --assume and JSON use them, and the words of the canonical CSV header.' },

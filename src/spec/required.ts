@@ -1,3 +1,4 @@
+import type { Problem } from '../quantities/problem.js';
 import type { Draft } from './draft.js';
 import { legNames } from './leg-names.js';
 import { FILTERS, ONE_INPUT } from './ownership.js';
@@ -91,9 +92,16 @@ function missingBoth(draft: Draft): void {
   refuse(draft, 'signal', { code: 'S102', message: 'signal.positive and signal.negative are missing; accepted: these two, or signal.differential and signal.commonMode', fix });
 }
 
-/** Also true when the field, or the map around it, was refused for its structure. */
+/** Also true when the field, or the map around it, was refused for its structure, or is offered in place of a key that is none. */
 function isWritten(draft: Draft, path: string): boolean {
-  return draft.positions.has(path) || draft.problems.some(({ place }) => place?.path !== undefined && isUnder(path, place.path));
+  return draft.positions.has(path) || draft.problems.some((problem) => [problem.place?.path, meantPath(problem)].some((refused) => refused !== undefined && isUnder(path, refused)));
+}
+
+/** What a misspelt key was told to be: it is not missing besides. */
+function meantPath({ code, fix, place }: Problem): string | undefined {
+  if (code !== 'S101' || fix === undefined || place?.path === undefined) return undefined;
+  const level = place.path.slice(0, place.path.lastIndexOf('.') + 1);
+  return fix.includes('.') ? fix : level + fix;
 }
 
 /** True when the map, or anything in it, is written. */
