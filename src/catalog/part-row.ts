@@ -29,19 +29,20 @@ function identityCells(part: Part): Cell[] {
     part.tier, part.id, part.description, part.status, part.lifecycle, part.package, part.channels,
     part.qualification, part.class, part.family,
     part.price?.amount ?? null, part.price?.currency ?? null, part.price?.quantity ?? null,
-    bit(part.phaseReversal), bit(part.inputClamp), part.inputType,
+    bit(part.phaseReversal), bit(part.inputClamp), part.inputType, bit(part.crossoverFree),
   ];
 }
 
 function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
   const [tier, id, description, status, lifecycle, pack, channels, qualification, partClass, family, ...rest] = row;
-  const [amount, currency, quantity, phaseReversal, inputClamp, inputType] = rest;
+  const [amount, currency, quantity, phaseReversal, inputClamp, inputType, crossoverFree] = rest;
   return {
     id: String(id), tier: tier as Tier, description: text(description), status: text(status) as Status | null,
     lifecycle: text(lifecycle) as Lifecycle | null, package: text(pack), channels: number(channels), qualification: text(qualification),
     class: text(partClass), family: text(family),
     price: typeof amount === 'number' ? { amount, currency: String(currency), quantity: number(quantity) } : null,
     phaseReversal: flag(phaseReversal), inputClamp: flag(inputClamp), inputType: text(inputType) as InputType | null,
+    crossoverFree: flag(crossoverFree),
   };
 }
 

@@ -49,6 +49,8 @@ const CONTRADICTIONS: readonly CodePage[] = [
   page('S210', 'components and frequency disagree', 'Timing or filter components written beside the frequency, corner or Q must give it within their tolerances, and a frequency must be one that preferred values can give.', ['oscillator: {frequency: 2 kHz, resistance: 100 kΩ, capacitance: 1 nF}', 'oscillator: {frequency: 2 kHz, capacitance: 1 nF}']),
   page('S211', 'no such filter', 'The filter is not said, oscillates with its components or at the ends of their tolerances, has a gain its circuit cannot have, or no preferred values give it.', ['filter: {corner: 10 MHz, q: 20}', 'filter: {corner: 10 kHz, q: 0.707}']),
   page('S212', 'nothing bounds the integrator', 'What is added up without an end runs into a rail: a reset, a lowest frequency or a resistor across the capacitor bounds it.', ['integrator: {resistance: 100 kΩ, capacitance: 100 nF}', 'integrator: {resistance: 100 kΩ, capacitance: 100 nF, window: 20 ms}']),
+  page('S220', 'duty cycle that leaves no time', 'A stage that is switched off between measurements is on for less than its period, and starts within that time.', ['dutyCycle: {on: 2 s, every: 1 s}', 'dutyCycle: {on: 2 ms, every: 1 s}']),
+  page('S221', 'ripple larger than the supply', 'What is left of the ripple behind the supply filter is a small part of the supply.', ['supply: 5 V, supplyRipple: {amplitude: 12 Vpp, frequency: 100 kHz}', 'supplyRipple: {amplitude: 50 mVpp, frequency: 100 kHz}']),
 ];
 
 const COMMANDS: readonly CodePage[] = [

@@ -49,7 +49,7 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   checks: () => [
     { text: 'Every check is judged twice, on the pessimistic and on the optimistic reading of the figures it reads. Both pass: pass. Both fail: fail. Otherwise it cannot be decided, and the value at which it turns is told. Unknown is never a pass.' },
     { pairs: CHECKS.map((check) => [check.id, `${check.title}; reads ${check.reads.join(', ')}`] as const) },
-    { text: 'Not built yet, and undecided for every part when the stage writes them: the hazards of avoid. railfit help physics tells how each is modelled and from which source.' },
+    { text: 'crossover, phase-reversal, clamp and overdrive are judged when the stage writes avoid; otherwise they are cautions and decide nothing. railfit help physics tells how each is modelled and from which source.' },
   ],
   physics: () => PHYSICS_PAGE,
   'exit-codes': () => [{ text: 'Exit codes are frozen.' }, { pairs: EXITS }],

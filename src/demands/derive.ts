@@ -1,5 +1,7 @@
 import type { Stage } from '../stage/index.js';
 import { batteryBudget } from './battery.js';
+import { clamp } from './clamp.js';
+import { crossover } from './crossover.js';
 import { dcError } from './dc-error.js';
 import type { Demands } from './demand.js';
 import { distortion } from './distortion.js';
@@ -11,11 +13,15 @@ import { noise } from './noise.js';
 import { operatingOf } from './operating.js';
 import { outputCurrent } from './output-current.js';
 import { outputHeadroom } from './output-headroom.js';
+import { overdrive } from './overdrive.js';
 import { phaseMargin } from './phase-margin.js';
+import { phaseReversal } from './phase-reversal.js';
 import { settling } from './settling.js';
 import { slewRate } from './slew-rate.js';
 import { stableGain } from './stable-gain.js';
 import { supplyCurrent } from './supply-current.js';
+import { startUp } from './start-up.js';
+import { supplyRipple } from './supply-ripple.js';
 import { supplyHigh, supplyLow, supplyPeak } from './supply.js';
 import { temperatureHigh, temperatureLow } from './temperature.js';
 import { unbuilt } from './unbuilt.js';
@@ -40,7 +46,9 @@ export function deriveDemands(stage: Stage): Demands {
     noise: noise(stage),
     distortion: distortion(stage),
     'dc-error': dcError(stage),
+    'supply-ripple': supplyRipple(stage),
     settling: settling(stage),
+    'start-up': startUp(stage),
     'frequency-error': frequencyError(stage),
     'supply-current': supplyCurrent(stage),
     'temperature-low': temperatureLow(stage),
@@ -52,6 +60,10 @@ export function deriveDemands(stage: Stage): Demands {
     status: status(stage),
     lifecycle: lifecycle(stage),
     price: price(stage),
+    crossover: crossover(stage),
+    'phase-reversal': phaseReversal(stage),
+    clamp: clamp(stage),
+    overdrive: overdrive(stage),
     battery: batteryBudget(stage),
     unbuilt: unbuilt(stage),
   };

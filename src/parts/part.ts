@@ -32,6 +32,8 @@ export interface Part {
   readonly phaseReversal: boolean | null;
   readonly inputClamp: boolean | null;
   readonly inputType: InputType | null;
+  /** True when the offset makes no step over the whole input range: one pair, or a hand-over that is chopped or pumped away. */
+  readonly crossoverFree: boolean | null;
   /** In canonical column order, then condition; at most one per slot (`figureSlot`). */
   readonly figures: readonly Figure[];
 }

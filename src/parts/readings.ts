@@ -10,7 +10,7 @@ import { scalarReading, type RangeEnd } from './select.js';
 import { spreadReading, type Spread } from './spread.js';
 
 /** What is known about a part in words and counts, as wishes compare it. */
-export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price' | 'inputType' | 'inputClamp'>;
+export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price' | 'inputType' | 'inputClamp' | 'phaseReversal' | 'crossoverFree'>;
 
 /**
  * A part's figures resolved into one outlook. A check asks for what it reads and never learns which outlook it is given;

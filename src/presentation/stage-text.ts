@@ -101,7 +101,18 @@ function referenceOf({ vertices, referenceTolerance, referenceResistance }: Stag
 function surroundingsOf(stage: Stage): string[] {
   const { supply, supplyPeak, load, temperature } = stage;
   const peak = supplyPeak > supply.max ? `, peak ${amount(supplyPeak, 'V')}` : '';
-  return [`${range(supply.min, supply.max, 'V')} single${peak}`, `Load${GLUE}${GLUE}${loadOf(load)}`, `Temperature${GLUE}${GLUE}${range(temperature.min, temperature.max, '°C')}`];
+  return [`${range(supply.min, supply.max, 'V')} single${peak}`, `Load${GLUE}${GLUE}${loadOf(load)}`, `Temperature${GLUE}${GLUE}${range(temperature.min, temperature.max, '°C')}`, ...circumstancesOf(stage)];
+}
+
+/** What can happen to the stage beside its signal. */
+function circumstancesOf({ asked: { overdrive, sequencing, supplyRipple, dutyCycle } }: Stage): string[] {
+  const said = (words: string, text: string): string => `${words}${GLUE}${GLUE}${text}`;
+  return [
+    ...(overdrive === null ? [] : [said('Overdrive', `${amount(overdrive.value, 'V')} beyond a rail`)]),
+    ...(sequencing === null ? [] : [said('Sequencing', sequencing)]),
+    ...(supplyRipple === null ? [] : [said('Ripple', `${amount(supplyRipple.amplitude.value, 'V')} peak at ${amount(supplyRipple.frequency.value, 'Hz')}`)]),
+    ...(dutyCycle === null ? [] : [said('On', `${amount(dutyCycle.on.value, 's')} of every ${amount(dutyCycle.every.value, 's')}`)]),
+  ];
 }
 
 function loadOf(load: Stage['load']): string {
@@ -132,6 +143,8 @@ function askedOf({ asked }: Stage): string[] {
     ...least('phase margin', limits.phaseMargin?.text),
     ...most('junction temperature', limits.junctionTemperature?.text),
     ...most('frequency error', limits.frequencyError?.text),
+    ...most('supply ripple at the output', limits.supplyRipple?.text),
+    ...most('start-up', limits.startUp?.text),
     ...times('slew rate', margins.slewRate),
     ...times('gain bandwidth', margins.gainBandwidth),
     ...(margins.outputHeadroom === undefined || margins.outputHeadroom.value === 0 ? [] : [`${glued(safeLine(margins.outputHeadroom.text))} kept free at each rail`]),

@@ -4,6 +4,8 @@ import { parseTree } from './document.js';
 import type { Draft } from './draft.js';
 import { emptyDraft } from './draft.js';
 import { readGain } from './gain.js';
+import { hazardContradictions } from './hazard-contradictions.js';
+import { readHazards } from './hazards.js';
 import { readLimits } from './limits.js';
 import { applyOverrides } from './overrides.js';
 import { inOrder, problemAt } from './problems.js';
@@ -72,7 +74,8 @@ function readFields(draft: Draft): StageSpec | null {
   const supply = readInterval(draft, 'supply');
   const written = readOthers(draft, topology);
   const positions = Object.fromEntries(draft.positions);
-  if (draft.problems.length > 0) draft.problems.push(...supplyContradictions({ ...written, ...present({ supply }), positions, file: draft.file }));
+  const found = { ...written, ...present({ supply }), positions, file: draft.file };
+  if (draft.problems.length > 0) draft.problems.push(...supplyContradictions(found), ...hazardContradictions(found));
   if (topology === undefined || supply === undefined) return null;
   return { ...written, topology, supply, notes: draft.notes, positions };
 }
@@ -95,6 +98,7 @@ function readOthers(draft: Draft, topology: StageSpec['topology'] | undefined): 
     following: readFollowing(draft),
     converter: readConverter(draft),
     battery: readBattery(draft),
+    ...readHazards(draft),
     temperature: readInterval(draft, 'temperature'),
     limits: readLimits(draft),
     wishes: readWishes(draft),

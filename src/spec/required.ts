@@ -11,6 +11,7 @@ export function refuseMissing(draft: Draft, topology: Topology | undefined): voi
   const isRefused = topology === undefined && isWritten(draft, 'topology');
   for (const path of ['topology', 'supply']) if (!isWritten(draft, path)) refuseAbsent(draft, path);
   for (const [map, keys] of Object.entries(WHOLE_WHEN_WRITTEN)) if ([...draft.fields.keys()].some((path) => isUnder(path, map))) refuseMissingKeys(draft, map, keys);
+  if (draft.fields.has('limits.supplyRipple') && !isWrittenWithin(draft, 'supplyRipple')) refuseAbsent(draft, 'supplyRipple');
   if (isRefused) return;
   if (topology === undefined || ONE_INPUT.includes(topology)) refuseMissingInput(draft);
   if (topology !== undefined) refuseMissingOwn(draft, topology);
@@ -22,6 +23,8 @@ const WHOLE_WHEN_WRITTEN: Readonly<Record<string, readonly string[]>> = {
   following: ['corner', 'order'],
   converter: ['bits', 'range'],
   battery: ['capacity'],
+  supplyRipple: ['amplitude', 'frequency'],
+  dutyCycle: ['on', 'every'],
 };
 
 /** What a topology is fed with or made of, and cannot do without. */

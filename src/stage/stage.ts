@@ -1,5 +1,7 @@
 import type { PinNetwork } from '../formulas/pin-network.js';
-import type { BatterySpec, ConverterSpec, FollowingSpec, Hazard, LimitsSpec, MarginsSpec, SignalShape, Topology, WishesSpec } from '../spec/spec.js';
+import type {
+  BatterySpec, ConverterSpec, DutyCycleSpec, FollowingSpec, Hazard, LimitsSpec, MarginsSpec, RippleSpec, Sequence, SignalShape, Topology, Value, WishesSpec,
+} from '../spec/spec.js';
 import type { GainUnit } from './circuit.js';
 import type { StageResponse } from './response.js';
 
@@ -136,4 +138,9 @@ export interface Asked {
   readonly following: FollowingSpec | null;
   readonly converter: ConverterSpec | null;
   readonly battery: BatterySpec | null;
+  /** V beyond either rail; null: not said. */
+  readonly overdrive: Value | null;
+  readonly sequencing: Sequence | null;
+  readonly supplyRipple: RippleSpec | null;
+  readonly dutyCycle: DutyCycleSpec | null;
 }

@@ -282,8 +282,8 @@ describe('a part that cannot be decided', () => {
     expect(sampleReport({}, parts).fit.map((one) => one.part.id)).toContain('TEAM-0031');
   });
 
-  it('a limit without a check of this version is open, never passed', () => {
-    expect(shown('TEAM-0005', 80, {}, { avoid: 'crossover' })).toMatchInlineSnapshot(`
+  it('a hazard the stage avoids and does not describe is open, never passed', () => {
+    expect(shown('TEAM-0005', 80, {}, { avoid: 'overdrive' })).toMatchInlineSnapshot(`
       "
       TEAM-0005 cannot be decided: 17 of 18 checks pass, 1 open, 0 fail. It is not
       counted as fitting.
@@ -293,7 +293,9 @@ describe('a part that cannot be decided', () => {
               25 mV..330 mV, output 200 mV..2.64 V (197 mV..2.69 V at the corners), up
               to 2 kHz on 3 V..4.2 V
 
-      ?     crossover   this version has no such check
+      ?     overdrive   the stage does not say what it takes its inputs to
+            caution: write overdrive (how far an input goes beyond a rail), or
+              sequencing
 
       PASS  lowest supply        1.2 V spare     highest supply       1.3 V spare
             supply peak          1.5 V spare     input range low      125 mV spare
@@ -307,10 +309,6 @@ describe('a part that cannot be decided', () => {
 
       Swing   2.92 V of 3 V between the rails can be used: head-room takes 0.21 dB of
               the dynamic range
-
-      What to do
-        - crossover: no figure settles it in this version; judge it by hand, or take
-          the limit out of the stage
 
       No part fits as things stand.
 

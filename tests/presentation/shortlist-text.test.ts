@@ -439,8 +439,8 @@ describe('a shortlist where nothing fits', () => {
     expect(report.fit.map((one) => one.part.id)).toContain('TEAM-0005');
   });
 
-  it('says that a limit cannot be judged by this version, once', () => {
-    expect(shown(100, {}, { avoid: 'crossover' })).toMatchInlineSnapshot(`
+  it('says what the stage would have to say of a hazard it avoids', () => {
+    expect(shown(100, {}, { avoid: 'overdrive' })).toMatchInlineSnapshot(`
       "
       No part is proven to fit; 4 of 6 parts cannot be decided. The others fail slew rate (1), gain
       bandwidth (1), DC error (1), supply current (1) and 1 more check. Nearest is TEAM-0001 (A): DC error
@@ -452,13 +452,14 @@ describe('a shortlist where nothing fits', () => {
               (197 mV..2.69 V at the corners), up to 2 kHz
       Supply  3 V..4.2 V single, peak 4.5 V    Load  10 kΩ to ground    Temperature  -20 °C..60 °C
       Limits  DC error at the output ≤ 40 mV, supply current per amplifier ≤ 90 µA, gain error ≤ 1 %,
-              1 channel, status approved, no crossover
+              1 channel, status approved, no overdrive
 
-       This version does not judge input crossover: while the stage asks for it no part is proven to fit.
-       ?  TEAM-0005 (A) 350 kHz, zero-drift - passes every check that is judged
-       ?  TEAM-0012 (A) 1 MHz, low offset - passes every check that is judged
-       ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less
-       ?  GX-LV-1M (G) 1 MHz, 2 mV offset - passes every check that is judged
+       ?  TEAM-0005 (A) 350 kHz, zero-drift - overdrive: the stage does not say what it takes its inputs
+            to
+       ?  TEAM-0012 (A) 1 MHz, low offset - overdrive: the stage does not say what it takes its inputs to
+       ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less;
+            overdrive: the stage does not say what it takes its inputs to
+       ?  GX-LV-1M (G) 1 MHz, 2 mV offset - overdrive: the stage does not say what it takes its inputs to
 
        A on the approved list; G generic set: a class of parts, not something to order; ? cannot be
        decided
