@@ -1,9 +1,9 @@
 import { deriveDemands, listDemands } from './demands/index.js';
-import { whyAhead } from './explanation/index.js';
+import { changesFor, whyAhead, whyNothingFits, type Changing } from './explanation/index.js';
 import type { Part, PartSource } from './parts/part.js';
 import { rank } from './ranking/index.js';
 import type { Asking, DataUsed, DemandsReport, Explanation, Report } from './report.js';
-import { judging, screen } from './screening/index.js';
+import { judgePart, judging, probePart, screen, type PartOutcome } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -31,22 +31,52 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
     rejections: screened.rejections,
     nearest: screened.nearest,
     ahead: whyAhead(fit, asking.order),
+    nothingFits: null,
     asking,
     data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
   };
 }
 
+/** Where nothing fits: the report with the reason and the smallest changes that let something in. Any other report as it is. */
+export function withWaysOut(report: Report, source: PartSource, changing: Changing): Report {
+  if (report.fit.length > 0 || report.counts.parts === 0) return report;
+  const { stage, rejected, undecided, asking } = report;
+  const search = { stage, source, screened: { rejected, undecided }, strict: asking.strict, order: asking.order };
+  return { ...report, nothingFits: whyNothingFits(search, changing) };
+}
+
+/** Which part, and how it is asked; without `changing` nothing is said about what would let it in. */
+export interface ExplainRequest {
+  readonly part: Part;
+  readonly asking?: Asking;
+  readonly changing?: Changing;
+}
+
 /** One part of the catalog on the stage, with its place in the shortlist. The part must be in the source. */
-export function explain(stage: Stage, source: PartSource, request: { readonly part: Part; readonly asking?: Asking }): Explanation {
-  const report = shortlist(stage, source, request.asking ?? PLAIN);
-  const fits = report.fit.flatMap((line) => [line, ...line.variants]);
-  const judged = [...fits, ...report.undecided, ...report.rejected].find((one) => one.part.id === request.part.id);
-  if (judged === undefined) throw new RangeError(`part ${request.part.id} is not in the catalog that was judged`);
-  const ranked = report.fit.find((line) => line === judged || line.variants.some((one) => one === judged));
-  const { demands, counts, asking, data, origin } = report;
-  const fitting = report.fit.filter((one) => one !== ranked).slice(0, 3);
-  return { stage, demands, judged, rank: ranked?.rank ?? null, counts, fitting, asking, data, origin };
+export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
+  const { part, asking = PLAIN, changing } = request;
+  const demands = deriveDemands(stage);
+  const run = judging(demands, source.parts, asking.strict);
+  // Of the others only how they end is told: those that are plainly out need not be judged to the end.
+  const judgedAll = source.parts.map((one) => (one.id !== part.id && probePart(run, one).isPlainlyOut() ? null : judgePart(run, one)));
+  const judged = judgedAll.find((one) => one?.part.id === part.id);
+  if (judged == null) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
+  const count = (wanted: PartOutcome): number => judgedAll.filter((one) => (one?.outcome ?? 'does-not-fit') === wanted).length;
+  const fit = rank(judgedAll.flatMap((one) => (one?.outcome === 'fits' ? [one] : [])), asking.order);
+  const ranked = fit.find((line) => [line, ...line.variants].some((one) => one.part.id === part.id));
+  return {
+    stage,
+    demands: listDemands(demands),
+    judged,
+    rank: ranked?.rank ?? null,
+    counts: { parts: source.parts.length, fit: count('fits'), undecided: count('undecided'), rejected: count('does-not-fit') },
+    fitting: fit.filter((one) => one !== ranked).slice(0, 3),
+    changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: source.parts, strict: asking.strict }, changing),
+    asking,
+    data: dataOf(source),
+    origin: (partId, slot) => source.origin(partId, slot),
+  };
 }
 
 function dataOf(source: PartSource): DataUsed {

@@ -1,7 +1,8 @@
 /** The public door: a stage and parts in, a judged and ranked report out, and its presenters. No database behind it. */
 export { CHECKS } from './checks/index.js';
 export { CHECK_IDS, type AnyDemand, type CheckId } from './demands/index.js';
-export { demandsOf, explain, RULES, shortlist } from './engine.js';
+export { demandsOf, explain, RULES, shortlist, withWaysOut, type ExplainRequest } from './engine.js';
+export type { Change, Changes, Changing, Move, Rerun } from './explanation/index.js';
 export { limitKindOf } from './parts/assumption.js';
 export { figureSlot, PARAMETERS, type Condition, type Figure, type LimitKind, type LoadCondition, type Parameter } from './parts/figures.js';
 export type { Origin, Part, PartSource, Tier } from './parts/part.js';
@@ -34,7 +35,8 @@ export { ORDERS, type Order } from './ranking/index.js';
 export type { Asking, DemandsReport, Explanation, Report } from './report.js';
 export { SPEC_CODES } from './spec/codes.js';
 export { draftFile } from './spec/draft-file.js';
-export { readStage } from './spec/read.js';
+export { movableInputs, type MovableInput } from './spec/movable.js';
+export { readStage, stageReader } from './spec/read.js';
 export { renderStageHelp } from './spec/schema.js';
 export type { Override, SpecResult, StageSpec, Topology } from './spec/spec.js';
 export { buildStage, type Stage, type StageResult } from './stage/index.js';

@@ -1,5 +1,5 @@
 import type { AnyDemand } from './demands/index.js';
-import type { WhyAhead } from './explanation/index.js';
+import type { Changes, NothingFits, WhyAhead } from './explanation/index.js';
 import type { Origin } from './parts/part.js';
 import type { Order, RankedPart } from './ranking/index.js';
 import type { JudgedPart, Rejection } from './screening/index.js';
@@ -35,6 +35,8 @@ export interface Report extends DemandsReport {
   readonly rejections: readonly Rejection[];
   readonly nearest: readonly JudgedPart[];
   readonly ahead: WhyAhead | null;
+  /** Where nothing fits: why, and what would change that; null otherwise, or where nobody can rerun the stage. */
+  readonly nothingFits: NothingFits | null;
   readonly asking: Asking;
   readonly data: DataUsed;
   /** Origin of a figure by part and slot; null where none is kept. */
@@ -49,6 +51,8 @@ export interface Explanation extends DemandsReport {
   readonly counts: Report['counts'];
   /** Up to three parts that fit as things stand. */
   readonly fitting: readonly RankedPart[];
+  /** What would let it in; null where it fits, or where nobody can rerun the stage. */
+  readonly changes: Changes | null;
   readonly asking: Asking;
   readonly data: DataUsed;
   readonly origin: (partId: string, slot: string) => Origin | null;

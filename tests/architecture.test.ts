@@ -15,7 +15,8 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   screening: { rooms: ['parts', 'demands', 'verdicts', 'checks'], packages: [] },
   // formulas: the desirability relation is a citation like any other.
   ranking: { rooms: ['quantities', 'formulas', 'parts', 'verdicts', 'screening'], packages: [] },
-  explanation: { rooms: ['quantities', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
+  // spec and stage: what may move, and the stage an option makes; types only. Reading and building are handed in.
+  explanation: { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
   'report.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation'], packages: [] },
   'engine.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts'], packages: [] },
   // Rooms below are types only, as a report carries them; a test of its own holds that.
@@ -30,7 +31,7 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   },
   // The team's stage files: read from disk and judged again; which are kept stands in the catalog.
   saved: { rooms: ['quantities', 'spec', 'stage', 'parts', 'screening', 'engine.ts'], packages: ['node:fs', 'node:path'] },
-  'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'engine.ts', 'report.ts', 'presentation'], packages: [] },
+  'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'explanation', 'engine.ts', 'report.ts', 'presentation'], packages: [] },
   cli: { rooms: ['index.ts', 'catalog', 'intake', 'saved', 'quantities'], packages: ['commander', '@inquirer/prompts', 'node:'] },
   migrations: { rooms: [], packages: ['kysely'] },
 };

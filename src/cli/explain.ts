@@ -6,6 +6,7 @@ import { EXIT, exitOfOutcome } from './exit-code.js';
 import { findPart } from './find-part.js';
 import { judgingInput, type JudgingOptions } from './judging-input.js';
 import { commandProblem, RequestError } from './request-error.js';
+import { changingOf } from './rerun.js';
 import { styleFor, type Outcome, type Session } from './session.js';
 import { readStageOf } from './stage-input.js';
 
@@ -19,12 +20,12 @@ export interface ExplainOperands {
 export async function runExplain(session: Session, operands: ExplainOperands, options: JudgingOptions): Promise<Outcome> {
   const { part, stage: stageFile } = withoutPart(operands) ? { part: undefined, stage: operands.part } : operands;
   const already = [...(options.already ?? []), ...(part === undefined ? [noPart(stageFile)] : [])];
-  const { stage, file } = await readStageOf(stageFile, { ...options, already });
+  const { spec, stage, file, given } = await readStageOf(stageFile, { ...options, already });
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
     const found = findPart(source.parts, part ?? '', (id) => catalog.withdrawn(id));
     if (!found.ok) throw new RequestError([found.problem], EXIT.request);
-    const explanation = explain(stage, source, { part: found.part, asking });
+    const explanation = explain(stage, source, { part: found.part, asking, changing: changingOf(spec, given) });
     const exit = exitOfOutcome(explanation.judged.outcome);
     if (options.json === true) return { text: explanationJson(explanation), exit };
     return { text: renderExplanation(explanation, styleFor(session, options), commandContext(file, options)), exit };

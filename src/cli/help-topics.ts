@@ -87,6 +87,18 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
     { text: "railfit stages add FILE --part ID keeps a stage file by its path, with the part chosen for it; railfit stages lists them, railfit stages remove FILE forgets one. Every import then tells which of them are answered differently: first choice, how many fit, and how the chosen part stands before and after." },
     { text: 'railfit check tells whether the chosen parts still fit, for the stages named or for every saved one. It exits with the worst of its stages: 2 where the question cannot be asked (no such file, no stage, no such part, no part chosen), 4 where one cannot be decided, 1 where one does not fit or was withdrawn, 0 where all fit.' },
   ],
+  changes: () => [
+    { text: 'railfit explain PART STAGE ends with what would let the part in: smallest sets of one, two or three changes, each rounded to the safe side, judged again in full, and printed as a command that pastes back. A shortlist where nothing fits tells which demands together rule everything out, how many parts each alone leaves, and the smallest changes that let parts in.' },
+    { text: 'mayChange in the stage file names what may move: fields, or maps with all they hold (mayChange: [limits, gain, signal.frequency]). Without it the limits, the price and the package may. Supply, signal, load, temperature and approval stay fixed unless they are named.' },
+    {
+      pairs: [
+        ['factor', 'how far a field moves, new to old; 20 °C count as twice, a swing given up counts as its share, words not at all. Answers are sorted by the largest of their factors'],
+        ['circuit', 'an isolation resistor, a feedback capacitor, other feedback resistors, a moved or buffered reference, the load to the other rail: offered where the stage with it passes'],
+        ['or', 'a calibration of the offset, the gain split over two stages: no field of the stage says so; computed beside it, and it says how'],
+      ],
+    },
+    { text: 'A limit moves only as far as it still says something: a phase margin not below 30°, a DC error, a noise or a swing loss not beyond half the swing, an error not beyond 50 %.' },
+  ],
   codes: () => [{ pairs: CODE_PAGES.map(({ code, title }) => [code, title] as const) }, { text: 'railfit help CODE shows one of them.' }],
   cautions: () => [CAUTIONS, { text: 'Not modelled: layout, electromagnetic interference, long-term drift, self-heating. Generic sets are invented classes of parts, not something to order.' }],
 };

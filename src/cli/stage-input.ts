@@ -4,6 +4,7 @@ import type { Problem } from '../quantities/problem.js';
 import { EXIT } from './exit-code.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { decodeStage } from './decode-stage.js';
+import type { GivenStage } from './rerun.js';
 import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
 /** The options that override the stage file. */
@@ -48,8 +49,16 @@ export function overridesOf(options: StageOptions): { overrides: Override[]; pro
   return { overrides, problems };
 }
 
+/** The stage of a command, where it came from, and what it takes to read it again under further options. */
+export interface StageInput {
+  readonly spec: StageSpec;
+  readonly stage: Stage;
+  readonly file: string | null;
+  readonly given: GivenStage;
+}
+
 /** Reads the stage of a command: a file, `-` for standard input, or options alone. Everything wrong is reported at once. */
-export async function readStageOf(operand: string | undefined, options: StageOptions): Promise<{ spec: StageSpec; stage: Stage; file: string | null }> {
+export async function readStageOf(operand: string | undefined, options: StageOptions): Promise<StageInput> {
   const { overrides, problems } = overridesOf(options);
   const before = [...(options.already ?? []), ...problems];
   const text = operand === undefined ? null : await textOf(operand);
@@ -60,7 +69,7 @@ export async function readStageOf(operand: string | undefined, options: StageOpt
   const built = buildStage(read.spec);
   if (!built.ok) throw refused([...before, ...built.problems.map((problem) => inFile(problem, file))]);
   if (before.length > 0) throw refused(before);
-  return { spec: read.spec, stage: built.stage, file };
+  return { spec: read.spec, stage: built.stage, file, given: { text, overrides } };
 }
 
 function refused(problems: readonly Problem[]): RequestError {

@@ -1,4 +1,4 @@
-export { deriveDemands } from './derive.js';
+export { demandsWhenAsked, deriveDemands } from './derive.js';
 export { CHECK_IDS, listDemands } from './demand.js';
 export type {
   AnyDemand, CheckId, Corner, DcErrorDemand, Demands, DirectedPeak, HeadroomDemand, HeadroomVertex, NumberDemand, OutputCurrentDemand, PriceDemand, Sense,

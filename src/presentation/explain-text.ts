@@ -1,6 +1,7 @@
 import type { Explanation } from '../report.js';
 import { priceText } from './amounts.js';
 import { cautionLine, failingCheck, openCheck, passingCheck, passingInShort } from './check-text.js';
+import { changesLines } from './changes-text.js';
 import { batteryText, swingText } from './budget-text.js';
 import { commandOf, nextLines, type Offer } from './commands.js';
 import { confirmationInFull } from './confirm-text.js';
@@ -28,6 +29,7 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     informedLines(judged, style),
     cautionsOf(judged).flatMap((caution) => cautionLine(caution, style)),
     remedyLines(explanation, style, context),
+    changesLines(explanation, style, context),
     confirmLines(explanation, style),
     fittingLines(explanation, style),
     [

@@ -4,6 +4,7 @@ import type { Problem } from '../quantities/problem.js';
 import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js';
 import type { Confirmation, JudgedPart } from '../screening/index.js';
 import type { RankedPart } from '../ranking/index.js';
+import { changesJson, waysOutJson } from './changes-json.js';
 import { hazardText } from './hazard-text.js';
 import { problemJson } from './problem-json.js';
 import { stageJson } from './stage-json.js';
@@ -28,6 +29,7 @@ export function shortlistJson(report: Report, options: { readonly top: number; r
     rejections: report.rejections,
     nearest: report.nearest.map(judged),
     ahead: report.ahead,
+    ...waysOutJson(report),
     ...(options.all ? { rejected: report.rejected.map(judged) } : {}),
     asking: report.asking,
     data: dataJson(report.data),
@@ -48,8 +50,7 @@ export function explanationJson(explanation: Explanation): string {
     verdicts: judged.verdicts.map((verdict) => verdictJson(verdict, part.id, origin)),
     confirm: judged.confirm.map(confirmationJson),
     ...informed(judged),
-    changes: null,
-    changesReason: 'not-built',
+    ...changesJson(explanation),
     cautions: cautionsOf(judged),
     fitting: explanation.fitting.map((one) => one.part.id),
     asking: explanation.asking,

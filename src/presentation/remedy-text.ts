@@ -34,8 +34,10 @@ export function remedyLines(explanation: Explanation, style: Style, context: Com
 }
 
 /** Components that turn a check, as an option that pastes back. */
-function fittings({ judged }: Explanation, style: Style, context: CommandContext): string[] {
-  const offered = judged.verdicts.flatMap((verdict) => (verdict.remedies ?? []).map((remedy) => ({ verdict, remedy })));
+function fittings({ judged, changes }: Explanation, style: Style, context: CommandContext): string[] {
+  // What lets the part in by itself or with others stands there, judged in full.
+  const told = new Set(changes?.options.flatMap(({ moves }) => moves.map(({ path }) => path)));
+  const offered = judged.verdicts.flatMap((verdict) => (verdict.remedies ?? []).filter(({ path }) => !told.has(path)).map((remedy) => ({ verdict, remedy })));
   return offered.flatMap(({ verdict, remedy }) => [
     ...paragraph(`${remedy.path} ${glued(remedy.text)}: ${verdict.title} ${checkAmount(verdict, remedy.offered)} with it, this check computed again; ${glued(remedy.cost)}`, style, { lead: '  - ', indent: 4 }),
     ...commandLines(commandOf(context, ['explain', judged.part.id], ['--set', `${remedy.path}=${asciiText(remedy.text).replaceAll(' ', '')}`]), style, '    '),

@@ -12,6 +12,7 @@ import { noteLines } from './notes.js';
 import { finished, GLUE } from './spelling.js';
 import { assumptionLines, stageCautions, stageLines } from './stage-text.js';
 import type { CommandContext, Style } from './style.js';
+import { conflictLines, waysOutLines } from './ways-out-text.js';
 import { undecidedLines } from './undecided-text.js';
 import { rejectedLines } from './rejected-text.js';
 import { checkWords, counted } from './words.js';
@@ -26,6 +27,8 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
     [...fitLines(report, style), ...undecidedLines(report, style)],
     [...legendLine(report, style), ...orderLine(report, style)],
     aheadLines(report, style),
+    conflictLines(report, style),
+    waysOutLines(report, style, context),
     report.fit.length < FEW ? nearestLines(report, style) : [],
     histogram(report, style),
     style.all ? rejectedLines(report, style) : [],
@@ -92,7 +95,7 @@ function offers(report: Report, context: CommandContext): Offer[] {
 
 /** Giving up a little swing is the usual way out where only the rails stand in the way; tried, not promised. */
 function lossOffer(report: Report, context: CommandContext): Offer[] {
-  const loss = report.fit.length > 0 ? null : swingLossToTry(report);
+  const loss = report.fit.length > 0 || (report.nothingFits?.changes.length ?? 0) > 0 ? null : swingLossToTry(report);
   if (loss === null) return [];
   const text = asciiText(formatQuantity(loss, 'V', { digits: 2, round: 'up' }));
   return [{ words: commandOf(context, ['shortlist'], ['--set', `limits.swingLoss=${text.replace(' ', '')}`]), why: `to try: gives up ${text} of swing at each rail` }];

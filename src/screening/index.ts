@@ -1,4 +1,5 @@
 export { judgePart, judging, type Judging } from './judge.js';
+export { probePart, type Probe, type Probed } from './probe.js';
 export type { BatteryLife } from './battery.js';
 export type { DynamicRange } from './dynamic-range.js';
 export type { PartHazard } from './hazards.js';

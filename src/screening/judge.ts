@@ -62,7 +62,7 @@ function verdictsOf(run: Judging, part: Part): Verdict[] {
   return [...built, ...run.demands.unbuilt.map(notBuilt)].sort((a, b) => order(a) - order(b));
 }
 
-function rulesFor(run: Judging, part: Part): ReadingRules {
+export function rulesFor(run: Judging, part: Part): ReadingRules {
   const classWorst = part.class === null ? null : (run.classes.get(part.class) ?? null);
   return { operating: run.demands.operating, strict: run.strict, classWorst };
 }

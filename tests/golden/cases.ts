@@ -47,6 +47,8 @@ export const DOCUMENTS: readonly GoldenCase[] = [
   { file: 'explain.fits.json', words: ['explain', FITS, PROBE, '--json'], exit: 0 },
   { file: 'explain.undecided.json', words: ['explain', UNDECIDED, PROBE, '--json'], exit: 4 },
   { file: 'explain.rejected.json', words: ['explain', REJECTED, PROBE, '--json'], exit: 1 },
+  { file: 'explain.changes.json', words: ['explain', 'GX-CMOS-1M-RRIO', PROBE, '--json'], exit: 1 },
+  { file: 'shortlist.nothing-fits.json', words: ['shortlist', PROBE, '--set', 'limits.supplyCurrent=200 nA', '--json'], exit: 1 },
   { file: 'parts.json', words: ['parts', '--json'], exit: 0 },
   { file: 'parts.failing.json', words: ['parts', '--failing', 'dc-error', '--stage', PROBE, '--json'], exit: 0 },
   { file: 'parts.csv', words: ['parts', '--csv'], exit: 0, told: 'note: 1 cell starts like a formula and got an apostrophe in front; import takes it off again, --raw leaves it out\n' },

@@ -1,5 +1,6 @@
 import * as z from 'zod';
 import { asking, data } from './answer.js';
+import { change } from './change.js';
 import { demand } from './demand.js';
 import { envelope } from './envelope.js';
 import { groupCounts, judgedPart, rankedPart } from './judged-part.js';
@@ -27,6 +28,17 @@ const ahead = z.strictObject({
   worse: z.array(difference).describe('Where the second does'),
 });
 
+const blamed = z.strictObject({
+  check: z.string(),
+  leaves: count('Parts this check alone would leave'),
+  alone: count('Parts that fail nothing else'),
+});
+
+const nothingFits = z.strictObject({
+  conflict: z.array(blamed).describe('Checks that together rule out every part that does not fit, none of them superfluous'),
+  changes: z.array(change).describe('Smallest changes that let parts in, least factor first; giving up swing first where the output is wanted at a rail'),
+});
+
 /** `railfit shortlist --json` */
 export const shortlist = envelope('shortlist', 'The whole catalog judged on one stage, and what fits in order', {
   stage,
@@ -37,6 +49,7 @@ export const shortlist = envelope('shortlist', 'The whole catalog judged on one 
   rejections: z.array(z.strictObject({ check: z.string(), parts: count('Parts that fail it') })).describe('Most frequent first; one part can fail several'),
   nearest: z.array(judgedPart).describe('Up to three rejected parts closest to fitting'),
   ahead: ahead.nullable().describe('Why 1 is ahead of 2; null when fewer than two fit'),
+  nothingFits: nothingFits.optional().describe('Only where no part fits'),
   rejected: z.array(judgedPart).optional().describe('With --all: every rejected part'),
   asking,
   data,
