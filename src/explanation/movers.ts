@@ -46,6 +46,7 @@ const LIMITS: Readonly<Record<string, Limit>> = {
   'limits.supplyCurrent': { direction: 'up', touches: ['supply-current'] },
   'limits.settling.within': { direction: 'up', touches: ['settling', 'gain-bandwidth'] },
   'limits.settling.to': { direction: 'up', touches: ['settling', 'gain-bandwidth'], most: () => HALF },
+  'limits.supplyRipple': { direction: 'up', touches: ['supply-ripple'], most: (stage) => (spanOf(stage) > 0 ? HALF * spanOf(stage) : Number.POSITIVE_INFINITY) },
   'limits.startUp': { direction: 'up', touches: ['start-up'] },
   'limits.phaseMargin': { direction: 'down', touches: ['phase-margin'], most: () => LEAST_MARGIN },
   'limits.junctionTemperature': { direction: 'up', touches: ['junction-temperature'] },

@@ -32,6 +32,7 @@ const LIMITS: readonly Stated[] = [
   { path: 'limits.supplyCurrent', unit: 'A', of: ({ limits }) => limits.supplyCurrent },
   { path: 'limits.settling.within', unit: 's', of: ({ limits }) => limits.settling?.within },
   { path: 'limits.settling.to', unit: '%', of: ({ limits }) => limits.settling?.to },
+  { path: 'limits.supplyRipple', unit: 'Vpk', of: ({ limits }) => limits.supplyRipple },
   { path: 'limits.startUp', unit: 's', of: ({ limits }) => limits.startUp },
   { path: 'limits.phaseMargin', unit: '°', of: ({ topology, limits }) => limits.phaseMargin ?? (topology === 'relaxation-oscillator' ? undefined : USUAL_MARGIN) },
   { path: 'limits.junctionTemperature', unit: '°C', of: ({ limits }) => limits.junctionTemperature },
