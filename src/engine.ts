@@ -1,5 +1,5 @@
 import { deriveDemands, listDemands } from './demands/index.js';
-import { changesFor, whyAhead, whyNothingFits, type Changing } from './explanation/index.js';
+import { cellsOf, changesFor, lookupList, lookupsOf, sensitivitiesOf, whyAhead, whyNothingFits, type Changing, type LookupContext } from './explanation/index.js';
 import type { Part, PartSource } from './parts/part.js';
 import { rank } from './ranking/index.js';
 import type { Asking, DataUsed, DemandsReport, Explanation, Report } from './report.js';
@@ -72,11 +72,23 @@ export function explain(stage: Stage, source: PartSource, request: ExplainReques
     rank: ranked?.rank ?? null,
     counts: { parts: source.parts.length, fit: count('fits'), undecided: count('undecided'), rejected: count('does-not-fit') },
     fitting: fit.filter((one) => one !== ranked).slice(0, 3),
+    lookups: judged.outcome === 'undecided' ? lookupsOf({ run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
+    sensitivity: sensitivitiesOf(run, judged),
     changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: source.parts, strict: asking.strict }, changing),
     asking,
     data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
   };
+}
+
+/** The same report with what to look up, so that undecided parts are decided. The source must be the one it was made from. */
+export function withLookups(report: Report, source: PartSource): Report {
+  return { ...report, lookups: lookupList(lookupContext(report, source), report.undecided) };
+}
+
+function lookupContext({ stage, asking, fit }: Report, source: PartSource): LookupContext {
+  const run = judging(deriveDemands(stage), source.parts, asking.strict);
+  return { run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order };
 }
 
 function dataOf(source: PartSource): DataUsed {

@@ -1,5 +1,5 @@
 import type { AnyDemand } from './demands/index.js';
-import type { Changes, NothingFits, WhyAhead } from './explanation/index.js';
+import type { Changes, LookupList, NothingFits, PartLookups, Sensitivity, WhyAhead } from './explanation/index.js';
 import type { Origin } from './parts/part.js';
 import type { Order, RankedPart } from './ranking/index.js';
 import type { JudgedPart, Rejection } from './screening/index.js';
@@ -37,6 +37,8 @@ export interface Report extends DemandsReport {
   readonly ahead: WhyAhead | null;
   /** Where nothing fits: why, and what would change that; null otherwise, or where nobody can rerun the stage. */
   readonly nothingFits: NothingFits | null;
+  /** What to look up; only where it was asked for. */
+  readonly lookups?: LookupList;
   readonly asking: Asking;
   readonly data: DataUsed;
   /** Origin of a figure by part and slot; null where none is kept. */
@@ -49,6 +51,10 @@ export interface Explanation extends DemandsReport {
   /** Place among what fits; null when it does not. */
   readonly rank: number | null;
   readonly counts: Report['counts'];
+  /** Undecided only: what would decide it. */
+  readonly lookups: PartLookups | null;
+  /** Whether verdicts hang on borrowed or typical figures. */
+  readonly sensitivity: readonly Sensitivity[];
   /** Up to three parts that fit as things stand. */
   readonly fitting: readonly RankedPart[];
   /** What would let it in; null where it fits, or where nobody can rerun the stage. */

@@ -15,8 +15,8 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   screening: { rooms: ['parts', 'demands', 'verdicts', 'checks'], packages: [] },
   // formulas: the desirability relation is a citation like any other.
   ranking: { rooms: ['quantities', 'formulas', 'parts', 'verdicts', 'screening'], packages: [] },
-  // spec and stage: what may move, and the stage an option makes; types only. Reading and building are handed in.
-  explanation: { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
+  // spec and stage: what may move, and the stage an option makes; types only, reading and building are handed in. formulas: bisection, where a verdict turns.
+  explanation: { rooms: ['quantities', 'formulas', 'spec', 'stage', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
   'report.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation'], packages: [] },
   'engine.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts'], packages: [] },
   // Rooms below are types only, as a report carries them; a test of its own holds that.

@@ -10,6 +10,8 @@ import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
 import type { CurrentImport } from './imports.js';
 import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
+import { listInForce } from './list-in-force.js';
+import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
 import type { SavedStage } from './saved-stages.js';
 import { removeStages, savedStages, saveStages } from './saved-stages.js';
@@ -26,6 +28,7 @@ export { GUARDS } from './guards.js';
 export type { Guard, GuardName } from './guards.js';
 export type { ImportOptions, ImportResult } from './import-list.js';
 export type { CurrentImport, ImportCounts } from './imports.js';
+export type { ListInForce } from './list-in-force.js';
 export type { Progress } from './progress.js';
 export type { SavedStage } from './saved-stages.js';
 export type { ColumnSubject, ScaledColumn } from './scaling.js';
@@ -50,6 +53,8 @@ export interface Catalog {
   approvedPart(partId: string): Part | null;
   /** The generic sets, by id. */
   genericParts(): readonly Part[];
+  /** The approved list in force with its records, to be patched; null when none was imported. */
+  listInForce(): ListInForce | null;
   /** The columns of an earlier import as they were read. */
   columnsOf(imported: CurrentImport): readonly ListColumn[];
   /** The column that filled a slot of most parts in an earlier import; null when none did. */
@@ -94,6 +99,7 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
     importList: (list, options = {}) => guarded(file, () => importList(database, asTier(list, 'approved'), options)),
     approvedPart: (partId) => guarded(file, () => partInForce(database, 'approved', partId)),
     genericParts: () => guarded(file, () => partsInForce(database, 'generic')),
+    listInForce: () => guarded(file, () => database.transaction(() => listInForce(database))()),
     columnsOf: ({ id }) => guarded(file, () => tableOf(id).all),
     columnOf: ({ id }, slot) => guarded(file, () => columnOf(tableOf(id), slot)),
     originIn: (imported, partId, slot) => guarded(file, () => origin({ tier: 'approved', from: imported, partId, slot })),

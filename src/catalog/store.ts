@@ -56,11 +56,12 @@ export function undoImport(database: Database.Database, tier: Tier): boolean {
 }
 
 function recordWriter(database: Database.Database, list: ReadList, importId: number): (id: string, index: number) => void {
-  const insert = database.prepare('insert into record (import_id, part_id, line, row, cells, figures) values (?, ?, ?, ?, ?, ?)');
+  const insert = database.prepare('insert into record (import_id, part_id, line, row, cells, figures, patched) values (?, ?, ?, ?, ?, ?, ?)');
   return (id, index) => {
     const record = list.records[index];
     if (record === undefined) return;
     const others = list.sources.others.get(index);
-    insert.run(importId, id, record.line, record.row, JSON.stringify(record.cells), others === undefined ? null : JSON.stringify(Object.fromEntries(others)));
+    const patched = list.patched?.get(index);
+    insert.run(importId, id, record.line, record.row, JSON.stringify(record.cells), others === undefined ? null : JSON.stringify(Object.fromEntries(others)), patched === undefined ? null : JSON.stringify(patched));
   };
 }

@@ -79,6 +79,12 @@ const GUARDS: readonly CodePage[] = [
   page('I701', 'a large part of the list is gone', 'More than a fifth of the parts in force would be withdrawn: usually a filter was left on, or the wrong sheet was saved.', ['9 of 20 parts missing', 'the whole list; railfit import list.csv --accept removed if they are gone']),
   page('I702', 'lifecycle getting better in bulk', 'Parts seldom come back from the end of their life; many at once are a column that slipped or an old file.', ['obsolete becomes active for 6 of 20 parts', 'the lifecycle the makers publish; --accept lifecycle if it is right']),
   page('I703', 'an older file', 'These very bytes were in force before and another list has replaced them; importing them again would bring old figures back.', ['march.csv after april.csv', 'railfit import --undo takes the last import back; --accept older imports the old file']),
+  page('I801', 'no such part in the list', 'A look-up sheet fills cells of parts that are on the list in force; a new part belongs in the list itself.', ['HOUSE-99, which is not on the list', 'HOUSE-09, or the new part in the list']),
+  page('I802', 'nothing filled', 'Every cell of the look-up sheet is empty or still holds its question mark.', ['? in every cell', '3.5 in place of the question mark']),
+  page('I803', 'known already, and another value', 'A look-up sheet fills gaps. What the list says is corrected in the list, so that one place is right.', ['offset drift max 5 where the list says 4', 'an empty cell in the sheet; the list corrected and imported']),
+  page('I804', 'a column of the sheet that is no figure', 'A changed header would lose what was filled in below it.', ['offset drfit max (µV/K)', 'offset drift max (µV/K)']),
+  page('I805', 'a look-up sheet is no list', 'Importing it as the list would withdraw every part it does not name.', ['railfit import lookups.csv', 'railfit import lookups.csv --patch']),
+  page('I806', 'no list to add to', 'A look-up sheet needs the list it was made for.', ['railfit import lookups.csv --patch on an empty catalog', 'railfit import approved.csv']),
 ];
 
 /** Every code a message can carry, in order. A test holds this list against the source. */

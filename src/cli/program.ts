@@ -5,6 +5,7 @@ import type { DraftOptions } from './draft.js';
 import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
+import type { ShortlistOptions } from './shortlist.js';
 import type { StageOptions } from './stage-input.js';
 import type { StagesOptions } from './stages.js';
 import { GUARD_WORDS, guardWord } from './guard-words.js';
@@ -28,12 +29,16 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
 
   judging(add(program, 'shortlist [STAGE]', 'derive, judge the whole catalog, rank, explain'))
     .option('--csv', 'the list as a table')
+    .option('--lookups', 'what to look up so that undecided parts are decided, most worth first')
+    .option('-o, --output <FILE>', 'with --lookups: a new sheet to fill in, taken back by import --patch')
+    .option('--force', 'with -o: write over an existing file')
     .action(async (...received) => {
-      const { command, options } = lastOf<JudgingOptions>(received);
+      const { command, options } = lastOf<ShortlistOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver(await (await import('./shortlist.js')).runShortlist(session, operands[0], { ...options, already: problems }));
     });
   judging(add(program, 'explain [PART] [STAGE]', 'every check of one part on this stage'))
+    .option('--formulas', 'the relation, numbers and source of each check')
     .action(async (...received) => {
       const { command, options } = lastOf<JudgingOptions>(received);
       const { operands, problems } = operandsOf(command, 2);
@@ -73,6 +78,7 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     });
   withReadingOptions(add(program, 'import [FILE]', "read the team's approved list, all or nothing"))
     .option('-n, --dry-run', 'the same report, nothing is written')
+    .option('--patch', 'a filled look-up sheet: only its filled cells change the list in force')
     .option('--undo', 'return to the list before the last import')
     .option('--accept <WHAT>', `what a guard held back: ${GUARD_WORDS.join(', ')} (again for another)`, guardWord)
     .option('--errors <FILE>', 'one line per faulty cell, for the owner of the list')

@@ -1,4 +1,4 @@
-import type { Part, Status, Tier } from '../parts/part.js';
+import type { Origin, Part, Status, Tier } from '../parts/part.js';
 import type { Problem } from '../quantities/problem.js';
 import type { ColumnReading } from './column-reading.js';
 import type { ClassProposal } from './class-proposal.js';
@@ -41,6 +41,8 @@ export interface ReadList {
   readonly records: readonly ListRecord[];
   /** Where figures stand that no header names. */
   readonly sources: ListSources;
+  /** By index of the part, by slot or identity field: what look-up sheets added to the list. Absent without any. */
+  readonly patched?: ReadonlyMap<number, Readonly<Record<string, PatchedCell>>>;
   /** SHA-256 over the bytes of the file, hexadecimal. */
   readonly sha256: string;
   readonly delimiter: Delimiter;
@@ -54,6 +56,9 @@ export interface ReadList {
   /** Classes the figures of parts without one are near to; not applied. */
   readonly proposals: readonly ClassProposal[];
 }
+
+/** A cell of a look-up sheet a figure came from. */
+export type PatchedCell = Extract<Origin, { kind: 'cell' }>;
 
 /** A list that was refused whole: every fault, in file order. */
 export interface RefusedList {

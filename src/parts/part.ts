@@ -1,4 +1,4 @@
-import type { Figure } from './figures.js';
+import type { Condition, Figure, LimitKind } from './figures.js';
 
 export type Tier = 'approved' | 'generic';
 export const STATUSES = ['approved', 'conditional', 'restricted', 'not-approved'] as const;
@@ -58,6 +58,23 @@ export type Origin =
   | { readonly kind: 'class'; readonly class: string }
   | { readonly kind: 'assumption'; readonly text: string };
 
+/** A cell of the team's list where a figure of one part stands, or would stand. */
+export interface ListCell {
+  readonly file: string;
+  readonly line: number;
+  readonly row: number;
+  readonly column: number;
+  readonly columnLetter: string;
+  readonly header: string;
+  /** As written. */
+  readonly cell: string;
+  /** Nothing is written there, or a word for nothing. */
+  readonly empty: boolean;
+  /** Null where the header does not say it: the cell does. Always null for identity columns. */
+  readonly kind: LimitKind | null;
+  readonly condition: Condition;
+}
+
 /** What the engine asks of whoever keeps the parts. Pure: the engine never knows there is a database. */
 export interface PartSource {
   readonly parts: readonly Part[];
@@ -65,4 +82,6 @@ export interface PartSource {
   readonly sha256: string;
   /** Origin of the figure in a slot (`figureSlot`) of a part; null when not kept. */
   origin(partId: string, slot: string): Origin | null;
+  /** The cells of a part whose columns hold this parameter or identity field, in column order; absent where no list is kept. */
+  cells?(partId: string, figure: string): readonly ListCell[];
 }

@@ -7,9 +7,12 @@ import { commandOf, nextLines, type Offer } from './commands.js';
 import { confirmationInFull } from './confirm-text.js';
 import { dataLine } from './data-text.js';
 import { cautionsOf } from './json.js';
+import { formulaLines } from './formula-text.js';
 import { paragraph } from './layout.js';
+import { partLookupLines } from './part-lookup-text.js';
 import { remedyLines } from './remedy-text.js';
 import { safeLine } from './safe-text.js';
+import { sensitivityLines } from './sensitivity-text.js';
 import { finished, glued, held } from './spelling.js';
 import { assumptionLines, stageCautions, stageInShort } from './stage-text.js';
 import { toned, type CommandContext, type Style } from './style.js';
@@ -26,8 +29,11 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     ...of('fail').map((verdict) => failingCheck(verdict, origins, style)),
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
     ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
+    formulaLines(explanation, style),
     informedLines(judged, style),
     cautionsOf(judged).flatMap((caution) => cautionLine(caution, style)),
+    sensitivityLines(explanation.sensitivity, style),
+    partLookupLines(explanation, style, context),
     remedyLines(explanation, style, context),
     changesLines(explanation, style, context),
     confirmLines(explanation, style),

@@ -6,6 +6,7 @@ import type { Confirmation, JudgedPart } from '../screening/index.js';
 import type { RankedPart } from '../ranking/index.js';
 import { changesJson, waysOutJson } from './changes-json.js';
 import { hazardText } from './hazard-text.js';
+import { partLookupsJson, sensitivityJson } from './lookup-json.js';
 import { problemJson } from './problem-json.js';
 import { stageJson } from './stage-json.js';
 import { verdictJson, type OriginOf } from './verdict-json.js';
@@ -51,6 +52,8 @@ export function explanationJson(explanation: Explanation): string {
     confirm: judged.confirm.map(confirmationJson),
     ...informed(judged),
     ...changesJson(explanation),
+    ...(explanation.lookups === null ? {} : { lookups: partLookupsJson(explanation.lookups) }),
+    sensitivity: explanation.sensitivity.map(sensitivityJson),
     cautions: cautionsOf(judged),
     fitting: explanation.fitting.map((one) => one.part.id),
     asking: explanation.asking,
@@ -118,7 +121,7 @@ export function cautionsOf({ part, verdicts: all, current, hazards }: JudgedPart
   ];
 }
 
-function dataJson(data: DataUsed): object {
+export function dataJson(data: DataUsed): object {
   return { catalog: data.catalog, rules: data.rules };
 }
 

@@ -15,9 +15,11 @@ import { figureWords, passingSide } from './words.js';
 /** What to do about open checks: look the figure up, assume it for one run, or measure it. */
 export function remedyLines(explanation: Explanation, style: Style, context: CommandContext): string[] {
   const open = explanation.judged.verdicts.filter((verdict) => verdict.outcome === 'unknown');
-  const steps = [...lookups(open, explanation), ...unbuilt(open)];
+  // Where the figures that would decide it were found, they stand in a block of their own.
+  const isSettled = explanation.lookups?.settles === true;
+  const steps = [...(isSettled ? [] : lookups(open, explanation)), ...unbuilt(open)];
   const fitted = fittings(explanation, style, context);
-  const assumption = assumeWords(open, explanation);
+  const assumption = isSettled ? null : assumeWords(open, explanation);
   const measured = open.flatMap(({ decidesAt }) => (decidesAt !== null && MEASURABLE.has(decidesAt.figure) ? [figureWords(decidesAt.figure)] : []));
   const listed: string[][] = steps.map((step) => paragraph(step, style, { lead: '  - ', indent: 4 }));
   if (assumption !== null) {

@@ -8,6 +8,7 @@ import { dataLine } from './data-text.js';
 import { emptyReason, nearestLines, swingLossToTry } from './empty-answer.js';
 import { legendLine, fitLines } from './fit-table.js';
 import { flow, paragraph } from './layout.js';
+import { lookupSummary } from './lookup-text.js';
 import { noteLines } from './notes.js';
 import { finished, GLUE } from './spelling.js';
 import { assumptionLines, stageCautions, stageLines } from './stage-text.js';
@@ -33,6 +34,7 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
     histogram(report, style),
     style.all ? rejectedLines(report, style) : [],
     noteLines(report, style),
+    lookupSummary(report, style, context),
     closing(report, style),
     nextLines(offers(report, context), style),
   ];

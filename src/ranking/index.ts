@@ -1,3 +1,3 @@
 export { comfortOf, marginForOrder } from './comfort.js';
 export { meritOf, priceInEuro, type Merit } from './merit.js';
-export { ORDERS, rank, STEPS, type Order, type RankedPart } from './rank.js';
+export { ORDERS, placeOf, rank, STEPS, type Order, type RankedPart } from './rank.js';

@@ -30,6 +30,16 @@ export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): Ranked
   return lines.map(({ first, variants }, at) => ({ ...first, rank: at + 1, dominatedBy: dominators[at]?.part.id ?? null, variants }));
 }
 
+/** The place one more part that fits would take among ranked lines, and how many lines there would be; a variant shares the line of its family. */
+export function placeOf(judged: JudgedPart, fit: readonly RankedPart[], order: Order = 'merit'): { readonly rank: number; readonly of: number } {
+  const candidate: Candidate = { ...judged, merit: meritOf(judged), tightest: tightestOf(judged) };
+  const others = fit.filter((line) => line.part.id !== judged.part.id);
+  const ahead = others.filter((line) => compareIn(order, line, candidate) < 0);
+  const kin = others.find((line) => linesOf([line, candidate]).length === 1);
+  const leader = kin !== undefined && ahead.includes(kin) ? ahead.indexOf(kin) + 1 : ahead.length + 1;
+  return { rank: leader, of: others.length + (kin === undefined ? 1 : 0) };
+}
+
 /** What decides between two: the steps of the order, each 0 when they are equal there. */
 export const STEPS: readonly { readonly name: string; readonly compare: (a: Candidate, b: Candidate) => number }[] = [
   { name: 'tier', compare: (a, b) => Number(a.part.tier === 'generic') - Number(b.part.tier === 'generic') },

@@ -1,4 +1,4 @@
-export { judgePart, judging, type Judging } from './judge.js';
+export { judgePart, judging, rulesFor, verdictsOf, type Judging } from './judge.js';
 export { probePart, type Probe, type Probed } from './probe.js';
 export type { BatteryLife } from './battery.js';
 export type { DynamicRange } from './dynamic-range.js';

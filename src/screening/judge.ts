@@ -50,18 +50,21 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
   };
 }
 
-function verdictsOf(run: Judging, part: Part): Verdict[] {
+/** The verdicts of one part in the order of the checks; `only` these checks where given. */
+export function verdictsOf(run: Judging, part: Part, only?: ReadonlySet<string>): Verdict[] {
   const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
   const best = readingsOf({ part, ...rulesFor(run, part), outlook: 'optimistic' });
   const built = CHECKS.flatMap((check) => {
+    if (only !== undefined && !only.has(check.id)) return [];
     const pessimistic = check.judge(run.demands, worst);
     const optimistic = check.judge(run.demands, best);
     return pessimistic === null || optimistic === null ? [] : [decide(check, pessimistic, optimistic)];
   });
   const order = (verdict: Verdict): number => (CHECK_IDS as readonly string[]).indexOf(verdict.check);
-  return [...built, ...run.demands.unbuilt.map(notBuilt)].sort((a, b) => order(a) - order(b));
+  return [...built, ...(only === undefined ? run.demands.unbuilt.map(notBuilt) : [])].sort((a, b) => order(a) - order(b));
 }
 
+/** How the figures of a part are read in this run. */
 export function rulesFor(run: Judging, part: Part): ReadingRules {
   const classWorst = part.class === null ? null : (run.classes.get(part.class) ?? null);
   return { operating: run.demands.operating, strict: run.strict, classWorst };

@@ -43,6 +43,7 @@ export const DOCUMENTS: readonly GoldenCase[] = [
   ]),
   { file: 'shortlist.all.json', words: ['shortlist', PROBE, '--json', '--all'], exit: 0 },
   { file: 'shortlist.asked.json', words: ['shortlist', PROBE, '--json', '--top', '2', '--strict', '--order', 'price', '--assume', `${UNDECIDED}.offsetDrift=4µV/K`], exit: 0 },
+  { file: 'lookups.json', words: ['shortlist', PROBE, '--lookups', '--json'], exit: 0 },
   { file: 'shortlist.csv', words: ['shortlist', PROBE, '--csv'], exit: 0 },
   { file: 'explain.fits.json', words: ['explain', FITS, PROBE, '--json'], exit: 0 },
   { file: 'explain.undecided.json', words: ['explain', UNDECIDED, PROBE, '--json'], exit: 4 },
@@ -92,6 +93,8 @@ export const TEXT_CASES: readonly GoldenCase[] = [
   ...STAGES.filter((stage) => `${stage}.yaml` !== PROBE).map((stage) => ({ file: `text/shortlist.${stage}.100.txt`, words: ['shortlist', `${stage}.yaml`], exit: 0, env: atWidth(100) })),
   { file: 'text/shortlist.all.100.txt', words: ['shortlist', PROBE, '--all'], exit: 0, env: atWidth(100) },
   { file: 'text/explain.sources.100.txt', words: ['explain', REJECTED, PROBE, '--all', '--sources'], exit: 1, env: atWidth(100) },
+  ...[40, 100].map((width) => ({ file: `text/lookups.${width}.txt`, words: ['shortlist', PROBE, '--lookups'], exit: 0, env: atWidth(width) })),
+  { file: 'text/explain.formulas.100.txt', words: ['explain', REJECTED, PROBE, '--formulas'], exit: 1, env: atWidth(100) },
   { file: 'text/shortlist.nothing-fits.100.txt', words: ['shortlist', PROBE, '--set', 'limits.supplyCurrent=1 µA'], exit: 1, env: atWidth(100) },
 ];
 

@@ -3,7 +3,9 @@ import { asking, data } from './answer.js';
 import { advice, change } from './change.js';
 import { envelope } from './envelope.js';
 import { confirmation, informed, outcome, proof, tier } from './judged-part.js';
+import { partLookups } from './lookups.js';
 import { price } from './price.js';
+import { sensitivity } from './sensitivity.js';
 import { stage } from './stage.js';
 import { verdict } from './verdict.js';
 
@@ -32,6 +34,8 @@ export const explanation = envelope('explanation', 'Every check of one part on o
   changes: z.array(change).nullable().describe('What would let it in, least factor first, judged again in full; empty where it fits or nothing that may move does; null with a reason'),
   changesReason: z.enum(['not-built', 'not-asked']).optional().describe('not-built: written by an earlier railfit; not-asked: made without the file to try again'),
   advice: z.array(advice).optional().describe('Ways the stage file cannot say'),
+  lookups: partLookups.optional().describe('Undecided only: what would decide it'),
+  sensitivity: z.array(sensitivity).describe('Whether verdicts hang on borrowed or typical figures'),
   cautions: z.array(z.string()),
   fitting: z.array(z.string()).describe('Up to three parts that fit as things stand'),
   asking,
