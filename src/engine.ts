@@ -1,9 +1,11 @@
 import { deriveDemands, listDemands } from './demands/index.js';
-import { cellsOf, changesFor, lookupList, lookupsOf, sensitivitiesOf, whyAhead, whyNothingFits, type Changing, type LookupContext } from './explanation/index.js';
+import { cellsOf, changesFor, type Changing, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, whyAhead, whyNothingFits } from './explanation/index.js';
+import { classesOf } from './parts/classes.js';
 import type { Part, PartSource } from './parts/part.js';
+import { predictStage, type Prediction } from './prediction/index.js';
 import { rank } from './ranking/index.js';
-import type { Asking, DataUsed, DemandsReport, Explanation, Report } from './report.js';
-import { judgePart, judging, probePart, screen, type PartOutcome } from './screening/index.js';
+import type { Asking, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
+import { type JudgedPart, judgePart, judging, type PartOutcome, probePart, screen } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -74,6 +76,7 @@ export function explain(stage: Stage, source: PartSource, request: ExplainReques
     fitting: fit.filter((one) => one !== ranked).slice(0, 3),
     lookups: judged.outcome === 'undecided' ? lookupsOf({ run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
     sensitivity: sensitivitiesOf(run, judged),
+    predicted: predictedInstead(stage, source, { judged, asking }),
     changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: source.parts, strict: asking.strict }, changing),
     asking,
     data: dataOf(source),
@@ -89,6 +92,29 @@ export function withLookups(report: Report, source: PartSource): Report {
 function lookupContext({ stage, asking, fit }: Report, source: PartSource): LookupContext {
   const run = judging(deriveDemands(stage), source.parts, asking.strict);
   return { run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order };
+}
+
+/** The stage with one part in it, simulated; `compared` beside it. Judges nothing. */
+export function predict(stage: Stage, source: PartSource, request: { readonly part: Part; readonly compared?: Part; readonly asking?: Asking }): PredictionReport {
+  const asking = request.asking ?? PLAIN;
+  const of = (part: Part): Prediction => predictionOf(stage, source, { part, strict: asking.strict });
+  return { prediction: of(request.part), compared: request.compared === undefined ? null : of(request.compared), asking, data: dataOf(source) };
+}
+
+function predictionOf(stage: Stage, source: PartSource, { part, strict }: { readonly part: Part; readonly strict: boolean }): Prediction {
+  const { operating } = deriveDemands(stage);
+  const classWorst = part.class === null ? null : (classesOf(source.parts, operating).get(part.class) ?? null);
+  return predictStage(stage, part, { operating, strict, classWorst });
+}
+
+/** Checks that say only about how it is, or nothing, and what a simulation tells instead. */
+const SIMULATED = ['distortion', 'noise', 'settling'];
+
+function predictedInstead(stage: Stage, source: PartSource, { judged, asking }: { readonly judged: JudgedPart; readonly asking: Asking }): PredictedInstead | null {
+  const remembers = deriveDemands(stage).distortion?.slewing?.remembers === true;
+  const isOpen = ({ check, reason, outcome }: JudgedPart['verdicts'][number]): boolean => reason === 'not-built' || (check === 'distortion' && remembers && outcome !== 'pass');
+  const checks = judged.verdicts.filter((verdict) => SIMULATED.includes(verdict.check) && isOpen(verdict)).map(({ check }) => check);
+  return checks.length === 0 ? null : { checks, prediction: predictionOf(stage, source, { part: judged.part, strict: asking.strict }) };
 }
 
 function dataOf(source: PartSource): DataUsed {

@@ -1,7 +1,7 @@
 /** The public door: a stage and parts in, a judged and ranked report out, and its presenters. No database behind it. */
 export { CHECKS } from './checks/index.js';
 export { CHECK_IDS, type AnyDemand, type CheckId } from './demands/index.js';
-export { demandsOf, explain, RULES, shortlist, withLookups, withWaysOut, type ExplainRequest } from './engine.js';
+export { demandsOf, explain, type ExplainRequest, predict, RULES, shortlist, withLookups, withWaysOut } from './engine.js';
 export type { Change, Changes, Changing, Move, Rerun } from './explanation/index.js';
 export { assumedFigure, hasTwoEnds, limitKindOf, withAssumed } from './parts/assumption.js';
 export { figureSlot, PARAMETERS, type Condition, type Figure, type LimitKind, type LoadCondition, type Parameter } from './parts/figures.js';
@@ -24,6 +24,10 @@ export { renderPart, renderWithdrawn } from './presentation/part-text.js';
 export { partJson, partsJson, type PartLine } from './presentation/parts-json.js';
 export { renderStages, type StagesReport } from './presentation/stages-text.js';
 export { renderParts } from './presentation/parts-text.js';
+export { predictionCsv } from './presentation/prediction-csv.js';
+export { predictionJson } from './presentation/prediction-json.js';
+export { renderPrediction } from './presentation/prediction-text.js';
+export type { Form, FrequencyResponse, Prediction, Quantity, Waveform } from './prediction/index.js';
 export { problemsCsv } from './presentation/problems-csv.js';
 export { renderProblems } from './presentation/problems-text.js';
 export { renderRefusal } from './presentation/refusal-text.js';
@@ -36,7 +40,7 @@ export type { Problem } from './quantities/problem.js';
 export { suggest } from './quantities/suggest.js';
 export { ORDERS, type Order } from './ranking/index.js';
 export type { Lookup, LookupList, PartLookups } from './explanation/index.js';
-export type { Asking, DemandsReport, Explanation, Report } from './report.js';
+export type { Asking, DemandsReport, Explanation, PredictionReport, Report } from './report.js';
 export { SPEC_CODES } from './spec/codes.js';
 export { draftFile } from './spec/draft-file.js';
 export { movableInputs, type MovableInput } from './spec/movable.js';

@@ -1,6 +1,7 @@
 import type { AnyDemand } from './demands/index.js';
 import type { Changes, LookupList, NothingFits, PartLookups, Sensitivity, WhyAhead } from './explanation/index.js';
 import type { Origin } from './parts/part.js';
+import type { Prediction } from './prediction/index.js';
 import type { Order, RankedPart } from './ranking/index.js';
 import type { JudgedPart, Rejection } from './screening/index.js';
 import type { Stage } from './stage/index.js';
@@ -45,6 +46,20 @@ export interface Report extends DemandsReport {
   readonly origin: (partId: string, slot: string) => Origin | null;
 }
 
+/** One part on one stage, simulated; with --compare a second one beside it. */
+export interface PredictionReport {
+  readonly prediction: Prediction;
+  readonly compared: Prediction | null;
+  readonly asking: Asking;
+  readonly data: DataUsed;
+}
+
+/** What no closed form answers, simulated instead: told, not judged. */
+export interface PredictedInstead {
+  readonly checks: readonly string[];
+  readonly prediction: Prediction;
+}
+
 /** One part on one stage. */
 export interface Explanation extends DemandsReport {
   readonly judged: JudgedPart;
@@ -59,6 +74,8 @@ export interface Explanation extends DemandsReport {
   readonly fitting: readonly RankedPart[];
   /** What would let it in; null where it fits, or where nobody can rerun the stage. */
   readonly changes: Changes | null;
+  /** Null where every check has a closed form. */
+  readonly predicted: PredictedInstead | null;
   readonly asking: Asking;
   readonly data: DataUsed;
   readonly origin: (partId: string, slot: string) => Origin | null;

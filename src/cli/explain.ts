@@ -33,7 +33,7 @@ export async function runExplain(session: Session, operands: ExplainOperands, op
 }
 
 /** A stage file alone: the part was forgotten, not the stage. */
-function withoutPart({ part, stage }: ExplainOperands): boolean {
+export function withoutPart({ part, stage }: ExplainOperands): boolean {
   return part !== undefined && stage === undefined && /\.(?:ya?ml|json)$/iu.test(part);
 }
 

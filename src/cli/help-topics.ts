@@ -52,6 +52,19 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
     { text: 'crossover, phase-reversal, clamp and overdrive are judged when the stage writes avoid; otherwise they are cautions and decide nothing. railfit help physics tells how each is modelled and from which source.' },
   ],
   physics: () => PHYSICS_PAGE,
+  prediction: () => [
+    { text: 'railfit predict PART [STAGE] simulates the stage with the figures of one part, in two outcomes: with its typical figures as printed, and with the guaranteed ones as the checks read them pessimistically. It judges nothing and exits 0. --compare PART puts a second part beside it, --csv prints the waveform, --json both waveform and frequency response.' },
+    { text: 'The amplifier is an integrator (gain bandwidth) with a finite gain, a hard limit of its slope, a second pole from its phase margin at unity gain, an output resistance that the load and the network stand behind, input capacitance, offset, and ends of its output at the head-room for the current that flows there. Between the moments where a limit takes hold or lets go the stage is linear and carried on by matrix exponentials, exactly; distortion is a Fourier transform of one settled period.' },
+    { text: 'A figure that is missing takes away what depends on it, with the reason; the rest is predicted all the same. What was left out, and what the model does not have, is printed.' },
+    {
+      pairs: [
+        ['sine, band', 'peaks, clipped and slewing share, distortion of the largest sine at the top frequency'],
+        ['step, pulse', 'the largest step; settling to limits.settling.to, else 0.1 %'],
+        ['integrator', 'with a window the ramp from its reset, else a sine'],
+        ['oscillator', 'a settled period: frequency, duty, edges, levels'],
+      ],
+    },
+  ],
   'exit-codes': () => [{ text: 'Exit codes are frozen.' }, { pairs: EXITS }],
   quantities: () => [
     { text: 'A quantity is read when it has one reading. It is refused when two readings exist and both are usable; railfit never chooses between milli and mega by what looks likely.' },

@@ -7,6 +7,7 @@ import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
 import type { ShortlistOptions } from './shortlist.js';
 import type { StageOptions } from './stage-input.js';
+import type { PredictOptions } from './predict.js';
 import type { StagesOptions } from './stages.js';
 import { GUARD_WORDS, guardWord } from './guard-words.js';
 import { onlyOperands, operandsOf } from './operands.js';
@@ -44,6 +45,15 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
       const { operands, problems } = operandsOf(command, 2);
       const wanted = { part: operands[0], stage: operands[1] };
       deliver(await (await import('./explain.js')).runExplain(session, wanted, { ...options, already: problems }));
+    });
+  judged(staging(add(program, 'predict [PART] [STAGE]', "the stage simulated with a part's own figures; judges nothing")))
+    .option('--compare <PART>', 'a second part side by side')
+    .option('--csv', 'the waveform as a table')
+    .action(async (...received) => {
+      const { command, options } = lastOf<PredictOptions>(received);
+      const { operands, problems } = operandsOf(command, 2);
+      const wanted = { part: operands[0], stage: operands[1] };
+      deliver(await (await import('./predict.js')).runPredict(session, wanted, { ...options, already: problems }));
     });
   staging(add(program, 'demands [STAGE]', 'what the stage asks of any amplifier; looks at no part'))
     .action(async (...received) => {

@@ -11,6 +11,7 @@ import { formulaLines } from './formula-text.js';
 import { paragraph } from './layout.js';
 import { partLookupLines } from './part-lookup-text.js';
 import { remedyLines } from './remedy-text.js';
+import { predictedLines } from './predicted-text.js';
 import { safeLine } from './safe-text.js';
 import { sensitivityLines } from './sensitivity-text.js';
 import { finished, glued, held } from './spelling.js';
@@ -30,6 +31,7 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
     ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
     formulaLines(explanation, style),
+    predictedLines(explanation, style),
     informedLines(judged, style),
     cautionsOf(judged).flatMap((caution) => cautionLine(caution, style)),
     sensitivityLines(explanation.sensitivity, style),

@@ -7,6 +7,7 @@ import type { RankedPart } from '../ranking/index.js';
 import { changesJson, waysOutJson } from './changes-json.js';
 import { hazardText } from './hazard-text.js';
 import { partLookupsJson, sensitivityJson } from './lookup-json.js';
+import { bodyOf } from './prediction-body.js';
 import { problemJson } from './problem-json.js';
 import { stageJson } from './stage-json.js';
 import { verdictJson, type OriginOf } from './verdict-json.js';
@@ -54,6 +55,7 @@ export function explanationJson(explanation: Explanation): string {
     ...changesJson(explanation),
     ...(explanation.lookups === null ? {} : { lookups: partLookupsJson(explanation.lookups) }),
     sensitivity: explanation.sensitivity.map(sensitivityJson),
+    ...(explanation.predicted === null ? {} : { predicted: { checks: explanation.predicted.checks, ...bodyOf(explanation.predicted.prediction) } }),
     cautions: cautionsOf(judged),
     fitting: explanation.fitting.map((one) => one.part.id),
     asking: explanation.asking,

@@ -4,6 +4,7 @@ import { advice, change } from './change.js';
 import { envelope } from './envelope.js';
 import { confirmation, informed, outcome, proof, tier } from './judged-part.js';
 import { partLookups } from './lookups.js';
+import { predicted } from './prediction.js';
 import { price } from './price.js';
 import { sensitivity } from './sensitivity.js';
 import { stage } from './stage.js';
@@ -36,6 +37,7 @@ export const explanation = envelope('explanation', 'Every check of one part on o
   advice: z.array(advice).optional().describe('Ways the stage file cannot say'),
   lookups: partLookups.optional().describe('Undecided only: what would decide it'),
   sensitivity: z.array(sensitivity).describe('Whether verdicts hang on borrowed or typical figures'),
+  predicted: z.strictObject({ checks: z.array(z.string()).describe('Checks without a closed form for this stage'), ...predicted }).optional().describe('What no closed form answers, simulated: told, not judged'),
   cautions: z.array(z.string()),
   fitting: z.array(z.string()).describe('Up to three parts that fit as things stand'),
   asking,

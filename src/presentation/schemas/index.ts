@@ -7,6 +7,7 @@ import { imported } from './import.js';
 import { lookups } from './lookups.js';
 import { part } from './part.js';
 import { parts } from './parts.js';
+import { prediction } from './prediction.js';
 import { problems } from './problems.js';
 import { shortlist } from './shortlist.js';
 import { stages } from './stages.js';
@@ -15,6 +16,6 @@ import { stages } from './stages.js';
  * Every document railfit prints with --json, by name. The definitions are strict: they are what a test holds the own output
  * against. What is published (`published.ts`) allows further fields, since a later railfit may add some.
  */
-export const DOCUMENTS = { shortlist, lookups, explanation, demands, parts, part, import: imported, problems, help, draft, check, stages } as const;
+export const DOCUMENTS = { shortlist, lookups, explanation, demands, parts, part, import: imported, problems, help, draft, check, stages, prediction } as const;
 
 export type DocumentName = keyof typeof DOCUMENTS;
