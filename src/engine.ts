@@ -1,11 +1,11 @@
-import { deriveDemands, listDemands } from './demands/index.js';
-import { cellsOf, changesFor, type Changing, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, whyAhead, whyNothingFits } from './explanation/index.js';
+import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
+import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
 import type { Part, PartSource } from './parts/part.js';
 import { predictStage, type Prediction } from './prediction/index.js';
 import { rank } from './ranking/index.js';
-import type { Asking, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
-import { type JudgedPart, judgePart, judging, type PartOutcome, probePart, screen } from './screening/index.js';
+import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
+import { type JudgedPart, judgePart, judging, outlining, type PartOutcome, probePart, screen } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -115,6 +115,54 @@ function predictedInstead(stage: Stage, source: PartSource, { judged, asking }: 
   const isOpen = ({ check, reason, outcome }: JudgedPart['verdicts'][number]): boolean => reason === 'not-built' || (check === 'distortion' && remembers && outcome !== 'pass');
   const checks = judged.verdicts.filter((verdict) => SIMULATED.includes(verdict.check) && isOpen(verdict)).map(({ check }) => check);
   return checks.length === 0 ? null : { checks, prediction: predictionOf(stage, source, { part: judged.part, strict: asking.strict }) };
+}
+
+/** Two parts of the catalog held against each other on the stage. Both must be in the source, and not be one. */
+export function compare(stage: Stage, source: PartSource, { parts, asking = PLAIN }: { readonly parts: readonly [Part, Part]; readonly asking?: Asking }): Comparison {
+  const report = shortlist(stage, source, asking);
+  const ranked = report.fit.flatMap((line) => [line, ...line.variants].map((judged) => ({ judged, rank: line.rank })));
+  const all = [...ranked, ...[...report.undecided, ...report.rejected].map((judged) => ({ judged, rank: null }))];
+  const [one, other] = parts.map(({ id }) => all.find(({ judged }) => judged.part.id === id));
+  if (one === undefined || other === undefined || one === other) throw new RangeError(`${parts.map(({ id }) => id).join(' and ')} are not two parts of the catalog that was judged`);
+  const { demands, counts, data, origin } = report;
+  const standing = compareParts(asking.order, [one.judged, other.judged]);
+  return { stage, demands, parts: [comparedPart(one.judged, one.rank), comparedPart(other.judged, other.rank)], standing, counts, asking, data, origin };
+}
+
+/** The answer to one stage in short. */
+export interface Outline {
+  readonly counts: Report['counts'];
+  /** Id of the first choice; null when nothing fits. */
+  readonly first: string | null;
+  /** Ids of what fits, by rank, each variant a place of its own. */
+  readonly fit: readonly string[];
+}
+
+/** Answers many stages in a row on the same parts, with the counts and the order of `shortlist`. */
+export function outlinesOf(source: PartSource, asking: Asking = PLAIN): (stage: Stage) => Outline {
+  const outlined = outlining(source.parts, asking.strict);
+  return (stage) => {
+    const { counts, fit } = outlined({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
+    const ids = rank(fit, asking.order).flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
+    return { counts, first: ids[0] ?? null, fit: ids };
+  };
+}
+
+/** Many values of one field: the stage at each (or in words why it is none), and the parts that are asked. */
+export interface SweepRequest {
+  readonly values: readonly number[];
+  readonly stageAt: (value: number) => Stage | string;
+  readonly asking?: Asking;
+}
+
+/** The answer at every value, and where it turns between them. */
+export function sweepOver(source: PartSource, { values, stageAt, asking }: SweepRequest): Swept & { readonly data: DataUsed } {
+  const outline = outlinesOf(source, asking);
+  const swept = sweep(values, (value) => {
+    const stage = stageAt(value);
+    return typeof stage === 'string' ? { contradiction: stage } : outline(stage);
+  });
+  return { ...swept, data: dataOf(source) };
 }
 
 function dataOf(source: PartSource): DataUsed {

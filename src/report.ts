@@ -1,5 +1,5 @@
 import type { AnyDemand } from './demands/index.js';
-import type { Changes, LookupList, NothingFits, PartLookups, Sensitivity, WhyAhead } from './explanation/index.js';
+import type { Changes, ComparedPart, LookupList, NothingFits, PartLookups, Sensitivity, Standing, SweptPoint, SweptTurn, WhyAhead } from './explanation/index.js';
 import type { Origin } from './parts/part.js';
 import type { Prediction } from './prediction/index.js';
 import type { Order, RankedPart } from './ranking/index.js';
@@ -79,4 +79,43 @@ export interface Explanation extends DemandsReport {
   readonly asking: Asking;
   readonly data: DataUsed;
   readonly origin: (partId: string, slot: string) => Origin | null;
+}
+
+/** The field that is swept, as the command understood it. */
+export interface SweepOver {
+  /** Dotted path in the stage file. */
+  readonly path: string;
+  readonly from: number;
+  readonly to: number;
+  /** SI; dB for ratios. */
+  readonly unit: string;
+  /** Spoken in percent: a fraction. */
+  readonly isShare: boolean;
+  readonly scale: 'linear' | 'log';
+  /** What becomes of the ends the field has in the stage. */
+  readonly keeps:
+    | { readonly kind: 'nothing'; readonly replaced: string | null }
+    | { readonly kind: 'lower-end'; readonly lower: number }
+    | { readonly kind: 'tolerance'; readonly below: number; readonly above: number };
+}
+
+/** What the values of one field cost: how many parts fit and which comes first at each, and where that turns. */
+export interface SweepReport {
+  /** As it stands without the sweep; null where it is none. */
+  readonly stage: Stage | null;
+  readonly over: SweepOver;
+  readonly points: readonly SweptPoint[];
+  readonly turns: readonly SweptTurn[];
+  readonly asking: Asking;
+  readonly data: DataUsed;
+}
+
+/** Two parts of the catalog side by side on one stage. */
+export interface Comparison extends DemandsReport {
+  readonly parts: readonly [ComparedPart, ComparedPart];
+  readonly standing: Standing;
+  readonly counts: Report['counts'];
+  readonly asking: Asking;
+  readonly data: DataUsed;
+  readonly origin: Report['origin'];
 }

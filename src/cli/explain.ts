@@ -2,6 +2,7 @@ import { explain, explanationJson, renderExplanation } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { withCatalog } from './catalog-file.js';
 import { commandContext } from './command-context.js';
+import { runCompare } from './compare.js';
 import { EXIT, exitOfOutcome } from './exit-code.js';
 import { findPart } from './find-part.js';
 import { judgingInput, type JudgingOptions } from './judging-input.js';
@@ -16,11 +17,17 @@ export interface ExplainOperands {
   readonly stage: string | undefined;
 }
 
+export interface ExplainOptions extends JudgingOptions {
+  /** Another part, to be held against this one. */
+  readonly against?: string;
+}
+
 /** `railfit explain PART [STAGE]`: every check of one part on this stage. */
-export async function runExplain(session: Session, operands: ExplainOperands, options: JudgingOptions): Promise<Outcome> {
+export async function runExplain(session: Session, operands: ExplainOperands, options: ExplainOptions): Promise<Outcome> {
   const { part, stage: stageFile } = withoutPart(operands) ? { part: undefined, stage: operands.part } : operands;
   const already = [...(options.already ?? []), ...(part === undefined ? [noPart(stageFile)] : [])];
   const { spec, stage, file, given } = await readStageOf(stageFile, { ...options, already });
+  if (options.against !== undefined) return runCompare(session, { stage, file, ids: [part ?? '', options.against] }, options);
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
     const found = findPart(source.parts, part ?? '', (id) => catalog.withdrawn(id));

@@ -98,7 +98,19 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
   ],
   saved: () => [
     { text: "railfit stages add FILE --part ID keeps a stage file by its path, with the part chosen for it; railfit stages lists them, railfit stages remove FILE forgets one. Every import then tells which of them are answered differently: first choice, how many fit, and how the chosen part stands before and after." },
-    { text: 'railfit check tells whether the chosen parts still fit, for the stages named or for every saved one. It exits with the worst of its stages: 2 where the question cannot be asked (no such file, no stage, no such part, no part chosen), 4 where one cannot be decided, 1 where one does not fit or was withdrawn, 0 where all fit.' },
+    { text: 'railfit check tells whether the chosen parts still fit, for the stages named or for every saved one. The part is that of --part, else part: in the stage file, else the one saved. --junit FILE writes the same for a build server: a suite for each stage, a case for each check; what cannot be decided is an error there. It exits with the worst of its stages: 2 where the question cannot be asked (no such file, no stage, no such part, no part chosen), 4 where one cannot be decided, 1 where one does not fit or was withdrawn, 0 where all fit.' },
+  ],
+  sweep: () => [
+    { text: 'railfit sweep STAGE --over PATH=A..B tells how many parts fit and which comes first at values from A to B, and the values at which that turns, found by halving to a ten-millionth; turns that come and go between two values alike are not seen, more --steps see more. PATH is a field as --set takes it, or supply, gain, frequency, load, temperature, input. Over a decade or more the values stand in even ratios (--log, --linear).' },
+    {
+      pairs: [
+        ['one figure', 'each value takes its place: gain=1..20, load=1kΩ..100k, limits.dcError="5..50 mV"'],
+        ['a tolerance', 'is kept: of 5 V ± 5 % each value has ± 5 %'],
+        ['a range', 'each value is the upper end and the lower one stays: temperature, signal.input, signal.frequency'],
+        ['a supply range', 'each value is one supply that stands still, in place of the range'],
+      ],
+    },
+    { text: 'Where the stage contradicts itself at a value, the reason stands in its row. One field at a time; --csv and --json carry rows and turns.' },
   ],
   changes: () => [
     { text: 'railfit explain PART STAGE ends with what would let the part in: smallest sets of one, two or three changes, each rounded to the safe side, judged again in full, and printed as a command that pastes back. A shortlist where nothing fits tells which demands together rule everything out, how many parts each alone leaves, and the smallest changes that let parts in.' },

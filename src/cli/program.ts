@@ -2,6 +2,7 @@ import { Command, CommanderError, InvalidArgumentError, Option } from 'commander
 import type { JudgingOptions } from './judging-input.js';
 import type { CheckOptions } from './check.js';
 import type { DraftOptions } from './draft.js';
+import type { ExplainOptions } from './explain.js';
 import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
@@ -9,6 +10,7 @@ import type { ShortlistOptions } from './shortlist.js';
 import type { StageOptions } from './stage-input.js';
 import type { PredictOptions } from './predict.js';
 import type { StagesOptions } from './stages.js';
+import type { SweepOptions } from './sweep.js';
 import { GUARD_WORDS, guardWord } from './guard-words.js';
 import { onlyOperands, operandsOf } from './operands.js';
 import { withReadingOptions } from './reading-options.js';
@@ -40,8 +42,9 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     });
   judging(add(program, 'explain [PART] [STAGE]', 'every check of one part on this stage'))
     .option('--formulas', 'the relation, numbers and source of each check')
+    .option('--against <ID>', 'this part side by side with that one')
     .action(async (...received) => {
-      const { command, options } = lastOf<JudgingOptions>(received);
+      const { command, options } = lastOf<ExplainOptions>(received);
       const { operands, problems } = operandsOf(command, 2);
       const wanted = { part: operands[0], stage: operands[1] };
       deliver(await (await import('./explain.js')).runExplain(session, wanted, { ...options, already: problems }));
@@ -60,6 +63,17 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
       const { command, options } = lastOf<CommonOptions & StageOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver(await (await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
+    });
+  ordered(judged(staging(add(program, 'sweep [STAGE]', 'what a limit costs: how many parts fit, and which comes first, over the values of one field'))))
+    .option('--over <PATH=A..B>', 'the field and its values: supply=2.7V..5.5V, gain, frequency, load, temperature, limits.dcError, ...', collect)
+    .option('--steps <N>', 'how many values, both ends included (21)', steps)
+    .option('--log', 'values in even ratios (the default over a decade or more)')
+    .option('--linear', 'values in even steps')
+    .option('--csv', 'the values and turns as a table')
+    .action(async (...received) => {
+      const { command, options } = lastOf<SweepOptions>(received);
+      const { operands, problems } = operandsOf(command, 1);
+      deliver(await (await import('./sweep.js')).runSweep(session, operands[0], { ...options, already: problems }));
     });
   add(program, 'draft [TOPOLOGY]', 'a commented stage file with every field, or guided entry with --ask')
     .option('--ask', 'ask on the terminal: each answer checked, demands shown; ends with the file and its shortlist')
@@ -98,6 +112,7 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     });
   judged(add(program, 'check [STAGES...]', 'do the parts chosen for these stages still fit; without a stage, for every saved one'))
     .option('--part <ID>', 'this part instead of the chosen ones')
+    .option('--junit <FILE>', 'the same as a JUnit file for a build server; - for stdout')
     .action(async (...received) => {
       const { command, options } = lastOf<CheckOptions>(received);
       const { operands, problems } = operandsOf(command, Number.POSITIVE_INFINITY);
@@ -184,8 +199,17 @@ function judging(command: Command): Command {
   const staged = staging(command)
     .option('--top <N>', 'how many parts to show (20)', count)
     .option('--all', 'rejected parts too, and passing checks in full');
-  return judged(staged)
-    .addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
+  return ordered(judged(staged));
+}
+
+function ordered(command: Command): Command {
+  return command.addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
+}
+
+/** A thousand values are a long table already. */
+function steps(text: string): number {
+  if (!/^[1-9]\d{0,3}$/u.test(text) || Number(text) < 2 || Number(text) > 1000) throw new InvalidArgumentError('a whole number of values from 2 to 1000 is expected, such as 21');
+  return Number(text);
 }
 
 function count(text: string): number {

@@ -1,4 +1,5 @@
 export { demandsWhenAsked, deriveDemands } from './derive.js';
+export { circuitMark, markOf } from './circuit-mark.js';
 export { CHECK_IDS, listDemands } from './demand.js';
 export type {
   AnyDemand, CheckId, Corner, DcErrorDemand, Demands, DirectedPeak, HeadroomDemand, HeadroomVertex, NumberDemand, OutputCurrentDemand, PriceDemand, Sense,

@@ -21,7 +21,7 @@ export function verdictSentence(verdict: Verdict): string {
 
 function wordSentence(verdict: Verdict): string {
   const wanted = Array.isArray(verdict.required) ? verdict.required.join(' or ') : '';
-  return `${verdict.title} ${String(verdict.offered)}, wanted ${wanted}`;
+  return `${verdict.title} ${verdict.offered === null ? 'not known' : String(verdict.offered)}, wanted ${wanted}`;
 }
 
 const REASONS: Readonly<Record<string, string>> = {

@@ -14,12 +14,20 @@ export interface Merit {
   readonly current: number;
 }
 
+/** How much each share counts, against the others. */
+export type ShareWeights = Readonly<Record<Share, number>>;
+export const SHARES = ['margins', 'price', 'current'] as const;
+export type Share = (typeof SHARES)[number];
+/** Equal shares: the order of the shortlist. */
+export const EQUAL: ShareWeights = { margins: 1, price: 1, current: 1 };
+
 /** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (M10). */
-export function meritOf(judged: JudgedPart): Merit {
+export function meritOf(judged: JudgedPart, weights: ShareWeights = EQUAL): Merit {
   const margins = marginShare(judged);
   const price = onLogScale(priceInEuro(judged), PRICE);
   const current = onLogScale(judged.current, CURRENT);
-  const total = weightedGeometricMean([margins, price, current].map((score) => ({ score, weight: 1 })));
+  const shares = { margins, price, current };
+  const total = weightedGeometricMean(SHARES.map((share) => ({ score: shares[share], weight: weights[share] })));
   return { total, margins, price, current };
 }
 

@@ -2,7 +2,7 @@ import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, marginForOrder } from './comfort.js';
 import { dominatorsOf } from './dominance.js';
 import { linesOf } from './family.js';
-import { meritOf, priceInEuro, type Merit } from './merit.js';
+import { meritOf, priceInEuro, type Merit, type ShareWeights } from './merit.js';
 
 export const ORDERS = ['merit', 'price', 'current', 'margin'] as const;
 export type Order = (typeof ORDERS)[number];
@@ -23,7 +23,7 @@ type Candidate = Omit<RankedPart, 'rank' | 'dominatedBy' | 'variants'>;
 
 /** Total order of what fits, one line a family: approved before generic, limits before typical, then merit; never depends on who else is there. */
 export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): RankedPart[] {
-  const candidates: Candidate[] = fit.map((judged) => ({ ...judged, merit: meritOf(judged), tightest: tightestOf(judged) }));
+  const candidates = fit.map((judged) => candidateOf(judged));
   candidates.sort((a, b) => compareIn(order, a, b));
   const lines = linesOf(candidates);
   const dominators = dominatorsOf(lines.map(({ first }) => first));
@@ -38,6 +38,28 @@ export function placeOf(judged: JudgedPart, fit: readonly RankedPart[], order: O
   const kin = others.find((line) => linesOf([line, candidate]).length === 1);
   const leader = kin !== undefined && ahead.includes(kin) ? ahead.indexOf(kin) + 1 : ahead.length + 1;
   return { rank: leader, of: others.length + (kin === undefined ? 1 : 0) };
+}
+
+function candidateOf(judged: JudgedPart, weights?: ShareWeights): Candidate {
+  return { ...judged, merit: meritOf(judged, weights), tightest: tightestOf(judged) };
+}
+
+/** The step that decides between two parts that fit, and its sign: below zero, the first is ahead. The order asked for is a step of its own. */
+export interface Decision {
+  readonly by: string;
+  readonly sign: number;
+}
+
+/** How two parts that fit stand to each other in this order, with shares weighed otherwise where that is asked. */
+export function decisionBetween(order: Order, [one, other]: readonly [JudgedPart, JudgedPart], weights?: ShareWeights): Decision {
+  const [a, b] = [candidateOf(one, weights), candidateOf(other, weights)];
+  const asked = FIRST[order](a, b);
+  if (asked !== 0) return { by: order, sign: Math.sign(asked) };
+  for (const { name, compare } of STEPS) {
+    const difference = compare(a, b);
+    if (difference !== 0) return { by: name, sign: Math.sign(difference) };
+  }
+  return { by: 'id', sign: 0 };
 }
 
 /** What decides between two: the steps of the order, each 0 when they are equal there. */

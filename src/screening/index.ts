@@ -5,3 +5,4 @@ export type { DynamicRange } from './dynamic-range.js';
 export type { PartHazard } from './hazards.js';
 export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
 export { screen, type Rejection, type Screened } from './screen.js';
+export { outlining, type Marked, type Outlined } from './outline.js';

@@ -70,12 +70,14 @@ export function rulesFor(run: Judging, part: Part): ReadingRules {
   return { operating: run.demands.operating, strict: run.strict, classWorst };
 }
 
-function notBuilt(demand: UnbuiltDemand): Verdict {
+/** A limit whose check does not exist leaves every part open. */
+export function notBuilt(demand: UnbuiltDemand): Verdict {
   const finding = { kind: 'undecided', required: demand.required, unit: demand.unit, sense: demand.sense, cause: 'not-built', missing: [] } as const;
   return decide({ id: demand.check, title: demand.check.replaceAll('-', ' '), hasMargin: true }, finding, finding);
 }
 
-function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
+/** One failing check is enough; unknown is never a pass. */
+export function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
   if (verdicts.some((verdict) => verdict.outcome === 'fail')) return 'does-not-fit';
   return verdicts.some((verdict) => verdict.outcome === 'unknown') ? 'undecided' : 'fits';
 }

@@ -117,6 +117,7 @@ function readOthers(draft: Draft, topology: StageSpec['topology'] | undefined): 
     wishes: readWishes(draft),
     margins: readMargins(draft),
     mayChange: readPaths(draft, 'mayChange'),
+    part: readText(draft, 'part'),
     avoid: readChoices<Hazard>(draft, 'avoid') ?? [],
   });
 }

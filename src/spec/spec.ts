@@ -282,6 +282,8 @@ export interface StageSpec {
   readonly wishes: WishesSpec;
   readonly margins: MarginsSpec;
   readonly mayChange?: readonly string[];
+  /** Id of the part chosen for the stage. */
+  readonly part?: string;
   readonly avoid: readonly Hazard[];
   /** Things the reader did on the user's behalf (overrides), one sentence each; printed as assumptions. */
   readonly notes: readonly string[];

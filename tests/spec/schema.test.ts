@@ -9,7 +9,7 @@ describe('the table of fields', () => {
       'name', 'topology', 'supply', 'supplyPeak', 'gain', 'resistors', 'reference',
       'legs', 'photodiode', 'shunt', 'filter', 'integrator', 'oscillator', 'drives', 'capacitors',
       'signal', 'source', 'load', 'temperature', 'following', 'converter', 'battery',
-      'overdrive', 'sequencing', 'supplyRipple', 'dutyCycle', 'limits', 'wishes', 'margins', 'mayChange', 'avoid',
+      'overdrive', 'sequencing', 'supplyRipple', 'dutyCycle', 'limits', 'wishes', 'margins', 'mayChange', 'avoid', 'part',
     ]);
     expect(keysPerLevel()['limits.settling']).toEqual(['within', 'to']);
     expect(acceptedKeys('legs.trim')).toEqual(['input', 'amplitude', 'resistance', 'gain']);

@@ -1,4 +1,5 @@
 import { check } from './check.js';
+import { comparison } from './comparison.js';
 import { demands } from './demands.js';
 import { draft } from './draft.js';
 import { explanation } from './explanation.js';
@@ -11,11 +12,12 @@ import { prediction } from './prediction.js';
 import { problems } from './problems.js';
 import { shortlist } from './shortlist.js';
 import { stages } from './stages.js';
+import { sweep } from './sweep.js';
 
 /**
  * Every document railfit prints with --json, by name. The definitions are strict: they are what a test holds the own output
  * against. What is published (`published.ts`) allows further fields, since a later railfit may add some.
  */
-export const DOCUMENTS = { shortlist, lookups, explanation, demands, parts, part, import: imported, problems, help, draft, check, stages, prediction } as const;
+export const DOCUMENTS = { shortlist, lookups, explanation, demands, parts, part, import: imported, problems, help, draft, check, stages, prediction, sweep, comparison } as const;
 
 export type DocumentName = keyof typeof DOCUMENTS;

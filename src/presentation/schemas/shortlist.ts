@@ -5,6 +5,7 @@ import { demand } from './demand.js';
 import { envelope } from './envelope.js';
 import { groupCounts, judgedPart, rankedPart } from './judged-part.js';
 import { count, unit } from './measures.js';
+import { stability } from './stability.js';
 import { stage } from './stage.js';
 
 const difference = z.strictObject({
@@ -26,6 +27,7 @@ const ahead = z.strictObject({
   currents: pair('Supply current in A'),
   better: z.array(difference).describe('Where the first offers more by a tenth or more'),
   worse: z.array(difference).describe('Where the second does'),
+  stability: stability.optional(),
 });
 
 const blamed = z.strictObject({
