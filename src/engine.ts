@@ -1,6 +1,7 @@
 import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
 import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
+import { curvesOf } from './curves/index.js';
 import type { Part, PartSource } from './parts/part.js';
 import { predictStage, type Prediction } from './prediction/index.js';
 import { rank } from './ranking/index.js';
@@ -21,7 +22,8 @@ export function demandsOf(stage: Stage): DemandsReport {
 /** The whole flow on one screen: stage and parts in, judged, ranked and told why. */
 export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLAIN): Report {
   const demands = deriveDemands(stage);
-  const screened = screen(judging(demands, source.parts, asking.strict), source.parts);
+  const run = judging(demands, source.parts, asking.strict);
+  const screened = screen(run, source.parts);
   const fit = rank(screened.fit, asking.order);
   return {
     stage,
@@ -37,6 +39,7 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
     asking,
     data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
+    curves: ({ part }) => curvesOf(run, stage, part),
   };
 }
 

@@ -1,3 +1,4 @@
+import type { Curves } from './curves/index.js';
 import type { AnyDemand } from './demands/index.js';
 import type { Changes, ComparedPart, LookupList, NothingFits, PartLookups, Sensitivity, Standing, SweptPoint, SweptTurn, WhyAhead } from './explanation/index.js';
 import type { Origin } from './parts/part.js';
@@ -44,6 +45,8 @@ export interface Report extends DemandsReport {
   readonly data: DataUsed;
   /** Origin of a figure by part and slot; null where none is kept. */
   readonly origin: (partId: string, slot: string) => Origin | null;
+  /** What pictures of the stage with one of these parts show; computed when asked. */
+  readonly curves: (judged: JudgedPart) => Curves;
 }
 
 /** One part on one stage, simulated; with --compare a second one beside it. */

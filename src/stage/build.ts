@@ -6,6 +6,7 @@ import { makeDifference, makeFollower, makeInverting, makeNonInverting } from '.
 import { assumptionsOf, bypassCautions, gainCautions } from './assumptions.js';
 import type { Circuit, RatioCorner } from './circuit.js';
 import { contradictionsOf } from './contradictions.js';
+import { endsOf } from './ends.js';
 import type { Excitation } from './excitation.js';
 import { capacitorTolerance } from './filter-response.js';
 import { gainAgainstResistors, toleranceOf } from './fitted.js';
@@ -95,6 +96,7 @@ function assemble(spec: StageSpec, settled: Settled, made: Made): Stage {
     sourceSpread: spec.signal.coupling === 'ac' ? 0 : (spec.source?.resistance.value ?? 0) * (spec.source?.tolerance?.value ?? 0),
     referenceTolerance: reference.value.nominal === 0 ? 0 : (reference.value.max - reference.value.min) / 2 / reference.value.nominal,
     referenceResistance: reference.resistance?.value ?? 0,
+    ends: endsOf(spec, reference),
     asked: askedOf(spec),
     cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...rippleCautions(spec, circuit, { reference, centre: drive.centre }), ...made.cautions],
     assumptions: assumptionsOf(spec, circuit, [...settled.notes, ...made.fitNotes]),
