@@ -69,6 +69,7 @@ const COMMANDS: readonly CodePage[] = [
   page('C112', 'no such saved stage', 'What is saved is listed by railfit stages.', ['railfit stages remove probe.yml', 'railfit stages remove probe.yaml']),
   page('C113', 'a part that was withdrawn', 'It was on an earlier list and is not on this one. Its versions are kept, so that old reports resolve.', ['railfit explain ORG-OA-0008 stage.yaml', 'railfit part ORG-OA-0008, which shows it as it was last']),
   page('C114', 'what is swept', 'One field at a time, from one value to a larger one. What is swept is a quantity: a word or a count has nothing in between.', ['railfit sweep stage.yaml --over package=SOT-23-5', 'railfit sweep stage.yaml --over supply=2.7V..5.5V']),
+  page('C121', 'no report in the file', 'A report carries its answer as a document, and verify judges that again; a page that was saved by a browser in another form, cut off or edited there has none that can be trusted.', ['railfit verify screenshot.html', 'railfit verify review.html, as railfit report wrote it']),
   page('E501', 'the catalog cannot be used', 'The file is locked, unreadable, not a catalog, or from a newer version. It was left as it is.', ['--catalog /etc/hosts', '--catalog team.sqlite']),
   page('E502', 'file cannot be read', 'The path or its permissions.', ['stage.yml for stage.yaml', 'the path as ls shows it']),
   page('E503', 'file cannot be written', 'The folder does not exist or may not be written.', ['--errors /nowhere/e.csv', '--errors e.csv']),

@@ -124,6 +124,11 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
     },
     { text: 'A limit moves only as far as it still says something: a phase margin not below 30°, a DC error, a noise or a swing loss not beyond half the swing, an error not beyond 50 %.' },
   ],
+  review: () => [
+    { text: 'railfit report STAGE... -o review.html writes the design review of one stage or several as one page: it opens in any browser, prints on A4 or Letter, asks for nothing from anywhere, and carries its stage files and its answer. What it is about: the part named with --part, else the one kept with the stage (railfit stages add FILE --part ID), else the first in order; the page says which.' },
+    { text: '--format md writes the same for a pull request, --format csv every verdict of every part, --json the document the page embeds. --symbols ieee draws the schematic after IEEE 315 instead of IEC 60617. The time is that of --time, else of SOURCE_DATE_EPOCH, else of the clock: with the same time the same input gives the same bytes.' },
+    { text: 'railfit verify review.html judges the embedded stages again with the catalog in force and tells every difference: another list, another first choice, another number. When all answers are the same it compares the page letter by letter. It exits with 0 when nothing differs and with 1 when something does.' },
+  ],
   codes: () => [{ pairs: CODE_PAGES.map(({ code, title }) => [code, title] as const) }, { text: 'railfit help CODE shows one of them.' }],
   cautions: () => [CAUTIONS, { text: 'Not modelled: layout, electromagnetic interference, long-term drift, self-heating. Generic sets are invented classes of parts, not something to order.' }],
 };

@@ -15,7 +15,7 @@ export interface HelpQuestion {
   commandHelp(name: string): string | null;
 }
 
-const COMMANDS = ['shortlist', 'explain', 'predict', 'demands', 'sweep', 'draft', 'parts', 'part', 'import', 'check', 'stages', 'help'];
+const COMMANDS = ['shortlist', 'explain', 'predict', 'demands', 'sweep', 'draft', 'parts', 'part', 'import', 'check', 'stages', 'report', 'verify', 'help'];
 
 /** `railfit help TOPIC`: long help, also for every message code. */
 export function runHelp(session: Session, question: HelpQuestion, options: CommonOptions): Outcome {

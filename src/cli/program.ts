@@ -7,6 +7,7 @@ import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
 import type { ShortlistOptions } from './shortlist.js';
+import type { ReportOptions } from './report.js';
 import type { StageOptions } from './stage-input.js';
 import type { PredictOptions } from './predict.js';
 import type { StagesOptions } from './stages.js';
@@ -124,6 +125,24 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     .action(async (...received) => {
       const { command, options } = lastOf<StagesOptions>(received);
       deliver(await (await import('./stages.js')).runStages(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
+    });
+  judging(add(program, 'report [STAGES...]', 'the design review of one stage or several: a page to look at, print and send'))
+    .option('-o, --output <FILE>', 'a new file instead of stdout')
+    .option('--force', 'write over an existing file')
+    .addOption(new Option('--format <FORMAT>', 'html: one page; md: for a pull request; csv: every verdict').choices(['html', 'md', 'csv']))
+    .option('--part <ID>', 'the chosen part, instead of the one kept with the stage or the first in order')
+    .addOption(new Option('--symbols <RULES>', 'symbols of the schematic: IEC 60617 or IEEE 315').choices(['iec', 'ieee']))
+    .option('--time <TIME>', 'when it was made, ISO 8601 with zone (else SOURCE_DATE_EPOCH, else the clock)')
+    .action(async (...received) => {
+      const { command, options } = lastOf<ReportOptions>(received);
+      const { operands, problems } = operandsOf(command, Number.POSITIVE_INFINITY);
+      deliver(await (await import('./report.js')).runReport(session, operands, { ...options, already: problems }));
+    });
+  add(program, 'verify [FILE]', 'judge a report again from what it carries, and tell what differs')
+    .option('--all', 'every difference')
+    .action(async (...received) => {
+      const { command, options } = lastOf<CommonOptions>(received);
+      deliver(await (await import('./verify.js')).runVerify(session, onlyOperands(command, 1)[0], options));
     });
   add(program, 'help [TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
     .action(async (...received) => {

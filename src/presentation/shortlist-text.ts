@@ -44,13 +44,13 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
 /** With fewer parts than this the nearest of the others are shown. */
 const FEW = 3;
 
-function countsLine(report: Report): string {
+export function countsLine(report: Report): string {
   const { parts, fit, undecided, rejected } = report.counts;
   const lines = report.fit.length === fit ? '' : `, on ${counted(report.fit.length, 'line')} (packages of one die share a line)`;
   return `${fit} of ${counted(parts, 'part')} ${fit === 1 && parts === 1 ? 'fits' : 'fit'}${lines}, ${undecided} cannot be decided, ${rejected} ${rejected === 1 ? 'does' : 'do'} not fit.`;
 }
 
-const ORDERS = {
+export const ORDER_WORDS = {
   merit: 'approved before generic, all limits before some typical, then merit: margins, price and current in equal shares.',
   price: 'price as asked, then approved before generic, limits before typical, then merit.',
   current: 'supply current as asked, then approved before generic, limits before typical, then merit.',
@@ -58,7 +58,7 @@ const ORDERS = {
 } as const;
 
 function orderLine({ fit, asking }: Report, style: Style): string[] {
-  return fit.length < 2 ? [] : paragraph(`Order: ${ORDERS[asking.order]}`, style, { lead: ' ' });
+  return fit.length < 2 ? [] : paragraph(`Order: ${ORDER_WORDS[asking.order]}`, style, { lead: ' ' });
 }
 
 function histogram({ rejections, counts }: Report, style: Style): string[] {

@@ -35,7 +35,7 @@ export function assumptionLines(sentences: readonly string[], style: Style): str
   return all.length === 0 ? [] : labelled('Assumed', all.join('; '), style);
 }
 
-function circuitOf(stage: Stage): string[] {
+export function circuitOf(stage: Stage): string[] {
   const { output, outputNominal } = stage;
   const coupled = stage.coupling === 'ac' ? `, AC-coupled` : '';
   const corners = output.min === outputNominal.min && output.max === outputNominal.max ? '' : ` (${range(output.min, output.max, 'V')} at the corners)`;
@@ -115,7 +115,7 @@ function circumstancesOf({ asked: { overdrive, sequencing, supplyRipple, dutyCyc
   ];
 }
 
-function loadOf(load: Stage['load']): string {
+export function loadOf(load: Stage['load']): string {
   if (load === null) return 'none';
   const parts = [
     ...(load.resistance === null ? [] : [`${amount(load.resistance, 'Ω')} to ${load.to}`]),
@@ -125,7 +125,7 @@ function loadOf(load: Stage['load']): string {
   return parts.length === 0 ? 'none' : parts.join(', ');
 }
 
-function askedOf({ asked }: Stage): string[] {
+export function askedOf({ asked }: Stage): string[] {
   const { limits, wishes, margins } = asked;
   const most = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≤${GLUE}${glued(safeLine(text))}`]);
   const least = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≥${GLUE}${glued(safeLine(text))}`]);

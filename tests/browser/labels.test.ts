@@ -5,7 +5,7 @@ import { textWidth } from '../../src/presentation/page/drawing/text-width.js';
 import { plotsOf } from '../../src/presentation/page/plots/index.js';
 import { schematicOf } from '../../src/presentation/page/schematic/index.js';
 import type { Part } from '../../src/parts/part.js';
-import { openBrowser } from '../support/browser.js';
+import { launchBrowser } from '../support/browser.js';
 import { PAGE_PARTS, pageInput } from '../support/page.js';
 import { BENCHES, built } from '../support/twelve.js';
 
@@ -13,7 +13,7 @@ let browser: Browser;
 let page: Page;
 
 beforeAll(async () => {
-  browser = await openBrowser();
+  browser = await launchBrowser();
   page = await browser.newPage({ viewport: { width: 1000, height: 900 } });
 });
 afterAll(async () => {

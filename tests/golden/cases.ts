@@ -70,6 +70,16 @@ export const DOCUMENTS: readonly GoldenCase[] = [
   { file: 'problems.surroundings.json', words: ['demands', 'nowhere.yaml', '--json'], exit: 5 },
 ];
 
+const MADE = ['--time', '2026-03-14T09:30:00Z'];
+
+/** In this order: the second judges again what the first wrote. */
+export const REPORTS: readonly GoldenCase[] = [
+  { file: 'report.json', words: ['report', PROBE, '--json', '--top', '1', ...MADE, '-o', 'review.html'], exit: 0, told: 'wrote review.html; railfit verify review.html judges it again\n' },
+  { file: 'report.md', words: ['report', PROBE, 'reference-buffer.yaml', '--format', 'md', '--top', '3', ...MADE], exit: 0 },
+  { file: 'verification.json', words: ['verify', 'review.html', '--json'], exit: 0 },
+  { file: 'verification.txt', words: ['verify', 'review.html'], exit: 0 },
+];
+
 const WIDTHS = [40, 60, 80, 100, 200];
 
 const TEXTS: readonly { readonly name: string; readonly words: readonly string[]; readonly exit: number }[] = [
