@@ -1,5 +1,4 @@
 import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
-import type { JudgingOptions } from './judging-input.js';
 import type { CheckOptions } from './check.js';
 import type { DraftOptions } from './draft.js';
 import type { ExplainOptions } from './explain.js';

@@ -44,7 +44,7 @@ function sweepOf({ spec, given, source, asking }: Reviewed): ReviewedStage['swee
     over: path,
     unit: field.field.unit,
     points: points.flatMap(({ value: at, state }) => ('counts' in state ? [{ value: at, counts: state.counts, first: state.first }] : [])),
-    turns: turns.flatMap(({ at, from: before, to: after }) => ('counts' in before && 'counts' in after ? [{ at, from: before.first, to: after.first }] : [])),
+    turns: turns.flatMap(({ at, from: before, to: after }) => ('counts' in before && 'counts' in after && before.first !== after.first ? [{ at, from: before.first, to: after.first }] : [])),
     current: value,
   };
 }

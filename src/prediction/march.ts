@@ -37,6 +37,8 @@ export interface Place {
   readonly time: number;
   readonly state: Float64Array;
   readonly mode: Mode;
+  /** Limits that took hold or let go right after each other, before this place. */
+  readonly chatter: number;
 }
 
 /** The stage with its limits: between the moments where one takes hold or lets go it is linear, so that it is carried on exactly. */
@@ -49,6 +51,10 @@ export interface Walk {
 
 /** Halvings of a step that an event is found to: 2^−20 of it. */
 const RUNGS = 20;
+/** Events within this share of a step follow right after each other. */
+const CLOSE = 2 ** -10;
+/** At a limit that takes hold and lets go again and again each event is found less finely, down to this many halvings: else time would stand still. */
+const LEAST_RUNGS = 2;
 
 /** s, so fine that no two events hide in one: between the events the steps are exact. */
 export interface Steps {
@@ -72,14 +78,14 @@ export function walk(stage: LinearStage, given: { readonly source: Source; reado
   const next = (from: Place): Place => {
     const ladder = ladderOf(from.mode);
     const state = stepped(ladder[0] ?? EMPTY, from.state);
-    if (modeAfter(state, from.mode) === from.mode) return { state, time: from.time + stepOf(from.mode), mode: from.mode };
-    return across(from, { ladder, step: stepOf(from.mode), modeAfter, rows });
+    if (modeAfter(state, from.mode) === from.mode) return { state, time: from.time + stepOf(from.mode), mode: from.mode, chatter: 0 };
+    return across(from, { ladder: ladder.slice(0, Math.max(LEAST_RUNGS, RUNGS - from.chatter) + 1), step: stepOf(from.mode), modeAfter, rows });
   };
   const state = Float64Array.of(...given.states, ...source.start, 1);
   if (state.length !== stage.order + 3) throw new RangeError('walk: as many states as the stage has');
   // What its lag would carry the output beyond its end is cut off: no pin goes there.
   const output = ({ state: at, mode }: Place): number => Math.min(limits.high, Math.max(limits.low, product(mode === 'high' ? rows.high.output : mode === 'low' ? rows.low.output : rows.free.output, at)));
-  return { start: { time: 0, state, mode: modeAfter(state, 'linear') }, next, output };
+  return { start: { time: 0, state, mode: modeAfter(state, 'linear'), chatter: 0 }, next, output };
 }
 
 const EMPTY = new Float64Array();
@@ -114,7 +120,8 @@ function across(from: Place, { ladder, step, modeAfter, rows }: { readonly ladde
   time += step / 2 ** (ladder.length - 1);
   const mode = modeAfter(state, from.mode);
   const isHeld = from.mode === 'high' || from.mode === 'low';
-  return { state: isHeld ? rows[from.mode].released(state) : state, time, mode };
+  const chatter = time - from.time < step * CLOSE || from.chatter > RUNGS - LEAST_RUNGS ? from.chatter + 1 : 0;
+  return { state: isHeld ? rows[from.mode].released(state) : state, time, mode, chatter };
 }
 
 function matrixFor(stage: LinearStage, { source, limits, mode, rows }: { readonly source: Source; readonly limits: Limits; readonly mode: Mode; readonly rows: Rows }): Float64Array {

@@ -24,7 +24,8 @@ const DEFAULT_TOLERANCE = 1e-3;
 
 /** Sine, step, ramp or oscillation, as the stage has it. */
 export function overTime(run: Run): OverTime {
-  const { stage } = run;
+  const { stage, slew } = run;
+  if (Math.min(slew.up, slew.down) <= 0) return { ...without(TOLD[waveOf(stage)], words.noCurrent), kind: waveOf(stage) };
   if (stage.response.kind === 'oscillator') return oscillating(run);
   if (stage.response.kind === 'integrator' && stage.response.window !== null) return ramping(run);
   const isEdge = stage.shape === 'step' || stage.shape === 'pulse';
@@ -32,6 +33,20 @@ export function overTime(run: Run): OverTime {
   if (isEdge) return { ...stepped, kind: 'step' };
   const waved = sine(run);
   return { results: { ...stepped.results, ...waved.results }, wave: waved.wave, kind: 'sine' };
+}
+
+/** What a wave tells. */
+const TOLD: Readonly<Record<Waveform['kind'], readonly (keyof Results)[]>> = {
+  sine: ['settling', 'rise', 'fall', 'outputHigh', 'outputLow', 'clipped', 'slewing', 'distortion'],
+  step: ['settling', 'rise', 'fall', 'outputHigh', 'outputLow'],
+  ramp: ['settling', 'outputHigh', 'outputLow', 'clipped', 'slewing'],
+  oscillation: ['frequency', 'duty', 'rise', 'fall', 'outputHigh', 'outputLow'],
+};
+
+function waveOf({ response, shape }: Run['stage']): Waveform['kind'] {
+  if (response.kind === 'oscillator') return 'oscillation';
+  if (response.kind === 'integrator' && response.window !== null) return 'ramp';
+  return shape === 'step' || shape === 'pulse' ? 'step' : 'sine';
 }
 
 /** What every wave needs: the slew rate, the current into a load capacitance. */

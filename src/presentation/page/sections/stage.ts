@@ -23,7 +23,6 @@ ${demandTable(place)}`);
 function drawing(place: Place): Html {
   const { stage } = place.stage.report;
   const svg = schematicSvg(stage, place.review.symbols);
-  if (svg === null) return html``;
   const rules = place.review.symbols === 'iec' ? 'IEC 60617' : 'IEEE 315';
   return html`<figure id="${idOf(place, 'schematic')}" class="schematic">
 <div class="scroll" role="group" tabindex="0" aria-label="Schematic">${trusted(svg)}</div>
