@@ -44,7 +44,9 @@ function ofVoltage(volts: Reading | null): Endures | null {
 /** The whole overdrive across the resistance: what the diode in the part takes off is left out. */
 function ofCurrent(amperes: Reading | null, series: number): Endures | null {
   if (amperes === null) return null;
-  const how = `${formatQuantity(amperes.value, 'A')} through ${formatQuantity(series, 'Ω')}`;
+  // An assumed value is as good as can be on the best reading: no number to print.
+  const current = Number.isFinite(amperes.value) ? formatQuantity(amperes.value, 'A') : 'an assumed current';
+  const how = `${current} through ${formatQuantity(series, 'Ω')}`;
   return { offered: amperes.value * series, basis: amperes.basis, slot: amperes.slot, how };
 }
 

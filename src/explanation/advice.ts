@@ -1,4 +1,5 @@
 import type { Probe } from '../screening/index.js';
+import { standingOf } from '../verdicts/decide.js';
 import type { SingleFinding } from '../verdicts/finding.js';
 import type { Errand } from './boundary.js';
 import { setting, type Advice, type Change, type Changing } from './changing.js';
@@ -15,26 +16,26 @@ export function adviceFor(errand: Errand, means: Means): Advice[] {
   return [...calibrated(errand, means), ...split(errand, means)];
 }
 
-/** DC error without the offset, on the worst reading: what a calibration at 25 °C leaves; drift stays. Null where that cannot be told. */
+/** DC error without the offset, on the worst reading: what a calibration at 25 °C leaves; drift stays. Null where that cannot be told, or does not pass. */
 function leftAfterCalibration(probe: Probe): { readonly left: number; readonly allowed: number } | null {
   const finding = probe.check('dc-error')?.worst as SingleFinding | undefined;
   if (finding?.kind !== 'numbers') return null;
   const offset = finding.terms?.find(({ name }) => name === 'offset');
   // An offset that holds over temperature has its drift inside, which no calibration takes away.
   if (offset === undefined || finding.terms?.some(({ name }) => name === 'offset drift') !== true) return null;
-  return { left: finding.offered - offset.value, allowed: finding.required };
+  const left = finding.offered - offset.value;
+  const borrowed = (finding.borrowed ?? 0) - (offset.basis === 'borrowed' ? offset.value : 0);
+  // What is left must pass as any DC error must: within the limit, and little of it borrowed.
+  return standingOf({ ...finding, offered: left, borrowed }) === 'pass' ? { left, allowed: finding.required } : null;
 }
 
 function calibrated({ bench, checks }: Errand, { smallest }: Means): Advice[] {
   const asIs = bench.tried([]);
   const now = asIs === null || !checks.includes('dc-error') ? null : leftAfterCalibration(asIs);
-  if (now === null || now.left > now.allowed) return [];
+  if (now === null) return [];
   const others = checks.filter((check) => check !== 'dc-error');
   if (others.length === 0) return [{ kind: 'calibrate', ...now, moves: [] }];
-  const isIn = (probe: Probe): boolean => {
-    const then = leftAfterCalibration(probe);
-    return then !== null && then.left <= then.allowed && probe.notPassing().every((check) => check === 'dc-error');
-  };
+  const isIn = (probe: Probe): boolean => leftAfterCalibration(probe) !== null && probe.notPassing().every((check) => check === 'dc-error');
   const [first] = smallest(others, isIn).filter(({ moves }) => moves.every(({ path }) => path !== 'limits.dcError'));
   return first === undefined ? [] : [{ kind: 'calibrate', ...now, moves: first.moves }];
 }

@@ -6,7 +6,7 @@ import type { Stage } from '../stage/index.js';
 import { changesFor } from './changes.js';
 import { setting, type Change, type Changing } from './changing.js';
 import { conflictOf, type Conflict } from './conflict.js';
-import { moversOf, type Mover } from './movers.js';
+import { moversOf, WORD_CHECKS, type Mover } from './movers.js';
 import { widerOf } from './wider.js';
 
 /** A change with what it does to the whole catalog. */
@@ -93,7 +93,9 @@ export const isSwing = ({ moves }: Change): boolean => moves.length === 1 && mov
 function nearestEachWay(parts: readonly JudgedPart[], movers: readonly Mover[]): JudgedPart[] {
   const any = movers.some(({ touches }) => touches === null);
   const touched = new Set(movers.flatMap(({ touches }) => touches ?? []));
-  const open = parts.filter((one) => any || notPassing(one).every((check) => touched.has(check)));
+  const operating = movers.some(({ path }) => /^(?:supply|temperature)/u.test(path));
+  const mayTurn = (check: string): boolean => touched.has(check) || (any && (operating || !OWN_LIMIT.has(check)));
+  const open = parts.filter((one) => notPassing(one).every(mayTurn));
   const ordered = open.map((one) => ({ one, way: notPassing(one).join(' '), far: farOf(one) })).sort((a, b) => a.far - b.far || (a.one.part.id < b.one.part.id ? -1 : 1));
   const seen = new Map<string, number>();
   return ordered
@@ -104,6 +106,9 @@ function nearestEachWay(parts: readonly JudgedPart[], movers: readonly Mover[]):
     .slice(0, LOOKED)
     .map(({ one }) => one);
 }
+
+/** Checks that turn with their own limit alone, at the same supply and temperature: no signal and no resistor helps them. */
+const OWN_LIMIT: ReadonlySet<string> = new Set(['supply-current', 'price', ...Object.values(WORD_CHECKS)]);
 
 const notPassing = ({ verdicts }: JudgedPart): string[] => verdicts.filter(({ outcome }) => outcome !== 'pass').map(({ check }) => check);
 

@@ -9,6 +9,6 @@ export function modelLimits({ response, coupling }: Stage): string[] {
     'An output at its end stays at the head-room for the resistive current there and leaves it without delay; gain does not fall off before it.',
     ...(coupling === 'ac' ? ['Coupling capacitors count as endlessly large: no lower corner, no start-up.'] : []),
     ...(response.kind === 'oscillator' ? [] : ['Components at their nominal values; the worst form takes the output swing of their tolerances.']),
-    ...(response.kind === 'oscillator' ? ['The start from a supply that comes up is not in the model.'] : []),
+    ...(response.kind === 'oscillator' ? ['Components at their nominal values: their tolerances move the frequency further than the worst form tells.', 'The start from a supply that comes up is not in the model.'] : []),
   ];
 }

@@ -31,6 +31,8 @@ const PER_PACE = 60;
 const MOST_PLACES = 20_000;
 /** After as many times twice the time it is taken never to settle. */
 const DOUBLINGS = 24;
+/** Nor after as many places: a loop that goes on between its limits has the more of them the longer one looks. */
+const MOST_KEPT = 30 * MOST_PLACES;
 
 /** A step that begins and ends at rest; null for a stage that does not rest at a steady signal. */
 export function stepRun(run: Run, step: Step): StepRun | null {
@@ -83,7 +85,7 @@ function settledWalk(walkIn: (size: number) => Walk, { final, band, expected, pa
       if (Math.abs(value - final) > band) last = places.length - 1;
     }
     if ((places[last]?.time ?? 0) < 0.7 * end) return { places, output, settling: crossed({ places, output }, { after: last, final, band }) };
-    if (isStuck(places, last)) break;
+    if (isStuck(places, last) || places.length > MOST_KEPT) break;
     going = walkIn(pace * 2 ** (doubling + 1));
   }
   return { places, output, settling: null };

@@ -66,7 +66,7 @@ function histogram({ rejections, counts }: Report, style: Style): string[] {
   const one = counts.rejected === 1;
   const title = one ? 'Why the other one is out:' : `Why the other ${counts.rejected} are out (one part can fail several checks):`;
   const cells = rejections.map(({ check, parts }) => `${checkWords(check).replaceAll(' ', GLUE)}${GLUE}${parts}`);
-  return [...paragraph(counts.fit + counts.undecided === 0 ? title.replace('the other ', one ? 'the ' : 'all ').replace('all 1', 'the') : title, style), ...flow(cells, style, { lead: '  ' })];
+  return [...paragraph(counts.fit + counts.undecided === 0 ? title.replace('the other ', one ? 'the ' : 'all ') : title, style), ...flow(cells, style, { lead: '  ' })];
 }
 
 function closing(report: Report, style: Style): string[] {

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { assumedFigure } from '../../src/parts/assumption.js';
 import type { Figure } from '../../src/parts/figures.js';
 import type { StageSpec } from '../../src/spec/spec.js';
 import { judgingBy, verdictOrNull } from '../support/judged.js';
@@ -37,6 +38,12 @@ describe('overdrive', () => {
     expect(judge(follower({ overdrive: value(0.5) }), FULL)).toMatchObject({ outcome: 'unknown', missing: [{ figure: 'inputOverdrive' }], decidesAt: { figure: 'inputOverdrive', value: 0.5 } });
     const current = judge(follower({ overdrive: value(0.5), source: source(1e3) }), rated(max('inputOverdrive', 0.3)));
     expect(current).toMatchObject({ outcome: 'unknown', missing: [{ figure: 'overdriveCurrent' }], decidesAt: { figure: 'overdriveCurrent', value: 0.5e-3, unit: 'A' } });
+  });
+
+  it('takes a current assumed for the run, which is without bound on the best reading', () => {
+    const spec = follower({ overdrive: value(5), source: source(1e3) });
+    const assumed = (amperes: number): string => judge(spec, [...FULL, assumedFigure('overdriveCurrent', amperes)]).outcome;
+    expect([6e-3, 4e-3].map(assumed)).toEqual(['pass', 'unknown']);
   });
 
   it('asks nothing of a stage whose inputs stay within the rails', () => {

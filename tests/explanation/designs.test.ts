@@ -42,6 +42,17 @@ describe('changes of the circuit', () => {
     expect(advice.kind === 'calibrate' && advice.left).toBeLessThan(0.035);
   }, 60_000);
 
+  it('does not take the offset out where what is left is mostly borrowed from the class', () => {
+    const { made, changes } = asked('soil-moisture-probe', [], 'GX-CMOS-1M-RRIO');
+    const plain = part('GX-CMOS-1M-RRIO');
+    const sparse = { ...plain, id: 'SPARSE', tier: 'approved' as const, figures: plain.figures.filter(({ parameter }) => parameter !== 'commonModeRejection') };
+    const verdict = judgedOn(made.stage, sparse).verdicts.find(({ check }) => check === 'dc-error')!;
+    expect(verdict.terms.some(({ basis }) => basis === 'borrowed')).toBe(true);
+    const borrowing = changesFor({ stage: made.stage, part: sparse, parts: SHIPPED, strict: false }, made.changing);
+    expect(changes.advice.map(({ kind }) => kind)).toContain('calibrate');
+    expect(borrowing.advice.map(({ kind }) => kind)).not.toContain('calibrate');
+  }, 60_000);
+
   it('splits the gain over two stages that both hold with the part', () => {
     const { made, changes } = asked('soil-moisture-probe', ['signal.frequency=6 kHz', 'limits.supplyCurrent=120 µA'], 'GX-BIP-MICRO-FINE');
     const split = changes.advice.find(({ kind }) => kind === 'split')!;

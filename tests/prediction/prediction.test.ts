@@ -31,6 +31,14 @@ const bare = (figures: Figures, top = 0, bottom = 0): Figure[] => [
 ];
 
 describe('prediction against relations of its own', { timeout: 60_000 }, () => {
+  it('says so where the load takes all the output current, and does not run for ever', () => {
+    const stage = stageOf('topology: follower\nsupply: 5 V\nload: {resistance: 1 kΩ, to: ground, capacitance: 1 nF}\nsignal: {input: 0.5..4.5 V, shape: sine, frequency: 1 kHz}\n');
+    const { typical } = predicted(stage, bare({ gainBandwidth: 1e6, slewRate: 1e6, outputResistance: 100, outputCurrent: 1e-3 }));
+    for (const name of ['outputHigh', 'clipped', 'distortion', 'settling', 'rise'] as const) {
+      expect(typical.results[name], name).toMatchObject({ value: null, reason: expect.stringContaining('takes all the current') as string });
+    }
+  });
+
   it('an amplifier without limits is the ideal stage, whatever the topology', () => {
     const endless: Figures = { gainBandwidth: 1e10, slewRate: 1e12, inputCapacitance: 1e-18, voltageNoise: 1e-9, noiseCorner: 1, currentNoise: 0 };
     const seen = new Set<string>();

@@ -482,6 +482,13 @@ describe('a shortlist where nothing fits', () => {
     `);
   });
 
+  it('counts a hundred and more that are out', () => {
+    const [one] = sampleReport({ 'limits.supplyCurrent': '0.5 µA' }).rejected;
+    const many = Array.from({ length: 104 }, (_, number) => (one === undefined ? [] : [{ ...one.part, id: `SAME-${number}` }])).flat();
+    const text = renderShortlist(sampleReport({ 'limits.supplyCurrent': '0.5 µA' }, many), styleOf(100), CONTEXT);
+    expect(text).toContain('Why all 104 are out (one part can fail several checks):');
+  });
+
   it('says that the catalog is empty', () => {
     const text = renderShortlist(sampleReport({}, []), styleOf(100), CONTEXT);
     expect(text.split('\n').slice(0, 2)).toEqual(['No part fits: the catalog is empty.', '0 of 0 parts fit, 0 cannot be decided, 0 do not fit.']);
