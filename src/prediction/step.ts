@@ -31,6 +31,8 @@ const PER_PACE = 60;
 const MOST_PLACES = 20_000;
 /** After as many times twice the time it is taken never to settle. */
 const DOUBLINGS = 24;
+/** An overshoot may hold the output for a while. */
+const LEAST_DOUBLINGS = 3;
 /** Nor after as many places: a loop that goes on between its limits has the more of them the longer one looks. */
 const MOST_KEPT = 30 * MOST_PLACES;
 
@@ -85,14 +87,17 @@ function settledWalk(walkIn: (size: number) => Walk, { final, band, expected, pa
       if (Math.abs(value - final) > band) last = places.length - 1;
     }
     if ((places[last]?.time ?? 0) < 0.7 * end) return { places, output, settling: crossed({ places, output }, { after: last, final, band }) };
-    if (isStuck(places, last) || places.length > MOST_KEPT) break;
+    if (doubling >= LEAST_DOUBLINGS && isStuck(places, last) || places.length > MOST_KEPT) break;
     going = walkIn(pace * 2 ** (doubling + 1));
   }
   return { places, output, settling: null };
 }
 
-/** At one of its ends for good: it will never be within. */
-const isStuck = (places: readonly Place[], last: number): boolean => last === places.length - 1 && places.slice(-100).every(({ mode }) => mode === 'high' || mode === 'low');
+/** At one of its ends all through the last doubling of the time: it will never be within. What overshoots into an end lets go of it again. */
+function isStuck(places: readonly Place[], last: number): boolean {
+  const half = (places.at(-1)?.time ?? 0) / 2;
+  return last === places.length - 1 && places.every(({ mode, time }) => time < half || mode === 'high' || mode === 'low');
+}
 
 /** Where the straight line between the last place outside and the next one enters the band. */
 function crossed({ places, output }: Pick<Walked, 'places' | 'output'>, { after, final, band }: { readonly after: number; readonly final: number; readonly band: number }): number {

@@ -64,6 +64,8 @@ describe('a shortlist with something that fits', () => {
       2: 0.38 EUR cheaper, slew rate
       300 mV/us against 100 mV/us, gain
       bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share
+      turns it: proof decides.
 
     Why the other 2 are out (one part can
     fail several checks):
@@ -138,6 +140,7 @@ describe('a shortlist with something that fits', () => {
       against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew
       rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz
       against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1
@@ -194,6 +197,7 @@ describe('a shortlist with something that fits', () => {
       against 31.3 mV, head-room to V+ 46.1 mV against 52.2 mV, DC error 966 µV
       against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against
       100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -242,6 +246,7 @@ describe('a shortlist with something that fits', () => {
       1: 27 µA less supply current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV
       against 52.2 mV, DC error 966 µV against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate
       300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -285,6 +290,7 @@ describe('a shortlist with something that fits', () => {
       current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV against 52.2 mV, DC error 966 µV against
       8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against
       300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -327,6 +333,7 @@ describe('a shortlist with something that fits', () => {
 
     Why 1 is ahead of 2: 1 rests on limits only, 2 partly on figures that are not limits. In favour of 1: 27 µA less supply current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV
       against 52.2 mV, DC error 966 µV against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
