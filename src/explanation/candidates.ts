@@ -20,8 +20,8 @@ export interface Candidate extends Subject {
   readonly named: boolean;
 }
 
-/** Verdicts no figure of a list can close: the check does not exist, or the price is in another currency. */
-export const isBeyondLists = ({ reason }: Verdict): boolean => reason === 'not-built' || reason === 'currency';
+/** Verdicts no figure of a list can close: the check does not exist, the stage does not say what it takes, or the price is in another currency. */
+export const isBeyondLists = ({ reason }: Verdict): boolean => reason === 'not-built' || reason === 'not-said' || reason === 'currency';
 
 /** Everything that might be looked up for a part: what its open checks name first, then what else they read and have no limit of. */
 export function candidatesOf({ part, verdicts }: JudgedPart, demands: Demands, rated: Rated = 'known'): Candidate[] {

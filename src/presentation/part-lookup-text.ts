@@ -43,7 +43,7 @@ function endLines(found: PartLookups, style: Style): string[] {
 }
 
 function unsettledText({ lookups, remains }: PartLookups): string {
-  if (lookups.length === 0) return remains.length > 0 ? `Nothing to look up: ${remains.map(checkWords).join(', ')} stays open whatever is known.` : 'No figure of a datasheet was found that would decide it: a measurement would.';
+  if (lookups.length === 0) return remains.length > 0 ? `Nothing to look up: ${remains.map(checkWords).join(', ')} stays open whatever is known of the part.` : 'No figure of a datasheet was found that would decide it: a measurement would.';
   return 'No values of these figures were found that make every check pass together: a measurement would decide it.';
 }
 

@@ -335,11 +335,7 @@ describe('a part that cannot be decided', () => {
       Swing   2.92 V of 3 V between the rails can be used: head-room takes 0.21 dB of
               the dynamic range
 
-      Nothing to look up: input crossover stays open whatever is known.
-
-      What to do
-        - crossover: no figure settles it in this version; judge it by hand, or take
-          the limit out of the stage
+      Nothing to look up: overdrive stays open whatever is known of the part.
 
       No part fits as things stand.
 
