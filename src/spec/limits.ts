@@ -22,8 +22,6 @@ export function readLimits(draft: Draft): LimitsSpec {
     phaseMargin: readValue(draft, 'limits.phaseMargin'),
     junctionTemperature: readValue(draft, 'limits.junctionTemperature'),
     frequencyError: readValue(draft, 'limits.frequencyError'),
-    supplyRipple: readValue(draft, 'limits.supplyRipple'),
-    startUp: readValue(draft, 'limits.startUp'),
   });
 }
 
