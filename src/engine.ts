@@ -1,9 +1,12 @@
-import { deriveDemands, listDemands, type Demands } from './demands/index.js';
-import { whyAhead } from './explanation/index.js';
-import type { Part, PartSource, Tier } from './parts/part.js';
-import { rank, rankSurveyed, type RankedPart } from './ranking/index.js';
-import type { Asking, DataUsed, DemandsReport, Explanation, Report } from './report.js';
-import { judgePart, judging, screen, screenViews, type JudgedPart, type Screened } from './screening/index.js';
+import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
+import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
+import { classesOf } from './parts/classes.js';
+import { curvesOf } from './curves/index.js';
+import type { Part, PartSource } from './parts/part.js';
+import { predictStage, type Prediction } from './prediction/index.js';
+import { rank } from './ranking/index.js';
+import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
+import { type JudgedPart, judgePart, judging, outlining, type PartOutcome, probePart, screen } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -19,61 +22,153 @@ export function demandsOf(stage: Stage): DemandsReport {
 /** The whole flow on one screen: stage and parts in, judged, ranked and told why. */
 export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLAIN): Report {
   const demands = deriveDemands(stage);
-  const { fit, screened } = screenedAndRanked(demands, source, asking);
-  const data = dataOf(source);
+  const run = judging(demands, source.parts, asking.strict);
+  const screened = screen(run, source.parts);
+  const fit = rank(screened.fit, asking.order);
   return {
     stage,
     demands: listDemands(demands),
-    counts: { parts: data.catalog.parts, fit: screened.fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
+    counts: { parts: source.parts.length, fit: screened.fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
     fit,
     undecided: screened.undecided,
     rejected: screened.rejected,
     rejections: screened.rejections,
     nearest: screened.nearest,
     ahead: whyAhead(fit, asking.order),
+    nothingFits: null,
     asking,
-    data,
+    data: dataOf(source),
+    origin: (partId, slot) => source.origin(partId, slot),
+    curves: ({ part }) => curvesOf(run, stage, part),
+  };
+}
+
+/** Where nothing fits: the report with the reason and the smallest changes that let something in. Any other report as it is. */
+export function withWaysOut(report: Report, source: PartSource, changing: Changing): Report {
+  if (report.fit.length > 0 || report.counts.parts === 0) return report;
+  const { stage, rejected, undecided, asking } = report;
+  const search = { stage, source, screened: { rejected, undecided }, strict: asking.strict, order: asking.order };
+  return { ...report, nothingFits: whyNothingFits(search, changing) };
+}
+
+/** Which part, and how it is asked; without `changing` nothing is said about what would let it in. */
+export interface ExplainRequest {
+  readonly part: Part;
+  readonly asking?: Asking;
+  readonly changing?: Changing;
+}
+
+/** One part of the catalog on the stage, with its place in the shortlist. The part must be in the source. */
+export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
+  const { part, asking = PLAIN, changing } = request;
+  const demands = deriveDemands(stage);
+  const run = judging(demands, source.parts, asking.strict);
+  // Of the others only how they end is told: those that are plainly out need not be judged to the end.
+  const judgedAll = source.parts.map((one) => (one.id !== part.id && probePart(run, one).isPlainlyOut() ? null : judgePart(run, one)));
+  const judged = judgedAll.find((one) => one?.part.id === part.id);
+  if (judged == null) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
+  const count = (wanted: PartOutcome): number => judgedAll.filter((one) => (one?.outcome ?? 'does-not-fit') === wanted).length;
+  const fit = rank(judgedAll.flatMap((one) => (one?.outcome === 'fits' ? [one] : [])), asking.order);
+  const ranked = fit.find((line) => [line, ...line.variants].some((one) => one.part.id === part.id));
+  return {
+    stage,
+    demands: listDemands(demands),
+    judged,
+    rank: ranked?.rank ?? null,
+    counts: { parts: source.parts.length, fit: count('fits'), undecided: count('undecided'), rejected: count('does-not-fit') },
+    fitting: fit.filter((one) => one !== ranked).slice(0, 3),
+    lookups: judged.outcome === 'undecided' ? lookupsOf({ run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
+    sensitivity: sensitivitiesOf(run, judged),
+    predicted: predictedInstead(stage, source, { judged, asking }),
+    changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: source.parts, strict: asking.strict }, changing),
+    asking,
+    data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
   };
 }
 
-/** The part among those that were judged. Through views only what fits is looked into: the others have no place to be found at. */
-function judgedIn(report: Report, source: PartSource, part: Part): { judged: JudgedPart; ranked: RankedPart | undefined } {
-  const isIt = (one: JudgedPart): boolean => one.part.id === part.id && one.part.tier === part.tier;
-  const alone = source.screening === undefined ? null : judgePart(judging(deriveDemands(report.stage), source.screening.generic, report.asking.strict), part);
-  if (alone !== null && alone.outcome !== 'fits') return { judged: alone, ranked: undefined };
-  const ranked = report.fit.find((line) => isIt(line) || line.variants.some(isIt));
-  const judged = ranked === undefined ? (alone ?? [...report.undecided, ...report.rejected].find(isIt)) : [ranked, ...ranked.variants].find(isIt);
-  if (judged === undefined) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
-  return { judged, ranked };
+/** The same report with what to look up, so that undecided parts are decided. The source must be the one it was made from. */
+export function withLookups(report: Report, source: PartSource): Report {
+  return { ...report, lookups: lookupList(lookupContext(report, source), report.undecided) };
 }
 
-/** Part by part, or through views when the source has them: the same answer, without reading what is not shown. */
-function screenedAndRanked(demands: Demands, source: PartSource, { strict, order }: Asking): { screened: Screened; fit: readonly RankedPart[] } {
-  if (source.screening === undefined) {
-    const screened = screen(judging(demands, source.parts, strict), source.parts);
-    return { screened, fit: rank(screened.fit, order) };
-  }
-  const surveyed = screenViews(judging(demands, source.screening.generic, strict), source.screening.views);
-  return { screened: surveyed, fit: rankSurveyed(surveyed, order) };
+function lookupContext({ stage, asking, fit }: Report, source: PartSource): LookupContext {
+  const run = judging(deriveDemands(stage), source.parts, asking.strict);
+  return { run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order };
 }
 
-/** One part of the catalog on the stage, with its place in the shortlist. The part must be in the source. */
-export function explain(stage: Stage, source: PartSource, request: { readonly part: Part; readonly asking?: Asking }): Explanation {
-  const report = shortlist(stage, source, request.asking ?? PLAIN);
-  const { judged, ranked } = judgedIn(report, source, request.part);
-  const { demands, counts, asking, data, origin } = report;
-  const fitting = report.fit.filter((one) => one !== ranked).slice(0, 3);
-  return { stage, demands, judged, rank: ranked?.rank ?? null, counts, fitting, asking, data, origin };
+/** The stage with one part in it, simulated; `compared` beside it. Judges nothing. */
+export function predict(stage: Stage, source: PartSource, request: { readonly part: Part; readonly compared?: Part; readonly asking?: Asking }): PredictionReport {
+  const asking = request.asking ?? PLAIN;
+  const of = (part: Part): Prediction => predictionOf(stage, source, { part, strict: asking.strict });
+  return { prediction: of(request.part), compared: request.compared === undefined ? null : of(request.compared), asking, data: dataOf(source) };
+}
+
+function predictionOf(stage: Stage, source: PartSource, { part, strict }: { readonly part: Part; readonly strict: boolean }): Prediction {
+  const { operating } = deriveDemands(stage);
+  const classWorst = part.class === null ? null : (classesOf(source.parts, operating).get(part.class) ?? null);
+  return predictStage(stage, part, { operating, strict, classWorst });
+}
+
+/** Checks that say only about how it is, or nothing, and what a simulation tells instead. */
+const SIMULATED = ['distortion', 'noise', 'settling'];
+
+function predictedInstead(stage: Stage, source: PartSource, { judged, asking }: { readonly judged: JudgedPart; readonly asking: Asking }): PredictedInstead | null {
+  const remembers = deriveDemands(stage).distortion?.slewing?.remembers === true;
+  const isOpen = ({ check, reason, outcome }: JudgedPart['verdicts'][number]): boolean => reason === 'not-built' || (check === 'distortion' && remembers && outcome !== 'pass');
+  const checks = judged.verdicts.filter((verdict) => SIMULATED.includes(verdict.check) && isOpen(verdict)).map(({ check }) => check);
+  return checks.length === 0 ? null : { checks, prediction: predictionOf(stage, source, { part: judged.part, strict: asking.strict }) };
+}
+
+/** Two parts of the catalog held against each other on the stage. Both must be in the source, and not be one. */
+export function compare(stage: Stage, source: PartSource, { parts, asking = PLAIN }: { readonly parts: readonly [Part, Part]; readonly asking?: Asking }): Comparison {
+  const report = shortlist(stage, source, asking);
+  const ranked = report.fit.flatMap((line) => [line, ...line.variants].map((judged) => ({ judged, rank: line.rank })));
+  const all = [...ranked, ...[...report.undecided, ...report.rejected].map((judged) => ({ judged, rank: null }))];
+  const [one, other] = parts.map(({ id }) => all.find(({ judged }) => judged.part.id === id));
+  if (one === undefined || other === undefined || one === other) throw new RangeError(`${parts.map(({ id }) => id).join(' and ')} are not two parts of the catalog that was judged`);
+  const { demands, counts, data, origin } = report;
+  const standing = compareParts(asking.order, [one.judged, other.judged]);
+  return { stage, demands, parts: [comparedPart(one.judged, one.rank), comparedPart(other.judged, other.rank)], standing, counts, asking, data, origin };
+}
+
+/** The answer to one stage in short. */
+export interface Outline {
+  readonly counts: Report['counts'];
+  /** Id of the first choice; null when nothing fits. */
+  readonly first: string | null;
+  /** Ids of what fits, by rank, each variant a place of its own. */
+  readonly fit: readonly string[];
+}
+
+/** Answers many stages in a row on the same parts, with the counts and the order of `shortlist`. */
+export function outlinesOf(source: PartSource, asking: Asking = PLAIN): (stage: Stage) => Outline {
+  const outlined = outlining(source.parts, asking.strict);
+  return (stage) => {
+    const { counts, fit } = outlined({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
+    const ids = rank(fit, asking.order).flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
+    return { counts, first: ids[0] ?? null, fit: ids };
+  };
+}
+
+/** Many values of one field: the stage at each (or in words why it is none), and the parts that are asked. */
+export interface SweepRequest {
+  readonly values: readonly number[];
+  readonly stageAt: (value: number) => Stage | string;
+  readonly asking?: Asking;
+}
+
+/** The answer at every value, and where it turns between them. */
+export function sweepOver(source: PartSource, { values, stageAt, asking }: SweepRequest): Swept & { readonly data: DataUsed } {
+  const outline = outlinesOf(source, asking);
+  const swept = sweep(values, (value) => {
+    const stage = stageAt(value);
+    return typeof stage === 'string' ? { contradiction: stage } : outline(stage);
+  });
+  return { ...swept, data: dataOf(source) };
 }
 
 function dataOf(source: PartSource): DataUsed {
-  const approved = sizeOf(source, 'approved');
-  const generic = sizeOf(source, 'generic');
-  return { catalog: { parts: approved + generic, approved, generic, sha256: source.sha256 }, rules: RULES };
-}
-
-function sizeOf(source: PartSource, tier: Tier): number {
-  if (source.screening === undefined) return source.parts.filter((part) => part.tier === tier).length;
-  return source.screening.views.reduce((sum, view) => sum + (view.tier === tier ? view.size : 0), 0);
+  const approved = source.parts.filter((part) => part.tier === 'approved').length;
+  return { catalog: { parts: source.parts.length, approved, generic: source.parts.length - approved, sha256: source.sha256 }, rules: RULES };
 }

@@ -10,27 +10,32 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   spec: { rooms: ['quantities'], packages: ['yaml'] },
   stage: { rooms: ['quantities', 'formulas', 'spec'], packages: [] },
   demands: { rooms: ['quantities', 'formulas', 'stage'], packages: [] },
+  // The stage with a part's own figures in it, simulated; told beside the verdicts, never one of them.
+  prediction: { rooms: ['quantities', 'formulas', 'parts', 'stage'], packages: ['fft.js'] },
   verdicts: { rooms: ['parts'], packages: [] },
   checks: { rooms: ['quantities', 'formulas', 'parts', 'demands', 'verdicts'], packages: [] },
   screening: { rooms: ['parts', 'demands', 'verdicts', 'checks'], packages: [] },
   // formulas: the desirability relation is a citation like any other.
   ranking: { rooms: ['quantities', 'formulas', 'parts', 'verdicts', 'screening'], packages: [] },
-  explanation: { rooms: ['quantities', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
-  'report.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation'], packages: [] },
-  'engine.ts': { rooms: ['parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts'], packages: [] },
+  // spec and stage: what may move, and the stage an option makes; types only, reading and building are handed in. formulas: bisection, where a verdict turns.
+  explanation: { rooms: ['quantities', 'formulas', 'spec', 'stage', 'parts', 'demands', 'verdicts', 'checks', 'screening', 'ranking'], packages: [] },
+  // What pictures show, from the same readings and loop as the checks; presenters see its types through the report.
+  curves: { rooms: ['formulas', 'parts', 'stage', 'demands', 'checks', 'screening'], packages: [] },
+  'report.ts': { rooms: ['curves', 'parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation', 'prediction'], packages: [] },
+  'engine.ts': { rooms: ['curves', 'parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts', 'prediction'], packages: [] },
   // Rooms below are types only, as a report carries them; a test of its own holds that.
   presentation: {
-    rooms: ['quantities', 'report.ts', 'parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation'],
-    packages: ['string-width', 'zod'],
+    rooms: ['quantities', 'report.ts', 'parts', 'stage', 'demands', 'prediction', 'verdicts', 'screening', 'ranking', 'explanation', 'curves'],
+    packages: ['string-width', 'zod', 'd3-scale', 'd3-shape'],
   },
-  intake: { rooms: ['quantities', 'parts'], packages: ['csv-parse', 'node:crypto'] },
+  intake: { rooms: ['quantities', 'parts'], packages: ['node:crypto', 'read-excel-file'] },
   catalog: {
     rooms: ['quantities', 'parts', 'intake', 'migrations'],
     packages: ['better-sqlite3', 'kysely', 'node:fs', 'node:path', 'node:crypto'],
   },
   // The team's stage files: read from disk and judged again; which are kept stands in the catalog.
   saved: { rooms: ['quantities', 'spec', 'stage', 'parts', 'screening', 'engine.ts'], packages: ['node:fs', 'node:path'] },
-  'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'engine.ts', 'report.ts', 'presentation'], packages: [] },
+  'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'explanation', 'engine.ts', 'report.ts', 'presentation', 'prediction'], packages: [] },
   cli: { rooms: ['index.ts', 'catalog', 'intake', 'saved', 'quantities'], packages: ['commander', '@inquirer/prompts', 'node:'] },
   migrations: { rooms: [], packages: ['kysely'] },
 };
@@ -95,7 +100,7 @@ describe('architecture', () => {
   });
 
   it('shows presenters types of the judging rooms, never their code', () => {
-    const TYPES_ONLY = new Set(['stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation']);
+    const TYPES_ONLY = new Set(['curves', 'stage', 'demands', 'prediction', 'verdicts', 'screening', 'ranking', 'explanation']);
     const broken = ALL.filter(({ room, target, typeOnly }) => room === 'presentation' && TYPES_ONLY.has(target) && !typeOnly);
     expect(broken.map(({ file, target }) => `${file} imports code of ${target}`)).toEqual([]);
   });

@@ -1,5 +1,6 @@
 import type Database from 'better-sqlite3';
 import type { ReadList } from '../intake/list.js';
+import { CatalogError } from './catalog-error.js';
 import type { ChangedPart, Difference } from './difference.js';
 import { compareLists } from './difference.js';
 import type { Guard, GuardName } from './guards.js';
@@ -13,6 +14,8 @@ import { refreshOrigins, writeDifference } from './store.js';
 export interface ImportOptions {
   /** When it was imported, ISO 8601; kept as told, never read from a clock. */
   readonly now?: string;
+  /** The import this list was made from: another one in force means that somebody else was quicker. */
+  readonly basedOn?: number;
   /** Compare only; nothing is written. */
   readonly dryRun?: boolean;
   /** Guards the user has accepted by name. */
@@ -47,6 +50,7 @@ export function importList(database: Database.Database, list: ReadList, options:
 function importInTransaction(database: Database.Database, list: ReadList, options: ImportOptions): ImportResult {
   const { dryRun = false, accept = new Set<GuardName>(), progress } = options;
   const previous = currentImport(database, list.tier);
+  if (options.basedOn !== undefined && previous?.id !== options.basedOn) throw new CatalogError('locked', database.name, { message: 'the list in force was replaced by another process meanwhile' });
   // The same bytes are the same generic sets. An approved list may be read in another way (mapping, classes, declarations) and is compared.
   if (list.tier === 'generic' && previous?.sha256 === list.sha256) return unchanged(list, previous);
   const difference = compareLists(database, list, progress?.comparing ?? NO_PROGRESS);

@@ -1,13 +1,13 @@
 import type Database from 'better-sqlite3';
 import type { Part, Tier } from '../parts/part.js';
-import { PART_COLUMNS } from './part-columns.js';
 import type { Cell } from './part-row.js';
 import { rowToPart } from './part-row.js';
+import { readableColumns } from './readable-columns.js';
 
 /** The parts of a tier in force, by id. */
 export function partsInForce(database: Database.Database, tier: Tier): Part[] {
   const query = database.prepare<[Tier], Cell[]>(
-    `select ${PART_COLUMNS.join(', ')} from part where tier = ? and withdrawn_at is null`,
+    `select ${readableColumns(database)} from part where tier = ? and withdrawn_at is null`,
   );
   // Row by row: all rows at once would take as much memory again as the parts.
   const parts: Part[] = [];
@@ -17,7 +17,7 @@ export function partsInForce(database: Database.Database, tier: Tier): Part[] {
 
 /** One part of a tier in force; null when there is none with this id. */
 export function partInForce(database: Database.Database, tier: Tier, id: string): Part | null {
-  const query = database.prepare<[Tier, string], Cell[]>(`select ${PART_COLUMNS.join(', ')} from part where tier = ? and id = ? and withdrawn_at is null`);
+  const query = database.prepare<[Tier, string], Cell[]>(`select ${readableColumns(database)} from part where tier = ? and id = ? and withdrawn_at is null`);
   const row = query.raw().get(tier, id);
   return row === undefined ? null : rowToPart(row);
 }

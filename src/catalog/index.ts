@@ -10,10 +10,11 @@ import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
 import type { CurrentImport } from './imports.js';
 import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
+import { listInForce } from './list-in-force.js';
+import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
 import type { SavedStage } from './saved-stages.js';
 import { removeStages, savedStages, saveStages } from './saved-stages.js';
-import { screenSource } from './screen-source.js';
 import { partSource } from './source.js';
 import { undoImport } from './store.js';
 import type { WithdrawnPart } from './withdrawn.js';
@@ -27,6 +28,7 @@ export { GUARDS } from './guards.js';
 export type { Guard, GuardName } from './guards.js';
 export type { ImportOptions, ImportResult } from './import-list.js';
 export type { CurrentImport, ImportCounts } from './imports.js';
+export type { ListInForce } from './list-in-force.js';
 export type { Progress } from './progress.js';
 export type { SavedStage } from './saved-stages.js';
 export type { ColumnSubject, ScaledColumn } from './scaling.js';
@@ -51,6 +53,8 @@ export interface Catalog {
   approvedPart(partId: string): Part | null;
   /** The generic sets, by id. */
   genericParts(): readonly Part[];
+  /** The approved list in force with its records, to be patched; null when none was imported. */
+  listInForce(): ListInForce | null;
   /** The columns of an earlier import as they were read. */
   columnsOf(imported: CurrentImport): readonly ListColumn[];
   /** The column that filled a slot of most parts in an earlier import; null when none did. */
@@ -71,8 +75,6 @@ export interface Catalog {
   removeStages(paths: readonly string[]): void;
   /** The parts in force and where each figure came from. */
   source(): PartSource;
-  /** The same, for one question: parts are read when they are looked at. The catalog is as it was at this moment until it is closed; nothing can be written meanwhile. */
-  screenSource(): PartSource;
   close(): void;
 }
 
@@ -85,11 +87,6 @@ export async function openCatalog(file: string, options: OpenOptions = {}): Prom
 function catalogOf(database: Database.Database, { file, isNew }: { file: string; isNew: boolean }): Catalog {
   const origin = originFinder(database);
   const tableOf = columnTables(database);
-  const writing = <Result>(work: () => Result): Result => {
-    // The open transaction of `screenSource` ends with the connection: what is written in it would be lost without a word.
-    if (database.inTransaction) throw new RangeError(`${file} is being read for one question; close it before it is written`);
-    return guarded(file, work);
-  };
   return {
     file,
     isNew,
@@ -99,20 +96,20 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
     genericIds: () => guarded(file, () => new Set(idsInForce(database, 'generic'))),
     classes: () => guarded(file, () => new Set(classesInForce(database, 'generic'))),
     approvedCount: () => guarded(file, () => countInForce(database, 'approved')),
-    importList: (list, options = {}) => writing(() => importList(database, asTier(list, 'approved'), options)),
+    importList: (list, options = {}) => guarded(file, () => importList(database, asTier(list, 'approved'), options)),
     approvedPart: (partId) => guarded(file, () => partInForce(database, 'approved', partId)),
     genericParts: () => guarded(file, () => partsInForce(database, 'generic')),
+    listInForce: () => guarded(file, () => database.transaction(() => listInForce(database))()),
     columnsOf: ({ id }) => guarded(file, () => tableOf(id).all),
     columnOf: ({ id }, slot) => guarded(file, () => columnOf(tableOf(id), slot)),
     originIn: (imported, partId, slot) => guarded(file, () => origin({ tier: 'approved', from: imported, partId, slot })),
-    undo: () => writing(() => database.transaction(() => undoImport(database, 'approved')).immediate()),
-    seedGeneric: (list) => writing(() => importList(database, asTier(list, 'generic')).outcome === 'imported'),
+    undo: () => guarded(file, () => database.transaction(() => undoImport(database, 'approved')).immediate()),
+    seedGeneric: (list) => guarded(file, () => importList(database, asTier(list, 'generic')).outcome === 'imported'),
     withdrawn: (partId) => guarded(file, () => withdrawnPart(database, file, partId)),
     savedStages: () => guarded(file, () => savedStages(database)),
-    saveStages: (stages) => writing(() => saveStages(database, stages)),
-    removeStages: (paths) => writing(() => removeStages(database, paths)),
+    saveStages: (stages) => guarded(file, () => saveStages(database, stages)),
+    removeStages: (paths) => guarded(file, () => removeStages(database, paths)),
     source: () => partSource(database, file),
-    screenSource: () => screenSource(database, file),
     close: () => void database.close(),
   };
 }

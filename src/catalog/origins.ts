@@ -1,6 +1,6 @@
 import type Database from 'better-sqlite3';
 import { DECLARED } from '../intake/list-sources.js';
-import type { ListColumn } from '../intake/list.js';
+import type { ListColumn, PatchedCell } from '../intake/list.js';
 import type { Origin, Tier } from '../parts/part.js';
 import type { ColumnTable } from './import-columns.js';
 import { columnTables } from './import-columns.js';
@@ -22,6 +22,8 @@ export function originFinder(database: Database.Database): (query: OriginQuery) 
   return (query) => {
     const record = records.get(query.from.id, query.partId);
     if (record === undefined) return null;
+    const sheet = patchedCell(record, query.slot);
+    if (sheet !== null) return sheet;
     const table = tableOf(query.from.id);
     const number = numberOf(record, query.slot, table);
     if (number === DECLARED) return { kind: 'assumption', text: `declared for the whole list: ${table.declared ?? ''}` };
@@ -40,11 +42,17 @@ function firstUnder(slots: ReadonlyMap<string, number>, slot: string): number | 
   return slot.includes('@') ? undefined : [...slots].find(([one, number]) => number !== DECLARED && one.startsWith(`${slot}@`))?.[1];
 }
 
+/** The cell of a look-up sheet the figure came from; null when it came from the list itself. */
+function patchedCell({ patched }: RecordRow, slot: string): Origin | null {
+  return patched == null ? null : ((JSON.parse(patched) as Readonly<Record<string, PatchedCell>>)[slot] ?? null);
+}
+
 interface RecordRow {
   readonly line: number;
   readonly row: number;
   readonly cells: string;
   readonly figures?: string | null;
+  readonly patched?: string | null;
 }
 
 function originOf({ line, row, cells }: RecordRow, { tier, from, partId }: OriginQuery, { header, number, letter }: ListColumn): Origin {

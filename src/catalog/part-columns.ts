@@ -4,7 +4,7 @@ import { PARAMETERS } from '../parts/figures.js';
 /** Columns of a part that are not figures, in the order `part-row.ts` writes them. */
 export const IDENTITY_COLUMNS = [
   'tier', 'id', 'description', 'status', 'lifecycle', 'package', 'channels', 'qualification', 'class', 'family',
-  'price_amount', 'price_currency', 'price_quantity', 'phase_reversal', 'input_clamp', 'input_type',
+  'price_amount', 'price_currency', 'price_quantity', 'phase_reversal', 'input_clamp', 'input_type', 'crossover_free',
 ] as const;
 
 export interface FigureColumn {

@@ -29,20 +29,20 @@ function identityCells(part: Part): Cell[] {
     part.tier, part.id, part.description, part.status, part.lifecycle, part.package, part.channels,
     part.qualification, part.class, part.family,
     part.price?.amount ?? null, part.price?.currency ?? null, part.price?.quantity ?? null,
-    bit(part.phaseReversal), bit(part.inputClamp), part.inputType,
+    bit(part.phaseReversal), bit(part.inputClamp), part.inputType, bit(part.crossoverFree),
   ];
 }
 
-/** Everything of a row but its figures. */
-export function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
+function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
   const [tier, id, description, status, lifecycle, pack, channels, qualification, partClass, family, ...rest] = row;
-  const [amount, currency, quantity, phaseReversal, inputClamp, inputType] = rest;
+  const [amount, currency, quantity, phaseReversal, inputClamp, inputType, crossoverFree] = rest;
   return {
     id: String(id), tier: tier as Tier, description: text(description), status: text(status) as Status | null,
     lifecycle: text(lifecycle) as Lifecycle | null, package: text(pack), channels: number(channels), qualification: text(qualification),
     class: text(partClass), family: text(family),
     price: typeof amount === 'number' ? { amount, currency: String(currency), quantity: number(quantity) } : null,
     phaseReversal: flag(phaseReversal), inputClamp: flag(inputClamp), inputType: text(inputType) as InputType | null,
+    crossoverFree: flag(crossoverFree),
   };
 }
 
@@ -76,8 +76,7 @@ function columnIndex(): Readonly<Record<Parameter, Partial<Record<LimitKind | 'p
 /** One for all figures without condition: a large list has millions of them. */
 const PLAIN: Condition = Object.freeze({});
 
-/** Adds what one cell of a figure column holds. */
-export function addFigures(figures: Figure[], { parameter, kind }: FigureColumn, cell: string | number): void {
+function addFigures(figures: Figure[], { parameter, kind }: FigureColumn, cell: string | number): void {
   if (kind !== null) return void figures.push({ parameter, kind, value: Number(cell), condition: PLAIN });
   for (const [limit, value, condition, assumed] of JSON.parse(String(cell)) as readonly Point[]) {
     figures.push({ parameter, kind: limit, value, condition, ...(assumed === true ? { assumed } : {}) });

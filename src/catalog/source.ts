@@ -5,6 +5,7 @@ import { catalogHash } from './content.js';
 import { partsInForce } from './in-force.js';
 import type { CurrentImport } from './imports.js';
 import { currentImport } from './imports.js';
+import { cellFinder } from './list-cells.js';
 import { originFinder } from './origins.js';
 
 /** The parts in force, approved before generic, each tier by id. Read once; origins are looked up when asked for. */
@@ -23,6 +24,7 @@ function readSource(database: Database.Database, file: string): PartSource {
   const generic = readTier(database, 'generic');
   const tierOf = new Map([generic, approved].flatMap((kept) => kept.parts.map((part): [string, KeptTier] => [part.id, kept])));
   const origin = originFinder(database);
+  const cells = cellFinder(database);
   return {
     parts: [...approved.parts, ...generic.parts],
     sha256: catalogHash(approved.current?.contentSha256 ?? null, generic.current?.contentSha256 ?? null),
@@ -31,6 +33,11 @@ function readSource(database: Database.Database, file: string): PartSource {
       if (kept === undefined || kept.current === null) return null;
       const { tier, current } = kept;
       return guarded(file, () => origin({ tier, from: current, partId, slot }));
+    },
+    cells(partId, figure) {
+      const kept = tierOf.get(partId);
+      const from = kept?.tier === 'approved' ? kept.current : null;
+      return from === null ? [] : guarded(file, () => cells(from, partId, figure));
     },
   };
 }

@@ -1,7 +1,6 @@
 import type Database from 'better-sqlite3';
 import type { ReadList } from '../intake/list.js';
 import type { Tier } from '../parts/part.js';
-import { encodeList, rebuildDictionary } from './dictionary.js';
 import type { Difference } from './difference.js';
 import { FATE } from './difference.js';
 import { currentImport, insertImport, updateOrigin } from './imports.js';
@@ -40,7 +39,6 @@ export function writeDifference(database: Database.Database, list: ReadList, { d
     writeRecord(part.id, index);
     progress(index + 1, list.parts.length);
   });
-  if (tier === 'approved') encodeList(database, list.parts);
 }
 
 /**
@@ -54,16 +52,16 @@ export function undoImport(database: Database.Database, tier: Tier): boolean {
   database.prepare('update part set withdrawn_at = ? where import_id = ?').run(current.id, current.id);
   database.prepare('update part set withdrawn_at = null where withdrawn_at = ? and import_id <> ?').run(current.id, current.id);
   database.prepare('update list_import set undone = 1 where id = ?').run(current.id);
-  if (tier === 'approved') rebuildDictionary(database);
   return true;
 }
 
 function recordWriter(database: Database.Database, list: ReadList, importId: number): (id: string, index: number) => void {
-  const insert = database.prepare('insert into record (import_id, part_id, line, row, cells, figures) values (?, ?, ?, ?, ?, ?)');
+  const insert = database.prepare('insert into record (import_id, part_id, line, row, cells, figures, patched) values (?, ?, ?, ?, ?, ?, ?)');
   return (id, index) => {
     const record = list.records[index];
     if (record === undefined) return;
     const others = list.sources.others.get(index);
-    insert.run(importId, id, record.line, record.row, JSON.stringify(record.cells), others === undefined ? null : JSON.stringify(Object.fromEntries(others)));
+    const patched = list.patched?.get(index);
+    insert.run(importId, id, record.line, record.row, JSON.stringify(record.cells), others === undefined ? null : JSON.stringify(Object.fromEntries(others)), patched === undefined ? null : JSON.stringify(patched));
   };
 }

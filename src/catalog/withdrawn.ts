@@ -4,7 +4,7 @@ import { guarded } from './catalog-error.js';
 import type { CurrentImport } from './imports.js';
 import { importById } from './imports.js';
 import { originFinder } from './origins.js';
-import { PART_COLUMNS } from './part-columns.js';
+import { readableColumns } from './readable-columns.js';
 import type { Cell } from './part-row.js';
 import { rowToPart } from './part-row.js';
 
@@ -40,7 +40,7 @@ export function withdrawnPart(database: Database.Database, file: string, id: str
 
 /** Versions of imports that stand go before those of imports taken back. */
 function lastVersion(database: Database.Database, id: string): Cell[] | null {
-  const columns = PART_COLUMNS.map((name) => `part.${name}`).join(', ');
+  const columns = readableColumns(database);
   const query = database.prepare<[string], Cell[]>(
     `select undone, part.import_id, part.withdrawn_at, ${columns} from part join list_import on list_import.id = part.import_id
      where part.tier = 'approved' and part.id = ? order by undone, part.withdrawn_at desc, part.key desc limit 1`,

@@ -30,8 +30,8 @@ export interface AnyCheck {
   readonly reads: readonly string[];
   readonly hasMargin: boolean;
   isAsked(demands: Demands): boolean;
-  /** Everything of the demands a finding depends on; null: nothing is asked. */
-  asks(demands: Demands): unknown;
+  /** What the stage asks, to be held against what another stage asks; null: nothing. */
+  asked(demands: Demands): unknown;
   judge(demands: Demands, readings: Readings): Finding | null;
 }
 
@@ -40,7 +40,7 @@ export function seal<Asked>(check: Check<Asked>): AnyCheck {
   return {
     id, title, unit, reads, hasMargin,
     isAsked: (demands) => check.asks(demands) !== null,
-    asks: (demands) => check.asks(demands),
+    asked: (demands) => check.asks(demands),
     judge: (demands, readings) => {
       const asked = check.asks(demands);
       return asked === null ? null : check.judge(asked, readings);

@@ -16,7 +16,7 @@ export const distortion: Check<DistortionDemand> = {
   unit: '1',
   reads: [
     'slewRate', 'gainBandwidth', 'inputCapacitance', 'inputType', 'outputLowHeadroom', 'outputHighHeadroom', 'offsetVoltage', 'offsetDrift', 'inputCrossover', 'inputHighHeadroom',
-    'commonModeRejection',
+    'commonModeRejection', 'crossoverFree',
   ],
   hasMargin: true,
   asks: (demands) => demands.distortion,

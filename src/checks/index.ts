@@ -1,5 +1,7 @@
 import { channels } from './channels.js';
 import { seal, type AnyCheck } from './check.js';
+import { clamp } from './clamp.js';
+import { crossover } from './crossover.js';
 import { dcError } from './dc-error.js';
 import { distortion } from './distortion.js';
 import { frequencyError } from './frequency-error.js';
@@ -12,18 +14,22 @@ import { noise } from './noise.js';
 import { outputCurrent } from './output-current.js';
 import { outputHigh } from './output-high.js';
 import { outputLow } from './output-low.js';
+import { overdrive } from './overdrive.js';
 import { packageWish } from './package.js';
 import { phaseMargin } from './phase-margin.js';
+import { phaseReversal } from './phase-reversal.js';
 import { price } from './price.js';
 import { qualification } from './qualification.js';
 import { settling } from './settling.js';
 import { slewRate } from './slew-rate.js';
 import { stableGain } from './stable-gain.js';
+import { startUp } from './start-up.js';
 import { status } from './status.js';
 import { supplyCurrent } from './supply-current.js';
 import { supplyHigh } from './supply-high.js';
 import { supplyLow } from './supply-low.js';
 import { supplyPeak } from './supply-peak.js';
+import { supplyRipple } from './supply-ripple.js';
 import { temperatureHigh } from './temperature-high.js';
 import { temperatureLow } from './temperature-low.js';
 
@@ -44,7 +50,9 @@ export const CHECKS: readonly AnyCheck[] = [
   seal(noise),
   seal(distortion),
   seal(dcError),
+  seal(supplyRipple),
   seal(settling),
+  seal(startUp),
   seal(frequencyError),
   seal(supplyCurrent),
   seal(temperatureLow),
@@ -56,6 +64,10 @@ export const CHECKS: readonly AnyCheck[] = [
   seal(status),
   seal(lifecycle),
   seal(price),
+  seal(crossover),
+  seal(phaseReversal),
+  seal(clamp),
+  seal(overdrive),
 ];
 
 export type { AnyCheck } from './check.js';

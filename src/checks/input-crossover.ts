@@ -6,9 +6,9 @@ import type { Term } from '../verdicts/finding.js';
 import { NONE, type DistortionPart } from './distortion-part.js';
 
 /** Hand-over of the input pairs lies within this of V+ where a part has one, V (common practice: 1 to 1.8 V). */
-const USUAL = 2;
+export const USUAL = 2;
 /** A part whose inputs must stay this far below V+ has one pair only, V (common practice). */
-const ONE_PAIR = 0.9;
+export const ONE_PAIR = 0.9;
 
 /**
  * The step of the offset where the inputs cross from one pair to the other. No list states its size: the rejection over the whole
@@ -16,9 +16,10 @@ const ONE_PAIR = 0.9;
  */
 export function crossoverPart(asked: DistortionDemand, readings: Readings): DistortionPart {
   if (asked.crossovers.length === 0) return NONE;
+  if (readings.identity.crossoverFree === true) return NONE;
   const [min, max] = [readings.figure('inputCrossover', 'min'), readings.figure('inputCrossover', 'max')];
   if (min === null || max === null) return notStated(asked, readings);
-  const perVolt = Math.max(0, ...asked.crossovers.map((swing) => swing.supply * worstShare(swing, { from: min.value, to: max.value })));
+  const perVolt = crossoverPerRejection(asked.crossovers, { from: min.value, to: max.value });
   if (perVolt === 0) return NONE;
   const rejection = readings.figureOrClass('commonModeRejection');
   if (rejection === null) return { ...NONE, missing: [{ figure: 'commonModeRejection', kind: 'min' }] };
@@ -27,6 +28,11 @@ export function crossoverPart(asked: DistortionDemand, readings: Readings): Dist
   const how = [rejection.how, 'step at the hand-over of the input pairs, at most the supply over the rejection'].filter((step) => step !== null).join(', ');
   const term: Term = { name: 'input crossover', value: readings.bounded(perVolt / rejection.value, 0), slot: rejection.slot, basis, figure, how };
   return { ...NONE, terms: [term] };
+}
+
+/** Distortion at the output, worst corner, times the rejection that bounds the step; 0 where no swing reaches the region (V below V+). */
+export function crossoverPerRejection(swings: readonly InputSwing[], region: { readonly from: number; readonly to: number }): number {
+  return Math.max(0, ...swings.map((swing) => swing.supply * worstShare(swing, region)));
 }
 
 /** Where in the region it is worst; distortion at the output for a step of 1 V. */

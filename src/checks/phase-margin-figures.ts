@@ -26,7 +26,7 @@ export interface LoopFigures {
   readonly capacitiveLoad: Reading | null;
 }
 
-export function loopFigures(asked: PhaseMarginDemand, readings: Readings): LoopFigures {
+export function loopFigures(asked: Pick<PhaseMarginDemand, 'network'>, readings: Readings): LoopFigures {
   const speed = readings.spread('gainBandwidth');
   return {
     speed,

@@ -4,7 +4,7 @@ import { feedbackFactor } from '../formulas/feedback-loop.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
 import { maximallyFlatCapacitor } from '../formulas/transimpedance.js';
 import { crossoverOf } from './phase-margin-crossover.js';
-import { loadedFactor, type LoopNetworks } from './phase-margin-exact-load.js';
+import { loadedFactor, type Factor, type LoopNetworks } from './phase-margin-exact-load.js';
 
 /** What hangs behind the amplifier's open-loop output resistance: Ω and F; resistance null: a capacitance alone. */
 export interface LoadedOutput {
@@ -110,8 +110,8 @@ export function phaseParts(loop: Loop, gainBandwidth: number): PhaseParts | null
   const networks = networksOf(loop, gainBandwidth);
   const bare = feedbackFactor(networks);
   const { load, ownPole } = loop;
-  const loaded = load !== null && isExact(networks) ? loadedFactor(networks, load) : null;
-  const size = loaded === null ? (frequency: number): number => magnitude(bare(frequency)) * loadSize(load, frequency) : (frequency: number): number => magnitude(loaded(frequency));
+  const loaded = loadedOf(loop, networks);
+  const size = sizeOf({ load, bare, loaded });
   const crossover = crossoverOf((frequency) => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.hypot(1, frequency / ownPole)), gainBandwidth);
   if (crossover === null) return null;
   const feedback = bare(crossover);
@@ -121,6 +121,18 @@ export function phaseParts(loop: Loop, gainBandwidth: number): PhaseParts | null
     load: loaded === null ? loadAngle(load, crossover) : phase(divide(loaded(crossover), feedback)),
     own: 0 - Math.atan(crossover / ownPole) * DEGREES,
   };
+}
+
+/** |β·load| of the loop as a function of the frequency in Hz, V/V: its inverse is the noise gain that the open-loop gain meets at the crossover. */
+export function loopFactor(loop: Loop, gainBandwidth: number): (frequency: number) => number {
+  const networks = networksOf(loop, gainBandwidth);
+  return sizeOf({ load: loop.load, bare: feedbackFactor(networks), loaded: loadedOf(loop, networks) });
+}
+
+const loadedOf = ({ load }: Loop, networks: LoopNetworks): Factor | null => (load !== null && isExact(networks) ? loadedFactor(networks, load) : null);
+
+function sizeOf({ load, bare, loaded }: { readonly load: LoadedOutput | null; readonly bare: Factor; readonly loaded: Factor | null }): (frequency: number) => number {
+  return loaded === null ? (frequency) => magnitude(bare(frequency)) * loadSize(load, frequency) : (frequency) => magnitude(loaded(frequency));
 }
 
 const DEGREES = 180 / Math.PI;
@@ -139,7 +151,8 @@ function turned({ resistance, capacitance }: LoadedOutput, ohms: number, frequen
   return Math.atan(2 * Math.PI * frequency * parallel * capacitance) * DEGREES;
 }
 
-function networksOf({ network, open, inputCapacitance, stray = 0 }: Loop, gainBandwidth: number): LoopNetworks {
+/** Both networks with this part's capacitances and, where it is left to the part, its feedback capacitor. */
+export function networksOf({ network, open, inputCapacitance, stray = 0 }: Loop, gainBandwidth: number): LoopNetworks {
   const flat = open === null ? null : maximallyFlatCapacitor({ feedback: open.feedback, inputCapacitance: open.inputCapacitance + inputCapacitance, gainBandwidth });
   const { plus, minus } = flat === null ? network : withFeedbackCapacitor(network, flat);
   return { plus: feedsBack(plus) ? plus : SILENT, minus, minusCapacitance: inputCapacitance + stray };

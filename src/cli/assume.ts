@@ -1,4 +1,4 @@
-import { figureSlot, limitKindOf, PARAMETERS, type Figure, type Parameter, type Part, type PartSource } from '../index.js';
+import { assumedFigure, figureSlot, hasTwoEnds, limitKindOf, PARAMETERS, withAssumed, type Figure, type LimitKind, type Parameter, type Part, type PartSource } from '../index.js';
 import { parseQuantity } from '../quantities/parse.js';
 import type { Problem } from '../quantities/problem.js';
 import { suggest } from '../quantities/suggest.js';
@@ -17,7 +17,7 @@ export function assumeFigures(source: PartSource, wishes: readonly string[]): { 
       continue;
     }
     assumed.add(`${read.part.id} ${figureSlot(read.figure)}`);
-    parts = parts.map((part) => (part.id === read.part.id ? withFigure(part, read.figure) : part));
+    parts = parts.map((part) => (part.id === read.part.id ? withAssumed(part, read.figure) : part));
   }
   const origin: PartSource['origin'] = (id, slot) => (assumed.has(`${id} ${slot}`) ? FOR_THIS_RUN : source.origin(id, slot));
   return { source: { ...source, parts, origin }, problems };
@@ -29,29 +29,32 @@ type Wish = { readonly part: Part; readonly figure: Figure } | { readonly proble
 
 function readWish(wish: string, source: PartSource): Wish {
   const equals = wish.indexOf('=');
-  const dot = wish.lastIndexOf('.', equals < 0 ? undefined : equals);
+  const end = /\.(min|max)$/u.exec(wish.slice(0, Math.max(0, equals)))?.[1] as LimitKind | undefined;
+  const dot = wish.lastIndexOf('.', equals < 0 ? undefined : equals - (end === undefined ? 0 : end.length + 2));
   if (equals < 0 || dot <= 0) return refuse(wish, 'not PART.figure=VALUE', '--assume PART.offsetDrift=10µV/K');
   const found = findPart(source.parts, wish.slice(0, dot));
   if (!found.ok) return { problem: { ...found.problem, place: { path: `--assume ${wish}` } } };
-  const name = wish.slice(dot + 1, equals);
+  const name = wish.slice(dot + 1, equals - (end === undefined ? 0 : end.length + 1));
   if (!(name in PARAMETERS)) return refuse(wish, `no figure called ${name}`, suggest(name, Object.keys(PARAMETERS)).join(', ') || 'railfit help figures');
-  return valueOf({ wish, part: found.part, parameter: name as Parameter, text: wish.slice(equals + 1) }, source);
+  const parameter = name as Parameter;
+  if (end !== undefined && !hasTwoEnds(parameter)) return refuse(wish, `${name} has one limit, its ${limitKindOf(parameter)}`, `--assume ${wish.replace(`.${end}=`, '=')}`);
+  return valueOf({ wish, part: found.part, parameter, kind: end ?? limitKindOf(parameter), text: wish.slice(equals + 1) }, source);
 }
 
 interface Asked {
   readonly wish: string;
   readonly part: Part;
   readonly parameter: Parameter;
+  readonly kind: LimitKind;
   readonly text: string;
 }
 
 function valueOf(asked: Asked, source: PartSource): Wish {
-  const { part, parameter, text } = asked;
-  const kind = limitKindOf(parameter);
+  const { part, parameter, kind, text } = asked;
   if (text === 'class') {
     const value = classValue(asked, source);
     if (value === null) return refuse(asked.wish, `no class of ${part.id} has ${parameter}`, 'write a value instead of class');
-    return { part, figure: { parameter, kind, value, condition: {}, assumed: true } };
+    return { part, figure: assumedFigure(parameter, value, kind) };
   }
   const read = parseQuantity(text, PARAMETERS[parameter].field);
   if (!read.ok) {
@@ -60,20 +63,17 @@ function valueOf(asked: Asked, source: PartSource): Wish {
   }
   const value = read.quantity.nominal ?? read.quantity.max ?? read.quantity.min;
   if (value === undefined) return refuse(asked.wish, 'no value', '--assume PART.offsetDrift=10µV/K');
-  return { part, figure: { parameter, kind, value, condition: {}, assumed: true } };
+  return { part, figure: assumedFigure(parameter, value, kind) };
 }
 
 /** The worst value printed for the figure in the generic sets of the part's class. */
-function classValue({ part, parameter }: Asked, source: PartSource): number | null {
+function classValue({ part, parameter, kind }: Asked, source: PartSource): number | null {
   const sets = source.parts.filter((other) => other.tier === 'generic' && other.class !== null && other.class === part.class);
-  const values = sets.flatMap((set) => set.figures.filter((figure) => figure.parameter === parameter).map((figure) => figure.value));
+  const isRange = hasTwoEnds(parameter);
+  const values = sets.flatMap((set) => set.figures.filter((figure) => figure.parameter === parameter && (!isRange || figure.kind === kind)).map((figure) => figure.value));
   if (values.length === 0) return null;
-  return limitKindOf(parameter) === 'max' ? Math.max(...values) : Math.min(...values);
-}
-
-/** An assumed figure takes the place of what the list has for that parameter and limit kind. */
-function withFigure(part: Part, figure: Figure): Part {
-  return { ...part, figures: [...part.figures.filter((one) => one.parameter !== figure.parameter), figure] };
+  // Of a range the narrower end is the worse one.
+  return (kind === 'max') === isRange ? Math.min(...values) : Math.max(...values);
 }
 
 function refuse(wish: string, message: string, fix: string): Wish {

@@ -49,6 +49,8 @@ const CONTRADICTIONS: readonly CodePage[] = [
   page('S210', 'components and frequency disagree', 'Timing or filter components written beside the frequency, corner or Q must give it within their tolerances, and a frequency must be one that preferred values can give.', ['oscillator: {frequency: 2 kHz, resistance: 100 kΩ, capacitance: 1 nF}', 'oscillator: {frequency: 2 kHz, capacitance: 1 nF}']),
   page('S211', 'no such filter', 'The filter is not said, oscillates with its components or at the ends of their tolerances, has a gain its circuit cannot have, or no preferred values give it.', ['filter: {corner: 10 MHz, q: 20}', 'filter: {corner: 10 kHz, q: 0.707}']),
   page('S212', 'nothing bounds the integrator', 'What is added up without an end runs into a rail: a reset, a lowest frequency or a resistor across the capacitor bounds it.', ['integrator: {resistance: 100 kΩ, capacitance: 100 nF}', 'integrator: {resistance: 100 kΩ, capacitance: 100 nF, window: 20 ms}']),
+  page('S220', 'duty cycle that leaves no time', 'A stage that is switched off between measurements is on for less than its period, and starts within that time.', ['dutyCycle: {on: 2 s, every: 1 s}', 'dutyCycle: {on: 2 ms, every: 1 s}']),
+  page('S221', 'ripple larger than the supply', 'What is left of the ripple behind the supply filter is a small part of the supply.', ['supply: 5 V, supplyRipple: {amplitude: 12 Vpp, frequency: 100 kHz}', 'supplyRipple: {amplitude: 50 mVpp, frequency: 100 kHz}']),
 ];
 
 const COMMANDS: readonly CodePage[] = [
@@ -66,6 +68,8 @@ const COMMANDS: readonly CodePage[] = [
   page('C111', 'no terminal to ask on', 'Guided entry needs a person at a terminal; everything it asks can be written in a file or given as options.', ['railfit draft --ask < answers.txt', 'railfit draft non-inverting -o stage.yaml']),
   page('C112', 'no such saved stage', 'What is saved is listed by railfit stages.', ['railfit stages remove probe.yml', 'railfit stages remove probe.yaml']),
   page('C113', 'a part that was withdrawn', 'It was on an earlier list and is not on this one. Its versions are kept, so that old reports resolve.', ['railfit explain ORG-OA-0008 stage.yaml', 'railfit part ORG-OA-0008, which shows it as it was last']),
+  page('C114', 'what is swept', 'One field at a time, from one value to a larger one. What is swept is a quantity: a word or a count has nothing in between.', ['railfit sweep stage.yaml --over package=SOT-23-5', 'railfit sweep stage.yaml --over supply=2.7V..5.5V']),
+  page('C121', 'no report in the file', 'A report carries its answer as a document, and verify judges that again; a page that was saved by a browser in another form, cut off or edited there has none that can be trusted.', ['railfit verify screenshot.html', 'railfit verify review.html, as railfit report wrote it']),
   page('E501', 'the catalog cannot be used', 'The file is locked, unreadable, not a catalog, or from a newer version. It was left as it is.', ['--catalog /etc/hosts', '--catalog team.sqlite']),
   page('E502', 'file cannot be read', 'The path or its permissions.', ['stage.yml for stage.yaml', 'the path as ls shows it']),
   page('E503', 'file cannot be written', 'The folder does not exist or may not be written.', ['--errors /nowhere/e.csv', '--errors e.csv']),
@@ -77,6 +81,12 @@ const GUARDS: readonly CodePage[] = [
   page('I701', 'a large part of the list is gone', 'More than a fifth of the parts in force would be withdrawn: usually a filter was left on, or the wrong sheet was saved.', ['9 of 20 parts missing', 'the whole list; railfit import list.csv --accept removed if they are gone']),
   page('I702', 'lifecycle getting better in bulk', 'Parts seldom come back from the end of their life; many at once are a column that slipped or an old file.', ['obsolete becomes active for 6 of 20 parts', 'the lifecycle the makers publish; --accept lifecycle if it is right']),
   page('I703', 'an older file', 'These very bytes were in force before and another list has replaced them; importing them again would bring old figures back.', ['march.csv after april.csv', 'railfit import --undo takes the last import back; --accept older imports the old file']),
+  page('I801', 'no such part in the list', 'A look-up sheet fills cells of parts that are on the list in force; a new part belongs in the list itself.', ['HOUSE-99, which is not on the list', 'HOUSE-09, or the new part in the list']),
+  page('I802', 'nothing filled', 'Every cell of the look-up sheet is empty or still holds its question mark.', ['? in every cell', '3.5 in place of the question mark']),
+  page('I803', 'known already, and another value', 'A look-up sheet fills gaps. What the list says is corrected in the list, so that one place is right.', ['offset drift max 5 where the list says 4', 'an empty cell in the sheet; the list corrected and imported']),
+  page('I804', 'a column of the sheet that is no figure', 'A changed header would lose what was filled in below it.', ['offset drfit max (µV/K)', 'offset drift max (µV/K)']),
+  page('I805', 'a look-up sheet is no list', 'Importing it as the list would withdraw every part it does not name.', ['railfit import lookups.csv', 'railfit import lookups.csv --patch']),
+  page('I806', 'no list to add to', 'A look-up sheet needs the list it was made for.', ['railfit import lookups.csv --patch on an empty catalog', 'railfit import approved.csv']),
 ];
 
 /** Every code a message can carry, in order. A test holds this list against the source. */

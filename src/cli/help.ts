@@ -5,6 +5,8 @@ import { formulaAscii } from './formula-ascii.js';
 import { codeBlocks, TOPICS, type Block } from './help-topics.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { styleFor, type CommonOptions, type Outcome, type Session } from './session.js';
+import { topologyBlocks } from './topology-page.js';
+import { TOPOLOGY_WORDS } from './topology-words.js';
 
 /** What help is asked about, and the short help it falls back on. */
 export interface HelpQuestion {
@@ -13,7 +15,7 @@ export interface HelpQuestion {
   commandHelp(name: string): string | null;
 }
 
-const COMMANDS = ['shortlist', 'explain', 'demands', 'draft', 'parts', 'part', 'import', 'check', 'stages', 'help'];
+const COMMANDS = ['shortlist', 'explain', 'predict', 'demands', 'sweep', 'draft', 'parts', 'part', 'import', 'check', 'stages', 'report', 'verify', 'help'];
 
 /** `railfit help TOPIC`: long help, also for every message code. */
 export function runHelp(session: Session, question: HelpQuestion, options: CommonOptions): Outcome {
@@ -25,13 +27,13 @@ export function runHelp(session: Session, question: HelpQuestion, options: Commo
 
 function textFor(question: HelpQuestion, style: HelpStyle): string {
   const { topic } = question;
-  if (topic === undefined) return `${question.overview()}\nTopics: ${Object.keys(TOPICS).join(', ')}, a command, or a message code such as Q002.\n`;
+  if (topic === undefined) return `${question.overview()}\nTopics: ${Object.keys(TOPICS).join(', ')}, a topology, a command, or a message code such as Q002.\n`;
   const command = question.commandHelp(topic);
   if (command !== null) return command;
-  const blocks = TOPICS[topic]?.() ?? codeBlocks(topic);
+  const blocks = TOPICS[topic]?.() ?? topologyBlocks(topic) ?? codeBlocks(topic);
   if (blocks !== null) return `${blocks.map((block) => render(block, style)).join('\n\n')}\n`;
-  const near = suggest(topic, [...Object.keys(TOPICS), ...COMMANDS]);
-  const fix = near.length === 0 ? `one of ${Object.keys(TOPICS).join(', ')}, a command, or a message code` : `did you mean ${near.join(', ')}?`;
+  const near = suggest(topic, [...Object.keys(TOPICS), ...Object.keys(TOPOLOGY_WORDS), ...COMMANDS]);
+  const fix = near.length === 0 ? `one of ${Object.keys(TOPICS).join(', ')}, a topology, a command, or a message code` : `did you mean ${near.join(', ')}?`;
   throw new RequestError([commandProblem('C109', `no help on ${topic}`, { fix })], EXIT.request);
 }
 

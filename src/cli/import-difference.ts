@@ -4,7 +4,7 @@ import { canonicalHeader } from '../intake/canonical-header.js';
 import { columnKey } from '../intake/columns.js';
 import { STATEMENTS } from '../intake/header-words.js';
 import { sourceColumn } from '../intake/list-sources.js';
-import type { ListColumn, ReadList } from '../intake/list.js';
+import type { ListColumn, PatchedCell, ReadList } from '../intake/list.js';
 import { fieldChanges } from '../intake/part-fields.js';
 
 /** What a list changes, figure by figure with the cell of the new list, and the columns that only one of the two has. */
@@ -24,10 +24,21 @@ interface ChangedField {
 }
 
 function placeOf(list: ReadList, { pair, field, index }: ChangedField): Pick<PartChange, 'cell' | 'at'> {
+  const sheet = sheetCell(list, { pair, field, index });
+  if (sheet !== undefined) return { cell: `${sheet.columnLetter}${sheet.row}`, at: `${sheet.file}#cell=${sheet.row},${sheet.column}` };
   const row = index === undefined ? undefined : list.records[index]?.row;
   const column = list.columns.find((one) => fieldOf(one) === field) ?? figureColumn(list, { pair, field, index });
   if (column === null || row === undefined) return { cell: null, at: null };
   return { cell: `${column.letter}${row}`, at: `${list.file}#cell=${row},${column.number}` };
+}
+
+/** The cell of a look-up sheet the new value stands in. */
+function sheetCell(list: ReadList, { pair, field, index }: ChangedField): PatchedCell | undefined {
+  const cells = index === undefined ? undefined : list.patched?.get(index);
+  if (cells === undefined) return undefined;
+  const figure = pair.after.figures.find(({ parameter, kind, condition }) => canonicalHeader(parameter, kind, condition) === field);
+  const statement = (Object.keys(STATEMENTS) as (keyof typeof STATEMENTS)[]).find((one) => STATEMENTS[one] === field);
+  return cells[figure === undefined ? (statement ?? field) : figureSlot(figure)];
 }
 
 /** The column of a figure that is named by its canonical header; of one that is gone, the column it would stand in. */

@@ -13,6 +13,7 @@ import { commandProblem, RequestError } from './request-error.js';
 /** Options of `import` that say how a list is to be read, as typed. */
 export interface ReadingOptions extends MappingOptions {
   readonly encoding?: string;
+  readonly sheet?: string;
   readonly delimiter?: string;
   readonly decimal?: 'comma' | 'point';
   readonly large?: boolean;
@@ -27,7 +28,7 @@ export interface ReadingOptions extends MappingOptions {
   readonly showMapping?: boolean;
 }
 
-type Answers = Pick<ListOptions, 'encoding' | 'delimiter' | 'decimal' | 'large' | 'layout' | 'map' | 'words' | 'missing' | 'declare' | 'classWithin'>;
+type Answers = Pick<ListOptions, 'encoding' | 'sheet' | 'delimiter' | 'decimal' | 'large' | 'layout' | 'map' | 'words' | 'missing' | 'declare' | 'classWithin'>;
 
 /** The answers the command line gives; every option that cannot be read is told at once. */
 export function answersOf(options: ReadingOptions): Answers {
@@ -37,6 +38,7 @@ export function answersOf(options: ReadingOptions): Answers {
   if (declarations?.ok === false) refuse(declarations.reason, '--declare', declarations.fix);
   const answers: Answers = {
     ...given('encoding', encodingOf(options.encoding, refuse)),
+    ...given('sheet', options.sheet),
     ...given('delimiter', delimiterOf(options.delimiter, refuse)),
     ...given('decimal', options.decimal),
     ...given('large', options.large),

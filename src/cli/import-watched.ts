@@ -10,17 +10,19 @@ export interface WatchedImport {
   readonly session: Session;
   readonly accept: ReadonlySet<GuardName>;
   readonly dryRun: boolean;
+  /** The import a patched list was made from. */
+  readonly basedOn?: number;
 }
 
 /** The import itself, with a bar on the terminal and an open ear for Ctrl-C; and how the saved stages are answered before and after. */
-export async function importWatched(catalog: Catalog, list: ReadList, { session, accept, dryRun }: WatchedImport): Promise<{ result: ImportResult; stages?: readonly StageChange[] }> {
+export async function importWatched(catalog: Catalog, list: ReadList, { session, accept, dryRun, basedOn }: WatchedImport): Promise<{ result: ImportResult; stages?: readonly StageChange[] }> {
   const bar = progressBar(session, (text) => void process.stderr.write(text));
   const progress = { comparing: bar.step('comparing'), writing: bar.step('writing') };
   try {
     return await interruptible(() =>
       watchingStages(
         catalog,
-        () => catalog.importList(list, { dryRun, accept, progress }),
+        () => catalog.importList(list, { dryRun, accept, progress, ...(basedOn === undefined ? {} : { basedOn }) }),
         // What is not written, or not yet, is judged as if it were.
         ({ outcome }) => (outcome === 'no-change' ? null : outcome === 'imported' ? catalog.source() : sourceWith(list, catalog)),
       ),

@@ -10,9 +10,10 @@ import { EXIT } from './exit-code.js';
 import { differenceOf } from './import-difference.js';
 import { guardProblems } from './import-guards.js';
 import type { ReadingOptions } from './import-options.js';
+import { importPatch, sheetProblem } from './import-patch.js';
 import { importWatched } from './import-watched.js';
 import { watchingStages } from './kept-stages.js';
-import { keepMapping, mappingText, readApproved, tellReading } from './read-approved.js';
+import { keepMapping, mappingText, readApproved, tellReading, type ApprovedFile } from './read-approved.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { styleFor, type Outcome, type Session } from './session.js';
 import { unreadable } from './stage-input.js';
@@ -21,6 +22,8 @@ import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 export interface ImportCommandOptions extends ReadingOptions {
   readonly dryRun?: boolean;
   readonly undo?: boolean;
+  /** The file is a look-up sheet: its filled cells are added to the list in force. */
+  readonly patch?: boolean;
   /** Guards that are accepted by name. */
   readonly accept?: readonly GuardName[];
   /** File that gets one line per problem. */
@@ -32,17 +35,32 @@ export async function runImport(session: Session, file: string | undefined, opti
   if (options.undo === true) return withCatalog(session, options, (catalog) => said(undone(catalog), session, options));
   if (file === undefined) throw new RequestError([commandProblem('C102', 'import: no FILE', { fix: 'railfit import approved.csv' })], EXIT.request);
   const bytes = await bytesOf(file);
+  if (options.patch === true) return patched({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, session, options);
   return withCatalog(session, options, async (catalog) => {
     const list = await readApproved({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, catalog, { session, options });
     if (options.showMapping === true && list.ok) return { text: mappingText(list) ?? '', exit: EXIT.yes };
     tellReading(list, session, options);
     // Before the import: when the file cannot be written, nothing has been done.
     if (options.errors !== undefined) writeProblems(options.errors, list.ok ? list.warnings : list.problems);
-    const report = list.ok ? await imported(catalog, list, { session, options }) : refused(list);
+    const sheet = list.ok ? sheetProblem(list, file) : null;
+    const report = !list.ok ? refused(list) : sheet === null ? await imported(catalog, list, { session, options }) : notAList(list, sheet);
     const isIn = list.ok && (report.outcome === 'imported' || report.outcome === 'no-change');
     const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
     return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
   });
+}
+
+/** The filled cells of a look-up sheet. */
+async function patched(sheet: ApprovedFile, session: Session, options: ImportCommandOptions): Promise<Outcome> {
+  return withCatalog(session, options, async (catalog) => {
+    const report = await importPatch(sheet, catalog, { session, dryRun: options.dryRun === true, accept: new Set(options.accept ?? []) });
+    if (options.errors !== undefined) writeProblems(options.errors, report.problems);
+    return said(report, session, options);
+  });
+}
+
+function notAList({ file, parts: { length } }: ReadList, problem: Problem): ImportReport {
+  return { outcome: 'refused', file, sha256: null, counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: 0 }, problems: [problem] };
 }
 
 async function bytesOf(file: string): Promise<Uint8Array> {

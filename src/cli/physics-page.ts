@@ -66,7 +66,14 @@ const STABILITY: readonly Block[] = [
   text('M8  Heat and battery'),
   text('P = highest supply · quiescent current of all sections + the worst the output can dissipate: a DC-coupled signal may rest at the worst point of its swing, an AC-coupled sine is averaged (largest at 2/π of the swing, not at full swing), plus f·CL·Vpp·VS. TJ = TA + θJA·P. Battery life = usable capacity over the average current. Sources: Gray et al.; Sedra & Smith, Microelectronic Circuits, class B (from memory); JEDEC JESD51 for θJA; own algebra.'),
   text('M9  Input stages'),
-  text('Minimum stable gain is held against the noise gain at high frequency: 1 + Cin/Cf with a feedback capacitor, the resistive one without. Where two input pairs hand over, the offset steps; the step is bounded by common-mode range over CMRR and its distortion follows from how long the signal stands on each side. Phase reversal and clamps between the inputs are told as cautions.'),
+  text('Minimum stable gain is held against the noise gain at high frequency: 1 + Cin/Cf with a feedback capacitor, the resistive one without. Where two input pairs hand over, the offset steps; the step dV is bounded by the supply over CMRR. A sine Vp about Vdc that crosses it at Vx twice a period adds a rectangle of duty D = acos((Vx-Vdc)/Vp)/π: harmonics 2·dV·|sin(nπD)|/(nπ), distortion √{dV²·D(1-D) - (2·dV·sin(πD)/π)²/2}/(Vp/√2).'),
+  pairs(
+    ['phase reversal', 'possible where an input can leave its range: overdrive above 0 V, sequencing signal-first, or neither said. Not where the pins rest at the reference, where overdrive: 0 V and sequencing: supply-first are both written, or where the inputs work that far beyond the rails'],
+    ['input clamp', 'diodes between the inputs begin to conduct at 0.5 V and conduct from 0.7 V on (common practice). Voltage between the inputs: ΔVo/NG at a step; up to the whole swing over NG while the part slews; the distance of the thresholds in an oscillator; with the input beyond a rail and the output at its end what the feedback no longer takes up'],
+    ['overdrive', 'the part endures the larger of its rating beyond a rail and the rated input current times the resistance in series'],
+    ['avoid', 'makes of a hazard a check: what is not stated is then unknown, and undecided. Without it hazards are cautions'],
+  ),
+  text('Supply ripple at the output (M5): amplitude over PSRR/√(1 + (f/fc)²), times the noise gain |1/(1/A + β)| at its frequency. A corner fc that is not stated is estimated at GBW/PSRR, and at best taken as none. Start-up adds the recovery from overload where the signal is there first. Sources: own algebra; Franco ch. 5 (from memory); common practice.'),
   text('M10  Order of what fits'),
   text('Desirability of Derringer & Suich (J. Quality Technology 12(4), 1980): all margins together, log price and log current, on fixed scales, so that adding or removing a part never reorders the rest and excess never wins.'),
 ];

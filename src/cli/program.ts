@@ -1,12 +1,16 @@
 import { Command, CommanderError, InvalidArgumentError, Option } from 'commander';
-import type { JudgingOptions } from './judging-input.js';
 import type { CheckOptions } from './check.js';
 import type { DraftOptions } from './draft.js';
+import type { ExplainOptions } from './explain.js';
 import type { ImportCommandOptions } from './import.js';
 import type { PartsOptions } from './parts.js';
 import type { CommonOptions, Outcome, Session } from './session.js';
+import type { ShortlistOptions } from './shortlist.js';
+import type { ReportOptions } from './report.js';
 import type { StageOptions } from './stage-input.js';
+import type { PredictOptions } from './predict.js';
 import type { StagesOptions } from './stages.js';
+import type { SweepOptions } from './sweep.js';
 import { GUARD_WORDS, guardWord } from './guard-words.js';
 import { onlyOperands, operandsOf } from './operands.js';
 import { withReadingOptions } from './reading-options.js';
@@ -28,23 +32,48 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
 
   judging(add(program, 'shortlist [STAGE]', 'derive, judge the whole catalog, rank, explain'))
     .option('--csv', 'the list as a table')
+    .option('--lookups', 'what to look up so that undecided parts are decided, most worth first')
+    .option('-o, --output <FILE>', 'with --lookups: a new sheet to fill in, taken back by import --patch')
+    .option('--force', 'with -o: write over an existing file')
     .action(async (...received) => {
-      const { command, options } = lastOf<JudgingOptions>(received);
+      const { command, options } = lastOf<ShortlistOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver(await (await import('./shortlist.js')).runShortlist(session, operands[0], { ...options, already: problems }));
     });
   judging(add(program, 'explain [PART] [STAGE]', 'every check of one part on this stage'))
+    .option('--formulas', 'the relation, numbers and source of each check')
+    .option('--against <ID>', 'this part side by side with that one')
     .action(async (...received) => {
-      const { command, options } = lastOf<JudgingOptions>(received);
+      const { command, options } = lastOf<ExplainOptions>(received);
       const { operands, problems } = operandsOf(command, 2);
       const wanted = { part: operands[0], stage: operands[1] };
       deliver(await (await import('./explain.js')).runExplain(session, wanted, { ...options, already: problems }));
+    });
+  judged(staging(add(program, 'predict [PART] [STAGE]', "the stage simulated with a part's own figures; judges nothing")))
+    .option('--compare <PART>', 'a second part side by side')
+    .option('--csv', 'the waveform as a table')
+    .action(async (...received) => {
+      const { command, options } = lastOf<PredictOptions>(received);
+      const { operands, problems } = operandsOf(command, 2);
+      const wanted = { part: operands[0], stage: operands[1] };
+      deliver(await (await import('./predict.js')).runPredict(session, wanted, { ...options, already: problems }));
     });
   staging(add(program, 'demands [STAGE]', 'what the stage asks of any amplifier; looks at no part'))
     .action(async (...received) => {
       const { command, options } = lastOf<CommonOptions & StageOptions>(received);
       const { operands, problems } = operandsOf(command, 1);
       deliver(await (await import('./demands.js')).runDemands(session, operands[0], { ...options, already: problems }));
+    });
+  ordered(judged(staging(add(program, 'sweep [STAGE]', 'what a limit costs: how many parts fit, and which comes first, over the values of one field'))))
+    .option('--over <PATH=A..B>', 'the field and its values: supply=2.7V..5.5V, gain, frequency, load, temperature, limits.dcError, ...', collect)
+    .option('--steps <N>', 'how many values, both ends included (21)', steps)
+    .option('--log', 'values in even ratios (the default over a decade or more)')
+    .option('--linear', 'values in even steps')
+    .option('--csv', 'the values and turns as a table')
+    .action(async (...received) => {
+      const { command, options } = lastOf<SweepOptions>(received);
+      const { operands, problems } = operandsOf(command, 1);
+      deliver(await (await import('./sweep.js')).runSweep(session, operands[0], { ...options, already: problems }));
     });
   add(program, 'draft [TOPOLOGY]', 'a commented stage file with every field, or guided entry with --ask')
     .option('--ask', 'ask on the terminal: each answer checked, demands shown; ends with the file and its shortlist')
@@ -73,6 +102,7 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     });
   withReadingOptions(add(program, 'import [FILE]', "read the team's approved list, all or nothing"))
     .option('-n, --dry-run', 'the same report, nothing is written')
+    .option('--patch', 'a filled look-up sheet: only its filled cells change the list in force')
     .option('--undo', 'return to the list before the last import')
     .option('--accept <WHAT>', `what a guard held back: ${GUARD_WORDS.join(', ')} (again for another)`, guardWord)
     .option('--errors <FILE>', 'one line per faulty cell, for the owner of the list')
@@ -82,6 +112,7 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     });
   judged(add(program, 'check [STAGES...]', 'do the parts chosen for these stages still fit; without a stage, for every saved one'))
     .option('--part <ID>', 'this part instead of the chosen ones')
+    .option('--junit <FILE>', 'the same as a JUnit file for a build server; - for stdout')
     .action(async (...received) => {
       const { command, options } = lastOf<CheckOptions>(received);
       const { operands, problems } = operandsOf(command, Number.POSITIVE_INFINITY);
@@ -93,6 +124,24 @@ export function makeProgram(session: Session, deliver: Deliver): Command {
     .action(async (...received) => {
       const { command, options } = lastOf<StagesOptions>(received);
       deliver(await (await import('./stages.js')).runStages(session, onlyOperands(command, Number.POSITIVE_INFINITY), options));
+    });
+  judging(add(program, 'report [STAGES...]', 'the design review of one stage or several: a page to look at, print and send'))
+    .option('-o, --output <FILE>', 'a new file instead of stdout')
+    .option('--force', 'write over an existing file')
+    .addOption(new Option('--format <FORMAT>', 'html: one page; md: for a pull request; csv: every verdict').choices(['html', 'md', 'csv']))
+    .option('--part <ID>', 'the chosen part, instead of the one kept with the stage or the first in order')
+    .addOption(new Option('--symbols <RULES>', 'symbols of the schematic: IEC 60617 or IEEE 315').choices(['iec', 'ieee']))
+    .option('--time <TIME>', 'when it was made, ISO 8601 with zone (else SOURCE_DATE_EPOCH, else the clock)')
+    .action(async (...received) => {
+      const { command, options } = lastOf<ReportOptions>(received);
+      const { operands, problems } = operandsOf(command, Number.POSITIVE_INFINITY);
+      deliver(await (await import('./report.js')).runReport(session, operands, { ...options, already: problems }));
+    });
+  add(program, 'verify [FILE]', 'judge a report again from what it carries, and tell what differs')
+    .option('--all', 'every difference')
+    .action(async (...received) => {
+      const { command, options } = lastOf<CommonOptions>(received);
+      deliver(await (await import('./verify.js')).runVerify(session, onlyOperands(command, 1)[0], options));
     });
   add(program, 'help [TOPIC]', 'long help: commands, stage, figures, checks, exit-codes, quantities, any message code')
     .action(async (...received) => {
@@ -168,8 +217,17 @@ function judging(command: Command): Command {
   const staged = staging(command)
     .option('--top <N>', 'how many parts to show (20)', count)
     .option('--all', 'rejected parts too, and passing checks in full');
-  return judged(staged)
-    .addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
+  return ordered(judged(staged));
+}
+
+function ordered(command: Command): Command {
+  return command.addOption(new Option('--order <BY>', 'order of what fits').choices(['merit', 'price', 'current', 'margin']).default('merit'));
+}
+
+/** A thousand values are a long table already. */
+function steps(text: string): number {
+  if (!/^[1-9]\d{0,3}$/u.test(text) || Number(text) < 2 || Number(text) > 1000) throw new InvalidArgumentError('a whole number of values from 2 to 1000 is expected, such as 21');
+  return Number(text);
 }
 
 function count(text: string): number {

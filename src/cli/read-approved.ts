@@ -5,6 +5,7 @@ import { mappingDocument } from '../intake/csvw.js';
 import type { ListOptions, ListResult } from '../intake/list.js';
 import type { ListMapping } from '../intake/mapping.js';
 import { readList } from '../intake/read-list.js';
+import { isWorkbook, readWorkbook } from '../intake/workbook.js';
 import { renderImportNotes } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { EXIT } from './exit-code.js';
@@ -32,6 +33,7 @@ export async function readApproved({ bytes, name }: ApprovedFile, catalog: Catal
     previous: (id) => catalog.approvedPart(id),
     generic: catalog.genericParts(),
     ...answersOf(options),
+    ...(isWorkbook(bytes) ? { workbook: await readWorkbook(bytes, { large: options.large === true }) } : {}),
   };
   const read = await watched(bytes, asked, session);
   if (read.ok || read.questions.length === 0 || !mayAsk(session, options)) return read;

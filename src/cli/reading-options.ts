@@ -10,6 +10,7 @@ export function withReadingOptions(command: Command): Command {
     .option('--show-mapping', 'how the columns are read, as a CSVW document; nothing is imported')
     .option('--header-rows <ROWS>', 'the row, or the two rows, with the headers: 4-5')
     .option('--until-blank', 'the table ends at the first blank row')
+    .option('--sheet <NAME>', 'the sheet of a workbook that holds the list, by name or number')
     .option('--delimiter <CHARACTER>', 'what separates the cells: , ; tab |')
     .addOption(new Option('--decimal <MARK>', 'the decimal mark of the file').choices(['comma', 'point']))
     .option('--encoding <NAME>', 'utf-8, utf-16le, utf-16be, windows-1252')

@@ -20,6 +20,7 @@ export interface CommonOptions {
   readonly top?: number;
   readonly all?: boolean;
   readonly sources?: boolean;
+  readonly formulas?: boolean;
 }
 
 /** What a command hands back: a document for stdout and an exit code. */
@@ -42,6 +43,7 @@ export function styleFor(session: Session, options: CommonOptions, stream: 'stdo
     top: options.top ?? DEFAULT_TOP,
     all: options.all === true,
     sources: options.sources === true,
+    formulas: options.formulas === true,
     gluedUnits: facts.isTTY,
   };
 }

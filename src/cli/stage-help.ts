@@ -25,6 +25,17 @@ export function fieldGroups(): readonly Block[] {
   ];
 }
 
+/** The fields that only this topology has, perhaps with one other; null when there are none. */
+export function ownFields(topology: Topology): Block | null {
+  const all = renderStageHelp();
+  const maps = new Map(all.map((row) => [row.path, row.topologies]));
+  const own = all.filter(({ path }) => {
+    const owners = maps.get(path.split('.')[0] ?? '') ?? [];
+    return owners.length <= FEW && owners.includes(topology);
+  });
+  return own.length === 0 ? null : pairsOf(own);
+}
+
 function pairsOf(rows: readonly Help[]): Block {
   return { pairs: rows.map(({ path, accepted, example, meaning }) => [path, `${meaning}: ${accepted}; for example ${example}`] as const) };
 }

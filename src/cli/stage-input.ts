@@ -4,6 +4,7 @@ import type { Problem } from '../quantities/problem.js';
 import { EXIT } from './exit-code.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { decodeStage } from './decode-stage.js';
+import type { GivenStage } from './rerun.js';
 import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
 /** The options that override the stage file. */
@@ -19,6 +20,21 @@ export interface StageOptions {
   readonly set?: readonly string[];
   /** What was wrong with the command line before the stage was looked at; reported together with it. */
   readonly already?: readonly Problem[];
+}
+
+/** A stage with the text it was read from. */
+export interface StageRead extends StageText {
+  readonly spec: StageSpec;
+  readonly stage: Stage;
+  /** What it takes to read it again under further options. */
+  readonly given: GivenStage;
+}
+
+/** What a stage is read from: a file's text (null: options say it all), its name, and the options over it. */
+export interface StageText {
+  readonly text: string | null;
+  readonly file: string | null;
+  readonly overrides: readonly Override[];
 }
 
 const SHORT: readonly (readonly [Exclude<keyof StageOptions, 'set' | 'already'>, string])[] = [
@@ -49,18 +65,27 @@ export function overridesOf(options: StageOptions): { overrides: Override[]; pro
 }
 
 /** Reads the stage of a command: a file, `-` for standard input, or options alone. Everything wrong is reported at once. */
-export async function readStageOf(operand: string | undefined, options: StageOptions): Promise<{ spec: StageSpec; stage: Stage; file: string | null }> {
-  const { overrides, problems } = overridesOf(options);
-  const before = [...(options.already ?? []), ...problems];
-  const text = operand === undefined ? null : await textOf(operand);
-  const file = operand === undefined ? null : operand === STDIN ? STDIN_NAME : operand;
+export async function readStageOf(operand: string | undefined, options: StageOptions): Promise<StageRead> {
+  return stageFrom(await stageText(operand, options), options);
+}
+
+/** The text of a command's stage, its name and the options over it. */
+export async function stageText(operand: string | undefined, options: StageOptions): Promise<StageText> {
+  const { overrides } = overridesOf(options);
+  if (operand === undefined) return { text: null, file: null, overrides };
+  return { text: await textOf(operand), file: operand === STDIN ? STDIN_NAME : operand, overrides };
+}
+
+/** The stage that text and options describe, or a refusal with everything that is wrong. */
+export function stageFrom({ text, file, overrides }: StageText, options: StageOptions): StageRead {
+  const before = [...(options.already ?? []), ...overridesOf(options).problems];
   if (text === null && overrides.length === 0) throw refused([...before, noStage()]);
   const read = readStage(text, { overrides, ...(file === null ? {} : { file }) });
   if (!read.ok) throw refused([...before, ...read.problems]);
   const built = buildStage(read.spec);
   if (!built.ok) throw refused([...before, ...built.problems.map((problem) => inFile(problem, file))]);
   if (before.length > 0) throw refused(before);
-  return { spec: read.spec, stage: built.stage, file };
+  return { spec: read.spec, stage: built.stage, file, text, overrides, given: { text, overrides } };
 }
 
 function refused(problems: readonly Problem[]): RequestError {

@@ -1,3 +1,4 @@
+import type { ClampDemand, CrossoverDemand, OverdriveDemand, PhaseReversalDemand, StartUpDemand, SupplyRippleDemand } from './hazard-demand.js';
 import type { PhaseMarginDemand, StableGainDemand } from './loop-demand.js';
 import type { NoiseDemand } from './noise-demand.js';
 import type { Operating } from './operating.js';
@@ -9,7 +10,7 @@ export type Sense = 'at-least' | 'at-most';
 /** All check ids in the order of the contract. Those not built yet still have a demand, so that no limit passes silently. */
 export const CHECK_IDS = [
   'supply-low', 'supply-high', 'supply-peak', 'input-low', 'input-high', 'output-low', 'output-high', 'output-current',
-  'slew-rate', 'gain-bandwidth', 'stable-gain', 'phase-margin', 'noise', 'distortion', 'dc-error', 'settling', 'frequency-error', 'supply-current',
+  'slew-rate', 'gain-bandwidth', 'stable-gain', 'phase-margin', 'noise', 'distortion', 'dc-error', 'supply-ripple', 'settling', 'start-up', 'frequency-error', 'supply-current',
   'temperature-low', 'temperature-high', 'junction-temperature', 'channels', 'package', 'qualification', 'status', 'lifecycle', 'price',
   'crossover', 'phase-reversal', 'clamp', 'overdrive',
 ] as const;
@@ -81,6 +82,12 @@ export interface InputHighDemand extends NumberDemand {
   readonly still: boolean;
 }
 
+/** Distances below V+, V. */
+export interface InputSwingRange {
+  readonly min: number;
+  readonly max: number;
+}
+
 /** A peak current towards one rail: `high` is sourced, `low` is sunk. */
 export interface DirectedPeak {
   readonly side: 'low' | 'high';
@@ -136,7 +143,11 @@ export interface Demands {
   readonly noise: NoiseDemand | null;
   readonly distortion: DistortionDemand | null;
   readonly 'dc-error': DcErrorDemand | null;
+  /** Null without ripple; asked with a limit. */
+  readonly 'supply-ripple': SupplyRippleDemand | null;
   readonly settling: SettlingDemand | null;
+  /** Null for a stage that is always on; asked with a limit. */
+  readonly 'start-up': StartUpDemand | null;
   readonly 'frequency-error': FrequencyErrorDemand | null;
   readonly 'supply-current': SupplyCurrentDemand | null;
   readonly 'temperature-low': NumberDemand;
@@ -149,23 +160,48 @@ export interface Demands {
   readonly status: WordDemand | null;
   readonly lifecycle: WordDemand | null;
   readonly price: PriceDemand | null;
+  /** Hazards: asked when the stage avoids them, cautions otherwise. */
+  readonly crossover: CrossoverDemand;
+  readonly 'phase-reversal': PhaseReversalDemand;
+  readonly clamp: ClampDemand;
+  readonly overdrive: OverdriveDemand;
   /** No demand but information: null without a battery. */
   readonly battery: BatteryBudget | null;
   /** Limits written whose check is not built yet. */
   readonly unbuilt: readonly UnbuiltDemand[];
 }
 
-export type AnyDemand = NumberDemand | WordDemand | UnbuiltDemand;
+/** A hazard to avoid whose size the stage does not say. */
+export interface UnsaidDemand extends DemandBase {
+  readonly required: null;
+  readonly unit: string;
+  readonly sense: Sense;
+}
+
+export type AnyDemand = NumberDemand | WordDemand | UnbuiltDemand | UnsaidDemand;
 
 /** Every demand the stage makes, in the order of the checks. */
 export function listDemands(demands: Demands): AnyDemand[] {
-  const { operating: _operating, battery: _battery, 'junction-temperature': junction, unbuilt, ...built } = demands;
-  const all: AnyDemand[] = [...Object.values(built).filter((demand) => demand !== null), ...written(junction), ...unbuilt];
+  const {
+    operating: _operating, battery: _battery, 'junction-temperature': junction, 'supply-ripple': ripple, 'start-up': startUp,
+    crossover, 'phase-reversal': reversal, clamp, overdrive, unbuilt, ...built
+  } = demands;
+  const hazards = [crossover, reversal, clamp].filter(({ avoided }) => avoided);
+  const all: AnyDemand[] = [
+    ...Object.values(built).filter((demand) => demand !== null), ...written(junction), ...written(ripple), ...written(startUp), ...hazards, ...(overdrive.avoided ? [whole(overdrive)] : []), ...unbuilt,
+  ];
   return all.sort((a, b) => CHECK_IDS.indexOf(a.check) - CHECK_IDS.indexOf(b.check));
 }
 
+type Limited = JunctionDemand | SupplyRippleDemand | StartUpDemand;
+
 /** Only a limit that is written is asked of every part. */
-function written(junction: JunctionDemand): NumberDemand[] {
-  const { required } = junction;
-  return required === null ? [] : [{ ...junction, required }];
+function written(demand: Limited | null): NumberDemand[] {
+  const required = demand?.required ?? null;
+  return demand === null || required === null ? [] : [{ ...demand, required }];
+}
+
+function whole(demand: OverdriveDemand): NumberDemand | UnsaidDemand {
+  const { required } = demand;
+  return required === null ? { ...demand, required } : { ...demand, required };
 }

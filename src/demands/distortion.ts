@@ -26,7 +26,7 @@ export function distortion(stage: Stage): DistortionDemand | null {
     source: SOURCE,
     slewing,
     corners: groups.map((group) => clippingCorner(stage, group)),
-    crossovers: groups.flatMap((group) => inputSwing(stage, group)),
+    crossovers: inputSwings(stage),
     closest: Math.min(...stage.vertices.map(({ supply, commonMode }) => supply - commonMode)),
     peak: stage.outputPeak,
     noiseGain: stage.dcNoiseGain.max,
@@ -61,7 +61,11 @@ function clippingCorner(stage: Stage, group: CornerGroup): ClippingCorner {
 /** Below this the inputs stand still, V. */
 const STILL = 1e-9;
 
-/** Only inputs that move with the signal can cross from one pair to the other within it. */
+/** How the inputs swing at every corner; only inputs that move with the signal can cross from one pair to the other within it. */
+export function inputSwings(stage: Stage): InputSwing[] {
+  return cornerGroups(stage).flatMap((group) => inputSwing(stage, group));
+}
+
 function inputSwing(stage: Stage, group: CornerGroup): InputSwing[] {
   const [near, far] = endsOf(group.vertices, ({ supply, commonMode }) => supply - commonMode).map(({ supply, commonMode }) => supply - commonMode) as [number, number];
   const outputPeak = peakOf(group);

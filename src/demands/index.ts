@@ -1,4 +1,5 @@
-export { deriveDemands } from './derive.js';
+export { demandsWhenAsked, deriveDemands } from './derive.js';
+export { circuitMark, markOf } from './circuit-mark.js';
 export { CHECK_IDS, listDemands } from './demand.js';
 export type {
   AnyDemand, CheckId, Corner, DcErrorDemand, Demands, DirectedPeak, HeadroomDemand, HeadroomVertex, NumberDemand, OutputCurrentDemand, PriceDemand, Sense,
@@ -7,6 +8,9 @@ export type {
 export { withFeedbackCapacitor } from './feedback-capacitor.js';
 export { openNoiseGain } from './stable-gain.js';
 export type { FeedbackPlace, OpenTransimpedance, PhaseMarginDemand, StableGainDemand } from './loop-demand.js';
+export type {
+  ClampDemand, CrossoverDemand, InputReach, OverdriveDemand, PhaseReversalDemand, StartUpDemand, SupplyRippleDemand,
+} from './hazard-demand.js';
 export type { NoiseDemand, PartCapacitances } from './noise-demand.js';
 export type { Operating } from './operating.js';
 export type { BatteryBudget, FrequencyErrorDemand, JunctionDemand, OscillatorEnd } from './power-demand.js';

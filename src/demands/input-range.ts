@@ -8,6 +8,9 @@ const SOURCE = 'M1: common mode at the pins over all corners (Franco, Design wit
 /** Stages whose pins stand at the reference, whatever the signal. */
 const STILL: ReadonlySet<Stage['topology']> = new Set<Stage['topology']>(['inverting', 'summing', 'transimpedance', 'multiple-feedback-low-pass', 'integrator']);
 
+/** The inputs rest at the reference. */
+export const pinsAreStill = ({ topology }: Pick<Stage, 'topology'>): boolean => STILL.has(topology);
+
 /** A demand with the corner it stands at. */
 export interface CornerDemand extends NumberDemand {
   readonly corner: Corner;
@@ -26,7 +29,7 @@ export function inputHigh(stage: Stage): InputHighDemand {
   const farthest = Math.max(...stage.vertices.map(room));
   const vertex = least(stage.vertices, room);
   const because = `common mode ${formatQuantity(vertex.commonMode, 'V')} on a supply of ${formatQuantity(vertex.supply, 'V')}`;
-  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex), farthest, still: STILL.has(stage.topology) };
+  return { check: 'input-high', required: room(vertex), unit: 'V', sense: 'at-most', because, source: SOURCE, corner: cornerOf(vertex), farthest, still: pinsAreStill(stage) };
 }
 
 function least(vertices: readonly Vertex[], measure: (vertex: Vertex) => number): Vertex {

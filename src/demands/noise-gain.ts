@@ -23,6 +23,19 @@ export function noiseGainAt(stage: Stage, frequency: number): NoiseGainAt {
   return hasCapacitor(network) ? (loop) => closed(factor, loop) : () => noiseGain;
 }
 
+/**
+ * The same with the part's own gain beside β whatever the loop is made of: above its crossover the output no longer follows. An endless
+ * gain bandwidth leaves |1/β|. Source: as closedLoopNoiseGain().
+ */
+export function closedNoiseGainAt(stage: Stage, frequency: number): NoiseGainAt {
+  const { network, response } = stage;
+  if (network === null) return () => stage.noiseGain.nominal;
+  const closed = (factor: Complex, { gainBandwidth }: Loop): number => 1 / magnitude(add({ re: 0, im: frequency / gainBandwidth }, factor));
+  if (response.kind === 'transimpedance') return (loop) => closed(feedbackFactor(withPart(stage, network, loop))(frequency), loop);
+  const factor = feedbackFactor(network)(frequency);
+  return (loop) => closed(factor, loop);
+}
+
 /** What stands at a + input the output does not reach, the bypass of a reference for one, is not in the loop. */
 function hasCapacitor({ plus, minus }: AmplifierNetwork): boolean {
   const inLoop = [plus, minus].filter(({ elements }) => elements.some(({ between }) => between.includes('output')));

@@ -7,7 +7,7 @@ import type { CheckId, UnbuiltDemand } from './demand.js';
  * passed.
  */
 export function unbuilt(stage: Stage): UnbuiltDemand[] {
-  const { limits, avoid } = stage.asked;
+  const { limits } = stage.asked;
   const { distortion, settling, frequencyError, phaseMargin } = limits;
   const noise = limits.outputNoise ?? limits.snr;
   const oscillates = stage.response.kind === 'oscillator';
@@ -19,7 +19,6 @@ export function unbuilt(stage: Stage): UnbuiltDemand[] {
       ? demand('settling', { required: settling.within.value, unit: 's', sense: 'at-most', text: `${settling.within.text} to ${settling.to.text}` })
       : null,
     frequencyError !== undefined && !oscillates ? demand('frequency-error', { required: frequencyError.value, unit: '1', sense: 'at-most', text: frequencyError.text }) : null,
-    ...avoid.map((hazard) => demand(hazard, { required: null, unit: null, sense: null, text: 'avoid' })),
   ];
   return found.filter((one) => one !== null);
 }

@@ -1,1 +1,15 @@
+export { changesFor } from './changes.js';
+export type { Advice, Change, Changes, Changing, Move, Rerun } from './changing.js';
+export type { Blamed, Conflict } from './conflict.js';
+export { whyNothingFits, type CountedChange, type NothingFits } from './nothing-fits.js';
+export { cellsOf } from './cells.js';
+export type { Datasheet, LookupList } from './lookup-list.js';
+export { lookupList } from './lookup-list.js';
+export type { Assumption, Lookup, LookupContext, PartLookups } from './part-lookups.js';
+export { lookupsOf } from './part-lookups.js';
+export type { Sensitivity, SensitivityEnd } from './sensitivity.js';
+export { sensitivitiesOf } from './sensitivity.js';
+export type { Span } from './span.js';
 export { whyAhead, type Difference, type WhyAhead } from './why-ahead.js';
+export { isSameAnswer, sweep, sweptValues, type Swept, type SweptPoint, type SweptState, type SweptTurn } from './sweep.js';
+export { comparedPart, compareParts, type ComparedCheck, type ComparedPart, type Standing } from './compare.js';

@@ -1,4 +1,5 @@
-import { priceInEuro, STEPS, type RankedPart } from '../ranking/index.js';
+import { decisionBetween, priceInEuro, stabilityOf, type Order, type RankedPart, type Stability } from '../ranking/index.js';
+import type { JudgedPart } from '../screening/index.js';
 import type { Verdict } from '../verdicts/verdict.js';
 
 /** Why one part stands before another: what decided, and what speaks for each. Numbers only; words come with the presenter. */
@@ -13,6 +14,8 @@ export interface WhyAhead {
   /** Checks with offered values of both, where they differ by more than a tenth. */
   readonly better: readonly Difference[];
   readonly worse: readonly Difference[];
+  /** How far a price or the weight of a share would have to move for the order to turn. */
+  readonly stability: Stability;
 }
 
 /** One check where two parts offer different values; SI. */
@@ -29,24 +32,29 @@ const NOTABLE = 1.1;
 const TOLD = new Set(['slew-rate', 'gain-bandwidth', 'dc-error', 'output-low', 'output-high', 'output-current', 'noise']);
 
 /** Null when fewer than two fit. */
-export function whyAhead(fit: readonly RankedPart[], order: string): WhyAhead | null {
+export function whyAhead(fit: readonly RankedPart[], order: Order): WhyAhead | null {
   const [first, second] = fit;
   if (first === undefined || second === undefined) return null;
-  const step = STEPS.find(({ compare }) => compare(first, second) !== 0);
-  const differences = first.verdicts.flatMap((verdict) => differenceOf(verdict, second) ?? []);
   return {
     first: first.part.id,
     second: second.part.id,
-    decidedBy: order === 'merit' ? (step?.name ?? 'id') : order,
+    decidedBy: decisionBetween(order, [first, second]).by,
     merits: [first.merit.total, second.merit.total],
     prices: [priceInEuro(first), priceInEuro(second)],
     currents: [first.current, second.current],
-    better: differences.filter(({ ahead }) => ahead).map(({ difference }) => difference),
-    worse: differences.filter(({ ahead }) => !ahead).map(({ difference }) => difference),
+    ...differencesOf(first, second),
+    stability: stabilityOf(order, [first, second]),
   };
 }
 
-function differenceOf(mine: Verdict, second: RankedPart): { difference: Difference; ahead: boolean } | null {
+/** Checks in which the offered values of two parts differ notably, by whom they speak for. */
+export function differencesOf(first: JudgedPart, second: JudgedPart): Pick<WhyAhead, 'better' | 'worse'> {
+  const differences = first.verdicts.flatMap((verdict) => differenceOf(verdict, second) ?? []);
+  const of = (isAhead: boolean): Difference[] => differences.filter(({ ahead }) => ahead === isAhead).map(({ difference }) => difference);
+  return { better: of(true), worse: of(false) };
+}
+
+function differenceOf(mine: Verdict, second: JudgedPart): { difference: Difference; ahead: boolean } | null {
   const theirs = second.verdicts.find((verdict) => verdict.check === mine.check);
   if (!TOLD.has(mine.check) || typeof mine.offered !== 'number' || typeof theirs?.offered !== 'number' || mine.unit === null) return null;
   const [low, high] = [Math.min(mine.offered, theirs.offered), Math.max(mine.offered, theirs.offered)];

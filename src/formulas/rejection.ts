@@ -61,3 +61,19 @@ export function leakThrough(change: number, rejection: number): number {
   requirePositive('leakThrough', { rejection });
   return change / rejection;
 }
+
+/**
+ * Rejection of a supply (or common mode) that moves at a frequency: R/√(1 + (f/fc)²), flat below its corner and −20 dB per decade above.
+ * @param rejection R at DC, V/V, above 0
+ * @param at frequency Hz, at least 0; corner fc Hz, above 0; Infinity: it does not fall
+ * @returns V/V
+ * @example rejectionAbove(10e3, {frequency: 10e3, corner: 100}) is 99.995 (40 dB)
+ * Source: one pole, as the open-loop gain; Franco, Design with Operational Amplifiers and Analog Integrated Circuits (3rd ed. 2002), ch. 5 (from memory).
+ */
+export function rejectionAbove(rejection: number, { frequency, corner }: { readonly frequency: number; readonly corner: number }): number {
+  requirePositive('rejectionAbove', { rejection });
+  requireNotNegative('rejectionAbove', { frequency });
+  if (corner === Infinity) return rejection;
+  requirePositive('rejectionAbove', { corner });
+  return rejection / Math.hypot(1, frequency / corner);
+}

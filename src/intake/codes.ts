@@ -15,6 +15,8 @@ export const INTAKE_CODES: Readonly<Record<string, CodePage>> = {
   I103: page('empty file', 'There is no header.', 'a file of 0 bytes', 'Write a header line and one line for each part.'),
   I104: page('no part', 'Importing a list without parts would withdraw every part.', 'id,package and nothing below', 'Add the parts, or take the last import back with --undo.'),
   I105: page('over a limit of size', 'Limits keep a quote that was left open from swallowing the machine.', 'a cell of 70 000 characters, a file of 70 MB', 'Split the list, close the quote, or lift the limit of size with --large.'),
+  I106: page('a workbook that cannot be read', 'Only .xlsx without a password is read; the older binary format, a damaged archive or another kind of file behind that name is not.', 'a file .xls, or one cut off by a download', 'Save it again as .xlsx, or as "CSV UTF-8".'),
+  I107: page('which sheet', 'A workbook with several sheets does not say which one is the list.', 'sheets Cover, Approved, Obsolete', '--sheet "Approved"; kept for the next list by its headers.'),
   I201: page('the same field twice', 'Two columns would decide one figure, and one would win silently.', 'bias current max (pA), bias current max (nA)', 'Keep one, or name kind and condition of each.'),
   I202: page('the same field in two columns that agree', 'The first is used; the other would win one day.', 'Vos max (mV), Vos max (µV)', 'Drop one column.'),
   I203: page('unknown column', 'It is kept as text and takes part in no check.', 'slew rat min (V/µs)', 'Use the canonical header that is offered, or leave it.'),

@@ -12,7 +12,7 @@ export function figureText(parameter: Parameter, value: number): string {
 
 // Powers of ten between the canonical header units and the SI units the figures are kept in; units not named are SI.
 const EXPONENTS: Readonly<Record<string, number>> = {
-  mV: -3, 'V/µs': 6, MHz: 6, 'µV/K': -6, pA: -12, 'nV/√Hz': -9, 'fA/√Hz': -15, 'µA': -6, mA: -3, pF: -12,
+  mV: -3, 'V/µs': 6, MHz: 6, 'µV/K': -6, pA: -12, 'nV/√Hz': -9, 'fA/√Hz': -15, 'µA': -6, mA: -3, pF: -12, 'µs': -6,
 };
 
 /** Decibels when some decimal of at most 17 digits is exactly this ratio, else the ratio with its own unit. */

@@ -13,6 +13,7 @@ export const STATEMENTS = {
   phaseReversal: 'phase reversal',
   inputClamp: 'input clamp',
   inputType: 'input type',
+  crossoverFree: 'crossover free',
 } as const;
 export type Statement = keyof typeof STATEMENTS;
 

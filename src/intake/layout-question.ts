@@ -3,6 +3,7 @@ import type { Layout } from './layout.js';
 import { laidOut, layoutOptions, layoutWords, namedColumns } from './layout.js';
 import type { ListQuestion, ListRecord } from './list.js';
 import { readAnyHeader } from './recognised.js';
+import { importOperand } from './sheet.js';
 
 /** One message for a first line that is no header: what is proposed, the columns it gives, and the options that say yes. */
 export function layoutProblem(layout: Layout, records: readonly ListRecord[], file: string): Problem {
@@ -15,7 +16,7 @@ export function layoutProblem(layout: Layout, records: readonly ListRecord[], fi
     `; columns ${namedColumns(table?.header.cells ?? [])}`,
     ...doubts,
   ].join('');
-  const fix = `railfit import ${file.includes(' ') ? `"${file}"` : file} ${layoutOptions(layout)}${doubtOptions(layout, records)}`;
+  const fix = `railfit import ${importOperand(file)} ${layoutOptions(layout)}${doubtOptions(layout, records)}`;
   return { code: 'I207', severity: 'error', message, fix, place: { file, line: first?.line ?? 1 } };
 }
 

@@ -8,6 +8,8 @@ import { isMissing } from './text-cell.js';
 export interface Detected {
   readonly encoding: Encoding;
   readonly how: string;
+  /** Name of the sheet, of a workbook. */
+  readonly sheet?: string;
   readonly delimiter: Delimiter;
   readonly header: ListRecord;
   readonly rows: readonly ListRecord[];
@@ -17,13 +19,14 @@ export interface Detected {
 const DELIMITER_NAMES: Readonly<Record<Delimiter, string>> = { ',': '`,`', ';': '`;`', '\t': 'TAB', '|': '`|`' };
 
 /** How the file was taken apart, in one sentence. */
-export function detectionNote({ encoding, how, delimiter, header, rows, decimal }: Detected): string {
+export function detectionNote({ encoding, how, sheet, delimiter, header, rows, decimal }: Detected): string {
   const fields = header.cells.length;
   const all = [header, ...rows];
   const fitting = all.filter(({ cells }) => cells.length === fields).length;
   const grouping = decimal.mark === 'comma' ? ', grouping `.`' : '';
   const proof = decimal.mark === 'comma' && decimal.sample !== null ? ` (${decimal.proofs} cells such as \`${decimal.sample}\` can be nothing else)` : '';
   const apart = decimal.proofs > 0 && decimal.against > 0 && !decimal.given ? '; cells prove both decimal marks, so each is read by itself' : '';
+  if (sheet !== undefined) return `workbook, sheet "${sheet}" (${fields} columns, ${all.length} rows), header row ${header.row}${apart}`;
   return `encoding ${ENCODING_NAMES[encoding]} (${how}), delimiter ${DELIMITER_NAMES[delimiter]} (${fields} fields in ${fitting} of ${all.length} records), decimal mark \`${decimal.mark === 'comma' ? ',' : '.'}\`${proof}${grouping}${apart}, header row ${header.row}`;
 }
 

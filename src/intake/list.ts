@@ -1,4 +1,4 @@
-import type { Part, Status, Tier } from '../parts/part.js';
+import type { Origin, Part, Status, Tier } from '../parts/part.js';
 import type { Problem } from '../quantities/problem.js';
 import type { ColumnReading } from './column-reading.js';
 import type { ClassProposal } from './class-proposal.js';
@@ -7,6 +7,7 @@ import type { Layout } from './layout.js';
 import type { Encoding } from './limits.js';
 import type { ListSources } from './list-sources.js';
 import type { ListMapping } from './mapping.js';
+import type { Workbook } from './workbook.js';
 
 /** One column of a list as it was read: what its cells mean and where they stand. */
 export interface ListColumn {
@@ -40,6 +41,8 @@ export interface ReadList {
   readonly records: readonly ListRecord[];
   /** Where figures stand that no header names. */
   readonly sources: ListSources;
+  /** By index of the part, by slot or identity field: what look-up sheets added to the list. Absent without any. */
+  readonly patched?: ReadonlyMap<number, Readonly<Record<string, PatchedCell>>>;
   /** SHA-256 over the bytes of the file, hexadecimal. */
   readonly sha256: string;
   readonly delimiter: Delimiter;
@@ -53,6 +56,9 @@ export interface ReadList {
   /** Classes the figures of parts without one are near to; not applied. */
   readonly proposals: readonly ClassProposal[];
 }
+
+/** A cell of a look-up sheet a figure came from. */
+export type PatchedCell = Extract<Origin, { kind: 'cell' }>;
 
 /** A list that was refused whole: every fault, in file order. */
 export interface RefusedList {
@@ -76,7 +82,7 @@ export interface ListQuestion {
 }
 
 /** An answer as the options carry it. */
-export type ListAnswer = Pick<ListOptions, 'map' | 'layout' | 'delimiter' | 'words'>;
+export type ListAnswer = Pick<ListOptions, 'map' | 'layout' | 'delimiter' | 'words' | 'sheet'>;
 
 /** A column, by letter or header, and the header it is read as; `text` keeps it unread. */
 export interface ColumnAnswer {
@@ -111,7 +117,10 @@ export interface ListOptions {
   readonly genericIds?: ReadonlySet<string>;
   /** Classes of the generic sets; another `class` is warned of. Not judged when absent. */
   readonly classes?: ReadonlySet<string>;
+  /** The sheets of a workbook, in place of the text in the bytes. */
+  readonly workbook?: Workbook;
   /** Answers of the user; each wins over what the file and a mapping say. */
+  readonly sheet?: string;
   readonly encoding?: Encoding;
   readonly delimiter?: Delimiter;
   readonly decimal?: 'point' | 'comma';

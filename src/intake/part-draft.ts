@@ -19,7 +19,7 @@ export type CellReader = (draft: Draft, cell: string, report: CellReport) => voi
 export function emptyDraft(tier: Tier): Draft {
   return {
     id: '', tier, description: null, status: null, lifecycle: null, package: null, channels: null, qualification: null,
-    class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null, figures: [],
+    class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null, crossoverFree: null, figures: [],
   };
 }
 

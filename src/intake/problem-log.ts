@@ -7,7 +7,8 @@ export interface FileFault {
   readonly code: string;
   readonly message: string;
   readonly fix: string;
-  readonly line: number;
+  /** Absent where the file has no lines. */
+  readonly line?: number;
 }
 
 /** Collects what is wrong with one list: counts everything, keeps up to the limit, tells a repeated note once per column. */
@@ -53,7 +54,7 @@ export class ProblemLog {
   }
 
   refuse({ code, message, fix, line }: FileFault): RefusedList {
-    this.add({ code, severity: 'error', message, fix, place: { file: this.file, line } });
+    this.add({ code, severity: 'error', message, fix, place: { file: this.file, ...(line === undefined ? {} : { line }) } });
     return this.refused();
   }
 

@@ -18,13 +18,15 @@ import type { MatchedMapping } from './mapping.js';
 import { matchMapping } from './mapping.js';
 import { ProblemLog } from './problem-log.js';
 import { readParts } from './rows.js';
+import { chosenSheet, sheetLabel, withoutLines } from './sheet.js';
 import type { SplitText } from './split.js';
 import { splitList } from './split.js';
 import { delimiterProblem, isWhole, plainColumns, structureProblems, warnHeaderless, withoutBlank } from './structure.js';
 import { unitFindings } from './unit-changes.js';
+import type { Workbook } from './workbook.js';
 import { trialWords } from './delimiter.js';
 
-type Decoded = Extract<DecodeResult, { ok: true }>;
+type Decoded = Extract<DecodeResult, { ok: true }> & { readonly sheet?: string };
 
 /** A list on its way in. */
 interface Reading {
@@ -41,6 +43,7 @@ interface Reading {
  */
 export function readList(bytes: Uint8Array, options: ListOptions): ListResult {
   const log = new ProblemLog(options.file);
+  if (options.workbook !== undefined) return readSheet(bytes, options.workbook, options);
   const decoded = decodeList(bytes, options);
   if (!decoded.ok) {
     const { code, reason: message, fix, line } = decoded;
@@ -52,6 +55,27 @@ export function readList(bytes: Uint8Array, options: ListOptions): ListResult {
   if (split.undecided !== undefined) return askDelimiter(split, log);
   return readLaidOut({ options, log, bytes, decoded, split });
 }
+
+/** A sheet of a workbook, in the same way; its places are rows, and the sheet is named with the file. */
+function readSheet(bytes: Uint8Array, workbook: Workbook, options: ListOptions): ListResult {
+  const whole = new ProblemLog(options.file);
+  if (!workbook.ok) return whole.refuse({ code: workbook.code, message: workbook.reason, fix: workbook.fix });
+  const choice = chosenSheet(workbook.sheets, options);
+  if (!choice.ok) {
+    if (choice.question !== null) whole.questions.push(choice.question);
+    return whole.refuse(choice);
+  }
+  const { name, records } = choice.sheet;
+  const file = sheetLabel(options.file, name);
+  const log = new ProblemLog(file);
+  log.rows = records.slice(1).filter((row) => !isBlank(row)).length;
+  log.shape = { delimiter: SHEET, columns: records[0]?.cells.length ?? 0, decimal: null };
+  const decoded = { ok: true, text: '', encoding: 'utf-8', how: 'workbook', sheet: name } as const;
+  return withoutLines(readLaidOut({ options: { ...options, file }, log, bytes, decoded, split: { delimiter: SHEET, records, faults: [] } }));
+}
+
+/** Stands for the separator of a sheet, which has none. */
+const SHEET = '\t';
 
 function askDelimiter({ undecided = [] }: SplitText, log: ProblemLog): ListResult {
   log.add(delimiterProblem(undecided, log.file));
@@ -113,11 +137,11 @@ function readTable(reading: TableReading): ListResult {
 }
 
 function tableNotes({ split, decoded, matched }: TableReading, { header, rows, title, footer }: LaidOut, decimal: DecimalMark): string[] {
-  const { encoding, how } = decoded;
+  const { encoding, how, sheet } = decoded;
   const skipped = [...title, ...footer].filter((record) => !isBlank(record)).map(({ row }) => row);
   return [
-    `${detectionNote({ encoding, how, delimiter: split.delimiter, header, rows, decimal })}.`,
-    ...(header.cells.length === 1 ? ['only one column: no separator was found in the file.'] : []),
+    `${detectionNote({ encoding, how, delimiter: split.delimiter, header, rows, decimal, ...(sheet === undefined ? {} : { sheet }) })}.`,
+    ...(header.cells.length === 1 ? [`only one column${sheet === undefined ? ': no separator was found in the file' : ''}.`] : []),
     ...(matched === null ? [] : [`mapping ${matched.mapping.name}: ${matched.exact} of ${matched.mapping.columns.length} columns known by their exact header${matched.named === 0 ? '' : `, ${matched.named} by name with another unit`}.`]),
     ...(skipped.length === 0 ? [] : [`rows skipped: ${skipped.join(', ')} (before the header, or behind the blank row that ends the table).`]),
   ];

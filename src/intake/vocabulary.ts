@@ -37,6 +37,12 @@ export const FIGURE_WORDS: Readonly<Partial<Record<Parameter, readonly string[]>
   thermalResistance: ['theta ja', 'rth ja', 'rthja', 'rθja', 'θja', 'thermal resistance'],
   junctionTemperature: ['tj', 'junction temperature', 'tj maximum'],
   inputCrossover: ['input crossover', 'crossover region'],
+  inputOverdrive: ['input overdrive', 'input beyond rail', 'input beyond rails', 'input beyond supply', 'input overvoltage'],
+  overdriveCurrent: ['overdrive current', 'input current rating', 'input clamp current', 'input current amr', 'input current abs'],
+  differentialInput: ['vid', 'v id', 'differential input [voltage]', 'input differential [voltage]', 'vid abs', 'differential input amr'],
+  overloadRecovery: ['overload recovery [time]', 'overdrive recovery [time]', 'output recovery [time]', 'trec', 'recovery time'],
+  startUpTime: ['start up [time]', 'startup [time]', 'turn on [time]', 'power up [time]', 'ton', 'wake up [time]'],
+  supplyRejectionCorner: ['psrr corner', 'psr corner', 'supply rejection corner'],
 };
 
 /** Meanings one column can have that fill several figures, or need a look at the cells. */
@@ -69,6 +75,7 @@ export const STATEMENT_TERMS: Readonly<Record<Statement, readonly string[]>> = {
   phaseReversal: ['phase inversion'],
   inputClamp: ['input clamps', 'clamp diodes', 'input clamp diodes', 'differential clamp'],
   inputType: ['input stage', 'input device', 'technology'],
+  crossoverFree: ['zero crossover', 'no crossover', 'crossover free input', 'without crossover'],
 };
 
 /** Price, with its currency and quantity in the header. */

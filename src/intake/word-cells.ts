@@ -6,7 +6,7 @@ import { isMissing } from './text-cell.js';
 import type { WordResult } from './words.js';
 import { readInputType, readLifecycle, readStatus, readYesNo } from './words.js';
 
-type WordField = 'status' | 'lifecycle' | 'phaseReversal' | 'inputClamp' | 'inputType';
+type WordField = 'status' | 'lifecycle' | 'phaseReversal' | 'inputClamp' | 'inputType' | 'crossoverFree';
 
 export const statusCell: CellReader = wordCell('status', readStatus);
 export const lifecycleCell: CellReader = wordCell('lifecycle', readLifecycle);
@@ -35,6 +35,7 @@ export const STATEMENT_CELLS: Readonly<Record<Statement, CellReader>> = {
   phaseReversal: wordCell('phaseReversal', readYesNo),
   inputClamp: wordCell('inputClamp', readYesNo),
   inputType: wordCell('inputType', readInputType),
+  crossoverFree: wordCell('crossoverFree', readYesNo),
 };
 
 function wordCell<Key extends WordField>(key: Key, read: (text: string) => WordResult<NonNullable<Draft[Key]>>): CellReader {

@@ -17,6 +17,10 @@ export const TYPICAL_FACTOR: Partial<Record<Parameter, number>> = {
   commonModeRejection: 1 / 3.16,
   supplyRejection: 1 / 3.16,
   openLoopGain: 1 / 3.16,
+  // They go with the speed of the part, and are derated as that is.
+  supplyRejectionCorner: 0.6,
+  overloadRecovery: 1 / 0.6,
+  startUpTime: 1 / 0.6,
 };
 
 /** Typical head-rooms lose half their magnitude, whichever side of the rail they stand on. */

@@ -55,6 +55,12 @@ export const PARAMETERS = {
   thermalResistance: describe('thermal resistance', 'K/W', 'K/W', 'thermal', TYP_MAX),
   junctionTemperature: describe('junction temperature', '°C', '°C', 'temperature', ['max']),
   inputCrossover: describe('input crossover', 'V', 'V', 'voltage', MIN_MAX),
+  inputOverdrive: describe('input overdrive', 'V', 'V', 'voltage', ['max']),
+  overdriveCurrent: describe('overdrive current', 'A', 'mA', 'current', ['max']),
+  differentialInput: describe('differential input', 'V', 'V', 'voltage', ['max']),
+  overloadRecovery: describe('overload recovery', 's', 'µs', 'time', TYP_MAX),
+  startUpTime: describe('start up time', 's', 'µs', 'time', TYP_MAX),
+  supplyRejectionCorner: describe('supply rejection corner', 'Hz', 'Hz', 'frequency', MIN_TYP),
 } as const satisfies Record<string, ParameterDescription>;
 
 export type Parameter = keyof typeof PARAMETERS;

@@ -1,5 +1,4 @@
-import type { Figure } from './figures.js';
-import type { ScreenView } from './screen-view.js';
+import type { Condition, Figure, LimitKind } from './figures.js';
 
 export type Tier = 'approved' | 'generic';
 export const STATUSES = ['approved', 'conditional', 'restricted', 'not-approved'] as const;
@@ -33,6 +32,8 @@ export interface Part {
   readonly phaseReversal: boolean | null;
   readonly inputClamp: boolean | null;
   readonly inputType: InputType | null;
+  /** True when the offset makes no step over the whole input range: one pair, or a hand-over that is chopped or pumped away. */
+  readonly crossoverFree: boolean | null;
   /** In canonical column order, then condition; at most one per slot (`figureSlot`). */
   readonly figures: readonly Figure[];
 }
@@ -57,6 +58,23 @@ export type Origin =
   | { readonly kind: 'class'; readonly class: string }
   | { readonly kind: 'assumption'; readonly text: string };
 
+/** A cell of the team's list where a figure of one part stands, or would stand. */
+export interface ListCell {
+  readonly file: string;
+  readonly line: number;
+  readonly row: number;
+  readonly column: number;
+  readonly columnLetter: string;
+  readonly header: string;
+  /** As written. */
+  readonly cell: string;
+  /** Nothing is written there, or a word for nothing. */
+  readonly empty: boolean;
+  /** Null where the header does not say it: the cell does. Always null for identity columns. */
+  readonly kind: LimitKind | null;
+  readonly condition: Condition;
+}
+
 /** What the engine asks of whoever keeps the parts. Pure: the engine never knows there is a database. */
 export interface PartSource {
   readonly parts: readonly Part[];
@@ -64,12 +82,6 @@ export interface PartSource {
   readonly sha256: string;
   /** Origin of the figure in a slot (`figureSlot`) of a part; null when not kept. */
   origin(partId: string, slot: string): Origin | null;
-  /** The same parts as views, approved before generic, and the generic ones whole. Absent: the parts are judged one by one. */
-  readonly screening?: Screening;
-}
-
-/** Views of all parts of a source. */
-export interface Screening {
-  readonly views: readonly ScreenView[];
-  readonly generic: readonly Part[];
+  /** The cells of a part whose columns hold this parameter or identity field, in column order; absent where no list is kept. */
+  cells?(partId: string, figure: string): readonly ListCell[];
 }

@@ -10,7 +10,7 @@ import { scalarReading, type RangeEnd } from './select.js';
 import { spreadReading, type Spread } from './spread.js';
 
 /** What is known about a part in words and counts, as wishes compare it. */
-export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price' | 'inputType' | 'inputClamp'>;
+export type Identity = Pick<Part, 'tier' | 'status' | 'lifecycle' | 'package' | 'channels' | 'qualification' | 'price' | 'inputType' | 'inputClamp' | 'phaseReversal' | 'crossoverFree'>;
 
 /**
  * A part's figures resolved into one outlook. A check asks for what it reads and never learns which outlook it is given;
@@ -34,8 +34,6 @@ export interface Readings {
   bounded(worst: number, best: number): number;
   /** True when borrowing for this parameter is possible at all. */
   hasClass(parameter: Parameter): boolean;
-  /** Only numbers that decide are wanted: remedies, which cost far more than the verdict, are left out. */
-  readonly brief: boolean;
 }
 
 export interface Assumed {
@@ -59,7 +57,6 @@ export function readingsOf(test: PartUnderTest): Readings {
     currentFromHeadroom: (side, supply) => fromHeadroom(test, side, supply),
     bounded: (worst, best) => (test.outlook === 'pessimistic' ? worst : best),
     hasClass: (parameter) => borrowed(test, parameter) !== null,
-    brief: test.brief === true,
   };
 }
 
@@ -69,7 +66,6 @@ function plain(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): Readi
 }
 
 function isPrinted(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): boolean {
-  test.look?.(parameter);
   return test.part.figures.some((figure) => figure.parameter === parameter && (end === undefined || figure.kind === end));
 }
 

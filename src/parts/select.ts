@@ -22,7 +22,6 @@ export type RangeEnd = 'min' | 'max';
 
 /** Figures of a parameter that count at all: with `--strict`, limits only. */
 export function usable(test: PartUnderTest, parameter: Parameter): Figure[] {
-  test.look?.(parameter);
   return test.part.figures.filter(
     (figure) => figure.parameter === parameter && !(test.strict && (figure.kind === 'typ' || figure.assumed === true)),
   );
@@ -77,7 +76,7 @@ export function bestPossible(figure: Pick<Figure, 'parameter' | 'kind'>): number
 /** Parameters whose good end lies below zero: head-room beyond the rail, a range that begins in the cold. */
 const BELOW_ZERO: ReadonlySet<Parameter> = new Set(['inputLowHeadroom', 'inputHighHeadroom', 'temperature']);
 /** Parameters whose maximum is what a part endures: more of it is better. */
-const ENDURED: ReadonlySet<Parameter> = new Set(['supplyVoltage', 'supplyAbsoluteMaximum', 'temperature', 'junctionTemperature', 'capacitiveLoad']);
+const ENDURED: ReadonlySet<Parameter> = new Set(['supplyVoltage', 'supplyAbsoluteMaximum', 'temperature', 'junctionTemperature', 'capacitiveLoad', 'inputOverdrive', 'overdriveCurrent', 'differentialInput']);
 
 /** Parameters known as typical alone of which less is better. */
 const BURDENS: ReadonlySet<Parameter> = new Set(['outputResistance', 'inputCapacitance']);

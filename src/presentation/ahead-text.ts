@@ -3,6 +3,7 @@ import type { Report } from '../report.js';
 import { amount } from './amounts.js';
 import { paragraph } from './layout.js';
 import { held } from './spelling.js';
+import { priceStability } from './stability-text.js';
 import type { Style } from './style.js';
 import { checkWords } from './words.js';
 import { formatQuantity } from '../quantities/format.js';
@@ -18,7 +19,7 @@ export function aheadLines({ ahead, fit }: Report, style: Style): string[] {
     ...(forFirst.length === 0 ? [] : [`In favour of 1: ${forFirst.join(', ')}.`]),
     ...(forSecond.length === 0 ? [] : [`In favour of 2: ${forSecond.join(', ')}.`]),
   ];
-  return paragraph(sentence.join(' '), style, { lead: '', indent: 2 });
+  return [...paragraph(sentence.join(' '), style, { lead: '', indent: 2 }), ...paragraph(priceStability(ahead.stability, ['1', '2']), style, { lead: '  ' })];
 }
 
 function decision({ decidedBy, merits, prices, currents }: WhyAhead, proofs: readonly [unknown, unknown]): string {
@@ -38,7 +39,7 @@ function decision({ decidedBy, merits, prices, currents }: WhyAhead, proofs: rea
 }
 
 /** As many digits as tell the two apart. */
-function meritText([first, second]: readonly [number, number]): string {
+export function meritText([first, second]: readonly [number, number]): string {
   for (let digits = 2; digits < 9; digits++) {
     const texts = [first, second].map((merit) => formatQuantity(merit, '1', { digits }));
     if (texts[0] !== texts[1]) return texts.join(' against ');
@@ -58,7 +59,8 @@ function inFavour(ahead: WhyAhead, side: 0 | 1): string[] {
   ];
 }
 
-function differenceText({ check, first, second, unit }: Difference, side: 0 | 1): string {
+/** One check in which two parts differ, from the side of one of them. */
+export function differenceText({ check, first, second, unit }: Difference, side: 0 | 1): string {
   const values = (side === 0 ? [first, second] : [second, first]).map((value) => amount(value, unit, { round: AT_LEAST.has(check) ? 'down' : 'up' }));
   return `${HEADROOM[check] ?? checkWords(check)} ${values.join(' against ')}`;
 }

@@ -34,7 +34,7 @@ export function renderDemands({ stage, demands }: DemandsReport, style: Style): 
 /** To nearest, as in the sentence beside it: the same number reads the same. */
 export function requiredText(demand: AnyDemand): string {
   if (demand.sense === 'one-of') return demand.required.map(safeLine).join(' or ');
-  if (typeof demand.required !== 'number' || demand.unit === null) return 'not judged by this version';
+  if (typeof demand.required !== 'number' || demand.unit === null) return 'built' in demand ? 'not judged by this version' : 'the stage does not say it';
   const words = demand.sense === 'at-least' ? 'at least' : 'at most';
   const unbuilt = 'built' in demand ? ' (not judged by this version)' : '';
   return `${words} ${checkAmount(demand, demand.required)}${unbuilt}`;

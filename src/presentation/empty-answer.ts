@@ -7,6 +7,7 @@ import { paragraph } from './layout.js';
 import { failingLine, failures } from './rejected-text.js';
 import { safeLine } from './safe-text.js';
 import type { Style } from './style.js';
+import { givingUp } from './ways-out-text.js';
 import { checkWords, counted } from './words.js';
 
 /** Why nothing fits, as a practitioner would say it first. */
@@ -53,7 +54,7 @@ function railReason(report: Report, check: 'output-low' | 'output-high'): string
   const kept = stage.asked.margins.outputHeadroom;
   const margin = kept === undefined || kept.value === 0 ? '' : `, with ${amount(kept.value, 'V')} kept free`;
   const nearest = reach === null ? '' : reachSentence(reach);
-  return `No amplifier on this supply reaches ${asked}${margin}: an output stage always keeps a little of the rail. limits.swingLoss may give up that end of the swing.${nearest}`;
+  return `No amplifier on this supply reaches ${asked}${margin}: an output stage always keeps a little of the rail. limits.swingLoss may give up that end of the swing.${givingUp(report, check === 'output-low' ? 'lowest' : 'highest')}${nearest}`;
 }
 
 /** The worst corner, where the output asked for lies outside the supply itself; null where it lies inside. */

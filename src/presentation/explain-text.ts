@@ -1,14 +1,19 @@
 import type { Explanation } from '../report.js';
 import { priceText } from './amounts.js';
 import { cautionLine, failingCheck, openCheck, passingCheck, passingInShort } from './check-text.js';
+import { changesLines } from './changes-text.js';
 import { batteryText, swingText } from './budget-text.js';
 import { commandOf, nextLines, type Offer } from './commands.js';
 import { confirmationInFull } from './confirm-text.js';
 import { dataLine } from './data-text.js';
 import { cautionsOf } from './json.js';
+import { formulaLines } from './formula-text.js';
 import { paragraph } from './layout.js';
+import { partLookupLines } from './part-lookup-text.js';
 import { remedyLines } from './remedy-text.js';
+import { predictedLines } from './predicted-text.js';
 import { safeLine } from './safe-text.js';
+import { sensitivityLines } from './sensitivity-text.js';
 import { finished, glued, held } from './spelling.js';
 import { assumptionLines, stageCautions, stageInShort } from './stage-text.js';
 import { toned, type CommandContext, type Style } from './style.js';
@@ -25,9 +30,14 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     ...of('fail').map((verdict) => failingCheck(verdict, origins, style)),
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
     ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
+    formulaLines(explanation, style),
+    predictedLines(explanation, style),
     informedLines(judged, style),
     cautionsOf(judged).flatMap((caution) => cautionLine(caution, style)),
+    sensitivityLines(explanation.sensitivity, style),
+    partLookupLines(explanation, style, context),
     remedyLines(explanation, style, context),
+    changesLines(explanation, style, context),
     confirmLines(explanation, style),
     fittingLines(explanation, style),
     [

@@ -62,7 +62,7 @@ function rowOf(one: RankedPart, hasBattery: boolean): string[] {
 }
 
 /** Variants of one die stand in one line and are told as such. */
-function variantWords({ variants }: RankedPart): string[] {
+export function variantWords({ variants }: RankedPart): string[] {
   if (variants.length === 0) return [];
   const told = variants.map(({ part }) => [safeLine(part.id), part.package === null ? '' : safeLine(part.package), part.channels === null ? '' : sections(part.channels)].filter((word) => word !== '').join(' '));
   return [`same die: ${told.join(', ')}`];

@@ -22,18 +22,21 @@ export interface ImportReport {
   readonly difference?: ListDifference;
   /** Saved stages before and after; only when there are some and the list was compared. */
   readonly stages?: readonly StageChange[];
+  /** Only with --patch: cells and parts that were filled, and the list they were added to. */
+  readonly patch?: { readonly cells: number; readonly parts: number; readonly list: string };
   /** Only when refused by a guard: the list reads, but changes more than it may without a word. */
   readonly held?: true;
   /** Only when refused for its cells: how many cells of how many parts stand in the way. */
   readonly refused?: { readonly cells: number; readonly parts: number };
 }
 
-export function importJson({ outcome, file, sha256, counts, problems, difference, stages, held, refused }: ImportReport): string {
+export function importJson({ outcome, file, sha256, counts, problems, difference, stages, held, refused, patch }: ImportReport): string {
   return document('import', {
     outcome,
     file,
     sha256,
     counts,
+    ...(patch === undefined ? {} : { patch }),
     ...(refused === undefined ? {} : { refused }),
     ...(held === undefined ? {} : { held }),
     problems: problems.map(problemJson),

@@ -27,16 +27,33 @@ function written(lines: readonly string[], style: Style): string {
 }
 
 function linesOf(report: ImportReport): string[] {
-  const { file, counts, sha256 } = report;
+  const { file, counts, sha256, patch } = report;
   const hash = sha256 === null ? '' : ` (sha256 ${sha256.slice(0, 8)})`;
   if (report.outcome === 'refused') return [refusal(report)];
   if (report.outcome === 'undone') return [`The list before the last import is in force again: ${plural(counts.rows, 'part')}.`, ...stageChangeLines(report.stages ?? [])];
+  if (patch !== undefined && report.outcome !== 'imported') return patchLines(report, patch);
   if (report.outcome === 'no-change') {
     return file === '' ? ['Nothing to take back: no list was imported before. Nothing was changed.'] : [`${file}${hash}: no change. ${plural(counts.rows, 'part')}, as imported before.`];
   }
   const named = namedLines(report);
   if (report.outcome === 'dry-run') return [`${file}${hash}: ${plural(counts.rows, 'part')}; ${tally(counts)}.`, ...named, 'Dry run: nothing was written. Run again without --dry-run to import.'];
+  if (patch !== undefined) return patchLines(report, patch);
   return [`Imported ${plural(counts.rows, 'part')} from ${file}${hash}: ${tally(counts)}.`, ...named, 'Next  railfit shortlist STAGE     railfit parts --tier approved     railfit import --undo'];
+}
+
+/** What a look-up sheet added. */
+function patchLines(report: ImportReport, { cells, parts, list }: NonNullable<ImportReport['patch']>): string[] {
+  const { file, outcome, sha256 } = report;
+  const hash = sha256 === null ? '' : ` (sha256 ${sha256.slice(0, 8)})`;
+  if (outcome === 'no-change') return [`${file}${hash}: no change. The list says all of it already.`];
+  const what = `${plural(cells, 'cell')} of ${plural(parts, 'part')}`;
+  if (outcome === 'dry-run') return [`${file}${hash} would fill ${what} of ${list}.`, ...namedLines(report), 'Dry run: nothing was written. Run again without --dry-run to import.'];
+  return [
+    `Filled ${what} of ${list} from ${file}${hash}; everything else stays.`,
+    ...namedLines(report),
+    `${list} itself does not have them yet: importing it again would take them out. railfit parts --csv writes the list with them.`,
+    'Next  railfit shortlist STAGE     railfit parts --csv     railfit import --undo',
+  ];
 }
 
 /** Counts that are not zero. */

@@ -4,7 +4,10 @@ import type { Problem } from '../quantities/problem.js';
 import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js';
 import type { Confirmation, JudgedPart } from '../screening/index.js';
 import type { RankedPart } from '../ranking/index.js';
+import { changesJson, waysOutJson } from './changes-json.js';
 import { hazardText } from './hazard-text.js';
+import { partLookupsJson, sensitivityJson } from './lookup-json.js';
+import { bodyOf } from './prediction-body.js';
 import { problemJson } from './problem-json.js';
 import { stageJson } from './stage-json.js';
 import { verdictJson, type OriginOf } from './verdict-json.js';
@@ -28,6 +31,7 @@ export function shortlistJson(report: Report, options: { readonly top: number; r
     rejections: report.rejections,
     nearest: report.nearest.map(judged),
     ahead: report.ahead,
+    ...waysOutJson(report),
     ...(options.all ? { rejected: report.rejected.map(judged) } : {}),
     asking: report.asking,
     data: dataJson(report.data),
@@ -48,8 +52,10 @@ export function explanationJson(explanation: Explanation): string {
     verdicts: judged.verdicts.map((verdict) => verdictJson(verdict, part.id, origin)),
     confirm: judged.confirm.map(confirmationJson),
     ...informed(judged),
-    changes: null,
-    changesReason: 'not-built',
+    ...changesJson(explanation),
+    ...(explanation.lookups === null ? {} : { lookups: partLookupsJson(explanation.lookups) }),
+    sensitivity: explanation.sensitivity.map(sensitivityJson),
+    ...(explanation.predicted === null ? {} : { predicted: { checks: explanation.predicted.checks, ...bodyOf(explanation.predicted.prediction) } }),
     cautions: cautionsOf(judged),
     fitting: explanation.fitting.map((one) => one.part.id),
     asking: explanation.asking,
@@ -117,7 +123,7 @@ export function cautionsOf({ part, verdicts: all, current, hazards }: JudgedPart
   ];
 }
 
-function dataJson(data: DataUsed): object {
+export function dataJson(data: DataUsed): object {
   return { catalog: data.catalog, rules: data.rules };
 }
 

@@ -47,7 +47,7 @@ function dominatedNotes(shown: readonly RankedPart[]): string[] {
     if (one.dominatedBy === null) continue;
     by.set(one.dominatedBy, [...(by.get(one.dominatedBy) ?? []), safeLine(one.part.id)]);
   }
-  return [...by].map(([dominator, parts]) => `${parts.join(', ')}: nowhere better than ${safeLine(dominator)} in margins, price or current`);
+  return [...by].map(([dominator, parts]) => `${parts.join(', ')}: nowhere better than ${safeLine(dominator)} in margins, price or current; margins beyond comfort do not count`);
 }
 
 function grouped<T extends JudgedPart>(shown: readonly T[], sentencesOf: (one: T) => readonly string[]): string[] {

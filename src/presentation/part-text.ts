@@ -76,6 +76,7 @@ function identityOf(part: Part): [string, string][] {
     ['input type', part.inputType ?? ''],
     ['phase reversal', yesNo(part.phaseReversal)],
     ['input clamp', yesNo(part.inputClamp)],
+    ['crossover free', yesNo(part.crossoverFree)],
   ];
   return all.filter(([, text]) => text !== '').map(([label, text]) => [capital(label), glued(safeLine(text))]);
 }

@@ -15,9 +15,11 @@ import { figureWords, passingSide } from './words.js';
 /** What to do about open checks: look the figure up, assume it for one run, or measure it. */
 export function remedyLines(explanation: Explanation, style: Style, context: CommandContext): string[] {
   const open = explanation.judged.verdicts.filter((verdict) => verdict.outcome === 'unknown');
-  const steps = [...lookups(open, explanation), ...unbuilt(open)];
+  // Where the figures that would decide it were found, they stand in a block of their own.
+  const isSettled = explanation.lookups?.settles === true;
+  const steps = [...(isSettled ? [] : lookups(open, explanation)), ...unbuilt(open)];
   const fitted = fittings(explanation, style, context);
-  const assumption = assumeWords(open, explanation);
+  const assumption = isSettled ? null : assumeWords(open, explanation);
   const measured = open.flatMap(({ decidesAt }) => (decidesAt !== null && MEASURABLE.has(decidesAt.figure) ? [figureWords(decidesAt.figure)] : []));
   const listed: string[][] = steps.map((step) => paragraph(step, style, { lead: '  - ', indent: 4 }));
   if (assumption !== null) {
@@ -34,8 +36,10 @@ export function remedyLines(explanation: Explanation, style: Style, context: Com
 }
 
 /** Components that turn a check, as an option that pastes back. */
-function fittings({ judged }: Explanation, style: Style, context: CommandContext): string[] {
-  const offered = judged.verdicts.flatMap((verdict) => (verdict.remedies ?? []).map((remedy) => ({ verdict, remedy })));
+function fittings({ judged, changes }: Explanation, style: Style, context: CommandContext): string[] {
+  // What lets the part in by itself or with others stands there, judged in full.
+  const told = new Set(changes?.options.flatMap(({ moves }) => moves.map(({ path }) => path)));
+  const offered = judged.verdicts.flatMap((verdict) => (verdict.remedies ?? []).filter(({ path }) => !told.has(path)).map((remedy) => ({ verdict, remedy })));
   return offered.flatMap(({ verdict, remedy }) => [
     ...paragraph(`${remedy.path} ${glued(remedy.text)}: ${verdict.title} ${checkAmount(verdict, remedy.offered)} with it, this check computed again; ${glued(remedy.cost)}`, style, { lead: '  - ', indent: 4 }),
     ...commandLines(commandOf(context, ['explain', judged.part.id], ['--set', `${remedy.path}=${asciiText(remedy.text).replaceAll(' ', '')}`]), style, '    '),

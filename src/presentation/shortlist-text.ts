@@ -8,10 +8,12 @@ import { dataLine } from './data-text.js';
 import { emptyReason, nearestLines, swingLossToTry } from './empty-answer.js';
 import { legendLine, fitLines } from './fit-table.js';
 import { flow, paragraph } from './layout.js';
+import { lookupSummary } from './lookup-text.js';
 import { noteLines } from './notes.js';
 import { finished, GLUE } from './spelling.js';
 import { assumptionLines, stageCautions, stageLines } from './stage-text.js';
 import type { CommandContext, Style } from './style.js';
+import { conflictLines, waysOutLines } from './ways-out-text.js';
 import { undecidedLines } from './undecided-text.js';
 import { rejectedLines } from './rejected-text.js';
 import { checkWords, counted } from './words.js';
@@ -26,10 +28,13 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
     [...fitLines(report, style), ...undecidedLines(report, style)],
     [...legendLine(report, style), ...orderLine(report, style)],
     aheadLines(report, style),
+    conflictLines(report, style),
+    waysOutLines(report, style, context),
     report.fit.length < FEW ? nearestLines(report, style) : [],
     histogram(report, style),
     style.all ? rejectedLines(report, style) : [],
     noteLines(report, style),
+    lookupSummary(report, style, context),
     closing(report, style),
     nextLines(offers(report, context), style),
   ];
@@ -39,13 +44,13 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
 /** With fewer parts than this the nearest of the others are shown. */
 const FEW = 3;
 
-function countsLine(report: Report): string {
+export function countsLine(report: Report): string {
   const { parts, fit, undecided, rejected } = report.counts;
   const lines = report.fit.length === fit ? '' : `, on ${counted(report.fit.length, 'line')} (packages of one die share a line)`;
   return `${fit} of ${counted(parts, 'part')} ${fit === 1 && parts === 1 ? 'fits' : 'fit'}${lines}, ${undecided} cannot be decided, ${rejected} ${rejected === 1 ? 'does' : 'do'} not fit.`;
 }
 
-const ORDERS = {
+export const ORDER_WORDS = {
   merit: 'approved before generic, all limits before some typical, then merit: margins, price and current in equal shares.',
   price: 'price as asked, then approved before generic, limits before typical, then merit.',
   current: 'supply current as asked, then approved before generic, limits before typical, then merit.',
@@ -53,7 +58,7 @@ const ORDERS = {
 } as const;
 
 function orderLine({ fit, asking }: Report, style: Style): string[] {
-  return fit.length < 2 ? [] : paragraph(`Order: ${ORDERS[asking.order]}`, style, { lead: ' ' });
+  return fit.length < 2 ? [] : paragraph(`Order: ${ORDER_WORDS[asking.order]}`, style, { lead: ' ' });
 }
 
 function histogram({ rejections, counts }: Report, style: Style): string[] {
@@ -61,7 +66,7 @@ function histogram({ rejections, counts }: Report, style: Style): string[] {
   const one = counts.rejected === 1;
   const title = one ? 'Why the other one is out:' : `Why the other ${counts.rejected} are out (one part can fail several checks):`;
   const cells = rejections.map(({ check, parts }) => `${checkWords(check).replaceAll(' ', GLUE)}${GLUE}${parts}`);
-  return [...paragraph(counts.fit + counts.undecided === 0 ? title.replace('the other ', one ? 'the ' : 'all ').replace('all 1', 'the') : title, style), ...flow(cells, style, { lead: '  ' })];
+  return [...paragraph(counts.fit + counts.undecided === 0 ? title.replace('the other ', one ? 'the ' : 'all ') : title, style), ...flow(cells, style, { lead: '  ' })];
 }
 
 function closing(report: Report, style: Style): string[] {
@@ -92,7 +97,7 @@ function offers(report: Report, context: CommandContext): Offer[] {
 
 /** Giving up a little swing is the usual way out where only the rails stand in the way; tried, not promised. */
 function lossOffer(report: Report, context: CommandContext): Offer[] {
-  const loss = report.fit.length > 0 ? null : swingLossToTry(report);
+  const loss = report.fit.length > 0 || (report.nothingFits?.changes.length ?? 0) > 0 ? null : swingLossToTry(report);
   if (loss === null) return [];
   const text = asciiText(formatQuantity(loss, 'V', { digits: 2, round: 'up' }));
   return [{ words: commandOf(context, ['shortlist'], ['--set', `limits.swingLoss=${text.replace(' ', '')}`]), why: `to try: gives up ${text} of swing at each rail` }];

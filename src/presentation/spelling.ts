@@ -8,7 +8,7 @@ export const PASTE = '\ue000';
 
 const SIGNS: ReadonlyMap<string, string> = new Map([
   ['×', 'x'], ['÷', '/'], ['·', '*'], ['–', '-'], ['—', '-'], ['…', '...'], ['→', '->'], ['π', 'pi'], ['Δ', 'delta '], ['θ', 'theta'],
-  ['√', 'sqrt'], ['²', '^2'], ['½', '1/2'], ['‰', ' permille'], ['‘', "'"], ['’', "'"], ['“', '"'], ['”', '"'], ['ε', 'epsilon'], ['≈', '~'],
+  ['√', 'sqrt'], ['²', '^2'], ['½', '1/2'], ['‰', ' permille'], ['‘', "'"], ['’', "'"], ['“', '"'], ['”', '"'], ['ε', 'epsilon'], ['τ', 'tau'], ['ρ', 'rho'], ['Σ', 'sum of '], ['∫', 'integral of '], ['β', 'beta'], ['≈', '~'],
 ]);
 
 /** Text as this style spells it: the hyphen for the minus sign (U+2212 is for pages), and ASCII where asked. Keeps the joints. */

@@ -35,7 +35,7 @@ export function assumptionLines(sentences: readonly string[], style: Style): str
   return all.length === 0 ? [] : labelled('Assumed', all.join('; '), style);
 }
 
-function circuitOf(stage: Stage): string[] {
+export function circuitOf(stage: Stage): string[] {
   const { output, outputNominal } = stage;
   const coupled = stage.coupling === 'ac' ? `, AC-coupled` : '';
   const corners = output.min === outputNominal.min && output.max === outputNominal.max ? '' : ` (${range(output.min, output.max, 'V')} at the corners)`;
@@ -101,10 +101,21 @@ function referenceOf({ vertices, referenceTolerance, referenceResistance }: Stag
 function surroundingsOf(stage: Stage): string[] {
   const { supply, supplyPeak, load, temperature } = stage;
   const peak = supplyPeak > supply.max ? `, peak ${amount(supplyPeak, 'V')}` : '';
-  return [`${range(supply.min, supply.max, 'V')} single${peak}`, `Load${GLUE}${GLUE}${loadOf(load)}`, `Temperature${GLUE}${GLUE}${range(temperature.min, temperature.max, '°C')}`];
+  return [`${range(supply.min, supply.max, 'V')} single${peak}`, `Load${GLUE}${GLUE}${loadOf(load)}`, `Temperature${GLUE}${GLUE}${range(temperature.min, temperature.max, '°C')}`, ...circumstancesOf(stage)];
 }
 
-function loadOf(load: Stage['load']): string {
+/** What can happen to the stage beside its signal. */
+function circumstancesOf({ asked: { overdrive, sequencing, supplyRipple, dutyCycle } }: Stage): string[] {
+  const said = (words: string, text: string): string => `${words}${GLUE}${GLUE}${text}`;
+  return [
+    ...(overdrive === null ? [] : [said('Overdrive', `${amount(overdrive.value, 'V')} beyond a rail`)]),
+    ...(sequencing === null ? [] : [said('Sequencing', sequencing)]),
+    ...(supplyRipple === null ? [] : [said('Ripple', `${amount(supplyRipple.amplitude.value, 'V')} peak at ${amount(supplyRipple.frequency.value, 'Hz')}`)]),
+    ...(dutyCycle === null ? [] : [said('On', `${amount(dutyCycle.on.value, 's')} of every ${amount(dutyCycle.every.value, 's')}`)]),
+  ];
+}
+
+export function loadOf(load: Stage['load']): string {
   if (load === null) return 'none';
   const parts = [
     ...(load.resistance === null ? [] : [`${amount(load.resistance, 'Ω')} to ${load.to}`]),
@@ -114,7 +125,7 @@ function loadOf(load: Stage['load']): string {
   return parts.length === 0 ? 'none' : parts.join(', ');
 }
 
-function askedOf({ asked }: Stage): string[] {
+export function askedOf({ asked }: Stage): string[] {
   const { limits, wishes, margins } = asked;
   const most = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≤${GLUE}${glued(safeLine(text))}`]);
   const least = (words: string, text: string | undefined): string[] => (text === undefined ? [] : [`${words} ≥${GLUE}${glued(safeLine(text))}`]);
@@ -132,6 +143,8 @@ function askedOf({ asked }: Stage): string[] {
     ...least('phase margin', limits.phaseMargin?.text),
     ...most('junction temperature', limits.junctionTemperature?.text),
     ...most('frequency error', limits.frequencyError?.text),
+    ...most('supply ripple at the output', limits.supplyRipple?.text),
+    ...most('start-up', limits.startUp?.text),
     ...times('slew rate', margins.slewRate),
     ...times('gain bandwidth', margins.gainBandwidth),
     ...(margins.outputHeadroom === undefined || margins.outputHeadroom.value === 0 ? [] : [`${glued(safeLine(margins.outputHeadroom.text))} kept free at each rail`]),

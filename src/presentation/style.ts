@@ -8,6 +8,8 @@ export interface Style {
   readonly top: number;
   readonly all: boolean;
   readonly sources: boolean;
+  /** Explanations: the relation, numbers and source of each check. */
+  readonly formulas?: boolean;
   /** U+00A0 between number and unit, for terminals. Without it a plain blank; they stay on one line either way. */
   readonly gluedUnits: boolean;
 }

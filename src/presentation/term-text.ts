@@ -62,7 +62,7 @@ function termRow(term: Term, { verdict, origins, style }: At): string[] {
 }
 
 /** On the best reading, which a fail shows, a figure of the class counts as nothing. */
-const stepsOf = (term: Term, { outcome }: Verdict): string => (outcome === 'fail' && term.basis === 'borrowed' ? 'counted as nothing' : (term.how ?? ''));
+export const stepsOf = (term: Term, { outcome }: Verdict): string => (outcome === 'fail' && term.basis === 'borrowed' ? 'counted as nothing' : (term.how ?? ''));
 
 /** `3 mV typical × 3, × noise gain 8.14` or `3 mV limit, × noise gain 8.14`. */
 function madeFrom(printed: string, figure: Figure | null, how: string): string {
@@ -74,13 +74,13 @@ function madeFrom(printed: string, figure: Figure | null, how: string): string {
   return stated + joint + steps;
 }
 
-function printedOf(value: { readonly value: number; readonly unit: string }, figure: Figure | null): string {
+export function printedOf(value: { readonly value: number; readonly unit: string }, figure: Figure | null): string {
   return figure === null ? figureAmount(value.unit === 'V/V' ? 'commonModeRejection' : '', value) : figureAmount(figure.parameter, value);
 }
 
-const printedText = (figure: Figure | null): string => (figure === null ? '' : figureAmount(figure.parameter, { value: figure.value, unit: unitOf(figure) }));
+export const printedText = (figure: Figure | null): string => (figure === null ? '' : figureAmount(figure.parameter, { value: figure.value, unit: unitOf(figure) }));
 
-function originOf(term: Pick<Term, 'slot' | 'basis'>, origins: Origins, style: Style): string {
+export function originOf(term: Pick<Term, 'slot' | 'basis'>, origins: Origins, style: Style): string {
   const { part } = origins;
   const known = term.slot === null ? null : origins.origin(part.id, term.slot);
   // From words, or under a condition that was declared: the cell is there, the figure as such is not.
@@ -116,7 +116,7 @@ function sumRow(verdict: Verdict): string[][] {
 }
 
 /** A term is in the unit of its check, unless it says another. */
-function termAmount(verdict: Verdict, value: number): string {
+export function termAmount(verdict: Verdict, value: number): string {
   return verdict.termUnit === undefined ? checkAmount(verdict, value) : amount(value, verdict.termUnit);
 }
 

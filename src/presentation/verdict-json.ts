@@ -31,6 +31,7 @@ export function verdictJson(verdict: Verdict, partId: string, originOf: OriginOf
     ...(verdict.slot === null || verdict.terms.length > 0 ? {} : { origin: where(verdict.slot), how: verdict.how }),
     ...(verdict.cautions.length === 0 ? {} : { cautions: verdict.cautions }),
     ...(verdict.notes === undefined ? {} : { notes: verdict.notes }),
+    ...(verdict.measures === undefined ? {} : { measures: verdict.measures }),
     ...(verdict.remedies === undefined ? {} : { remedies: verdict.remedies }),
     text: verdictSentence(verdict),
   };

@@ -21,7 +21,7 @@ export function verdictSentence(verdict: Verdict): string {
 
 function wordSentence(verdict: Verdict): string {
   const wanted = Array.isArray(verdict.required) ? verdict.required.join(' or ') : '';
-  return `${verdict.title} ${String(verdict.offered)}, wanted ${wanted}`;
+  return `${verdict.title} ${verdict.offered === null ? 'not known' : String(verdict.offered)}, wanted ${wanted}`;
 }
 
 const REASONS: Readonly<Record<string, string>> = {
@@ -30,6 +30,7 @@ const REASONS: Readonly<Record<string, string>> = {
   'no-counting-point': 'no point counts here',
   currency: 'another currency',
   'not-built': 'this check is not built yet',
+  'not-said': 'the stage does not say it',
   'typical-only': 'only a typical figure, too close after derating',
   estimated: 'an estimate, too close to decide',
   assumed: 'an assumed value, which cannot fail a part',

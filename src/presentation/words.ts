@@ -36,7 +36,16 @@ export const PARAMETER_WORDS: Readonly<Record<Parameter, string>> = {
   thermalResistance: 'thermal resistance',
   junctionTemperature: 'junction temperature',
   inputCrossover: 'input crossover region',
+  inputOverdrive: 'input overdrive',
+  overdriveCurrent: 'overdrive current',
+  differentialInput: 'differential input voltage',
+  overloadRecovery: 'overload recovery time',
+  startUpTime: 'start-up time',
+  supplyRejectionCorner: 'supply rejection corner',
 };
+
+/** What a list states in words. */
+const STATEMENT_WORDS: Readonly<Partial<Record<string, string>>> = { phaseReversal: 'phase reversal', inputClamp: 'input clamp' };
 
 /** Every check as a line of text begins with it. */
 export const CHECK_WORDS: Readonly<Record<CheckId, string>> = {
@@ -55,7 +64,9 @@ export const CHECK_WORDS: Readonly<Record<CheckId, string>> = {
   noise: 'noise',
   distortion: 'distortion',
   'dc-error': 'DC error',
+  'supply-ripple': 'supply ripple',
   settling: 'settling time',
+  'start-up': 'start-up',
   'frequency-error': 'frequency error',
   'supply-current': 'supply current',
   'temperature-low': 'lowest temperature',
@@ -90,10 +101,12 @@ export const SAYINGS: Readonly<Partial<Record<string, readonly [offered: string,
   'temperature-low': ['specified from', 'the stage goes down to'],
   'temperature-high': ['specified up to', 'the stage goes up to'],
   channels: ['has', 'wanted'],
+  clamp: ['inputs endure', 'the stage brings'],
+  overdrive: ['inputs endure', 'the stage brings'],
 };
 
 /** Checks whose excess is "over"; of the others a part is "short". */
-export const OVER: ReadonlySet<string> = new Set(['dc-error', 'supply-current', 'price', 'noise', 'distortion', 'settling', 'frequency-error', 'junction-temperature']);
+export const OVER: ReadonlySet<string> = new Set(['dc-error', 'supply-current', 'price', 'noise', 'distortion', 'settling', 'frequency-error', 'junction-temperature', 'supply-ripple', 'start-up']);
 
 export const KIND_WORDS: Readonly<Record<LimitKind, string>> = { min: 'minimum', typ: 'typical', max: 'maximum' };
 
@@ -113,6 +126,7 @@ export const REASON_WORDS: Readonly<Record<Reason, string>> = {
   'no-counting-point': 'no head-room point counts here',
   currency: 'priced in another currency, which is not converted',
   'not-built': 'this version has no such check',
+  'not-said': 'the stage does not say what it takes its inputs to',
   'typical-only': 'only a typical figure is known, and with its derating it does not reach',
   estimated: 'only an estimate, and it does not reach; as printed the figure would',
   assumed: 'rests on an assumption, which cannot fail a part',
@@ -120,7 +134,7 @@ export const REASON_WORDS: Readonly<Record<Reason, string>> = {
 };
 
 /** Of these a figure is better when it is larger, although its limit is a maximum, or smaller although it is a minimum. */
-const ENDS: ReadonlySet<string> = new Set(['supplyVoltage', 'temperature', 'supplyAbsoluteMaximum', 'capacitiveLoad', 'junctionTemperature']);
+const ENDS: ReadonlySet<string> = new Set(['supplyVoltage', 'temperature', 'supplyAbsoluteMaximum', 'capacitiveLoad', 'junctionTemperature', 'inputOverdrive', 'overdriveCurrent', 'differentialInput']);
 
 /** Which way from its turning point a figure passes. */
 export function passingSide(parameter: string, kind: LimitKind): 'less' | 'more' {
@@ -138,7 +152,7 @@ export function checkWords(check: string): string {
 
 /** A figure's words, `offset drift maximum` where the limit kind matters; identity columns are words already. */
 export function figureWords(figure: string, kind: LimitKind | null = null): string {
-  const words = isParameter(figure) ? PARAMETER_WORDS[figure] : figure;
+  const words = isParameter(figure) ? PARAMETER_WORDS[figure] : (STATEMENT_WORDS[figure] ?? figure);
   return kind === null ? words : `${words} ${KIND_WORDS[kind]}`;
 }
 

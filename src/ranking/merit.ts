@@ -1,6 +1,6 @@
 import { smallerIsBetter, weightedGeometricMean } from '../formulas/desirability.js';
+import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, FLOOR } from './comfort.js';
-import type { Weighed } from './placed.js';
 
 /** Fixed scales, so that adding or removing a part never reorders the rest: EUR, and A. */
 const PRICE = { target: 0.05, worst: 20 };
@@ -14,21 +14,29 @@ export interface Merit {
   readonly current: number;
 }
 
+/** How much each share counts, against the others. */
+export type ShareWeights = Readonly<Record<Share, number>>;
+export const SHARES = ['margins', 'price', 'current'] as const;
+export type Share = (typeof SHARES)[number];
+/** Equal shares: the order of the shortlist. */
+export const EQUAL: ShareWeights = { margins: 1, price: 1, current: 1 };
+
 /** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (M10). */
-export function meritOf(judged: Weighed): Merit {
+export function meritOf(judged: JudgedPart, weights: ShareWeights = EQUAL): Merit {
   const margins = marginShare(judged);
   const price = onLogScale(priceInEuro(judged), PRICE);
   const current = onLogScale(judged.current, CURRENT);
-  const total = weightedGeometricMean([margins, price, current].map((score) => ({ score, weight: 1 })));
+  const shares = { margins, price, current };
+  const total = weightedGeometricMean(SHARES.map((share) => ({ score: shares[share], weight: weights[share] })));
   return { total, margins, price, current };
 }
 
 /** Price for the order, EUR; another currency is not converted and counts as not known. */
-export function priceInEuro({ part }: Pick<Weighed, 'part'>): number | null {
+export function priceInEuro({ part }: JudgedPart): number | null {
   return part.price?.currency === 'EUR' ? part.price.amount : null;
 }
 
-function marginShare(judged: Weighed): number {
+function marginShare(judged: JudgedPart): number {
   const scores = judged.verdicts.map(comfortOf).filter((score) => score !== null);
   return scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
 }

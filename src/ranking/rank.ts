@@ -2,8 +2,7 @@ import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, marginForOrder } from './comfort.js';
 import { dominatorsOf } from './dominance.js';
 import { linesOf } from './family.js';
-import { meritOf, priceInEuro, type Merit } from './merit.js';
-import type { Placed } from './placed.js';
+import { meritOf, priceInEuro, type Merit, type ShareWeights } from './merit.js';
 
 export const ORDERS = ['merit', 'price', 'current', 'margin'] as const;
 export type Order = (typeof ORDERS)[number];
@@ -24,15 +23,47 @@ type Candidate = Omit<RankedPart, 'rank' | 'dominatedBy' | 'variants'>;
 
 /** Total order of what fits, one line a family: approved before generic, limits before typical, then merit; never depends on who else is there. */
 export function rank(fit: readonly JudgedPart[], order: Order = 'merit'): RankedPart[] {
-  const candidates: Candidate[] = fit.map((judged) => ({ ...judged, merit: meritOf(judged), tightest: tightestOf(judged) }));
+  const candidates = fit.map((judged) => candidateOf(judged));
   candidates.sort((a, b) => compareIn(order, a, b));
   const lines = linesOf(candidates);
   const dominators = dominatorsOf(lines.map(({ first }) => first));
   return lines.map(({ first, variants }, at) => ({ ...first, rank: at + 1, dominatedBy: dominators[at]?.part.id ?? null, variants }));
 }
 
+/** The place one more part that fits would take among ranked lines, and how many lines there would be; a variant shares the line of its family. */
+export function placeOf(judged: JudgedPart, fit: readonly RankedPart[], order: Order = 'merit'): { readonly rank: number; readonly of: number } {
+  const candidate: Candidate = { ...judged, merit: meritOf(judged), tightest: tightestOf(judged) };
+  const others = fit.filter((line) => line.part.id !== judged.part.id);
+  const ahead = others.filter((line) => compareIn(order, line, candidate) < 0);
+  const kin = others.find((line) => linesOf([line, candidate]).length === 1);
+  const leader = kin !== undefined && ahead.includes(kin) ? ahead.indexOf(kin) + 1 : ahead.length + 1;
+  return { rank: leader, of: others.length + (kin === undefined ? 1 : 0) };
+}
+
+function candidateOf(judged: JudgedPart, weights?: ShareWeights): Candidate {
+  return { ...judged, merit: meritOf(judged, weights), tightest: tightestOf(judged) };
+}
+
+/** The step that decides between two parts that fit, and its sign: below zero, the first is ahead. The order asked for is a step of its own. */
+export interface Decision {
+  readonly by: string;
+  readonly sign: number;
+}
+
+/** How two parts that fit stand to each other in this order, with shares weighed otherwise where that is asked. */
+export function decisionBetween(order: Order, [one, other]: readonly [JudgedPart, JudgedPart], weights?: ShareWeights): Decision {
+  const [a, b] = [candidateOf(one, weights), candidateOf(other, weights)];
+  const asked = FIRST[order](a, b);
+  if (asked !== 0) return { by: order, sign: Math.sign(asked) };
+  for (const { name, compare } of STEPS) {
+    const difference = compare(a, b);
+    if (difference !== 0) return { by: name, sign: Math.sign(difference) };
+  }
+  return { by: 'id', sign: 0 };
+}
+
 /** What decides between two: the steps of the order, each 0 when they are equal there. */
-export const STEPS: readonly { readonly name: string; readonly compare: (a: Placed, b: Placed) => number }[] = [
+export const STEPS: readonly { readonly name: string; readonly compare: (a: Candidate, b: Candidate) => number }[] = [
   { name: 'tier', compare: (a, b) => Number(a.part.tier === 'generic') - Number(b.part.tier === 'generic') },
   { name: 'proof', compare: (a, b) => Number(a.proof === 'typical') - Number(b.proof === 'typical') },
   { name: 'merit', compare: (a, b) => b.merit.total - a.merit.total },
@@ -42,21 +73,17 @@ export const STEPS: readonly { readonly name: string; readonly compare: (a: Plac
   { name: 'id', compare: (a, b) => (a.part.id < b.part.id ? -1 : a.part.id > b.part.id ? 1 : 0) },
 ];
 
-const FIRST: Record<Order, (a: Placed, b: Placed) => number> = {
+const FIRST: Record<Order, (a: Candidate, b: Candidate) => number> = {
   merit: () => 0,
   price: (a, b) => unknownLast(priceInEuro(a), priceInEuro(b)),
   current: (a, b) => unknownLast(a.current, b.current),
   margin: (a, b) => leastMargin(b) - leastMargin(a),
 };
 
-/** Step by step: the later ones cost more and seldom decide. */
-export function compareIn(order: Order, a: Placed, b: Placed): number {
-  let difference = FIRST[order](a, b);
-  for (const step of STEPS) {
-    if (difference !== 0) return difference;
-    difference = step.compare(a, b);
-  }
-  return difference;
+function compareIn(order: Order, a: Candidate, b: Candidate): number {
+  const first = FIRST[order](a, b);
+  if (first !== 0) return first;
+  return STEPS.map((step) => step.compare(a, b)).find((difference) => difference !== 0) ?? 0;
 }
 
 function unknownLast(a: number | null, b: number | null): number {
@@ -64,13 +91,12 @@ function unknownLast(a: number | null, b: number | null): number {
   return a - b;
 }
 
-function leastMargin(judged: Placed): number {
+function leastMargin(judged: JudgedPart): number {
   const margins = judged.verdicts.map(marginForOrder).filter((margin) => margin !== null);
   return Math.min(...margins, Number.MAX_VALUE);
 }
 
-/** The check with the least comfortable margin. */
-export function tightestOf(judged: JudgedPart): string | null {
+function tightestOf(judged: JudgedPart): string | null {
   const scored = judged.verdicts.flatMap((verdict) => {
     const score = comfortOf(verdict);
     return score === null ? [] : [{ check: verdict.check, score, margin: marginForOrder(verdict) ?? 0 }];

@@ -5,7 +5,8 @@ import { buildStage, type Stage } from '../stage/index.js';
 
 /** A kept stage file as it is now: a stage, or why it is none any more. */
 export type StageFile =
-  | { readonly ok: true; readonly stage: Stage }
+  /** `part`: the one the file itself names. */
+  | { readonly ok: true; readonly stage: Stage; readonly part: string | null }
   /** `gone`: no such file. `unreadable`: there, but it cannot be opened. `wrong`: what is in it is no stage. */
   | { readonly ok: false; readonly cause: 'gone' | 'unreadable' | 'wrong'; readonly problems: readonly Problem[] };
 
@@ -16,7 +17,7 @@ export function readStageFile(path: string, name: string): StageFile {
   const read = readStage(text, { file: name });
   if (!read.ok) return { ok: false, cause: 'wrong', problems: read.problems };
   const built = buildStage(read.spec);
-  return built.ok ? built : { ok: false, cause: 'wrong', problems: built.problems };
+  return built.ok ? { ...built, part: read.spec.part ?? null } : { ok: false, cause: 'wrong', problems: built.problems };
 }
 
 function textOf(path: string): string | Extract<StageFile, { ok: false }> {

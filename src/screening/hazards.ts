@@ -1,6 +1,10 @@
+import { reaches, stepOf, type CrossoverStep } from '../checks/crossover.js';
+import { staysWithinRails } from '../checks/phase-reversal.js';
 import type { Demands } from '../demands/index.js';
 import { headroomPoints, pointCurrent, type HeadroomPoint } from '../parts/headroom.js';
 import type { Part } from '../parts/part.js';
+import { readingsOf, type Readings } from '../parts/readings.js';
+import { circumstancesOf, type Circumstance } from './circumstances.js';
 
 /** What can go wrong with a part on this stage though every check passes. Numbers only; words come with the presenter. SI. */
 export type PartHazard =
@@ -8,8 +12,9 @@ export type PartHazard =
   | { readonly kind: 'phase-reversal' }
   /** Diodes join the inputs. */
   | { readonly kind: 'clamp' }
-  /** The stage takes the inputs where one input pair hands over to the other: both as distances below V+, V. */
-  | { readonly kind: 'crossover'; readonly region: Span; readonly inputs: Span }
+  /** The stage takes the inputs where one input pair hands over to the other: both as distances below V+, V; Hz; what the step amounts to. */
+  | { readonly kind: 'crossover'; readonly region: Span; readonly inputs: Span; readonly moves: boolean; readonly frequency: number | null; readonly step: CrossoverStep | null }
+  | Circumstance
   /** Near V- the output sinks no more than `current`; beyond, it stays `beyond` above V- instead of `within`. */
   | { readonly kind: 'sink-limit'; readonly current: number; readonly within: number; readonly beyond: number };
 
@@ -18,22 +23,35 @@ interface Span {
   readonly max: number;
 }
 
-/** Hazards of the input and output stages (M9); a word that is not known raises none, and pins that rest at the reference reverse no phase. */
+/**
+ * Hazards of the input and output stages (M9), and of what the stage says can happen to it. A word that is not known raises none by
+ * itself, and pins that rest at the reference reverse no phase. What the stage avoids is a verdict, no caution.
+ */
 export function hazardsOf(part: Part, demands: Demands): PartHazard[] {
+  const readings = readingsOf({ part, operating: demands.operating, strict: false, classWorst: null, outlook: 'pessimistic' });
   return [
-    ...(part.phaseReversal === true && !demands['input-high'].still ? [{ kind: 'phase-reversal' } as const] : []),
-    ...(part.inputClamp === true ? [{ kind: 'clamp' } as const] : []),
-    ...crossover(part, demands),
+    ...reversal(part, demands),
+    ...(part.inputClamp === true && !demands.clamp.avoided ? [{ kind: 'clamp' } as const] : []),
+    ...crossover(part, demands, readings),
     ...sinkLimit(part, demands),
+    ...circumstancesOf(part, demands, readings),
   ];
 }
 
-function crossover(part: Part, { 'input-high': asked }: Demands): PartHazard[] {
+function reversal(part: Part, { 'phase-reversal': asked }: Demands): PartHazard[] {
+  if (part.phaseReversal !== true || asked.avoided || asked.reach.still || staysWithinRails(asked)) return [];
+  return [{ kind: 'phase-reversal' }];
+}
+
+function crossover(part: Part, { crossover: asked }: Demands, readings: Readings): PartHazard[] {
   const end = (kind: 'min' | 'max'): number | undefined => part.figures.find((figure) => figure.parameter === 'inputCrossover' && figure.kind === kind)?.value;
   const [min, max] = [end('min'), end('max')];
-  if (min === undefined || max === undefined) return [];
-  const inputs = { min: asked.required, max: asked.farthest };
-  return inputs.max > min && inputs.min < max ? [{ kind: 'crossover', region: { min, max }, inputs }] : [];
+  if (asked.avoided || part.crossoverFree === true || min === undefined || max === undefined) return [];
+  const region = { min, max };
+  if (!reaches(asked, region)) return [];
+  const rejection = readings.figure('commonModeRejection');
+  const { inputs, moves, frequency } = asked;
+  return [{ kind: 'crossover', region, inputs, moves, frequency, step: rejection === null ? null : stepOf(asked, region, rejection) }];
 }
 
 /** A resistance loses at most as many times more as the current grows; a step beyond three times that is another device taking over. */

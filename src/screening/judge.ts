@@ -1,4 +1,4 @@
-import { CHECKS, type AnyCheck } from '../checks/index.js';
+import { CHECKS } from '../checks/index.js';
 import { CHECK_IDS, type Demands, type UnbuiltDemand } from '../demands/index.js';
 import { classesOf } from '../parts/classes.js';
 import type { Part } from '../parts/part.js';
@@ -50,33 +50,34 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
   };
 }
 
-function verdictsOf(run: Judging, part: Part): Verdict[] {
+/** The verdicts of one part in the order of the checks; `only` these checks where given. */
+export function verdictsOf(run: Judging, part: Part, only?: ReadonlySet<string>): Verdict[] {
   const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
   const best = readingsOf({ part, ...rulesFor(run, part), outlook: 'optimistic' });
-  const built = CHECKS.flatMap((check) => verdictOn(check, run.demands, [worst, best]) ?? []);
+  const built = CHECKS.flatMap((check) => {
+    if (only !== undefined && !only.has(check.id)) return [];
+    const pessimistic = check.judge(run.demands, worst);
+    const optimistic = check.judge(run.demands, best);
+    return pessimistic === null || optimistic === null ? [] : [decide(check, pessimistic, optimistic)];
+  });
   const order = (verdict: Verdict): number => (CHECK_IDS as readonly string[]).indexOf(verdict.check);
-  return [...built, ...run.demands.unbuilt.map(notBuilt)].sort((a, b) => order(a) - order(b));
+  return [...built, ...(only === undefined ? run.demands.unbuilt.map(notBuilt) : [])].sort((a, b) => order(a) - order(b));
 }
 
-/** One check on the pessimistic and the optimistic readings of a part; null where it does not apply. */
-export function verdictOn(check: AnyCheck, demands: Demands, [worst, best]: readonly [Readings, Readings]): Verdict | null {
-  const pessimistic = check.judge(demands, worst);
-  const optimistic = check.judge(demands, best);
-  return pessimistic === null || optimistic === null ? null : decide(check, pessimistic, optimistic);
-}
-
-function rulesFor(run: Judging, part: Part): ReadingRules {
+/** How the figures of a part are read in this run. */
+export function rulesFor(run: Judging, part: Part): ReadingRules {
   const classWorst = part.class === null ? null : (run.classes.get(part.class) ?? null);
   return { operating: run.demands.operating, strict: run.strict, classWorst };
 }
 
-/** A limit this version has no check for is met by nobody, and failed by nobody. */
+/** A limit whose check does not exist leaves every part open. */
 export function notBuilt(demand: UnbuiltDemand): Verdict {
   const finding = { kind: 'undecided', required: demand.required, unit: demand.unit, sense: demand.sense, cause: 'not-built', missing: [] } as const;
   return decide({ id: demand.check, title: demand.check.replaceAll('-', ' '), hasMargin: true }, finding, finding);
 }
 
-function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
+/** One failing check is enough; unknown is never a pass. */
+export function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
   if (verdicts.some((verdict) => verdict.outcome === 'fail')) return 'does-not-fit';
   return verdicts.some((verdict) => verdict.outcome === 'unknown') ? 'undecided' : 'fits';
 }

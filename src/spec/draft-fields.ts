@@ -70,6 +70,7 @@ function toldWith(path: string, { live, coupling, topology, examples }: DraftPla
     [!has('signal.output') && examples['signal.output'] === undefined, { paths: ['signal.output'], lead: 'In place of gain, or as a cross-check' }],
     [topology === 'sallen-key-low-pass', { paths: ['resistors.feedback', 'resistors.input'], lead: 'With a gain above 1' }],
     [topology === 'integrator' && coupling === 'ac', { paths: ['limits.dcError'], lead: 'With integrator.window' }],
+    [true, { paths: ['limits.supplyRipple'], lead: 'With supplyRipple' }],
     [true, { paths: ['signal.edge'], lead: 'With shape step or pulse' }],
     [true, { paths: ['signal.duty'], lead: 'With shape pulse' }],
   ];

@@ -1,5 +1,6 @@
 import type { FieldRow } from './field.js';
 import { TOPOLOGIES } from './spec.js';
+import { HAZARD_FIELDS, HAZARD_LIMITS } from './hazard-fields.js';
 import { LIMIT_FIELDS } from './limit-fields.js';
 import { SENSE_FIELDS } from './sense-fields.js';
 import { SHAPING_FIELDS } from './shaping-fields.js';
@@ -46,5 +47,6 @@ const SURROUNDING_FIELDS: readonly FieldRow[] = [
 
 /** Every field of the stage file, in the order it is told. */
 export const FIELDS: readonly FieldRow[] = [
-  ...CIRCUIT_FIELDS, ...SENSE_FIELDS, ...SHAPING_FIELDS, ...SIGNAL_FIELDS, ...SURROUNDING_FIELDS, ...READOUT_FIELDS, ...LIMIT_FIELDS, ...TEAM_FIELDS,
+  ...CIRCUIT_FIELDS, ...SENSE_FIELDS, ...SHAPING_FIELDS, ...SIGNAL_FIELDS, ...SURROUNDING_FIELDS, ...READOUT_FIELDS, ...HAZARD_FIELDS, ...LIMIT_FIELDS,
+  ...HAZARD_LIMITS, ...TEAM_FIELDS,
 ];

@@ -22,6 +22,8 @@ export function readLimits(draft: Draft): LimitsSpec {
     phaseMargin: readValue(draft, 'limits.phaseMargin'),
     junctionTemperature: readValue(draft, 'limits.junctionTemperature'),
     frequencyError: readValue(draft, 'limits.frequencyError'),
+    supplyRipple: readValue(draft, 'limits.supplyRipple'),
+    startUp: readValue(draft, 'limits.startUp'),
   });
 }
 

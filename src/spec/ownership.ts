@@ -40,6 +40,9 @@ const OWNERS: Readonly<Record<string, readonly Topology[] | undefined>> = {
   'signal.differential': ['difference'],
   'signal.commonMode': ['difference'],
   source: [...ONE_INPUT, 'difference'],
+  overdrive: except('transimpedance', 'relaxation-oscillator'),
+  sequencing: except('transimpedance', 'relaxation-oscillator'),
+  supplyRipple: AMPLIFYING,
   following: AMPLIFYING,
   converter: AMPLIFYING,
   'limits.swingLoss': AMPLIFYING,
@@ -52,6 +55,7 @@ const OWNERS: Readonly<Record<string, readonly Topology[] | undefined>> = {
   'limits.settling': AMPLIFYING,
   'limits.phaseMargin': AMPLIFYING,
   'limits.frequencyError': ['relaxation-oscillator'],
+  'limits.supplyRipple': AMPLIFYING,
 };
 
 /** The fields some topology lacks, maps before what is in them. */

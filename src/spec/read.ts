@@ -4,6 +4,8 @@ import { parseTree } from './document.js';
 import type { Draft } from './draft.js';
 import { emptyDraft } from './draft.js';
 import { readGain } from './gain.js';
+import { hazardContradictions } from './hazard-contradictions.js';
+import { readHazards } from './hazards.js';
 import { readLimits } from './limits.js';
 import { applyOverrides } from './overrides.js';
 import { inOrder, problemAt } from './problems.js';
@@ -35,34 +37,47 @@ export interface ReadOptions {
  * never throws on any text.
  */
 export function readStage(text: string | null, options: ReadOptions = {}): SpecResult {
-  const overrides = options.overrides ?? [];
-  const draft = emptyDraft(text === null ? undefined : options.file, text !== null);
-  if (text !== null && !readFile(draft, text, overrides.length > 0)) return { ok: false, problems: draft.problems };
-  applyOverrides(draft, overrides);
-  drawConsequences(draft);
-  const spec = readFields(draft);
-  if (spec !== null && draft.problems.length === 0) return { ok: true, spec };
-  return { ok: false, problems: inOrder(draft.problems, overrides.map(({ option }) => option)) };
+  return stageReader(text, options.file)(options.overrides ?? []);
 }
 
-/** False when nothing more can be said about the file. */
-function readFile(draft: Draft, text: string, hasOverrides: boolean): boolean {
+/** As `readStage`, for one file under many options: the text is taken apart once. */
+export function stageReader(text: string | null, file?: string): (overrides: readonly Override[]) => SpecResult {
+  const opened = emptyDraft(text === null ? undefined : file, text !== null);
+  const state = text === null ? 'open' : readFile(opened, text);
+  return (overrides) => {
+    const draft = copyOf(opened);
+    if (state === 'empty' && overrides.length === 0) refuseEmpty(draft);
+    if (state === 'unreadable' || (state === 'empty' && overrides.length === 0)) return { ok: false, problems: draft.problems };
+    applyOverrides(draft, overrides);
+    drawConsequences(draft);
+    const spec = readFields(draft);
+    if (spec !== null && draft.problems.length === 0) return { ok: true, spec };
+    return { ok: false, problems: inOrder(draft.problems, overrides.map(({ option }) => option)) };
+  };
+}
+
+function copyOf(draft: Draft): Draft {
+  const { fields, positions, problems, notes } = draft;
+  return { ...draft, fields: new Map(fields), positions: new Map(positions), problems: [...problems], notes: [...notes] };
+}
+
+/** `unreadable`: nothing more can be said about the file. */
+function readFile(draft: Draft, text: string): 'open' | 'empty' | 'unreadable' {
   const parsed = parseTree({ text, file: draft.file });
   draft.problems.push(...parsed.problems);
-  if (!parsed.ok) return false;
-  if (parsed.root === null || isEmpty(parsed.root)) return hasOverrides || refuseEmpty(draft);
+  if (!parsed.ok) return 'unreadable';
+  if (parsed.root === null || isEmpty(parsed.root)) return 'empty';
   const flat = flatten(parsed.root, { path: '', keyAt: { line: 1, column: 1 }, file: draft.file });
   draft.problems.push(...flat.problems);
   for (const [path, node] of flat.fields) draft.fields.set(path, node);
   for (const [path, position] of flat.positions) draft.positions.set(path, position);
-  return parsed.root.kind === 'branch';
+  return parsed.root.kind === 'branch' ? 'open' : 'unreadable';
 }
 
-function refuseEmpty(draft: Draft): false {
+function refuseEmpty(draft: Draft): void {
   const message = 'the stage file is empty; a stage needs at least topology, supply and signal.input';
   const fix = 'topology: non-inverting\nsupply: 5 V ± 5 %\ngain: 8\nsignal: {input: 25 mV..330 mV}';
   draft.problems.push(problemAt({ path: '', at: { line: 1, column: 1 }, file: draft.file }, { code: 'S102', message, fix }));
-  return false;
 }
 
 function readFields(draft: Draft): StageSpec | null {
@@ -72,7 +87,8 @@ function readFields(draft: Draft): StageSpec | null {
   const supply = readInterval(draft, 'supply');
   const written = readOthers(draft, topology);
   const positions = Object.fromEntries(draft.positions);
-  if (draft.problems.length > 0) draft.problems.push(...supplyContradictions({ ...written, ...present({ supply }), positions, file: draft.file }));
+  const found = { ...written, ...present({ supply }), positions, file: draft.file };
+  if (draft.problems.length > 0) draft.problems.push(...supplyContradictions(found), ...hazardContradictions(found));
   if (topology === undefined || supply === undefined) return null;
   return { ...written, topology, supply, notes: draft.notes, positions };
 }
@@ -95,11 +111,13 @@ function readOthers(draft: Draft, topology: StageSpec['topology'] | undefined): 
     following: readFollowing(draft),
     converter: readConverter(draft),
     battery: readBattery(draft),
+    ...readHazards(draft),
     temperature: readInterval(draft, 'temperature'),
     limits: readLimits(draft),
     wishes: readWishes(draft),
     margins: readMargins(draft),
     mayChange: readPaths(draft, 'mayChange'),
+    part: readText(draft, 'part'),
     avoid: readChoices<Hazard>(draft, 'avoid') ?? [],
   });
 }

@@ -1,3 +1,4 @@
+import type { Problem } from '../quantities/problem.js';
 import type { Draft } from './draft.js';
 import { legNames } from './leg-names.js';
 import { FILTERS, ONE_INPUT } from './ownership.js';
@@ -10,6 +11,7 @@ export function refuseMissing(draft: Draft, topology: Topology | undefined): voi
   const isRefused = topology === undefined && isWritten(draft, 'topology');
   for (const path of ['topology', 'supply']) if (!isWritten(draft, path)) refuseAbsent(draft, path);
   for (const [map, keys] of Object.entries(WHOLE_WHEN_WRITTEN)) if ([...draft.fields.keys()].some((path) => isUnder(path, map))) refuseMissingKeys(draft, map, keys);
+  if (draft.fields.has('limits.supplyRipple') && !isWrittenWithin(draft, 'supplyRipple')) refuseAbsent(draft, 'supplyRipple');
   if (isRefused) return;
   if (topology === undefined || ONE_INPUT.includes(topology)) refuseMissingInput(draft);
   if (topology !== undefined) refuseMissingOwn(draft, topology);
@@ -21,6 +23,8 @@ const WHOLE_WHEN_WRITTEN: Readonly<Record<string, readonly string[]>> = {
   following: ['corner', 'order'],
   converter: ['bits', 'range'],
   battery: ['capacity'],
+  supplyRipple: ['amplitude', 'frequency'],
+  dutyCycle: ['on', 'every'],
 };
 
 /** What a topology is fed with or made of, and cannot do without. */
@@ -91,9 +95,16 @@ function missingBoth(draft: Draft): void {
   refuse(draft, 'signal', { code: 'S102', message: 'signal.positive and signal.negative are missing; accepted: these two, or signal.differential and signal.commonMode', fix });
 }
 
-/** Also true when the field, or the map around it, was refused for its structure. */
+/** Also true when the field, or the map around it, was refused for its structure, or is offered in place of a key that is none. */
 function isWritten(draft: Draft, path: string): boolean {
-  return draft.positions.has(path) || draft.problems.some(({ place }) => place?.path !== undefined && isUnder(path, place.path));
+  return draft.positions.has(path) || draft.problems.some((problem) => [problem.place?.path, meantPath(problem)].some((refused) => refused !== undefined && isUnder(path, refused)));
+}
+
+/** What a misspelt key was told to be: it is not missing besides. */
+function meantPath({ code, fix, place }: Problem): string | undefined {
+  if (code !== 'S101' || fix === undefined || place?.path === undefined) return undefined;
+  const level = place.path.slice(0, place.path.lastIndexOf('.') + 1);
+  return fix.includes('.') ? fix : level + fix;
 }
 
 /** True when the map, or anything in it, is written. */

@@ -200,6 +200,9 @@ export interface LimitsSpec {
   readonly junctionTemperature?: Value;
   /** Oscillator: fraction. */
   readonly frequencyError?: Value;
+  /** Ripple at the output, peak volts; time to a usable output, s. */
+  readonly supplyRipple?: Value;
+  readonly startUp?: Value;
 }
 
 export interface WishesSpec {
@@ -217,6 +220,21 @@ export interface MarginsSpec {
   /** Volts. */
   readonly outputHeadroom?: Value;
 }
+
+/** Ripple on the supply: peak volts, Hz. */
+export interface RippleSpec {
+  readonly amplitude: Value;
+  readonly frequency: Value;
+}
+
+/** The supply is on for so long in every period, s. */
+export interface DutyCycleSpec {
+  readonly on: Value;
+  readonly every: Value;
+}
+
+/** What is there first, the supply or the signal. */
+export type Sequence = 'supply-first' | 'signal-first';
 
 export type Hazard = 'crossover' | 'phase-reversal' | 'clamp' | 'overdrive';
 
@@ -252,6 +270,11 @@ export interface StageSpec {
   readonly following?: FollowingSpec;
   readonly converter?: ConverterSpec;
   readonly battery?: BatterySpec;
+  /** How far beyond either rail an input can be taken, V. */
+  readonly overdrive?: Value;
+  readonly sequencing?: Sequence;
+  readonly supplyRipple?: RippleSpec;
+  readonly dutyCycle?: DutyCycleSpec;
   readonly source?: { readonly resistance: Value; readonly tolerance?: Value };
   readonly load?: LoadSpec;
   readonly temperature?: Interval;
@@ -259,6 +282,8 @@ export interface StageSpec {
   readonly wishes: WishesSpec;
   readonly margins: MarginsSpec;
   readonly mayChange?: readonly string[];
+  /** Id of the part chosen for the stage. */
+  readonly part?: string;
   readonly avoid: readonly Hazard[];
   /** Things the reader did on the user's behalf (overrides), one sentence each; printed as assumptions. */
   readonly notes: readonly string[];

@@ -24,4 +24,5 @@ export const TEAM_FIELDS: readonly FieldRow[] = [
   { path: 'margins.outputHeadroom', shape: 'quantity', kind: 'voltage', bounds: { from: 0, why: 'extra head-room is never negative (limits.swingLoss gives swing up)' }, accepted: 'a voltage: 20 mV', example: '20 mV', meaning: 'extra distance to each rail at the output; default 0' },
   { path: 'mayChange', shape: 'paths', accepted: 'a list of fields: [limits.dcError, gain]', example: '[limits.dcError, gain]', meaning: 'what "what would let it in" may touch' },
   { path: 'avoid', shape: 'choices', words: HAZARDS, accepted: HAZARDS.join(', '), example: '[crossover]', meaning: 'hazards that fail a part instead of being a caution' },
+  { path: 'part', shape: 'text', accepted: 'the id of a part, as railfit parts lists it', example: 'GX-CMOS-1M-RRIO', meaning: 'the part chosen for the stage: railfit check tells whether it still fits' },
 ];

@@ -56,7 +56,7 @@ function readItems(draft: Draft, path: string, complain: (word: string) => Compl
 }
 
 /** What may never be what "would let it in" touches: it names or steers, it asks nothing. */
-const STEERING: readonly string[] = ['name', 'mayChange', 'avoid'];
+const STEERING: readonly string[] = ['name', 'mayChange', 'avoid', 'part'];
 
 function pathComplaint(word: string): Complaint | null {
   if (!STEERING.includes(word)) return unknownPath(word);

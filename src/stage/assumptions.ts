@@ -84,6 +84,7 @@ function defaults(spec: StageSpec): string[] {
     [limits.swingLoss === undefined && !oscillates, 'swing loss 0 V: the whole wanted swing must be there'],
     [limits.gainError === undefined && signal.frequency !== undefined && !oscillates, 'gain error 1 % at the top frequency'],
     [!oscillates && unasked(spec) !== null, unasked(spec) ?? ''],
+    [spec.dutyCycle !== undefined && spec.battery !== undefined, 'battery life counts the stage as always on'],
     [supplyPeak === undefined, 'supply peak is the top of the supply'],
   ];
   return taken.filter(([applies]) => applies).map(([, sentence]) => sentence);

@@ -1,10 +1,12 @@
 import type { Problem } from '../quantities/problem.js';
 import type { StageSpec, Topology } from '../spec/spec.js';
+import { hazardContradictions } from '../spec/hazard-contradictions.js';
 import { supplyContradictions } from '../spec/supply-contradictions.js';
 import { makeDifference, makeFollower, makeInverting, makeNonInverting } from './amplifier-makers.js';
 import { assumptionsOf, bypassCautions, gainCautions } from './assumptions.js';
 import type { Circuit, RatioCorner } from './circuit.js';
 import { contradictionsOf } from './contradictions.js';
+import { endsOf } from './ends.js';
 import type { Excitation } from './excitation.js';
 import { capacitorTolerance } from './filter-response.js';
 import { gainAgainstResistors, toleranceOf } from './fitted.js';
@@ -15,6 +17,7 @@ import type { Made, Maker, Settled } from './making.js';
 import { makeMultipleFeedback } from './multiple-feedback-low-pass.js';
 import { makeOscillator } from './relaxation-oscillator.js';
 import { referenceAt, referenceEnds } from './reference.js';
+import { rippleCautions } from './ripple.js';
 import { makeSallenKey } from './sallen-key-low-pass.js';
 import { settle } from './settle.js';
 import type { Stage } from './stage.js';
@@ -45,7 +48,7 @@ const MAKERS: Readonly<Record<Topology, Maker>> = {
 /** The circuit a specification implies, or every contradiction in it. Errors are problems, never exceptions. */
 export function buildStage(spec: StageSpec): StageResult {
   const built = impliedBy(spec);
-  if (!built.ok) return { ok: false, problems: [...built.problems, ...supplyContradictions(spec)] };
+  if (!built.ok) return { ok: false, problems: [...built.problems, ...supplyContradictions(spec), ...hazardContradictions(spec)] };
   const problems = contradictionsOf(spec, built.stage, rebuilt);
   return problems.length > 0 ? { ok: false, problems } : built;
 }
@@ -93,8 +96,9 @@ function assemble(spec: StageSpec, settled: Settled, made: Made): Stage {
     sourceSpread: spec.signal.coupling === 'ac' ? 0 : (spec.source?.resistance.value ?? 0) * (spec.source?.tolerance?.value ?? 0),
     referenceTolerance: reference.value.nominal === 0 ? 0 : (reference.value.max - reference.value.min) / 2 / reference.value.nominal,
     referenceResistance: reference.resistance?.value ?? 0,
+    ends: endsOf(spec, reference),
     asked: askedOf(spec),
-    cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...made.cautions],
+    cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...rippleCautions(spec, circuit, { reference, centre: drive.centre }), ...made.cautions],
     assumptions: assumptionsOf(spec, circuit, [...settled.notes, ...made.fitNotes]),
   };
 }
@@ -145,8 +149,12 @@ function motionOf(spec: StageSpec, { response, excitation: drive }: Made, step: 
   return { kind: 'edge', step, edge: edge?.value ?? null, form: 'singlePole', start: 2 * drive.stepShare - 1 };
 }
 
-function askedOf({ limits, wishes, margins, avoid, following, converter, battery }: StageSpec): Stage['asked'] {
-  return { limits, wishes, margins, avoid, following: following ?? null, converter: converter ?? null, battery: battery ?? null };
+function askedOf(spec: StageSpec): Stage['asked'] {
+  const { limits, wishes, margins, avoid, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle } = spec;
+  return {
+    limits, wishes, margins, avoid, following: following ?? null, converter: converter ?? null, battery: battery ?? null,
+    overdrive: overdrive ?? null, sequencing: sequencing ?? null, supplyRipple: supplyRipple ?? null, dutyCycle: dutyCycle ?? null,
+  };
 }
 
 function nominalOutput(circuit: Circuit, drive: Excitation, at: { reference: number; supply: number }): { min: number; max: number } {

@@ -1,6 +1,7 @@
 import { formatQuantity } from '../quantities/format.js';
 import type { Problem } from '../quantities/problem.js';
 import { contradiction } from '../spec/contradiction.js';
+import { hazardContradictions } from '../spec/hazard-contradictions.js';
 import { supplyContradictions } from '../spec/supply-contradictions.js';
 import type { StageSpec, Topology } from '../spec/spec.js';
 import { gainForm } from './gain-form.js';
@@ -17,7 +18,7 @@ export function contradictionsOf(spec: StageSpec, stage: Stage, rebuild: Rebuild
     return built !== null && supplyContradictions(tried).length <= idle(spec) && isWithinSupply(built) && outputDisagrees(tried, built) === null;
   };
   const found = [beyondSupply(spec, stage, () => wayInside(spec, stage, { rebuild, accepts })), outputDisagrees(spec, stage)];
-  return [...found.filter((one) => one !== null), ...supplyContradictions(spec)];
+  return [...found.filter((one) => one !== null), ...supplyContradictions(spec), ...hazardContradictions(spec)];
 }
 
 /** A peak below the supply stays whatever is done about gain and reference. */

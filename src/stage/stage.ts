@@ -1,6 +1,9 @@
 import type { PinNetwork } from '../formulas/pin-network.js';
-import type { BatterySpec, ConverterSpec, FollowingSpec, Hazard, LimitsSpec, MarginsSpec, SignalShape, Topology, WishesSpec } from '../spec/spec.js';
+import type {
+  BatterySpec, ConverterSpec, DutyCycleSpec, FollowingSpec, Hazard, LimitsSpec, MarginsSpec, RippleSpec, Sequence, SignalShape, Topology, Value, WishesSpec,
+} from '../spec/spec.js';
 import type { GainUnit } from './circuit.js';
+import type { StageEnds } from './ends.js';
 import type { StageResponse } from './response.js';
 
 /**
@@ -120,6 +123,8 @@ export interface Stage {
   /** Relative half-width of the reference and its series resistance, Ω; 0 of a stiff, exact one. */
   readonly referenceTolerance: number;
   readonly referenceResistance: number;
+  /** What stands at the outer ends, for drawings. */
+  readonly ends: StageEnds;
   /** What the stage does not do as it was asked, one sentence each. */
   readonly cautions: readonly string[];
   readonly assumptions: readonly string[];
@@ -136,4 +141,9 @@ export interface Asked {
   readonly following: FollowingSpec | null;
   readonly converter: ConverterSpec | null;
   readonly battery: BatterySpec | null;
+  /** V beyond either rail; null: not said. */
+  readonly overdrive: Value | null;
+  readonly sequencing: Sequence | null;
+  readonly supplyRipple: RippleSpec | null;
+  readonly dutyCycle: DutyCycleSpec | null;
 }

@@ -23,7 +23,7 @@ export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: F
   const best = standingOf(optimistic);
   const outcome: Outcome = worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
   const [shown, other] = outcome === 'fail' ? [optimistic, pessimistic] : [pessimistic, optimistic];
-  if (shown.kind === 'words') return wordVerdict(check, outcome, shown);
+  if (shown.kind === 'words') return wordVerdict(check, outcome, { finding: shown, best: offeredOf(other) });
   const basis = basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
   const remedies = outcome === 'pass' ? [] : remediesOf(pessimistic);
   return verdictOf(check, { outcome, shown: shownOf(shown, outcome), whole: shown, other, basis, remedies });
@@ -148,10 +148,14 @@ function reasonOf(shown: SingleFinding, basis: Basis): Reason {
   return shown.kind === 'numbers' ? REASONS[basis] : shown.cause;
 }
 
-function wordVerdict(check: CheckIdentity, outcome: Outcome, finding: WordFinding): Verdict {
+function wordVerdict(check: CheckIdentity, outcome: Outcome, { finding, best }: { readonly finding: WordFinding; readonly best: Verdict['offeredBest'] }): Verdict {
+  const { required, offered, notes, measures } = finding;
+  const basis = finding.basis ?? 'guaranteed';
   return {
-    check: check.id, title: check.title, outcome, required: finding.required, offered: finding.offered, offeredBest: finding.offered,
-    unit: null, sense: 'one-of', margin: null, spare: null, basis: 'guaranteed', standsOn: 'guaranteed', worstAt: null, terms: [], rss: null,
-    known: null, reason: null, missing: [], decidesAt: null, turnsAt: null, cautions: [], slot: null, how: null,
+    check: check.id, title: check.title, outcome, required, offered, offeredBest: best,
+    unit: null, sense: 'one-of', margin: null, spare: null, basis: outcome === 'unknown' ? null : basis, standsOn: basis, worstAt: null, terms: [], rss: null,
+    known: null, reason: outcome === 'unknown' ? REASONS[basis] : null, missing: [], decidesAt: null, turnsAt: null, cautions: [], slot: null, how: null,
+    ...(notes === undefined || notes.length === 0 ? {} : { notes }),
+    ...(measures === undefined ? {} : { measures }),
   };
 }

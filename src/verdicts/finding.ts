@@ -26,7 +26,7 @@ export interface TurningPoint {
 
 /** A missing figure that kept a check from being decided. */
 export interface Missing {
-  readonly figure: Parameter | 'channels' | 'package' | 'qualification' | 'status' | 'lifecycle' | 'price';
+  readonly figure: Parameter | 'phaseReversal' | 'inputClamp' | 'channels' | 'package' | 'qualification' | 'status' | 'lifecycle' | 'price';
   readonly kind: LimitKind | null;
   /** Points are known, but none that reaches the current that flows. */
   readonly beyond?: Beyond;
@@ -60,6 +60,16 @@ export interface Remarks {
   /** The same result as engineers also say it, one sentence each. */
   readonly notes?: readonly string[];
   readonly remedies?: readonly Remedy[];
+  /** Numbers that belong to the finding and are not compared: size of a step, how often it comes. */
+  readonly measures?: readonly Measure[];
+}
+
+/** A number beside a finding, worst reading, SI. */
+export interface Measure {
+  readonly name: string;
+  readonly value: number;
+  readonly unit: string;
+  readonly basis: Basis;
 }
 
 interface Common extends Remarks {
@@ -94,7 +104,7 @@ export interface BoundFinding extends Common {
   readonly cause: Cause;
 }
 
-export type Cause = 'missing-figure' | 'beyond-data' | 'no-counting-point' | 'currency' | 'not-built';
+export type Cause = 'missing-figure' | 'beyond-data' | 'no-counting-point' | 'currency' | 'not-built' | 'not-said';
 
 /** Nothing to compare. */
 export interface UndecidedFinding {
@@ -110,10 +120,12 @@ export interface UndecidedFinding {
 }
 
 /** Words: the part's word must be one of those required. */
-export interface WordFinding {
+export interface WordFinding extends Pick<Remarks, 'notes' | 'measures'> {
   readonly kind: 'words';
   readonly required: readonly string[];
   readonly offered: string;
+  /** What the word rests on; a limit when not said. */
+  readonly basis?: Basis;
 }
 
 export type SingleFinding = NumberFinding | BoundFinding | UndecidedFinding;

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { requireBuilt, ROOT } from '../support/built.js';
 import { makeWorkplace, type Ran, type Workplace } from '../support/railfit.js';
+import { workbookBytes, type WorkbookSheets } from '../support/workbook.js';
 import { onTerminal, type Place } from '../support/terminal.js';
 
 const SAMPLES = join(ROOT, 'tests', 'intake', 'samples');
@@ -218,5 +219,32 @@ describe('a mapping that cannot be kept or read', () => {
     const ran = await run('wide.csv', '--dry-run');
     expect(ran.stderr).not.toContain('mapping');
     expect(ran.stderr).not.toContain('declared');
+  });
+});
+
+describe('a workbook', () => {
+  const save = (name: string, sheets: WorkbookSheets): void => writeFileSync(join(place.folder, name), workbookBytes(sheets));
+
+  it('is imported with the sheet in every origin, and remembered by its headers', async () => {
+    save('house.xlsx', { Cover: [['Team list']], Approved: [['Part number', 'Status', 'Vos max (mV)'], ['W-1', 'Approved', 3]] });
+    const asked = await run('house.xlsx', '--no-input');
+    expect(asked).toMatchObject({ exit: 3, stdout: '' });
+    expect(asked.stderr).toContain('fix: --sheet "Cover" or --sheet "Approved"');
+    const ran = await run('house.xlsx', '--sheet', 'Approved');
+    expect(ran).toMatchObject({ exit: 0, stdout: expect.stringMatching(/^Imported 1 part from house\.xlsx \[Approved\]/u) as string });
+    expect((await railfit('part', 'W-1')).stdout).toContain('house.xlsx [Approved] row 2, C');
+    expect(await run('house.xlsx')).toMatchObject({ exit: 0, stdout: expect.stringMatching(/no change/u) as string });
+  });
+
+  it('with a fault names sheet and cell', async () => {
+    save('faulty.xlsx', { Approved: [['id', 'bias current max (pA)'], ['W-1', '5 mV']] });
+    const ran = await run('faulty.xlsx');
+    expect(ran).toMatchObject({ exit: 3, stdout: '' });
+    expect(ran.stderr).toContain('--> faulty.xlsx [Approved] row 2, column B "bias current max (pA)", part W-1');
+  });
+
+  it('in the older format is refused with what to do', async () => {
+    writeFileSync(join(place.folder, 'old.xls'), Uint8Array.from([0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1]));
+    expect(await run('old.xls')).toMatchObject({ exit: 3, stdout: '', stderr: expect.stringContaining('save it without password as .xlsx') as string });
   });
 });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { combinedRejection, leakThrough, rejectionOfResistors, resistorLimitedRejection } from '../../src/formulas/rejection.js';
+import { combinedRejection, leakThrough, rejectionAbove, rejectionOfResistors, resistorLimitedRejection } from '../../src/formulas/rejection.js';
 import { example, refuses } from '../support/examples.js';
 
 describe('common-mode rejection', () => {
@@ -14,4 +14,15 @@ describe('common-mode rejection', () => {
   refuses(() => rejectionOfResistors({ r1: 0, r2: 1, r3: 1, r4: 1 }), 'rejectionOfResistors: r1 must be finite, above 0, but is 0');
   refuses(() => combinedRejection([1, 0]), 'combinedRejection: rejection must be finite, above 0, but is 0');
   refuses(() => leakThrough(-1, 1), 'leakThrough: change must be finite, at least 0, but is -1');
+});
+
+describe('rejection above its corner', () => {
+  example('rejectionAbove(10e3, {frequency: 10e3, corner: 100})', () => rejectionAbove(10e3, { frequency: 10e3, corner: 100 }), 99.995);
+  it('is 3 dB down at the corner, flat below, and does not fall without one', () => {
+    expect(rejectionAbove(1e4, { frequency: 100, corner: 100 })).toBeCloseTo(1e4 / Math.SQRT2, 6);
+    expect(rejectionAbove(1e4, { frequency: 0, corner: 100 })).toBe(1e4);
+    expect(rejectionAbove(1e4, { frequency: 1e9, corner: Infinity })).toBe(1e4);
+  });
+  refuses(() => rejectionAbove(1e4, { frequency: 1e3, corner: 0 }), 'rejectionAbove: corner must be finite, above 0, but is 0');
+  refuses(() => rejectionAbove(0, { frequency: 1e3, corner: 1 }), 'rejectionAbove: rejection must be finite, above 0, but is 0');
 });

@@ -43,10 +43,18 @@ export const DOCUMENTS: readonly GoldenCase[] = [
   ]),
   { file: 'shortlist.all.json', words: ['shortlist', PROBE, '--json', '--all'], exit: 0 },
   { file: 'shortlist.asked.json', words: ['shortlist', PROBE, '--json', '--top', '2', '--strict', '--order', 'price', '--assume', `${UNDECIDED}.offsetDrift=4µV/K`], exit: 0 },
+  { file: 'lookups.json', words: ['shortlist', PROBE, '--lookups', '--json'], exit: 0 },
   { file: 'shortlist.csv', words: ['shortlist', PROBE, '--csv'], exit: 0 },
   { file: 'explain.fits.json', words: ['explain', FITS, PROBE, '--json'], exit: 0 },
   { file: 'explain.undecided.json', words: ['explain', UNDECIDED, PROBE, '--json'], exit: 4 },
   { file: 'explain.rejected.json', words: ['explain', REJECTED, PROBE, '--json'], exit: 1 },
+  { file: 'explain.changes.json', words: ['explain', 'GX-CMOS-1M-RRIO', PROBE, '--json'], exit: 1 },
+  { file: 'shortlist.nothing-fits.json', words: ['shortlist', PROBE, '--set', 'limits.supplyCurrent=200 nA', '--json'], exit: 1 },
+  { file: 'predict.json', words: ['predict', FITS, PROBE, '--json'], exit: 0 },
+  { file: 'predict.compared.csv', words: ['predict', FITS, '--compare', REJECTED, PROBE, '--csv'], exit: 0 },
+  { file: 'comparison.json', words: ['explain', FITS, PROBE, '--against', REJECTED, '--json'], exit: 0 },
+  { file: 'comparison.fits.json', words: ['explain', 'HOUSE-01', PROBE, '--against', FITS, '--json'], exit: 0 },
+  { file: 'sweep.json', words: ['sweep', PROBE, '--over', 'supply=1V..5.5V', '--steps', '10', '--json'], exit: 0 },
   { file: 'parts.json', words: ['parts', '--json'], exit: 0 },
   { file: 'parts.failing.json', words: ['parts', '--failing', 'dc-error', '--stage', PROBE, '--json'], exit: 0 },
   { file: 'parts.csv', words: ['parts', '--csv'], exit: 0, told: 'note: 1 cell starts like a formula and got an apostrophe in front; import takes it off again, --raw leaves it out\n' },
@@ -62,6 +70,16 @@ export const DOCUMENTS: readonly GoldenCase[] = [
   { file: 'problems.surroundings.json', words: ['demands', 'nowhere.yaml', '--json'], exit: 5 },
 ];
 
+const MADE = ['--time', '2026-03-14T09:30:00Z'];
+
+/** In this order: the second judges again what the first wrote. */
+export const REPORTS: readonly GoldenCase[] = [
+  { file: 'report.json', words: ['report', PROBE, '--json', '--top', '1', ...MADE, '-o', 'review.html'], exit: 0, told: 'wrote review.html; railfit verify review.html judges it again\n' },
+  { file: 'report.md', words: ['report', PROBE, 'reference-buffer.yaml', '--format', 'md', '--top', '3', ...MADE], exit: 0 },
+  { file: 'verification.json', words: ['verify', 'review.html', '--json'], exit: 0 },
+  { file: 'verification.txt', words: ['verify', 'review.html'], exit: 0 },
+];
+
 const WIDTHS = [40, 60, 80, 100, 200];
 
 const TEXTS: readonly { readonly name: string; readonly words: readonly string[]; readonly exit: number }[] = [
@@ -69,6 +87,7 @@ const TEXTS: readonly { readonly name: string; readonly words: readonly string[]
   { name: 'explain.fits', words: ['explain', FITS, PROBE], exit: 0 },
   { name: 'explain.undecided', words: ['explain', UNDECIDED, PROBE], exit: 4 },
   { name: 'explain.rejected', words: ['explain', REJECTED, PROBE], exit: 1 },
+  { name: 'predict', words: ['predict', FITS, PROBE], exit: 0 },
   { name: 'demands', words: ['demands', PROBE], exit: 0 },
   { name: 'check', words: ['check', PROBE, 'reference-buffer.yaml'], exit: 2 },
   { name: 'stages', words: ['stages'], exit: 0 },
@@ -88,8 +107,11 @@ export const TEXT_CASES: readonly GoldenCase[] = [
     { file: `text/${name}.100.colour.txt`, words: [...words, '--color=always'], exit, env: atWidth(100) },
   ]),
   ...STAGES.filter((stage) => `${stage}.yaml` !== PROBE).map((stage) => ({ file: `text/shortlist.${stage}.100.txt`, words: ['shortlist', `${stage}.yaml`], exit: 0, env: atWidth(100) })),
+  { file: 'text/predict.compared.100.txt', words: ['predict', FITS, '--compare', REJECTED, PROBE], exit: 0, env: atWidth(100) },
   { file: 'text/shortlist.all.100.txt', words: ['shortlist', PROBE, '--all'], exit: 0, env: atWidth(100) },
   { file: 'text/explain.sources.100.txt', words: ['explain', REJECTED, PROBE, '--all', '--sources'], exit: 1, env: atWidth(100) },
+  ...[40, 100].map((width) => ({ file: `text/lookups.${width}.txt`, words: ['shortlist', PROBE, '--lookups'], exit: 0, env: atWidth(width) })),
+  { file: 'text/explain.formulas.100.txt', words: ['explain', REJECTED, PROBE, '--formulas'], exit: 1, env: atWidth(100) },
   { file: 'text/shortlist.nothing-fits.100.txt', words: ['shortlist', PROBE, '--set', 'limits.supplyCurrent=1 µA'], exit: 1, env: atWidth(100) },
 ];
 

@@ -9,7 +9,7 @@ import { dirname, join, relative } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { requireBuilt } from '../support/built.js';
 import { makeWorkplace, type Ran, type Workplace } from '../support/railfit.js';
-import { COLOUR_CASES, DOCUMENTS, IMPORTS, TEXT_CASES, type GoldenCase } from './cases.js';
+import { COLOUR_CASES, DOCUMENTS, IMPORTS, REPORTS, TEXT_CASES, type GoldenCase } from './cases.js';
 
 const FOLDER = import.meta.dirname;
 const UPDATING = process.env['UPDATE'] === '1';
@@ -48,6 +48,10 @@ describe('imports, in order', () => {
   it.each(IMPORTS)('$file', hold);
 });
 
+describe('reports, in order', () => {
+  it.each(REPORTS)('$file', hold);
+});
+
 describe.concurrent('documents', () => {
   it.each(DOCUMENTS)('$file', hold);
 });
@@ -65,7 +69,7 @@ describe.skipIf(UPDATING).concurrent('colour says nothing that the words do not'
 });
 
 it('holds no file that no run writes', () => {
-  const known = new Set([...IMPORTS, ...DOCUMENTS, ...TEXT_CASES].map(({ file }) => file).concat(BY_HAND));
+  const known = new Set([...IMPORTS, ...REPORTS, ...DOCUMENTS, ...TEXT_CASES].map(({ file }) => file).concat(BY_HAND));
   // The files in demo/ belong to tests/scenarios/demo-walk.test.ts.
   const found = readdirSync(FOLDER, { recursive: true, encoding: 'utf8' }).filter((name) => statSync(join(FOLDER, name)).isFile() && !name.endsWith('.ts') && !name.startsWith('demo'));
   expect(found.map((name) => relative(FOLDER, join(FOLDER, name)).replaceAll('\\', '/')).filter((name) => !known.has(name))).toEqual([]);

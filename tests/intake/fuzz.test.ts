@@ -5,6 +5,8 @@ import { describe, expect, it } from 'vitest';
 import type { ListResult } from '../../src/intake/list.js';
 import { readList } from '../../src/intake/read-list.js';
 import { recordsOf } from '../../src/intake/records.js';
+import { damaged, WOUNDS } from '../support/damage.js';
+import { faultsOf } from '../support/whole.js';
 
 // Whatever a file holds: a list or a refusal with its reasons, never an exception, and no row that is lost without a word.
 
@@ -15,35 +17,11 @@ function read(bytes: Uint8Array): ListResult {
   return readList(bytes, { file: 'list.csv', tier: 'approved' });
 }
 
-/** Every row that holds something is a part, a repetition that was told, or the list is refused. */
 function holds(result: ListResult): void {
-  if (!result.ok) {
-    expect(result.problems.some(({ severity }) => severity === 'error')).toBe(true);
-    expect(result.problems.every(({ code, message }) => /^[IQ]\d{3}$/u.test(code) && message !== '')).toBe(true);
-    return;
-  }
-  const repeated = result.warnings.filter(({ code }) => code === 'I401').length;
-  expect(result.records).toHaveLength(result.parts.length);
-  expect(new Set(result.parts.map(({ id }) => id)).size).toBe(result.parts.length);
-  const rows = new Set(result.records.map(({ row }) => row));
-  expect(rows.size + repeated).toBeGreaterThanOrEqual(result.parts.length);
-  for (const { figures } of result.parts) for (const { value } of figures) expect(Number.isFinite(value)).toBe(true);
+  expect(faultsOf(result)).toEqual([]);
 }
 
-const damage = fc.record({ at: fc.nat(), kind: fc.constantFrom('flip', 'drop', 'double', 'cut', 'insert'), byte: fc.nat(255) });
-
-function damaged(bytes: Uint8Array, wounds: readonly { at: number; kind: string; byte: number }[]): Uint8Array {
-  let text = [...bytes];
-  for (const { at, kind, byte } of wounds) {
-    const place = text.length === 0 ? 0 : at % text.length;
-    if (kind === 'flip') text[place] = byte;
-    else if (kind === 'drop') text.splice(place, 1);
-    else if (kind === 'double') text.splice(place, 0, ...text.slice(place, place + 20));
-    else if (kind === 'cut') text = text.slice(0, place);
-    else text.splice(place, 0, byte);
-  }
-  return Uint8Array.from(text);
-}
+const damage = fc.record({ at: fc.nat(), kind: fc.constantFrom(...WOUNDS), byte: fc.nat(255) });
 
 describe('reading never throws and never half-reads', () => {
   it('damaged samples', { timeout: 120_000 }, () => {

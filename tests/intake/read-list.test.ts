@@ -19,7 +19,7 @@ describe('a list that is read', () => {
     expect(first).toEqual({
       id: '0012', tier: 'approved', description: 'Plain, low power', status: 'approved', lifecycle: 'nrnd', package: 'SOT-23-5', channels: 1,
       qualification: 'AEC-Q100 grade 1', class: 'GX-1', family: 'F1', price: { amount: 0.14, currency: 'EUR', quantity: 1000 },
-      phaseReversal: false, inputClamp: true, inputType: 'fet',
+      phaseReversal: false, inputClamp: true, inputType: 'fet', crossoverFree: null,
       figures: [
         { parameter: 'supplyVoltage', kind: 'min', value: 1.8, condition: {} },
         { parameter: 'outputLowHeadroom', kind: 'max', value: 0.03, condition: { load: { kind: 'resistance', ohms: 2000, to: 'ground' } } },
@@ -27,7 +27,7 @@ describe('a list that is read', () => {
     });
     expect(second).toEqual({
       id: '1E10', tier: 'approved', description: null, status: 'not-approved', lifecycle: 'last-time-buy', package: null, channels: 2,
-      qualification: 'none', class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: 'bipolar', figures: [],
+      qualification: 'none', class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: 'bipolar', crossoverFree: null, figures: [],
     });
   });
 

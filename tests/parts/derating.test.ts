@@ -6,6 +6,8 @@ describe('the derating table', () => {
     expect(TYPICAL_FACTOR).toEqual({
       slewRate: 0.6, gainBandwidth: 0.6, offsetVoltage: 3, offsetDrift: 3, biasCurrent: 4, offsetCurrent: 4, quiescentCurrent: 1.4,
       voltageNoise: 1.25, currentNoise: 1.25, commonModeRejection: 1 / 3.16, supplyRejection: 1 / 3.16, openLoopGain: 1 / 3.16,
+      // What goes with the speed of the part.
+      supplyRejectionCorner: 0.6, overloadRecovery: 1 / 0.6, startUpTime: 1 / 0.6,
     });
   });
 

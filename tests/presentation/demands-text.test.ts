@@ -145,11 +145,12 @@ describe('what a stage asks', () => {
             hold
     "
   `); });
-  it('says where no amplifier can help, and what this version does not judge', () => {
-    const text = renderDemands(sampleDemands({ 'signal.input': '0 mV..330 mV', avoid: 'crossover' }), styleOf(100));
-    expect(text.split('\n').filter((line) => /note:|not judged by this version \(|crossover  /u.test(line))).toMatchInlineSnapshot(`
+  it('says where no amplifier can help, and what the stage avoids', () => {
+    const text = renderDemands(sampleDemands({ 'signal.input': '0 mV..330 mV', avoid: '[crossover, overdrive]' }), styleOf(100));
+    expect(text.split('\n').filter((line) => /note:|not judged by this version \(|crossover  |overdrive  /u.test(line))).toMatchInlineSnapshot(`
       [
-        " input crossover      not judged by this version  the stage file writes it: avoid; method [12]",
+        " input crossover      not reached                the stage takes the inputs 2.67 V..4.2 V below V+,",
+        " overdrive            the stage does not say it  the stage does not say whether an input can leave",
         "note: No amplifier meets output low: at the rail no output stage is left any room. limits.swingLoss",
       ]
     `);

@@ -64,6 +64,8 @@ describe('a shortlist with something that fits', () => {
       2: 0.38 EUR cheaper, slew rate
       300 mV/us against 100 mV/us, gain
       bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share
+      turns it: proof decides.
 
     Why the other 2 are out (one part can
     fail several checks):
@@ -138,6 +140,7 @@ describe('a shortlist with something that fits', () => {
       against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew
       rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz
       against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1
@@ -194,6 +197,7 @@ describe('a shortlist with something that fits', () => {
       against 31.3 mV, head-room to V+ 46.1 mV against 52.2 mV, DC error 966 µV
       against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against
       100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -242,6 +246,7 @@ describe('a shortlist with something that fits', () => {
       1: 27 µA less supply current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV
       against 52.2 mV, DC error 966 µV against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate
       300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -285,6 +290,7 @@ describe('a shortlist with something that fits', () => {
       current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV against 52.2 mV, DC error 966 µV against
       8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against
       300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -327,6 +333,7 @@ describe('a shortlist with something that fits', () => {
 
     Why 1 is ahead of 2: 1 rests on limits only, 2 partly on figures that are not limits. In favour of 1: 27 µA less supply current, head-room to V- 25.2 mV against 31.3 mV, head-room to V+ 46.1 mV
       against 52.2 mV, DC error 966 µV against 8.61 mV. In favour of 2: 0.38 EUR cheaper, slew rate 300 mV/µs against 100 mV/µs, gain bandwidth 600 kHz against 300 kHz.
+      No price and no weight of a share turns it: proof decides.
 
     Why the other 2 are out (one part can fail several checks):
       slew rate 1    gain bandwidth 1    DC error 1    supply current 1    status 1
@@ -439,8 +446,8 @@ describe('a shortlist where nothing fits', () => {
     expect(report.fit.map((one) => one.part.id)).toContain('TEAM-0005');
   });
 
-  it('says that a limit cannot be judged by this version, once', () => {
-    expect(shown(100, {}, { avoid: 'crossover' })).toMatchInlineSnapshot(`
+  it('says what the stage would have to say of a hazard it avoids', () => {
+    expect(shown(100, {}, { avoid: 'overdrive' })).toMatchInlineSnapshot(`
       "
       No part is proven to fit; 4 of 6 parts cannot be decided. The others fail slew rate (1), gain
       bandwidth (1), DC error (1), supply current (1) and 1 more check. Nearest is TEAM-0001 (A): DC error
@@ -452,13 +459,14 @@ describe('a shortlist where nothing fits', () => {
               (197 mV..2.69 V at the corners), up to 2 kHz
       Supply  3 V..4.2 V single, peak 4.5 V    Load  10 kΩ to ground    Temperature  -20 °C..60 °C
       Limits  DC error at the output ≤ 40 mV, supply current per amplifier ≤ 90 µA, gain error ≤ 1 %,
-              1 channel, status approved, no crossover
+              1 channel, status approved, no overdrive
 
-       This version does not judge input crossover: while the stage asks for it no part is proven to fit.
-       ?  TEAM-0005 (A) 350 kHz, zero-drift - passes every check that is judged
-       ?  TEAM-0012 (A) 1 MHz, low offset - passes every check that is judged
-       ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less
-       ?  GX-LV-1M (G) 1 MHz, 2 mV offset - passes every check that is judged
+       ?  TEAM-0005 (A) 350 kHz, zero-drift - overdrive: the stage does not say what it takes its inputs
+            to
+       ?  TEAM-0012 (A) 1 MHz, low offset - overdrive: the stage does not say what it takes its inputs to
+       ?  TEAM-0031 (A) 1 MHz, 1 mV offset - offset drift unknown: passes if 80.5 µV/°C or less;
+            overdrive: the stage does not say what it takes its inputs to
+       ?  GX-LV-1M (G) 1 MHz, 2 mV offset - overdrive: the stage does not say what it takes its inputs to
 
        A on the approved list; G generic set: a class of parts, not something to order; ? cannot be
        decided
@@ -479,6 +487,13 @@ describe('a shortlist where nothing fits', () => {
               railfit parts --failing slew-rate --stage probe.yaml    all that fail on slew rate
       "
     `);
+  });
+
+  it('counts a hundred and more that are out', () => {
+    const [one] = sampleReport({ 'limits.supplyCurrent': '0.5 µA' }).rejected;
+    const many = Array.from({ length: 104 }, (_, number) => (one === undefined ? [] : [{ ...one.part, id: `SAME-${number}` }])).flat();
+    const text = renderShortlist(sampleReport({ 'limits.supplyCurrent': '0.5 µA' }, many), styleOf(100), CONTEXT);
+    expect(text).toContain('Why all 104 are out (one part can fail several checks):');
   });
 
   it('says that the catalog is empty', () => {

@@ -33,7 +33,7 @@ describe('words', () => {
 
 describe('crossover', () => {
   it('is told with both distances below V+, as the corners have them', () => {
-    expect(crossing(0.8, 1.3)).toEqual([{ kind: 'crossover', region: { min: 0.8, max: 1.3 }, inputs: { min: 1, max: 3.2 } }]);
+    expect(crossing(0.8, 1.3)).toEqual([{ kind: 'crossover', region: { min: 0.8, max: 1.3 }, inputs: { min: 1, max: 3.2 }, moves: true, frequency: null, step: null }]);
   });
 
   it('starts where the inputs enter the region, and not at its edge', () => {

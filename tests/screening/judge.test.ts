@@ -70,7 +70,6 @@ describe('every check', () => {
     const spec = { ...SPEC, limits: { ...SPEC.limits, frequencyError: value(0.01) } };
     expect(judged(spec, FULL).outcome).toBe('undecided');
     expect(verdictOrNull('frequency-error', spec, FULL)).toMatchObject({ outcome: 'unknown', reason: 'not-built', required: 0.01, sense: 'at-most', offered: null });
-    expect(verdictOrNull('crossover', { ...SPEC, avoid: ['crossover'] }, FULL)).toMatchObject({ outcome: 'unknown', reason: 'not-built' });
   });
 });
 

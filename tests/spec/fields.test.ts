@@ -19,6 +19,7 @@ const ACCEPTED: readonly Accepted[] = [
   ['supply: 5 V +5/-10 %', (s) => [s.supply.min, s.supply.nominal, s.supply.max], [4.5, 5, 5.25]],
   ['supply: 3.0/3.6/4.2 V', (s) => [s.supply.min, s.supply.nominal, s.supply.max], [3, 3.6, 4.2]],
   ['supply: 3V3', (s) => s.supply.nominal, 3.3],
+  ['part: GX-CMOS-1M-RRIO', (s) => s.part, 'GX-CMOS-1M-RRIO'],
   ['supplyPeak: 6 V', (s) => s.supplyPeak?.value, 6],
   ['supplyPeak: max 6 V', (s) => s.supplyPeak, { value: 6, text: '6 V' }],
   ['gain: 20 dB', (s) => s.gain?.value, 10],
@@ -167,6 +168,7 @@ const REFUSED: readonly Refused[] = [
   ['mayChange: [limits.dcErorr]', 'S101'],
   ['mayChange: [name]', 'S104'],
   ['avoid: [clamping]', 'S104'],
+  ['part: [GX-CMOS-1M-RRIO]', 'S103'],
   ['photodiode: {current: 0..2 µA}', 'S108'],
 ];
 
@@ -191,7 +193,7 @@ describe('every field', () => {
 
   it('has a tested form', () => {
     // The last lines stand for the tests of a difference stage, below, and of the topologies, which have a file of their own.
-    const elsewhere = ['resistors.positiveInput resistors.toReference signal.negative signal.differential signal.commonMode', readFileSync(new URL('topologies.test.ts', import.meta.url), 'utf8'), 'legs.NAME'];
+    const elsewhere = ['resistors.positiveInput resistors.toReference signal.negative signal.differential signal.commonMode', ...['topologies.test.ts', 'hazards.test.ts'].map((name) => readFileSync(new URL(name, import.meta.url), 'utf8')), 'legs.NAME'];
     const tested = [...ACCEPTED.map(([text]) => text), BASE, ...elsewhere].join('\n');
     for (const { path } of FIELDS) expect(tested, path).toContain(path.slice(path.lastIndexOf('.') + 1));
   });

@@ -60,7 +60,7 @@ describe('an override', () => {
          1 V to
               ^
          fix: 25 mV..330 mV
-      error[S101]: --set gian: gian is not a field of the stage file, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: --set gian: gian is not a field of the stage file, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
          fix: gain
       error[S102]: --set limits.settling: limits.settling.to is missing; accepted: a percentage: 0.1 %
          fix: --set "limits.settling.to=0.1 %"

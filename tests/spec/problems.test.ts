@@ -32,7 +32,7 @@ mayChange: [limits.dcErorr]
          4.2..3.0 V
          ^^^^^^^^^^
          fix: 3.0..4.2 V
-      error[S101]: gian: gian is not a key of a stage, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: gian: gian is not a key of a stage, did you mean gain? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
         --> stage.yaml:3:1
          fix: gain
       error[Q002]: resistors.feedback: 10M has no unit: SI and IEC 60062 read mega (10 MΩ), SPICE reads milli (10 mΩ)
@@ -81,7 +81,7 @@ mayChange: [limits.dcErorr]
          aproved
          ^^^^^^^
          fix: approved
-      error[S101]: mayChange: limits.dcErorr is not a field of the stage file, did you mean limits.dcError? accepted under limits: swingLoss, gainError, gainErrorKind, dcError, outputNoise, snr, distortion, supplyCurrent, supplyCurrentPer, settling, phaseMargin, junctionTemperature, frequencyError
+      error[S101]: mayChange: limits.dcErorr is not a field of the stage file, did you mean limits.dcError? accepted under limits: swingLoss, gainError, gainErrorKind, dcError, outputNoise, snr, distortion, supplyCurrent, supplyCurrentPer, settling, phaseMargin, junctionTemperature, frequencyError, supplyRipple, startUp
         --> stage.yaml:14:13
          limits.dcErorr
          ^^^^^^^^^^^^^^
@@ -111,19 +111,19 @@ describe('fields and words', () => {
   it('names what was probably meant', () => {
     expect(printedAll(withLines('supply_peak: 6 V\ndcError: 5 mV\nfrequency: 2 kHz\nlimits.dcError: 5 mV\nquux: 1'))).toMatchInlineSnapshot(`
       "
-      error[S101]: supply_peak: supply_peak is not a key of a stage, did you mean supplyPeak? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: supply_peak: supply_peak is not a key of a stage, did you mean supplyPeak? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
         --> stage.yaml:5:1
          fix: supplyPeak
-      error[S101]: dcError: dcError is not a key of a stage, did you mean limits.dcError? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: dcError: dcError is not a key of a stage, did you mean limits.dcError? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
         --> stage.yaml:6:1
          fix: limits.dcError
-      error[S101]: frequency: frequency is not a key of a stage, did you mean signal.frequency? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: frequency: frequency is not a key of a stage, did you mean signal.frequency? accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
         --> stage.yaml:7:1
          fix: signal.frequency
       error[S101]: limits.dcError: limits.dcError is written as one map in the other
         --> stage.yaml:8:1
          fix: limits: {dcError: 20 mV}
-      error[S101]: quux: quux is not a key of a stage; accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, limits, wishes, margins, mayChange, avoid
+      error[S101]: quux: quux is not a key of a stage; accepted: name, topology, supply, supplyPeak, gain, resistors, reference, legs, photodiode, shunt, filter, integrator, oscillator, drives, capacitors, signal, source, load, temperature, following, converter, battery, overdrive, sequencing, supplyRipple, dutyCycle, limits, wishes, margins, mayChange, avoid, part
         --> stage.yaml:9:1
          fix: leave it out
       "

@@ -8,13 +8,14 @@ describe('the table of fields', () => {
     expect(acceptedKeys('')).toEqual([
       'name', 'topology', 'supply', 'supplyPeak', 'gain', 'resistors', 'reference',
       'legs', 'photodiode', 'shunt', 'filter', 'integrator', 'oscillator', 'drives', 'capacitors',
-      'signal', 'source', 'load', 'temperature', 'following', 'converter', 'battery', 'limits', 'wishes', 'margins', 'mayChange', 'avoid',
+      'signal', 'source', 'load', 'temperature', 'following', 'converter', 'battery',
+      'overdrive', 'sequencing', 'supplyRipple', 'dutyCycle', 'limits', 'wishes', 'margins', 'mayChange', 'avoid', 'part',
     ]);
     expect(keysPerLevel()['limits.settling']).toEqual(['within', 'to']);
     expect(acceptedKeys('legs.trim')).toEqual(['input', 'amplitude', 'resistance', 'gain']);
     expect(Object.keys(keysPerLevel())).toEqual([
       '', 'resistors', 'reference', 'legs', 'legs.NAME', 'photodiode', 'shunt', 'filter', 'integrator', 'oscillator', 'drives', 'capacitors',
-      'signal', 'source', 'load', 'following', 'converter', 'battery', 'limits', 'limits.settling', 'wishes', 'margins',
+      'signal', 'source', 'load', 'following', 'converter', 'battery', 'supplyRipple', 'dutyCycle', 'limits', 'limits.settling', 'wishes', 'margins',
     ]);
   });
 

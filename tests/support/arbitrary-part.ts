@@ -14,6 +14,8 @@ const RANGES: Readonly<Record<Parameter, readonly [number, number]>> = {
   quiescentCurrent: [1e-6, 1e-2], outputCurrent: [1e-3, 0.2], shortCircuitCurrent: [1e-3, 0.4], phaseMargin: [30, 80], unityCrossover: [1e4, 5e8],
   outputResistance: [10, 1e4], capacitiveLoad: [1e-11, 1e-8], inputCapacitance: [1e-12, 2e-11], temperature: [-55, 150],
   thermalResistance: [30, 300], junctionTemperature: [100, 175], inputCrossover: [0.5, 2.5],
+  inputOverdrive: [0.1, 1], overdriveCurrent: [1e-4, 0.05], differentialInput: [0.3, 40], overloadRecovery: [1e-7, 1e-2], startUpTime: [1e-7, 0.1],
+  supplyRejectionCorner: [1, 1e5],
 };
 
 const KIND_RANK: Readonly<Record<LimitKind, number>> = { min: 0, typ: 1, max: 2 };
@@ -91,6 +93,7 @@ const anyPart = fc.record({
   phaseReversal: maybe(fc.boolean()),
   inputClamp: maybe(fc.boolean()),
   inputType: maybe(fc.constantFrom('fet' as const, 'bipolar' as const)),
+  crossoverFree: maybe(fc.boolean()),
   figures,
 });
 

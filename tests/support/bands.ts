@@ -1,5 +1,6 @@
 import type { Part } from '../../src/parts/part.js';
 import type { Band, Relation } from './band-figures.js';
+import { HAZARD_RELATIONS } from './hazard-bands.js';
 import { INPUT_RELATIONS } from './input-bands.js';
 import { NOISE_RELATIONS } from './noise-bands.js';
 import { OUTPUT_RELATIONS } from './output-bands.js';
@@ -15,7 +16,7 @@ export interface Violation {
   readonly unit: string;
 }
 
-export const RELATIONS: readonly Relation[] = [...SPEED_RELATIONS, ...NOISE_RELATIONS, ...INPUT_RELATIONS, ...OUTPUT_RELATIONS];
+export const RELATIONS: readonly Relation[] = [...SPEED_RELATIONS, ...NOISE_RELATIONS, ...INPUT_RELATIONS, ...OUTPUT_RELATIONS, ...HAZARD_RELATIONS];
 
 /** Room for decimal figures in binary, relative. */
 const ROUNDING = 1e-9;

@@ -59,7 +59,7 @@ export function demandsOf(bench: Bench, asked: Asked): Demands {
 export function partWith(figures: readonly Figure[]): Part {
   return {
     id: 'bench', tier: 'approved', description: null, status: null, lifecycle: null, package: null, channels: null, qualification: null,
-    class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null, figures,
+    class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null, crossoverFree: null, figures,
   };
 }
 

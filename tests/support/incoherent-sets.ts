@@ -19,10 +19,13 @@ const PICO = 1e-12;
 const MEGA = 1e6;
 const ratioOf = (decibels: number): number => 10 ** (decibels / 20);
 
+/** Nothing is said of what goes with the gain bandwidth. */
+const SILENT: Changes = { 'overloadRecovery.typ': null, 'startUpTime.typ': null, 'supplyRejectionCorner.typ': null };
+
 /** Where one relation reads what another reads too, the other's figure is left unknown. */
 export const INCOHERENT: readonly IncoherentSet[] = [
   but('a bipolar pair that is steered with 24 mV', 'slew rate against gain bandwidth', 'GX-BIP-MICRO', { 'slewRate.typ': 0.03 * MEGA }),
-  but('5 MHz from 7.5 µA', 'gain bandwidth against current', 'GX-CMOS-MICRO', { 'gainBandwidth.typ': 5 * MEGA, 'slewRate.typ': 2 * MEGA, 'unityCrossover.typ': 4.4 * MEGA, 'capacitiveLoad.max': null }),
+  but('5 MHz from 7.5 µA', 'gain bandwidth against current', 'GX-CMOS-MICRO', { 'gainBandwidth.typ': 5 * MEGA, 'slewRate.typ': 2 * MEGA, 'unityCrossover.typ': 4.4 * MEGA, 'capacitiveLoad.max': null, ...SILENT }),
   but('unity gain beyond the gain bandwidth', 'unity crossover against gain bandwidth', 'GX-CMOS-1M-RRIO', { 'unityCrossover.typ': 1.4 * MEGA, 'capacitiveLoad.max': null }),
   but('a pole at half a millihertz', 'open-loop gain against gain bandwidth', 'GX-NANO', { 'openLoopGain.typ': ratioOf(146) }),
   but('an amplifier with a gain of 1000', 'open-loop gain', 'GX-BIP-GS', { 'openLoopGain.min': ratioOf(60) }),
@@ -40,7 +43,7 @@ export const INCOHERENT: readonly IncoherentSet[] = [
   but('10 nV/K with 150 µV', 'drift against offset', 'GX-CMOS-TRIM', { 'offsetDrift.max': 10 * NANO }),
   but('chopped, and 2 mV', 'offset without 1/f noise', 'GX-ZD-MICRO', { 'offsetVoltage.max': 2 * MILLI, 'offsetVoltage.typ': null, 'offsetDrift.max': 3 * MICRO }),
   but('160 dB of common-mode rejection', 'common-mode rejection', 'GX-CMOS-1M-GS', { 'commonModeRejection.min': ratioOf(160) }),
-  but('20 dB of supply rejection', 'supply rejection', 'GX-CMOS-LN', { 'supplyRejection.min': ratioOf(20) }),
+  but('20 dB of supply rejection', 'supply rejection', 'GX-CMOS-LN', { 'supplyRejection.min': ratioOf(20), 'supplyRejectionCorner.typ': null }),
   but('two pairs of 4 mV each, and 5 µV of step', 'rejection across the crossover', 'GX-CMOS-1M-RRIO', { 'commonModeRejection.min': ratioOf(120) }),
   but('inputs 2 V short of V+, on 1.8 V', 'input range at the lowest supply', 'GX-CMOS-1M-GS', { 'inputHighHeadroom.max': 2 }),
   but('a hand-over 3 V below V+, on 1.8 V', 'crossover inside the supply', 'GX-CMOS-1M-RRIO', { 'inputCrossover.max': 3 }),
@@ -56,6 +59,12 @@ export const INCOHERENT: readonly IncoherentSet[] = [
   but('rated at 5 V, works to 4.8 V', 'rows on supplies the part works on', 'GX-ELECTRO-FINE', { 'supplyVoltage.max': 4.8 }),
   but('destroyed at its operating maximum', 'absolute against operating maximum', 'GX-CMOS-LN', { 'supplyAbsoluteMaximum.max': 5.5 }),
   but('a junction cooler than the air', 'junction above ambient', 'GX-CMOS-LN', { 'junctionTemperature.max': 120 }),
+  but('inputs that endure 5 V beyond a rail', 'input rating beyond a rail', 'GX-CMOS-LN', { 'inputOverdrive.max': 5 }),
+  but('an ampere into a pin', 'current into an input beyond a rail', 'GX-CMOS-LN', { 'overdriveCurrent.max': 1 }),
+  but('inputs 60 V apart on 36 V', 'differential rating against the supply', 'GX-HV-CMOS', { 'differentialInput.max': 60 }),
+  but('recovered before it can move', 'overload recovery against gain bandwidth', 'GX-CMOS-LN', { 'overloadRecovery.typ': NANO }),
+  but('awake within a nanosecond', 'start-up against gain bandwidth', 'GX-CMOS-LN', { 'startUpTime.typ': NANO }),
+  but('84 dB of supply rejection at a megahertz', 'supply rejection corner against gain bandwidth', 'GX-CMOS-LN', { 'supplyRejectionCorner.typ': MEGA }),
 ];
 
 function but(...[claim, relation, id, changes]: [string, string, string, Changes]): IncoherentSet {

@@ -27,7 +27,7 @@ export function partOf(figures: readonly Figure[], identity: Partial<Part> = {})
 
 const UNKNOWN: Omit<Part, 'figures'> = {
   id: 'P-1', tier: 'approved', description: null, status: null, lifecycle: null, package: null, channels: null, qualification: null,
-  class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null,
+  class: null, family: null, price: null, phaseReversal: null, inputClamp: null, inputType: null, crossoverFree: null,
 };
 
 export const euro = (amount: number): Part['price'] => ({ amount, currency: 'EUR', quantity: 1000 });

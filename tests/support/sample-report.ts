@@ -49,7 +49,7 @@ const COMMON: readonly Row[] = [
 
 const BLANK: Omit<Part, 'id' | 'figures'> = {
   tier: 'approved', description: null, status: 'approved', lifecycle: 'active', package: 'SOT-23-5', channels: 1, qualification: null,
-  class: null, family: null, price: null, phaseReversal: false, inputClamp: null, inputType: 'fet',
+  class: null, family: null, price: null, phaseReversal: false, inputClamp: null, inputType: 'fet', crossoverFree: null,
 };
 
 function part(id: string, identity: Partial<Part>, rows: readonly Row[]): Part {

@@ -12,6 +12,9 @@ export interface Analysis {
 /** Options of a group of simulations: starting the simulator alone takes seconds on a busy machine. */
 export const SIMULATED = { timeout: 60_000 };
 
+/** How an operating point was found is no complaint, as long as it was. */
+const STEPPING = /^Note: (?:Starting dynamic gmin stepping|Dynamic gmin stepping completed)$/u;
+
 let started: Promise<Simulation> | undefined;
 
 /**
@@ -22,7 +25,7 @@ export async function spice(netlist: string): Promise<Analysis> {
   const simulation = await (started ??= start());
   simulation.setNetList(netlist);
   const result = await simulation.runSim();
-  const complaints = simulation.getError().filter((line) => line.trim() !== '');
+  const complaints = simulation.getError().filter((line) => line.trim() !== '' && !STEPPING.test(line));
   if (complaints.length > 0) throw new Error(`ngspice: ${complaints.join('\n')}\n${netlist}`);
   return analysis(result.data);
 }

@@ -1,8 +1,12 @@
 import * as z from 'zod';
 import { asking, data } from './answer.js';
+import { advice, change } from './change.js';
 import { envelope } from './envelope.js';
 import { confirmation, informed, outcome, proof, tier } from './judged-part.js';
+import { partLookups } from './lookups.js';
+import { predicted } from './prediction.js';
 import { price } from './price.js';
+import { sensitivity } from './sensitivity.js';
 import { stage } from './stage.js';
 import { verdict } from './verdict.js';
 
@@ -17,14 +21,6 @@ const part = z.strictObject({
   price,
 });
 
-const change = z.strictObject({
-  set: z.record(z.string(), z.string()).describe('Fields of the stage and what they would become, as they are written'),
-  design: z.string().optional().describe('What it means for the circuit'),
-  factor: z.number().describe('How far the field moves: new to old'),
-  fits: z.boolean().describe('Judged again in full'),
-  lets: z.int().min(0).optional().describe('How many parts it lets in'),
-});
-
 /** `railfit explain --json` */
 export const explanation = envelope('explanation', 'Every check of one part on one stage', {
   stage,
@@ -36,8 +32,12 @@ export const explanation = envelope('explanation', 'Every check of one part on o
   verdicts: z.array(verdict),
   confirm: z.array(confirmation),
   ...informed,
-  changes: z.array(change).nullable().describe('What would let it in; null with a reason'),
-  changesReason: z.literal('not-built').optional(),
+  changes: z.array(change).nullable().describe('What would let it in, least factor first, judged again in full; empty where it fits or nothing that may move does; null with a reason'),
+  changesReason: z.enum(['not-built', 'not-asked']).optional().describe('not-built: written by an earlier railfit; not-asked: made without the file to try again'),
+  advice: z.array(advice).optional().describe('Ways the stage file cannot say'),
+  lookups: partLookups.optional().describe('Undecided only: what would decide it'),
+  sensitivity: z.array(sensitivity).describe('Whether verdicts hang on borrowed or typical figures'),
+  predicted: z.strictObject({ checks: z.array(z.string()).describe('Checks without a closed form for this stage'), ...predicted }).optional().describe('What no closed form answers, simulated: told, not judged'),
   cautions: z.array(z.string()),
   fitting: z.array(z.string()).describe('Up to three parts that fit as things stand'),
   asking,

@@ -60,6 +60,7 @@ export const imported = envelope('import', 'What an import did, or would do, to 
     removed: count('Parts that are gone'),
     unchanged: count('Parts that are the same'),
   }),
+  patch: z.strictObject({ cells: count('Cells filled'), parts: count('Parts they belong to'), list: z.string().describe('The list they were added to') }).optional().describe('With --patch only'),
   problems: z.array(problem),
   difference: difference.optional().describe('Against the list before; absent when the two were not compared'),
   stages: z.array(stageChange).optional().describe('The saved stages on the list before and on this one; absent when none is saved, or nothing changed'),

@@ -21,6 +21,7 @@ const identity = z.strictObject({
   phaseReversal: z.boolean().nullable(),
   inputClamp: z.boolean().nullable(),
   inputType: z.enum(['fet', 'bipolar']).nullable(),
+  crossoverFree: z.boolean().nullable().describe('Yes: the offset makes no step over the whole input range'),
 });
 
 const load = z.discriminatedUnion('kind', [

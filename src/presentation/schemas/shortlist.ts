@@ -1,9 +1,11 @@
 import * as z from 'zod';
 import { asking, data } from './answer.js';
+import { change } from './change.js';
 import { demand } from './demand.js';
 import { envelope } from './envelope.js';
 import { groupCounts, judgedPart, rankedPart } from './judged-part.js';
 import { count, unit } from './measures.js';
+import { stability } from './stability.js';
 import { stage } from './stage.js';
 
 const difference = z.strictObject({
@@ -25,6 +27,18 @@ const ahead = z.strictObject({
   currents: pair('Supply current in A'),
   better: z.array(difference).describe('Where the first offers more by a tenth or more'),
   worse: z.array(difference).describe('Where the second does'),
+  stability: stability.optional(),
+});
+
+const blamed = z.strictObject({
+  check: z.string(),
+  leaves: count('Parts this check alone would leave'),
+  alone: count('Parts that fail nothing else'),
+});
+
+const nothingFits = z.strictObject({
+  conflict: z.array(blamed).describe('Checks that together rule out every part that does not fit, none of them superfluous'),
+  changes: z.array(change).describe('Smallest changes that let parts in, least factor first; giving up swing first where the output is wanted at a rail'),
 });
 
 /** `railfit shortlist --json` */
@@ -37,6 +51,7 @@ export const shortlist = envelope('shortlist', 'The whole catalog judged on one 
   rejections: z.array(z.strictObject({ check: z.string(), parts: count('Parts that fail it') })).describe('Most frequent first; one part can fail several'),
   nearest: z.array(judgedPart).describe('Up to three rejected parts closest to fitting'),
   ahead: ahead.nullable().describe('Why 1 is ahead of 2; null when fewer than two fit'),
+  nothingFits: nothingFits.optional().describe('Only where no part fits'),
   rejected: z.array(judgedPart).optional().describe('With --all: every rejected part'),
   asking,
   data,

@@ -10,7 +10,7 @@ export const basis = z
 export const limitKind = z.enum(['min', 'typ', 'max']).meta({ id: 'limitKind', description: 'A guaranteed limit (min, max) or what a typical sample does (typ)' });
 
 export const reason = z
-  .enum(['missing-figure', 'beyond-data', 'no-counting-point', 'currency', 'not-built', 'typical-only', 'estimated', 'assumed', 'borrowed'])
+  .enum(['missing-figure', 'beyond-data', 'no-counting-point', 'currency', 'not-built', 'not-said', 'typical-only', 'estimated', 'assumed', 'borrowed'])
   .meta({ id: 'reason', description: 'Why a check cannot be decided' });
 
 /** A figure, its limit kind, and a value in its unit. */
@@ -61,6 +61,10 @@ const numbers = {
   adds: z.literal('squares').optional().describe('Terms add as squares; without it as they are'),
   termUnit: unit.optional().describe('Unit of the terms where it is not that of the check'),
   notes: z.array(z.string()).optional().describe('The same result as engineers also say it'),
+  measures: z
+    .array(z.strictObject({ name: z.string(), value: z.number().describe('Worst reading'), unit, basis }))
+    .optional()
+    .describe('Numbers that belong to the verdict and are not compared'),
   remedies: z
     .array(z.strictObject({ path: z.string().describe('Field of the stage file'), text: z.string().describe('Value to write there'), offered: z.number().describe('What the check then offers, worst reading'), cost: z.string() }))
     .optional()

@@ -1,0 +1,31 @@
+import { buildStage, movableInputs, stageReader, type Changing, type Override, type Rerun, type StageSpec } from '../index.js';
+
+/** A stage as a command was given it: the text of the file, null without one, and the options over it. */
+export interface GivenStage {
+  readonly text: string | null;
+  readonly overrides: readonly Override[];
+}
+
+/**
+ * The stage under further options, as another command with these `--set` at its end would read and build it. The file is taken apart
+ * once; what was tried before is known.
+ */
+export function rerunOf({ text, overrides }: GivenStage): Rerun {
+  const read = stageReader(text);
+  const known = new Map<string, ReturnType<Rerun>>();
+  return (more) => {
+    const key = more.map(({ path, text: value }) => `${path}=${value}`).join('\n');
+    const tried = known.get(key);
+    if (tried !== undefined) return tried;
+    const spec = read([...overrides, ...more]);
+    const built = spec.ok ? buildStage(spec.spec) : spec;
+    const stage = built.ok && 'stage' in built ? built.stage : null;
+    known.set(key, stage);
+    return stage;
+  };
+}
+
+/** What a search for changes may use. */
+export function changingOf(spec: StageSpec, given: GivenStage): Changing {
+  return { rerun: rerunOf(given), inputs: movableInputs(spec), mayChange: spec.mayChange ?? null };
+}

@@ -1,0 +1,63 @@
+import { turnsBetween, type Turn } from './turns.js';
+
+/** What holds at one value: the answer in short, or why there is none. */
+export type SweptState =
+  | { readonly counts: Counts; readonly first: string | null; readonly fit: readonly string[] }
+  /** The stage contradicts itself there, in words. */
+  | { readonly contradiction: string };
+
+interface Counts {
+  readonly parts: number;
+  readonly fit: number;
+  readonly undecided: number;
+  readonly rejected: number;
+}
+
+export interface SweptPoint {
+  readonly value: number;
+  readonly state: SweptState;
+}
+
+/** What the values of one field cost: the answer at each, and where it turns between them. */
+export interface Swept {
+  readonly points: readonly SweptPoint[];
+  readonly turns: readonly SweptTurn[];
+}
+
+/** A turn, with the ids that come in and go out at it. */
+export interface SweptTurn extends Turn<SweptState> {
+  readonly gained: readonly string[];
+  readonly lost: readonly string[];
+}
+
+/** Asks at every value, rising, and looks for the turns between neighbours whose answers differ. */
+export function sweep(values: readonly number[], stateAt: (value: number) => SweptState): Swept {
+  const points = values.map((value) => ({ value, state: stateAt(value) }));
+  const turns = points.slice(1).flatMap((point, at) => {
+    const before = points[at];
+    return before === undefined ? [] : turnsBetween(before, point, { stateAt, isSame: isSameAnswer }).map(withParts);
+  });
+  return { points, turns };
+}
+
+/** An answer turns with how many parts fit, with the first choice, and where the stage stops being one. */
+export function isSameAnswer(one: SweptState, other: SweptState): boolean {
+  if ('contradiction' in one || 'contradiction' in other) return 'contradiction' in one && 'contradiction' in other;
+  return one.counts.fit === other.counts.fit && one.first === other.first;
+}
+
+function withParts(turn: Turn<SweptState>): SweptTurn {
+  const [before, after] = [fitting(turn.from), fitting(turn.to)];
+  return { ...turn, gained: after.filter((id) => !before.includes(id)), lost: before.filter((id) => !after.includes(id)) };
+}
+
+const fitting = (state: SweptState): readonly string[] => ('contradiction' in state ? [] : state.fit);
+
+/** Values from one end to the other, both included, rising: even steps, or even ratios rounded to four digits. */
+export function sweptValues({ from, to, steps, scale }: { readonly from: number; readonly to: number; readonly steps: number; readonly scale: 'linear' | 'log' }): number[] {
+  const inner = Array.from({ length: Math.max(0, steps - 2) }, (_, at) => {
+    const share = (at + 1) / (steps - 1);
+    return scale === 'log' ? Number((from * (to / from) ** share).toPrecision(4)) : Number((from + (to - from) * share).toPrecision(12));
+  });
+  return [...new Set([from, ...inner.filter((value) => value > from && value < to), to])];
+}

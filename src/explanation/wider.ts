@@ -1,0 +1,42 @@
+import type { JudgedPart } from '../screening/index.js';
+import type { Verdict } from '../verdicts/verdict.js';
+import type { Change } from './changing.js';
+import { factorOf, type Mover } from './movers.js';
+import type { CountedChange, EmptySearch } from './nothing-fits.js';
+import { fewDigits, printedAs, writtenValue } from './printed-value.js';
+
+/** A limit moved up to so many times as far as the least that lets a part in is still the same idea. */
+const WIDER = 5;
+
+/**
+ * After the least move of one upper limit that lets a part in, the one that lets in most for a little more: what the other parts need
+ * that fail nothing but checks of this limit. Null where no more come in.
+ */
+export function widerOf(least: CountedChange, mover: Mover, { stage, screened }: Pick<EmptySearch, 'stage' | 'screened'>): Change | null {
+  const [move] = least.moves;
+  const { touches, input } = mover;
+  if (least.moves.length !== 1 || move?.value == null || touches === null || mover.direction !== 'up' || input.form !== 'value') return null;
+  const from = mover.from;
+  const most = Math.min(mover.most, from + WIDER * (move.value - from));
+  const needs = [...screened.rejected, ...screened.undecided].flatMap((part) => needOf(part, { touches, from }) ?? []);
+  const wanted = Math.max(...needs.filter((value) => value <= most));
+  if (!(wanted > move.value)) return null;
+  const options = { digits: fewDigits(wanted, input.unit, 'up'), round: 'up' } as const;
+  const value = printedAs(wanted, input.unit, options);
+  const factor = factorOf(mover, value, stage);
+  return { ...least, moves: [{ ...move, text: `${input.before ?? ''}${writtenValue(wanted, input.unit, options)}`, value, boundary: wanted, factor }], factor };
+}
+
+/** The limit with which a part passes that fails nothing else, as its worst readings say: to be judged again before it is told. */
+function needOf({ verdicts }: JudgedPart, { touches, from }: { readonly touches: readonly string[]; readonly from: number }): number | null {
+  const open = verdicts.filter(({ outcome }) => outcome !== 'pass');
+  if (!open.every(({ check }) => touches.includes(check))) return null;
+  const needs = open.map((verdict) => offeredAtWorst(verdict, from));
+  return needs.includes(null) ? null : Math.max(...needs.map(Number));
+}
+
+/** Where the limit itself is compared, what is offered; else (room at a rail) the limit and what is short. */
+function offeredAtWorst({ offered, offeredBest, required, sense }: Verdict, from: number): number | null {
+  if (typeof offered !== 'number' || typeof offeredBest !== 'number' || typeof required !== 'number' || sense !== 'at-most') return null;
+  return Math.max(offered, offeredBest) - required + from;
+}

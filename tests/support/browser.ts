@@ -1,0 +1,64 @@
+import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { chromium, type Browser, type Page } from 'playwright-core';
+
+/** Where Debian and others put it. */
+const PLACES = ['/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome'];
+
+/** A real browser. Without one a test of what a person sees proves nothing: it fails, and says what to install. */
+export async function launchBrowser(): Promise<Browser> {
+  const named = process.env['CHROMIUM'];
+  const found = (named === undefined ? PLACES : [named]).find((path) => existsSync(path));
+  if (found === undefined) throw new Error(`no browser (${named ?? PLACES.join(', ')}): apt-get install -y --no-install-recommends chromium fonts-dejavu-core poppler-utils, or name one in CHROMIUM`);
+  return chromium.launch({ executablePath: found, args: ['--no-sandbox', '--disable-gpu', '--disable-dev-shm-usage'], timeout: 120_000 });
+}
+
+export interface Shown {
+  readonly page: Page;
+  /** What the console, failed scripts and policy violations said. */
+  readonly said: readonly string[];
+  /** Every address asked for, but the page itself. */
+  readonly asked: readonly string[];
+}
+
+export interface View {
+  readonly width: number;
+  readonly height?: number;
+  readonly scheme?: 'light' | 'dark';
+}
+
+/** Pages on disk, opened as a reviewer opens them: by double click, without a server. */
+export class PageFolder {
+  private readonly folder = mkdtempSync(join(tmpdir(), 'railfit-page-'));
+  private readonly browser: Browser;
+
+  constructor(browser: Browser) {
+    this.browser = browser;
+  }
+
+  path(name: string): string {
+    return join(this.folder, name);
+  }
+
+  write(name: string, text: string): void {
+    writeFileSync(this.path(name), text);
+  }
+
+  async show(name: string, { width, height = 900, scheme = 'light' }: View): Promise<Shown> {
+    const page = await this.browser.newPage({ viewport: { width, height }, colorScheme: scheme });
+    const address = pathToFileURL(this.path(name)).href;
+    const said: string[] = [];
+    const asked: string[] = [];
+    page.on('console', (message) => said.push(message.text()));
+    page.on('pageerror', (error) => said.push(error.message));
+    page.on('request', (request) => { if (request.url() !== address) asked.push(request.url()); });
+    await page.goto(address);
+    return { page, said, asked };
+  }
+
+  remove(): void {
+    rmSync(this.folder, { recursive: true, force: true });
+  }
+}
