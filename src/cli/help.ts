@@ -29,8 +29,9 @@ function textFor(question: HelpQuestion, style: HelpStyle): string {
   const { topic } = question;
   if (topic === undefined) return `${question.overview()}\nTopics: ${Object.keys(TOPICS).join(', ')}, a topology, a command, or a message code such as Q002.\n`;
   const command = question.commandHelp(topic);
-  if (command !== null) return command;
-  const blocks = TOPICS[topic]?.() ?? topologyBlocks(topic) ?? codeBlocks(topic);
+  const page = TOPICS[topic]?.() ?? null;
+  if (command !== null) return (style.ascii ? asciiText(command) : command) + (page === null ? '' : `\n${page.map((block) => render(block, style)).join('\n\n')}\n`);
+  const blocks = page ?? topologyBlocks(topic) ?? codeBlocks(topic);
   if (blocks !== null) return `${blocks.map((block) => render(block, style)).join('\n\n')}\n`;
   const near = suggest(topic, [...Object.keys(TOPICS), ...Object.keys(TOPOLOGY_WORDS), ...COMMANDS]);
   const fix = near.length === 0 ? `one of ${Object.keys(TOPICS).join(', ')}, a topology, a command, or a message code` : `did you mean ${near.join(', ')}?`;
