@@ -134,7 +134,8 @@ describe('where nothing fits', () => {
   it('three demands that only together rule out every part, at 100 columns', () => { expect(emptyOf('vent-motor-control', ['limits.supplyCurrent=20 µA'], 100)).toMatchInlineSnapshot(`
     "
     No part of 95 fits. They fail supply current (87), output current (39), output low (12), output high
-    (12) and 8 more checks. Nearest is GX-NANO-ECO (G): gain bandwidth short by 210 Hz (5.1 %).
+    (12) and 8 more checks. Nearest is GX-NANO-ECO (G): gain bandwidth short by 210 Hz (5.1 %); 4 checks
+    cannot be decided.
     0 of 95 parts fit, 0 cannot be decided, 95 do not fit.
 
     These 3 demands together rule out every part; without any one of them some would be left:
