@@ -1,6 +1,7 @@
 export { demandsWhenAsked, deriveDemands } from './derive.js';
 export { circuitMark, markOf } from './circuit-mark.js';
-export { CHECK_IDS, listDemands } from './demand.js';
+export { CHECK_IDS } from './demand.js';
+export { listDemands } from './list-demands.js';
 export type {
   AnyDemand, CheckId, Corner, DcErrorDemand, Demands, DirectedPeak, HeadroomDemand, HeadroomVertex, NumberDemand, OutputCurrentDemand, PriceDemand, Sense,
   SupplyCurrentDemand, UnbuiltDemand, WordDemand,
