@@ -1,10 +1,9 @@
-import type { Problem } from '../quantities/problem.js';
 import type { Draft } from './draft.js';
 import { legNames } from './leg-names.js';
 import { FILTERS, ONE_INPUT } from './ownership.js';
 import type { Topology } from './spec.js';
 import { isUnder, leafText } from './tree.js';
-import { refuse, refuseAbsent } from './refuse.js';
+import { isOffered, refuse, refuseAbsent } from './refuse.js';
 
 /** Refuses what is missing: topology, supply and what the stage is fed. A field that was written and refused is not missing. */
 export function refuseMissing(draft: Draft, topology: Topology | undefined): void {
@@ -97,14 +96,7 @@ function missingBoth(draft: Draft): void {
 
 /** Also true when the field, or the map around it, was refused for its structure, or is offered in place of a key that is none. */
 function isWritten(draft: Draft, path: string): boolean {
-  return draft.positions.has(path) || draft.problems.some((problem) => [problem.place?.path, meantPath(problem)].some((refused) => refused !== undefined && isUnder(path, refused)));
-}
-
-/** What a misspelt key was told to be: it is not missing besides. */
-function meantPath({ code, fix, place }: Problem): string | undefined {
-  if (code !== 'S101' || fix === undefined || place?.path === undefined) return undefined;
-  const level = place.path.slice(0, place.path.lastIndexOf('.') + 1);
-  return fix.includes('.') ? fix : level + fix;
+  return draft.positions.has(path) || isOffered(draft, path) || draft.problems.some(({ place }) => place?.path !== undefined && isUnder(path, place.path));
 }
 
 /** True when the map, or anything in it, is written. */
