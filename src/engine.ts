@@ -2,11 +2,11 @@ import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
 import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
 import { curvesOf } from './curves/index.js';
-import type { Part, PartSource } from './parts/part.js';
+import type { Part, PartSource, Tier } from './parts/part.js';
 import { predictStage, type Prediction } from './prediction/index.js';
-import { rank } from './ranking/index.js';
+import { outlineAndRank, rank, screenAndRank } from './ranking/index.js';
 import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
-import { type JudgedPart, judgePart, judging, outlining, type PartOutcome, probePart, screen } from './screening/index.js';
+import { type JudgedPart, judgePart, judgingOf, lendersOf, outlining } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -22,13 +22,12 @@ export function demandsOf(stage: Stage): DemandsReport {
 /** The whole flow on one screen: stage and parts in, judged, ranked and told why. */
 export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLAIN): Report {
   const demands = deriveDemands(stage);
-  const run = judging(demands, source.parts, asking.strict);
-  const screened = screen(run, source.parts);
-  const fit = rank(screened.fit, asking.order);
+  const { run, fit, screened } = screenAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
+  const data = dataOf(source);
   return {
     stage,
     demands: listDemands(demands),
-    counts: { parts: source.parts.length, fit: screened.fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
+    counts: { parts: data.catalog.parts, fit: screened.fit.length, undecided: screened.undecided.length, rejected: screened.rejected.length },
     fit,
     undecided: screened.undecided,
     rejected: screened.rejected,
@@ -37,7 +36,7 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
     ahead: whyAhead(fit, asking.order),
     nothingFits: null,
     asking,
-    data: dataOf(source),
+    data,
     origin: (partId, slot) => source.origin(partId, slot),
     curves: ({ part }) => curvesOf(run, stage, part),
   };
@@ -62,20 +61,17 @@ export interface ExplainRequest {
 export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
   const { part, asking = PLAIN, changing } = request;
   const demands = deriveDemands(stage);
-  const run = judging(demands, source.parts, asking.strict);
-  // Of the others only how they end is told: those that are plainly out need not be judged to the end.
-  const judgedAll = source.parts.map((one) => (one.id !== part.id && probePart(run, one).isPlainlyOut() ? null : judgePart(run, one)));
-  const judged = judgedAll.find((one) => one?.part.id === part.id);
-  if (judged == null) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
-  const count = (wanted: PartOutcome): number => judgedAll.filter((one) => (one?.outcome ?? 'does-not-fit') === wanted).length;
-  const fit = rank(judgedAll.flatMap((one) => (one?.outcome === 'fits' ? [one] : [])), asking.order);
-  const ranked = fit.find((line) => [line, ...line.variants].some((one) => one.part.id === part.id));
+  const { run, counts, fit } = outlineAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
+  if (source.screening === undefined && !source.parts.includes(part)) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
+  const judged = judgePart(run, part);
+  const isIt = (one: JudgedPart): boolean => one.part.id === part.id && one.part.tier === part.tier;
+  const ranked = judged.outcome !== 'fits' ? undefined : fit.find((line) => [line, ...line.variants].some(isIt));
   return {
     stage,
     demands: listDemands(demands),
     judged,
     rank: ranked?.rank ?? null,
-    counts: { parts: source.parts.length, fit: count('fits'), undecided: count('undecided'), rejected: count('does-not-fit') },
+    counts,
     fitting: fit.filter((one) => one !== ranked).slice(0, 3),
     lookups: judged.outcome === 'undecided' ? lookupsOf({ run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
     sensitivity: sensitivitiesOf(run, judged),
@@ -93,7 +89,7 @@ export function withLookups(report: Report, source: PartSource): Report {
 }
 
 function lookupContext({ stage, asking, fit }: Report, source: PartSource): LookupContext {
-  const run = judging(deriveDemands(stage), source.parts, asking.strict);
+  const run = judgingOf(deriveDemands(stage), source, asking.strict);
   return { run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order };
 }
 
@@ -106,7 +102,7 @@ export function predict(stage: Stage, source: PartSource, request: { readonly pa
 
 function predictionOf(stage: Stage, source: PartSource, { part, strict }: { readonly part: Part; readonly strict: boolean }): Prediction {
   const { operating } = deriveDemands(stage);
-  const classWorst = part.class === null ? null : (classesOf(source.parts, operating).get(part.class) ?? null);
+  const classWorst = part.class === null ? null : (classesOf(lendersOf(source), operating).get(part.class) ?? null);
   return predictStage(stage, part, { operating, strict, classWorst });
 }
 
@@ -169,6 +165,12 @@ export function sweepOver(source: PartSource, { values, stageAt, asking }: Sweep
 }
 
 function dataOf(source: PartSource): DataUsed {
-  const approved = source.parts.filter((part) => part.tier === 'approved').length;
-  return { catalog: { parts: source.parts.length, approved, generic: source.parts.length - approved, sha256: source.sha256 }, rules: RULES };
+  const approved = sizeOf(source, 'approved');
+  const generic = sizeOf(source, 'generic');
+  return { catalog: { parts: approved + generic, approved, generic, sha256: source.sha256 }, rules: RULES };
+}
+
+function sizeOf(source: PartSource, tier: Tier): number {
+  if (source.screening === undefined) return source.parts.filter((part) => part.tier === tier).length;
+  return source.screening.views.reduce((sum, view) => sum + (view.tier === tier ? view.size : 0), 0);
 }

@@ -15,6 +15,7 @@ import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
 import type { SavedStage } from './saved-stages.js';
 import { removeStages, savedStages, saveStages } from './saved-stages.js';
+import { screenSource } from './screen-source.js';
 import { partSource } from './source.js';
 import { undoImport } from './store.js';
 import type { WithdrawnPart } from './withdrawn.js';
@@ -75,6 +76,8 @@ export interface Catalog {
   removeStages(paths: readonly string[]): void;
   /** The parts in force and where each figure came from. */
   source(): PartSource;
+  /** The same, for one question: parts are read when they are looked at. The catalog is as it was at this moment until it is closed; nothing can be written meanwhile. */
+  screenSource(): PartSource;
   close(): void;
 }
 
@@ -87,6 +90,11 @@ export async function openCatalog(file: string, options: OpenOptions = {}): Prom
 function catalogOf(database: Database.Database, { file, isNew }: { file: string; isNew: boolean }): Catalog {
   const origin = originFinder(database);
   const tableOf = columnTables(database);
+  const writing = <Result>(work: () => Result): Result => {
+    // The open transaction of `screenSource` ends with the connection: what is written in it would be lost without a word.
+    if (database.inTransaction) throw new RangeError(`${file} is being read for one question; close it before it is written`);
+    return guarded(file, work);
+  };
   return {
     file,
     isNew,
@@ -96,20 +104,21 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
     genericIds: () => guarded(file, () => new Set(idsInForce(database, 'generic'))),
     classes: () => guarded(file, () => new Set(classesInForce(database, 'generic'))),
     approvedCount: () => guarded(file, () => countInForce(database, 'approved')),
-    importList: (list, options = {}) => guarded(file, () => importList(database, asTier(list, 'approved'), options)),
+    importList: (list, options = {}) => writing(() => importList(database, asTier(list, 'approved'), options)),
     approvedPart: (partId) => guarded(file, () => partInForce(database, 'approved', partId)),
     genericParts: () => guarded(file, () => partsInForce(database, 'generic')),
     listInForce: () => guarded(file, () => database.transaction(() => listInForce(database))()),
     columnsOf: ({ id }) => guarded(file, () => tableOf(id).all),
     columnOf: ({ id }, slot) => guarded(file, () => columnOf(tableOf(id), slot)),
     originIn: (imported, partId, slot) => guarded(file, () => origin({ tier: 'approved', from: imported, partId, slot })),
-    undo: () => guarded(file, () => database.transaction(() => undoImport(database, 'approved')).immediate()),
-    seedGeneric: (list) => guarded(file, () => importList(database, asTier(list, 'generic')).outcome === 'imported'),
+    undo: () => writing(() => database.transaction(() => undoImport(database, 'approved')).immediate()),
+    seedGeneric: (list) => writing(() => importList(database, asTier(list, 'generic')).outcome === 'imported'),
     withdrawn: (partId) => guarded(file, () => withdrawnPart(database, file, partId)),
     savedStages: () => guarded(file, () => savedStages(database)),
-    saveStages: (stages) => guarded(file, () => saveStages(database, stages)),
-    removeStages: (paths) => guarded(file, () => removeStages(database, paths)),
+    saveStages: (stages) => writing(() => saveStages(database, stages)),
+    removeStages: (paths) => writing(() => removeStages(database, paths)),
     source: () => partSource(database, file),
+    screenSource: () => screenSource(database, file),
     close: () => void database.close(),
   };
 }

@@ -33,7 +33,8 @@ function identityCells(part: Part): Cell[] {
   ];
 }
 
-function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
+/** Everything of a row but its figures. */
+export function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
   const [tier, id, description, status, lifecycle, pack, channels, qualification, partClass, family, ...rest] = row;
   const [amount, currency, quantity, phaseReversal, inputClamp, inputType, crossoverFree] = rest;
   return {
@@ -76,7 +77,8 @@ function columnIndex(): Readonly<Record<Parameter, Partial<Record<LimitKind | 'p
 /** One for all figures without condition: a large list has millions of them. */
 const PLAIN: Condition = Object.freeze({});
 
-function addFigures(figures: Figure[], { parameter, kind }: FigureColumn, cell: string | number): void {
+/** Adds what one cell of a figure column holds. */
+export function addFigures(figures: Figure[], { parameter, kind }: FigureColumn, cell: string | number): void {
   if (kind !== null) return void figures.push({ parameter, kind, value: Number(cell), condition: PLAIN });
   for (const [limit, value, condition, assumed] of JSON.parse(String(cell)) as readonly Point[]) {
     figures.push({ parameter, kind: limit, value, condition, ...(assumed === true ? { assumed } : {}) });

@@ -1,6 +1,7 @@
 import type Database from 'better-sqlite3';
 import type { ReadList } from '../intake/list.js';
 import type { Tier } from '../parts/part.js';
+import { encodeList, rebuildDictionary } from './dictionary.js';
 import type { Difference } from './difference.js';
 import { FATE } from './difference.js';
 import { currentImport, insertImport, updateOrigin } from './imports.js';
@@ -39,6 +40,7 @@ export function writeDifference(database: Database.Database, list: ReadList, { d
     writeRecord(part.id, index);
     progress(index + 1, list.parts.length);
   });
+  if (tier === 'approved') encodeList(database, list.parts);
 }
 
 /**
@@ -52,6 +54,7 @@ export function undoImport(database: Database.Database, tier: Tier): boolean {
   database.prepare('update part set withdrawn_at = ? where import_id = ?').run(current.id, current.id);
   database.prepare('update part set withdrawn_at = null where withdrawn_at = ? and import_id <> ?').run(current.id, current.id);
   database.prepare('update list_import set undone = 1 where id = ?').run(current.id);
+  if (tier === 'approved') rebuildDictionary(database);
   return true;
 }
 

@@ -16,7 +16,7 @@ export function judgeHeadroom(asked: HeadroomVertices, side: Side, readings: Rea
   const share = offsetShare(asked, readings);
   return {
     kind: 'vertices',
-    findings: asked.vertices.map((vertex) => findingAt(vertex, { side, share, reading: curve(vertex) })),
+    findings: asked.vertices.map((vertex) => findingAt(vertex, { side, share, reading: curve(vertex), brief: readings.brief })),
   };
 }
 
@@ -70,6 +70,8 @@ interface At {
   readonly side: Side;
   readonly share: Share;
   readonly reading: HeadroomReading;
+  /** Only the decision is wanted. */
+  readonly brief: boolean;
 }
 
 function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
@@ -80,6 +82,7 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
   if (!meets(vertex.room, 0, 'at-most') && meets(vertex.room, offered, 'at-most')) return bound(at, { ...common, basis, known: share.value });
+  if (at.brief) return { kind: 'numbers', ...common, offered, basis };
   const caution = share.caution(vertex.room - offered);
   return {
     kind: 'numbers', ...common, offered, basis, slot: reading.slot, how: reading.how,

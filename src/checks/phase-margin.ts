@@ -57,17 +57,18 @@ interface Measured {
 function measured(of: Measured, readings: Readings): Finding {
   const { asked, figures, speed, ends, loop } = of;
   const worst = worstMargin(loop, ends);
-  const terms = termsOf(of, worst);
   const { required, unit, sense } = asked;
+  const input = inputBasis(figures, { loop, ends, required });
+  const terms = readings.brief ? [] : termsOf(of, worst, input);
   const passes = meets(required, worst.margin, sense);
   const isUnityStable = (readings.figure('minimumStableGain')?.value ?? 1) <= 1;
   return {
     kind: 'numbers', required, unit, sense, offered: worst.margin, slot: speed.slot,
-    basis: weakest([speed.basis, figures.own.basis, ...inputBasis(figures, { loop, ends, required }), ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
+    basis: weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
     how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
     terms,
-    cautions: passes && inputBasis(figures, { loop, ends, required }).includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
-    remedies: passes ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable),
+    cautions: passes && !readings.brief && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
+    remedies: passes || readings.brief ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable),
   };
 }
 
@@ -90,7 +91,7 @@ function inputBasis({ needsInput, inputCapacitance }: LoopFigures, { loop, ends,
 }
 
 /** Where the phase goes, degrees: the terms add up to the margin. */
-function termsOf({ asked, figures, speed, ends, loop }: Measured, { gainBandwidth }: Margin): Term[] {
+function termsOf({ figures, speed, loop }: Measured, { gainBandwidth }: Margin, inputBases: readonly Basis[]): Term[] {
   const parts = phaseParts(loop, gainBandwidth);
   if (parts === null) return [];
   const { own, inputCapacitance, needsInput, outputResistance } = figures;
@@ -99,7 +100,7 @@ function termsOf({ asked, figures, speed, ends, loop }: Measured, { gainBandwidt
   const input = inputCapacitance === null ? (needsInput ? 'input capacitance not known, not counted' : null) : `with an input of ${formatQuantity(inputCapacitance.value, 'F')}`;
   return [
     term('one-pole amplifier', 90, { slot: speed.slot, basis: speed.basis, how: [speed.how, crossover].filter((step) => step !== null).join(', ') }),
-    ...(needsInput ? [term('feedback network', parts.feedback, { slot: inputCapacitance?.slot ?? null, basis: inputCapacitance?.basis ?? inputBasis(figures, { loop, ends, required: asked.required })[0] ?? 'guaranteed', how: input })] : []),
+    ...(needsInput ? [term('feedback network', parts.feedback, { slot: inputCapacitance?.slot ?? null, basis: inputCapacitance?.basis ?? inputBases[0] ?? 'guaranteed', how: input })] : []),
     ...(loop.load === null || outputResistance === null ? [] : [term('load behind the output resistance', parts.load, outputResistance)]),
     term('excess phase of the part', parts.own, own),
   ];

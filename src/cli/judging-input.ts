@@ -16,7 +16,13 @@ export interface JudgingOptions extends CommonOptions, StageOptions {
 /** The parts with what the user assumes for this run, and how the answer was asked for. */
 export function judgingInput(catalog: Catalog, options: JudgingOptions): { source: PartSource; asking: Asking } {
   const wishes = options.assume ?? [];
+  // With nothing assumed the parts need not be read to be judged.
+  if (wishes.length === 0) return { source: catalog.screenSource(), asking: askingOf(options) };
   const { source, problems } = assumeFigures(catalog.source(), wishes);
   if (problems.length > 0) throw new RequestError(problems, EXIT.request);
-  return { source, asking: { strict: options.strict === true, order: options.order ?? 'merit', assumed: wishes } };
+  return { source, asking: askingOf(options) };
+}
+
+function askingOf({ strict = false, order = 'merit', assume = [] }: JudgingOptions): Asking {
+  return { strict, order, assumed: assume };
 }

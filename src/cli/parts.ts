@@ -20,7 +20,7 @@ export interface PartsOptions extends CommonOptions {
 export async function runParts(session: Session, words: readonly string[], options: PartsOptions): Promise<Outcome> {
   const stage = await stageOf(options);
   return withCatalog(session, options, (catalog) => {
-    const source = catalog.source();
+    const source = stage === null ? catalog.source() : catalog.screenSource();
     const failing = stage === null ? null : failingChecks(shortlist(stage, source));
     const tier = options.tier ?? (options.csv === true ? 'approved' : undefined);
     const wanted = (part: Part): boolean => matches(part, words) && (tier === undefined || part.tier === tier);

@@ -1,6 +1,6 @@
 import { cell } from './cells.js';
 import type { Complex } from './complex.js';
-import { HELD_NODES, reduceMesh, starMesh, type Mesh, type PassiveElement, type ReducedMesh } from './star-mesh.js';
+import { HELD_NODES, reduceMesh, roomFor, starMesh, type Mesh, type PassiveElement, type ReducedMesh } from './star-mesh.js';
 
 export type { PassiveElement } from './star-mesh.js';
 
@@ -55,8 +55,9 @@ export function pinResponses(network: PinNetwork, pinCapacitance = 0): (frequenc
   }
   const mesh = starMesh(network.elements, network.pin, pinCapacitance);
   const places = resistors.map(({ name, value, between: [a, b] }) => ({ name, value, a: mesh.nodes.indexOf(a), b: mesh.nodes.indexOf(b) }));
+  const room = roomFor(mesh);
   return (frequency) => {
-    const reduced = reduceMesh(mesh, frequency);
+    const reduced = reduceMesh(mesh, frequency, room);
     const transfer = transferOf(mesh, reduced);
     const volts = voltagesPerAmpere(mesh, reduced, transfer.impedance);
     const thermal = places.map(({ name, value, a, b }) => {
@@ -83,7 +84,8 @@ export function pinTransfers(network: PinNetwork, pinCapacitance = 0): (frequenc
     return () => held;
   }
   const mesh = starMesh(network.elements, network.pin, pinCapacitance);
-  return (frequency) => transferOf(mesh, reduceMesh(mesh, frequency));
+  const room = roomFor(mesh);
+  return (frequency) => transferOf(mesh, reduceMesh(mesh, frequency, room));
 }
 
 function heldPin(pin: string): PinTransfer {

@@ -71,18 +71,19 @@ export function starMesh(elements: readonly PassiveElement[], kept: string, capa
  * elimination that never forms the sums on the diagonal, so a small branch beside large ones keeps its digits.
  * @param mesh from starMesh()
  * @param frequency Hz, at least 0 (capacitors open)
+ * @param into where the answer goes, from roomFor(); what was there is lost
  * @returns weights (1) of the inner nodes, admittances (S) of the kept one
  * @example input –1 kΩ– x –3 kΩ– pin leaves 0.25 mS from pin to input
  * Source: Rosen, A new network theorem, J. IEE 62, 1924 (from memory).
  * @throws RangeError naming a node that hangs on nothing at that frequency.
  */
-export function reduceMesh(mesh: Mesh, frequency: number): ReducedMesh {
+export function reduceMesh(mesh: Mesh, frequency: number, into: ReducedMesh = roomFor(mesh)): ReducedMesh {
   // The test in front spares a million calls the looking up of names.
   if (!(frequency >= 0 && frequency < Infinity)) requireNotNegative('reduceMesh', { frequency });
   const size = mesh.nodes.length;
-  const re = new Float64Array(mesh.conductance);
-  const im = new Float64Array(mesh.capacitance);
-  for (let at = 0; at < im.length; at += 1) im[at] = cell(im, at) * 2 * Math.PI * frequency;
+  const { re, im } = into;
+  re.set(mesh.conductance);
+  for (let at = 0; at < im.length; at += 1) im[at] = cell(mesh.capacitance, at) * 2 * Math.PI * frequency;
   for (let k = 0; k < mesh.inner; k += 1) {
     if (!toWeights({ re, im }, k * size + k + 1, (k + 1) * size)) refuse(mesh.nodes[k] ?? '', frequency);
     for (let i = k + 1; i <= mesh.inner; i += 1) spread({ re, im }, [i, k], size);
@@ -91,6 +92,17 @@ export function reduceMesh(mesh: Mesh, frequency: number): ReducedMesh {
   for (let at = mesh.inner * size + mesh.inner + 1; at < (mesh.inner + 1) * size; at += 1) isHeld ||= cell(re, at) !== 0 || cell(im, at) !== 0;
   if (!isHeld) refuse(mesh.nodes[mesh.inner] ?? '', frequency);
   return { re, im };
+}
+
+/**
+ * Room for an answer of reduceMesh(): whoever asks for many frequencies makes it once, memory being dearer than the sums.
+ * @param mesh from starMesh()
+ * @returns zeros, S
+ * @example roomFor(a mesh of five nodes).re has 25 cells
+ * Source: own bookkeeping, no relation.
+ */
+export function roomFor({ nodes: { length } }: Mesh): ReducedMesh {
+  return { re: new Float64Array(length ** 2), im: new Float64Array(length ** 2) };
 }
 
 /** Divides the cells of a row by their sum. @returns false when the sum is 0. */

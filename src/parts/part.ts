@@ -1,4 +1,5 @@
 import type { Condition, Figure, LimitKind } from './figures.js';
+import type { ScreenView } from './screen-view.js';
 
 export type Tier = 'approved' | 'generic';
 export const STATUSES = ['approved', 'conditional', 'restricted', 'not-approved'] as const;
@@ -84,4 +85,12 @@ export interface PartSource {
   origin(partId: string, slot: string): Origin | null;
   /** The cells of a part whose columns hold this parameter or identity field, in column order; absent where no list is kept. */
   cells?(partId: string, figure: string): readonly ListCell[];
+  /** The same parts as views, approved before generic, and the generic ones whole. Absent: the parts are judged one by one. */
+  readonly screening?: Screening;
+}
+
+/** Views of all parts of a source. */
+export interface Screening {
+  readonly views: readonly ScreenView[];
+  readonly generic: readonly Part[];
 }

@@ -40,4 +40,8 @@ export interface ReadingRules {
 export interface PartUnderTest extends ReadingRules {
   readonly part: Part;
   readonly outlook: Outlook;
+  /** Told of every parameter before its figures are read: a part may have them only then. */
+  readonly look?: (parameter: Parameter) => void;
+  /** Only the verdict is wanted: what is told beside it may be left out. */
+  readonly brief?: true;
 }

@@ -34,6 +34,8 @@ export interface Readings {
   bounded(worst: number, best: number): number;
   /** True when borrowing for this parameter is possible at all. */
   hasClass(parameter: Parameter): boolean;
+  /** Only numbers that decide are wanted: remedies, which cost far more than the verdict, are left out. */
+  readonly brief: boolean;
 }
 
 export interface Assumed {
@@ -57,6 +59,7 @@ export function readingsOf(test: PartUnderTest): Readings {
     currentFromHeadroom: (side, supply) => fromHeadroom(test, side, supply),
     bounded: (worst, best) => (test.outlook === 'pessimistic' ? worst : best),
     hasClass: (parameter) => borrowed(test, parameter) !== null,
+    brief: test.brief === true,
   };
 }
 
@@ -66,6 +69,7 @@ function plain(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): Readi
 }
 
 function isPrinted(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): boolean {
+  test.look?.(parameter);
   return test.part.figures.some((figure) => figure.parameter === parameter && (end === undefined || figure.kind === end));
 }
 

@@ -22,6 +22,7 @@ export type RangeEnd = 'min' | 'max';
 
 /** Figures of a parameter that count at all: with `--strict`, limits only. */
 export function usable(test: PartUnderTest, parameter: Parameter): Figure[] {
+  test.look?.(parameter);
   return test.part.figures.filter(
     (figure) => figure.parameter === parameter && !(test.strict && (figure.kind === 'typ' || figure.assumed === true)),
   );

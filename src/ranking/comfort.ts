@@ -1,6 +1,6 @@
 import type { Basis } from '../parts/basis.js';
 import { largerIsBetter } from '../formulas/desirability.js';
-import type { Verdict } from '../verdicts/verdict.js';
+import type { Digest } from '../screening/index.js';
 
 /**
  * Margin at which a check is comfortable: beyond it more is worth nothing (M10). Ranges, words, temperatures and
@@ -25,8 +25,11 @@ export const FLOOR = 0.2;
 /** Head-room has no ratio: this much spare, V, counts as a margin of 1.25. */
 const COMFORTABLE_SPARE = 0.05;
 
+/** What the order needs of a verdict. */
+type Comparable = Pick<Digest, 'check' | 'margin' | 'spare' | 'standsOn'>;
+
 /** Margin of a verdict for the order: the ratio, or for head-rooms 1 at the limit and 1.25 with 50 mV to spare. Null: none. */
-export function marginForOrder(verdict: Verdict): number | null {
+export function marginForOrder(verdict: Comparable): number | null {
   if (!(verdict.check in COMFORTABLE)) return null;
   if (verdict.check === 'output-low' || verdict.check === 'output-high') {
     return verdict.spare === null ? null : 1 + (0.25 * verdict.spare) / COMFORTABLE_SPARE;
@@ -35,7 +38,7 @@ export function marginForOrder(verdict: Verdict): number | null {
 }
 
 /** Desirability of a margin, FLOOR..1; null for checks that have none. Derringer & Suich, J. Quality Technology 12(4), 1980. */
-export function comfortOf(verdict: Verdict): number | null {
+export function comfortOf(verdict: Comparable): number | null {
   const margin = marginForOrder(verdict);
   const scale = COMFORTABLE[verdict.check];
   if (margin === null || scale === undefined) return null;

@@ -1,19 +1,41 @@
 import { isAhead } from '../formulas/dominance.js';
-import type { JudgedPart } from '../screening/index.js';
 import { comfortOf } from './comfort.js';
 import { priceInEuro } from './merit.js';
+import type { Placed } from './placed.js';
+
+/** What dominance looks at. */
+type Rival = Pick<Placed, 'current' | 'verdicts' | 'proof'> & { readonly part: Pick<Placed['part'], 'tier' | 'price'> };
 
 /**
  * For each part of the list the first one that is at least as good in every clamped margin, in price, current, tier and proof,
  * and better in one: on clamped margins an over-specified part can be dominated, on raw ones never (M10, RNK-10, -11).
  */
-export function dominatorsOf<P extends JudgedPart>(all: readonly P[]): (P | null)[] {
-  const scored = all.map((one) => ({ one, scores: scoresOf(one) }));
-  return scored.map(({ scores: mine }) => scored.find(({ scores: theirs }) => dominates(theirs, mine))?.one ?? null);
+export function dominatorsOf<P extends Rival>(all: readonly P[]): (P | null)[] {
+  return all.map(dominatorFinder(all));
+}
+
+/** Finds the dominator of one part of the list at a time; the scores of the others are made when they are first compared. */
+export function dominatorFinder<P extends Rival>(all: readonly P[]): (one: P) => P | null {
+  const known = new Map<P, readonly number[] | null>();
+  const scores = (one: P): readonly number[] | null => {
+    const found = known.get(one);
+    if (found !== undefined) return found;
+    const made = scoresOf(one);
+    known.set(one, made);
+    return made;
+  };
+  return (mine) => all.find((theirs) => isCheaper(theirs, mine) && dominates(scores(theirs), scores(mine))) ?? null;
+}
+
+/** The first of the scores alone: they settle most pairs. */
+function isCheaper(theirs: Rival, mine: Rival): boolean {
+  if (theirs.current === null || mine.current === null || theirs.current > mine.current) return false;
+  const [price, asked] = [priceInEuro(theirs), priceInEuro(mine)];
+  return price !== null && asked !== null && price <= asked;
 }
 
 /** Larger is better throughout; null when price or current is not known: then nothing can be said. */
-function scoresOf(judged: JudgedPart): readonly number[] | null {
+function scoresOf(judged: Rival): readonly number[] | null {
   const price = priceInEuro(judged);
   if (price === null || judged.current === null) return null;
   const tier = judged.part.tier === 'approved' ? 1 : 0;

@@ -1,13 +1,19 @@
-import type { JudgedPart } from '../screening/index.js';
+import type { Placed } from './placed.js';
+
+/** What tells whether two parts share a line. */
+interface Member {
+  readonly part: Pick<Placed['part'], 'tier' | 'family'>;
+  readonly proof: Placed['proof'];
+}
 
 /** A line of the shortlist: the first of a family in the order, and its other packages and channel counts behind it. */
-export interface Line<P extends JudgedPart> {
+export interface Line<P extends Member> {
   readonly first: P;
   readonly variants: readonly P[];
 }
 
 /** Package and channel variants of one die stand in one line, at the place of the first; parts without a family stand alone. */
-export function linesOf<P extends JudgedPart>(ordered: readonly P[]): Line<P>[] {
+export function linesOf<P extends Member>(ordered: readonly P[]): Line<P>[] {
   const lines = new Map<string, { first: P; variants: P[] }>();
   for (const [at, one] of ordered.entries()) {
     const key = familyKey(one) ?? `alone ${at}`;
@@ -19,6 +25,6 @@ export function linesOf<P extends JudgedPart>(ordered: readonly P[]): Line<P>[] 
 }
 
 /** A family holds within a tier and a proof: a variant that is only typical must not hide behind one that is proven. */
-function familyKey({ part, proof }: JudgedPart): string | null {
+function familyKey({ part, proof }: Member): string | null {
   return part.family === null ? null : JSON.stringify([part.tier, proof, part.family]);
 }

@@ -3,3 +3,5 @@ export { EQUAL, type Merit, meritOf, priceInEuro, type Share, SHARES, type Share
 export { type Decision, decisionBetween, type Order, ORDERS, placeOf, rank, type RankedPart, STEPS } from './rank.js';
 export { dominatorsOf } from './dominance.js';
 export { type PriceTurn, type Stability, stabilityOf, type WeightTurn } from './stability.js';
+export { rankSurveyed } from './rank-survey.js';
+export { outlineAndRank, type OutlinedAndRanked, screenAndRank, type ScreenedAndRanked } from './screen-and-rank.js';

@@ -1,6 +1,6 @@
 import { smallerIsBetter, weightedGeometricMean } from '../formulas/desirability.js';
-import type { JudgedPart } from '../screening/index.js';
 import { comfortOf, FLOOR } from './comfort.js';
+import type { Weighed } from './placed.js';
 
 /** Fixed scales, so that adding or removing a part never reorders the rest: EUR, and A. */
 const PRICE = { target: 0.05, worst: 20 };
@@ -22,7 +22,7 @@ export type Share = (typeof SHARES)[number];
 export const EQUAL: ShareWeights = { margins: 1, price: 1, current: 1 };
 
 /** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (M10). */
-export function meritOf(judged: JudgedPart, weights: ShareWeights = EQUAL): Merit {
+export function meritOf(judged: Weighed, weights: ShareWeights = EQUAL): Merit {
   const margins = marginShare(judged);
   const price = onLogScale(priceInEuro(judged), PRICE);
   const current = onLogScale(judged.current, CURRENT);
@@ -32,11 +32,11 @@ export function meritOf(judged: JudgedPart, weights: ShareWeights = EQUAL): Meri
 }
 
 /** Price for the order, EUR; another currency is not converted and counts as not known. */
-export function priceInEuro({ part }: JudgedPart): number | null {
+export function priceInEuro({ part }: Pick<Weighed, 'part'>): number | null {
   return part.price?.currency === 'EUR' ? part.price.amount : null;
 }
 
-function marginShare(judged: JudgedPart): number {
+function marginShare(judged: Weighed): number {
   const scores = judged.verdicts.map(comfortOf).filter((score) => score !== null);
   return scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
 }

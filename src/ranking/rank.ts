@@ -3,6 +3,7 @@ import { comfortOf, marginForOrder } from './comfort.js';
 import { dominatorsOf } from './dominance.js';
 import { linesOf } from './family.js';
 import { meritOf, priceInEuro, type Merit, type ShareWeights } from './merit.js';
+import type { Placed } from './placed.js';
 
 export const ORDERS = ['merit', 'price', 'current', 'margin'] as const;
 export type Order = (typeof ORDERS)[number];
@@ -63,7 +64,7 @@ export function decisionBetween(order: Order, [one, other]: readonly [JudgedPart
 }
 
 /** What decides between two: the steps of the order, each 0 when they are equal there. */
-export const STEPS: readonly { readonly name: string; readonly compare: (a: Candidate, b: Candidate) => number }[] = [
+export const STEPS: readonly { readonly name: string; readonly compare: (a: Placed, b: Placed) => number }[] = [
   { name: 'tier', compare: (a, b) => Number(a.part.tier === 'generic') - Number(b.part.tier === 'generic') },
   { name: 'proof', compare: (a, b) => Number(a.proof === 'typical') - Number(b.proof === 'typical') },
   { name: 'merit', compare: (a, b) => b.merit.total - a.merit.total },
@@ -73,17 +74,21 @@ export const STEPS: readonly { readonly name: string; readonly compare: (a: Cand
   { name: 'id', compare: (a, b) => (a.part.id < b.part.id ? -1 : a.part.id > b.part.id ? 1 : 0) },
 ];
 
-const FIRST: Record<Order, (a: Candidate, b: Candidate) => number> = {
+const FIRST: Record<Order, (a: Placed, b: Placed) => number> = {
   merit: () => 0,
   price: (a, b) => unknownLast(priceInEuro(a), priceInEuro(b)),
   current: (a, b) => unknownLast(a.current, b.current),
   margin: (a, b) => leastMargin(b) - leastMargin(a),
 };
 
-function compareIn(order: Order, a: Candidate, b: Candidate): number {
-  const first = FIRST[order](a, b);
-  if (first !== 0) return first;
-  return STEPS.map((step) => step.compare(a, b)).find((difference) => difference !== 0) ?? 0;
+/** Step by step: the later ones cost more and seldom decide. */
+export function compareIn(order: Order, a: Placed, b: Placed): number {
+  let difference = FIRST[order](a, b);
+  for (const step of STEPS) {
+    if (difference !== 0) return difference;
+    difference = step.compare(a, b);
+  }
+  return difference;
 }
 
 function unknownLast(a: number | null, b: number | null): number {
@@ -91,12 +96,13 @@ function unknownLast(a: number | null, b: number | null): number {
   return a - b;
 }
 
-function leastMargin(judged: JudgedPart): number {
+function leastMargin(judged: Placed): number {
   const margins = judged.verdicts.map(marginForOrder).filter((margin) => margin !== null);
   return Math.min(...margins, Number.MAX_VALUE);
 }
 
-function tightestOf(judged: JudgedPart): string | null {
+/** The check with the least comfortable margin. */
+export function tightestOf(judged: JudgedPart): string | null {
   const scored = judged.verdicts.flatMap((verdict) => {
     const score = comfortOf(verdict);
     return score === null ? [] : [{ check: verdict.check, score, margin: marginForOrder(verdict) ?? 0 }];

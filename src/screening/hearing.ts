@@ -16,6 +16,7 @@ export function hearing(readings: Readings, heard: Heard[]): Readings {
   };
   return {
     identity: readings.identity,
+    brief: readings.brief,
     figure: (parameter, end) => hear((of) => of.figure(parameter, end)),
     figureOrClass: (parameter) => hear((of) => of.figureOrClass(parameter)),
     figureOrAssumed: (parameter, assumed, end) => hear((of) => of.figureOrAssumed(parameter, assumed, end)),

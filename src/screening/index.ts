@@ -1,4 +1,4 @@
-export { judgePart, judging, rulesFor, verdictsOf, type Judging } from './judge.js';
+export { judgePart, judging, judgingOf, lendersOf, rulesFor, verdictsOf, type Judging } from './judge.js';
 export { probePart, type Probe, type Probed } from './probe.js';
 export type { BatteryLife } from './battery.js';
 export type { DynamicRange } from './dynamic-range.js';
@@ -6,3 +6,7 @@ export type { PartHazard } from './hazards.js';
 export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
 export { screen, type Rejection, type Screened } from './screen.js';
 export { outlining, type Marked, type Outlined } from './outline.js';
+export { lazyList } from './lazy-list.js';
+export { screenViews, type SurveyedCatalog } from './screen-views.js';
+export type { Digest } from './digest.js';
+export type { SurveyedFit } from './survey.js';

@@ -1,7 +1,7 @@
-import { CHECKS } from '../checks/index.js';
+import { CHECKS, type AnyCheck } from '../checks/index.js';
 import { CHECK_IDS, type Demands, type UnbuiltDemand } from '../demands/index.js';
 import { classesOf } from '../parts/classes.js';
-import type { Part } from '../parts/part.js';
+import type { Part, PartSource } from '../parts/part.js';
 import type { ClassWorst, ReadingRules } from '../parts/reading.js';
 import { readingsOf, type Readings } from '../parts/readings.js';
 import { decide, standingOf } from '../verdicts/decide.js';
@@ -31,6 +31,16 @@ export function judging(demands: Demands, parts: readonly Part[], strict: boolea
   return { demands, strict, classes: classesOf(parts, demands.operating), sets };
 }
 
+/** The same for the parts of a source: what can be borrowed stands in its generic sets. */
+export function judgingOf(demands: Demands, source: Pick<PartSource, 'parts' | 'screening'>, strict: boolean): Judging {
+  return judging(demands, lendersOf(source), strict);
+}
+
+/** Parts of a source among which the generic sets are: those alone where they are kept apart, so that the others need not be read. */
+export function lendersOf(source: Pick<PartSource, 'parts' | 'screening'>): readonly Part[] {
+  return source.screening?.generic ?? source.parts;
+}
+
 /** Every check of one part; none stops another. */
 export function judgePart(run: Judging, part: Part): JudgedPart {
   const verdicts = verdictsOf(run, part);
@@ -54,14 +64,16 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
 export function verdictsOf(run: Judging, part: Part, only?: ReadonlySet<string>): Verdict[] {
   const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
   const best = readingsOf({ part, ...rulesFor(run, part), outlook: 'optimistic' });
-  const built = CHECKS.flatMap((check) => {
-    if (only !== undefined && !only.has(check.id)) return [];
-    const pessimistic = check.judge(run.demands, worst);
-    const optimistic = check.judge(run.demands, best);
-    return pessimistic === null || optimistic === null ? [] : [decide(check, pessimistic, optimistic)];
-  });
+  const built = CHECKS.flatMap((check) => (only !== undefined && !only.has(check.id) ? [] : (verdictOn(check, run.demands, [worst, best]) ?? [])));
   const order = (verdict: Verdict): number => (CHECK_IDS as readonly string[]).indexOf(verdict.check);
   return [...built, ...(only === undefined ? run.demands.unbuilt.map(notBuilt) : [])].sort((a, b) => order(a) - order(b));
+}
+
+/** One check on the pessimistic and the optimistic readings of a part; null where it does not apply. */
+export function verdictOn(check: AnyCheck, demands: Demands, [worst, best]: readonly [Readings, Readings]): Verdict | null {
+  const pessimistic = check.judge(demands, worst);
+  const optimistic = check.judge(demands, best);
+  return pessimistic === null || optimistic === null ? null : decide(check, pessimistic, optimistic);
 }
 
 /** How the figures of a part are read in this run. */

@@ -1,7 +1,7 @@
 import type { Verdict } from '../verdicts/verdict.js';
 import type { JudgedPart } from './judged-part.js';
 
-const SHOWN = 3;
+export const SHOWN = 3;
 /** A word that does not match is farther away than any number nearby. */
 const WORD = 3;
 /** What counts as one step of a temperature, K, and of a head-room, as a fraction of the supply. */
@@ -20,7 +20,7 @@ function distanceOf({ verdicts }: JudgedPart, nominalSupply: number): number {
 }
 
 /** 0 at the limit; ratios count as their logarithm. */
-function shortness(verdict: Verdict, nominalSupply: number): number {
+export function shortness(verdict: Verdict, nominalSupply: number): number {
   if (verdict.margin !== null && verdict.margin > 0) return Math.abs(Math.log(verdict.margin));
   if (typeof verdict.required !== 'number') return WORD;
   const offered = typeof verdict.offered === 'number' ? verdict.offered : verdict.known;

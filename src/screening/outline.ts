@@ -5,6 +5,7 @@ import { readingsOf, type Readings } from '../parts/readings.js';
 import { decide } from '../verdicts/decide.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { confirmations } from './confirm.js';
+import { costOf, isDear } from './cost.js';
 import { hearing, hearsTheSame, type Heard } from './hearing.js';
 import { judging, notBuilt, outcomeOf, rulesFor, type Judging } from './judge.js';
 import type { JudgedPart, PartOutcome } from './judged-part.js';
@@ -62,12 +63,7 @@ interface Asked {
   readonly mark: string;
 }
 
-/** They integrate, march or search. */
-const SLOW: ReadonlySet<string> = new Set(['phase-margin', 'noise', 'distortion', 'settling', 'frequency-error']);
-/** They go through corners or add up terms. */
-const LONG: ReadonlySet<string> = new Set(['output-low', 'output-high', 'output-current', 'dc-error', 'slew-rate', 'stable-gain', 'junction-temperature']);
-const cost = ({ id }: AnyCheck): number => (SLOW.has(id) ? 2 : LONG.has(id) ? 1 : 0);
-const QUICK_FIRST: readonly AnyCheck[] = [...CHECKS].sort((a, b) => cost(a) - cost(b));
+const QUICK_FIRST: readonly AnyCheck[] = [...CHECKS].sort((a, b) => costOf(a.id) - costOf(b.id));
 
 function asks(demands: Demands, circuit: string): Asked[] {
   return QUICK_FIRST.filter((check) => check.isAsked(demands)).map((check) => ({ check, mark: markOf(check.asked(demands), circuit) }));
@@ -127,7 +123,7 @@ const isHeardAgain = ({ heard }: Known, [worst, best]: Both): boolean => heard !
 
 /** A slow check is listened to: where it would read the same again, it would find the same again. */
 function judged(check: AnyCheck, { demands }: Run, [worst, best]: Both): Pick<Known, 'heard' | 'verdict'> {
-  const heard: [Heard[], Heard[]] | null = SLOW.has(check.id) ? [[], []] : null;
+  const heard: [Heard[], Heard[]] | null = isDear(check.id) ? [[], []] : null;
   const pessimistic = check.judge(demands, heard === null ? worst : hearing(worst, heard[0]));
   const optimistic = check.judge(demands, heard === null ? best : hearing(best, heard[1]));
   return { heard, verdict: pessimistic === null || optimistic === null ? null : decide(check, pessimistic, optimistic) };

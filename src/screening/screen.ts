@@ -40,6 +40,11 @@ function tally(rejected: readonly JudgedPart[]): Rejection[] {
       if (outcome === 'fail') counts.set(check, (counts.get(check) ?? 0) + 1);
     }
   }
+  return byFrequency(counts);
+}
+
+/** Most frequent first, then in the order of the checks. */
+export function byFrequency(counts: ReadonlyMap<string, number>): Rejection[] {
   const order = (check: string): number => (CHECK_IDS as readonly string[]).indexOf(check);
   return [...counts].map(([check, parts]) => ({ check, parts })).sort((a, b) => b.parts - a.parts || order(a.check) - order(b.check));
 }

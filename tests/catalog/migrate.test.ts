@@ -38,7 +38,7 @@ describe('the migrations', () => {
     const database = new Database(':memory:');
     await migrate(database);
     const strict = database.prepare("select name from pragma_table_list where strict = 1 and schema = 'main' order by name").pluck().all();
-    expect(strict).toEqual(['list_import', 'part', 'record', 'saved_stage']);
+    expect(strict).toEqual(['dictionary', 'dictionary_segment', 'dictionary_trait', 'list_import', 'part', 'part_generation', 'record', 'saved_stage']);
     expect(database.pragma('application_id', { simple: true })).toBe(APPLICATION_ID);
     expect(database.pragma('user_version', { simple: true })).toBe(SCHEMA_VERSION);
   });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { reduceMesh, starMesh } from '../../src/formulas/star-mesh.js';
+import { reduceMesh, roomFor, starMesh } from '../../src/formulas/star-mesh.js';
 import { refuses } from '../support/examples.js';
 import { capacitor, resistor } from './networks.js';
 
@@ -10,6 +10,13 @@ describe('star and mesh', () => {
     expect(mesh.conductance[1]).toBeCloseTo(1.5e-3, 15);
     expect(mesh.conductance[5]).toBe(mesh.conductance[1]);
     expect(mesh.capacitance[1 * 5 + 4]).toBe(3e-12);
+  });
+  it('answers in room it is given, whatever was there before', () => {
+    const mesh = starMesh([resistor('A', 1e3, ['input', 'x']), resistor('B', 3e3, ['x', 'pin']), capacitor('C', 1e-9, ['x', 'ground'])], 'pin', 2e-12);
+    const room = roomFor(mesh);
+    expect(room.re).toHaveLength(25);
+    reduceMesh(mesh, 1e6, room);
+    expect(reduceMesh(mesh, 1e3, room)).toEqual(reduceMesh(mesh, 1e3));
   });
   it('leaves a series of two resistors as one branch', () => {
     const { re } = reduceMesh(starMesh([resistor('A', 1e3, ['input', 'x']), resistor('B', 3e3, ['x', 'pin'])], 'pin', 0), 0);

@@ -1,0 +1,93 @@
+import type Database from 'better-sqlite3';
+import { TRAITS, type Trait } from '../parts/traits.js';
+import type { Cell } from './part-row.js';
+import { TRAIT_COLUMNS } from './trait-columns.js';
+
+/** Parts in one segment: its codes are read, and its sums kept, in one go. */
+export const SEGMENT = 1 << 16;
+/** Changes when the tables of the dictionary mean something else; one of another form is made anew. */
+export const FORM = 2;
+/** The trait under which the keys of the rows are kept, in the order of the parts. */
+export const KEYS = 'row key';
+
+/** Takes parts apart as they come, in the order of the catalog; a segment is written when it is full, so that memory stays bounded. */
+export interface Encoder {
+  /** `row` as `partToRow` makes it. */
+  readonly add: (key: number, row: readonly Cell[]) => void;
+  /** Writes what is left, and declares the dictionary to hold. */
+  readonly finish: () => void;
+}
+
+interface Coding {
+  readonly trait: Trait;
+  readonly columns: readonly number[];
+  /** Code by the cell, or by several as text. */
+  readonly known: Map<Cell, number>;
+  readonly pieces: (readonly Cell[])[];
+  readonly codes: Uint32Array;
+}
+
+/** To be used inside a transaction, for `expected` parts. Replaces what was there. */
+export function encoder(database: Database.Database, expected: number): Encoder {
+  for (const table of ['dictionary', 'dictionary_trait', 'dictionary_segment']) database.prepare(`delete from ${table}`).run();
+  const room = Math.min(SEGMENT, expected);
+  const codings = TRAITS.map((trait) => codingOf(trait, room));
+  const keys = new Uint32Array(room);
+  const insert = database.prepare('insert into dictionary_segment (trait, segment, width, codes) values (?, ?, ?, ?)');
+  let parts = 0;
+  const flush = (): void => {
+    const count = parts % SEGMENT === 0 ? Math.min(parts, SEGMENT) : parts % SEGMENT;
+    if (count === 0) return;
+    const segment = Math.ceil(parts / SEGMENT) - 1;
+    insert.run(KEYS, segment, 4, bytesOf(keys.slice(0, count), 4));
+    for (const { trait, pieces, codes } of codings) {
+      const width = pieces.length <= 256 ? 1 : pieces.length <= 65_536 ? 2 : 4;
+      insert.run(trait, segment, width, bytesOf(codes.slice(0, count), width));
+    }
+  };
+  return {
+    add(key, row) {
+      const at = parts % SEGMENT;
+      keys[at] = key;
+      for (const coding of codings) coding.codes[at] = codeOf(coding, row);
+      parts += 1;
+      if (parts % SEGMENT === 0) flush();
+    },
+    finish() {
+      if (parts % SEGMENT !== 0) flush();
+      const insertTrait = database.prepare('insert into dictionary_trait (trait, pieces) values (?, ?)');
+      for (const { trait, pieces } of codings) insertTrait.run(trait, JSON.stringify(pieces));
+      database.prepare('insert into dictionary (only, generation, form, parts, segment) select 1, generation, ?, ?, ? from part_generation').run(FORM, parts, SEGMENT);
+    },
+  };
+}
+
+function codingOf(trait: Trait, room: number): Coding {
+  return { trait, columns: TRAIT_COLUMNS.get(trait) ?? [], known: new Map(), pieces: [], codes: new Uint32Array(room) };
+}
+
+function codeOf({ columns, known, pieces }: Coding, row: readonly Cell[]): number {
+  const key = keyOf(columns, row);
+  const code = known.get(key);
+  if (code !== undefined) return code;
+  known.set(key, pieces.length);
+  return pieces.push(columns.map((column) => row[column] ?? null)) - 1;
+}
+
+/** One cell that is filled alone, as it mostly is, is told by its place and value without making a text of all of them. */
+function keyOf(columns: readonly number[], row: readonly Cell[]): Cell {
+  const [first = 0] = columns;
+  if (columns.length === 1) return row[first] ?? null;
+  let filled = 0;
+  for (const column of columns) if ((row[column] ?? null) !== null) filled += 1;
+  if (filled === 0) return null;
+  if (filled === 1 && typeof row[first] === 'number') return row[first];
+  return columns.map((column) => JSON.stringify(row[column] ?? null)).join();
+}
+
+/** Little-endian, whatever the machine. */
+function bytesOf(codes: Uint32Array, width: number): Buffer {
+  const bytes = Buffer.allocUnsafe(codes.length * width);
+  for (let at = 0; at < codes.length; at += 1) bytes.writeUIntLE(codes[at] ?? 0, at * width, width);
+  return bytes;
+}

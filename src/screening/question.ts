@@ -1,0 +1,92 @@
+import { CHECKS } from '../checks/index.js';
+import { CHECK_IDS, markOf } from '../demands/index.js';
+import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
+import { TRAITS } from '../parts/traits.js';
+import type { Readings } from '../parts/readings.js';
+import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
+import { digests, type Digests } from './digest.js';
+import { notBuilt, verdictOn, type Judging } from './judge.js';
+import { standIn, type StandIn } from './stand-in.js';
+
+/** Something asked of every part of a view, with the answers found so far. */
+export interface Question {
+  readonly tree: DecisionTree;
+  /** Answers the part whose codes these are; what it looked at goes to `path`. */
+  answer(codeOf: (trait: number) => number, path: Step[]): number;
+}
+
+/** A check asked of every part. */
+export interface CheckQuestion extends Question {
+  readonly check: string;
+  readonly digests: Digests;
+}
+
+type Both = readonly [Readings, Readings];
+
+/** Every check the stage asks for, in the order of verdicts. What was found out for the stage asked before serves again where it asks the same. */
+export function checkQuestions(run: Judging, view: ScreenView, circuit: string): CheckQuestion[] {
+  const { demands } = run;
+  const kept = keptFor(run, view);
+  const built = CHECKS.filter((check) => check.isAsked(demands)).map((check) => {
+    const mark = markOf(check.asked(demands), circuit);
+    const before = kept.questions.get(check.id);
+    if (before?.mark === mark) return before.question;
+    const question = checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => verdictOn(check, demands, readings) });
+    kept.questions.set(check.id, { mark, question });
+    return question;
+  });
+  const unbuilt = demands.unbuilt.map((demand) => checkQuestion(run, kept, { check: demand.check, verdict: () => notBuilt(demand) }));
+  const order = ({ check }: CheckQuestion): number => (CHECK_IDS as readonly string[]).indexOf(check);
+  return [...built, ...unbuilt].sort((a, b) => order(a) - order(b));
+}
+
+/** What is kept of a view in the surroundings it was last asked about. */
+interface Kept {
+  readonly surroundings: string;
+  readonly view: ScreenView;
+  readonly standIn: StandIn;
+  /** The last question of each check, by what the stage asked: a changed limit redoes the checks it touches, and no others. */
+  readonly questions: Map<string, { readonly mark: string; readonly question: CheckQuestion }>;
+}
+
+const KEPT = new WeakMap<ScreenView, Kept>();
+
+function keptFor({ demands: { operating }, strict, classes }: Judging, view: ScreenView): Kept {
+  const surroundings = markOf([operating, strict, [...classes]], '');
+  const before = KEPT.get(view);
+  if (before?.surroundings === surroundings) return before;
+  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map() };
+  KEPT.set(view, kept);
+  return kept;
+}
+
+interface Asked {
+  readonly check: string;
+  readonly verdict: (readings: Both) => ReturnType<typeof verdictOn>;
+}
+
+function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): CheckQuestion {
+  const found = digests(run.demands.operating.nominalSupply);
+  return { check, digests: found, ...question(kept, (readings) => found.add(verdict(readings))) };
+}
+
+/** A number read off the pessimistic readings of every part, by answer. */
+export function valueQuestion(run: Judging, view: ScreenView, value: (worst: Readings) => number | null): Question & { readonly values: readonly (number | null)[] } {
+  const values: (number | null)[] = [];
+  return { values, ...question(keptFor(run, view), ([worst]) => values.push(value(worst)) - 1) };
+}
+
+function question({ view, standIn: { readings, become } }: Kept, decide: (readings: Both) => number): Question {
+  return {
+    tree: decisionTree((trait) => view.width(TRAITS[trait] ?? 'class')),
+    answer(codeOf, path) {
+      become((trait) => {
+        const number = TRAIT_NUMBER.get(trait) ?? 0;
+        const code = codeOf(number);
+        path.push({ trait: number, code });
+        return view.piece(trait, code);
+      });
+      return decide(readings);
+    },
+  };
+}

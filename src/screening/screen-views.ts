@@ -1,0 +1,83 @@
+import type { ScreenView } from '../parts/screen-view.js';
+import { judgePart, type Judging } from './judge.js';
+import type { JudgedPart } from './judged-part.js';
+import { lazyList } from './lazy-list.js';
+import { nearestOf } from './nearest.js';
+import { byFrequency, type Screened } from './screen.js';
+import { OUTCOME, survey, type Survey, type SurveyedFit, type SurveyRequest } from './survey.js';
+
+/** A catalog judged through its views: complete counts, and lists whose parts are read and judged in words when they are looked at. */
+export interface SurveyedCatalog extends Screened {
+  readonly places: readonly SurveyedFit[];
+  /** A part that fits, judged as a whole. */
+  judgedAt(fit: Pick<SurveyedFit, 'view' | 'position'>): JudgedPart;
+}
+
+/** The same answer as `screen` over all parts of the views, in their order. */
+export function screenViews(run: Judging, views: readonly ScreenView[], request: SurveyRequest): SurveyedCatalog {
+  const surveys = views.map((view) => survey(run, view, request));
+  const judgedAt = judgeOnce(run);
+  const places = surveys.flatMap(({ fits }) => fits);
+  const near = surveys.flatMap(({ view, nearest }) => nearest.map(({ position }) => judgedAt({ view, position })));
+  return {
+    places,
+    judgedAt,
+    fit: lazyList(places.length, (at) => judgedAt(member(places, at))),
+    undecided: joined(surveys, ({ undecided }) => undecided, judgedAt),
+    rejected: joined(surveys, rejectedIn, judgedAt),
+    rejections: byFrequency(totals(surveys)),
+    nearest: nearestOf(near, run.demands.operating.nominalSupply),
+  };
+}
+
+/** A part that several lists show is read and judged once. */
+function judgeOnce(run: Judging): SurveyedCatalog['judgedAt'] {
+  const known = new Map<ScreenView, Map<number, JudgedPart>>();
+  return ({ view, position }) => {
+    const ofView = known.get(view) ?? new Map<number, JudgedPart>();
+    known.set(view, ofView);
+    const judged = ofView.get(position) ?? judgePart(run, view.part(position));
+    ofView.set(position, judged);
+    return judged;
+  };
+}
+
+/** The positions of all surveys one after another. Where they stand is found out when the list is first looked into. */
+function joined(surveys: readonly Survey[], positionsIn: (one: Survey) => Positions, judgedAt: SurveyedCatalog['judgedAt']): readonly JudgedPart[] {
+  const parts = surveys.map((one) => ({ view: one.view, positions: positionsIn(one) }));
+  const length = parts.reduce((sum, { positions }) => sum + positions.length, 0);
+  return lazyList(length, (at) => {
+    let left = at;
+    for (const { view, positions } of parts) {
+      if (left < positions.length) return judgedAt({ view, position: member(positions, left) });
+      left -= positions.length;
+    }
+    throw new RangeError(`no part at ${at} of ${length}`);
+  });
+}
+
+type Positions = ArrayLike<number>;
+
+function rejectedIn({ outcomes, fits, undecided }: Survey): Positions {
+  const rejected = new Uint32Array(outcomes.length - fits.length - undecided.length);
+  let filled = 0;
+  outcomes.forEach((outcome, position) => {
+    if (outcome === OUTCOME.rejected) rejected[filled++] = position;
+  });
+  return rejected;
+}
+
+function totals(surveys: readonly Survey[]): Map<string, number> {
+  const sums = new Map<string, number>();
+  for (const { failing } of surveys) {
+    for (const [check, parts] of failing) if (parts > 0) sums.set(check, (sums.get(check) ?? 0) + parts);
+  }
+  return sums;
+}
+
+function member<Member>(list: ArrayLike<Member>, at: number): Member {
+  const found = list[at];
+  if (found === undefined) throw new RangeError(`nothing at ${at} of ${list.length}`);
+  return found;
+}
+

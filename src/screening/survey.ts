@@ -1,0 +1,177 @@
+import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
+import type { Trait } from '../parts/traits.js';
+import { buffersFor, codesOf, segmentOf, type Buffers } from './buffers.js';
+import { costOf } from './cost.js';
+import { COUNTS, type Digest } from './digest.js';
+import type { Judging } from './judge.js';
+import { nearestKeeper, type Near } from './near.js';
+import { checkQuestions, valueQuestion, type CheckQuestion } from './question.js';
+
+/** A part that fits, with what its place in the order depends on. */
+export interface SurveyedFit {
+  readonly view: ScreenView;
+  readonly position: number;
+  /** One a check asked; null where it does not apply. */
+  readonly digests: readonly (Digest | null)[];
+  readonly isGuaranteed: boolean;
+  /** Pessimistic quiescent current, A. */
+  readonly current: number | null;
+  /** Codes of price and family in the view. */
+  readonly price: number;
+  readonly family: number;
+}
+
+/** The parts of one view judged, none of them read. */
+export interface Survey {
+  readonly view: ScreenView;
+  /** By position. */
+  readonly outcomes: Uint8Array;
+  readonly fits: readonly SurveyedFit[];
+  /** Positions that cannot be decided. */
+  readonly undecided: readonly number[];
+  /** Parts that fail a check, by check. */
+  readonly failing: ReadonlyMap<string, number>;
+  /** The rejected parts nearest to fitting. */
+  readonly nearest: readonly Near[];
+}
+
+export const OUTCOME = { fits: 0, undecided: 1, rejected: 2 } as const;
+
+/** What a survey is made for. */
+export interface SurveyRequest {
+  /** Mark of the circuit the demands belong to (`circuitMark`). */
+  readonly circuit: string;
+  /** Only what becomes of each part is wanted: one that fails is asked nothing more, and no check is tallied. */
+  readonly outcomesOnly?: boolean;
+}
+
+/** Judges every part of a view: each check once per distinct combination of the pieces it looks at; then codes are added up. */
+export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): Survey {
+  const questions = checkQuestions(run, view, circuit);
+  const current = valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+  const counting: Counting = {
+    run, view, questions, current, outcomesOnly,
+    outcomes: new Uint8Array(view.size), fits: [], undecided: [], nearest: nearestKeeper(),
+    fails: new Float64Array(questions.length),
+    buffers: buffersFor(view, questions.length),
+  };
+  for (let segment = 0; segment * view.segment < view.size; segment += 1) surveySegment(counting, segment);
+  const failing = new Map(questions.map(({ check }, at) => [check, counting.fails[at] ?? 0]));
+  return { view, outcomes: counting.outcomes, fits: counting.fits, undecided: counting.undecided, failing, nearest: counting.nearest.found() };
+}
+
+interface Counting {
+  readonly run: Judging;
+  readonly view: ScreenView;
+  readonly questions: readonly CheckQuestion[];
+  readonly current: ReturnType<typeof valueQuestion>;
+  readonly outcomesOnly: boolean;
+  readonly outcomes: Uint8Array;
+  readonly fits: SurveyedFit[];
+  readonly undecided: number[];
+  readonly nearest: ReturnType<typeof nearestKeeper>;
+  readonly fails: Float64Array;
+  readonly buffers: Buffers;
+}
+
+function surveySegment(counting: Counting, segment: number): void {
+  const { view, questions, buffers } = counting;
+  const count = Math.min(view.segment, view.size - segment * view.segment);
+  const codes = codesOf(view, segment, buffers);
+  buffers.sums.fill(0);
+  buffers.distances.fill(0);
+  const ask = (at: number, only: Int32Array | null): void => {
+    const [one, answers] = [questions[at], buffers.answers[at]];
+    if (one === undefined || answers === undefined) return;
+    one.tree.classify(segmentOf(one, { count, codes, only }), answers);
+    addUp(counting, { one, at, answers, count, only });
+  };
+  if (counting.outcomesOnly) askWhileOpen(counting, count, ask);
+  else questions.forEach((_, at) => ask(at, null));
+  sortOut(counting, { segment, count, codes });
+}
+
+/** The cheapest questions first, and each only about the parts that have not failed yet. */
+function askWhileOpen({ questions, buffers: { sums } }: Counting, count: number, ask: (at: number, only: Int32Array | null) => void): void {
+  const places = questions.map((_, at) => at).sort((a, b) => costOf(questions[a]?.check) - costOf(questions[b]?.check));
+  let open = Int32Array.from({ length: count }, (_, at) => at);
+  for (const at of places) {
+    ask(at, open);
+    open = open.filter((part) => ((sums[part] ?? 0) & (COUNTS.weak - 1)) === 0);
+  }
+}
+
+interface Answered {
+  readonly one: CheckQuestion;
+  readonly at: number;
+  readonly answers: Int32Array;
+  readonly count: number;
+  readonly only: Int32Array | null;
+}
+
+/** Distances are added in the order of the verdicts, as they are for a part judged alone: the sums agree to the last bit. */
+function addUp({ buffers: { sums, distances }, fails }: Counting, { one, at, answers, count, only }: Answered): void {
+  const { counts, distances: short } = one.digests;
+  const adds = Int32Array.from(counts);
+  const far = Float64Array.from(short);
+  let failed = 0;
+  const asked = only?.length ?? count;
+  for (let place = 0; place < asked; place += 1) {
+    const part = only === null ? place : (only[place] ?? 0);
+    const answer = answers[part] ?? 0;
+    const add = adds[answer] ?? 0;
+    if (add === 0) continue;
+    sums[part] = (sums[part] ?? 0) + add;
+    if (add !== COUNTS.fail) continue;
+    failed += 1;
+    distances[part] = (distances[part] ?? 0) + (far[answer] ?? 0);
+  }
+  fails[at] = (fails[at] ?? 0) + failed;
+}
+
+interface Place {
+  readonly segment: number;
+  readonly count: number;
+  readonly codes: (trait: number) => Int32Array;
+}
+
+function sortOut(counting: Counting, { segment, count, codes }: Place): void {
+  const { view, outcomesOnly, outcomes, undecided, nearest, buffers } = counting;
+  const first = segment * view.segment;
+  const fitting: number[] = [];
+  for (let at = 0; at < count; at += 1) {
+    const sum = buffers.sums[at] ?? 0;
+    if ((sum & (COUNTS.weak - 1)) !== 0) {
+      outcomes[first + at] = OUTCOME.rejected;
+      if (!outcomesOnly) nearest.see(first + at, buffers.distances[at] ?? 0);
+    } else if (sum >= COUNTS.unknown) {
+      outcomes[first + at] = OUTCOME.undecided;
+      undecided.push(first + at);
+    } else fitting.push(at);
+  }
+  addFits(counting, { first, fitting, count, codes });
+}
+
+interface Fitting extends Omit<Place, 'segment'> {
+  readonly first: number;
+  readonly fitting: readonly number[];
+}
+
+function addFits({ view, questions, current, fits, buffers }: Counting, { first, fitting, count, codes }: Fitting): void {
+  if (fitting.length === 0) return;
+  current.tree.classify(segmentOf(current, { count, codes, only: Int32Array.from(fitting) }), buffers.current);
+  const [prices, families] = [codes(numberOf('price')), codes(numberOf('family'))];
+  for (const at of fitting) {
+    fits.push({
+      view,
+      position: first + at,
+      digests: questions.map(({ digests }, question) => digests.passes[buffers.answers[question]?.[at] ?? 0] ?? null),
+      isGuaranteed: ((buffers.sums[at] ?? 0) & (COUNTS.unknown - COUNTS.weak)) === 0,
+      current: current.values[buffers.current[at] ?? 0] ?? null,
+      price: prices[at] ?? 0,
+      family: families[at] ?? 0,
+    });
+  }
+}
+
+const numberOf = (trait: Trait): number => TRAIT_NUMBER.get(trait) ?? 0;
