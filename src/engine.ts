@@ -80,6 +80,7 @@ export function explain(stage: Stage, source: PartSource, request: ExplainReques
     asking,
     data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
+    curves: () => curvesOf(run, stage, judged.part),
   };
 }
 

@@ -82,6 +82,8 @@ export interface Explanation extends DemandsReport {
   readonly asking: Asking;
   readonly data: DataUsed;
   readonly origin: (partId: string, slot: string) => Origin | null;
+  /** What pictures of the stage with this part show; computed when asked. */
+  readonly curves: () => Curves;
 }
 
 /** The field that is swept, as the command understood it. */

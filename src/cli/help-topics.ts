@@ -1,4 +1,5 @@
 import { CHECKS, PARAMETERS, type Parameter } from '../index.js';
+import { EXPLAIN_PAGE, SHORTLIST_PAGE } from './bars-page.js';
 import { CODE_PAGES } from './code-pages.js';
 import { PHYSICS_PAGE } from './physics-page.js';
 import { fieldGroups, TOPOLOGY_PAIRS } from './stage-help.js';
@@ -52,6 +53,8 @@ export const TOPICS: Readonly<Record<string, () => readonly Block[]>> = {
     { text: 'crossover, phase-reversal, clamp and overdrive are judged when the stage writes avoid; otherwise they are cautions and decide nothing. railfit help physics tells how each is modelled and from which source.' },
   ],
   physics: () => PHYSICS_PAGE,
+  shortlist: () => SHORTLIST_PAGE,
+  explain: () => EXPLAIN_PAGE,
   prediction: () => [
     { text: 'railfit predict PART [STAGE] simulates the stage with the figures of one part, in two outcomes: with its typical figures as printed, and with the guaranteed ones as the checks read them pessimistically. It judges nothing and exits 0. --compare PART puts a second part beside it, --csv prints the waveform, --json both waveform and frequency response.' },
     { text: 'The amplifier is an integrator (gain bandwidth) with a finite gain, a hard limit of its slope, a second pole from its phase margin at unity gain, an output resistance that the load and the network stand behind, input capacitance, offset, and ends of its output at the head-room for the current that flows there. Between the moments where a limit takes hold or lets go the stage is linear and carried on by matrix exponentials, exactly; distortion is a Fourier transform of one settled period.' },

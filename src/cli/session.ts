@@ -1,5 +1,5 @@
 import type { Style } from '../index.js';
-import { usesAscii, usesColour, widthOf, type ColourWish, type Environment, type StreamFacts } from './terminal.js';
+import { usesAscii, usesBars, usesColour, widthOf, type ColourWish, type Environment, type StreamFacts } from './terminal.js';
 
 /** The world a command runs in; tests hand in their own. */
 export interface Session {
@@ -44,6 +44,7 @@ export function styleFor(session: Session, options: CommonOptions, stream: 'stdo
     all: options.all === true,
     sources: options.sources === true,
     formulas: options.formulas === true,
+    bars: usesBars(session.env, facts),
     gluedUnits: facts.isTTY,
   };
 }

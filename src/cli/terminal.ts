@@ -26,6 +26,14 @@ export function widthOf(env: Environment, stream: StreamFacts): number {
   return Math.min(MOST, Math.max(LEAST, stream.columns ?? told ?? USUAL));
 }
 
+/** From this width on the bars have room beside their names and numbers. */
+const ROOM_FOR_BARS = 80;
+
+/** Bars of one line: on a terminal of 80 columns or more that is not dumb; never in a pipe or a file. */
+export function usesBars(env: Environment, stream: StreamFacts): boolean {
+  return stream.isTTY && env['TERM'] !== 'dumb' && widthOf(env, stream) >= ROOM_FOR_BARS;
+}
+
 /** ASCII when asked, or when the locale names a character set that is not UTF-8; without any locale UTF-8 is taken. */
 export function usesAscii(asked: boolean, env: Environment): boolean {
   if (asked) return true;

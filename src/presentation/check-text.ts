@@ -60,10 +60,15 @@ export function passingInShort(verdicts: readonly Verdict[], style: Style): stri
   const widest = Math.max(...cells.map(({ left }) => displayWidth(left)));
   const pieces = cells.map(({ title, left }) => padded(`${padded(title, titles)}  ${left}`, titles + 2 + widest));
   const lines = flow(pieces, style, { lead: `${toned('PASS', 'good', style)}  ` });
-  return [...lines, ...verdicts.flatMap((verdict) => verdict.cautions.flatMap((caution) => cautionLine(`${verdict.title}: ${caution}`, style)))];
+  return [...lines, ...cautionsInShort(verdicts, style)];
 }
 
-function basisMark({ basis }: Verdict): string {
+/** Cautions of checks that are told in short, each with the check it belongs to. */
+export function cautionsInShort(verdicts: readonly Verdict[], style: Style): string[] {
+  return verdicts.flatMap((verdict) => verdict.cautions.flatMap((caution) => cautionLine(`${verdict.title}: ${caution}`, style)));
+}
+
+export function basisMark({ basis }: Verdict): string {
   return basis === null || basis === 'guaranteed' ? '' : ` (${MARKS[basis]})`;
 }
 

@@ -1,6 +1,7 @@
 import type { Explanation } from '../report.js';
 import { priceText } from './amounts.js';
-import { cautionLine, failingCheck, openCheck, passingCheck, passingInShort } from './check-text.js';
+import { marginBlocks, swingBlock } from './bars/explained.js';
+import { cautionLine, failingCheck, openCheck, passingCheck } from './check-text.js';
 import { changesLines } from './changes-text.js';
 import { batteryText, swingText } from './budget-text.js';
 import { commandOf, nextLines, type Offer } from './commands.js';
@@ -29,7 +30,9 @@ export function renderExplanation(explanation: Explanation, style: Style, contex
     [...paragraph(verdictLine(explanation, style), style), ...aboutLines(explanation, style), ...stageCautions(stage, style)],
     ...of('fail').map((verdict) => failingCheck(verdict, origins, style)),
     ...of('unknown').map((verdict) => openCheck(verdict, origins, style)),
-    ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : [passingInShort(of('pass'), style)]),
+    ...(style.all ? of('pass').map((verdict) => passingCheck(verdict, origins, style)) : []),
+    ...marginBlocks(judged.verdicts, style),
+    swingBlock(explanation, style),
     formulaLines(explanation, style),
     predictedLines(explanation, style),
     informedLines(judged, style),

@@ -2,6 +2,7 @@ import type { Part } from '../parts/part.js';
 import type { RankedPart } from '../ranking/index.js';
 import type { Report } from '../report.js';
 import { amount, priceText } from './amounts.js';
+import { tightestBar } from './bars/shortlisted.js';
 import { lifeText } from './budget-text.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
@@ -16,7 +17,7 @@ export function fitLines(report: Report, style: Style): string[] {
   const shown = report.fit.slice(0, style.top);
   if (shown.length === 0) return [];
   const hasBattery = report.fit.some(({ batteryHours }) => batteryHours !== null);
-  const rows = shown.map((one) => rowOf(one, hasBattery));
+  const rows = shown.map((one) => rowOf(one, hasBattery, style));
   return [...tableLines({ columns: columnsOf(report), rows }, style), ...more(report.fit.length - shown.length, 'fit', style)];
 }
 
@@ -35,6 +36,7 @@ function columnsOf({ fit }: Report): Column[] {
     { title: 'Class', moves: 1, name: '' },
     { title: 'Tightest check', name: 'tightest' },
     { title: 'worst case', name: '' },
+    { title: 'of limit\n0..100 %', ifRoom: true },
     { title: 'DC error\nat output', align: 'right', name: 'DC error at the output', moves: 3 },
     { title: 'Current\nmax', align: 'right', name: 'current', moves: 4 },
     { title: quantities.size === 1 ? `Price\nat ${quantity}` : 'Price', align: 'right', name: quantities.size === 1 ? `price at ${quantity}:` : 'price' },
@@ -43,7 +45,7 @@ function columnsOf({ fit }: Report): Column[] {
   ];
 }
 
-function rowOf(one: RankedPart, hasBattery: boolean): string[] {
+function rowOf(one: RankedPart, hasBattery: boolean, style: Style): string[] {
   const tightest = one.verdicts.find((verdict) => verdict.check === one.tightest);
   const error = one.verdicts.find((verdict) => verdict.check === 'dc-error')?.offered;
   return [
@@ -53,6 +55,7 @@ function rowOf(one: RankedPart, hasBattery: boolean): string[] {
     [aboutPart(one.part), ...variantWords(one)].filter((words) => words !== '').join('; '),
     tightest === undefined ? '' : checkWords(tightest.check),
     tightest === undefined ? '' : spareText(tightest),
+    tightest === undefined ? '' : tightestBar(tightest, style),
     typeof error === 'number' ? amount(error, 'V', { round: 'up' }) : '',
     one.current === null ? '' : amount(one.current, 'A', { round: 'up' }),
     priceText(one.part.price),

@@ -3,6 +3,7 @@ import { formatQuantity } from '../quantities/format.js';
 import type { RankedPart } from '../ranking/index.js';
 import type { Report } from '../report.js';
 import { aheadLines } from './ahead-text.js';
+import { firstSwing } from './bars/shortlisted.js';
 import { commandOf, nextLines, type Offer } from './commands.js';
 import { dataLine } from './data-text.js';
 import { emptyReason, nearestLines, swingLossToTry } from './empty-answer.js';
@@ -27,6 +28,7 @@ export function renderShortlist(report: Report, style: Style, context: CommandCo
     fits ? paragraph(countsLine(report), style) : [],
     [...fitLines(report, style), ...undecidedLines(report, style)],
     [...legendLine(report, style), ...orderLine(report, style)],
+    firstSwing(report, style),
     aheadLines(report, style),
     conflictLines(report, style),
     waysOutLines(report, style, context),

@@ -10,6 +10,8 @@ export interface Style {
   readonly sources: boolean;
   /** Explanations: the relation, numbers and source of each check. */
   readonly formulas?: boolean;
+  /** Bars of one line beside the numbers: on a terminal that is wide enough. The numbers stand in the text with them and without. */
+  readonly bars?: boolean;
   /** U+00A0 between number and unit, for terminals. Without it a plain blank; they stay on one line either way. */
   readonly gluedUnits: boolean;
 }

@@ -12,6 +12,8 @@ export interface Column {
   readonly name?: string;
   /** The last column may: it wraps in what room is left, and takes in the cells that had to move. */
   readonly wraps?: true;
+  /** Left out where another column would have to move for it: for what the other cells say already. */
+  readonly ifRoom?: true;
   /** Stands on the first line of the upright form. */
   readonly key?: true;
 }
@@ -28,16 +30,28 @@ const leadOf = ({ indent = 1 }: Table): string => ' '.repeat(indent);
 
 /** A table in the width there is: whole, or with some cells under their row, or upright. Columns without any content are left out. */
 export function tableLines(table: Table, style: Style): string[] {
-  const spelledTable = withSpelling(withoutEmpty(table), style);
+  const spelledTable = withRoom(withSpelling(withoutEmpty(table), style), style);
   const kept = isNarrow(style) ? null : fitting(spelledTable, style.width);
   return kept === null ? upright(spelledTable, style) : abreast(spelledTable, kept, style);
 }
 
 function withoutEmpty(table: Table): Table {
   const { columns, rows } = table;
-  const used = columns.map((_, at) => rows.some((row) => (row[at] ?? '') !== ''));
+  return only(table, columns.map((_, at) => rows.some((row) => (row[at] ?? '') !== '')));
+}
+
+/** The columns that are wished for if there is room stay when all others stand as they would without them. */
+function withRoom(table: Table, style: Style): Table {
+  const plain = only(table, table.columns.map(({ ifRoom }) => ifRoom !== true));
+  const extra = table.columns.length - plain.columns.length;
+  if (extra === 0 || isNarrow(style)) return plain;
+  const [all, fewer] = [fitting(table, style.width), fitting(plain, style.width)];
+  return all !== null && fewer !== null && all.columns.length === fewer.columns.length + extra ? table : plain;
+}
+
+function only(table: Table, used: readonly boolean[]): Table {
   const keep = <T>(list: readonly T[]): T[] => list.filter((_, at) => used[at]);
-  return { ...table, columns: keep(columns), rows: rows.map((row) => keep(row)) };
+  return { ...table, columns: keep(table.columns), rows: table.rows.map((row) => keep(row)) };
 }
 
 function withSpelling(table: Table, style: Style): Table {

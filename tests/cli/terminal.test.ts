@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { usesAscii, usesColour, widthOf, type ColourWish, type Environment } from '../../src/cli/terminal.js';
+import { usesAscii, usesBars, usesColour, widthOf, type ColourWish, type Environment } from '../../src/cli/terminal.js';
 import { requireBuilt } from '../support/built.js';
 import { makeWorkplace, type Workplace } from '../support/railfit.js';
 
@@ -39,6 +39,23 @@ describe('width', () => {
     [undefined, '500', 200],
   ])('terminal %s, COLUMNS %s: %i', (columns, told, width) => {
     expect(widthOf(told === undefined ? {} : { COLUMNS: told }, { isTTY: columns !== undefined, columns })).toBe(width);
+  });
+});
+
+describe('bars', () => {
+  it.each<[Environment, boolean, number | undefined, boolean]>([
+    [{}, true, 80, true],
+    [{}, true, 200, true],
+    [{}, true, 79, false],
+    [{}, true, 40, false],
+    [{}, true, undefined, true],
+    [{ COLUMNS: '79' }, true, undefined, false],
+    [{ NO_COLOR: '1' }, true, 100, true],
+    [{ TERM: 'dumb' }, true, 100, false],
+    [{}, false, undefined, false],
+    [{ COLUMNS: '200', FORCE_COLOR: '1' }, false, undefined, false],
+  ])('%j, a terminal %s of %s columns: %s', (env, isTTY, columns, bars) => {
+    expect(usesBars(env, { isTTY, columns })).toBe(bars);
   });
 });
 

@@ -27,7 +27,7 @@ const TEXTS: Readonly<Record<string, (style: Style) => string>> = {
   problems: (style) => renderProblems([{ code: 'Q002', severity: 'error', message: 'is 10M 10 MHz or 0.01 Hz? It has no unit', text: '10M', span: [0, 3], fix: '10 MHz', place }], style, '1 problem, 3 mV. (exit 3)'),
 };
 
-const anyStyle = fc.record({ width: fc.integer({ min: 40, max: 200 }), ascii: fc.boolean(), all: fc.boolean(), sources: fc.boolean(), gluedUnits: fc.boolean(), top: fc.integer({ min: 1, max: 20 }) })
+const anyStyle = fc.record({ width: fc.integer({ min: 40, max: 200 }), ascii: fc.boolean(), all: fc.boolean(), sources: fc.boolean(), gluedUnits: fc.boolean(), bars: fc.boolean(), top: fc.integer({ min: 1, max: 20 }) })
   .map((style) => ({ ...style, colour: false }));
 
 const UNIT = String.raw`(?:[fpnuµmkMGT]?(?:V|A|Ω|ohm|F|Hz|s)(?:/(?:µs|us|ms|s|V|°C|C))?|%|°C|C|dB|EUR|K)`;
