@@ -18,7 +18,7 @@ export { chosenJson } from './presentation/chosen-json.js';
 export { renderChosen, type ChosenReport, type ChosenStage } from './presentation/chosen-text.js';
 export { comparisonJson } from './presentation/comparison-json.js';
 export { renderComparison } from './presentation/comparison-text.js';
-export { commandOf } from './presentation/commands.js';
+export { commandOf, plainCommand } from './presentation/commands.js';
 export { demandsJson, document, explanationJson, problemsJson, shortlistJson } from './presentation/json.js';
 export { junitXml } from './presentation/junit.js';
 export { renderKnown, type Known } from './presentation/known-text.js';

@@ -66,11 +66,15 @@ interface Judging extends ReturnType<typeof judgingInput> {
   readonly wanted: string | undefined;
 }
 
+/** A shell that finds no file for a pattern hands over the pattern itself. */
+const isPattern = (name: string): boolean => /[*?[]/u.test(name);
+const NO_MATCH = 'no file matches this pattern, so the shell passed it on as it is: write the folder as seen from here, such as railfit check catalog/stages/*.yaml';
+
 /** The part asked for goes before the one the stage file names, and that before the one that is saved. */
 function judged({ path, name, saved }: AskedStage, { catalog, source, asking, wanted }: Judging): ChosenStage {
   const read = readStageFile(path, name);
   const part = wanted ?? (read.ok ? read.part : null) ?? saved;
-  if (!read.ok) return { file: name, part, reason: read.cause, words: failureWords(read) };
+  if (!read.ok) return { file: name, part, reason: read.cause, words: read.cause === 'gone' && isPattern(name) ? NO_MATCH : failureWords(read) };
   if (part === null) return { file: name, part, reason: 'not-chosen', words: `no part is chosen for it: part: ID in the file, or railfit stages add ${name} --part ID` };
   const found = findPart(source.parts, part, (id) => catalog.withdrawn(id));
   if (found.ok) return { file: name, part, explanation: explain(read.stage, source, { part: found.part, asking }) };

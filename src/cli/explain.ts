@@ -20,6 +20,8 @@ export interface ExplainOperands {
 export interface ExplainOptions extends JudgingOptions {
   /** Another part, to be held against this one. */
   readonly against?: string;
+  /** The relation of every check. */
+  readonly formulas?: boolean;
 }
 
 /** `railfit explain PART [STAGE]`: every check of one part on this stage. */
@@ -34,7 +36,7 @@ export async function runExplain(session: Session, operands: ExplainOperands, op
     if (!found.ok) throw new RequestError([found.problem], EXIT.request);
     const explanation = explain(stage, source, { part: found.part, asking, changing: changingOf(spec, given) });
     const exit = exitOfOutcome(explanation.judged.outcome);
-    if (options.json === true) return { text: explanationJson(explanation), exit };
+    if (options.json === true) return { text: explanationJson(explanation, { formulas: options.formulas === true }), exit };
     return { text: renderExplanation(explanation, styleFor(session, options), commandContext(file, options)), exit };
   });
 }

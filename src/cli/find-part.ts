@@ -1,4 +1,4 @@
-import type { Part } from '../index.js';
+import { plainCommand, type Part } from '../index.js';
 import type { WithdrawnPart } from '../catalog/index.js';
 import type { Problem } from '../quantities/problem.js';
 import { foldId, suggest } from '../quantities/suggest.js';
@@ -11,7 +11,7 @@ export function findPart(parts: readonly Part[], id: string, withdrawn: (id: str
   const part = parts.find((one) => one.id === id);
   if (part !== undefined) return { ok: true, part };
   const was = withdrawn(id);
-  if (was !== null) return { ok: false, problem: commandProblem('C113', `${id} ${withdrawnWords(was)}`, { fix: `railfit part ${id} shows it as it was last`, path: 'PART' }) };
+  if (was !== null) return { ok: false, problem: commandProblem('C113', `${id} ${withdrawnWords(was)}`, { fix: `${plainCommand('part', id)} shows it as it was last`, path: 'PART' }) };
   const ids = parts.map((one) => one.id);
   const alike = ids.filter((one) => foldId(one) === foldId(id));
   const near = [...new Set([...alike, ...suggest(id, ids)])].slice(0, 3);

@@ -95,7 +95,7 @@ function listed(catalog: Catalog): StagesReport['stages'] {
   return catalog.savedStages().map(({ path, part }) => {
     const file = shown(path, catalog);
     const read = readStageFile(foundPath(path, catalog.file), file);
-    return { file, part, name: read.ok ? read.stage.name : null, problem: read.ok ? null : failureWords(read) };
+    return { file, part: (read.ok ? read.part : null) ?? part, name: read.ok ? read.stage.name : null, problem: read.ok ? null : failureWords(read) };
   });
 }
 

@@ -1,9 +1,9 @@
-import { nearestE24 } from '../quantities/e-series.js';
 import { formatQuantity } from '../quantities/format.js';
 import type { Stage } from '../stage/index.js';
 import { remediesOf } from '../verdicts/remarks.js';
 import { allPass, type Errand } from './boundary.js';
 import { setting, type Changing, type Move } from './changing.js';
+import { gainWords, pairAt } from './resistor-pair.js';
 import { moversOf, valueMover, type Mover } from './movers.js';
 import { reaching, type Reacher } from './reacher.js';
 
@@ -62,18 +62,20 @@ const HIGHER = [2, 5, 10];
 
 /** Feedback resistors are a source of error and noise where they are large, and a load where they are small. The gain stays. */
 function feedback(errand: Errand, { inputs }: Changing): Reacher[] {
-  const { resistors, topology } = errand.bench.stage;
+  const { resistors, topology, seriesNegative } = errand.bench.stage;
   if (resistors === null || !RATIO.includes(topology)) return [];
   const ratios = [...(concerns(errand, ['dc-error', 'noise']) ? LOWER : []), ...(concerns(errand, SWING) ? HIGHER : [])];
   const hasGain = inputs.some(({ path }) => path === 'gain');
-  const scaled = (ratio: number): Reacher => {
-    const ohms = nearestE24(resistors.feedback * ratio);
-    const factor = Math.max(ohms / resistors.feedback, resistors.feedback / ohms);
-    const input = formatQuantity((resistors.input * ohms) / resistors.feedback, 'Ω', { digits: 17 });
-    const moves = [move('resistors.feedback', [formatQuantity(ohms, 'Ω'), formatQuantity(resistors.feedback, 'Ω')], factor)];
-    return tried(errand, ratio < 1 ? 'lower feedback resistors, same gain' : 'higher feedback resistors, same gain', hasGain ? moves : [...moves, move('resistors.input', [input, formatQuantity(resistors.input, 'Ω')], factor)]);
+  const scaled = (ratio: number): Reacher[] => {
+    // Where the gain is written the input resistor follows from it, exactly; else both are values one can buy.
+    const pair = pairAt({ ...resistors, series: seriesNegative }, ratio, { exactly: hasGain });
+    if (pair === null) return [];
+    const factor = Math.max(pair.feedback / resistors.feedback, resistors.feedback / pair.feedback);
+    const moves = [move('resistors.feedback', [formatQuantity(pair.feedback, 'Ω'), formatQuantity(resistors.feedback, 'Ω')], factor)];
+    const both = hasGain ? moves : [...moves, move('resistors.input', [formatQuantity(pair.input, 'Ω'), formatQuantity(resistors.input, 'Ω')], factor)];
+    return [tried(errand, `${ratio < 1 ? 'lower' : 'higher'} feedback resistors, ${gainWords(pair)}`, both)];
   };
-  const helping = (list: readonly number[]): Reacher[] => list.map(scaled).filter(({ reach }) => reach.size > 0).slice(0, 1);
+  const helping = (list: readonly number[]): Reacher[] => list.flatMap(scaled).filter(({ reach }) => reach.size > 0).slice(0, 1);
   return [...helping(ratios.filter((ratio) => ratio < 1)), ...helping(ratios.filter((ratio) => ratio > 1))];
 }
 

@@ -1,4 +1,4 @@
-import { turnsBetween, type Turn } from './turns.js';
+import { toldTurn, turnsBetween, type Turn } from './turns.js';
 
 /** What holds at one value: the answer in short, or why there is none. */
 export type SweptState =
@@ -33,9 +33,10 @@ export interface SweptTurn extends Turn<SweptState> {
 /** Asks at every value, rising, and looks for the turns between neighbours whose answers differ. */
 export function sweep(values: readonly number[], stateAt: (value: number) => SweptState): Swept {
   const points = values.map((value) => ({ value, state: stateAt(value) }));
+  const looking = { stateAt, isSame: isSameAnswer };
   const turns = points.slice(1).flatMap((point, at) => {
     const before = points[at];
-    return before === undefined ? [] : turnsBetween(before, point, { stateAt, isSame: isSameAnswer }).map(withParts);
+    return before === undefined ? [] : turnsBetween(before, point, looking).map((turn) => withParts(toldTurn(turn, looking)));
   });
   return { points, turns };
 }

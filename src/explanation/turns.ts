@@ -1,3 +1,5 @@
+import { plainText, roundToDigits } from '../quantities/decimal.js';
+
 /** Where what holds changes on the way from one value to a larger one. */
 export interface Turn<State> {
   /** The first value at which `to` holds, found by halving. */
@@ -16,6 +18,24 @@ export interface Sample<State> {
 export interface Looking<State> {
   stateAt(value: number): State;
   isSame(one: State, other: State): boolean;
+}
+
+/** A turn is told with so many digits; with more only where it takes them. */
+const TOLD_DIGITS = 6;
+const MOST_DIGITS = 15;
+
+/**
+ * The turn at a value of few digits, rounded upwards, at which `to` was seen to hold: so that what is printed, typed again, gives what is
+ * said of it. Where another turn comes before the rounded value, more digits are kept; the value itself in the end.
+ */
+export function toldTurn<State>(turn: Turn<State>, looking: Looking<State>): Turn<State> {
+  for (let digits = TOLD_DIGITS; digits < MOST_DIGITS; digits += 1) {
+    const at = Number(plainText(roundToDigits(turn.at, digits, 'up'), 0));
+    if (at < turn.at) continue;
+    const state = looking.stateAt(at);
+    if (looking.isSame(state, turn.to)) return { ...turn, at, to: state };
+  }
+  return turn;
 }
 
 /** How near a turn is found, as a fraction of its value. */

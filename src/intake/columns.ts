@@ -9,6 +9,7 @@ import type { JoinDoubt } from './layout.js';
 import type { ListMapping } from './mapping.js';
 import { mappedColumn, unitOf } from './mapping.js';
 import { nearPhrase } from './ordinary-header.js';
+import { isSheetNote } from './patch-sheet.js';
 import { readAnyHeader } from './recognised.js';
 import { isParameter } from './target.js';
 
@@ -151,7 +152,7 @@ export function samplesOf({ number }: Pick<ListColumn, 'number'>, rows: readonly
 function reportUnknown(columns: readonly ListColumn[], problems: readonly Problem[], { report, context }: Asking): void {
   const refused = new Set(problems.map((problem) => problem.place?.column));
   for (const column of columns) {
-    if (column.reading.kind !== 'text' || column.header === '' || refused.has(column.number)) continue;
+    if (column.reading.kind !== 'text' || column.header === '' || isSheetNote(column) || refused.has(column.number)) continue;
     if (context.mapping != null && mappedColumn(column.header, context.mapping)?.exact === true) continue;
     const suggestion = column.reading.suggestion ?? nearPhrase(column.header) ?? undefined;
     const meant = suggestion === undefined ? '' : `; did you mean "${suggestion}"`;

@@ -38,7 +38,7 @@ export function overTime(run: Run): OverTime {
 /** What a wave tells. */
 const TOLD: Readonly<Record<Waveform['kind'], readonly (keyof Results)[]>> = {
   sine: ['settling', 'rise', 'fall', 'outputHigh', 'outputLow', 'clipped', 'slewing', 'distortion'],
-  step: ['settling', 'rise', 'fall', 'outputHigh', 'outputLow'],
+  step: ['settling', 'rise', 'fall', 'outputHigh', 'outputLow', 'clipped'],
   ramp: ['settling', 'outputHigh', 'outputLow', 'clipped', 'slewing'],
   oscillation: ['frequency', 'duty', 'rise', 'fall', 'outputHigh', 'outputLow'],
 };
@@ -118,8 +118,8 @@ function stepping(run: Run): { readonly results: Results; readonly wave: Wave | 
 
 function levelResults(run: Run, up: StepRun, down: StepRun): Results {
   const unknown = unknownLevels(run);
-  if (unknown.length > 0) return without(['outputHigh', 'outputLow'], words.missing(unknown)).results;
-  return { outputHigh: { value: Math.max(up.high, down.high) }, outputLow: { value: Math.min(up.low, down.low) } };
+  if (unknown.length > 0) return without(['outputHigh', 'outputLow', 'clipped'], words.missing(unknown)).results;
+  return { outputHigh: { value: Math.max(up.high, down.high) }, outputLow: { value: Math.min(up.low, down.low) }, clipped: { value: Math.max(up.wave.clipped, down.wave.clipped) } };
 }
 
 function timeResults({ stage, amplifier }: Run, up: StepRun, down: StepRun): Results {

@@ -59,10 +59,10 @@ function inFavour(ahead: WhyAhead, side: 0 | 1): string[] {
   ];
 }
 
-/** One check in which two parts differ, from the side of one of them. */
-export function differenceText({ check, first, second, unit }: Difference, side: 0 | 1): string {
-  const values = (side === 0 ? [first, second] : [second, first]).map((value) => amount(value, unit, { round: AT_LEAST.has(check) ? 'down' : 'up' }));
-  return `${HEADROOM[check] ?? checkWords(check)} ${values.join(' against ')}`;
+/** One check in which two parts differ, from the side of one of them; `printed` has the numbers as they already stand beside it, in the order of the parts. */
+export function differenceText({ check, first, second, unit }: Difference, side: 0 | 1, printed: readonly (string | null)[] = []): string {
+  const values = [first, second].map((value, at) => printed[at] ?? amount(value, unit, { round: AT_LEAST.has(check) ? 'down' : 'up' }));
+  return `${HEADROOM[check] ?? checkWords(check)} ${(side === 0 ? values : values.reverse()).join(' against ')}`;
 }
 
 const HEADROOM: Readonly<Record<string, string>> = { 'output-low': held('head-room') + ' to V-', 'output-high': held('head-room') + ' to V+' };

@@ -1,5 +1,5 @@
 import { displayWidth, padded } from './layout.js';
-import { safeLine } from './safe-text.js';
+import { safeText } from './safe-text.js';
 import { PASTE, spelled } from './spelling.js';
 import { isNarrow, type CommandContext, type Style } from './style.js';
 
@@ -9,21 +9,37 @@ export interface Offer {
   readonly why: string;
 }
 
-/** `railfit explain PART stage.yaml`, with the options of the answer it follows; every word quoted for a shell where it must be. */
+/**
+ * `railfit explain PART stage.yaml`, with the options of the answer it follows; every word quoted for a shell where it must be.
+ * `command` is the command and its operands, `more` are options. An operand that starts like an option stands behind `--`, at the end.
+ */
 export function commandOf(context: CommandContext, command: readonly string[], more: readonly string[] = []): string[] {
   const stage = context.stageFile === null ? [] : [context.stageFile === 'standard input' ? '-' : context.stageFile];
-  return [context.command, ...command, ...stage, ...(context.changes ?? []), ...more, ...(context.catalog ?? [])].map(shellWord);
+  const [name = '', ...named] = command;
+  const operands = [...named, ...stage];
+  const options = [...(context.changes ?? []), ...more, ...(context.catalog ?? [])];
+  const behind = operands.some(looksLikeOption) ? [...options, '--', ...operands] : [...operands, ...options];
+  return [context.command, name, ...behind].map(shellWord);
 }
 
-/** POSIX quoting; left alone when no shell would change it. */
+/** A command about nothing but its operands: `railfit part -- -X`. */
+export const plainCommand = (...command: readonly string[]): string => commandOf({ command: 'railfit', stageFile: null }, command).join(' ');
+
+/** A minus alone is standard input. */
+const looksLikeOption = (word: string): boolean => word.startsWith('-') && word !== '-';
+
+/** POSIX quoting; left alone when no shell would change it. Blanks are kept as they are: an id is compared exactly. */
 function shellWord(word: string): string {
-  const safe = safeLine(word);
+  const safe = safeText(word);
   return /^[\w./:=+@%,-]+$/u.test(safe) ? safe : `'${safe.replaceAll("'", String.raw`'\''`)}'`;
 }
 
+/** What is to be pasted keeps its letters; only ASCII, where asked, respells them. */
+const pasted = (text: string, style: Style): string => (style.ascii ? spelled(text, style) : text);
+
 /** Commands under `Next`, each pasteable: a long one goes on after a backslash. What it is for stands beside where all have room. */
 export function nextLines(offers: readonly Offer[], style: Style): string[] {
-  const commands = offers.map(({ words }) => spelled(words.join(PASTE), style));
+  const commands = offers.map(({ words }) => pasted(words.map((word) => word.replaceAll(' ', PASTE)).join(PASTE), style));
   const lead = (at: number): string => padded(at === 0 ? 'Next' : '', LEAD);
   const line = (at: number, width: number): string => `${lead(at)}${padded(commands[at] ?? '', width)}${' '.repeat(GAP)}${spelled(offers[at]?.why ?? '', style)}`;
   const fits = (text: string): boolean => !isNarrow(style) && displayWidth(text) <= style.width;
@@ -41,7 +57,7 @@ export function commandLines(words: readonly string[], style: Style, lead: strin
   const lines: string[] = [];
   let line = lead;
   let isEmpty = true;
-  for (const word of words.map((one) => spelled(one.replaceAll(' ', PASTE), style))) {
+  for (const word of words.map((one) => pasted(one.replaceAll(' ', PASTE), style))) {
     const joined = isEmpty ? line + word : `${line}${PASTE}${word}`;
     if (!isEmpty && displayWidth(joined) + 2 > style.width) {
       lines.push(`${line}${PASTE}\\`);

@@ -67,7 +67,7 @@ function stepText(step: string, [first, second]: readonly [ComparedPart, Compare
   return words[step] ?? step;
 }
 
-const currentText = (current: number | null): string => (current === null ? 'not known' : amount(current, 'A', { round: 'up' }));
+const currentText = (current: number | null): string => (current === null ? 'not known' : amount(current, 'A'));
 
 function firmness({ parts, standing }: Comparison): string {
   const { ahead, stability, dominated } = standing;
@@ -132,9 +132,15 @@ const joined = (...words: readonly string[]): string => words.map((word) => (wor
 /** What speaks for each, the one behind too. */
 function favourLines({ parts, standing }: Comparison, style: Style): string[] {
   return ([0, 1] as const).flatMap((side) => {
-    const words = [...savings(parts[side], parts[side === 0 ? 1 : 0]), ...standing.speaksFor[side].map((difference) => differenceText(difference, side))];
+    const words = [...savings(parts[side], parts[side === 0 ? 1 : 0]), ...standing.speaksFor[side].map((difference) => differenceText(difference, side, printedOf(standing.checks, difference.check)))];
     return words.length === 0 ? [] : paragraph(`In favour of ${idOf(parts[side])}: ${words.join(', ')}.`, style, { indent: 2 });
   });
+}
+
+/** The numbers of a check as its row in the table has them: the same figure reads the same. */
+function printedOf(checks: readonly ComparedCheck[], wanted: string): readonly (string | null)[] {
+  const verdicts = checks.find(({ check }) => check === wanted)?.verdicts ?? [];
+  return verdicts.map((verdict) => (verdict?.offered == null ? null : (compared(verdict)?.offered ?? null)));
 }
 
 function savings({ judged: mine }: ComparedPart, { judged: other }: ComparedPart): string[] {

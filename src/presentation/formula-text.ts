@@ -4,7 +4,7 @@ import type { Verdict } from '../verdicts/verdict.js';
 import { checkAmount } from './amounts.js';
 import { paragraph } from './layout.js';
 import { safeLine } from './safe-text.js';
-import { glued } from './spelling.js';
+import { glued, GLUE } from './spelling.js';
 import type { Style } from './style.js';
 
 /** A relation in symbols, and where it is published. */
@@ -51,6 +51,16 @@ export function formulaLines({ judged, demands }: Explanation, style: Style): st
   if (style.formulas !== true) return [];
   const lines = judged.verdicts.flatMap((verdict) => oneFormula(verdict, demands.find(({ check }) => check === verdict.check), style));
   return lines.length === 0 ? [] : ['Formulas', ...lines];
+}
+
+/** The same as documents carry it: per check the relation, its numbers on this stage (null where a word is compared), and its source. */
+export function formulasJson({ judged, demands }: Explanation): object[] {
+  return judged.verdicts.flatMap((verdict) => {
+    const formula = FORMULAS[verdict.check];
+    if (formula === undefined) return [];
+    const numbers = numbersOf(verdict, demands.find(({ check }) => check === verdict.check)).replaceAll(GLUE, ' ');
+    return [{ check: verdict.check, relation: formula.relation, numbers: numbers === '' ? null : numbers, source: formula.source }];
+  });
 }
 
 function oneFormula(verdict: Verdict, demand: AnyDemand | undefined, style: Style): string[] {

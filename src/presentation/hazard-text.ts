@@ -50,10 +50,11 @@ function circumstanceText(hazard: Circumstance): string {
       return `an input goes ${volts(hazard.beyond)} beyond a rail; ${hazard.endures === null ? 'what the inputs endure there is not known' : `the inputs endure ${formatQuantity(hazard.endures, 'V', { round: 'down' })} there`}`;
     case 'recovery':
       return hazard.time === null ? 'how long the output needs to recover from an overload is not known' : `after an overload the output needs ${formatQuantity(hazard.time, 's', { round: 'up' })} to recover`;
+    // Rounded as the check prints it once there is a limit: one figure, one number.
     case 'ripple':
       return hazard.output === null
         ? `what passes of the supply ripple is not known: ${missingWords(hazard.missing)}`
-        : `of the supply ripple ${formatQuantity(hazard.output, 'V', { round: 'up' })} peak reaches the output at ${formatQuantity(hazard.frequency, 'Hz')}`;
+        : `of the supply ripple ${formatQuantity(hazard.output, 'V')} peak reaches the output at ${formatQuantity(hazard.frequency, 'Hz')}`;
     case 'start-up':
       return hazard.time === null
         ? `on for ${formatQuantity(hazard.on, 's')} at a time, and how long it needs to start is not known: ${missingWords(hazard.missing)}`

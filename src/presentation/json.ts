@@ -5,6 +5,7 @@ import type { DataUsed, DemandsReport, Explanation, Report } from '../report.js'
 import type { Confirmation, JudgedPart } from '../screening/index.js';
 import type { RankedPart } from '../ranking/index.js';
 import { changesJson, waysOutJson } from './changes-json.js';
+import { formulasJson } from './formula-text.js';
 import { hazardText } from './hazard-text.js';
 import { partLookupsJson, sensitivityJson } from './lookup-json.js';
 import { bodyOf } from './prediction-body.js';
@@ -38,7 +39,7 @@ export function shortlistJson(report: Report, options: { readonly top: number; r
   });
 }
 
-export function explanationJson(explanation: Explanation): string {
+export function explanationJson(explanation: Explanation, { formulas = false }: { readonly formulas?: boolean } = {}): string {
   const { judged, data } = explanation;
   const { part } = judged;
   const origin: OriginOf = (id, slot) => explanation.origin(id, slot);
@@ -56,6 +57,7 @@ export function explanationJson(explanation: Explanation): string {
     ...(explanation.lookups === null ? {} : { lookups: partLookupsJson(explanation.lookups) }),
     sensitivity: explanation.sensitivity.map(sensitivityJson),
     ...(explanation.predicted === null ? {} : { predicted: { checks: explanation.predicted.checks, ...bodyOf(explanation.predicted.prediction) } }),
+    ...(formulas ? { formulas: formulasJson(explanation) } : {}),
     cautions: cautionsOf(judged),
     fitting: explanation.fitting.map((one) => one.part.id),
     asking: explanation.asking,

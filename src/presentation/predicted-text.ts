@@ -1,5 +1,6 @@
 import type { Quantity } from '../prediction/index.js';
 import type { Explanation } from '../report.js';
+import { plainCommand } from './commands.js';
 import { labelled } from './layout.js';
 import { cellOf, QUANTITY_WORDS } from './prediction-rows.js';
 import { glued } from './spelling.js';
@@ -27,5 +28,5 @@ export function predictedLines({ predicted, judged }: Explanation, style: Style)
     });
     return [`${checkWords(check)}: ${words.length === 0 ? 'nothing to tell of this stage' : words.join('; ')}`];
   });
-  return labelled('Predict', glued(`predicted, not judged, since no closed form holds here. ${told.join('. ')}. railfit predict ${judged.part.id} tells more.`), style);
+  return labelled('Predict', glued(`predicted, not judged, since no closed form holds here. ${told.join('. ')}. ${plainCommand('predict', judged.part.id)} tells more.`), style);
 }

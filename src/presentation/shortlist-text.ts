@@ -93,7 +93,7 @@ function offers(report: Report, context: CommandContext): Offer[] {
     ...(first === undefined && undecided[0] !== undefined ? [{ words: commandOf(context, ['explain', undecided[0].part.id]), why: 'what is missing' }] : []),
     ...lossOffer(report, context),
     ...(out === undefined ? [] : [{ words: commandOf(context, ['explain', out.part.id]), why: 'the nearest that is out' }]),
-    ...(often === undefined || listing === null ? [] : [{ words: commandOf({ ...context, stageFile: null }, ['parts', '--failing', often.check, '--stage', listing]), why: `all that fail on ${checkWords(often.check)}` }]),
+    ...(often === undefined || listing === null ? [] : [{ words: commandOf({ ...context, stageFile: null }, ['parts'], ['--failing', often.check, '--stage', listing]), why: `all that fail on ${checkWords(often.check)}` }]),
   ];
 }
 

@@ -24,5 +24,5 @@ export function sweptTexts({ over, points }: Pick<SweepReport, 'over' | 'points'
 
 const MOST_DIGITS = 12;
 
-/** A turn is found to a ten-millionth; printed to six digits, upwards, so that what is said to hold from there on holds there. */
-export const turnAmount = (over: SweepOver, at: number): string => sweptAmount(over, at, { digits: 6, round: 'up' });
+/** A turn in full: it was rounded upwards to few digits where it was found, and judged there. */
+export const turnAmount = (over: SweepOver, at: number): string => sweptAmount(over, at, { digits: 15 });

@@ -40,7 +40,7 @@ export function formatPercent(fraction: number, options: FormatOptions = {}): st
   return `${plainText(digits, 2)} %`;
 }
 
-const PREFIXED = new Set(['V', 'A', 'Ω', 'F', 'Hz', 's', 'W', 'H', 'S', 'J', 'C', 'Ah', 'V/√Hz', 'A/√Hz', 'V/Hz', 'A/Hz', 'V/K', 'Vpk', 'Vpp', 'Vrms']);
+const PREFIXED = new Set(['V', 'A', 'Ω', 'F', 'Hz', 's', 'W', 'H', 'S', 'J', 'C', 'Ah', 'V/√Hz', 'A/√Hz', 'V/Hz', 'A/Hz', 'V/K', 'V/A', 'Vpk', 'Vpp', 'Vrms']);
 const SYMBOLS = new Map([[-15, 'f'], [-12, 'p'], [-9, 'n'], [-6, 'µ'], [-3, 'm'], [0, ''], [3, 'k'], [6, 'M'], [9, 'G'], [12, 'T']]);
 
 interface ScaledUnit {

@@ -21,7 +21,9 @@ export function judgeAgain(stages: readonly KeptStage[], before: PartSource, aft
   return stages.map((kept) => {
     const file = readStageFile(kept.path, kept.name);
     if (!file.ok) return { kept, failed: file };
-    const [was, is] = [answerOf(file.stage, before, kept.part), answerOf(file.stage, after, kept.part)];
-    return { kept, before: was, after: is, isOther: isOtherAnswer(was, is) };
+    // What the file itself names goes before the choice that was kept, as in `check`.
+    const chosen = { ...kept, part: file.part ?? kept.part };
+    const [was, is] = [answerOf(file.stage, before, chosen.part), answerOf(file.stage, after, chosen.part)];
+    return { kept: chosen, before: was, after: is, isOther: isOtherAnswer(was, is) };
   });
 }

@@ -41,6 +41,13 @@ describe('railfit check', () => {
     expect(await chosenOn('broken.yaml', 'HOUSE-01')).toEqual([2, null, 'wrong']);
   });
 
+  it('says that a pattern matched no file, not that a file is gone', async () => {
+    const ran = await place.run(['check', 'nothing/*.yaml', '--part', 'HOUSE-01']);
+    expect(ran.exit).toBe(2);
+    expect(ran.stdout.replace(/\s+/gu, ' ')).toContain('nothing/*.yaml: no file matches this pattern, so the shell passed it on as it is');
+    expect((await place.run(['check', 'nothing.yaml', '--part', 'HOUSE-01'])).stdout).toContain('nothing.yaml: the file is gone');
+  });
+
   it('gives the verdicts that explain gives', async () => {
     const { stages } = await check([PROBE, '--part', 'HOUSE-06']);
     const explained = JSON.parse((await place.run(['explain', 'HOUSE-06', PROBE, '--json'])).stdout) as { verdicts: unknown[] };

@@ -1,7 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { isSameAnswer, sweep, sweptValues, type SweptState } from '../../src/explanation/index.js';
-import { turnsBetween } from '../../src/explanation/turns.js';
+import { toldTurn, turnsBetween } from '../../src/explanation/turns.js';
+import { formatQuantity } from '../../src/quantities/format.js';
+import { parseQuantity } from '../../src/quantities/parse.js';
 
 /** So many of the rising places lie at or below a value. */
 const passed = (places: readonly number[], value: number): number => places.filter((place) => value >= place).length;
@@ -34,6 +36,23 @@ describe('turns between two values', () => {
         expect(turn.to).toBe(turn.from + 1);
       }
     }), { numRuns: 60 });
+  });
+
+  it('are told as text that, typed again, lies on the side it names: few digits where they do, more between two near turns', () => {
+    const place = fc.double({ min: 1e-6, max: 900, noNaN: true });
+    fc.assert(fc.property(place, fc.double({ min: 2e-7, max: 1e-5, noNaN: true }), (first, apart) => {
+      const places = [first, first * (1 + apart)];
+      const looking = { stateAt: (value: number) => passed(places, value), isSame: (a: number, b: number) => a === b };
+      const sample = (value: number) => ({ value, state: looking.stateAt(value) });
+      const turns = turnsBetween(sample(first / 3), sample(first * 3), looking).map((turn) => toldTurn(turn, looking));
+      expect(turns.at(-1)?.to).toBe(2);
+      for (const turn of turns) {
+        const read = parseQuantity(formatQuantity(turn.at, 'V', { digits: 15 }), 'voltage');
+        if (!read.ok) throw new Error(read.problem.message);
+        expect(passed(places, read.quantity.nominal ?? Number.NaN)).toBe(turn.to);
+        expect(Math.abs(turn.at / (turn.to === 1 ? first : places[1] ?? 0) - 1)).toBeLessThan(2e-5);
+      }
+    }), { numRuns: 200 });
   });
 
   it('are found about zero and below it', () => {

@@ -62,6 +62,15 @@ describe('prediction against relations of its own', { timeout: 60_000 }, () => {
     }
   });
 
+  it('a step that ends beyond an end of the output is clipped for most of the time told, one within is not', () => {
+    const stage = stageOf('topology: follower\nsupply: 5 V\nsignal: {input: 0.5..4.5 V, shape: step, edge: 100 µs}\n');
+    const free = predicted(stage, bare({ gainBandwidth: 1e6, slewRate: 1e6 })).typical;
+    expect(numberOf(free, 'clipped')).toBe(0);
+    const cut = predicted(stage, bare({ gainBandwidth: 1e6, slewRate: 1e6 }, 1)).typical;
+    expect(numberOf(cut, 'clipped')).toBeGreaterThan(0.5);
+    expect(numberOf(cut, 'outputHigh')).toBeCloseTo(4, 3);
+  });
+
   it.each([0.95, 0.8, 0.5])('a sine cut off at %d of its peak: share of the time and distortion of the closed form', (left) => {
     const top = SUPPLY - (2.5 + left * 2);
     const { typical } = predicted(FOLLOWER, bare({ gainBandwidth: 1e8, slewRate: 1e9 }, top));

@@ -39,6 +39,14 @@ describe('a kept stage on two catalogs', () => {
     expect(fits.length).toBeGreaterThan(0);
   });
 
+  it('is about the part the file itself names, before the one that was kept with it', () => {
+    const named = fits[0] ?? '';
+    writeFileSync(join(folder, 'named.yaml'), `${readFileSync(join(folder, 'probe.yaml'), 'utf8')}part: ${named}\n`);
+    const one = both(kept('named.yaml', 'NO-SUCH'), ALL, ALL);
+    expect(one.kept.part).toBe(named);
+    expect(one.after.chosen).toMatchObject({ outcome: 'fits', rank: 1 });
+  });
+
   it('is the same answer on the same parts, in any order', () => {
     const one = both(kept('probe.yaml', fits[0] ?? ''), ALL, sourceOf([...SAMPLE_PARTS].reverse()));
     expect(one.isOther).toBe(false);

@@ -38,6 +38,10 @@ export const explanation = envelope('explanation', 'Every check of one part on o
   lookups: partLookups.optional().describe('Undecided only: what would decide it'),
   sensitivity: z.array(sensitivity).describe('Whether verdicts hang on borrowed or typical figures'),
   predicted: z.strictObject({ checks: z.array(z.string()).describe('Checks without a closed form for this stage'), ...predicted }).optional().describe('What no closed form answers, simulated: told, not judged'),
+  formulas: z
+    .array(z.strictObject({ check: z.string(), relation: z.string(), numbers: z.string().nullable().describe('What stands on both sides on this stage; null where words are compared'), source: z.string() }))
+    .optional()
+    .describe('With --formulas: the relation, numbers and source of each check'),
   cautions: z.array(z.string()),
   fitting: z.array(z.string()).describe('Up to three parts that fit as things stand'),
   asking,
