@@ -28,7 +28,7 @@ function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
   const missing = all.filter((one) => one.kind === 'missing');
   const { required, unit, sense } = asked;
   const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
-  const cautions = sourceCaution(asked, readings);
+  const cautions = readings.brief ? [] : sourceCaution(asked, readings);
   const common = { required, unit, sense, terms, corner, cautions, basis: weakest(terms.map((term) => term.basis)) };
   const [first] = missing;
   if (first !== undefined) {
@@ -60,7 +60,7 @@ function fartherEnd(asked: DcErrorDemand, rated: number): number {
 
 function termsOf(asked: DcErrorDemand, offset: OffsetReading | null, readings: Readings): ErrorTerm[] {
   return [
-    offsetTerm(asked, offset),
+    offsetTerm(asked, offset, readings),
     driftTerm(asked, offset, readings),
     ...currentTerms(asked, readings),
     commonModeTerm(asked, readings),

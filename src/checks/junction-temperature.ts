@@ -38,11 +38,11 @@ function judgeJunction(asked: JunctionDemand, readings: Readings): Finding | nul
   const ambient: Term = { name: 'ambient', value: asked.ambient, slot: null, basis: 'guaranteed', figure: null, how: null };
   if (thermal === null || quiescent === null) {
     const missing = missingOf(thermal, quiescent);
-    const terms = thermal === null ? [ambient] : [ambient, ...powers.map((power) => heated(power, thermal))];
+    const terms = thermal === null ? [ambient] : [ambient, ...powers.map((power) => heated(power, thermal, readings.brief))];
     const turnsAt = thermal === null && quiescent !== null ? thermalTurn(required - asked.ambient, powers) : null;
     return { kind: 'bound', ...common, known: sum(terms), basis: weakest(terms.map(({ basis }) => basis)), terms, missing, cause: 'missing-figure', turnsAt } satisfies BoundFinding;
   }
-  const terms = [ambient, ...powers.map((power) => heated(power, thermal))];
+  const terms = [ambient, ...powers.map((power) => heated(power, thermal, readings.brief))];
   if (asked.required === null && sum(terms) - asked.ambient <= QUIET * (required - asked.ambient)) return null;
   return { kind: 'numbers', ...common, offered: sum(terms), basis: weakest(terms.map(({ basis }) => basis)), terms, turnsAt: thermalTurn(required - asked.ambient, powers) };
 }
@@ -69,9 +69,9 @@ function powersOf(asked: JunctionDemand, quiescent: Reading | null, { identity }
   return [{ name: 'quiescent current', watts: quiescentPower(asked.supply, quiescent.value, channels ?? 1), basis, how: how === '' ? null : how, reading: quiescent }, ...flowing];
 }
 
-function heated({ name, watts, basis, how, reading }: Power, thermal: Reading): Term {
+function heated({ name, watts, basis, how, reading }: Power, thermal: Reading, brief: boolean): Term {
   const printed = thermal.printed ?? thermal.value;
-  const steps = [thermal.how, `× ${formatQuantity(watts, 'W')}`, how].filter((step) => step !== null);
+  const steps = brief ? [] : [thermal.how, `× ${formatQuantity(watts, 'W')}`, how].filter((step) => step !== null);
   const slot = reading !== null && thermal.basis === 'guaranteed' && basis !== 'guaranteed' ? reading.slot : thermal.slot;
   return { name, value: thermal.value * watts, slot, basis: weakest([thermal.basis, basis]), figure: { value: printed, unit: 'K/W' }, how: steps.join(', ') };
 }

@@ -4,6 +4,7 @@ import type { Side } from '../parts/headroom.js';
 import type { HeadroomReading } from '../parts/headroom-curve.js';
 import type { Readings } from '../parts/readings.js';
 import { meets } from '../verdicts/compare.js';
+import { bindingVertices } from './binding-vertices.js';
 import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
@@ -14,6 +15,11 @@ export type HeadroomVertices = Pick<HeadroomDemand, 'vertices' | 'noiseGain' | '
 export function judgeHeadroom(asked: HeadroomVertices, side: Side, readings: Readings): VertexFindings {
   const curve = readings.headroom(side);
   const share = offsetShare(asked, readings);
+  const binding = readings.brief ? bindingVertices(asked.vertices, curve) : null;
+  if (binding !== null) {
+    const findings = binding.places.map(({ vertex, reading }) => findingAt(vertex, { side, share, reading, brief: true }));
+    return { kind: 'vertices', findings, basis: weakest([binding.basis, ...share.terms.map(({ basis }) => basis)]) };
+  }
   return {
     kind: 'vertices',
     findings: asked.vertices.map((vertex) => findingAt(vertex, { side, share, reading: curve(vertex), brief: readings.brief })),
@@ -34,12 +40,13 @@ function offsetShare(asked: HeadroomVertices, readings: Readings): Share {
   const perKelvin = offset?.overTemperature === true || kelvin === 0 ? null : readings.figure('offsetDrift');
   const terms: Term[] = [];
   const times = `× noise gain ${Number(noiseGain.toPrecision(4))}`;
+  const told = (...steps: readonly (string | null)[]): string | null => (readings.brief ? null : steps.filter((step) => step !== null).join(', '));
   if (offset !== null) {
-    const how = [offset.how, times].filter((step) => step !== null).join(', ');
+    const how = told(offset.how, times);
     terms.push({ name: 'offset', value: noiseGain * offset.value, slot: offset.slot, basis: offset.basis, figure: { value: offset.printed ?? offset.value, unit: 'V' }, how });
   }
   if (perKelvin !== null && offset !== null) {
-    const how = [perKelvin.how, `× ${kelvin} K`, times].filter((step) => step !== null).join(', ');
+    const how = told(perKelvin.how, `× ${kelvin} K`, times);
     terms.push({ name: 'offset drift', value: noiseGain * perKelvin.value * kelvin, slot: perKelvin.slot, basis: perKelvin.basis, figure: { value: perKelvin.printed ?? perKelvin.value, unit: 'V/K' }, how });
   }
   const driftKnown = offset?.overTemperature === true || kelvin === 0 || perKelvin !== null;
@@ -76,13 +83,16 @@ interface At {
 
 function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const { share, reading } = at;
+  if (at.brief && reading.value !== null && meets(vertex.room, 0, 'at-most')) {
+    const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
+    return { kind: 'numbers', unit: 'V', sense: 'at-most', required: vertex.room, corner: vertex.corner, offered: reading.value + share.value, basis };
+  }
   const common = { unit: 'V', sense: 'at-most' as const, required: vertex.room, corner: vertex.corner, turnsAt: turnsAt(vertex, at) };
   const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
   if (reading.value === null) return beyond(vertex, at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
   if (!meets(vertex.room, 0, 'at-most') && meets(vertex.room, offered, 'at-most')) return bound(at, { ...common, basis, known: share.value });
-  if (at.brief) return { kind: 'numbers', ...common, offered, basis };
   const caution = share.caution(vertex.room - offered);
   return {
     kind: 'numbers', ...common, offered, basis, slot: reading.slot, how: reading.how,

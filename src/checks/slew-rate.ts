@@ -42,6 +42,7 @@ interface Known {
 
 function ofSine(asked: SlewRateDemand, motion: SineMotion, { rate, readings }: Known): Judged {
   const finding = compareFigure(asked, COMPARED, rate);
+  if (readings.brief) return finding;
   const bandwidth = readings.figure('gainBandwidth');
   const loop = bandwidth === null ? null : { gainBandwidth: bandwidth.value, inputCapacitance: readings.figure('inputCapacitance')?.value ?? 0 };
   const near = { offered: rate?.value ?? Number.POSITIVE_INFINITY, loop };
@@ -74,6 +75,7 @@ function ofEdge(asked: SlewRateDemand, motion: EdgeMotion, { rate, readings }: K
   const finding = compareFigure({ ...asked, required: readings.bounded(need.worst, need.best) }, COMPARED, rate);
   if (finding.kind !== 'numbers') return finding;
   const bases = [finding.basis, bandwidth.basis, ...(need.best === need.worst ? [] : (['estimated'] as const))];
+  if (readings.brief) return { ...finding, basis: weakest(bases) };
   const how = [finding.how, `need found with a gain bandwidth of ${formatQuantity(bandwidth.value, 'Hz')}`, bandwidth.how].filter((step) => step !== null && step !== undefined);
   return { ...finding, basis: weakest(bases), how: how.join(', ') };
 }

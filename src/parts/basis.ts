@@ -4,5 +4,7 @@ export type Basis = (typeof BASES)[number];
 
 /** The weakest of several bases; `guaranteed` for none. */
 export function weakest(bases: readonly Basis[]): Basis {
-  return BASES[Math.max(0, ...bases.map((basis) => BASES.indexOf(basis)))] ?? 'guaranteed';
+  let weak = 0;
+  for (const basis of bases) weak = Math.max(weak, BASES.indexOf(basis));
+  return BASES[weak] ?? 'guaranteed';
 }

@@ -1,8 +1,8 @@
-import type { Verdict } from '../verdicts/verdict.js';
+import type { BriefVerdict } from '../verdicts/decide.js';
 import { shortness } from './nearest.js';
 
 /** What the tally and the order need of a verdict; it holds for every part with the same pieces. */
-export type Digest = Pick<Verdict, 'check' | 'outcome' | 'basis' | 'standsOn' | 'margin' | 'spare'>;
+export type Digest = Pick<BriefVerdict, 'check' | 'outcome' | 'basis' | 'standsOn' | 'margin' | 'spare'>;
 
 /** How an answer counts in a part's sum: unknowns above, then what is not guaranteed, then failures. A check that does not apply adds nothing. */
 export const COUNTS = { fail: 1, weak: 1 << 10, unknown: 1 << 20 } as const;
@@ -10,7 +10,7 @@ export const COUNTS = { fail: 1, weak: 1 << 10, unknown: 1 << 20 } as const;
 /** Verdicts of one check, by the number of the answer. */
 export interface Digests {
   /** Null: the check does not apply. */
-  add(verdict: Verdict | null): number;
+  add(verdict: BriefVerdict | null): number;
   /** By answer: what it adds to the part's sum, and to its distance from fitting. */
   readonly counts: readonly number[];
   readonly distances: readonly number[];
@@ -32,12 +32,12 @@ export function digests(nominalSupply: number): Digests {
   };
 }
 
-function countOf({ outcome, basis }: Verdict): number {
+function countOf({ outcome, basis }: BriefVerdict): number {
   if (outcome === 'fail') return COUNTS.fail;
   if (outcome === 'unknown') return COUNTS.unknown;
   return basis === 'guaranteed' ? 0 : COUNTS.weak;
 }
 
-function digestOf({ check, outcome, basis, standsOn, margin, spare }: Verdict): Digest {
+function digestOf({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict): Digest {
   return { check, outcome, basis, standsOn, margin, spare };
 }

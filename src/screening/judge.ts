@@ -4,7 +4,7 @@ import { classesOf } from '../parts/classes.js';
 import type { Part, PartSource } from '../parts/part.js';
 import type { ClassWorst, ReadingRules } from '../parts/reading.js';
 import { readingsOf, type Readings } from '../parts/readings.js';
-import { decide, standingOf } from '../verdicts/decide.js';
+import { type BriefVerdict, decide, decideBriefly, standingOf } from '../verdicts/decide.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { batteryHours } from './battery.js';
 import { completions } from './completion.js';
@@ -74,6 +74,13 @@ export function verdictOn(check: AnyCheck, demands: Demands, [worst, best]: read
   const pessimistic = check.judge(demands, worst);
   const optimistic = check.judge(demands, best);
   return pessimistic === null || optimistic === null ? null : decide(check, pessimistic, optimistic);
+}
+
+/** The same decision in numbers only; the readings should be brief. */
+export function briefVerdictOn(check: AnyCheck, demands: Demands, [worst, best]: readonly [Readings, Readings]): BriefVerdict | null {
+  const pessimistic = check.judge(demands, worst);
+  const optimistic = check.judge(demands, best);
+  return pessimistic === null || optimistic === null ? null : decideBriefly(check, pessimistic, optimistic);
 }
 
 /** How the figures of a part are read in this run. */

@@ -1,4 +1,4 @@
-import type { Verdict } from '../verdicts/verdict.js';
+import type { BriefVerdict } from '../verdicts/decide.js';
 import type { JudgedPart } from './judged-part.js';
 
 export const SHOWN = 3;
@@ -20,7 +20,7 @@ function distanceOf({ verdicts }: JudgedPart, nominalSupply: number): number {
 }
 
 /** 0 at the limit; ratios count as their logarithm. */
-export function shortness(verdict: Verdict, nominalSupply: number): number {
+export function shortness(verdict: BriefVerdict, nominalSupply: number): number {
   if (verdict.margin !== null && verdict.margin > 0) return Math.abs(Math.log(verdict.margin));
   if (typeof verdict.required !== 'number') return WORD;
   const offered = typeof verdict.offered === 'number' ? verdict.offered : verdict.known;

@@ -5,7 +5,7 @@ import { TRAITS } from '../parts/traits.js';
 import type { Readings } from '../parts/readings.js';
 import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
 import { digests, type Digests } from './digest.js';
-import { notBuilt, verdictOn, type Judging } from './judge.js';
+import { briefVerdictOn, notBuilt, type Judging } from './judge.js';
 import { standIn, type StandIn } from './stand-in.js';
 
 /** Something asked of every part of a view, with the answers found so far. */
@@ -31,7 +31,7 @@ export function checkQuestions(run: Judging, view: ScreenView, circuit: string):
     const mark = markOf(check.asked(demands), circuit);
     const before = kept.questions.get(check.id);
     if (before?.mark === mark) return before.question;
-    const question = checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => verdictOn(check, demands, readings) });
+    const question = checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) });
     kept.questions.set(check.id, { mark, question });
     return question;
   });
@@ -62,7 +62,7 @@ function keptFor({ demands: { operating }, strict, classes }: Judging, view: Scr
 
 interface Asked {
   readonly check: string;
-  readonly verdict: (readings: Both) => ReturnType<typeof verdictOn>;
+  readonly verdict: (readings: Both) => ReturnType<typeof briefVerdictOn>;
 }
 
 function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): CheckQuestion {

@@ -19,15 +19,35 @@ type Standing = 'pass' | 'fail' | 'open';
 
 /** The only place findings become verdicts: pass on both readings passes, fail on the best reading fails, all else is unknown. */
 export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: Finding): Verdict {
-  const worst = standingOf(pessimistic);
-  const best = standingOf(optimistic);
-  const outcome: Outcome = worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
+  const outcome = outcomeOf(pessimistic, optimistic);
   const [shown, other] = outcome === 'fail' ? [optimistic, pessimistic] : [pessimistic, optimistic];
   if (shown.kind === 'words') return wordVerdict(check, outcome, { finding: shown, best: offeredOf(other) });
-  const basis = basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
+  const basis = basisBehind(pessimistic, shown);
   const remedies = outcome === 'pass' ? [] : remediesOf(pessimistic);
   return verdictOf(check, { outcome, shown: shownOf(shown, outcome), whole: shown, other, basis, remedies });
 }
+
+/** What tally and order need of a verdict. */
+export type BriefVerdict = Pick<Verdict, 'check' | 'outcome' | 'required' | 'offered' | 'unit' | 'margin' | 'spare' | 'basis' | 'standsOn' | 'known'>;
+
+/** The same decision where nothing is told but its numbers. */
+export function decideBriefly(check: CheckIdentity, pessimistic: Finding, optimistic: Finding): BriefVerdict {
+  const outcome = outcomeOf(pessimistic, optimistic);
+  const shown = outcome === 'fail' ? optimistic : pessimistic;
+  if (shown.kind === 'words') {
+    const basis = shown.basis ?? 'guaranteed';
+    return { check: check.id, outcome, required: shown.required, offered: shown.offered, unit: null, margin: null, spare: null, basis: outcome === 'unknown' ? null : basis, standsOn: basis, known: null };
+  }
+  return numbersOf(check, { outcome, shown: shownOf(shown, outcome), basis: basisBehind(pessimistic, shown) });
+}
+
+function outcomeOf(pessimistic: Finding, optimistic: Finding): Outcome {
+  const worst = standingOf(pessimistic);
+  const best = standingOf(optimistic);
+  return worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
+}
+
+const basisBehind = (pessimistic: Finding, shown: Exclude<Finding, WordFinding>): Basis => basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
 
 /** How one reading stands by itself. */
 export function standingOf(finding: Finding): Standing {
@@ -72,7 +92,7 @@ function spare(finding: SingleFinding): number {
 
 /** Weakest basis, over all vertices for head-rooms. */
 function basisOf(finding: Exclude<Finding, WordFinding>): Basis {
-  if (finding.kind === 'vertices') return weakest(finding.findings.map(basisOf));
+  if (finding.kind === 'vertices') return finding.basis ?? weakest(finding.findings.map(basisOf));
   return finding.kind === 'undecided' ? 'guaranteed' : finding.basis;
 }
 
@@ -86,27 +106,44 @@ interface Decided {
   readonly remedies: readonly Remedy[];
 }
 
-function verdictOf(check: CheckIdentity, { outcome, shown, whole, other, basis, remedies }: Decided): Verdict {
+function numbersOf(check: CheckIdentity, { outcome, shown, basis }: Pick<Decided, 'outcome' | 'shown' | 'basis'>): BriefVerdict {
   const offered = shown.kind === 'numbers' ? finite(shown.offered) : null;
   const compared = offered !== null && typeof shown.required === 'number' && shown.sense !== null;
   return {
     check: check.id,
-    title: check.title,
     outcome,
     required: shown.required,
     offered,
-    offeredBest: offeredOf(other),
-    ...(whole.kind === 'vertices' && other.kind === 'vertices' ? { otherThere: numberOf(other.findings[whole.findings.indexOf(shown)]) } : {}),
     unit: shown.unit,
-    sense: shown.sense ?? (Array.isArray(shown.required) ? 'one-of' : null),
     margin: compared && check.hasMargin ? marginOf(shown.required, offered, shown.sense) : null,
     spare: compared ? tidy(spareOf(shown.required, offered, shown.sense), shown.required, offered) : null,
     basis: outcome === 'unknown' ? null : basis,
     standsOn: shown.kind === 'undecided' ? null : basis,
+    known: shown.kind === 'bound' && (shown.known !== 0 || outcome === 'fail') ? shown.known : null,
+  };
+}
+
+function verdictOf(check: CheckIdentity, decided: Decided): Verdict {
+  const { outcome, shown, whole, other, basis, remedies } = decided;
+  const { required, offered, unit, margin, spare: left, basis: grade, standsOn, known } = numbersOf(check, decided);
+  return {
+    check: check.id,
+    title: check.title,
+    outcome,
+    required,
+    offered,
+    offeredBest: offeredOf(other),
+    ...(whole.kind === 'vertices' && other.kind === 'vertices' ? { otherThere: numberOf(other.findings[whole.findings.indexOf(shown)]) } : {}),
+    unit,
+    sense: shown.sense ?? (Array.isArray(shown.required) ? 'one-of' : null),
+    margin,
+    spare: left,
+    basis: grade,
+    standsOn,
     worstAt: shown.corner ?? null,
     terms: shown.kind === 'undecided' ? [] : (shown.terms ?? []),
     rss: shown.kind === 'numbers' ? (shown.rss ?? null) : null,
-    known: shown.kind === 'bound' && (shown.known !== 0 || outcome === 'fail') ? shown.known : null,
+    known,
     reason: outcome === 'unknown' ? reasonOf(shown, basis) : null,
     missing: shown.kind === 'numbers' ? [] : shown.missing,
     decidesAt: outcome === 'unknown' ? (shown.turnsAt ?? null) : null,

@@ -134,6 +134,8 @@ export type SingleFinding = NumberFinding | BoundFinding | UndecidedFinding;
 export interface VertexFindings {
   readonly kind: 'vertices';
   readonly findings: readonly SingleFinding[];
+  /** Weakest basis of all vertices, where only those that can decide are among the findings. */
+  readonly basis?: Basis;
 }
 
 export type Finding = SingleFinding | WordFinding | VertexFindings;
