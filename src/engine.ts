@@ -1,5 +1,5 @@
 import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
-import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
+import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, isSameAnswer, isSameFirst, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
 import { curvesOf } from './curves/index.js';
 import type { Part, PartSource, Tier } from './parts/part.js';
@@ -153,15 +153,17 @@ export interface SweepRequest {
   readonly values: readonly number[];
   readonly stageAt: (value: number) => Stage | string;
   readonly asking?: Asking;
+  /** What makes a turn: the answer (how many fit, and the first choice), or the first choice alone, which takes less time. */
+  readonly turnsOf?: 'answer' | 'first';
 }
 
 /** The answer at every value, and where it turns between them. */
-export function sweepOver(source: PartSource, { values, stageAt, asking }: SweepRequest): Swept & { readonly data: DataUsed } {
+export function sweepOver(source: PartSource, { values, stageAt, asking, turnsOf }: SweepRequest): Swept & { readonly data: DataUsed } {
   const outline = outlinesOf(source, asking);
   const swept = sweep(values, (value) => {
     const stage = stageAt(value);
     return typeof stage === 'string' ? { contradiction: stage } : outline(stage);
-  });
+  }, turnsOf === 'first' ? isSameFirst : isSameAnswer);
   return { ...swept, data: dataOf(source) };
 }
 

@@ -29,6 +29,7 @@ export { renderPart, renderWithdrawn } from './presentation/part-text.js';
 export { chosenPart } from './presentation/page/chosen-part.js';
 export { differencesOf, type Difference } from './presentation/page/differences.js';
 export { embeddedIn } from './presentation/page/embedded.js';
+export { pageDifference } from './presentation/page/page-edit.js';
 export { renderPage } from './presentation/page/page.js';
 export { readRecorded, type RecordedReport, type RecordedStage } from './presentation/page/recorded.js';
 export { reportCsv } from './presentation/page/report-csv.js';

@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises';
-import { differencesOf, embeddedIn, readRecorded, renderVerification, reportJson, reportLine, verificationJson, type Difference, type RecordedReport, type Review } from '../index.js';
+import { differencesOf, embeddedIn, pageDifference, readRecorded, renderVerification, reportJson, reportLine, verificationJson, type Difference, type RecordedReport, type Review } from '../index.js';
 import { withCatalog } from './catalog-file.js';
 import { EXIT } from './exit-code.js';
 import { pageOf } from './page-file.js';
@@ -54,14 +54,6 @@ function compared(recorded: RecordedReport, page: string, review: Review): Diffe
   if (differences.length > 0) return differences;
   const written = isDocument(page) ? reportJson(review) : pageOf(review);
   return written === page ? [] : [pageDifference(page, written)];
-}
-
-/** Somebody edited the page, or another version wrote it. */
-function pageDifference(page: string, written: string): Difference {
-  const [was, is] = [page.split('\n'), written.split('\n')];
-  const at = was.findIndex((line, place) => line !== is[place]);
-  const line = at < 0 ? was.length : at;
-  return { stage: null, what: 'page', subject: `the answers are the same, but the text of the file was changed after it was written, or another version wrote it; first in line ${line + 1}`, was: was[line] ?? 'nothing', is: is[line] ?? 'nothing' };
 }
 
 function failedDifference({ file, message }: Failed): Difference {

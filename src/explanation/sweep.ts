@@ -31,9 +31,9 @@ export interface SweptTurn extends Turn<SweptState> {
 }
 
 /** Asks at every value, rising, and looks for the turns between neighbours whose answers differ. */
-export function sweep(values: readonly number[], stateAt: (value: number) => SweptState): Swept {
+export function sweep(values: readonly number[], stateAt: (value: number) => SweptState, isSame = isSameAnswer): Swept {
   const points = values.map((value) => ({ value, state: stateAt(value) }));
-  const looking = { stateAt, isSame: isSameAnswer };
+  const looking = { stateAt, isSame };
   const turns = points.slice(1).flatMap((point, at) => {
     const before = points[at];
     return before === undefined ? [] : turnsBetween(before, point, looking).map((turn) => withParts(toldTurn(turn, looking)));
@@ -45,6 +45,12 @@ export function sweep(values: readonly number[], stateAt: (value: number) => Swe
 export function isSameAnswer(one: SweptState, other: SweptState): boolean {
   if ('contradiction' in one || 'contradiction' in other) return 'contradiction' in one && 'contradiction' in other;
   return one.counts.fit === other.counts.fit && one.first === other.first;
+}
+
+/** An answer turns with the first choice alone, and where the stage stops being one. */
+export function isSameFirst(one: SweptState, other: SweptState): boolean {
+  if ('contradiction' in one || 'contradiction' in other) return 'contradiction' in one && 'contradiction' in other;
+  return one.first === other.first;
 }
 
 function withParts(turn: Turn<SweptState>): SweptTurn {

@@ -8,7 +8,7 @@ import { budgetsSection } from './sections/budgets.js';
 import type { Place } from './sections/ids.js';
 import { marginsSection } from './sections/margins.js';
 import { methodSection } from './sections/method.js';
-import { plotsSection } from './sections/plots.js';
+import { plotsOfStage, plotsSection } from './sections/plots.js';
 import { rejectedSection } from './sections/rejected.js';
 import { reproduceSection } from './sections/reproduce.js';
 import { shortlistSection } from './sections/shortlist.js';
@@ -34,7 +34,7 @@ const SHORT = 16;
 export function renderPage(review: Review, document: PageDocument): string {
   const title = reviewTitle(review);
   const level = review.stages.length === 1 ? 2 : 3;
-  const places = review.stages.map((stage, at): Place => ({ review, stage, number: at + 1, level }));
+  const places = review.stages.map((stage, at): Place => ({ review, stage, number: at + 1, level, plots: plotsOfStage(stage) }));
   const mark = `${review.name ?? 'Design review'} · ${document.sha256.slice(0, SHORT)}`;
   return html`<!DOCTYPE html>
 <html lang="en">

@@ -28,7 +28,7 @@ a{color:var(--link)}
 .made,.soft,.csv{color:var(--soft);font-size:.875rem}
 nav ol{list-style:none;padding:0;display:flex;flex-wrap:wrap;gap:.1rem 1.1rem;max-width:none}
 nav .whole{flex-basis:100%}nav ol ol{font-size:.9rem;padding-left:1rem}
-nav a,.csv a{display:inline-block}
+nav a,.csv a{display:inline-block;max-width:100%;overflow-wrap:anywhere}
 nav a,.csv a,summary{min-height:24px;min-width:24px;line-height:24px}summary{cursor:pointer;width:fit-content;margin:.3rem 0}
 code,pre{font-family:ui-monospace,"DejaVu Sans Mono",monospace;font-size:.85rem}
 pre{background:var(--band);border:1px solid var(--rule);padding:.7rem .9rem;overflow-x:auto;max-width:100%}
@@ -39,7 +39,7 @@ bdi{overflow-wrap:anywhere}
 .verdict{font-size:1.3rem;font-weight:700;margin:.4rem 0;line-height:1.3}
 .good .w{color:var(--good);font-weight:600}.bad .w{color:var(--bad);font-weight:600}.open .w{color:var(--open);font-weight:600}
 .caution{border-left:.25rem solid var(--bad);padding-left:.6rem}
-.w{white-space:nowrap}`;
+.w{white-space:nowrap}.verdict .w{white-space:normal}`;
 
 const TABLES = `.scroll{overflow-x:auto;max-width:100%;margin:.7rem 0 0}
 table{border-collapse:collapse;font-size:.9rem;line-height:1.4}
@@ -47,8 +47,8 @@ caption{text-align:left;font-weight:600;padding:.2rem 0 .35rem}
 th,td{text-align:left;vertical-align:top;padding:.28rem .8rem .28rem 0;border-bottom:1px solid var(--rule);overflow-wrap:normal}
 thead th{border-bottom:2px solid var(--line);vertical-align:bottom}
 tbody th{font-weight:600}
-tbody td,tbody th{white-space:nowrap}tbody .s{min-width:12rem;white-space:normal}
-td bdi,th bdi{display:inline-block;max-width:22rem;white-space:normal;overflow-wrap:break-word}td bdi.k,th bdi.k{white-space:nowrap}.s bdi{display:inline}
+tbody td,tbody th{white-space:nowrap}tbody .s{min-width:16rem;white-space:normal}
+td bdi,th bdi{display:inline-block;max-width:22rem;white-space:normal;overflow-wrap:break-word}td bdi.k,th bdi.k{white-space:nowrap}.s bdi{display:inline}.also{display:block;font-weight:400;color:var(--soft)}
 thead .n{white-space:normal}
 .n{text-align:right;white-space:nowrap;font-variant-numeric:tabular-nums}
 .f,.u{display:inline-block;text-align:left}.f{font-variant-numeric:tabular-nums}
@@ -56,14 +56,14 @@ ${BOXES}
 thead button{font:inherit;font-weight:600;color:inherit;background:none;border:0;padding:0;min-height:24px;min-width:24px;text-align:inherit;cursor:pointer;text-decoration:underline dotted;text-underline-offset:.2em}
 th[aria-sort=ascending] button::after{content:" ▲"}th[aria-sort=descending] button::after{content:" ▼"}
 tr:target,section:target>h2,section:target>h3{outline:3px solid var(--link)}
-dl{display:grid;grid-template-columns:minmax(8rem,max-content) 1fr;gap:.2rem 1.2rem;margin:.6rem 0;max-width:60rem}
+dl{display:grid;grid-template-columns:minmax(8rem,max-content) minmax(0,1fr);gap:.2rem 1.2rem;margin:.6rem 0;max-width:60rem}
 dt{color:var(--soft)}dd{margin:0}
-figure{margin:1.6rem 0}figure svg{display:block}figcaption{max-width:48rem}
+figure{margin:1.6rem 0}figure svg{display:block;width:100%;height:auto}.drawn{width:calc(var(--w) / 16 * 1rem)}figcaption{max-width:48rem}
 figcaption{margin:.2rem 0}figcaption b{display:block}
-.sign{display:grid;grid-template-columns:repeat(auto-fit,minmax(14rem,1fr));gap:2.4rem 2rem;padding:1.6rem 0 0;list-style:none;max-width:none}
+.sign{display:grid;grid-template-columns:repeat(auto-fit,minmax(min(14rem,100%),1fr));gap:2.4rem 2rem;padding:1.6rem 0 0;list-style:none;max-width:none}
 .sign li{border-top:1px solid var(--line);padding-top:.2rem}
 .out{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
-@media (max-width:34rem){dl{grid-template-columns:1fr}dd{margin-bottom:.5rem}header,main,footer{padding-left:.8rem;padding-right:.8rem}}
+@media (max-width:34rem){dl{grid-template-columns:minmax(0,1fr)}dd{margin-bottom:.5rem}header,main,footer{padding-left:.8rem;padding-right:.8rem}}
 @media (forced-colors:active){.answer{border-color:CanvasText}thead button{text-decoration:underline}}`;
 
 const PRINT = `@media print{
@@ -71,8 +71,8 @@ const PRINT = `@media print{
 --grid:#d0d0d0;--faint:#444;--pass:#0072b2;--fail:#b84a00;--series-1:#0072b2;--series-2:#b84a00;--series-3:#007a59;--series-4:#a8527f}
 html{font-size:9.5pt}header,main,footer{max-width:none;padding:0}
 .skip,.csv,nav{display:none}
-h2,h3,h4,caption,figcaption{break-after:avoid}tr,figure,.answer,.sign li{break-inside:avoid}
-figure svg{max-width:100%;height:auto}thead{display:table-header-group;break-inside:avoid}.scroll{overflow:visible}
+h2,h3,h4,caption,figcaption{break-after:avoid}tr,li,dt,dd,.verdict,figcaption,figure>.scroll,#sign-off,.sign li{break-inside:avoid}figcaption,.verdict{break-after:avoid}.answer{-webkit-box-decoration-break:clone;box-decoration-break:clone}
+figure .drawn{width:calc(var(--w) * 1px);max-width:100%}thead{display:table-header-group;break-inside:avoid}.scroll{overflow:visible}
 table{width:100%;font-size:7.5pt}tbody .s{min-width:9em}th,td{padding:.15rem .35rem .15rem 0}tbody td,tbody th{white-space:normal}td bdi,th bdi,td bdi.k,th bdi.k{max-width:none;white-space:normal}td bdi:not(.k),th bdi:not(.k){overflow-wrap:anywhere}tbody .n,.w{white-space:nowrap}
 .f,.u{min-width:0!important}
 thead button{display:contents}

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { shortlistJson } from '../../../src/presentation/json.js';
 import { embeddedIn } from '../../../src/presentation/page/embedded.js';
 import { DOCUMENTS } from '../../../src/presentation/schemas/index.js';
+import { PAGE_PARTS, PREDICTION, SWEEP } from '../../support/page.js';
 import { SAMPLE_PARTS, sampleReport } from '../../support/sample-report.js';
 import { HOSTILE, hostileReport, pageOf, sampleReview, sampleReviewed } from '../../support/sample-review.js';
 
@@ -131,5 +132,15 @@ it('sixty parts in full stay below a megabyte', () => {
   const report = sampleReport({}, parts);
   expect(report.fit).toHaveLength(60);
   const text = pageOf(sampleReview({ stages: [sampleReviewed(report)], top: 60 }));
+  expect(Buffer.byteLength(text)).toBeLessThan(1_000_000);
+});
+
+it('sixty parts of all kinds with every figure stay below a megabyte too', () => {
+  const parts = Array.from({ length: 10 }, (_, at) => PAGE_PARTS.map((part) => ({ ...part, id: `${part.id}-${at}` }))).flat();
+  const report = sampleReport({ 'limits.outputNoise': '300 µVrms' }, parts);
+  expect(report.counts.parts).toBe(60);
+  const stage = { ...sampleReviewed(report), prediction: PREDICTION, sweep: SWEEP };
+  const text = pageOf(sampleReview({ stages: [stage], top: 60, all: true }));
+  expect([...text.matchAll(/<svg /gu)].length).toBeGreaterThan(8);
   expect(Buffer.byteLength(text)).toBeLessThan(1_000_000);
 });

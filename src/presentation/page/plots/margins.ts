@@ -1,5 +1,6 @@
 import type { Verdict } from '../../../verdicts/verdict.js';
 import { checkAmount, compared } from '../../amounts.js';
+import { tightestVerdict } from '../../tightest.js';
 import { checkWords } from '../../words.js';
 import { linearAxis } from '../drawing/axis.js';
 import { INK } from '../drawing/colours.js';
@@ -14,10 +15,10 @@ import { marginRow, ROW, SCALE } from './margin-rows.js';
 /** Beyond these a spare is cut off and says so, as a share of the limit. */
 export const [LEAST, MOST] = [-1, 2] as const;
 const TOP = 30;
-const NOTES = ['✓ met · ✕ not met · ? not decided: a broken line from the worst to the best reading, without an end where none is known.', 'Cut off at −100 % and 200 %. Temperatures, counts and words have no share.'];
+const NOTES = ['✓ met · ✕ not met · ? not decided: a broken line from the worst to the best reading, without an end where none is known.', 'Cut off at −100 % and 200 %. Temperatures, counts and words have no share.', 'Tightest is the least comfortable margin, each check on its own scale as in the order of the shortlist; it need not be the shortest bar.'];
 
 /** P6: every check that compares numbers, its spare as a share of its limit. Null without a chosen part. */
-export function margins({ chosen }: PageInput): Figure | null {
+export function margins({ report, chosen }: PageInput): Figure | null {
   if (chosen === null || chosen.verdicts.length === 0) return null;
   const rows = chosen.verdicts.map(marginOf);
   const axis = linearAxis({ words: 'spare, share of the limit', unit: '%', domain: [100 * LEAST, 100 * MOST], pixels: SCALE });
@@ -33,7 +34,7 @@ export function margins({ chosen }: PageInput): Figure | null {
     text({ x: (SCALE[0] + SCALE[1]) / 2, y: bottom + 37 }, axis.title, { anchor: 'middle' }),
     notesMarkup(notes, bottom + 60),
   ].join('');
-  return figureOf({ id: 'margins', title: 'Margins', finding: findingOf(rows, chosen.part.id), table: tableOf(rows), width: WIDTH, height: bottom + 52 + notes.length * NOTE_LINE, body, csv: csvOf(rows) });
+  return figureOf({ id: 'margins', title: 'Margins', finding: findingOf(rows, chosen.part.id, tightestVerdict(report, chosen)), table: tableOf(rows), width: WIDTH, height: bottom + 52 + notes.length * NOTE_LINE, body, csv: csvOf(rows) });
 }
 
 /** One check as the plot shows it. */
@@ -89,13 +90,13 @@ function spareWords(verdict: Verdict): string {
   return spare < 0 ? `${amount} short` : `${amount} spare`;
 }
 
-function findingOf(rows: readonly Margin[], id: string): string {
+function findingOf(rows: readonly Margin[], id: string, tightest: Verdict | null): string {
   const count = (outcome: Verdict['outcome']): number => rows.filter((row) => row.outcome === outcome).length;
   const [failed, open] = [count('fail'), count('unknown')];
-  // A follower has a noise gain of 1, and a part stable from 1 on meets it exactly: nothing is tight there.
-  const tightest = rows.filter(({ check, share, outcome }) => share !== null && outcome === 'pass' && !(check === 'stable-gain' && share === 0)).sort((a, b) => (a.share ?? 0) - (b.share ?? 0))[0];
   const counts = `${named(id)} meets ${count('pass')} of ${rows.length} checks${failed === 0 ? '' : `, fails ${failed}`}${open === 0 ? '' : `, ${open} cannot be decided`}`;
-  return tightest === undefined ? `${counts}.` : `${counts}; the tightest that is met is ${tightest.name} with ${said(100 * (tightest.share ?? 0), '%', 2)} (${tightest.words}).`;
+  if (tightest === null) return `${counts}.`;
+  const { name, share, words } = marginOf(tightest);
+  return `${counts}; the tightest is ${name} with ${words}${share === null ? '' : `, ${said(100 * share, '%', 2)} of the limit`}.`;
 }
 
 const OUTCOME_WORDS = { pass: '✓ met', fail: '✕ not met', unknown: '? not decided' } as const;

@@ -18,7 +18,7 @@ export function labels({ supply, temperature, supplyPeak }: Stage, valid: Validi
   const corner = { x: use.x, y: use.y + use.height };
   const all: { readonly wish: LabelWish; readonly fill: string }[] = [
     { fill: SERIES.first.colour, wish: { text: `cold corner ${said(temperature.min, '°C')}`, size: 12, places: [10, 24].flatMap((gap) => around(corner, gap, 12)) } },
-    { fill: SERIES.first.colour, wish: { text: `brown-out end ${said(supply.min, 'V')}`, size: 12, places: besideEdge(use) } },
+    { fill: SERIES.first.colour, wish: { text: `brown-out end ${said(supply.min, 'V')}`, size: 12, places: atLeftEdge(use) } },
     { fill: SERIES.first.colour, wish: { text: 'used', size: 13, places: insideOf(use) } },
     { fill: SERIES.third.colour, wish: { text: 'part specified', size: 13, places: insideOf(part) } },
     ...(supplyPeak > supply.max ? [{ fill: SERIES.first.colour, wish: upright(x.place(supplyPeak), box, `peak ${said(supplyPeak, 'V')}`) }] : []),
@@ -38,9 +38,11 @@ function insideOf({ x, y, width, height }: Box): LabelWish['places'] {
   ];
 }
 
-/** Left of the left edge, at several heights, then right of the box. */
-function besideEdge({ x, y, width, height }: Box): LabelWish['places'] {
-  return [0.5, 0.25, 0.75, 0].flatMap((share) => [{ x: x - 7, y: y + share * height + 5, anchor: 'end' as const }, { x: x + width + 7, y: y + share * height + 5, anchor: 'start' as const }]);
+/** At the left edge and nowhere else, since that is the brown-out end: beside it at several heights, above it, then below it. */
+function atLeftEdge({ x, y, height }: Box): LabelWish['places'] {
+  const beside = [0.5, 0.25, 0.75, 0.05].map((share) => ({ x: x - 7, y: y + share * height + 5, anchor: 'end' as const }));
+  const ends = [y - 8, y - 24, y - 40, y + height + 40, y + height + 56].flatMap((at) => [{ x: x + 2, y: at, anchor: 'end' as const }, { x, y: at, anchor: 'middle' as const }, { x: x - 2, y: at, anchor: 'start' as const }]);
+  return [...beside, ...ends];
 }
 
 function upright(at: number, box: Box, words: string): LabelWish {

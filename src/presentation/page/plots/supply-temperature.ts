@@ -3,7 +3,7 @@ import type { Stage } from '../../../stage/index.js';
 import { linearAxis, rounded } from '../drawing/axis.js';
 import { FAIL, INK, SERIES } from '../drawing/colours.js';
 import type { Box } from '../drawing/label-placing.js';
-import { hatch, marker, rect } from '../drawing/marks.js';
+import { hatch, marker, rect, segment } from '../drawing/marks.js';
 import { panelMarkup, uprightLine, type Panel } from '../drawing/panel.js';
 import { named, said, saidOr, saidRange } from '../drawing/said.js';
 import type { Figure } from '../figure.js';
@@ -89,6 +89,7 @@ function bodyOf(stage: Stage, valid: Validity): string {
     rect(use, { fill: SERIES.first.colour, opacity: '0.22', stroke: SERIES.first.colour, width: '2' }),
     supplyPeak > supply.max ? uprightLine(panel, supplyPeak, { colour: SERIES.first.colour, dash: '2 3', width: '1.5' }) : '',
     valid.absolute === null ? '' : uprightLine(panel, valid.absolute, { colour: INK, dash: '7 4', width: '1.5' }),
+    segment({ x: use.x, y: use.y }, corner, { colour: SERIES.first.colour, width: '5' }),
     marker(corner, 'square', { colour: SERIES.first.colour, radius: 5 }),
     ...labels(stage, valid, { panel, part, use }),
   ].join('');

@@ -77,7 +77,7 @@ function findingOf({ verdicts, part }: JudgedPart): string {
   const { words, verdict } = tightest;
   const spare = verdict.spare ?? 0;
   const where = supplyOf(verdict);
-  return spare < 0 ? `${words} is ${said(-spare, 'V')} short${where}.` : `${words} is tightest: ${said(spare, 'V')} spare${where}.`;
+  return spare < 0 ? `${words} is ${said(-spare, 'V')} short${where}.` : `${words} has the least room: ${said(spare, 'V')} spare${where}.`;
 }
 
 const supplyOf = ({ worstAt }: Verdict): string => (worstAt?.['supply'] === undefined ? '' : ` on a supply of ${said(worstAt['supply'], 'V')}`);

@@ -3,8 +3,8 @@ import { counted } from '../../words.js';
 import type { ChosenPart, ReviewedStage } from '../review.js';
 
 /** Who chose it: a page never passes railfit's order off as somebody's decision. */
-export function chosenBy({ report }: ReviewedStage, { by, judged }: ChosenPart): string {
-  const tier = judged.part.tier === 'approved' ? 'On the approved list.' : 'A generic set: a class of parts, not something to order.';
+export function chosenBy({ report }: ReviewedStage, { by, judged, withdrawn }: ChosenPart): string {
+  const tier = withdrawn !== undefined ? 'No longer on the approved list.' : judged.part.tier === 'approved' ? 'On the approved list.' : 'A generic set: a class of parts, not something to order.';
   const first = report.fit.length === 1 ? 'The only one in the shortlist; nobody has chosen it yet.' : 'First in the order of the shortlist; nobody has chosen it yet.';
   return `${{ named: 'Named for this review.', saved: 'The part kept with this stage.', first }[by]} ${tier}`;
 }

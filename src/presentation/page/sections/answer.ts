@@ -6,6 +6,7 @@ import { cautionsOf } from '../../json.js';
 import { safeLine } from '../../safe-text.js';
 import { countsLine } from '../../shortlist-text.js';
 import { glued } from '../../spelling.js';
+import { tightestVerdict } from '../../tightest.js';
 import { comparisonText, cornerText, spareText, unknownText } from '../../verdict-words.js';
 import { checkWords, counted } from '../../words.js';
 import { foreign, html, prose, type Html } from '../html.js';
@@ -30,7 +31,7 @@ ${undecidedBlock(place)}
 
 function chosenAnswer(place: Place, chosen: ChosenPart): Html {
   const about = aboutPart(chosen.judged.part);
-  return html`<p class="verdict">${foreign(chosen.judged.part.id)} <span class="${outcomeTone(chosen.judged.outcome)}"><span class="w">${outcomeWords(chosen.judged.outcome)}</span></span></p>
+  return html`<p class="verdict">${foreign(chosen.judged.part.id)} <span class="${outcomeTone(chosen.judged.outcome)}"><span class="w">${outcomeWords(chosen.judged.outcome)}</span></span>${chosen.withdrawn === undefined ? '' : html`, <span class="w">withdrawn since</span>`}</p>
 <p class="soft">${chosenBy(place.stage, chosen)}${about === '' ? '' : html` ${foreign(about)}.`}</p>
 ${listOf(reasons(place, chosen).map(prose))}`;
 }
@@ -42,9 +43,8 @@ function reasons(place: Place, chosen: ChosenPart): string[] {
 }
 
 function tightestLine({ stage }: Place, { judged }: ChosenPart): string {
-  const line = stage.report.fit.find((one) => one.part.id === judged.part.id);
-  const verdict = judged.verdicts.find((one) => one.check === line?.tightest);
-  if (verdict === undefined) return judged.outcome === 'fits' ? 'No check has a margin to compare.' : 'What is short or open stands in the table of margins.';
+  const verdict = tightestVerdict(stage.report, judged);
+  if (verdict === null) return judged.outcome === 'fits' ? 'No check has a margin to compare.' : 'What is short or open stands in the table of margins.';
   const corner = verdict.worstAt === null ? '' : ` ${cornerText(verdict.worstAt)}`;
   return `Tightest: ${checkWords(verdict.check)} ${comparisonText(verdict)}, ${spareText(verdict)}${corner}.`;
 }

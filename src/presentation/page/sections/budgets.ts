@@ -54,7 +54,7 @@ ${tableOf({
 function termRows(place: Place, verdict: Verdict, shareOf: ((value: number) => number) | null): PageRow[] {
   return verdict.terms.map((term, at) => {
     const share = shareOf?.(term.value) ?? null;
-    const percent = share === null ? EMPTY : figure(formatPercent(share, { digits: 2 }).replace(' ', '\u00a0'), share);
+    const percent = share === null ? EMPTY : figure(shareText(share), share);
     return { id: idOf(place, 'budget', verdict.check, String(at + 1)), cells: [words(term.name), figure(termAmount(verdict, term.value), term.value), percent] };
   });
 }
@@ -92,3 +92,6 @@ function swing(place: Place, judged: JudgedPart): Html {
 ${judged.dynamicRange === null ? '' : paragraphOf(`${swingText(judged.dynamicRange)}.`)}
 ${tableOf({ id: idOf(place, 'swing'), caption: 'Room at the rails', columns: [{ title: 'End' }, { title: 'The stage leaves', kind: 'number' }, { title: 'The part needs', kind: 'number' }, { title: 'Worst case', kind: 'sentence' }], rows })}`;
 }
+
+/** What is next to nothing says so: five zeros after the point tell no reader anything. */
+const shareText = (share: number): string => (share > 0 && share < 1e-4 ? '< 0.01\u00a0%' : formatPercent(share, { digits: 2 }).replace(' ', '\u00a0'));

@@ -1,3 +1,4 @@
+import type { Figure } from '../figure.js';
 import { html, prose, slug, type Html, type Piece } from '../html.js';
 import type { Review, ReviewedStage } from '../review.js';
 
@@ -9,6 +10,8 @@ export interface Place {
   readonly number: number;
   /** Level of the headings of its sections. */
   readonly level: 2 | 3;
+  /** Its plots, drawn once for the contents list and the section. */
+  readonly plots: readonly Figure[];
 }
 
 /** A fragment id within a stage; the same for the same stage and subject, whatever else is on the page. */

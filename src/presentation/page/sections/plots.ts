@@ -1,17 +1,18 @@
 import type { Figure } from '../figure.js';
-import { figuresOf } from '../figures.js';
-import { foreign, html, prose, trusted, type Html } from '../html.js';
+import { drawn, figuresOf } from '../figures.js';
+import { foreign, html, prose, type Html } from '../html.js';
+import type { ReviewedStage } from '../review.js';
 import { csvLink, tableOf } from '../table.js';
 import { figure, words } from '../cell.js';
 import { idOf, section, type Place } from './ids.js';
 
 /** The plots, each with its finding in one sentence and the same data as a table and as CSV. Nothing without any. */
 export function plotsSection(place: Place): Html {
-  const figures = plotsOfPlace(place);
-  return figures.length === 0 ? html`` : section(place, 'plots', figures.map((one) => figureBlock(place, one)));
+  return place.plots.length === 0 ? html`` : section(place, 'plots', place.plots.map((one) => figureBlock(place, one)));
 }
 
-export const plotsOfPlace = ({ stage }: Place): readonly Figure[] => figuresOf({
+/** Every plot that the stage has numbers for, drawn. */
+export const plotsOfStage = (stage: ReviewedStage): readonly Figure[] => figuresOf({
   report: stage.report,
   chosen: stage.chosen?.judged ?? null,
   ...(stage.prediction === null ? {} : { prediction: stage.prediction }),
@@ -22,7 +23,7 @@ function figureBlock(place: Place, { id, title, finding, svg, table, csv }: Figu
   const own = idOf(place, 'plot', id);
   return html`<figure id="${own}" aria-labelledby="${own}-title">
 <figcaption id="${own}-title"><b>${prose(title)}</b> ${isolated(finding)}</figcaption>
-<div class="scroll" role="group" tabindex="0" aria-labelledby="${own}-title">${trusted(svg)}</div>
+<div class="scroll" role="group" tabindex="0" aria-labelledby="${own}-title">${drawn(svg)}</div>
 <details><summary>Data of this figure</summary>
 ${tableOf({
     id: `${own}-data`,

@@ -5,6 +5,7 @@ import { amount, priceText } from '../../amounts.js';
 import { aboutPart, variantWords } from '../../fit-table.js';
 import { noteLines } from '../../notes.js';
 import { countsLine, ORDER_WORDS } from '../../shortlist-text.js';
+import { tightestVerdict } from '../../tightest.js';
 import { spareText } from '../../verdict-words.js';
 import { checkWords } from '../../words.js';
 import { EMPTY, figure, marked, quoted, words, type Cell } from '../cell.js';
@@ -39,7 +40,7 @@ function fitTable(place: Place): Html {
 }
 
 function fitRow(place: Place, one: RankedPart): PageRow {
-  const tightest = one.verdicts.find((verdict) => verdict.check === one.tightest);
+  const tightest = tightestVerdict(place.stage.report, one);
   const error = one.verdicts.find((verdict) => verdict.check === 'dc-error')?.offered;
   const about = [aboutPart(one.part), ...variantWords(one), ...(one.dominatedBy === null ? [] : [`nowhere better than ${one.dominatedBy}`])].filter((text) => text !== '').join('; ');
   return {
@@ -49,8 +50,8 @@ function fitRow(place: Place, one: RankedPart): PageRow {
       partCell(one, place.stage.chosen?.judged.part.id),
       words(one.part.tier),
       quoted(about),
-      words(tightest === undefined ? '' : checkWords(tightest.check)),
-      tightest === undefined ? EMPTY : figure(spareText(tightest).replace('\u00a0spare', ''), tightest.margin ?? tightest.spare),
+      words(tightest === null ? '' : checkWords(tightest.check)),
+      tightest === null ? EMPTY : figure(spareText(tightest).replace('\u00a0spare', ''), tightest.margin ?? tightest.spare),
       typeof error === 'number' ? figure(amount(error, 'V', { round: 'up' }), error) : EMPTY,
       one.current === null ? EMPTY : figure(amount(one.current, 'A', { round: 'up' }), one.current),
       one.part.price === null ? EMPTY : figure(priceText(one.part.price), one.part.price.amount),
@@ -61,7 +62,7 @@ function fitRow(place: Place, one: RankedPart): PageRow {
 }
 
 function partCell({ part }: JudgedPart, chosen: string | undefined): Cell {
-  return marked(part.id === chosen ? html`${foreign(part.id)} (chosen)` : foreign(part.id), part.id);
+  return marked(part.id === chosen ? html`${foreign(part.id)} <span class="also">(chosen)</span>` : foreign(part.id), part.id);
 }
 
 /** Nothing is cut silently. */

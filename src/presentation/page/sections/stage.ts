@@ -5,8 +5,8 @@ import { askedOf, circuitOf, loadOf } from '../../stage-text.js';
 import { checkWords } from '../../words.js';
 import type { AnyDemand } from '../../../demands/index.js';
 import { figure, marked, words } from '../cell.js';
-import { schematicSvg } from '../figures.js';
-import { foreign, html, prose, trusted, type Html } from '../html.js';
+import { drawn, schematicSvg } from '../figures.js';
+import { foreign, html, prose, type Html } from '../html.js';
 import { tableOf } from '../table.js';
 import { idOf, listOf, section, type Place } from './ids.js';
 
@@ -25,7 +25,7 @@ function drawing(place: Place): Html {
   const svg = schematicSvg(stage, place.review.symbols);
   const rules = place.review.symbols === 'iec' ? 'IEC 60617' : 'IEEE 315';
   return html`<figure id="${idOf(place, 'schematic')}" class="schematic">
-<div class="scroll" role="group" tabindex="0" aria-label="Schematic">${trusted(svg)}</div>
+<div class="scroll" role="group" tabindex="0" aria-label="Schematic">${drawn(svg)}</div>
 <figcaption>Schematic of the ${stage.topology} stage with its values, symbols after ${rules}. Decoupling and layout are not drawn.</figcaption>
 </figure>`;
 }

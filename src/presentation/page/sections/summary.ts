@@ -1,14 +1,14 @@
-import { spareText } from '../../verdict-words.js';
 import { safeLine } from '../../safe-text.js';
+import { tightestVerdict } from '../../tightest.js';
+import { spareText } from '../../verdict-words.js';
 import { checkWords } from '../../words.js';
-import { EMPTY, figure, marked, words } from '../cell.js';
+import { EMPTY, figure, marked, words, type Cell } from '../cell.js';
 import { foreign, html, type Html } from '../html.js';
-import type { Review } from '../review.js';
+import type { ChosenPart, Review } from '../review.js';
 import { tableOf, type PageRow } from '../table.js';
 import { cautionCount } from './answer.js';
 import { idOf, SECTIONS, type Place, type SectionName } from './ids.js';
 import { outcomeCell, outcomeTone } from './outcome.js';
-import { plotsOfPlace } from './plots.js';
 
 /** What a stage is called: its name, else its file, else its topology. */
 export function stageTitle({ stage }: Pick<Place, 'stage'>): string {
@@ -24,7 +24,7 @@ export function contents(places: readonly Place[]): Html {
   return html`<nav aria-label="Contents"><ol><li><a href="#summary">Summary</a></li>${places.map((place) => html`<li class="whole"><a href="#s${place.number}">${place.number}. ${foreign(stageTitle(place))}</a>${own(place)}</li>`)}${ends}</ol></nav>`;
 }
 
-const sectionsOf = (place: Place): SectionName[] => (Object.keys(SECTIONS) as SectionName[]).filter((name) => name !== 'plots' || plotsOfPlace(place).length > 0);
+const sectionsOf = (place: Place): SectionName[] => (Object.keys(SECTIONS) as SectionName[]).filter((name) => name !== 'plots' || place.plots.length > 0);
 
 /** Several stages side by side; one stage needs none. */
 export function summarySection(places: readonly Place[]): Html {
@@ -44,8 +44,7 @@ ${tableOf({
 function rowOf(place: Place): PageRow {
   const { chosen, report } = place.stage;
   const { fit, undecided, rejected } = report.counts;
-  const line = report.fit.find((one) => one.part.id === chosen?.judged.part.id);
-  const tightest = chosen?.judged.verdicts.find((verdict) => verdict.check === line?.tightest);
+  const tightest = chosen === null ? null : tightestVerdict(report, chosen.judged);
   const title = stageTitle(place);
   const cautions = cautionCount(place);
   return {
@@ -53,14 +52,18 @@ function rowOf(place: Place): PageRow {
     ...(chosen === null ? {} : { tone: outcomeTone(chosen.judged.outcome) }),
     cells: [
       marked(html`<a href="#s${place.number}">${foreign(title)}</a>`, title),
-      chosen === null ? words('none') : marked(foreign(chosen.judged.part.id), chosen.judged.part.id),
+      chosen === null ? words('none') : chosenCell(chosen),
       chosen === null ? words(undecided > 0 ? '? none is proven to fit' : '✕ nothing fits') : outcomeCell(chosen.judged.outcome),
       words(chosen?.judged.proof ?? ''),
-      words(tightest === undefined ? '' : checkWords(tightest.check)),
-      tightest === undefined ? EMPTY : figure(spareText(tightest).replace('\u00a0spare', ''), tightest.margin),
+      words(tightest === null ? '' : checkWords(tightest.check)),
+      tightest === null ? EMPTY : figure(spareText(tightest).replace('\u00a0spare', ''), tightest.margin),
       ...[fit, undecided, rejected, cautions].map((count) => figure(String(count), count)),
     ],
   };
+}
+
+function chosenCell({ judged: { part }, withdrawn }: ChosenPart): Cell {
+  return withdrawn === undefined ? marked(foreign(part.id), part.id) : marked(html`${foreign(part.id)} <span class="also">(withdrawn since)</span>`, `${part.id} (withdrawn since)`);
 }
 
 /** The title of the whole page. */

@@ -23,6 +23,24 @@ describe('supply against temperature', () => {
     expect(finding({}, { parts: [part] })).toMatch(/for TEAM-0005 its hot end is not known\.$/u);
   });
 
+  it.each([
+    ['a narrow range of supplies, as of a regulated rail', { supply: '3.14..3.47 V', supplyPeak: '3.6 V', temperature: '0..50 °C' }],
+    ['a wide one', {}],
+    ['a single supply', { supply: '3.3 V' }],
+    ['one near the lowest the part is specified for', { supply: '1.9..2.4 V', supplyPeak: '2.5 V', 'signal.input': '25 mV..150 mV' }],
+  ] as const)('names the brown-out end at the left edge of what is used, never at the other: %s', (_name, changes) => {
+    const input = pageInput(changes, { about: 'TEAM-0005' });
+    const { svg } = plotNamed(plotsOf(input), 'supply-temperature');
+    const [, x = '', rest = ''] = /<text x="([\d.]+)"([^>]*)>brown-out end/u.exec(svg) ?? [];
+    // The heavy line is that edge; the mark of the cold corner stands at its foot.
+    const [, edge = ''] = /<path d="M([\d.]+),[^"]*"[^>]*stroke-width="5"/u.exec(svg) ?? [];
+    expect(edge).not.toBe('');
+    const anchor = /text-anchor="(\w+)"/u.exec(rest)?.[1] ?? 'start';
+    const off = Number(x) - Number(edge);
+    expect(Math.abs(off)).toBeLessThanOrEqual(8);
+    if (Math.abs(off) > 3) expect(anchor).toBe('end');
+  });
+
   it('is drawn as it was', async () => {
     await expect(lines(plotNamed(plotsOf(pageInput()), 'supply-temperature').svg)).toMatchFileSnapshot('golden/supply-temperature.svg');
   });

@@ -21,7 +21,7 @@ describe('swing window', () => {
     const input = pageInput();
     const tightest = Math.min(...input.chosen!.verdicts.filter(({ check }) => /^(?:in|out)put-(?:low|high)$/u.test(check)).map(({ spare }) => spare!));
     const { finding } = plotNamed(plotsOf(input), 'swing-window');
-    expect(finding).toMatch(/^The (?:in|out)put towards V[+−] is tightest: \d/u);
+    expect(finding).toMatch(/^The (?:in|out)put towards V[+−] has the least room: \d/u);
     expect(finding).toContain(`${Math.round(tightest * 1e3)}\u00a0mV spare`);
   });
 
