@@ -49,7 +49,7 @@ function ownPole(readings: Readings, speed: Spread | null): OwnPole {
   if (margin === null) return { hertz: Infinity, basis: 'assumed', slot: null, how: 'no margin of the part itself known: no excess phase counted' };
   const { slot, basis } = margin;
   const angle = Math.max(LEAST_ANGLE, margin.value);
-  const stated = `phase margin ${formatQuantity(margin.printed ?? margin.value, '°')} at unity gain`;
+  const stated = readings.brief ? '' : `phase margin ${formatQuantity(margin.printed ?? margin.value, '°')} at unity gain`;
   if (angle >= 90) return { hertz: Infinity, basis, slot, how: `${stated}: no excess phase` };
   const crossover = readings.figure('unityCrossover');
   if (crossover !== null) return { hertz: Number.isFinite(crossover.value) ? excessPole(crossover.value, angle) : Infinity, basis, slot, how: stated };

@@ -40,7 +40,11 @@ export interface Margin {
 
 /** Margin of the loop at one gain bandwidth, degrees; 180 where the loop gain never reaches 1. */
 export function marginAt(loop: Loop, gainBandwidth: number): number {
-  const parts = phaseParts(loop, gainBandwidth);
+  return marginIn(opened(loop), gainBandwidth);
+}
+
+function marginIn(loop: Opened, gainBandwidth: number): number {
+  const parts = partsIn(loop, gainBandwidth);
   if (parts === null) return 180;
   const margin = 90 + parts.feedback + parts.load + parts.own;
   // Only upwards is it wrapped: lag beyond a full turn must not look like margin.
@@ -48,7 +52,10 @@ export function marginAt(loop: Loop, gainBandwidth: number): number {
 }
 
 /** The smaller margin of the two ends alone, degrees: enough to search with. */
-export const atEitherEnd = (loop: Loop, { least, most }: Ends): number => Math.min(marginAt(loop, least), marginAt(loop, most));
+export function atEitherEnd(loop: Loop, { least, most }: Ends): number {
+  const open = opened(loop);
+  return Math.min(marginIn(open, least), marginIn(open, most));
+}
 
 const GOLDEN = (Math.sqrt(5) - 1) / 2;
 const REFINEMENTS = 20;
@@ -58,7 +65,8 @@ const REFINEMENTS = 20;
  * between. Over this octave a parabola through three points tells whether there is one.
  */
 export function worstMargin(loop: Loop, { least, most }: Ends): Margin {
-  const at = (gainBandwidth: number): Margin => ({ margin: marginAt(loop, gainBandwidth), gainBandwidth });
+  const open = opened(loop);
+  const at = (gainBandwidth: number): Margin => ({ margin: marginIn(open, gainBandwidth), gainBandwidth });
   const last = at(most);
   if (most <= least) return last;
   const [first, middle] = [at(least), at(Math.sqrt(least * most))];
@@ -107,11 +115,37 @@ export interface PhaseParts {
  * loads the output resistance too: there Ro, Riso, RL and CL stand in one circuit with it, exactly.
  */
 export function phaseParts(loop: Loop, gainBandwidth: number): PhaseParts | null {
+  return partsIn(opened(loop), gainBandwidth);
+}
+
+/** β of the loop at a gain bandwidth (Hz): by itself, with the load inside it (null: the load stands apart), and its size with the load. */
+interface Factors {
+  readonly bare: Factor;
+  readonly loaded: Factor | null;
+  readonly size: (frequency: number) => number;
+}
+
+interface Opened {
+  readonly loop: Loop;
+  readonly factorsAt: (gainBandwidth: number) => Factors;
+}
+
+/** Made once where no capacitor of the loop is chosen by the gain bandwidth. */
+function opened(loop: Loop): Opened {
+  if (loop.open !== null) return { loop, factorsAt: (gainBandwidth) => factorsOf(loop, gainBandwidth) };
+  let made: Factors | null = null;
+  return { loop, factorsAt: (gainBandwidth) => (made ??= factorsOf(loop, gainBandwidth)) };
+}
+
+function factorsOf(loop: Loop, gainBandwidth: number): Factors {
   const networks = networksOf(loop, gainBandwidth);
   const bare = feedbackFactor(networks);
-  const { load, ownPole } = loop;
   const loaded = loadedOf(loop, networks);
-  const size = sizeOf({ load, bare, loaded });
+  return { bare, loaded, size: sizeOf({ load: loop.load, bare, loaded }) };
+}
+
+function partsIn({ loop: { load, ownPole }, factorsAt }: Opened, gainBandwidth: number): PhaseParts | null {
+  const { bare, loaded, size } = factorsAt(gainBandwidth);
   const crossover = crossoverOf((frequency) => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.hypot(1, frequency / ownPole)), gainBandwidth);
   if (crossover === null) return null;
   const feedback = bare(crossover);
@@ -125,8 +159,7 @@ export function phaseParts(loop: Loop, gainBandwidth: number): PhaseParts | null
 
 /** |β·load| of the loop as a function of the frequency in Hz, V/V: its inverse is the noise gain that the open-loop gain meets at the crossover. */
 export function loopFactor(loop: Loop, gainBandwidth: number): (frequency: number) => number {
-  const networks = networksOf(loop, gainBandwidth);
-  return sizeOf({ load: loop.load, bare: feedbackFactor(networks), loaded: loadedOf(loop, networks) });
+  return factorsOf(loop, gainBandwidth).size;
 }
 
 const loadedOf = ({ load }: Loop, networks: LoopNetworks): Factor | null => (load !== null && isExact(networks) ? loadedFactor(networks, load) : null);

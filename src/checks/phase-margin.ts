@@ -65,7 +65,7 @@ function measured(of: Measured, readings: Readings): Finding {
   return {
     kind: 'numbers', required, unit, sense, offered: worst.margin, slot: speed.slot,
     basis: weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
-    how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
+    how: readings.brief ? null : `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
     terms,
     cautions: passes && !readings.brief && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
     remedies: passes || readings.brief ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable),

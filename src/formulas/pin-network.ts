@@ -84,6 +84,7 @@ export function pinTransfers(network: PinNetwork, pinCapacitance = 0): (frequenc
     return () => held;
   }
   const mesh = starMesh(network.elements, network.pin, pinCapacitance);
+  if (mesh.inner === 0) return (frequency) => dividedAt(mesh, frequency);
   const room = roomFor(mesh);
   return (frequency) => transferOf(mesh, reduceMesh(mesh, frequency, room));
 }
@@ -92,6 +93,24 @@ function heldPin(pin: string): PinTransfer {
   const zero = { re: 0, im: 0 };
   const one = { re: 1, im: 0 };
   return { fromOutput: pin === 'output' ? one : zero, fromInput: pin === 'input' ? one : zero, impedance: zero };
+}
+
+/** Without an inner node the branches of the pin are the star already: the sums of transferOf() with nothing to take out before. */
+function dividedAt(mesh: Mesh, frequency: number): PinTransfer {
+  const { conductance, capacitance } = mesh;
+  const susceptance = (at: number): number => cell(capacitance, at) * 2 * Math.PI * frequency;
+  const [a, b, c] = [cell(conductance, 1), cell(conductance, 2), cell(conductance, 3)];
+  const [p, q, r] = [susceptance(1), susceptance(2), susceptance(3)];
+  const x = a + b + c;
+  const y = p + q + r;
+  const square = x * x + y * y;
+  // Nothing hangs on the pin, or no frequency at all: the reduction says which.
+  if (!(square > 0 && square < Infinity)) return transferOf(mesh, reduceMesh(mesh, frequency));
+  return {
+    fromOutput: { re: (a * x + p * y) / square, im: (p * x - a * y) / square },
+    fromInput: { re: (b * x + q * y) / square, im: (q * x - b * y) / square },
+    impedance: { re: (1 * x + 0 * y) / square, im: (0 * x - 1 * y) / square },
+  };
 }
 
 /** The kept node as a star of three branches to output, input and ground. */
