@@ -1,12 +1,12 @@
 import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
-import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, isSameAnswer, isSameFirst, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
+import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
 import { curvesOf } from './curves/index.js';
 import type { Part, PartSource, Tier } from './parts/part.js';
 import { predictStage, type Prediction } from './prediction/index.js';
-import { outlineAndRank, rank, screenAndRank } from './ranking/index.js';
+import { outlineAndRank, outlinesIn, screenAndRank } from './ranking/index.js';
 import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
-import { type JudgedPart, judgePart, judgingOf, lendersOf, outlining } from './screening/index.js';
+import { type JudgedPart, judgePart, judgingOf, lendersOf } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 /** Version of the judging rules. */
@@ -73,10 +73,10 @@ export function explain(stage: Stage, source: PartSource, request: ExplainReques
     rank: ranked?.rank ?? null,
     counts,
     fitting: fit.filter((one) => one !== ranked).slice(0, 3),
-    lookups: judged.outcome === 'undecided' ? lookupsOf({ run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
+    lookups: judged.outcome === 'undecided' ? lookupsOf({ run, get parts() { return source.parts; }, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
     sensitivity: sensitivitiesOf(run, judged),
     predicted: predictedInstead(stage, source, { judged, asking }),
-    changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: source.parts, strict: asking.strict }, changing),
+    changes: changing === undefined || judged.outcome === 'fits' ? null : changesFor({ stage, part: judged.part, parts: lendersOf(source), strict: asking.strict }, changing),
     asking,
     data: dataOf(source),
     origin: (partId, slot) => source.origin(partId, slot),
@@ -91,7 +91,7 @@ export function withLookups(report: Report, source: PartSource): Report {
 
 function lookupContext({ stage, asking, fit }: Report, source: PartSource): LookupContext {
   const run = judgingOf(deriveDemands(stage), source, asking.strict);
-  return { run, parts: source.parts, cells: cellsOf(source), fit, order: asking.order };
+  return { run, get parts() { return source.parts; }, cells: cellsOf(source), fit, order: asking.order };
 }
 
 /** The stage with one part in it, simulated; `compared` beside it. Judges nothing. */
@@ -140,11 +140,10 @@ export interface Outline {
 
 /** Answers many stages in a row on the same parts, with the counts and the order of `shortlist`. */
 export function outlinesOf(source: PartSource, asking: Asking = PLAIN): (stage: Stage) => Outline {
-  const outlined = outlining(source.parts, asking.strict);
+  const outline = outlinesIn(source, asking);
   return (stage) => {
-    const { counts, fit } = outlined({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
-    const ids = rank(fit, asking.order).flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
-    return { counts, first: ids[0] ?? null, fit: ids };
+    const outlined = outline({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
+    return { counts: outlined.counts, first: outlined.first, get fit() { return outlined.ids; } };
   };
 }
 
@@ -154,7 +153,7 @@ export interface SweepRequest {
   readonly stageAt: (value: number) => Stage | string;
   readonly asking?: Asking;
   /** What makes a turn: the answer (how many fit, and the first choice), or the first choice alone, which takes less time. */
-  readonly turnsOf?: 'answer' | 'first';
+  readonly turnsOf?: Swept['turnsOf'];
 }
 
 /** The answer at every value, and where it turns between them. */
@@ -163,7 +162,7 @@ export function sweepOver(source: PartSource, { values, stageAt, asking, turnsOf
   const swept = sweep(values, (value) => {
     const stage = stageAt(value);
     return typeof stage === 'string' ? { contradiction: stage } : outline(stage);
-  }, turnsOf === 'first' ? isSameFirst : isSameAnswer);
+  }, turnsOf);
   return { ...swept, data: dataOf(source) };
 }
 

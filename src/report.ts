@@ -111,6 +111,8 @@ export interface SweepReport {
   readonly over: SweepOver;
   readonly points: readonly SweptPoint[];
   readonly turns: readonly SweptTurn[];
+  /** `first`: only turns of the first choice are told. */
+  readonly turnsOf: 'any' | 'first';
   readonly asking: Asking;
   readonly data: DataUsed;
 }

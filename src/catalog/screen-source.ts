@@ -57,7 +57,11 @@ function sourceOf(database: Database.Database, file: string): PartSource {
       return from === null ? [] : guarded(file, () => cells(from, partId, figure));
     },
   };
-  return withScreening(source, { views: [approved, viewOf('generic', generic)], generic });
+  return withScreening(source, {
+    views: [approved, viewOf('generic', generic)],
+    generic,
+    find: (id) => guarded(file, () => partInForce(database, 'approved', id)) ?? generic.find((one) => one.id === id) ?? null,
+  });
 }
 
 function once<Result>(make: () => Result): () => Result {

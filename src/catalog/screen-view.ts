@@ -11,6 +11,8 @@ export function storedView(database: Database.Database, size: number): ScreenVie
   const pieces = database.prepare<[string], string>('select pieces from dictionary_trait where trait = ?').pluck();
   const codes = database.prepare<[string, number], [number, Buffer]>('select width, codes from dictionary_segment where trait = ? and segment = ?').raw();
   const row = database.prepare<[number], Cell[]>(`select ${PART_COLUMNS.join(', ')} from part where key = ?`).raw();
+  const id = database.prepare<[number], string>('select id from part where key = ?').pluck();
+  const ids = new Map<number, string>();
   const known = new Map<Trait, StoredPieces>();
   const stored = (trait: Trait): StoredPieces => {
     const found = known.get(trait) ?? { cells: JSON.parse(pieces.get(trait) ?? '[]') as Cell[][], made: [] };
@@ -23,6 +25,12 @@ export function storedView(database: Database.Database, size: number): ScreenVie
     return found;
   };
   const keysOf = onceEach((segment) => read(KEYS, segment)[1]);
+  const inRow = <Found>(query: Database.Statement<[number], Found>, position: number): Found => {
+    const key = keysOf(Math.floor(position / SEGMENT)).readUInt32LE((position % SEGMENT) * 4);
+    const found = query.get(key);
+    if (found === undefined) throw new RangeError(`no row ${key} in the part table`);
+    return found;
+  };
   return {
     tier: 'approved',
     size,
@@ -33,12 +41,12 @@ export function storedView(database: Database.Database, size: number): ScreenVie
       const [width, bytes] = read(trait, segment);
       spread(bytes, width, into);
     },
-    part(position) {
-      const key = keysOf(Math.floor(position / SEGMENT)).readUInt32LE((position % SEGMENT) * 4);
-      const found = row.get(key);
-      if (found === undefined) throw new RangeError(`no row ${key} in the part table`);
-      return rowToPart(found);
+    id(position) {
+      const found = ids.get(position) ?? inRow(id, position);
+      ids.set(position, found);
+      return found;
     },
+    part: (position) => rowToPart(inRow(row, position)),
   };
 }
 

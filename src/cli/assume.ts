@@ -32,7 +32,7 @@ function readWish(wish: string, source: PartSource): Wish {
   const end = /\.(min|max)$/u.exec(wish.slice(0, Math.max(0, equals)))?.[1] as LimitKind | undefined;
   const dot = wish.lastIndexOf('.', equals < 0 ? undefined : equals - (end === undefined ? 0 : end.length + 2));
   if (equals < 0 || dot <= 0) return refuse(wish, 'not PART.figure=VALUE', '--assume PART.offsetDrift=10µV/K');
-  const found = findPart(source.parts, wish.slice(0, dot));
+  const found = findPart(source, wish.slice(0, dot));
   if (!found.ok) return { problem: { ...found.problem, place: { path: `--assume ${wish}` } } };
   const name = wish.slice(dot + 1, equals - (end === undefined ? 0 : end.length + 1));
   if (!(name in PARAMETERS)) return refuse(wish, `no figure called ${name}`, suggest(name, Object.keys(PARAMETERS)).join(', ') || 'railfit help figures');

@@ -76,7 +76,7 @@ function judged({ path, name, saved }: AskedStage, { catalog, source, asking, wa
   const part = wanted ?? (read.ok ? read.part : null) ?? saved;
   if (!read.ok) return { file: name, part, reason: read.cause, words: read.cause === 'gone' && isPattern(name) ? NO_MATCH : failureWords(read) };
   if (part === null) return { file: name, part, reason: 'not-chosen', words: `no part is chosen for it: part: ID in the file, or railfit stages add ${name} --part ID` };
-  const found = findPart(source.parts, part, (id) => catalog.withdrawn(id));
+  const found = findPart(source, part, (id) => catalog.withdrawn(id));
   if (found.ok) return { file: name, part, explanation: explain(read.stage, source, { part: found.part, asking }) };
   return { file: name, part, reason: catalog.withdrawn(part) === null ? 'unknown-part' : 'withdrawn', words: found.problem.message };
 }

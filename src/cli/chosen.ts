@@ -44,7 +44,7 @@ function keptWith({ file, catalog }: Question): string | null {
 
 function resolved(question: Question, id: string, by: 'named' | 'saved'): Choice {
   const { report, source, catalog } = question;
-  const found = findPart(source.parts, id);
+  const found = findPart(source, id);
   if (found.ok) return { chosen: chosenPart(report, id, by), origin: report.origin, note: null };
   const was = catalog.withdrawn(id);
   if (was !== null) return asItWas(question, was, by);

@@ -1,4 +1,4 @@
-import { compare, comparisonJson, renderComparison, type Part, type Stage } from '../index.js';
+import { compare, comparisonJson, renderComparison, type Part, type PartSource, type Stage } from '../index.js';
 import type { Catalog } from '../catalog/index.js';
 import { withCatalog } from './catalog-file.js';
 import { commandContext } from './command-context.js';
@@ -19,7 +19,7 @@ export interface CompareRequest {
 export async function runCompare(session: Session, { stage, file, ids }: CompareRequest, options: JudgingOptions): Promise<Outcome> {
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
-    const comparison = compare(stage, source, { parts: twoParts(source.parts, ids, catalog), asking });
+    const comparison = compare(stage, source, { parts: twoParts(source, ids, catalog), asking });
     const exit = exitOfOutcome(comparison.parts[0].judged.outcome);
     if (options.json === true) return { text: comparisonJson(comparison), exit };
     return { text: renderComparison(comparison, styleFor(session, options), commandContext(file, options)), exit };
@@ -27,8 +27,8 @@ export async function runCompare(session: Session, { stage, file, ids }: Compare
 }
 
 /** Both, or a refusal that names everything that is wrong with either. */
-function twoParts(parts: readonly Part[], [id, against]: CompareRequest['ids'], catalog: Catalog): readonly [Part, Part] {
-  const [one, other] = [id, against].map((wanted) => findPart(parts, wanted, (gone) => catalog.withdrawn(gone)));
+function twoParts(source: PartSource, [id, against]: CompareRequest['ids'], catalog: Catalog): readonly [Part, Part] {
+  const [one, other] = [id, against].map((wanted) => findPart(source, wanted, (gone) => catalog.withdrawn(gone)));
   const problems = [
     ...(one?.ok === false ? [one.problem] : []),
     ...(other?.ok === false ? [{ ...other.problem, place: { path: '--against' } }] : []),

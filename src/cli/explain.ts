@@ -32,7 +32,7 @@ export async function runExplain(session: Session, operands: ExplainOperands, op
   if (options.against !== undefined) return runCompare(session, { stage, file, ids: [part ?? '', options.against] }, options);
   return withCatalog(session, options, (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
-    const found = findPart(source.parts, part ?? '', (id) => catalog.withdrawn(id));
+    const found = findPart(source, part ?? '', (id) => catalog.withdrawn(id));
     if (!found.ok) throw new RequestError([found.problem], EXIT.request);
     const explanation = explain(stage, source, { part: found.part, asking, changing: changingOf(spec, given) });
     const exit = exitOfOutcome(explanation.judged.outcome);

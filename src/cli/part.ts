@@ -11,7 +11,7 @@ export async function runPart(session: Session, id: string | undefined, options:
   if (id === undefined) throw new RequestError([commandProblem('C102', 'part: no ID', { fix: 'railfit parts lists the ids' })], EXIT.request);
   return withCatalog(session, options, (catalog) => {
     const source = catalog.source();
-    const found = findPart(source.parts, id);
+    const found = findPart(source, id);
     const was = found.ok ? null : catalog.withdrawn(id);
     if (was !== null) return withdrawn(was, session, options);
     if (!found.ok) throw new RequestError([found.problem], EXIT.no, `Nothing to show. (exit ${EXIT.no})`);

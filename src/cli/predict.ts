@@ -39,7 +39,7 @@ function textOf(report: PredictionReport, { session, options, file }: { readonly
 
 /** Every part that is not there is told at once. */
 function partsOf(source: PartSource, catalog: Catalog, ids: readonly string[]): Part[] {
-  const found = ids.map((id) => findPart(source.parts, id, (one) => catalog.withdrawn(one)));
+  const found = ids.map((id) => findPart(source, id, (one) => catalog.withdrawn(one)));
   const problems = found.flatMap((one) => (one.ok ? [] : [one.problem]));
   if (problems.length > 0) throw new RequestError(problems, EXIT.request);
   return found.flatMap((one) => (one.ok ? [one.part] : []));

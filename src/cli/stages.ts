@@ -63,7 +63,7 @@ async function readAll(files: readonly string[]): Promise<void> {
 
 function add(catalog: Catalog, files: readonly string[], { part }: StagesOptions): string[] {
   if (typeof part === 'string') {
-    const found = findPart(catalog.source().parts, part, (id) => catalog.withdrawn(id));
+    const found = findPart(catalog.source(), part, (id) => catalog.withdrawn(id));
     if (!found.ok) throw new RequestError([{ ...found.problem, place: { path: '--part' } }], EXIT.request);
   }
   const kept = new Map(catalog.savedStages().map((stage) => [stage.path, stage.part]));

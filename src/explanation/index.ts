@@ -11,5 +11,5 @@ export type { Sensitivity, SensitivityEnd } from './sensitivity.js';
 export { sensitivitiesOf } from './sensitivity.js';
 export type { Span } from './span.js';
 export { whyAhead, type Difference, type WhyAhead } from './why-ahead.js';
-export { isSameAnswer, isSameFirst, sweep, sweptValues, type Swept, type SweptPoint, type SweptState, type SweptTurn } from './sweep.js';
+export { isSameAnswer, sweep, sweptValues, type Swept, type SweptPoint, type SweptState, type SweptTurn } from './sweep.js';
 export { comparedPart, compareParts, type ComparedCheck, type ComparedPart, type Standing } from './compare.js';

@@ -1,7 +1,7 @@
 import { demandsWhenAsked } from '../demands/index.js';
 import type { PartSource } from '../parts/part.js';
 import { rank, type Order } from '../ranking/index.js';
-import { judgePart, judging, probePart, type JudgedPart, type Screened } from '../screening/index.js';
+import { judgePart, judgingOf, lendersOf, probePart, type JudgedPart, type Screened } from '../screening/index.js';
 import type { Stage } from '../stage/index.js';
 import { changesFor } from './changes.js';
 import { setting, type Change, type Changing } from './changing.js';
@@ -48,7 +48,7 @@ export function whyNothingFits(search: EmptySearch, changing: Changing): Nothing
   const movers = moversOf(changing, stage);
   const mayMove = (check: string): boolean => movers.some(({ touches }) => touches?.includes(check) === true);
   const looked = nearestEachWay([...screened.rejected, ...screened.undecided], movers);
-  const found = looked.flatMap(({ part }) => changesFor({ stage, part, parts: source.parts, strict }, changing).options);
+  const found = looked.flatMap(({ part }) => changesFor({ stage, part, parts: lendersOf(source), strict }, changing).options);
   const rails = isRailWanted(stage);
   const options = smallestEach(found).sort((a, b) => (rails ? Number(isSwing(b)) - Number(isSwing(a)) : 0) || a.factor - b.factor || a.moves.length - b.moves.length);
   const count = (option: Change): CountedChange | null => countedOf(option, search, { changing, movers });
@@ -135,7 +135,7 @@ function countedOf(option: Change, { source, screened, strict, order }: EmptySea
   const touching = option.moves.map(({ path }) => movers.find((mover) => mover.path === path)?.touches ?? null);
   const touched = touching.includes(null) ? null : new Set(touching.flatMap((checks) => checks ?? []));
   const open = [...screened.rejected, ...screened.undecided].filter((one) => touched === null || notPassing(one).every((check) => touched.has(check)));
-  const run = judging(demandsWhenAsked(moved), source.parts, strict);
+  const run = judgingOf(demandsWhenAsked(moved), source, strict);
   const fit = open.filter(({ part }) => probePart(run, part).fits()).map(({ part }) => judgePart(run, part));
   const first = rank(fit, order)[0];
   return first === undefined ? null : { ...option, lets: fit.length, first: first.part.id };

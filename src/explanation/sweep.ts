@@ -22,6 +22,8 @@ export interface SweptPoint {
 export interface Swept {
   readonly points: readonly SweptPoint[];
   readonly turns: readonly SweptTurn[];
+  /** `first`: how many fit changes so often on a long list that only the turns of the first choice are told. */
+  readonly turnsOf: 'any' | 'first';
 }
 
 /** A turn, with the ids that come in and go out at it. */
@@ -31,15 +33,27 @@ export interface SweptTurn extends Turn<SweptState> {
 }
 
 /** Asks at every value, rising, and looks for the turns between neighbours whose answers differ. */
-export function sweep(values: readonly number[], stateAt: (value: number) => SweptState, isSame = isSameAnswer): Swept {
+export function sweep(values: readonly number[], stateAt: (value: number) => SweptState, asked: Swept['turnsOf'] = 'any'): Swept {
   const points = values.map((value) => ({ value, state: stateAt(value) }));
-  const looking = { stateAt, isSame };
+  const turnsOf = asked === 'any' && comingAndGoing(points) > MOST_COUNTED ? 'first' : asked;
+  const looking = { stateAt, isSame: turnsOf === 'first' ? isSameFirst : isSameAnswer };
   const turns = points.slice(1).flatMap((point, at) => {
     const before = points[at];
     return before === undefined ? [] : turnsBetween(before, point, looking).map((turn) => withParts(toldTurn(turn, looking)));
   });
-  return { points, turns };
+  return { points, turns, turnsOf };
 }
+
+/** So many parts coming and going are told one turn after the other; nobody reads more. */
+const MOST_COUNTED = 150;
+
+/** By how many parts the count of fits moves from value to value, all in all. */
+function comingAndGoing(points: readonly SweptPoint[]): number {
+  const counts = points.map(({ state }) => fitCount(state));
+  return counts.reduce((sum, count, at) => sum + Math.abs(count - (counts[at - 1] ?? count)), 0);
+}
+
+const fitCount = (state: SweptState): number => ('contradiction' in state ? 0 : state.counts.fit);
 
 /** An answer turns with how many parts fit, with the first choice, and where the stage stops being one. */
 export function isSameAnswer(one: SweptState, other: SweptState): boolean {
@@ -48,14 +62,15 @@ export function isSameAnswer(one: SweptState, other: SweptState): boolean {
 }
 
 /** An answer turns with the first choice alone, and where the stage stops being one. */
-export function isSameFirst(one: SweptState, other: SweptState): boolean {
+function isSameFirst(one: SweptState, other: SweptState): boolean {
   if ('contradiction' in one || 'contradiction' in other) return 'contradiction' in one && 'contradiction' in other;
   return one.first === other.first;
 }
 
 function withParts(turn: Turn<SweptState>): SweptTurn {
   const [before, after] = [fitting(turn.from), fitting(turn.to)];
-  return { ...turn, gained: after.filter((id) => !before.includes(id)), lost: before.filter((id) => !after.includes(id)) };
+  const [wasIn, isIn] = [new Set(before), new Set(after)];
+  return { ...turn, gained: after.filter((id) => !wasIn.has(id)), lost: before.filter((id) => !isIn.has(id)) };
 }
 
 const fitting = (state: SweptState): readonly string[] => ('contradiction' in state ? [] : state.fit);

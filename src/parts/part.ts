@@ -93,4 +93,6 @@ export interface PartSource {
 export interface Screening {
   readonly views: readonly ScreenView[];
   readonly generic: readonly Part[];
+  /** The first part of the source with this id, without reading the others. */
+  find(id: string): Part | null;
 }

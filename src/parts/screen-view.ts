@@ -15,6 +15,8 @@ export interface ScreenView {
   piece(trait: Trait, code: number): Piece;
   /** Codes of one segment, written to the start of `into`. */
   codes(trait: Trait, segment: number, into: Int32Array): void;
+  /** The id of the part at a position. */
+  id(position: number): string;
   /** The whole part at a position. */
   part(position: number): Part;
 }
@@ -36,12 +38,15 @@ export function viewOf(tier: Tier, parts: readonly Part[]): ScreenView {
     codes: (trait, _segment, into) => {
       into.set(codedOf(trait).codes);
     },
-    part(position) {
-      const part = parts[position];
-      if (part === undefined) throw new RangeError(`no part at ${position} of ${parts.length}`);
-      return part;
-    },
+    id: (position) => partAt(parts, position).id,
+    part: (position) => partAt(parts, position),
   };
+}
+
+function partAt(parts: readonly Part[], position: number): Part {
+  const part = parts[position];
+  if (part === undefined) throw new RangeError(`no part at ${position} of ${parts.length}`);
+  return part;
 }
 
 /** The piece with this code. */

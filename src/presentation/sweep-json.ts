@@ -6,12 +6,13 @@ import { GLUE } from './spelling.js';
 
 /** The document `sweep`: what the values of one field cost. */
 export function sweepJson(report: SweepReport): string {
-  const { over, points, turns, asking, data } = report;
+  const { over, points, turns, turnsOf, asking, data } = report;
   const texts = sweptTexts(report);
   const { isShare: _isShare, ...field } = over;
   return document('sweep', {
     over: { ...field, steps: points.length },
     points: points.map(({ value, state }, at) => ({ value, text: plain(texts[at] ?? ''), ...stateJson(state) })),
+    turnsOf,
     turns: turns.map((turn) => turnJson(turn, plain(turnAmount(over, turn.at)))),
     asking,
     data: { catalog: data.catalog, rules: data.rules },

@@ -64,8 +64,16 @@ function rowOf({ state }: SweptPoint, value: string, most: number): string[] {
   return [value, String(fit), String(undecided), String(rejected), '#'.repeat(Math.ceil((CELLS * fit) / most)), state.first === null ? 'none fits' : safeLine(state.first)];
 }
 
-function turnLines({ over, turns, points }: SweepReport, style: Style): string[] {
+function turnLines({ over, turns, points, turnsOf }: SweepReport, style: Style): string[] {
+  if (turnsOf === 'first') {
+    const many = paragraph('How many fit changes at more values than anybody reads; where the first choice turns is told.', style);
+    return turns.length === 0 ? paragraph('How many fit changes at more values than anybody reads; the first choice stays.', style) : [...many, ...toldTurns({ over, turns }, style)];
+  }
   if (turns.length === 0) return points.length < 2 ? [] : paragraph('Neither how many fit nor the first choice turns between these values.', style);
+  return toldTurns({ over, turns }, style);
+}
+
+function toldTurns({ over, turns }: Pick<SweepReport, 'over' | 'turns'>, style: Style): string[] {
   return ['Turns', ...turns.flatMap((turn) => paragraph(`from ${turnAmount(over, turn.at)} on: ${turnWords(turn)}`, style, { lead: '  ', indent: 6 }))];
 }
 

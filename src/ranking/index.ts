@@ -4,4 +4,4 @@ export { type Decision, decisionBetween, type Order, ORDERS, placeOf, rank, type
 export { dominatorsOf } from './dominance.js';
 export { type PriceTurn, type Stability, stabilityOf, type WeightTurn } from './stability.js';
 export { rankSurveyed } from './rank-survey.js';
-export { outlineAndRank, type OutlinedAndRanked, screenAndRank, type ScreenedAndRanked } from './screen-and-rank.js';
+export { outlineAndRank, outlinesIn, type OutlinedAndRanked, screenAndRank, type ScreenedAndRanked } from './screen-and-rank.js';

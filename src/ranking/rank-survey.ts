@@ -3,15 +3,14 @@ import type { ScreenView } from '../parts/screen-view.js';
 import type { Trait } from '../parts/traits.js';
 import { lazyList, type JudgedPart, type SurveyedCatalog, type SurveyedFit } from '../screening/index.js';
 import { dominatorFinder } from './dominance.js';
-import { linesOf } from './family.js';
+import { type Line, linesOf } from './family.js';
 import { meritOf } from './merit.js';
 import type { Placed } from './placed.js';
 import { compareIn, tightestOf, type Order, type RankedPart } from './rank.js';
 
 /** The order of `rank` for parts that were surveyed: made of digests; a part is read when its line is looked at, or to break a tie. */
 export function rankSurveyed({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order = 'merit'): readonly RankedPart[] {
-  const ordered = places.map((fit) => placedOf(fit, judgedAt)).sort((a, b) => compareIn(order, a, b));
-  const lines = linesOf(ordered);
+  const lines = surveyedLines({ places, judgedAt }, order);
   const dominator = dominatorFinder(lines.map(({ first }) => first));
   return lazyList(lines.length, (at) => {
     const line = lines[at];
@@ -28,6 +27,21 @@ export function rankSurveyed({ places, judgedAt }: Pick<SurveyedCatalog, 'places
   });
 }
 
+/** Ids in that order, each variant a place of its own. */
+export function surveyedIds(survey: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): string[] {
+  return surveyedLines(survey, order).flatMap(({ first, variants }) => [first, ...variants].map(({ part }) => part.id));
+}
+
+/** The id that stands first in that order, without ordering the others; null when nothing fits. */
+export function surveyedFirst({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): string | null {
+  const [first, ...others] = places.map((fit) => placedOf(fit, judgedAt));
+  return first === undefined ? null : others.reduce((best, one) => (compareIn(order, one, best) < 0 ? one : best), first).part.id;
+}
+
+function surveyedLines({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): Line<PlacedFit>[] {
+  return linesOf(places.map((fit) => placedOf(fit, judgedAt)).sort((a, b) => compareIn(order, a, b)));
+}
+
 interface PlacedFit extends Placed {
   readonly fit: SurveyedFit;
 }
@@ -41,7 +55,7 @@ function placedOf(fit: SurveyedFit, judgedAt: (fit: SurveyedFit) => JudgedPart):
     fit, current, verdicts,
     proof: fit.isGuaranteed ? 'limits' : 'typical',
     merit: meritOf({ part: { price }, current, verdicts }),
-    part: { tier: view.tier, price, family, get id() { return judgedAt(fit).part.id; } },
+    part: { tier: view.tier, price, family, get id() { return view.id(fit.position); } },
     get confirm() { return judgedAt(fit).confirm; },
   };
 }

@@ -1,7 +1,7 @@
-import type { PartSource } from '../parts/part.js';
+import type { PartSource, Screening } from '../parts/part.js';
 import { type Judging, judgePart, judgingOf, type Marked, outlining, type Outlined, screen, type Screened, screenViews } from '../screening/index.js';
 import { type Order, rank, type RankedPart } from './rank.js';
-import { rankSurveyed } from './rank-survey.js';
+import { rankSurveyed, surveyedFirst, surveyedIds } from './rank-survey.js';
 
 /** How the answer is asked for. */
 export interface RankRequest {
@@ -41,9 +41,37 @@ export function outlineAndRank({ demands, circuit }: Marked, source: PartSource,
     const { counts, fit } = outlining(source.parts, strict)({ demands, circuit });
     return { run, counts, fit: rank(fit.map(({ part }) => judgePart(run, part)), order) };
   }
-  const { views } = source.screening;
-  const screened = screenViews(run, views, { circuit, outcomesOnly: true });
-  const { fit, undecided, rejected } = screened;
-  const parts = views.reduce((sum, { size }) => sum + size, 0);
-  return { run, counts: { parts, fit: fit.length, undecided: undecided.length, rejected: rejected.length }, fit: rankSurveyed(screened, order) };
+  const screened = screenViews(run, source.screening.views, { circuit, outcomesOnly: true });
+  return { run, counts: countsIn(screened, source.screening), fit: rankSurveyed(screened, order) };
+}
+
+function countsIn({ fit, undecided, rejected }: Screened, { views }: Screening): Outlined['counts'] {
+  return { parts: views.reduce((sum, { size }) => sum + size, 0), fit: fit.length, undecided: undecided.length, rejected: rejected.length };
+}
+
+/** Counts, and the ids of what fits in order, each variant a place of its own. */
+export interface OutlinedIds {
+  readonly counts: Outlined['counts'];
+  /** Null when nothing fits. */
+  readonly first: string | null;
+  /** Ordered when they are first asked for. */
+  readonly ids: readonly string[];
+}
+
+/** The short answer to many stages in a row: what was found out for one serves the next where it asks the same. */
+export function outlinesIn(source: PartSource, { strict, order }: RankRequest): (of: Marked) => OutlinedIds {
+  const { screening } = source;
+  if (screening !== undefined) {
+    return ({ demands, circuit }) => {
+      const screened = screenViews(judgingOf(demands, source, strict), screening.views, { circuit, outcomesOnly: true });
+      let ids: readonly string[] | null = null;
+      return { counts: countsIn(screened, screening), first: surveyedFirst(screened, order), get ids() { return (ids ??= surveyedIds(screened, order)); } };
+    };
+  }
+  const outlined = outlining(source.parts, strict);
+  return (marked) => {
+    const { counts, fit } = outlined(marked);
+    const ids = rank(fit, order).flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
+    return { counts, first: ids[0] ?? null, ids };
+  };
 }

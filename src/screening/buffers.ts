@@ -8,6 +8,8 @@ export interface Buffers {
   /** The answer of each question, part by part. */
   readonly answers: readonly Int32Array[];
   readonly sums: Int32Array;
+  /** Places of the parts still asked about. */
+  readonly open: Int32Array;
   readonly distances: Float64Array;
   readonly current: Int32Array;
   readonly codes: Map<number, Int32Array>;
@@ -16,7 +18,7 @@ export interface Buffers {
 export function buffersFor(view: ScreenView, questions: number): Buffers {
   const size = Math.min(view.segment, view.size);
   const numbers = (): Int32Array => new Int32Array(size);
-  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), distances: new Float64Array(size), current: numbers(), codes: new Map() };
+  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), distances: new Float64Array(size), current: numbers(), codes: new Map() };
 }
 
 /** Codes of one trait in this segment, read when first asked for. */

@@ -92,13 +92,26 @@ function surveySegment(counting: Counting, segment: number): void {
 }
 
 /** The cheapest questions first, and each only about the parts that have not failed yet. */
-function askWhileOpen({ questions, buffers: { sums } }: Counting, count: number, ask: (at: number, only: Int32Array | null) => void): void {
+function askWhileOpen({ questions, buffers }: Counting, count: number, ask: (at: number, only: Int32Array | null) => void): void {
+  const { sums } = buffers;
   const places = questions.map((_, at) => at).sort((a, b) => costOf(questions[a]?.check) - costOf(questions[b]?.check));
-  let open = Int32Array.from({ length: count }, (_, at) => at);
+  const open = buffers.open;
+  for (let part = 0; part < count; part += 1) open[part] = part;
+  let left = count;
   for (const at of places) {
-    ask(at, open);
-    open = open.filter((part) => ((sums[part] ?? 0) & (COUNTS.weak - 1)) === 0);
+    ask(at, open.subarray(0, left));
+    left = keepOpen(open, left, sums);
   }
+}
+
+/** Closes up to the front what has not failed yet, and says how many that are. */
+function keepOpen(open: Int32Array, count: number, sums: Int32Array): number {
+  let left = 0;
+  for (let place = 0; place < count; place += 1) {
+    const part = open[place] ?? 0;
+    if (((sums[part] ?? 0) & (COUNTS.weak - 1)) === 0) open[left++] = part;
+  }
+  return left;
 }
 
 interface Answered {

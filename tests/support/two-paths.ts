@@ -22,7 +22,7 @@ export function rowSource(parts: readonly Part[]): PartSource {
 export function viewSource(parts: readonly Part[]): PartSource {
   const source = rowSource(parts);
   const tier = (wanted: Tier): Part[] => source.parts.filter((part) => part.tier === wanted);
-  return { ...source, screening: { views: [viewOf('approved', tier('approved')), viewOf('generic', tier('generic'))], generic: tier('generic') } };
+  return { ...source, screening: { views: [viewOf('approved', tier('approved')), viewOf('generic', tier('generic'))], generic: tier('generic'), find: (id) => source.parts.find((part) => part.id === id) ?? null } };
 }
 
 /** Everything a shortlist is printed as. */

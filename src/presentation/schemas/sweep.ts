@@ -39,6 +39,7 @@ const turn = z.strictObject({
 export const sweep = envelope('sweep', 'What the values of one field cost: how many parts fit and which comes first', {
   over,
   points: z.array(z.strictObject({ value: z.number(), text: z.string(), ...state })).describe('By value'),
+  turnsOf: z.enum(['any', 'first']).describe('first: how many fit changes so often on a long list that only turns of the first choice are looked for'),
   turns: z.array(turn).describe('Where the count of fits or the first choice changes, or the stage stops being one; by value'),
   asking,
   data,
