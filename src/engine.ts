@@ -57,6 +57,9 @@ export interface ExplainRequest {
   readonly changing?: Changing;
 }
 
+/** So many of the parts that fit are told beside another. */
+const TOLD = 3;
+
 /** One part of the catalog on the stage, with its place in the shortlist. The part must be in the source. */
 export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
   const { part, asking = PLAIN, changing } = request;
@@ -72,7 +75,8 @@ export function explain(stage: Stage, source: PartSource, request: ExplainReques
     judged,
     rank: ranked?.rank ?? null,
     counts,
-    fitting: fit.filter((one) => one !== ranked).slice(0, 3),
+    // The list is lazy: one line more than is told, and no further.
+    fitting: fit.slice(0, TOLD + 1).filter((one) => one !== ranked).slice(0, TOLD),
     lookups: judged.outcome === 'undecided' ? lookupsOf({ run, get parts() { return source.parts; }, cells: cellsOf(source), fit, order: asking.order }, judged) : null,
     sensitivity: sensitivitiesOf(run, judged),
     predicted: predictedInstead(stage, source, { judged, asking }),

@@ -14,6 +14,8 @@ export interface ChoiceOptions extends JudgingOptions {
 interface Question {
   /** Null when options alone describe the stage. */
   readonly file: string | null;
+  /** The part the stage file itself names. */
+  readonly inFile: string | null;
   readonly report: Report;
   readonly source: PartSource;
   readonly catalog: Pick<Catalog, 'file' | 'savedStages' | 'withdrawn'>;
@@ -27,11 +29,11 @@ export interface Choice {
   readonly note: string | null;
 }
 
-/** The part a review is about: named, else kept with the stage, else first in order. One that was withdrawn is shown as it was. */
+/** The part a review is about: named, else in the stage file, else kept with the stage, else first in order. One that was withdrawn is shown as it was. */
 export function chosenFor(question: Question): Choice {
   const { options, report } = question;
   if (options.part !== undefined) return resolved(question, options.part, 'named');
-  const kept = keptWith(question);
+  const kept = question.inFile ?? keptWith(question);
   if (kept !== null) return resolved(question, kept, 'saved');
   return { chosen: chosenPart(report, null, 'first'), origin: report.origin, note: null };
 }

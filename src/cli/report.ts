@@ -69,7 +69,7 @@ function reviewOf({ inputs, catalog, options, time }: Making): { review: Review;
   const notes: string[] = [];
   const stages = inputs.map(({ file, text, changes, spec, stage }): ReviewedStage => {
     const report = shortlist(stage, source, asking);
-    const { chosen, origin, note } = chosenFor({ file, report, source, catalog, options });
+    const { chosen, origin, note } = chosenFor({ file, inFile: spec.part ?? null, report, source, catalog, options });
     if (note !== null) notes.push(note);
     return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen, report }) };
   });

@@ -38,7 +38,7 @@ function stageAgain(recorded: RecordedStage, catalog: Catalog): ReviewedStage | 
   try {
     const { source, asking } = judgingInput(catalog, options);
     const report = shortlist(stage, source, asking);
-    const { chosen, origin } = chosenFor({ file: null, report, source, catalog, options });
+    const { chosen, origin } = chosenFor({ file: null, inFile: null, report, source, catalog, options });
     const told = chosen === null || recorded.chosen === null || chosen.by !== 'named' ? chosen : { ...chosen, by: recorded.chosen.by };
     return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen: told, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen, report }) };
   } catch (error) {

@@ -42,6 +42,9 @@ async function bench(words: readonly string[]): Promise<void> {
   const runs = interleaved(measures, sizes.runs, say);
   say('the answer from rows');
   const same = timed(process.execPath, [SELF, '--rows', files.rows]).output === shortlistOf(files.rows).output;
+  say('the sweeps, once');
+  runs.set('sweep shipped', [sweepOf(files.shipped)]);
+  runs.set('sweep middle', [sweepOf(files.middle)]);
   const lines = linesOf(runs, { ...sizes, same });
   const text = [`${sizes.runs} runs, interleaved; medians. ${machine()}`, '', targetTable(lines), '', tableOf(runs), ''].join('\n');
   process.stdout.write(text);
@@ -66,6 +69,16 @@ function shortlistOf(catalog: string): ReturnType<typeof timed> {
   return timed(process.execPath, [...TELLING, COMMAND, 'shortlist', STAGE, '--json', '--catalog', catalog]);
 }
 
+/** A part that does not fit, with everything that would let it in. */
+function explainOf(catalog: string): ReturnType<typeof timed> {
+  return timed(process.execPath, [...TELLING, COMMAND, 'explain', 'GX-CMOS-1M-RRIO', STAGE, '--catalog', catalog]);
+}
+
+/** A hundred values of the limit most often bargained over. */
+function sweepOf(catalog: string): ReturnType<typeof timed> {
+  return timed(process.execPath, [...TELLING, COMMAND, 'sweep', STAGE, '--over', 'limits.dcError=5mV..100mV', '--steps', '100', '--catalog', catalog]);
+}
+
 function own({ large, middle, shipped }: Files): Measure[] {
   return [
     { name: 'empty node', run: () => timed(process.execPath, [...TELLING, '-e', '0']) },
@@ -73,6 +86,8 @@ function own({ large, middle, shipped }: Files): Measure[] {
     { name: 'shortlist middle', run: () => shortlistOf(middle) },
     { name: 'shortlist large', run: () => shortlistOf(large) },
     { name: 'library large', run: () => timed(process.execPath, [SELF, '--library', large]) },
+    { name: 'explain shipped', run: () => explainOf(shipped) },
+    { name: 'explain middle', run: () => explainOf(middle) },
   ];
 }
 

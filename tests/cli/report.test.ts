@@ -84,6 +84,16 @@ describe('railfit report', { timeout: 120_000 }, () => {
     await railfit('stages', 'remove', PROBE);
   });
 
+  it('is about the part the stage file names, before the one that is kept', async () => {
+    writeFileSync(at('named.yaml'), `${readFileSync(PROBE, 'utf8')}part: HOUSE-06\n`);
+    await railfit('stages', 'add', at('named.yaml'), '--part', 'HOUSE-03');
+    const { stdout } = await railfit('report', at('named.yaml'), '--json', ...TIME);
+    expect((JSON.parse(stdout) as { readonly stages: readonly { readonly chosen: unknown }[] }).stages[0]?.chosen).toMatchObject({ part: 'HOUSE-06', by: 'saved' });
+    await railfit('stages', 'remove', at('named.yaml'));
+    await railfit('report', at('named.yaml'), '-o', at('named.html'), ...TIME);
+    expect((await railfit('verify', at('named.html'))).exit).toBe(0);
+  });
+
   it('has several stages in one page, and writes Markdown and CSV', async () => {
     const page = (await railfit('report', PROBE, BUFFER, ...TIME)).stdout;
     expect(page).toContain('<h1>Design review: <bdi class="k">2 stages</bdi></h1>');
