@@ -84,6 +84,19 @@ describe('a sweep', () => {
     expect(turns[1]?.at).toBeCloseTo(2.25, 6);
   });
 
+  it('tells only where the first choice turns when a long list comes and goes all the time', () => {
+    const asked: number[] = [];
+    const swept = sweep([0, 250, 500], (value) => {
+      asked.push(value);
+      return { counts: { parts: 999, fit: Math.floor(value), undecided: 0, rejected: 0 }, first: value < 300 ? 'A' : 'B', fit: [] };
+    });
+    expect(swept.turnsOf).toBe('first');
+    expect(swept.turns.map(({ to }) => ('first' in to ? to.first : null))).toEqual(['B']);
+    expect(swept.turns[0]?.at).toBeCloseTo(300, 2);
+    expect(asked.length).toBeLessThan(60);
+    expect(sweep([0, 1, 2], (value) => answer(Math.floor(value), 'A')).turnsOf).toBe('any');
+  });
+
   it('stands at both ends, in even steps or ratios', () => {
     expect(sweptValues({ from: 2.7, to: 5.5, steps: 5, scale: 'linear' })).toEqual([2.7, 3.4, 4.1, 4.8, 5.5]);
     expect(sweptValues({ from: 1, to: 1000, steps: 4, scale: 'log' })).toEqual([1, 10, 100, 1000]);
