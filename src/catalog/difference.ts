@@ -50,15 +50,17 @@ export function compareLists(database: Database.Database, list: ReadList, progre
   const tally = newTally(parts.length);
   const hasher = contentHasher();
   const order = contentOrder(parts);
+  const before = idsInForce(database, tier);
+  const isFirst = before.length === 0;
   order.forEach((index, done) => {
     const part = parts[index];
     if (part === undefined) return;
     const row = partToRow(part);
     hasher.add(row);
-    compareOne(tally, { index, part, row, old: inForce.get(tier, part.id) });
+    compareOne(tally, { index, part, row, old: isFirst ? undefined : inForce.get(tier, part.id) });
     progress(done + 1, order.length);
   });
-  return differenceOf(tally, { ids: new Set(parts.map(({ id }) => id)), before: idsInForce(database, tier).sort(), contentSha256: hasher.digest() });
+  return differenceOf(tally, { ids: new Set(parts.map(({ id }) => id)), before: before.sort(), contentSha256: hasher.digest() });
 }
 
 interface Tally {

@@ -81,13 +81,24 @@ function keyOf(columns: readonly number[], row: readonly Cell[]): Cell {
   let filled = 0;
   for (const column of columns) if ((row[column] ?? null) !== null) filled += 1;
   if (filled === 0) return null;
-  if (filled === 1 && typeof row[first] === 'number') return row[first];
-  return columns.map((column) => JSON.stringify(row[column] ?? null)).join();
+  const alone = row[first] ?? null;
+  if (filled === 1 && typeof alone === 'number') return alone;
+  let key = '';
+  // Without escaping where nothing stands behind: the points, which are long.
+  const last = columns.at(-1);
+  for (const column of columns) key += column === last ? String(row[column] ?? '') : `${JSON.stringify(row[column] ?? null)}|`;
+  return key;
 }
 
 /** Little-endian, whatever the machine. */
 function bytesOf(codes: Uint32Array, width: number): Buffer {
-  const bytes = Buffer.allocUnsafe(codes.length * width);
-  for (let at = 0; at < codes.length; at += 1) bytes.writeUIntLE(codes[at] ?? 0, at * width, width);
+  const bytes = Buffer.alloc(codes.length * width);
+  const view = new DataView(bytes.buffer, bytes.byteOffset);
+  for (let at = 0; at < codes.length; at += 1) {
+    const code = codes[at] ?? 0;
+    if (width === 1) view.setUint8(at, code);
+    else if (width === 2) view.setUint16(at * 2, code, true);
+    else view.setUint32(at * 4, code, true);
+  }
   return bytes;
 }

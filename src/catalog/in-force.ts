@@ -22,6 +22,12 @@ export function partInForce(database: Database.Database, tier: Tier, id: string)
   return row === undefined ? null : rowToPart(row);
 }
 
+/** Whether a part of a tier is in force, by its id; the query is made once. */
+export function isInForce(database: Database.Database, tier: Tier): (id: string) => boolean {
+  const query = database.prepare<[Tier, string], number>('select 1 from part where tier = ? and id = ? and withdrawn_at is null').pluck();
+  return (id) => query.get(tier, id) !== undefined;
+}
+
 /** Ids of a tier in force. */
 export function idsInForce(database: Database.Database, tier: Tier): string[] {
   return database.prepare<[Tier], string>('select id from part where tier = ? and withdrawn_at is null').pluck().all(tier);

@@ -19,9 +19,16 @@ export function originFinder(database: Database.Database): (query: OriginQuery) 
   const tableOf = columnTables(database);
   // Everything of the row, since the column of `figures` came with a later version of the tables.
   const records = database.prepare<[number, string], RecordRow>('select * from record where import_id = ? and part_id = ?');
+  // The figures of a part are asked for one after the other.
+  let last: { readonly key: string; readonly record: ReadRecord | null } | null = null;
+  const recordOf = ({ from, partId }: OriginQuery): ReadRecord | null => {
+    const key = `${from.id} ${partId}`;
+    if (last?.key !== key) last = { key, record: readRecord(records.get(from.id, partId)) };
+    return last.record;
+  };
   return (query) => {
-    const record = records.get(query.from.id, query.partId);
-    if (record === undefined) return null;
+    const record = recordOf(query);
+    if (record === null) return null;
     const sheet = patchedCell(record, query.slot);
     if (sheet !== null) return sheet;
     const table = tableOf(query.from.id);
@@ -32,9 +39,8 @@ export function originFinder(database: Database.Database): (query: OriginQuery) 
   };
 }
 
-function numberOf({ figures }: RecordRow, slot: string, { slots }: ColumnTable): number | undefined {
-  const own = figures == null ? undefined : (JSON.parse(figures) as Readonly<Record<string, number>>)[slot];
-  return own ?? slots.get(slot) ?? firstUnder(slots, slot);
+function numberOf({ figures }: ReadRecord, slot: string, { slots }: ColumnTable): number | undefined {
+  return figures[slot] ?? slots.get(slot) ?? firstUnder(slots, slot);
 }
 
 /** A figure that is missing is asked for without condition: then the first of its columns, whose cell is empty. */
@@ -43,8 +49,8 @@ function firstUnder(slots: ReadonlyMap<string, number>, slot: string): number | 
 }
 
 /** The cell of a look-up sheet the figure came from; null when it came from the list itself. */
-function patchedCell({ patched }: RecordRow, slot: string): Origin | null {
-  return patched == null ? null : ((JSON.parse(patched) as Readonly<Record<string, PatchedCell>>)[slot] ?? null);
+function patchedCell({ patched }: ReadRecord, slot: string): Origin | null {
+  return patched[slot] ?? null;
 }
 
 interface RecordRow {
@@ -55,8 +61,20 @@ interface RecordRow {
   readonly patched?: string | null;
 }
 
-function originOf({ line, row, cells }: RecordRow, { tier, from, partId }: OriginQuery, { header, number, letter }: ListColumn): Origin {
-  const cell = (JSON.parse(cells) as string[])[number - 1] ?? '';
+interface ReadRecord extends Pick<RecordRow, 'line' | 'row'> {
+  readonly cells: readonly string[];
+  readonly figures: Readonly<Partial<Record<string, number>>>;
+  readonly patched: Readonly<Partial<Record<string, PatchedCell>>>;
+}
+
+function readRecord(found: RecordRow | undefined): ReadRecord | null {
+  if (found === undefined) return null;
+  const { line, row, cells, figures, patched } = found;
+  return { line, row, cells: JSON.parse(cells) as string[], figures: JSON.parse(figures ?? '{}') as ReadRecord['figures'], patched: JSON.parse(patched ?? '{}') as ReadRecord['patched'] };
+}
+
+function originOf({ line, row, cells }: ReadRecord, { tier, from, partId }: OriginQuery, { header, number, letter }: ListColumn): Origin {
+  const cell = cells[number - 1] ?? '';
   if (tier === 'generic') return { kind: 'generic', id: partId, header, cell };
   return { kind: 'cell', file: from.file, sha256: from.sha256, line, row, column: number, columnLetter: letter, header, cell };
 }

@@ -11,7 +11,10 @@ type Point = readonly [LimitKind, number, Condition, true?];
 
 /** A part as the values of `PART_COLUMNS`. */
 export function partToRow(part: Part): Cell[] {
-  return [...identityCells(part), ...figureCells(part.figures)];
+  const row = identityCells(part);
+  while (row.length < WIDTH) row.push(null);
+  placeFigures(row, part.figures);
+  return row;
 }
 
 /** The part of a row that `partToRow` made; figures come back in canonical order. */
@@ -47,18 +50,35 @@ export function identityOf(row: readonly Cell[]): Omit<Part, 'figures'> {
   };
 }
 
-function figureCells(figures: readonly Figure[]): Cell[] {
-  const cells = new Array<Cell>(FIGURE_COLUMNS.length).fill(null);
-  const points = new Map<number, Point[]>();
-  for (const { parameter, kind, value, condition, assumed } of figures) {
-    const isOneCell = isPlain(condition) && assumed !== true;
-    const index = COLUMN_INDEX[parameter][isOneCell ? kind : 'points'];
+const WIDTH = IDENTITY_COLUMNS.length + FIGURE_COLUMNS.length;
+
+function placeFigures(row: Cell[], figures: readonly Figure[]): void {
+  const points = new Map<number, string>();
+  for (const figure of figures) {
+    const { parameter, kind, value, condition } = figure;
+    const isOneCell = figure.assumed !== true && isPlain(condition);
+    const index = COLUMN_INDEX.get(parameter)?.[isOneCell ? kind : 'points'];
     if (index === undefined) throw new RangeError(`${parameter} ${kind} has no column`);
-    if (isOneCell) cells[index] = value;
-    else points.set(index, [...(points.get(index) ?? []), assumed === true ? [kind, value, condition, true] : [kind, value, condition]]);
+    if (isOneCell) row[index] = value;
+    else points.set(index, points.has(index) ? `${points.get(index) ?? ''},${pointText(figure)}` : pointText(figure));
   }
-  for (const [index, list] of points) cells[index] = JSON.stringify(list);
-  return cells;
+  for (const [index, texts] of points) row[index] = `[${texts}]`;
+}
+
+/** A `Point` as JSON. */
+function pointText({ kind, value, condition, assumed }: Figure): string {
+  return `["${kind}",${JSON.stringify(value)},${conditionText(condition)}${assumed === true ? ',true' : ''}]`;
+}
+
+const CONDITION_TEXTS = new WeakMap<Condition, string>();
+
+/** The figures of a column share their condition, so each is written once. */
+function conditionText(condition: Condition): string {
+  const known = CONDITION_TEXTS.get(condition);
+  if (known !== undefined) return known;
+  const text = JSON.stringify(condition);
+  CONDITION_TEXTS.set(condition, text);
+  return text;
 }
 
 /** Nothing was stated. Asked for every figure of a list, so without making a list of the keys. */
@@ -68,9 +88,16 @@ function isPlain({ supply, load, temperature, gain }: Condition): boolean {
 
 const COLUMN_INDEX = columnIndex();
 
-function columnIndex(): Readonly<Record<Parameter, Partial<Record<LimitKind | 'points', number>>>> {
-  const index = Object.fromEntries(FIGURE_COLUMNS.map(({ parameter }) => [parameter, {}])) as Record<Parameter, Partial<Record<LimitKind | 'points', number>>>;
-  FIGURE_COLUMNS.forEach(({ parameter, kind }, at) => { index[parameter][kind ?? 'points'] = at; });
+type Places = Record<LimitKind | 'points', number | undefined>;
+
+/** Where in the row a kind of a parameter stands, and its points. */
+function columnIndex(): ReadonlyMap<Parameter, Places> {
+  const index = new Map<Parameter, Places>();
+  FIGURE_COLUMNS.forEach(({ parameter, kind }, at) => {
+    const places = index.get(parameter) ?? { min: undefined, typ: undefined, max: undefined, points: undefined };
+    index.set(parameter, places);
+    places[kind ?? 'points'] = IDENTITY_COLUMNS.length + at;
+  });
   return index;
 }
 

@@ -4,7 +4,7 @@ import { viewOf, type ScreenView } from '../parts/screen-view.js';
 import { CatalogError, guarded } from './catalog-error.js';
 import { catalogHash } from './content.js';
 import { freshSize, hasDictionary, rebuildDictionary } from './dictionary.js';
-import { countInForce, partInForce, partsInForce } from './in-force.js';
+import { countInForce, isInForce, partInForce, partsInForce } from './in-force.js';
 import { currentImport } from './imports.js';
 import { cellFinder } from './list-cells.js';
 import { originFinder } from './origins.js';
@@ -43,12 +43,13 @@ function sourceOf(database: Database.Database, file: string): PartSource {
   const all = once(() => [...approvedRows(), ...generic]);
   const size = hasDictionary(database) ? freshSize(database) : null;
   const approved: ScreenView = size === null ? viewOf('approved', approvedRows()) : storedView(database, size);
+  const isApproved = isInForce(database, 'approved');
   const source: PartSource = {
     get parts() { return all(); },
     sha256: catalogHash(imports.approved?.contentSha256 ?? null, imports.generic?.contentSha256 ?? null),
     origin(partId, slot) {
       // An id that a later set took from the list is still that of the list.
-      const tier = genericIds.has(partId) && partInForce(database, 'approved', partId) === null ? 'generic' : 'approved';
+      const tier = genericIds.has(partId) && !isApproved(partId) ? 'generic' : 'approved';
       const from = imports[tier];
       return from === null ? null : guarded(file, () => origin({ tier, from, partId, slot }));
     },

@@ -2,6 +2,7 @@ import type Database from 'better-sqlite3';
 import type { ReadList } from '../intake/list.js';
 import type { Tier } from '../parts/part.js';
 import { encodeList, rebuildDictionary } from './dictionary.js';
+import { encoder, type Encoder } from './encoder.js';
 import type { Difference } from './difference.js';
 import { FATE } from './difference.js';
 import { currentImport, insertImport, updateOrigin } from './imports.js';
@@ -34,13 +35,25 @@ export function writeDifference(database: Database.Database, list: ReadList, { d
     `insert into part (import_id, ${PART_COLUMNS.join(', ')}) values (?, ${PART_COLUMNS.map(() => '?').join(', ')})`,
   );
   const writeRecord = recordWriter(database, list, importId);
+  const encoding = encodingOnTheWay(database, list, difference);
   list.parts.forEach((part, index) => {
     if (fates[index] === FATE.changed) withdraw.run(importId, tier, part.id);
-    if (fates[index] !== FATE.unchanged) insert.run(importId, ...partToRow(part));
+    if (fates[index] !== FATE.unchanged) {
+      const row = partToRow(part);
+      const { lastInsertRowid: key } = insert.run(importId, row);
+      encoding?.add(Number(key), row);
+    }
     writeRecord(part.id, index);
     progress(index + 1, list.parts.length);
   });
-  if (tier === 'approved') encodeList(database, list.parts);
+  if (encoding !== null) encoding.finish();
+  else if (tier === 'approved') encodeList(database, list.parts);
+}
+
+/** A list of new versions alone, in the order of the dictionary, is encoded while it is written; any other afterwards. */
+function encodingOnTheWay(database: Database.Database, { tier, parts }: ReadList, { counts }: Difference): Encoder | null {
+  const isInOrder = parts.every(({ id }, at) => at === 0 || (parts[at - 1]?.id ?? '') < id);
+  return tier === 'approved' && counts.unchanged === 0 && isInOrder ? encoder(database, parts.length) : null;
 }
 
 /**

@@ -1,14 +1,13 @@
-import { lookupsJson, renderLookups, renderShortlist, shortlist, shortlistCsv, shortlistJson, withLookups, withWaysOut, type Report } from '../index.js';
+import { shortlist, shortlistJson, withWaysOut } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { withCatalog } from './catalog-file.js';
 import { commandContext } from './command-context.js';
 import { exitOfCounts } from './exit-code.js';
 import { judgingInput, type JudgingOptions } from './judging-input.js';
-import { lookupSheet } from './lookup-sheet.js';
-import { newFileProblem, refusedFile, writeNewFile } from './new-file.js';
+import { newFileProblem, refusedFile } from './new-file.js';
 import { changingOf } from './rerun.js';
 import { commandProblem, twoForms } from './request-error.js';
-import { DEFAULT_TOP, styleFor, type Outcome, type Session } from './session.js';
+import { DEFAULT_TOP, type Outcome, type Session } from './session.js';
 import { readStageOf } from './stage-input.js';
 
 export interface ShortlistOptions extends JudgingOptions {
@@ -19,41 +18,17 @@ export interface ShortlistOptions extends JudgingOptions {
   readonly force?: boolean;
 }
 
-/** With more undecided parts of the list than this the end of a shortlist does not search for what would decide them. */
-const MOST_SEARCHED = 30;
-
 /** `railfit shortlist [STAGE]`: derive, judge the whole catalog, rank, explain; or what to look up. */
 export async function runShortlist(session: Session, operand: string | undefined, options: ShortlistOptions): Promise<Outcome> {
   const { spec, stage, file, given } = await readStageOf(operand, { ...options, already: [...(options.already ?? []), ...twoForms(options), ...sheetProblems(options)] });
-  return withCatalog(session, options, (catalog) => {
+  return withCatalog(session, options, async (catalog) => {
     const { source, asking } = judgingInput(catalog, options);
     const report = withWaysOut(shortlist(stage, source, asking), source, changingOf(spec, given));
     const exit = exitOfCounts(report.counts);
-    const context = commandContext(file, options);
-    if (options.lookups === true) return { ...lookedUp(withLookups(report, source), session, { options, context }), exit };
-    if (options.json === true) return { text: shortlistJson(report, { top: options.top ?? DEFAULT_TOP, all: options.all === true }), exit };
-    if (options.csv === true) return { text: shortlistCsv(report), exit };
-    const told = report.undecided.filter(({ part }) => part.tier === 'approved').length > MOST_SEARCHED ? report : withLookups(report, source);
-    return { text: renderShortlist(told, styleFor(session, options), context), exit };
+    if (options.json === true && options.lookups !== true) return { text: shortlistJson(report, { top: options.top ?? DEFAULT_TOP, all: options.all === true }), exit };
+    const { told } = await import('./shortlist-told.js');
+    return { ...told(report, source, { session, options, context: commandContext(file, options) }), exit };
   });
-}
-
-interface Told {
-  readonly options: ShortlistOptions;
-  readonly context: ReturnType<typeof commandContext>;
-}
-
-function lookedUp(report: Report, session: Session, { options, context }: Told): Pick<Outcome, 'text'> {
-  const written = writeSheetOf(report, options);
-  if (options.json === true) return { text: lookupsJson(report, written) };
-  return { text: renderLookups(report, styleFor(session, options), { context, written }) };
-}
-
-/** Nothing is written when there is nothing to fill in. */
-function writeSheetOf({ lookups }: Report, { output, force }: ShortlistOptions): string | null {
-  if (output === undefined || lookups === undefined || lookups.settled.parts === 0) return null;
-  writeNewFile(output, lookupSheet(lookups), force === true);
-  return output;
 }
 
 function sheetProblems({ lookups, output, force, csv }: ShortlistOptions): Problem[] {

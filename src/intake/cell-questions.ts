@@ -16,6 +16,7 @@ interface Table {
 /** Columns whose cells leave two readings: each is one question, and is read no further until it is answered. */
 export function cellQuestions(columns: readonly ListColumn[], { rows, header, log }: Table): readonly ListColumn[] {
   return columns.map((column) => {
+    if (column.reading.kind !== 'rail' && column.reading.kind !== 'measured') return column;
     const cells = rows.map((record) => record.cells[column.number - 1] ?? '').filter((cell) => !isMissing(cell));
     const found = railQuestion(column, cells) ?? commonModeQuestion(column, cells);
     if (found === null) return column;

@@ -20,11 +20,34 @@ export interface DecimalMark {
  */
 export function decimalMark(delimiter: Delimiter, columns: readonly ListColumn[], { rows, given }: { readonly rows: readonly ListRecord[]; readonly given?: 'point' | 'comma' | undefined }): DecimalMark {
   const numeric = columns.filter(({ reading }) => NUMERIC.has(reading.kind));
-  const proofs = (proof: RegExp): string[] => rows.flatMap(({ cells }) => numeric.flatMap(({ number }) => (proof.test(cells[number - 1] ?? '') ? [cells[number - 1] ?? ''] : [])));
-  const [commas, points] = [proofs(COMMA), proofs(POINT)];
-  const isComma = given === 'comma' || (given === undefined && delimiter !== ',' && commas.length > 0 && points.length === 0);
+  const [commas, points] = proofsIn(rows, numeric);
+  const isComma = given === 'comma' || (given === undefined && delimiter !== ',' && commas.count > 0 && points.count === 0);
   const [own, other] = isComma ? [commas, points] : [points, commas];
-  return { mark: isComma ? 'comma' : 'point', rule: given ?? (isComma ? 'comma' : null), proofs: own.length, against: other.length, sample: own[0] ?? null, given: given !== undefined };
+  return { mark: isComma ? 'comma' : 'point', rule: given ?? (isComma ? 'comma' : null), proofs: own.count, against: other.count, sample: own.first, given: given !== undefined };
+}
+
+interface Proofs {
+  count: number;
+  first: string | null;
+}
+
+/** Cells that prove a comma, and a point, row by row. Most cells of a long list have neither mark in them. */
+function proofsIn(rows: readonly ListRecord[], numeric: readonly ListColumn[]): [commas: Proofs, points: Proofs] {
+  const [commas, points]: [Proofs, Proofs] = [{ count: 0, first: null }, { count: 0, first: null }];
+  for (const { cells } of rows) {
+    for (const { number } of numeric) {
+      const cell = cells[number - 1] ?? '';
+      if (cell === '') continue;
+      if (cell.includes(',') && COMMA.test(cell)) add(commas, cell);
+      if (cell.includes('.') && POINT.test(cell)) add(points, cell);
+    }
+  }
+  return [commas, points];
+}
+
+function add(proofs: Proofs, cell: string): void {
+  proofs.count += 1;
+  proofs.first ??= cell;
 }
 
 const NUMERIC: ReadonlySet<string> = new Set(['figure', 'price', 'measured', 'load']);

@@ -64,6 +64,21 @@ export function readNumber(cell: string, field: FieldKind, context: ReadingConte
   return { ok: true, value, end, quantity: result.quantity };
 }
 
+/** So many different cells of a column are remembered. */
+const MOST_REMEMBERED = 10_000;
+
+/** `readNumber` for one column: values in a list repeat, so each text is read once. */
+export function numberReader(field: FieldKind, context: ReadingContext): (cell: string) => NumberCell {
+  const known = new Map<string, NumberCell>();
+  return (cell) => {
+    const earlier = known.get(cell);
+    if (earlier !== undefined) return earlier;
+    const read = readNumber(cell, field, context);
+    if (known.size < MOST_REMEMBERED) known.set(cell, read);
+    return read;
+  };
+}
+
 export function contextOf(unit: string | null, decimal: DecimalRule): ReadingContext {
   return { ...(unit === null ? {} : { headerUnit: unit }), ...(decimal === null ? {} : { decimal }) };
 }

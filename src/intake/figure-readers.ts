@@ -37,7 +37,11 @@ export function figureReaders(columns: readonly ListColumn[], decimal: DecimalRu
   const description = isOrdinary ? columns.find(({ reading }) => reading.kind === 'identity' && reading.field === 'description') : undefined;
   return (record, sink) => {
     const row: RowContext = { load: load === undefined ? null : loadOf(load, record, { sink, decimal }), channels: sink.channels };
-    for (const { column, read } of readers) readCell(column, read, { record, row, sink });
+    for (const { column, read } of readers) {
+      const cell = record.cells[column.number - 1] ?? '';
+      // As most cells of a wide table are.
+      if (cell !== '') readCell(cell, read, { column, row, sink });
+    }
     for (const column of rails) railCell(column, record, sink);
     const words = description === undefined || sink.found.rails !== null ? null : railWordsOf(sink.description ?? '');
     if (words !== null && description !== undefined) sink.found.rails = { words, column: description };
@@ -79,25 +83,28 @@ function remembered(read: ReadCell, perRow: boolean): ReadCell {
     const key = perRow ? `${row.channels ?? ''} ${conditionKey(row.load === null ? {} : { load: row.load })} ${cell}` : cell;
     const earlier = known.get(key);
     if (earlier !== undefined) return earlier;
-    const result = read(cell, row);
+    const result = figuresIn(cell, read, row);
     if (known.size < MOST_REMEMBERED) known.set(key, result);
     return result;
   };
 }
 
+/** A formula is none, whatever the column. */
+function figuresIn(cell: string, read: ReadCell, row: RowContext): MeasuredCell {
+  const formula = formulaFault(cell);
+  return formula === null ? read(cell, row) : { ok: false, fault: formula };
+}
+
 const MOST_REMEMBERED = 10_000;
 
 interface CellReading {
-  readonly record: ListRecord;
+  readonly column: ListColumn;
   readonly row: RowContext;
   readonly sink: FigureSink;
 }
 
-function readCell(column: ListColumn, read: ReadCell, { record, row, sink }: CellReading): void {
-  const cell = record.cells[column.number - 1] ?? '';
+function readCell(cell: string, read: ReadCell, { column, row, sink }: CellReading): void {
   if (isMissing(cell)) return;
-  const formula = formulaFault(cell);
-  if (formula !== null) return sink.report(column, formula, 'error');
   const result = read(cell, row);
   if (!result.ok) return sink.report(column, result.fault, 'error');
   for (const figure of result.figures) addFigure(figure, column, sink);

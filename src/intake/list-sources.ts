@@ -1,4 +1,4 @@
-import { figureSlot } from '../parts/figures.js';
+import { figureSlot, type Condition } from '../parts/figures.js';
 import type { ReadPart } from './identity.js';
 import type { ListColumn, ReadList } from './list.js';
 import { slotOf } from './slot.js';
@@ -24,8 +24,11 @@ export function listSources(columns: readonly ListColumn[], read: readonly ReadP
   const told = new Map(columns.flatMap((column) => plainSlot(column)));
   const usual = new Map<string, number>();
   const others = new Map<number, Map<string, number>>();
+  const plain = columnsThatTell(columns, told);
   read.forEach(({ part: { figures }, sources }, index) => {
     figures.forEach((figure, at) => {
+      // Its header tells: nothing to keep.
+      if (plain.get(sources[at] ?? null) === figure.condition) return;
       const slot = slotOf(figure);
       const number = sources[at]?.number ?? DECLARED;
       const known = usual.get(slot) ?? told.get(slot);
@@ -34,6 +37,14 @@ export function listSources(columns: readonly ListColumn[], read: readonly ReadP
     });
   });
   return { usual, others, declared };
+}
+
+/** The columns that fill the one slot they name, with the condition their figures share; that of a figure from elsewhere is another object. */
+function columnsThatTell(columns: readonly ListColumn[], told: ReadonlyMap<string, number>): ReadonlyMap<ListColumn | null, Condition> {
+  return new Map(columns.flatMap((column): [ListColumn, Condition][] => {
+    const [slot] = plainSlot(column);
+    return column.reading.kind === 'figure' && slot !== undefined && told.get(slot[0]) === column.number ? [[column, column.reading.condition]] : [];
+  }));
 }
 
 /** The slot a column names by itself. */

@@ -23,28 +23,46 @@ export function emptyDraft(tier: Tier): Draft {
   };
 }
 
+/** A figure and the column it stands in. */
+export interface PlacedFigure {
+  readonly figure: Figure;
+  readonly column: ListColumn;
+}
+
 /** The figures of a part while it is read, each with the column it stands in; one a slot. */
 export class DraftFigures {
-  readonly #sources = new Map<string, { readonly figure: Figure; readonly column: ListColumn }>();
+  readonly figures: Figure[] = [];
+  /** `columns[i]` is that of `figures[i]`. */
+  readonly columns: ListColumn[] = [];
+  /** Where in the lists a slot is; null where no two columns name the same one (`standInOrder`). */
+  readonly #slots: Map<string, number> | null;
   /** Words about the rails, with the column they stand in. */
   rails: { readonly words: RailWords; readonly column: ListColumn } | null = null;
 
+  constructor(isInOrder: boolean) {
+    this.#slots = isInOrder ? null : new Map<string, number>();
+  }
+
   /** Keeps a figure; the one that is in its slot already when there is another, which then stays. */
-  add(figure: Figure, column: ListColumn): { readonly figure: Figure; readonly column: ListColumn } | null {
-    const slot = slotOf(figure);
-    const earlier = this.#sources.get(slot);
-    if (earlier !== undefined) return earlier;
-    this.#sources.set(slot, { figure, column });
+  add(figure: Figure, column: ListColumn): PlacedFigure | null {
+    const earlier = this.#earlier(figure);
+    if (earlier !== null) return earlier;
+    this.figures.push(figure);
+    this.columns.push(column);
     return null;
   }
 
   /** True when a figure of the parameter was read. */
   has(parameter: Figure['parameter']): boolean {
-    for (const { figure } of this.#sources.values()) if (figure.parameter === parameter) return true;
-    return false;
+    return this.figures.some((figure) => figure.parameter === parameter);
   }
 
-  all(): { readonly figure: Figure; readonly column: ListColumn }[] {
-    return [...this.#sources.values()];
+  #earlier(figure: Figure): PlacedFigure | null {
+    if (this.#slots === null) return null;
+    const slot = slotOf(figure);
+    const at = this.#slots.get(slot);
+    if (at === undefined) this.#slots.set(slot, this.figures.length);
+    const [known, column] = at === undefined ? [] : [this.figures[at], this.columns[at]];
+    return known === undefined || column === undefined ? null : { figure: known, column };
   }
 }

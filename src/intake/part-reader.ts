@@ -4,7 +4,8 @@ import type { CellFault } from './cell-fault.js';
 import { cellReader } from './cell-reader.js';
 import { figureReaders } from './figure-readers.js';
 import type { ListColumn, ListOptions, ListRecord } from './list.js';
-import { DraftFigures, emptyDraft } from './part-draft.js';
+import { standInOrder } from './ordered-columns.js';
+import { DraftFigures, emptyDraft, type PlacedFigure } from './part-draft.js';
 import { railFigures } from './rail-words.js';
 import { missingIn } from './text-cell.js';
 import type { DecimalRule } from './decimal-mark.js';
@@ -24,28 +25,42 @@ export type PartReader = (record: ListRecord, report: Report) => PartReading;
 
 /** A reader of records for the columns of one list. Every cell is read, also after a fault, so that all faults are told at once. */
 export function partReader(columns: readonly ListColumn[], options: ListOptions, decimal: DecimalRule): PartReader {
-  const words = columns.map((column) => ({ column, read: cellReader(column.reading, options, decimal) }));
+  const words = columns.flatMap((column) => {
+    const read = cellReader(column.reading, options, decimal);
+    return read === null ? [] : [{ column, read }];
+  });
   const figures = figureReaders(columns, decimal);
+  const isInOrder = standInOrder(columns);
   // Rows of a list are much alike: a row whose figures stand where those of the row before stood shares their columns.
   let sources: readonly ListColumn[] = [];
   return (written, report) => {
     const record = withoutOwnMissing(written, options.missing);
     const draft = emptyDraft(options.tier);
     for (const { column, read } of words) {
-      read?.(draft, record.cells[column.number - 1] ?? '', (fault, severity) => report(column, fault, severity));
+      read(draft, record.cells[column.number - 1] ?? '', (fault, severity) => report(column, fault, severity));
     }
-    const found = new DraftFigures();
+    const found = new DraftFigures(isInOrder);
     figures(record, { found, channels: draft.channels, description: draft.description, report });
     addRails(found);
-    const placed = found.all().sort((a, b) => compareFigures(a.figure, b.figure));
-    draft.figures = placed.map(({ figure }) => figure);
-    sources = alike(placed, sources) ? sources : placed.map(({ column }) => column);
+    const placed = isInOrder ? found : sorted(found);
+    draft.figures = placed.figures;
+    sources = alike(placed.columns, sources) ? sources : placed.columns;
     return { part: draft, sources, railOutputs: found.rails?.words.outputs === true && !isSwingKnown(found) ? found.rails.column : null };
   };
 }
 
-const alike = (placed: readonly { readonly column: ListColumn }[], sources: readonly ListColumn[]): boolean =>
-  placed.length === sources.length && placed.every(({ column }, index) => column === sources[index]);
+const alike = (columns: readonly ListColumn[], sources: readonly ListColumn[]): boolean =>
+  columns.length === sources.length && columns.every((column, index) => column === sources[index]);
+
+/** In canonical order. */
+function sorted({ figures, columns }: DraftFigures): Pick<DraftFigures, 'figures' | 'columns'> {
+  const placed = figures.flatMap((figure, at): PlacedFigure[] => {
+    const column = columns[at];
+    return column === undefined ? [] : [{ figure, column }];
+  });
+  placed.sort((a, b) => compareFigures(a.figure, b.figure));
+  return { figures: placed.map(({ figure }) => figure), columns: placed.map(({ column }) => column) };
+}
 
 /** A list's own words for "not known" are empty cells to whoever reads them; the raw record keeps them. */
 function withoutOwnMissing(record: ListRecord, own: readonly string[] | undefined): ListRecord {

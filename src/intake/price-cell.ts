@@ -1,17 +1,17 @@
 import type { Price } from '../parts/part.js';
 import type { DecimalRule } from './decimal-mark.js';
 import type { CellFault } from './cell-fault.js';
-import { contextOf, readNumber } from './figure-cell.js';
+import { contextOf, numberReader } from './figure-cell.js';
 import type { ColumnReading } from './header.js';
 import type { CellReader } from './part-draft.js';
 import { isMissing } from './text-cell.js';
 
 /** A reader for one price column: an amount in the currency of the header, or of the cell. */
 export function priceCell(column: Extract<ColumnReading, { kind: 'price' }>, decimal: DecimalRule): CellReader {
-  const context = contextOf(column.currency, decimal);
+  const read = numberReader('price', contextOf(column.currency, decimal));
   return (draft, cell, report) => {
     if (isMissing(cell)) return;
-    const number = readNumber(cell, 'price', context);
+    const number = read(cell);
     if (!number.ok) return report(number.fault, 'error');
     const price: Price = { amount: number.value, currency: number.quantity.unit, quantity: column.quantity };
     if (price.amount < 0) return report({ code: 'I504', reason: 'a price cannot be below zero' }, 'error');

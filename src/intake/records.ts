@@ -53,6 +53,7 @@ class RecordReader {
   readonly #pooled = cellPool();
   #at = 0;
   #lineStart = 0;
+  #width = 0;
 
   constructor(text: string, delimiter: number) {
     this.#text = text;
@@ -64,15 +65,23 @@ class RecordReader {
   }
 
   record(): { readonly cells: readonly string[]; readonly fault: OpenFault | null } {
-    const cells: string[] = [];
+    // Rows of a table are as wide as the row before: room for all cells at once.
+    const cells = new Array<string>(this.#width);
+    let count = 0;
     let fault: OpenFault | null = null;
-    for (;;) {
-      const found = this.#text.charCodeAt(this.#at) === QUOTE ? this.#quoted(cells.length + 1) : this.#plain(cells.length + 1);
-      cells.push(this.#pooled(found.text));
-      fault ??= found.fault;
+    for (; ; count += 1) {
+      const next = this.#text.charCodeAt(this.#at);
+      // An empty cell, as most of a wide table are.
+      if (next === this.#delimiter) cells[count] = '';
+      else {
+        const found = next === QUOTE ? this.#quoted(count + 1) : this.#plain(count + 1);
+        cells[count] = this.#pooled(found.text);
+        fault ??= found.fault;
+      }
       if (this.#text.charCodeAt(this.#at) !== this.#delimiter || this.isAtEnd()) break;
       this.#at += 1;
     }
+    this.#width = cells.length = count + 1;
     this.lineOfEnd = this.line;
     this.#lineEnd();
     return { cells, fault };
@@ -118,10 +127,13 @@ class RecordReader {
   }
 
   #toCellEnd(): void {
-    for (; this.#at < this.#text.length; this.#at += 1) {
-      const unit = this.#text.charCodeAt(this.#at);
-      if (unit === this.#delimiter || unit === LF || unit === CR) return;
+    const [text, delimiter] = [this.#text, this.#delimiter];
+    let at = this.#at;
+    for (; at < text.length; at += 1) {
+      const unit = text.charCodeAt(at);
+      if (unit === delimiter || unit === LF || unit === CR) break;
     }
+    this.#at = at;
   }
 
   /** Moves on inside quotes, counting the lines that end there. */

@@ -10,6 +10,10 @@ export function readText(cell: string): string | null {
 }
 
 export function isMissing(cell: string): boolean {
+  // Of a long list most cells are empty, and most others a number.
+  if (cell === '') return true;
+  const first = cell.charCodeAt(0);
+  if (first >= 0x30 && first <= 0x39) return false;
   const text = cell.trim();
   return text.length <= 4 && MISSING.has(text.toLowerCase());
 }

@@ -12,14 +12,20 @@ export function compareFigures(a: Placed, b: Placed): number {
 
 /** Lighter loads first (currents before resistances), then rising supply, temperature and gain; what is not stated comes first. */
 export function compareConditions(a: Condition, b: Condition): number {
-  const left = keys(a);
-  const right = keys(b);
-  for (const [index, key] of left.entries()) {
-    const other = right[index] ?? 0;
-    if (key !== other) return key < other ? -1 : 1;
-  }
-  return 0;
+  // Parts of one list share the conditions of its columns, and most figures have none.
+  if (a === b) return 0;
+  return (
+    order(loadRank(a), loadRank(b)) ||
+    order(amperes(a), amperes(b)) ||
+    order(-ohms(a), -ohms(b)) ||
+    order(end(a), end(b)) ||
+    order(a.supply ?? NOT_STATED, b.supply ?? NOT_STATED) ||
+    order(temperature(a), temperature(b)) ||
+    order(a.gain ?? NOT_STATED, b.gain ?? NOT_STATED)
+  );
 }
+
+const order = (a: number, b: number): number => (a === b ? 0 : a < b ? -1 : 1);
 
 const KIND_RANK: Readonly<Record<LimitKind, number>> = { min: 0, typ: 1, max: 2 };
 const RANKS: ReadonlyMap<string, number> = new Map(Object.keys(PARAMETERS).map((parameter, index) => [parameter, index]));
@@ -30,14 +36,8 @@ function rank(parameter: string): number {
   return RANKS.get(parameter) ?? RANKS.size;
 }
 
-function keys({ load, supply, temperature, gain }: Condition): number[] {
-  return [
-    load === undefined ? 0 : load.kind === 'current' ? 1 : 2,
-    load?.kind === 'current' ? load.amperes : 0,
-    load?.kind === 'resistance' ? -load.ohms : 0,
-    load?.kind === 'resistance' ? ENDS.indexOf(load.to) : 0,
-    supply ?? NOT_STATED,
-    temperature === 'over' ? Number.POSITIVE_INFINITY : (temperature ?? NOT_STATED),
-    gain ?? NOT_STATED,
-  ];
-}
+const loadRank = ({ load }: Condition): number => (load === undefined ? 0 : load.kind === 'current' ? 1 : 2);
+const amperes = ({ load }: Condition): number => (load?.kind === 'current' ? load.amperes : 0);
+const ohms = ({ load }: Condition): number => (load?.kind === 'resistance' ? load.ohms : 0);
+const end = ({ load }: Condition): number => (load?.kind === 'resistance' ? ENDS.indexOf(load.to) : 0);
+const temperature = (condition: Condition): number => (condition.temperature === 'over' ? Number.POSITIVE_INFINITY : (condition.temperature ?? NOT_STATED));

@@ -12,6 +12,8 @@ export interface Normalised {
  * folded (a lower-cased Ω is ω). What is not known is refused by code point and position.
  */
 export function normaliseCharacters(typed: string): Normalised {
+  // Printable ASCII stays as it is, character by character; most cells of a list are that.
+  if (PLAIN.test(typed)) return { text: typed, origin: Array.from({ length: typed.length + 1 }, (_, index) => index) };
   let text = '';
   const origin: number[] = [];
   for (let index = 0; index < typed.length; ) {
@@ -23,6 +25,8 @@ export function normaliseCharacters(typed: string): Normalised {
   }
   return { text, origin: [...origin, typed.length] };
 }
+
+const PLAIN = /^[ -~]*$/u;
 
 const MAPPED = new Map<string, string>([
   ['\u03bc', '\u00b5'], // Greek mu to micro sign
