@@ -50,7 +50,8 @@ describe('how firmly one part stands before another', () => {
         const others = SHARES.filter((each) => each !== share).reduce((sum, each) => sum + (lead[each] ?? 0), 0);
         const exact = -others / (lead[share] ?? 0);
         const found = weights.find((turn) => turn.share === share);
-        if (decidedBy !== 'merit' || !(exact > 1e-9) || exact > 999) continue;
+        // Nothing is told beyond a thousandfold weight; near that edge rounding decides.
+        if (decidedBy !== 'merit' || !(exact > 1e-9) || exact > 990) continue;
         expect(found?.at, share).toBeCloseTo(exact, 6);
         expect(decisionBetween('merit', pair, { ...EQUAL, [share]: (found?.at ?? 1) * (exact > 1 ? 1.0001 : 0.9999) }).sign).toBe(1);
       }
