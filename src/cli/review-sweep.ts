@@ -1,4 +1,4 @@
-import { movableInputs, readSwept, sweepOver, sweptOverride, sweptValues, type Asking, type MovableInput, type Part, type PartSource, type Report, type ReviewedStage, type Stage, type StageSpec } from '../index.js';
+import { movableInputs, readSwept, sweepOver, sweptOverride, sweptValues, type Asking, type MovableInput, type PartSource, type Report, type ReviewedStage, type Stage, type StageSpec } from '../index.js';
 import { rerunOf, type GivenStage } from './rerun.js';
 
 /** What the figures of a reviewed stage are computed from. */
@@ -33,8 +33,9 @@ export function reviewSweep(reviewed: Reviewed): ReviewedStage['sweep'] {
   if (!field.ok) return null;
   const rerun = rerunOf(reviewed.given);
   const stageAt = (at: number): Stage | string => rerun([sweptOverride(field.field, at)]) ?? 'no stage';
-  const { parts, out } = stillOpen(reviewed, path);
-  const { points, turns } = sweepOver({ ...reviewed.source, parts }, { values: sweptValues({ from, to, steps: STEPS, scale: 'log' }), stageAt, asking: reviewed.asking, turnsOf: 'first' });
+  // Views know from the shortlist what each check found; part by part those that are out anyway are left out.
+  const { source, out } = reviewed.source.screening === undefined ? stillOpen(reviewed, path) : { source: reviewed.source, out: 0 };
+  const { points, turns } = sweepOver(source, { values: sweptValues({ from, to, steps: STEPS, scale: 'log' }), stageAt, asking: reviewed.asking, turnsOf: 'first' });
   // A share is read in percent.
   const [shown, scale] = unit === '%' ? ['%', 100] : [field.field.unit, 1];
   return {
@@ -50,13 +51,13 @@ export function reviewSweep(reviewed: Reviewed): ReviewedStage['sweep'] {
  * The parts that the budget decides about, with how many are out whatever it is: those that fail another check, which the budget does
  * not reach. The generic sets of their classes stay, since figures are borrowed from them.
  */
-function stillOpen({ source, report }: Reviewed, path: BudgetPath): { readonly parts: readonly Part[]; readonly out: number } {
+function stillOpen({ source, report }: Reviewed, path: BudgetPath): { readonly source: PartSource; readonly out: number } {
   const check = BUDGETS[path];
-  if (check === null) return { parts: source.parts, out: 0 };
+  if (check === null) return { source, out: 0 };
   const isOut = new Set(report.rejected.filter(({ verdicts }) => verdicts.some((verdict) => verdict.outcome === 'fail' && verdict.check !== check)).map(({ part }) => part.id));
   const classes = new Set(source.parts.flatMap((part) => (isOut.has(part.id) || part.class === null ? [] : [part.class])));
   const parts = source.parts.filter((part) => !isOut.has(part.id) || (part.tier === 'generic' && part.class !== null && classes.has(part.class)));
-  return { parts, out: source.parts.length - parts.length };
+  return { source: { ...source, parts }, out: source.parts.length - parts.length };
 }
 
 function budgetOf(spec: StageSpec): Budget | null {

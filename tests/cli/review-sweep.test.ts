@@ -7,6 +7,7 @@ import { rerunOf } from '../../src/cli/rerun.js';
 import { buildStage, readStage, readSwept, shortlist, sweepOver, sweptOverride, sweptValues, type PartSource, type Stage, type StageSpec } from '../../src/index.js';
 import { ROOT } from '../support/built.js';
 import { PAGE_PARTS } from '../support/page.js';
+import { viewSource } from '../support/two-paths.js';
 import { sampleSource, STAGE_TEXT } from '../support/sample-report.js';
 
 const asking = { strict: false, order: 'merit', assumed: [] } as const;
@@ -44,6 +45,11 @@ describe.each(Object.entries(LIMITS))('%s', { timeout: 120_000 }, (path, text) =
     if (swept === null) throw new Error('nothing is swept');
     found = swept;
   }, 120_000);
+
+  it('gives the same through views', () => {
+    const views = viewSource(MANY);
+    expect(reviewSweep({ spec, stage, given: { text, overrides: [] }, source: views, asking, chosen: null, report: shortlist(stage, views, asking) })).toEqual(found);
+  });
 
   it('gives the counts, first choices and turns of the whole list', () => {
     const scale = path === 'limits.gainError' ? 100 : 1;
