@@ -68,7 +68,7 @@ describe('what would let it in', () => {
           told += 1;
         }
       }),
-      { numRuns: 25 },
+      { numRuns: 60 },
     );
     expect(told).toBeGreaterThan(5);
   }, 300_000);
@@ -97,7 +97,7 @@ describe('what would let it in', () => {
           told += 1;
         }
       }),
-      { numRuns: 25 },
+      { numRuns: 60 },
     );
     expect(told).toBeGreaterThan(2);
   }, 300_000);
