@@ -55,7 +55,6 @@ describe('start-up', () => {
   });
 
   it('of a query loads no package but these: no migrator, no reader of tables, no schemas, no prompts, no drawing', () => {
-    // string-width is in the bundle as a function that loads it late (bundle.js).
     expect(packagesOf(query)).toEqual(['better-sqlite3', 'commander', 'fft.js', 'string-width', 'yaml']);
   });
 
