@@ -71,7 +71,7 @@ function reviewOf({ inputs, catalog, options, time }: Making): { review: Review;
     const report = shortlist(stage, source, asking);
     const { chosen, origin, note } = chosenFor({ file, inFile: spec.part ?? null, report, source, catalog, options });
     if (note !== null) notes.push(note);
-    return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen, report }) };
+    return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen }) };
   });
   const { output, symbols = 'iec', top = DEFAULT_TOP, all = false } = options;
   const command = reportCommand({ files: inputs.flatMap(({ file }) => (file === null ? [] : [file])), options, time });

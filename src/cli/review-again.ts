@@ -40,7 +40,7 @@ function stageAgain(recorded: RecordedStage, catalog: Catalog): ReviewedStage | 
     const report = shortlist(stage, source, asking);
     const { chosen, origin } = chosenFor({ file: null, inFile: null, report, source, catalog, options });
     const told = chosen === null || recorded.chosen === null || chosen.by !== 'named' ? chosen : { ...chosen, by: recorded.chosen.by };
-    return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen: told, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen, report }) };
+    return { file, text, sha256: text === null ? null : sha256Of(text), changes, chosen: told, report: { ...report, origin }, ...reviewFigures({ spec, stage, given: { text, overrides: changes }, source, asking, chosen }) };
   } catch (error) {
     if (!(error instanceof RequestError)) throw error;
     return { file, message: error.message };

@@ -1,4 +1,4 @@
-import { E24, E96, nearestE24 } from '../quantities/e-series.js';
+import { E24, E96, nearestE24, nearestIn, seriesAround } from '../quantities/e-series.js';
 import { formatPercent } from '../quantities/format.js';
 
 /** Ω: the resistors that set a gain, their tolerance as a fraction, and what stands in series with the input resistor. */
@@ -25,12 +25,7 @@ const MOST_SHIFT = 0.01;
 /** Less is rounding of binary fractions. */
 const NONE = 1e-9;
 
-const decades = (series: readonly number[], around: number): number[] =>
-  [-1, 0, 1].flatMap((more) => series.map((mantissa) => Number(`${mantissa}e${Math.floor(Math.log10(around)) + more}`)));
-
-const valuesFor = (tolerance: number, around: number): number[] => [...new Set([...decades(E24, around), ...(tolerance <= FINE ? decades(E96, around) : [])])];
-
-const nearest = (values: readonly number[], to: number): number => values.reduce((best, one) => (Math.abs(Math.log(one / to)) < Math.abs(Math.log(best / to)) ? one : best));
+const seriesFor = (tolerance: number): readonly number[] => (tolerance <= FINE ? [...new Set([...E24, ...E96])] : E24);
 
 /**
  * Preferred values about `ratio` times the present feedback resistor that keep the gain, what stands in series with the input resistor
@@ -44,11 +39,12 @@ export function pairAt(of: GainResistors, ratio: number, { exactly }: { readonly
     const feedback = nearestE24(aim);
     return { feedback, input: feedback / gain - of.series, gainShift: 0 };
   }
-  const close = valuesFor(of.tolerance, aim).filter((value) => value <= aim * WINDOW && value >= aim / WINDOW);
+  const series = seriesFor(of.tolerance);
+  const close = seriesAround(series, aim).filter((value) => value <= aim * WINDOW && value >= aim / WINDOW);
   const pairs = close.flatMap((feedback) => {
     const wanted = feedback / gain - of.series;
     if (wanted <= 0) return [];
-    const input = nearest(valuesFor(of.tolerance, wanted), wanted);
+    const input = nearestIn(series, wanted);
     return [{ feedback, input, gainShift: feedback / (input + of.series) / gain - 1 }];
   });
   const far = ({ feedback }: ResistorPair): number => Math.abs(Math.log(feedback / aim));

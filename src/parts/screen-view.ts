@@ -21,6 +21,12 @@ export interface ScreenView {
   part(position: number): Part;
 }
 
+/** The views of parts that are in memory, in any order: approved before generic, each by id. */
+export function viewsOf(parts: readonly Part[]): ScreenView[] {
+  const byId = [...parts].sort((a, b) => (a.id < b.id ? -1 : Number(a.id > b.id)));
+  return (['approved', 'generic'] as const).map((tier) => viewOf(tier, byId.filter((part) => part.tier === tier)));
+}
+
 /** A view of parts that are in memory; they must be of one tier and ordered by id. */
 export function viewOf(tier: Tier, parts: readonly Part[]): ScreenView {
   const coded = new Map<Trait, Coded>();

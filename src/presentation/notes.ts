@@ -4,6 +4,7 @@ import type { JudgedPart } from '../screening/index.js';
 import { confirmationText } from './confirm-text.js';
 import { cautionsOf } from './json.js';
 import { paragraph } from './layout.js';
+import { likeCautions } from './like-cautions.js';
 import { safeLine } from './safe-text.js';
 import { glued } from './spelling.js';
 import type { Style } from './style.js';
@@ -23,34 +24,6 @@ export function noteLines(report: Report, style: Style): string[] {
 function cautionNotes(shown: readonly JudgedPart[], all: boolean): string[] {
   const sentencesOf = (one: JudgedPart): string[] => [...cautionsOf({ ...one, part: { ...one.part, tier: 'approved' } }), ...checkCautions(one)];
   return all ? grouped(shown, sentencesOf) : likeCautions(shown, sentencesOf);
-}
-
-/** So many ids are named beside the first. */
-const NAMED = 2;
-
-/** Cautions that differ in their numbers alone are one line: that of the part placed first, then who else has it. `explain` tells each in full. */
-function likeCautions(shown: readonly JudgedPart[], sentencesOf: (one: JudgedPart) => readonly string[]): string[] {
-  const alike = new Map<string, { readonly sentence: string; readonly first: string; readonly others: Set<string>; same: boolean }>();
-  for (const one of shown) {
-    const id = safeLine(one.part.id);
-    for (const sentence of sentencesOf(one)) {
-      const kind = sentence.replace(/[-−]?\d[\d.,]*\s*(?:[fpnµmkMG](?=[VAΩFHs]))?/gu, '#').replaceAll(/\bsections?\b/gu, 'sections');
-      const found = alike.get(kind);
-      if (found === undefined) alike.set(kind, { sentence, first: id, others: new Set(), same: true });
-      else {
-        if (id !== found.first) found.others.add(id);
-        found.same &&= found.sentence === sentence;
-      }
-    }
-  }
-  return [...alike.values()].map(({ sentence, first, others, same }) => {
-    const names = [...others];
-    const rest = names.length - NAMED;
-    const named = [...names.slice(0, NAMED), ...(rest > 0 ? [`${rest} more ${rest === 1 ? 'part' : 'parts'}`] : [])];
-    const who = named.length < 2 ? named.join('') : `${named.slice(0, -1).join(', ')} and ${named.at(-1) ?? ''}`;
-    const also = named.length === 0 ? '' : same ? `; the same of ${who}` : `; likewise, with their own numbers, ${who}`;
-    return `${first}: ${glued(safeLine(sentence))}${also}`;
-  });
 }
 
 function checkCautions({ verdicts }: JudgedPart): string[] {

@@ -30,10 +30,15 @@ export function nearestE24(value: number): number {
   return nearestIn(E24, value);
 }
 
-function nearestIn(series: readonly number[], value: number): number {
-  if (!(value > 0) || !Number.isFinite(value)) throw new RangeError(`preferred values are positive; ${value} has none`);
+/** The values of one decade of a series (`E24`, `E96`) in the decade of a value and those beside it, in the unit of the value. */
+export function seriesAround(series: readonly number[], value: number): number[] {
   const decade = Math.floor(Math.log10(value));
+  return [decade - 1, decade, decade + 1].flatMap((power) => series.map((mantissa) => Number(`${mantissa}e${power}`)));
+}
+
+/** The value of a series nearest in ratio, in the unit of the argument. Throws RangeError unless positive and finite. */
+export function nearestIn(series: readonly number[], value: number): number {
+  if (!(value > 0) || !Number.isFinite(value)) throw new RangeError(`preferred values are positive; ${value} has none`);
   const distance = (candidate: number): number => Math.abs(Math.log(candidate / value));
-  const candidates = [decade - 1, decade, decade + 1].flatMap((power) => series.map((mantissa) => Number(`${mantissa}e${power}`)));
-  return candidates.reduce((best, candidate) => (distance(candidate) < distance(best) ? candidate : best));
+  return seriesAround(series, value).reduce((best, candidate) => (distance(candidate) < distance(best) ? candidate : best));
 }

@@ -1,5 +1,6 @@
-import type { PartSource, Screening } from '../parts/part.js';
-import { type Judging, judgePart, judgingOf, type Marked, outlining, type Outlined, screen, type Screened, screenViews } from '../screening/index.js';
+import type { PartSource } from '../parts/part.js';
+import { type ScreenView, viewsOf } from '../parts/screen-view.js';
+import { type Judging, judgingOf, type Marked, type OutcomeCounts, screen, type Screened, screenViews } from '../screening/index.js';
 import { type Order, rank, type RankedPart } from './rank.js';
 import { rankSurveyed, surveyedFirst, surveyedIds } from './rank-survey.js';
 
@@ -30,28 +31,27 @@ export function screenAndRank({ demands, circuit }: Marked, source: PartSource, 
 /** What became of the parts, in numbers, and those that fit in order. */
 export interface OutlinedAndRanked {
   readonly run: Judging;
-  readonly counts: Outlined['counts'];
+  readonly counts: OutcomeCounts;
   readonly fit: readonly RankedPart[];
 }
 
 /** Counts and order of `screenAndRank`; a part that fails a cheap check is not asked the dear ones. */
 export function outlineAndRank({ demands, circuit }: Marked, source: PartSource, { strict, order }: RankRequest): OutlinedAndRanked {
   const run = judgingOf(demands, source, strict);
-  if (source.screening === undefined) {
-    const { counts, fit } = outlining(source.parts, strict)({ demands, circuit });
-    return { run, counts, fit: rank(fit.map(({ part }) => judgePart(run, part)), order) };
-  }
-  const screened = screenViews(run, source.screening.views, { circuit, outcomesOnly: true });
-  return { run, counts: countsIn(screened, source.screening), fit: rankSurveyed(screened, order) };
+  const views = viewsIn(source);
+  const screened = screenViews(run, views, { circuit, outcomesOnly: true });
+  return { run, counts: countsIn(screened, views), fit: rankSurveyed(screened, order) };
 }
 
-function countsIn({ fit, undecided, rejected }: Screened, { views }: Screening): Outlined['counts'] {
+const viewsIn = ({ screening, parts }: PartSource): readonly ScreenView[] => screening?.views ?? viewsOf(parts);
+
+function countsIn({ fit, undecided, rejected }: Screened, views: readonly ScreenView[]): OutcomeCounts {
   return { parts: views.reduce((sum, { size }) => sum + size, 0), fit: fit.length, undecided: undecided.length, rejected: rejected.length };
 }
 
 /** Counts, and the ids of what fits in order, each variant a place of its own. */
 export interface OutlinedIds {
-  readonly counts: Outlined['counts'];
+  readonly counts: OutcomeCounts;
   /** Null when nothing fits. */
   readonly first: string | null;
   /** Ordered when they are first asked for. */
@@ -60,18 +60,10 @@ export interface OutlinedIds {
 
 /** The short answer to many stages in a row: what was found out for one serves the next where it asks the same. */
 export function outlinesIn(source: PartSource, { strict, order }: RankRequest): (of: Marked) => OutlinedIds {
-  const { screening } = source;
-  if (screening !== undefined) {
-    return ({ demands, circuit }) => {
-      const screened = screenViews(judgingOf(demands, source, strict), screening.views, { circuit, outcomesOnly: true });
-      let ids: readonly string[] | null = null;
-      return { counts: countsIn(screened, screening), first: surveyedFirst(screened, order), get ids() { return (ids ??= surveyedIds(screened, order)); } };
-    };
-  }
-  const outlined = outlining(source.parts, strict);
-  return (marked) => {
-    const { counts, fit } = outlined(marked);
-    const ids = rank(fit, order).flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
-    return { counts, first: ids[0] ?? null, ids };
+  const views = viewsIn(source);
+  return ({ demands, circuit }) => {
+    const screened = screenViews(judgingOf(demands, source, strict), views, { circuit, outcomesOnly: true });
+    let ids: readonly string[] | null = null;
+    return { counts: countsIn(screened, views), first: surveyedFirst(screened, order), get ids() { return (ids ??= surveyedIds(screened, order)); } };
   };
 }

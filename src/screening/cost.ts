@@ -3,9 +3,6 @@ const DEAR: ReadonlySet<string> = new Set(['phase-margin', 'noise', 'distortion'
 /** They go through corners or add up terms. */
 const LONG: ReadonlySet<string> = new Set(['output-low', 'output-high', 'output-current', 'dc-error', 'slew-rate', 'stable-gain', 'junction-temperature']);
 
-/** Whether a judgement of the check takes long enough to be worth remembering. */
-export const isDear = (check: string): boolean => DEAR.has(check);
-
 /** How long one judgement of a check takes, as a rank: the cheap ones are asked first where one failure settles the part. */
 export function costOf(check: string | undefined): number {
   if (check === undefined) return 0;

@@ -5,6 +5,7 @@ import { readingsOf } from '../parts/readings.js';
 import { decide } from '../verdicts/decide.js';
 import type { Finding } from '../verdicts/finding.js';
 import type { Outcome } from '../verdicts/verdict.js';
+import { costOf } from './cost.js';
 import { rulesFor, type Judging } from './judge.js';
 
 /** One check of one part as both readings find it. */
@@ -21,13 +22,9 @@ export interface Probe {
   /** Ids of the checks that do not pass, in their order; a limit without a check of its own never does. */
   notPassing(): string[];
   fits(): boolean;
-  /** True when a check fails that compares one figure or word: the part does not fit, and that costs next to nothing to know. */
-  isPlainlyOut(): boolean;
 }
 
-/** Checks that integrate or search; the others compare one figure or word. */
-const DEAR: readonly string[] = ['gain-bandwidth', 'settling', 'distortion', 'noise', 'phase-margin'];
-const CHEAP: readonly string[] = CHECKS.map(({ id }) => id).filter((id) => !DEAR.includes(id));
+const CHEAP_FIRST: readonly string[] = CHECKS.map(({ id }) => id).sort((a, b) => costOf(a) - costOf(b));
 
 /** Judges as `judgePart` does, check by check. */
 export function probePart(run: Judging, part: Part): Probe {
@@ -50,7 +47,6 @@ export function probePart(run: Judging, part: Part): Probe {
   return {
     check,
     notPassing: () => CHECK_IDS.filter((id) => unbuilt.includes(id) || !passes(id)),
-    fits: () => unbuilt.length === 0 && [...CHEAP, ...DEAR].every(passes),
-    isPlainlyOut: () => CHEAP.some((id) => check(id)?.outcome === 'fail'),
+    fits: () => unbuilt.length === 0 && CHEAP_FIRST.every(passes),
   };
 }

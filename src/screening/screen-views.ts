@@ -1,3 +1,4 @@
+import type { Demands } from '../demands/index.js';
 import type { ScreenView } from '../parts/screen-view.js';
 import { judgePart, type Judging } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
@@ -5,6 +6,20 @@ import { lazyList } from './lazy-list.js';
 import { nearestOf } from './nearest.js';
 import { byFrequency, type Screened } from './screen.js';
 import { OUTCOME, survey, type Survey, type SurveyedFit, type SurveyRequest } from './survey.js';
+
+/** Demands with the mark of the circuit they belong to (`circuitMark`). */
+export interface Marked {
+  readonly demands: Demands;
+  readonly circuit: string;
+}
+
+/** What became of how many parts. */
+export interface OutcomeCounts {
+  readonly parts: number;
+  readonly fit: number;
+  readonly undecided: number;
+  readonly rejected: number;
+}
 
 /** A catalog judged through its views: complete counts, and lists whose parts are read and judged in words when they are looked at. */
 export interface SurveyedCatalog extends Screened {

@@ -1,9 +1,9 @@
 // The page in the browser people use. A missing browser fails here, with the command that installs one.
 import { execFileSync } from 'node:child_process';
 import axe from 'axe-core';
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { launchBrowser, PageFolder } from '../support/browser.js';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { withPages } from '../support/browser.js';
 import { sampleReport } from '../support/sample-report.js';
 import { HOSTILE, hostileReport, pageOf, sampleReview, sampleReviewed } from '../support/sample-review.js';
 
@@ -17,23 +17,13 @@ const PAGES: Readonly<Record<string, string>> = {
 };
 const NAMES = Object.keys(PAGES);
 
-let browser: Browser;
-let folder: PageFolder;
-beforeAll(async () => {
-  browser = await launchBrowser();
-  folder = new PageFolder(browser);
-  for (const [name, text] of Object.entries(PAGES)) folder.write(name, text);
-}, PATIENCE);
-afterAll(async () => {
-  folder.remove();
-  await browser.close();
-});
+const opened = withPages(PAGES, PATIENCE);
 
 const overflow = (page: Page): Promise<number> => page.evaluate('document.documentElement.scrollWidth - window.innerWidth');
 
 describe.each(NAMES)('%s', (name) => {
   it.each([[320, 'light'], [320, 'dark'], [768, 'light'], [1600, 'dark']] as const)('at %i px, %s: no message, no request, nothing to scroll sideways', { timeout: PATIENCE }, async (width, scheme) => {
-    const { page, said, asked } = await folder.show(name, { width, scheme });
+    const { page, said, asked } = await opened().folder.show(name, { width, scheme });
     expect(await overflow(page)).toBeLessThanOrEqual(0);
     await page.locator('summary').first().click();
     expect(await overflow(page)).toBeLessThanOrEqual(0);
@@ -43,7 +33,7 @@ describe.each(NAMES)('%s', (name) => {
   });
 
   it.each(['light', 'dark'] as const)('%s: axe finds nothing to blame', { timeout: PATIENCE }, async (scheme) => {
-    const { page } = await folder.show(name, { width: 1024, scheme });
+    const { page } = await opened().folder.show(name, { width: 1024, scheme });
     await page.evaluate("document.querySelectorAll('details').forEach((one) => { one.open = true; })");
     await page.evaluate(axe.source);
     const { violations, passes } = await page.evaluate<axe.AxeResults>('axe.run({ runOnly: ["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa", "best-practice"] })');
@@ -55,7 +45,7 @@ describe.each(NAMES)('%s', (name) => {
 
 describe('hostile words', () => {
   it('do nothing: no script runs, no element comes of them, the line direction of others stays', { timeout: PATIENCE }, async () => {
-    const { page } = await folder.show('hostile.html', { width: 1024 });
+    const { page } = await opened().folder.show('hostile.html', { width: 1024 });
     expect(await page.title()).toMatch(/^Design review: <\/title><script>/u);
     expect(await page.evaluate('[document.images.length, document.querySelectorAll("svg:not(.figure)").length, document.scripts.length]')).toEqual([0, 0, 2]);
     expect(await page.evaluate('[...document.querySelectorAll("*")].filter((one) => one.getAttributeNames().some((name) => name.startsWith("on"))).length')).toBe(0);
@@ -67,7 +57,7 @@ describe('hostile words', () => {
 
 describe('by keyboard alone', () => {
   it('the skip link comes first, focus is seen, details open', { timeout: PATIENCE }, async () => {
-    const { page } = await folder.show('one.html', { width: 1024 });
+    const { page } = await opened().folder.show('one.html', { width: 1024 });
     await page.keyboard.press('Tab');
     expect(await page.evaluate('document.activeElement.textContent')).toBe('Skip to the answer');
     expect(await page.evaluate('getComputedStyle(document.activeElement).outlineStyle')).toBe('solid');
@@ -80,7 +70,7 @@ describe('by keyboard alone', () => {
   });
 
   it('a table is sorted by its heads, up and down, and says so', { timeout: PATIENCE }, async () => {
-    const { page } = await folder.show('one.html', { width: 1024 });
+    const { page } = await opened().folder.show('one.html', { width: 1024 });
     const first = (): Promise<string> => page.locator('#s1-fit tbody tr').first().getAttribute('id').then(String);
     const price = page.locator('#s1-fit thead button', { hasText: 'Price' });
     await price.focus();
@@ -95,7 +85,7 @@ describe('by keyboard alone', () => {
   });
 
   it('everything that can be reached is large enough to hit', { timeout: PATIENCE }, async () => {
-    const { page } = await folder.show('one.html', { width: 1024 });
+    const { page } = await opened().folder.show('one.html', { width: 1024 });
     const small = await page.evaluate(`[...document.querySelectorAll('button, summary, nav a, .csv a')].filter((one) => { const box = one.getBoundingClientRect(); return box.width > 0 && (box.width < 24 || box.height < 24); }).map((one) => one.outerHTML)`);
     expect(small).toEqual([]);
     await page.close();
@@ -104,9 +94,9 @@ describe('by keyboard alone', () => {
 
 describe('without its script', () => {
   it('the page reads the same, only the heads are no buttons', { timeout: PATIENCE }, async () => {
-    const context = await browser.newContext({ javaScriptEnabled: false });
+    const context = await opened().browser.newContext({ javaScriptEnabled: false });
     const page = await context.newPage();
-    await page.goto(`file://${folder.path('one.html')}`);
+    await page.goto(`file://${opened().folder.path('one.html')}`);
     expect(await page.locator('thead button').count()).toBe(0);
     expect(await page.locator('#s1-answer .verdict').innerText()).toBe('TEAM-0012 ✓ fits');
     await context.close();
@@ -116,7 +106,7 @@ describe('without its script', () => {
 describe.each([['A4', 210], ['Letter', 215.9]] as const)('printed on %s', (format, millimetres) => {
   it('cuts no table', { timeout: PATIENCE }, async () => {
     // Paper less the margins of the style sheet, at 96 px to the inch.
-    const { page } = await folder.show('several.html', { width: Math.floor(((millimetres - 26) / 25.4) * 96) });
+    const { page } = await opened().folder.show('several.html', { width: Math.floor(((millimetres - 26) / 25.4) * 96) });
     await page.emulateMedia({ media: 'print' });
     await page.evaluate("dispatchEvent(new Event('beforeprint'))");
     const wide = await page.evaluate("[...document.querySelectorAll('table, pre')].filter((one) => one.getBoundingClientRect().right > document.documentElement.clientWidth + 1).map((one) => one.id)");
@@ -126,8 +116,8 @@ describe.each([['A4', 210], ['Letter', 215.9]] as const)('printed on %s', (forma
   });
 
   it('names file, hash and page in the margin, and repeats the heads of long tables', { timeout: PATIENCE }, async () => {
-    const { page } = await folder.show('one.html', { width: 1024 });
-    const file = folder.path(`${format}.pdf`);
+    const { page } = await opened().folder.show('one.html', { width: 1024 });
+    const file = opened().folder.path(`${format}.pdf`);
     await page.pdf({ path: file, format });
     const pages = execFileSync('pdftotext', ['-layout', file, '-'], { encoding: 'utf8' }).split('\f').filter((text) => text.trim() !== '');
     expect(pages.length).toBeGreaterThan(4);

@@ -1,8 +1,7 @@
 // The page on paper: what a browser prints on A4 and on Letter, read back from the PDF.
 import { execFileSync } from 'node:child_process';
-import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { launchBrowser, PageFolder } from '../support/browser.js';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { withPages } from '../support/browser.js';
 import { PAGE_PARTS, PREDICTION, SWEEP } from '../support/page.js';
 import { sampleReport } from '../support/sample-report.js';
 import { pageOf, sampleReview, sampleReviewed } from '../support/sample-review.js';
@@ -11,17 +10,7 @@ const PATIENCE = 180_000;
 const full = { ...sampleReviewed(sampleReport({ 'limits.outputNoise': '300 µVrms' }, PAGE_PARTS)), prediction: PREDICTION, sweep: SWEEP };
 const PAGE = pageOf(sampleReview({ stages: [full, sampleReviewed(sampleReport(), 'TEAM-0031')] }));
 
-let browser: Browser;
-let folder: PageFolder;
-beforeAll(async () => {
-  browser = await launchBrowser();
-  folder = new PageFolder(browser);
-  folder.write('review.html', PAGE);
-}, PATIENCE);
-afterAll(async () => {
-  folder.remove();
-  await browser.close();
-});
+const opened = withPages({ 'review.html': PAGE }, PATIENCE);
 
 interface Word {
   readonly text: string;
@@ -53,8 +42,8 @@ const POINTS_PER_MM = 72 / 25.4;
 describe.each([['A4', 595, 842], ['Letter', 612, 792]] as const)('printed on %s', (format, width, height) => {
   let sheets: Sheet[];
   beforeAll(async () => {
-    const { page } = await folder.show('review.html', { width: 1024 });
-    const file = folder.path(`${format}.pdf`);
+    const { page } = await opened().folder.show('review.html', { width: 1024 });
+    const file = opened().folder.path(`${format}.pdf`);
     await page.pdf({ path: file, format, preferCSSPageSize: false });
     await page.close();
     sheets = sheetsOf(file);

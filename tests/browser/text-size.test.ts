@@ -1,7 +1,7 @@
 // The page as readers set it: text at 200 %, their own spacing of lines, words and letters, narrow windows (WCAG 2.2: 1.4.4, 1.4.10, 1.4.12).
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { launchBrowser, PageFolder } from '../support/browser.js';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { withPages } from '../support/browser.js';
 import { PAGE_PARTS, PREDICTION, SWEEP } from '../support/page.js';
 import { sampleReport } from '../support/sample-report.js';
 import { HOSTILE, hostileReport, pageOf, sampleReview, sampleReviewed } from '../support/sample-review.js';
@@ -24,20 +24,10 @@ const SETTINGS = {
   'text spacing': '*{line-height:1.5 !important;letter-spacing:.12em !important;word-spacing:.16em !important}p{margin-bottom:2em !important}',
 } as const;
 
-let browser: Browser;
-let folder: PageFolder;
-beforeAll(async () => {
-  browser = await launchBrowser();
-  folder = new PageFolder(browser);
-  for (const [name, text] of Object.entries(PAGES)) folder.write(name, text);
-}, PATIENCE);
-afterAll(async () => {
-  folder.remove();
-  await browser.close();
-});
+const opened = withPages(PAGES, PATIENCE);
 
 async function shown(name: string, width: number, style: string): Promise<Page> {
-  const { page } = await folder.show(name, { width });
+  const { page } = await opened().folder.show(name, { width });
   await page.evaluate("document.querySelectorAll('details').forEach((one) => { one.open = true; })");
   if (style !== '') await page.addStyleTag({ content: style });
   return page;

@@ -1,23 +1,16 @@
 import stringWidth from 'string-width';
-import { beforeAll, describe, expect, it } from 'vitest';
-import { requireBuilt } from '../support/built.js';
-import { makeWorkplace, type Workplace } from '../support/railfit.js';
+import { describe, expect, it } from 'vitest';
+import { withWorkplace } from '../support/railfit.js';
 import { sentToTerminal, type Place } from '../support/terminal.js';
 
 const PROBE = 'soil-moisture-probe.yaml';
 const COMMANDS = { explain: ['explain', 'GX-BIP-GS', PROBE], shortlist: ['shortlist', PROBE] } as const;
 /** Several runs of the command on a busy machine, ms. */
 const LONG = 30_000;
-let place: Workplace;
 
-beforeAll(async () => {
-  requireBuilt();
-  place = makeWorkplace();
-  await place.run(['parts']);
-  return () => { place.remove(); };
-});
+const workplace = withWorkplace(['parts']);
 
-const seen = (words: readonly string[], columns: number, env: Place['env'] = {}) => sentToTerminal(words, { folder: place.folder, catalog: place.catalog, columns, env });
+const seen = (words: readonly string[], columns: number, env: Place['env'] = {}) => sentToTerminal(words, { folder: workplace().folder, catalog: workplace().catalog, columns, env });
 const swing = /^ {2}output {2}(?:PASS|FAIL|\? {3}) {2} *0 V [<|].+[|>] \d\S* V$/mu;
 
 describe.each(Object.entries(COMMANDS))('%s on a terminal', (_, words) => {
@@ -51,12 +44,12 @@ describe.each(Object.entries(COMMANDS))('%s on a terminal', (_, words) => {
   }, LONG);
 
   it('has none in a pipe, whatever the environment says', async () => {
-    const piped = await place.run(words, { env: { COLUMNS: '100', FORCE_COLOR: '1' } });
+    const piped = await workplace().run(words, { env: { COLUMNS: '100', FORCE_COLOR: '1' } });
     expect(piped.stdout).not.toMatch(/▬|^Rails/mu);
   }, LONG);
 
   it('writes the same JSON as into a pipe', async () => {
-    const json = await place.run([...words, '--json']);
+    const json = await workplace().run([...words, '--json']);
     expect(seen([...words, '--json'], 100).sent.replaceAll('\r\n', '\n')).toBe(json.stdout);
   }, LONG);
 });

@@ -1,21 +1,14 @@
 import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { beforeAll, describe, expect, it } from 'vitest';
-import { requireBuilt } from '../support/built.js';
-import { makeWorkplace, type Workplace } from '../support/railfit.js';
+import { describe, expect, it } from 'vitest';
+import { withWorkplace } from '../support/railfit.js';
 
 const PROBE = 'soil-moisture-probe.yaml';
-let place: Workplace;
 
-beforeAll(async () => {
-  requireBuilt();
-  place = makeWorkplace();
-  await place.run(['import', 'approved.csv']);
-  return () => { place.remove(); };
-});
+const workplace = withWorkplace(['import', 'approved.csv']);
 
 async function answerOf(...words: string[]): Promise<string> {
-  const ran = await place.run(words);
+  const ran = await workplace().run(words);
   expect(ran.stderr).toBe('');
   expect(ran.exit).toBe(0);
   return ran.stdout;
@@ -29,7 +22,7 @@ interface Told {
 }
 
 async function problemsOf(...words: string[]): Promise<Told[]> {
-  const ran = await place.run([...words, '--json']);
+  const ran = await workplace().run([...words, '--json']);
   expect(ran.exit).toBe(2);
   return (JSON.parse(ran.stdout) as { problems: Told[] }).problems;
 }
@@ -52,12 +45,12 @@ describe('options', () => {
   });
 
   it('end at --: what follows is an operand, whatever it looks like', async () => {
-    writeFileSync(join(place.folder, '--gain.yaml'), 'topology: follower\nsupply: 5 V\nsignal: {input: 1..4 V}\n');
+    writeFileSync(join(workplace().folder, '--gain.yaml'), 'topology: follower\nsupply: 5 V\nsignal: {input: 1..4 V}\n');
     expect(await answerOf('demands', '--', PROBE)).toBe(await answerOf('demands', PROBE));
     expect(await answerOf('demands', '--supply', '6 V', '--', '--gain.yaml')).toContain('6 V single');
-    expect((await place.run(['demands', '--', '--json'])).stderr).toContain('--json: no such file');
+    expect((await workplace().run(['demands', '--', '--json'])).stderr).toContain('--json: no such file');
     // Behind an unknown option, too.
-    const ran = await place.run(['demands', '--gian', '8', '--', PROBE]);
+    const ran = await workplace().run(['demands', '--gian', '8', '--', PROBE]);
     expect(ran.stderr).toMatch(/^error\[C101\].*\n.*\n\n1 problem, nothing was run\. \(exit 2\)\n$/u);
   });
 
@@ -85,7 +78,7 @@ describe('what is wrong with a command line', () => {
   });
 
   it('ends with how many there are and that nothing was run', async () => {
-    const ran = await place.run(['demands', PROBE, '--gian', '8', '--set', 'foo', '--supply', '5']);
+    const ran = await workplace().run(['demands', PROBE, '--gian', '8', '--set', 'foo', '--supply', '5']);
     expect(ran.stderr.trimEnd().split('\n').at(-1)).toBe('3 problems, nothing was run. (exit 2)');
     expect(ran.stdout).toBe('');
   });
@@ -108,7 +101,7 @@ describe('what is wrong with a command line', () => {
   });
 
   it('is never acted on by guessing', async () => {
-    const ran = await place.run(['part', 'HOUSE-O1']);
+    const ran = await workplace().run(['part', 'HOUSE-O1']);
     expect(ran).toMatchObject({ exit: 1, stdout: '' });
   });
 
@@ -119,25 +112,25 @@ describe('what is wrong with a command line', () => {
 
 describe('standard input', () => {
   it('is read for - and for nothing else', async () => {
-    const { stdout } = await place.run(['demands', PROBE]);
+    const { stdout } = await workplace().run(['demands', PROBE]);
     const text = 'topology: follower\nsupply: 5 V\nsignal: {input: 1..4 V}\n';
-    expect((await place.run(['demands', '-'], { input: text })).stdout).toContain('follower');
-    expect((await place.run(['demands', PROBE], { input: text })).stdout).toBe(stdout);
+    expect((await workplace().run(['demands', '-'], { input: text })).stdout).toContain('follower');
+    expect((await workplace().run(['demands', PROBE], { input: text })).stdout).toBe(stdout);
     // Never asked, never waited for: input that stays open does not hold a command up.
-    const child = place.start(['demands', PROBE]);
+    const child = workplace().start(['demands', PROBE]);
     expect(await new Promise((resolve) => child.on('close', resolve))).toBe(0);
   });
 
   it('is named in messages', async () => {
-    const ran = await place.run(['demands', '-'], { input: 'topology: follower\nsupply: 5\n' });
+    const ran = await workplace().run(['demands', '-'], { input: 'topology: follower\nsupply: 5\n' });
     expect(ran.stderr).toContain('--> standard input line 2');
-    const list = await place.run(['import', '-'], { input: 'id,status\nA,aproved\n' });
+    const list = await workplace().run(['import', '-'], { input: 'id,status\nA,aproved\n' });
     expect(list.stderr).toContain('--> standard input line 2, row 2');
     expect(list.stderr).toContain('standard input was not imported');
   });
 
   it('ends an import at once when it is empty', async () => {
-    expect((await place.run(['import', '-'], { input: '' })).exit).toBe(3);
-    expect((await place.run(['import'], { input: '' })).exit).toBe(2);
+    expect((await workplace().run(['import', '-'], { input: '' })).exit).toBe(3);
+    expect((await workplace().run(['import'], { input: '' })).exit).toBe(2);
   });
 });

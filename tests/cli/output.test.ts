@@ -2,44 +2,38 @@ import { spawnSync } from 'node:child_process';
 import { closeSync, existsSync, openSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { BUILT, requireBuilt } from '../support/built.js';
-import { ended, makeWorkplace, type Workplace } from '../support/railfit.js';
+import { BUILT } from '../support/built.js';
+import { ended, withWorkplace } from '../support/railfit.js';
 
 const PROBE = 'soil-moisture-probe.yaml';
-let place: Workplace;
 
-beforeAll(async () => {
-  requireBuilt();
-  place = makeWorkplace();
-  await place.run(['parts']);
-  return () => { place.remove(); };
-});
+const workplace = withWorkplace(['parts']);
 
 const EVERYTHING = ['shortlist', PROBE, '--json', '--all', '--top', '5000', '--catalog', 'long.sqlite'];
 
 /** Parts that do not fit: with --all every one of them is in the answer. */
 async function importLongList(): Promise<void> {
-  const [header = '', ...rows] = readFileSync(join(place.folder, 'approved.csv'), 'utf8').split('\n');
+  const [header = '', ...rows] = readFileSync(join(workplace().folder, 'approved.csv'), 'utf8').split('\n');
   const rejected = rows.find((row) => row.startsWith('HOUSE-06,')) ?? '';
   const copies = Array.from({ length: 600 }, (_, at) => rejected.replace('HOUSE-06', `HOUSE-${1000 + at}`));
-  writeFileSync(join(place.folder, 'long.csv'), [header, ...copies, ''].join('\n'));
-  expect((await place.run(['import', 'long.csv', '--catalog', 'long.sqlite'])).exit).toBe(0);
+  writeFileSync(join(workplace().folder, 'long.csv'), [header, ...copies, ''].join('\n'));
+  expect((await workplace().run(['import', 'long.csv', '--catalog', 'long.sqlite'])).exit).toBe(0);
 }
 
 describe('the streams', () => {
   it('the answer is on stdout and talk is on stderr', async () => {
-    const first = await place.run(['parts', '--json'], { env: { RAILFIT_CATALOG: join(place.folder, 'new', 'catalog.sqlite') } });
+    const first = await workplace().run(['parts', '--json'], { env: { RAILFIT_CATALOG: join(workplace().folder, 'new', 'catalog.sqlite') } });
     expect(first.stderr).toMatch(/^note: new catalog .+, filled with \d+ generic sets \(classes of parts, not something to order\)\n$/u);
     expect(JSON.parse(first.stdout)).toMatchObject({ schema: 'railfit/parts' });
-    const second = await place.run(['parts', '--json'], { env: { RAILFIT_CATALOG: join(place.folder, 'new', 'catalog.sqlite') } });
+    const second = await workplace().run(['parts', '--json'], { env: { RAILFIT_CATALOG: join(workplace().folder, 'new', 'catalog.sqlite') } });
     expect(second).toEqual({ exit: 0, stdout: first.stdout, stderr: '' });
   });
 
   it('warnings of an import are talk', async () => {
-    writeFileSync(join(place.folder, 'warned.csv'), 'id,status,package,shelf\nA,approved,SO-8,4\n');
-    const catalog = { RAILFIT_CATALOG: join(place.folder, 'warned.sqlite') };
-    await place.run(['parts'], { env: catalog });
-    const ran = await place.run(['import', 'warned.csv'], { env: catalog });
+    writeFileSync(join(workplace().folder, 'warned.csv'), 'id,status,package,shelf\nA,approved,SO-8,4\n');
+    const catalog = { RAILFIT_CATALOG: join(workplace().folder, 'warned.sqlite') };
+    await workplace().run(['parts'], { env: catalog });
+    const ran = await workplace().run(['import', 'warned.csv'], { env: catalog });
     expect(ran.exit).toBe(0);
     expect(ran.stdout).toMatch(/^Imported 1 part from warned\.csv/u);
     expect(ran.stderr).toContain('I203');
@@ -50,14 +44,14 @@ describe('a long answer', () => {
   beforeAll(importLongList);
 
   it('arrives whole through a slow pipe', async () => {
-    const file = openSync(join(place.folder, 'whole.json'), 'w');
-    const direct = spawnSync(process.execPath, [BUILT, ...EVERYTHING], { cwd: place.folder, env: { PATH: process.env['PATH'] }, stdio: ['ignore', file, 'pipe'] });
+    const file = openSync(join(workplace().folder, 'whole.json'), 'w');
+    const direct = spawnSync(process.execPath, [BUILT, ...EVERYTHING], { cwd: workplace().folder, env: { PATH: process.env['PATH'] }, stdio: ['ignore', file, 'pipe'] });
     closeSync(file);
     expect(direct.status).toBe(0);
-    const whole = readFileSync(join(place.folder, 'whole.json'));
+    const whole = readFileSync(join(workplace().folder, 'whole.json'));
     expect(whole.length).toBeGreaterThan(5_000_000);
 
-    const child = place.start(EVERYTHING);
+    const child = workplace().start(EVERYTHING);
     const pieces: Buffer[] = [];
     child.stdout?.on('data', (piece: Buffer) => {
       pieces.push(piece);
@@ -70,7 +64,7 @@ describe('a long answer', () => {
   });
 
   it('may be left unread: nothing on stderr', async () => {
-    const child = place.start(EVERYTHING);
+    const child = workplace().start(EVERYTHING);
     child.stdout?.once('data', () => child.stdout?.destroy());
     const ran = await ended(child);
     expect(ran.stderr).toBe('');
@@ -78,14 +72,14 @@ describe('a long answer', () => {
   });
 
   it.skipIf(process.platform === 'win32')('| head -1 leaves stderr empty', () => {
-    const ran = spawnSync('sh', ['-c', '"$0" "$@" | head -1', process.execPath, BUILT, ...EVERYTHING], { cwd: place.folder, env: { PATH: process.env['PATH'] }, encoding: 'utf8' });
+    const ran = spawnSync('sh', ['-c', '"$0" "$@" | head -1', process.execPath, BUILT, ...EVERYTHING], { cwd: workplace().folder, env: { PATH: process.env['PATH'] }, encoding: 'utf8' });
     expect(ran.stderr).toBe('');
     expect(ran.stdout).toBe('{\n');
   });
 
   it.skipIf(!existsSync('/dev/full'))('that finds no space is exit 5, not an answer', () => {
     const full = openSync('/dev/full', 'w');
-    const ran = spawnSync(process.execPath, [BUILT, 'demands', PROBE], { cwd: place.folder, stdio: ['ignore', full, 'pipe'], encoding: 'utf8' });
+    const ran = spawnSync(process.execPath, [BUILT, 'demands', PROBE], { cwd: workplace().folder, stdio: ['ignore', full, 'pipe'], encoding: 'utf8' });
     closeSync(full);
     expect(ran.status).toBe(5);
     expect(ran.stderr).toMatch(/^error\[E504\]: the answer could not be written \(ENOSPC\) \(exit 5\)\n {3}fix: /u);
@@ -102,30 +96,30 @@ describe('same input, same bytes', () => {
     ['part', ['part', 'GX-NANO']],
     ['a refusal', ['demands', PROBE, '--supply', '5']],
   ])('%s: twice, under other locales and time zones', async (_what, words) => {
-    const once = await place.run(words, { env: { LC_ALL: 'C.UTF-8', TZ: 'UTC' } });
-    expect(await place.run(words, { env: { LC_ALL: 'C.UTF-8', TZ: 'UTC' } })).toEqual(once);
-    expect(await place.run(words, { env: { LC_ALL: 'tr_TR.UTF-8', TZ: 'Pacific/Kiritimati' } })).toEqual(once);
-    expect(await place.run(words, { env: { LANG: undefined, TZ: 'America/St_Johns' } })).toEqual(once);
+    const once = await workplace().run(words, { env: { LC_ALL: 'C.UTF-8', TZ: 'UTC' } });
+    expect(await workplace().run(words, { env: { LC_ALL: 'C.UTF-8', TZ: 'UTC' } })).toEqual(once);
+    expect(await workplace().run(words, { env: { LC_ALL: 'tr_TR.UTF-8', TZ: 'Pacific/Kiritimati' } })).toEqual(once);
+    expect(await workplace().run(words, { env: { LANG: undefined, TZ: 'America/St_Johns' } })).toEqual(once);
   });
 
   it('the order of the rows of a list changes nothing', async () => {
-    const [header = '', ...rows] = readFileSync(join(place.folder, 'approved.csv'), 'utf8').trimEnd().split('\n');
-    writeFileSync(join(place.folder, 'turned.csv'), [header, ...rows.reverse(), ''].join('\n'));
+    const [header = '', ...rows] = readFileSync(join(workplace().folder, 'approved.csv'), 'utf8').trimEnd().split('\n');
+    writeFileSync(join(workplace().folder, 'turned.csv'), [header, ...rows.reverse(), ''].join('\n'));
     const answers = await Promise.all(['approved', 'turned'].map(async (name) => {
-      const env = { RAILFIT_CATALOG: join(place.folder, `${name}.sqlite`) };
-      await place.run(['import', `${name}.csv`], { env });
-      return (await place.run(['shortlist', PROBE], { env })).stdout;
+      const env = { RAILFIT_CATALOG: join(workplace().folder, `${name}.sqlite`) };
+      await workplace().run(['import', `${name}.csv`], { env });
+      return (await workplace().run(['shortlist', PROBE], { env })).stdout;
     }));
     expect(answers[0]).toBe(answers[1]);
   });
 
   it('the list that is written is read back as the same list', async () => {
-    const env = { RAILFIT_CATALOG: join(place.folder, 'back.sqlite') };
-    await place.run(['import', 'approved.csv'], { env });
-    const written = await place.run(['parts', '--csv'], { env });
-    writeFileSync(join(place.folder, 'written.csv'), written.stdout);
-    const again = await place.run(['import', 'written.csv', '--json'], { env });
+    const env = { RAILFIT_CATALOG: join(workplace().folder, 'back.sqlite') };
+    await workplace().run(['import', 'approved.csv'], { env });
+    const written = await workplace().run(['parts', '--csv'], { env });
+    writeFileSync(join(workplace().folder, 'written.csv'), written.stdout);
+    const again = await workplace().run(['import', 'written.csv', '--json'], { env });
     expect(JSON.parse(again.stdout)).toMatchObject({ outcome: 'no-change', counts: { rows: 9, added: 0, changed: 0, removed: 0, unchanged: 9 }, problems: [] });
-    expect((await place.run(['parts', '--csv'], { env })).stdout).toBe(written.stdout);
+    expect((await workplace().run(['parts', '--csv'], { env })).stdout).toBe(written.stdout);
   });
 });

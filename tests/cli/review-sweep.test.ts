@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { reviewSweep } from '../../src/cli/review-sweep.js';
 import { rerunOf } from '../../src/cli/rerun.js';
-import { buildStage, readStage, readSwept, shortlist, sweepOver, sweptOverride, sweptValues, type PartSource, type Stage, type StageSpec } from '../../src/index.js';
+import { buildStage, readStage, readSwept, sweepOver, sweptOverride, sweptValues, type PartSource, type Stage, type StageSpec } from '../../src/index.js';
 import { ROOT } from '../support/built.js';
 import { PAGE_PARTS } from '../support/page.js';
 import { viewSource } from '../support/two-paths.js';
@@ -38,17 +38,16 @@ const LIMITS = {
 
 describe.each(Object.entries(LIMITS))('%s', { timeout: 120_000 }, (path, text) => {
   const { spec, stage } = stageOf(text);
-  const report = shortlist(stage, source, asking);
   let found: NonNullable<ReturnType<typeof reviewSweep>>;
   beforeAll(() => {
-    const swept = reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null, report });
+    const swept = reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null });
     if (swept === null) throw new Error('nothing is swept');
     found = swept;
   }, 120_000);
 
   it('gives the same through views', () => {
     const views = viewSource(MANY);
-    expect(reviewSweep({ spec, stage, given: { text, overrides: [] }, source: views, asking, chosen: null, report: shortlist(stage, views, asking) })).toEqual(found);
+    expect(reviewSweep({ spec, stage, given: { text, overrides: [] }, source: views, asking, chosen: null })).toEqual(found);
   });
 
   it('gives the counts, first choices and turns of the whole list', () => {
@@ -77,14 +76,14 @@ describe('a stage without a budget', () => {
   it('has no such figure', () => {
     const text = STAGE_TEXT.replace(/limits: .*\n/u, '');
     const { spec, stage } = stageOf(text);
-    expect(reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null, report: shortlist(stage, source, asking) })).toBeNull();
+    expect(reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null })).toBeNull();
   });
 });
 
 it('a demo stage is swept over its DC error, thirteen values of it', () => {
   const text = readFileSync(join(ROOT, 'catalog', 'stages', 'weather-mast.yaml'), 'utf8');
   const { spec, stage } = stageOf(text);
-  const swept = reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null, report: shortlist(stage, source, asking) });
+  const swept = reviewSweep({ spec, stage, given: { text, overrides: [] }, source, asking, chosen: null });
   expect(swept?.over).toBe('limits.dcError');
   expect(swept?.points).toHaveLength(13);
 });

@@ -1,21 +1,14 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import stringWidth from 'string-width';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { DOCUMENTS } from '../../src/presentation/schemas/index.js';
-import { requireBuilt } from '../support/built.js';
-import { makeWorkplace, type Workplace } from '../support/railfit.js';
+import { withWorkplace } from '../support/railfit.js';
 import { readXml } from '../support/strict-xml.js';
 
 const PROBE = 'soil-moisture-probe.yaml';
-let place: Workplace;
 
-beforeAll(async () => {
-  requireBuilt();
-  place = makeWorkplace();
-  await place.run(['import', 'approved.csv']);
-  return () => { place.remove(); };
-}, 120_000);
+const workplace = withWorkplace(['import', 'approved.csv']);
 
 interface Answer { readonly counts: { readonly fit: number } | null; readonly first: string | null; readonly reason?: string }
 interface SweepDocument {
@@ -25,7 +18,7 @@ interface SweepDocument {
 }
 
 async function sweep(over: string, ...more: readonly string[]): Promise<SweepDocument> {
-  const ran = await place.run(['sweep', PROBE, '--over', over, ...more, '--json']);
+  const ran = await workplace().run(['sweep', PROBE, '--over', over, ...more, '--json']);
   expect(ran).toMatchObject({ exit: 0, stderr: '' });
   const document: unknown = JSON.parse(ran.stdout);
   expect(DOCUMENTS.sweep.safeParse(document).error?.issues ?? []).toEqual([]);
@@ -33,7 +26,7 @@ async function sweep(over: string, ...more: readonly string[]): Promise<SweepDoc
 }
 
 const shortlist = async (...changes: readonly string[]): Promise<Answer & { readonly fit: number }> => {
-  const { counts, fit } = JSON.parse((await place.run(['shortlist', PROBE, ...changes, '--json'])).stdout) as { counts: { fit: number }; fit: { part: string }[] };
+  const { counts, fit } = JSON.parse((await workplace().run(['shortlist', PROBE, ...changes, '--json'])).stdout) as { counts: { fit: number }; fit: { part: string }[] };
   return { counts, fit: counts.fit, first: fit[0]?.part ?? null };
 };
 
@@ -58,20 +51,20 @@ describe('railfit sweep', () => {
     expect(points[0]?.reason).toContain('above the 2 V supply');
     expect(turns[0]?.from.reason).toContain('supply');
     expect(turns[0]?.at).toBe(2.64001);
-    const text = (await place.run(['sweep', PROBE, '--over', 'supply=2V..4V', '--steps', '3'])).stdout;
+    const text = (await workplace().run(['sweep', PROBE, '--over', 'supply=2V..4V', '--steps', '3'])).stdout;
     expect(text).toContain('no such stage: the output is asked to swing');
     expect(text).toContain('from 2.64001 V on: a stage again; 0 fit');
   }, 120_000);
 
   it.each([40, 60, 100])('stands within %d columns, in ASCII too', async (width) => {
-    const { stdout } = await place.run(['sweep', PROBE, '--over', 'temperature=20..85 °C', '--steps', '3', '--ascii'], { env: { COLUMNS: String(width) } });
+    const { stdout } = await workplace().run(['sweep', PROBE, '--over', 'temperature=20..85 °C', '--steps', '3', '--ascii'], { env: { COLUMNS: String(width) } });
     expect(stdout).toMatch(/^[\n\u0020-\u007e]+$/u);
     for (const line of stdout.split('\n')) expect(stringWidth(line), line).toBeLessThanOrEqual(width);
     expect(stdout.replace(/\s+/gu, ' ')).toContain('each value is the upper end, the lower one stays at -20 C');
   }, 120_000);
 
   it('is a table with --csv: steps and turns by value', async () => {
-    const { stdout, exit } = await place.run(['sweep', PROBE, '--over', 'gain=2..8', '--steps', '3', '--csv']);
+    const { stdout, exit } = await workplace().run(['sweep', PROBE, '--over', 'gain=2..8', '--steps', '3', '--csv']);
     expect(exit).toBe(0);
     const [header, ...rows] = stdout.trimEnd().split('\r\n');
     expect(header).toBe('kind,gain (V/V),fit,cannot be decided,do not fit,first choice,no such stage');
@@ -81,7 +74,7 @@ describe('railfit sweep', () => {
   }, 120_000);
 
   it('takes options alone, and a field that only the sweep gives', async () => {
-    const ran = await place.run(['sweep', '--topology', 'follower', '--input', '1..2 V', '--over', 'supply=3V..5V', '--steps', '2']);
+    const ran = await workplace().run(['sweep', '--topology', 'follower', '--input', '1..2 V', '--over', 'supply=3V..5V', '--steps', '2']);
     expect(ran).toMatchObject({ exit: 0, stderr: '' });
     expect(ran.stdout).toContain('2 values in even steps');
   }, 60_000);
@@ -98,14 +91,14 @@ describe('railfit sweep', () => {
     ['two forms', ['--over', 'gain=1..8', '--json', '--csv'], 'one form'],
     ['values at which nothing is a stage', ['--over', 'supply=1V..2V', '--steps', '2'], 'above the 1 V supply'],
   ])('refuses %s', async (_, words, said) => {
-    const ran = await place.run(['sweep', PROBE, ...words]);
+    const ran = await workplace().run(['sweep', PROBE, ...words]);
     expect(ran.exit).toBe(2);
     expect(`${ran.stdout}${ran.stderr}`.replace(/\s+/gu, ' ')).toContain(said);
   }, 60_000);
 });
 
 describe('railfit explain --against', () => {
-  const against = (...words: readonly string[]) => place.run(['explain', ...words]);
+  const against = (...words: readonly string[]) => workplace().run(['explain', ...words]);
 
   it('decides by the step of the order, and carries both parts', async () => {
     const ran = await against('HOUSE-02', PROBE, '--against', 'HOUSE-01', '--json');
@@ -123,7 +116,7 @@ describe('railfit explain --against', () => {
   }, 60_000);
 
   it.each([40, 59, 60, 80, 100])('stands within %d columns', async (width) => {
-    const { stdout } = await place.run(['explain', 'HOUSE-01', PROBE, '--against', 'HOUSE-06'], { env: { COLUMNS: String(width) } });
+    const { stdout } = await workplace().run(['explain', 'HOUSE-01', PROBE, '--against', 'HOUSE-06'], { env: { COLUMNS: String(width) } });
     for (const line of stdout.split('\n').filter((one) => !one.includes('railfit'))) expect(stringWidth(line), line).toBeLessThanOrEqual(width);
     expect(stdout.replace(/\s+/gu, ' ')).toContain('it fits, the other does not fit');
   }, 60_000);
@@ -137,23 +130,23 @@ describe('railfit explain --against', () => {
 
 describe('a check in a build', () => {
   it('takes the part of the stage file, and writes what a build server reads', async () => {
-    writeFileSync(join(place.folder, 'chosen.yaml'), `${readFileSync(join(place.folder, PROBE), 'utf8')}part: HOUSE-06\n`);
+    writeFileSync(join(workplace().folder, 'chosen.yaml'), `${readFileSync(join(workplace().folder, PROBE), 'utf8')}part: HOUSE-06\n`);
     const words = ['check', 'chosen.yaml', '--junit', 'railfit.xml'];
-    const ran = await place.run(words);
+    const ran = await workplace().run(words);
     expect(ran).toMatchObject({ exit: 1, stderr: '' });
     expect(ran.stdout).toContain('chosen.yaml: HOUSE-06 does not fit');
-    const first = readFileSync(join(place.folder, 'railfit.xml'), 'utf8');
+    const first = readFileSync(join(workplace().folder, 'railfit.xml'), 'utf8');
     const { name, attributes, children } = readXml(first);
     expect([name, children.length, Number(attributes['failures']) > 0, attributes['errors']]).toEqual(['testsuites', 1, true, '0']);
-    await place.run(words);
-    expect(readFileSync(join(place.folder, 'railfit.xml'), 'utf8')).toBe(first);
-    const other = await place.run(['check', 'chosen.yaml', '--part', 'HOUSE-01', '--junit', '-']);
+    await workplace().run(words);
+    expect(readFileSync(join(workplace().folder, 'railfit.xml'), 'utf8')).toBe(first);
+    const other = await workplace().run(['check', 'chosen.yaml', '--part', 'HOUSE-01', '--junit', '-']);
     expect(other.exit).toBe(0);
     expect(readXml(other.stdout).attributes['failures']).toBe('0');
   }, 120_000);
 
   it('says where the file cannot be written, and takes one form on stdout', async () => {
-    expect((await place.run(['check', PROBE, '--part', 'HOUSE-01', '--junit', 'nowhere/r.xml'])).exit).toBe(5);
-    expect((await place.run(['check', PROBE, '--part', 'HOUSE-01', '--junit', '-', '--json'])).exit).toBe(2);
+    expect((await workplace().run(['check', PROBE, '--part', 'HOUSE-01', '--junit', 'nowhere/r.xml'])).exit).toBe(5);
+    expect((await workplace().run(['check', PROBE, '--part', 'HOUSE-01', '--junit', '-', '--json'])).exit).toBe(2);
   }, 60_000);
 });

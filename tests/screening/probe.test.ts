@@ -18,7 +18,6 @@ describe.each(STAGES)('one part check by check, on %s', (name) => {
     for (const part of SOME) {
       const { outcome, verdicts } = judgePart(whole, part);
       const probe = probePart(asked, part);
-      if (probe.isPlainlyOut()) expect(outcome).toBe('does-not-fit');
       expect(probe.fits()).toBe(outcome === 'fits');
       expect(probe.notPassing()).toEqual(verdicts.filter((verdict) => verdict.outcome !== 'pass').map(({ check }) => check));
     }

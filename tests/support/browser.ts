@@ -3,6 +3,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { chromium, type Browser, type Page } from 'playwright-core';
+import { afterAll, beforeAll } from 'vitest';
 
 /** Where Debian and others put it. */
 const PLACES = ['/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome'];
@@ -13,6 +14,29 @@ export async function launchBrowser(): Promise<Browser> {
   const found = (named === undefined ? PLACES : [named]).find((path) => existsSync(path));
   if (found === undefined) throw new Error(`no browser (${named ?? PLACES.join(', ')}): apt-get install -y --no-install-recommends chromium fonts-dejavu-core poppler-utils, or name one in CHROMIUM`);
   return chromium.launch({ executablePath: found, args: ['--no-sandbox', '--disable-gpu', '--disable-dev-shm-usage'], timeout: 120_000 });
+}
+
+export interface Opened {
+  readonly browser: Browser;
+  readonly folder: PageFolder;
+}
+
+/** A browser and a folder with these pages, for the tests of one file: there from the first test on, gone after the last one. */
+export function withPages(pages: Readonly<Record<string, string>>, patience: number): () => Opened {
+  let opened: Opened | null = null;
+  beforeAll(async () => {
+    const browser = await launchBrowser();
+    opened = { browser, folder: new PageFolder(browser) };
+    for (const [name, text] of Object.entries(pages)) opened.folder.write(name, text);
+  }, patience);
+  afterAll(async () => {
+    opened?.folder.remove();
+    await opened?.browser.close();
+  });
+  return () => {
+    if (opened === null) throw new Error('the pages are there from the first test on');
+    return opened;
+  };
 }
 
 export interface Shown {

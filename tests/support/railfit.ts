@@ -2,7 +2,8 @@ import { spawn, type ChildProcess } from 'node:child_process';
 import { cpSync, mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { BUILT, ROOT } from './built.js';
+import { beforeAll } from 'vitest';
+import { BUILT, requireBuilt, ROOT } from './built.js';
 
 /** How one run of the built command ended. */
 export interface Ran {
@@ -53,6 +54,21 @@ export function makeWorkplace(): Workplace {
     start,
     run: (words, options = {}) => ended(start(words, options), options.input),
     remove: () => { rmSync(folder, { recursive: true, force: true }); },
+  };
+}
+
+/** A workplace for the tests of one file or group, where the built command ran with these words once; gone after the last test. */
+export function withWorkplace(words: readonly string[], patience = 60_000): () => Workplace {
+  let place: Workplace | null = null;
+  beforeAll(async () => {
+    requireBuilt();
+    place = makeWorkplace();
+    await place.run(words);
+    return () => { place?.remove(); };
+  }, patience);
+  return () => {
+    if (place === null) throw new Error('the workplace is there from the first test on');
+    return place;
   };
 }
 
