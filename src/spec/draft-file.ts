@@ -22,7 +22,7 @@ export function draftFile(request: DraftRequest): string {
   const head = [...(request.values === undefined ? prose(scene.told, '') : []), ...prose(HOW, ''), ''];
   const live = request.values ?? new Map(Object.entries(scene.live));
   const fields = draftKeysOf({ ...request, live, examples: scene.examples });
-  return `${[...head, ...fields.flatMap((one) => [...fieldLines(one, ''), ''])].join('\n').trimEnd()}\n`.replaceAll('−', '-');
+  return `${[...head, ...fields.flatMap((one) => [...fieldLines(one, ''), ''])].join('\n').trimEnd()}\n`;
 }
 
 const HOW =
@@ -51,11 +51,11 @@ const capital = (text: string): string => (/^\w+:/.test(text) ? text : text.slic
 
 const WIDTH = 100;
 
-/** Comment lines: `#` and a blank, so that they are never taken for a field. A figure and its unit stay in one line. */
+/** Comment lines: `#` and a blank, so that they are never taken for a field. A figure and its unit stay in one line; a minus is one that is typed. */
 function prose(text: string, indent: string, inset = 0): string[] {
   const lead = `${indent}# ${' '.repeat(inset)}`;
   const lines: string[] = [];
-  for (const word of text.split(/(?<!\d) | (?=\d)/)) {
+  for (const word of text.replaceAll('−', '-').split(/(?<!\d) | (?=\d)/)) {
     const last = lines.at(-1);
     if (last === undefined || last.length + 1 + word.length > WIDTH) lines.push(`${lead}${last === undefined || inset === 0 ? '' : '  '}${word}`);
     else lines[lines.length - 1] = `${last} ${word}`;

@@ -166,6 +166,7 @@ describe('a draft with answers', () => {
         const named = draftFile({ topology: 'follower', coupling: 'dc', values: new Map([['name', name], ['topology', 'follower'], ['supply', '5 V'], ['signal.input', '1..2 V']]) });
         expect(specOf(named).name).toBe(name);
       }),
+      { examples: [['−'], ['Level −2']] },
     );
   });
 });
