@@ -22,6 +22,43 @@ export interface Check<Asked> {
   judge(asked: Asked, readings: Readings): Finding | null;
 }
 
+/** What was worked out for each term, asked for when needed. */
+export type Known<Found> = { readonly [Name in keyof Found]: () => Found[Name] };
+
+/** What is asked but for the limit and the words about it. */
+export type Unlimited<Asked> = Omit<Asked, 'required' | 'because'>;
+
+type Told = Pick<Readings, 'brief'>;
+
+/**
+ * A check put together from terms. Each term looks at figures of its own, so it is worked out once for all parts that have these figures;
+ * the whole is made of the terms, and the finding of the whole, and of nothing else. Neither terms nor whole know the limit: a changed
+ * limit leaves them as they are.
+ */
+export interface ComposedCheck<Asked, Found, Whole> extends Omit<Check<Asked>, 'judge'> {
+  readonly terms: { readonly [Name in keyof Found]: (asked: Unlimited<Asked>, readings: Readings) => Found[Name] };
+  readonly whole: (asked: Unlimited<Asked>, known: Known<Found>, told: Told) => Whole;
+  readonly finding: (asked: Asked, whole: Whole, told: Told) => Finding | null;
+}
+
+/** The same as a check: its judge works out every term the whole asks for. */
+export function composed<Asked extends object, Found, Whole>(check: ComposedCheck<Asked, Found, Whole>): ComposedCheck<Asked, Found, Whole> & Check<Asked> {
+  return { ...check, judge: (asked, readings) => check.finding(asked, check.whole(asked, knownOf(check, asked, readings), readings), readings) };
+}
+
+function knownOf<Asked extends object, Found>({ terms }: Pick<ComposedCheck<Asked, Found, unknown>, 'terms'>, asked: Asked, readings: Readings): Known<Found> {
+  const names = Object.keys(terms) as (keyof Found)[];
+  return Object.fromEntries(names.map((name) => [name, () => terms[name](asked, readings)])) as Known<Found>;
+}
+
+/** Terms, whole and finding of a check put together from terms, with its question bound inside. */
+export interface AnyComposition {
+  readonly names: readonly string[];
+  term(name: string, demands: Demands, readings: Readings): unknown;
+  readonly whole: (demands: Demands, known: Known<Readonly<Record<string, unknown>>>, told: Told) => unknown;
+  finding(demands: Demands, whole: unknown, told: Told): Finding | null;
+}
+
 /** A check with its question bound inside, so that all checks have one type. */
 export interface AnyCheck {
   readonly id: string;
@@ -33,17 +70,33 @@ export interface AnyCheck {
   /** What the stage asks, to be held against what another stage asks; null: nothing. */
   asked(demands: Demands): unknown;
   judge(demands: Demands, readings: Readings): Finding | null;
+  /** Null: its judge is one piece. */
+  readonly composition: AnyComposition | null;
 }
 
-export function seal<Asked>(check: Check<Asked>): AnyCheck {
+export function seal<Asked extends object>(check: Check<Asked>): AnyCheck {
   const { id, title, unit, reads, hasMargin } = check;
   return {
     id, title, unit, reads, hasMargin,
+    composition: 'terms' in check ? compositionOf(check as unknown as ComposedCheck<Asked, Readonly<Record<string, unknown>>, unknown>) : null,
     isAsked: (demands) => check.asks(demands) !== null,
     asked: (demands) => check.asks(demands),
     judge: (demands, readings) => {
       const asked = check.asks(demands);
       return asked === null ? null : check.judge(asked, readings);
     },
+  };
+}
+
+function compositionOf<Asked>({ terms, asks, whole, finding }: ComposedCheck<Asked, Readonly<Record<string, unknown>>, unknown>): AnyComposition {
+  const of = <Made>(demands: Demands, make: (asked: Asked) => Made): Made | null => {
+    const asked = asks(demands);
+    return asked === null ? null : make(asked);
+  };
+  return {
+    names: Object.keys(terms),
+    term: (name, demands, readings) => of(demands, (asked) => terms[name]?.(asked, readings)),
+    whole: (demands, known, told) => of(demands, (asked) => whole(asked, known, told)),
+    finding: (demands, found, told) => of(demands, (asked) => finding(asked, found, told)),
   };
 }

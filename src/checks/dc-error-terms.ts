@@ -5,6 +5,7 @@ import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
 import { formatQuantity } from '../quantities/format.js';
 import type { Missing, Term, TurningPoint } from '../verdicts/finding.js';
+import type { Unlimited } from './check.js';
 
 /** One addend of the DC error: a value, nothing to charge, or a figure that is missing. Volts at the output. */
 export type ErrorTerm =
@@ -22,6 +23,8 @@ interface Multiplied {
   readonly divides?: true;
   readonly how: () => string;
 }
+
+export type ErrorQuestion = Unlimited<DcErrorDemand>;
 
 /** Only rounding is left of a multiplier below this: a move of a picovolt, and far less of any other. */
 const NOTHING = 1e-12;
@@ -50,91 +53,118 @@ export function termOf(name: string, value: number, { reading, unit, how }: Term
   return { name, value, slot: reading.slot, basis: reading.basis, figure: Number.isFinite(figure.value) ? figure : null, how: steps.join(', ') };
 }
 
-export function offsetTerm(asked: DcErrorDemand, offset: OffsetReading | null, readings: Pick<Readings, 'brief'>): ErrorTerm {
+export function offsetTerm(asked: ErrorQuestion, offset: OffsetReading | null, readings: Pick<Readings, 'brief'>): ErrorTerm {
   return multiplied({ name: 'offset', figure: 'offsetVoltage', kind: 'max', unit: 'V', multiplier: asked.noiseGain, how: () => gain(asked) }, offset, readings);
 }
 
-/** No drift term beside an offset rated over temperature. */
-export function driftTerm(asked: DcErrorDemand, offset: OffsetReading | null, readings: Readings): ErrorTerm {
-  if (offset?.overTemperature === true) return { kind: 'nothing' };
+/** Drift over the stage's temperatures; not beside an offset rated over temperature. */
+export function driftTerm(asked: ErrorQuestion, readings: Readings): ErrorTerm {
   const multiplier = asked.noiseGain * asked.kelvin;
   const how = (): string => `× ${Number(asked.kelvin.toPrecision(4))} K, ${gain(asked)}`;
   return multiplied({ name: 'offset drift', figure: 'offsetDrift', kind: 'max', unit: 'V/K', multiplier, how }, readings.figureOrClass('offsetDrift'), readings);
 }
 
-export function commonModeTerm(asked: DcErrorDemand, readings: Readings): ErrorTerm {
+export function commonModeTerm(asked: ErrorQuestion, readings: Readings): ErrorTerm {
   const multiplier = asked.noiseGain * asked.commonModeMove;
   const how = (): string => `over ${formatQuantity(asked.commonModeMove, 'V')} of common mode, ${gain(asked)}`;
   const of = { name: 'common mode', figure: 'commonModeRejection', kind: 'min', unit: 'V/V', multiplier, divides: true, how } as const;
   return multiplied(of, readings.figureOrClass('commonModeRejection'), readings);
 }
 
+interface Supplied {
+  readonly offset: OffsetReading | null;
+  readonly rejection: Reading | null;
+}
+
 /** Distance of the supply from the one the offset is rated at, else from the nominal. */
-export function supplyTerm(asked: DcErrorDemand, offset: OffsetReading | null, readings: Readings): ErrorTerm {
+export function supplyTerm(asked: ErrorQuestion, { offset, rejection }: Supplied, told: Pick<Readings, 'brief'>): ErrorTerm {
   const rated = offset?.ratedSupply ?? asked.supply.nominal;
   const move = Math.max(Math.abs(asked.supply.min - rated), Math.abs(asked.supply.max - rated));
   const how = (): string => `over ${formatQuantity(move, 'V')} of supply, ${gain(asked)}`;
   const of = { name: 'supply', figure: 'supplyRejection', kind: 'min', unit: 'V/V', multiplier: asked.noiseGain * move, divides: true, how } as const;
-  return multiplied(of, readings.figureOrClass('supplyRejection'), readings);
+  return multiplied(of, rejection, told);
 }
 
-export function outputTerm(asked: DcErrorDemand, readings: Readings): ErrorTerm {
+export function outputTerm(asked: ErrorQuestion, readings: Readings): ErrorTerm {
   const multiplier = asked.noiseGain * asked.outputMove;
   const how = (): string => `over ${formatQuantity(asked.outputMove, 'V')} of output, ${gain(asked)}`;
   const of = { name: 'open-loop gain', figure: 'openLoopGain', kind: 'min', unit: 'V/V', multiplier, divides: true, how } as const;
   return multiplied(of, readings.figureOrClass('openLoopGain'), readings);
 }
 
+/** A current that is read, and what it adds. */
+export interface CurrentTerm {
+  readonly reading: Reading | null;
+  readonly term: ErrorTerm;
+}
+
+/** Bias current through what the series resistances differ by. */
+export function biasTerm(asked: ErrorQuestion, readings: Readings): CurrentTerm {
+  const reading = readings.figure('biasCurrent');
+  const { matched } = resistancesOf(asked);
+  const how = (): string => `through ${formatQuantity(matched / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
+  return { reading, term: multiplied({ name: 'bias current', figure: 'biasCurrent', kind: 'max', unit: 'A', multiplier: matched, how }, reading, readings) };
+}
+
+/** Half the offset current through both resistances; `reading` is what it is read as. */
+export function offsetCurrentTerm(asked: ErrorQuestion, reading: Reading | null, { brief }: Pick<Readings, 'brief'>): CurrentTerm {
+  const { half } = resistancesOf(asked);
+  const how = (): string => `half of it through ${formatQuantity((2 * half) / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
+  return { reading, term: multiplied({ name: 'offset current', figure: 'offsetCurrent', kind: 'max', unit: 'A', multiplier: half, how }, reading, { brief }) };
+}
+
+/** The currents of a part, each asked for when needed. */
+export interface Currents {
+  bias(): CurrentTerm;
+  offset(): CurrentTerm;
+  /** The offset current, else the class's. */
+  offsetOrClass(): CurrentTerm;
+  bounded(): Readings['bounded'];
+}
+
 /**
  * Bias and offset current through the series resistances. With the offset current unknown the two pins may differ by the
  * whole bias current: then Ib·(Rp+Rn) stands for both, at best the offset current is nothing.
  */
-export function currentTerms(asked: DcErrorDemand, readings: Readings): ErrorTerm[] {
-  const sum = asked.positive + asked.negative;
+export function currentTerms(asked: ErrorQuestion, currents: Currents, told: Pick<Readings, 'brief'>): ErrorTerm[] {
+  const { sum, matched } = resistancesOf(asked);
   if (sum === 0) return [];
-  const bias = readings.figure('biasCurrent');
-  const matched = asked.noiseGain * (Math.abs(asked.positive - asked.negative) + asked.tolerance * sum);
-  const how = (): string => `through ${formatQuantity(matched / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
-  const biasTerm = multiplied({ name: 'bias current', figure: 'biasCurrent', kind: 'max', unit: 'A', multiplier: matched, how }, bias, readings);
-  const half = asked.noiseGain * (sum / 2);
-  const offset = readings.figure('offsetCurrent');
-  if (offset !== null) return [biasTerm, offsetCurrentTerm({ asked, half, brief: readings.brief }, offset)];
+  const [bias, offset] = [currents.bias(), currents.offset()];
+  if (offset.reading !== null) return [bias.term, offset.term];
   // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
-  if (bias === null) return [matched <= NOTHING ? offsetCurrentTerm({ asked, half, brief: readings.brief }, readings.figureOrClass('offsetCurrent')) : biasTerm];
-  return unknownOffsetCurrent({ asked, bias, biasTerm, matched, half, sum }, readings);
+  if (bias.reading === null) return [matched <= NOTHING ? currents.offsetOrClass().term : bias.term];
+  return unknownOffsetCurrent(asked, { currents, bias: bias.reading, term: bias.term }, told);
 }
 
-interface OffsetCurrent extends Pick<Readings, 'brief'> {
-  readonly asked: DcErrorDemand;
-  /** Volts at the output per ampere. */
-  readonly half: number;
-}
-
-function offsetCurrentTerm({ asked, half, brief }: OffsetCurrent, reading: Reading | null): ErrorTerm {
-  const how = (): string => `half of it through ${formatQuantity((2 * half) / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
-  return multiplied({ name: 'offset current', figure: 'offsetCurrent', kind: 'max', unit: 'A', multiplier: half, how }, reading, { brief });
-}
-
-interface UnknownOffsetCurrent {
-  readonly asked: DcErrorDemand;
-  readonly bias: Reading;
-  readonly biasTerm: ErrorTerm;
+interface Resistances {
+  /** Ω in series with both inputs. */
+  readonly sum: number;
   /** Volts at the output per ampere of bias current with matched pins, and per ampere of offset current. */
   readonly matched: number;
   readonly half: number;
-  readonly sum: number;
+}
+
+function resistancesOf({ positive, negative, tolerance, noiseGain }: ErrorQuestion): Resistances {
+  const sum = positive + negative;
+  return { sum, matched: noiseGain * (Math.abs(positive - negative) + tolerance * sum), half: noiseGain * (sum / 2) };
+}
+
+interface UnknownOffsetCurrent {
+  readonly currents: Currents;
+  readonly bias: Reading;
+  readonly term: ErrorTerm;
 }
 
 /** The whole bias current may differ between the pins, unless the class's offset current says less. */
-function unknownOffsetCurrent(of: UnknownOffsetCurrent, readings: Readings): ErrorTerm[] {
-  const { asked, bias, biasTerm, matched, half, sum } = of;
+function unknownOffsetCurrent(asked: ErrorQuestion, { currents, bias, term }: UnknownOffsetCurrent, { brief }: Pick<Readings, 'brief'>): ErrorTerm[] {
+  const { sum, matched, half } = resistancesOf(asked);
   const whole = asked.noiseGain * sum * bias.value;
   const best = matched * bias.value;
-  const borrowed = readings.figureOrClass('offsetCurrent');
-  if (borrowed !== null && best + half * borrowed.value < whole) return [biasTerm, offsetCurrentTerm({ asked, half, brief: readings.brief }, borrowed)];
-  const how = readings.brief ? '' : `offset current not known, through ${formatQuantity(sum, 'Ω')}, ${gain(asked)}`;
-  const value = readings.bounded(whole, best);
-  return [{ kind: 'value', term: termOf('bias and offset current', value, { reading: bias, unit: 'A', how }) }];
+  const borrowed = currents.offsetOrClass();
+  if (borrowed.reading !== null && best + half * borrowed.reading.value < whole) return [term, borrowed.term];
+  const how = brief ? '' : `offset current not known, through ${formatQuantity(sum, 'Ω')}, ${gain(asked)}`;
+  const bounded = currents.bounded();
+  return [{ kind: 'value', term: termOf('bias and offset current', bounded(whole, best), { reading: bias, unit: 'A', how }) }];
 }
 
-const gain = (asked: DcErrorDemand): string => `× noise gain ${Number(asked.noiseGain.toPrecision(4))}`;
+const gain = (asked: ErrorQuestion): string => `× noise gain ${Number(asked.noiseGain.toPrecision(4))}`;

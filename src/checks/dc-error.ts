@@ -4,69 +4,108 @@ import { rootSumSquare, worstCaseSum } from '../formulas/dc-error.js';
 import { weakest } from '../parts/basis.js';
 import { DOUBLING } from '../parts/currents.js';
 import type { OffsetReading } from '../parts/offset.js';
+import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
-import type { BoundFinding, Finding, Term } from '../verdicts/finding.js';
-import type { Check } from './check.js';
-import { commonModeTerm, currentTerms, driftTerm, offsetTerm, outputTerm, supplyTerm, type ErrorTerm } from './dc-error-terms.js';
+import type { BoundFinding, Finding, NumberFinding, Term } from '../verdicts/finding.js';
+import { composed, type Known } from './check.js';
+import { biasTerm, commonModeTerm, currentTerms, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, supplyTerm, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
 
 /** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (M5). */
-export const dcError: Check<DcErrorDemand> = {
+export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
   id: 'dc-error',
   title: 'DC error',
   unit: 'V',
   reads: ['offsetVoltage', 'offsetDrift', 'biasCurrent', 'offsetCurrent', 'commonModeRejection', 'supplyRejection', 'openLoopGain'],
   hasMargin: true,
   asks: (demands) => demands['dc-error'],
-  judge: judgeDcError,
-};
+  terms: {
+    offset: offsetOf,
+    drift: driftTerm,
+    bias: biasTerm,
+    offsetCurrent: (asked, readings) => offsetCurrentTerm(asked, readings.figure('offsetCurrent'), readings),
+    offsetCurrentOrClass: (asked, readings) => offsetCurrentTerm(asked, readings.figureOrClass('offsetCurrent'), readings),
+    bounded: (_, readings) => (worst, best) => readings.bounded(worst, best),
+    commonMode: commonModeTerm,
+    supply: (_, readings) => readings.figureOrClass('supplyRejection'),
+    output: outputTerm,
+  },
+  whole: summed,
+  finding: againstLimit,
+});
 
-function judgeDcError(asked: DcErrorDemand, readings: Readings): Finding {
-  const offset = readings.offset();
-  const all = termsOf(asked, offset, readings);
+/** What the sum is put together from. */
+interface DcErrorFound {
+  readonly offset: { readonly reading: OffsetReading | null; readonly term: ErrorTerm };
+  readonly drift: ErrorTerm;
+  readonly bias: CurrentTerm;
+  readonly offsetCurrent: CurrentTerm;
+  readonly offsetCurrentOrClass: CurrentTerm;
+  readonly bounded: Readings['bounded'];
+  readonly commonMode: ErrorTerm;
+  /** What it adds depends on the supply the offset is rated at. */
+  readonly supply: Reading | null;
+  readonly output: ErrorTerm;
+}
+
+type Told = Pick<Readings, 'brief'>;
+
+function offsetOf(asked: ErrorQuestion, readings: Readings): DcErrorFound['offset'] {
+  const reading = readings.offset();
+  return { reading, term: offsetTerm(asked, reading, readings) };
+}
+
+/** The sum itself, whatever is allowed, V. */
+interface DcErrorSum extends Pick<NumberFinding, 'terms' | 'corner' | 'cautions' | 'basis' | 'rss' | 'borrowed'> {
+  readonly known: number;
+  readonly missing: readonly Extract<ErrorTerm, { readonly kind: 'missing' }>[];
+}
+
+function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Told): DcErrorSum {
+  const { reading: offset } = found.offset();
+  const all = termsOf(asked, found, { brief });
   const terms = all.flatMap((one) => (one.kind === 'value' ? [one.term] : []));
-  const known = worstCaseSum(terms.map((term) => term.value));
-  const missing = all.filter((one) => one.kind === 'missing');
-  const { required, unit, sense } = asked;
+  const values = terms.map((term) => term.value);
+  const sum = { known: worstCaseSum(values), missing: all.filter((one) => one.kind === 'missing'), basis: weakest(terms.map((term) => term.basis)), borrowed: borrowedSum(terms) };
+  if (brief) return sum;
   const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
-  const cautions = readings.brief ? [] : sourceCaution(asked, readings);
-  const common = { required, unit, sense, terms, corner, cautions, basis: weakest(terms.map((term) => term.basis)) };
+  return { ...sum, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(values) };
+}
+
+function againstLimit({ required, unit, sense }: DcErrorDemand, { known, missing, rss, borrowed, ...sum }: DcErrorSum): Finding {
+  const common = { required, unit, sense, ...sum };
   const [first] = missing;
   if (first !== undefined) {
     const turnsAt = missing.length === 1 && known < required ? first.turnsAt(required - known) : null;
     return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
   }
-  return { kind: 'numbers', ...common, offered: known, rss: rootSumSquare(terms.map((term) => term.value)), borrowed: borrowedSum(terms) };
+  return { kind: 'numbers', ...common, offered: known, ...(rss === undefined ? {} : { rss }), ...(borrowed === undefined ? {} : { borrowed }) };
 }
 
 /** One temperature, unless the offset stands at the cold end and currents that double at the hot one. */
-function cornerOf({ temperature, hottest }: DcErrorDemand, supply: number, terms: readonly Term[]): Corner {
+function cornerOf({ temperature, hottest }: ErrorQuestion, supply: number, terms: readonly Term[]): Corner {
   const doubled = terms.some(({ how }) => how?.includes(DOUBLING) === true);
   return doubled && temperature !== hottest ? { supply, temperature, currentTemperature: hottest } : { temperature, supply };
 }
 
 /** The tolerance of the source is not among the terms of the sum; what it could add is told. */
-function sourceCaution(asked: DcErrorDemand, readings: Readings): string[] {
-  const bias = readings.figure('biasCurrent')?.value;
-  if (asked.sourceSpread === 0 || bias === undefined) return [];
-  const added = asked.noiseGain * bias * asked.sourceSpread;
+function sourceCaution(asked: ErrorQuestion, bias: Reading | null): string[] {
+  if (asked.sourceSpread === 0 || bias === null) return [];
+  const added = asked.noiseGain * bias.value * asked.sourceSpread;
   return [`the tolerance of the source resistance may add ${formatQuantity(added, 'V', { round: 'up' })} of bias-current error, not charged`];
 }
 
 /** The supply end farther from the one the offset is rated at. */
-function fartherEnd(asked: DcErrorDemand, rated: number): number {
+function fartherEnd(asked: ErrorQuestion, rated: number): number {
   const { min, max } = asked.supply;
   return Math.abs(min - rated) > Math.abs(max - rated) ? min : max;
 }
 
-function termsOf(asked: DcErrorDemand, offset: OffsetReading | null, readings: Readings): ErrorTerm[] {
-  return [
-    offsetTerm(asked, offset, readings),
-    driftTerm(asked, offset, readings),
-    ...currentTerms(asked, readings),
-    commonModeTerm(asked, readings),
-    supplyTerm(asked, offset, readings),
-    outputTerm(asked, readings),
-  ];
+/** No drift beside an offset rated over temperature. */
+function termsOf(asked: ErrorQuestion, found: Known<DcErrorFound>, told: Told): ErrorTerm[] {
+  const { reading: offset, term } = found.offset();
+  const drift = offset?.overTemperature === true ? [] : [found.drift()];
+  const currents = currentTerms(asked, { bias: found.bias, offset: found.offsetCurrent, offsetOrClass: found.offsetCurrentOrClass, bounded: found.bounded }, told);
+  return [term, ...drift, ...currents, found.commonMode(), supplyTerm(asked, { offset, rejection: found.supply() }, told), found.output()];
 }
 
 function borrowedSum(terms: readonly Term[]): number {

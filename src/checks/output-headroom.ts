@@ -1,58 +1,104 @@
 import type { HeadroomDemand, HeadroomVertex } from '../demands/index.js';
-import { weakest } from '../parts/basis.js';
+import { weakest, type Basis } from '../parts/basis.js';
 import type { Side } from '../parts/headroom.js';
 import type { HeadroomReading } from '../parts/headroom-curve.js';
 import type { Readings } from '../parts/readings.js';
 import { meets } from '../verdicts/compare.js';
-import { bindingVertices } from './binding-vertices.js';
+import { bindingVertices, type Binding, type Curve } from './binding-vertices.js';
+import type { ComposedCheck, Known } from './check.js';
 import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
 /** Vertices with their room, and what the offset is multiplied by. */
 export type HeadroomVertices = Pick<HeadroomDemand, 'vertices' | 'noiseGain' | 'kelvin'>;
 
+/** What a finding about the head-room of one side is put together from; all of it is asked for what the stage asks. */
+export interface HeadroomFound {
+  readonly curve: HeadroomAtVertices;
+  readonly offset: Offset;
+  /** Null: not known, or of no account at one temperature. */
+  readonly drift: Term | null;
+}
+
+interface HeadroomAtVertices {
+  /** Of every vertex; empty where those that decide are enough. */
+  readonly readings: Binding['places'];
+  readonly binding: Binding | null;
+}
+
+interface Offset {
+  readonly term: Term | null;
+  readonly overTemperature: boolean;
+}
+
+/** Terms of a check of one side. */
+export function headroomTerms(side: Side): ComposedCheck<HeadroomVertices, HeadroomFound, VertexFindings>['terms'] {
+  return {
+    curve: ({ vertices }, readings) => atVertices(vertices, readings.headroom(side), readings),
+    offset: offsetAtOutput,
+    drift: driftAtOutput,
+  };
+}
+
+function atVertices(vertices: readonly HeadroomVertex[], curve: Curve, { brief }: Pick<Readings, 'brief'>): HeadroomAtVertices {
+  const binding = brief ? bindingVertices(vertices, curve) : null;
+  return { readings: binding === null ? vertices.map((vertex) => ({ vertex, reading: curve(vertex) })) : [], binding };
+}
+
+function offsetAtOutput({ noiseGain }: HeadroomVertices, readings: Readings): Offset {
+  const offset = readings.offset();
+  if (offset === null) return { term: null, overTemperature: false };
+  const how = readings.brief ? null : told(offset.how, times(noiseGain));
+  const term = { name: 'offset', value: noiseGain * offset.value, slot: offset.slot, basis: offset.basis, figure: { value: offset.printed ?? offset.value, unit: 'V' }, how };
+  return { term, overTemperature: offset.overTemperature };
+}
+
+function driftAtOutput({ noiseGain, kelvin }: HeadroomVertices, readings: Readings): Term | null {
+  const drift = kelvin === 0 ? null : readings.figure('offsetDrift');
+  if (drift === null) return null;
+  const how = readings.brief ? null : told(drift.how, `× ${kelvin} K`, times(noiseGain));
+  return { name: 'offset drift', value: noiseGain * drift.value * kelvin, slot: drift.slot, basis: drift.basis, figure: { value: drift.printed ?? drift.value, unit: 'V/K' }, how };
+}
+
+const told = (...steps: readonly (string | null)[]): string => steps.filter((step) => step !== null).join(', ');
+const times = (noiseGain: number): string => `× noise gain ${Number(noiseGain.toPrecision(4))}`;
+
 /** Head-room needed at every vertex: the part's curve at the current flowing there, plus the offset's share (M1 and M6). */
 export function judgeHeadroom(asked: HeadroomVertices, side: Side, readings: Readings): VertexFindings {
-  const curve = readings.headroom(side);
-  const share = offsetShare(asked, readings);
-  const binding = readings.brief ? bindingVertices(asked.vertices, curve) : null;
+  const { curve, offset, drift } = headroomTerms(side);
+  const found = { curve: () => curve(asked, readings), offset: () => offset(asked, readings), drift: () => drift(asked, readings) };
+  return headroomFinding(asked, found, { side, brief: readings.brief });
+}
+
+/** The same from terms that are worked out already. */
+export function headroomFinding(asked: HeadroomVertices, found: Known<HeadroomFound>, { side, brief }: Pick<At, 'side' | 'brief'>): VertexFindings {
+  const { readings, binding } = found.curve();
+  const share = offsetShare(asked, found);
   if (binding !== null) {
-    const findings = binding.places.map(({ vertex, reading }) => findingAt(vertex, { side, share, reading, brief: true }));
-    return { kind: 'vertices', findings, basis: weakest([binding.basis, ...share.terms.map(({ basis }) => basis)]) };
+    const findings = binding.places.map(({ vertex, reading }) => findingAt(vertex, { side, share, reading, brief }));
+    return { kind: 'vertices', findings, basis: weakest([binding.basis, share.basis]) };
   }
-  return {
-    kind: 'vertices',
-    findings: asked.vertices.map((vertex) => findingAt(vertex, { side, share, reading: curve(vertex), brief: readings.brief })),
-  };
+  return { kind: 'vertices', findings: readings.map(({ vertex, reading }) => findingAt(vertex, { side, share, reading, brief })) };
 }
 
 interface Share {
   /** What the offset takes of the room at the output, V; only the part that is known. */
   readonly terms: readonly Term[];
   readonly value: number;
+  readonly basis: Basis;
   /** Caution when offset or drift is not known, given the spare left. */
   caution(spare: number): string | null;
 }
 
-function offsetShare(asked: HeadroomVertices, readings: Readings): Share {
-  const { noiseGain, kelvin } = asked;
-  const offset = readings.offset();
-  const perKelvin = offset?.overTemperature === true || kelvin === 0 ? null : readings.figure('offsetDrift');
-  const terms: Term[] = [];
-  const times = `× noise gain ${Number(noiseGain.toPrecision(4))}`;
-  const told = (...steps: readonly (string | null)[]): string | null => (readings.brief ? null : steps.filter((step) => step !== null).join(', '));
-  if (offset !== null) {
-    const how = told(offset.how, times);
-    terms.push({ name: 'offset', value: noiseGain * offset.value, slot: offset.slot, basis: offset.basis, figure: { value: offset.printed ?? offset.value, unit: 'V' }, how });
-  }
-  if (perKelvin !== null && offset !== null) {
-    const how = told(perKelvin.how, `× ${kelvin} K`, times);
-    terms.push({ name: 'offset drift', value: noiseGain * perKelvin.value * kelvin, slot: perKelvin.slot, basis: perKelvin.basis, figure: { value: perKelvin.printed ?? perKelvin.value, unit: 'V/K' }, how });
-  }
-  const driftKnown = offset?.overTemperature === true || kelvin === 0 || perKelvin !== null;
+function offsetShare({ noiseGain, kelvin }: HeadroomVertices, found: Known<HeadroomFound>): Share {
+  const { term: offset, overTemperature } = found.offset();
+  const drift = overTemperature ? null : found.drift();
+  const terms = offset === null ? [] : drift === null ? [offset] : [offset, drift];
+  const driftKnown = overTemperature || kelvin === 0 || drift !== null;
   return {
     terms,
     value: terms.reduce((sum, term) => sum + term.value, 0),
+    basis: weakest(terms.map(({ basis }) => basis)),
     caution: (spare) => cautionFor(spare, { noiseGain, offsetKnown: offset !== null, driftKnown, kelvin }),
   };
 }
@@ -84,11 +130,11 @@ interface At {
 function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const { share, reading } = at;
   if (at.brief && reading.value !== null && meets(vertex.room, 0, 'at-most')) {
-    const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
+    const basis = weakest([reading.basis, share.basis]);
     return { kind: 'numbers', unit: 'V', sense: 'at-most', required: vertex.room, corner: vertex.corner, offered: reading.value + share.value, basis };
   }
   const common = { unit: 'V', sense: 'at-most' as const, required: vertex.room, corner: vertex.corner, turnsAt: turnsAt(vertex, at) };
-  const basis = weakest([reading.basis, ...share.terms.map((term) => term.basis)]);
+  const basis = weakest([reading.basis, share.basis]);
   if (reading.value === null) return beyond(vertex, at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.

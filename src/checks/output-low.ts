@@ -1,14 +1,18 @@
 import type { HeadroomDemand } from '../demands/index.js';
-import type { Check } from './check.js';
-import { judgeHeadroom } from './output-headroom.js';
+import type { VertexFindings } from '../verdicts/finding.js';
+import { composed } from './check.js';
+import { headroomFinding, headroomTerms, type HeadroomFound } from './output-headroom.js';
 
 /** Room the stage leaves the output above V- against what the part loses there at the current it must sink. */
-export const outputLow: Check<HeadroomDemand> = {
+export const outputLow = composed<HeadroomDemand, HeadroomFound, VertexFindings>({
   id: 'output-low',
   title: 'output low',
   unit: 'V',
   reads: ['outputLowHeadroom', 'offsetVoltage', 'offsetDrift'],
   hasMargin: false,
   asks: (demands) => demands['output-low'],
-  judge: (asked, readings) => judgeHeadroom(asked, 'low', readings),
-};
+  terms: headroomTerms('low'),
+  // The rooms are the stage's own: there is no limit beside them.
+  whole: (asked, found, told) => headroomFinding(asked, found, { side: 'low', brief: told.brief }),
+  finding: (_, findings) => findings,
+});

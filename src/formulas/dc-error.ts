@@ -125,6 +125,6 @@ export function followerGainError(rejection: number): number {
 }
 
 function finite(where: string, term: number): number {
-  requireWithin(where, { term }, {});
+  if (!Number.isFinite(term)) requireWithin(where, { term }, {});
   return term;
 }

@@ -46,7 +46,14 @@ export function headroomCurve(test: PartUnderTest, side: Side): (question: Headr
   const points = headroomPoints(test, side);
   const assumed = points.find(({ anywhere }) => anywhere);
   if (assumed !== undefined) return () => ({ value: assumed.value, bound: null, covers: null, basis: assumed.basis, slot: assumed.slot, how: assumed.how });
-  return (question) => combine(setsAround(points, side, question).map((set) => readSet(set, test.outlook, question)));
+  // Many vertices share a supply and what helps there.
+  const known = new Map<string, readonly PointSet[]>();
+  return (question) => {
+    const place = `${question.supply} ${question.assistingLoad}`;
+    const sets = known.get(place) ?? setsAround(points, side, question).map((set) => scaledFor(test.outlook, set));
+    known.set(place, sets);
+    return combine(sets.map((set) => readSet(set, test.outlook, question)));
+  };
 }
 
 /** The heaviest current any unassisted point of the side was measured at, A; points without a supply count as rated at `supply`. Null without points. */
@@ -58,6 +65,7 @@ export function heaviestPoint(test: PartUnderTest, side: Side, supply: number): 
 }
 
 interface PointSet {
+  /** As they count in the outlook. */
   readonly points: readonly Placed[];
   /** Factor of the pessimistic reading when the set is rated above the vertex' supply. */
   readonly scale: number;
@@ -92,13 +100,16 @@ function place(points: readonly HeadroomPoint[], side: Side, supply: number): Pl
   return placed.filter((point, at) => at === 0 || point.current > (placed[at - 1]?.current ?? 0));
 }
 
-function readSet(set: PointSet, outlook: Outlook, question: HeadroomQuestion): SetReading {
-  const scale = outlook === 'optimistic' ? 1 : set.scale;
-  const points = set.points.map((point) => ({ ...point, value: point.value * scale }));
+/** Only the pessimistic reading scales. */
+function scaledFor(outlook: Outlook, { points, scale }: PointSet): PointSet {
+  return outlook === 'optimistic' || scale === 1 ? { points, scale } : { points: points.map((point) => ({ ...point, value: point.value * scale })), scale };
+}
+
+function readSet({ points, scale }: PointSet, outlook: Outlook, question: HeadroomQuestion): SetReading {
   const heaviest = points.at(-1);
   if (heaviest === undefined) throw new RangeError('a head-room set without points');
-  const scaled = set.scale === 1 ? [] : [scale === 1 ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(set.scale.toPrecision(4))}`];
-  const estimated: Basis[] = set.scale === 1 ? [] : ['estimated'];
+  const scaled = scale === 1 ? [] : [outlook === 'optimistic' ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(scale.toPrecision(4))}`];
+  const estimated: Basis[] = scale === 1 ? [] : ['estimated'];
   const reached = question.current <= heaviest.current * (1 + TIGHT);
   const inside = reached ? interpolate(points, question.current) : beyond(points, outlook, question.current);
   return {

@@ -56,7 +56,8 @@ function placedOf(fit: SurveyedFit, judgedAt: (fit: SurveyedFit) => JudgedPart):
     proof: fit.isGuaranteed ? 'limits' : 'typical',
     merit: meritOf({ part: { price }, current, verdicts }),
     part: { tier: view.tier, price, family, get id() { return view.id(fit.position); } },
-    get confirm() { return judgedAt(fit).confirm; },
+    // With nothing but limits behind it there is nothing to confirm.
+    get confirm() { return fit.isGuaranteed ? [] : judgedAt(fit).confirm; },
   };
 }
 

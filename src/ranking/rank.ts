@@ -70,9 +70,12 @@ export const STEPS: readonly { readonly name: string; readonly compare: (a: Plac
   { name: 'merit', compare: (a, b) => b.merit.total - a.merit.total },
   { name: 'price', compare: (a, b) => unknownLast(priceInEuro(a), priceInEuro(b)) },
   { name: 'current', compare: (a, b) => unknownLast(a.current, b.current) },
-  { name: 'estimates', compare: (a, b) => a.confirm.length - b.confirm.length },
+  { name: 'estimates', compare: (a, b) => (isOneDie(a, b) ? 0 : a.confirm.length - b.confirm.length) },
   { name: 'id', compare: (a, b) => (a.part.id < b.part.id ? -1 : a.part.id > b.part.id ? 1 : 0) },
 ];
+
+/** Verdicts that are shared come from the same figures: there is the same to confirm, and no need to find out how much. */
+const isOneDie = (a: Placed, b: Placed): boolean => a.verdicts.every((verdict, at) => verdict === b.verdicts[at]);
 
 const FIRST: Record<Order, (a: Placed, b: Placed) => number> = {
   merit: () => 0,

@@ -43,7 +43,8 @@ export function outlineAndRank({ demands, circuit }: Marked, source: PartSource,
   return { run, counts: countsIn(screened, views), fit: rankSurveyed(screened, order) };
 }
 
-const viewsIn = ({ screening, parts }: PartSource): readonly ScreenView[] => screening?.views ?? viewsOf(parts);
+/** Without views of its own the parts are looked at, and only then. */
+const viewsIn = (source: PartSource): readonly ScreenView[] => source.screening?.views ?? viewsOf(source.parts);
 
 function countsIn({ fit, undecided, rejected }: Screened, views: readonly ScreenView[]): OutcomeCounts {
   return { parts: views.reduce((sum, { size }) => sum + size, 0), fit: fit.length, undecided: undecided.length, rejected: rejected.length };

@@ -1,9 +1,9 @@
 import type { ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
 import type { Segment, Step } from './decision-tree.js';
-import type { Question } from './question.js';
+import type { CodeAt, Question } from './question.js';
 
-/** One small set for all segments of a view: new memory costs more than the work done in it. */
+/** One small set for all segments of a view, whatever is asked of it: new memory costs more than the work done in it. */
 export interface Buffers {
   /** The answer of each question, part by part. */
   readonly answers: readonly Int32Array[];
@@ -12,37 +12,58 @@ export interface Buffers {
   readonly open: Int32Array;
   readonly distances: Float64Array;
   readonly current: Int32Array;
-  readonly codes: Map<number, Int32Array>;
+  /** By trait. */
+  readonly codes: (Column | undefined)[];
 }
 
-export function buffersFor(view: ScreenView, questions: number): Buffers {
-  const size = Math.min(view.segment, view.size);
-  const numbers = (): Int32Array => new Int32Array(size);
-  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), distances: new Float64Array(size), current: numbers(), codes: new Map() };
+interface Column {
+  readonly codes: Int32Array;
+  /** Whose codes they are now. */
+  segment: number;
 }
+
+const BUFFERS = new WeakMap<ScreenView, Buffers>();
+
+export function buffersFor(view: ScreenView, questions: number): Buffers {
+  const size = sizeIn(view);
+  const numbers = (): Int32Array => new Int32Array(size);
+  const before = BUFFERS.get(view) ?? { answers: [], sums: numbers(), open: numbers(), distances: new Float64Array(size), current: numbers(), codes: [] };
+  const buffers = { ...before, answers: Array.from({ length: questions }, (_, at) => before.answers[at] ?? numbers()) };
+  BUFFERS.set(view, buffers);
+  return buffers;
+}
+
+const sizeIn = (view: ScreenView): number => Math.min(view.segment, view.size);
 
 /** Codes of one trait in this segment, read when first asked for. */
 export function codesOf(view: ScreenView, segment: number, { codes }: Buffers): (trait: number) => Int32Array {
-  const here = new Map<number, Int32Array>();
   return (trait) => {
-    const known = here.get(trait);
-    if (known !== undefined) return known;
-    const buffer = codes.get(trait) ?? new Int32Array(Math.min(view.segment, view.size));
-    codes.set(trait, buffer);
-    view.codes(TRAITS[trait] ?? 'class', segment, buffer);
-    here.set(trait, buffer);
-    return buffer;
+    const column = (codes[trait] ??= { codes: new Int32Array(sizeIn(view)), segment: -1 });
+    if (column.segment !== segment) {
+      view.codes(TRAITS[trait] ?? 'class', segment, column.codes);
+      column.segment = segment;
+    }
+    return column.codes;
   };
 }
 
+interface Asked {
+  readonly count: number;
+  readonly codes: (trait: number) => Int32Array;
+  readonly only?: Int32Array | null;
+}
+
 /** What a question's tree is asked about one segment. */
-export function segmentOf(one: Question, { count, codes, only = null }: Pick<Segment, 'count' | 'codes'> & { readonly only?: Int32Array | null }): Segment {
-  return {
-    count, codes, only,
-    grow(at) {
-      const path: Step[] = [];
-      const leaf = one.answer((trait) => codes(trait)[at] ?? 0, path);
-      return { path, leaf };
-    },
+export function segmentOf(one: Question, { count, codes, only = null }: Asked): Segment {
+  const code = one.codes((trait, at) => codes(trait)[at] ?? 0);
+  return { count, only, code, grow: growing(one, code) };
+}
+
+/** Answers for a part of whose combination nothing is known yet. */
+export function growing(one: Question, code: CodeAt): Segment['grow'] {
+  return (at) => {
+    const path: Step[] = [];
+    const leaf = one.answer((trait) => code(trait, at), path);
+    return { path, leaf };
   };
 }

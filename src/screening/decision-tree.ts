@@ -17,24 +17,26 @@ export interface Grown {
  * answers form a tree, grown as combinations turn up, and each combination that is really looked at is answered once.
  */
 export interface DecisionTree {
-  /** The answer's number for each of the first `count` parts, or for those asked about. `codes(trait)` are theirs; `grow` answers for one of them. */
+  /** The answer's number for each of the first `count` parts, or for those asked about. `code(trait, at)` is what one of them has there; `grow` answers for it. */
   classify(segment: Segment, into: Int32Array): void;
+  /** The number of the answer for one part. */
+  answer(segment: Pick<Segment, 'code' | 'grow'>, at: number): number;
 }
 
 export interface Segment {
   readonly count: number;
   /** Places of the parts that are asked about; null: all of them. */
   readonly only: Int32Array | null;
-  codes(trait: number): Int32Array;
+  code(trait: number, at: number): number;
   grow(at: number): Grown;
 }
 
 /** The children of the root, and of a node no wider than this, stand in a table; those of others in a hash. */
 const NARROW = 32;
 
-/** `width(trait)` is how many codes a trait has. */
-export function decisionTree(width: (trait: number) => number): DecisionTree {
-  const nodes: Node[] = [];
+/** `width(trait)` is how many codes a trait has; null: not known beforehand. */
+export function decisionTree(width: (trait: number) => number | null): DecisionTree {
+  const nodes = nodeList();
   const sparse = sparseChildren();
   let table = new Int32Array(1 << 10);
   let used = 0;
@@ -43,24 +45,24 @@ export function decisionTree(width: (trait: number) => number): DecisionTree {
 
   const nodeFor = (trait: number): number => {
     const wide = width(trait);
-    const isDense = nodes.length === 0 || wide <= NARROW;
+    const isDense = wide !== null && (nodes.count() === 0 || wide <= NARROW);
     if (isDense && used + wide > table.length) {
       const larger = new Int32Array(Math.max(table.length * 2, used + wide));
       larger.set(table);
       table = larger;
     }
-    nodes.push({ trait, base: isDense ? used : -1 });
+    const node = nodes.add(trait, isDense ? used : -1);
     if (isDense) used += wide;
-    return nodes.length;
+    return node;
   };
   const childOf = (node: number, code: number): number => {
-    const base = nodes[node - 1]?.base ?? -1;
+    const base = nodes.base(node);
     return base < 0 ? sparse.get(node, code) : (table[base + code] ?? 0);
   };
   const setChild = (parent: Parent, child: number): void => {
     if (parent === null) root = child;
-    else if ((nodes[parent.node - 1]?.base ?? -1) < 0) sparse.set(parent.node, parent.code, child);
-    else table[(nodes[parent.node - 1]?.base ?? 0) + parent.code] = child;
+    else if (nodes.base(parent.node) < 0) sparse.set(parent.node, parent.code, child);
+    else table[nodes.base(parent.node) + parent.code] = child;
   };
   const insert = ({ path, leaf }: Grown): void => {
     let parent: Parent = null;
@@ -70,17 +72,17 @@ export function decisionTree(width: (trait: number) => number): DecisionTree {
         node = nodeFor(trait);
         setChild(parent, node);
       }
-      if (nodes[node - 1]?.trait !== trait) throw new RangeError('a check looked at other traits after the same findings');
+      if (nodes.trait(node) !== trait) throw new RangeError('a check looked at other traits after the same findings');
       parent = { node, code };
     }
     setChild(parent, -1 - leaf);
   };
   /** The answer for one part, growing the tree where it ends; 0: it was grown. */
-  const descend = (segment: Segment, at: number): number => {
+  const descend = (segment: Pick<Segment, 'code' | 'grow'>, at: number): number => {
     let child = root;
     while (child > 0) {
-      const { trait, base } = nodes[child - 1] ?? NO_NODE;
-      const code = segment.codes(trait)[at] ?? 0;
+      const base = nodes.base(child);
+      const code = segment.code(nodes.trait(child), at);
       child = base < 0 ? sparse.get(child, code) : (table[base + code] ?? 0);
     }
     if (child < 0) return child;
@@ -89,36 +91,54 @@ export function decisionTree(width: (trait: number) => number): DecisionTree {
     return -1 - grown.leaf;
   };
   return {
+    answer: (segment, at) => -1 - descend(segment, at),
     classify(segment, into) {
       const { only } = segment;
       const asked = only?.length ?? segment.count;
       if (asked === 0) return;
       const first = descend(segment, only?.[0] ?? 0);
-      const start = nodes[root - 1] ?? null;
-      if (start === null || start.base < 0) {
+      const base = root > 0 ? nodes.base(root) : -1;
+      if (base < 0) {
         for (let place = 0; place < asked; place += 1) {
           const at = only === null ? place : (only[place] ?? 0);
-          into[at] = -1 - (start === null ? first : descend(segment, at));
+          into[at] = -1 - (root < 0 ? first : descend(segment, at));
         }
         return;
       }
-      const codes = segment.codes(start.trait);
+      const trait = nodes.trait(root);
       for (let place = 0; place < asked; place += 1) {
         const at = only === null ? place : (only[place] ?? 0);
-        const child = table[start.base + (codes[at] ?? 0)] ?? 0;
+        const child = table[base + segment.code(trait, at)] ?? 0;
         into[at] = -1 - (child < 0 ? child : descend(segment, at));
       }
     },
   };
 }
 
-/** Stands for what cannot be: a child that is no node. */
-const NO_NODE: Node = { trait: 0, base: -1 };
+/** Nodes by number, from 1: the trait looked at, and where its children start in the table; -1: in the hash. */
+function nodeList() {
+  let traits = new Uint16Array(1 << 6);
+  let bases = new Int32Array(1 << 6);
+  let count = 0;
+  return {
+    count: (): number => count,
+    trait: (node: number): number => traits[node - 1] ?? 0,
+    base: (node: number): number => bases[node - 1] ?? -1,
+    add(trait: number, base: number): number {
+      if (count === traits.length) {
+        traits = doubled(traits, new Uint16Array(count * 2));
+        bases = doubled(bases, new Int32Array(count * 2));
+      }
+      traits[count] = trait;
+      bases[count] = base;
+      return ++count;
+    },
+  };
+}
 
-interface Node {
-  readonly trait: number;
-  /** Where its children start in the table; -1: in the hash. */
-  readonly base: number;
+function doubled<Numbers extends Uint16Array | Int32Array>(before: Numbers, larger: Numbers): Numbers {
+  larger.set(before);
+  return larger;
 }
 
 type Parent = { readonly node: number; readonly code: number } | null;

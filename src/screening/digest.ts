@@ -11,6 +11,8 @@ export const COUNTS = { fail: 1, weak: 1 << 10, unknown: 1 << 20 } as const;
 export interface Digests {
   /** Null: the check does not apply. */
   add(verdict: BriefVerdict | null): number;
+  /** The same for an answer whose number is known, unless it has its verdict already. */
+  settle(answer: number, verdict: () => BriefVerdict | null): void;
   /** By answer: what it adds to the part's sum, and to its distance from fitting. */
   readonly counts: readonly number[];
   readonly distances: readonly number[];
@@ -22,12 +24,17 @@ export function digests(nominalSupply: number): Digests {
   const counts: number[] = [];
   const distances: number[] = [];
   const passes: (Digest | null)[] = [];
+  const put = (answer: number, verdict: BriefVerdict | null): number => {
+    counts[answer] = verdict === null ? 0 : countOf(verdict);
+    distances[answer] = verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : 0;
+    passes[answer] = verdict?.outcome === 'pass' ? digestOf(verdict) : null;
+    return answer;
+  };
   return {
     counts, distances, passes,
-    add(verdict) {
-      counts.push(verdict === null ? 0 : countOf(verdict));
-      distances.push(verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : 0);
-      return passes.push(verdict?.outcome === 'pass' ? digestOf(verdict) : null) - 1;
+    add: (verdict) => put(counts.length, verdict),
+    settle(answer, verdict) {
+      if (counts[answer] === undefined) put(answer, verdict());
     },
   };
 }

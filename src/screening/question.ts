@@ -1,16 +1,22 @@
-import { CHECKS } from '../checks/index.js';
+import { CHECKS, type AnyCheck, type AnyComposition } from '../checks/index.js';
 import { CHECK_IDS, markOf } from '../demands/index.js';
 import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
 import type { Readings } from '../parts/readings.js';
+import { composedQuestion, termQuestion, type TermQuestion, wholeQuestion } from './composed-question.js';
 import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
 import { digests, type Digests } from './digest.js';
 import { briefVerdictOn, notBuilt, type Judging } from './judge.js';
 import { standIn, type StandIn } from './stand-in.js';
 
+/** The code of one part in a trait, or in whatever else a question looks at. */
+export type CodeAt = (trait: number, at: number) => number;
+
 /** Something asked of every part of a view, with the answers found so far. */
 export interface Question {
   readonly tree: DecisionTree;
+  /** What the question looks at, from the traits of the parts in one segment. */
+  codes(traits: CodeAt): CodeAt;
   /** Answers the part whose codes these are; what it looked at goes to `path`. */
   answer(codeOf: (trait: number) => number, path: Step[]): number;
 }
@@ -19,9 +25,11 @@ export interface Question {
 export interface CheckQuestion extends Question {
   readonly check: string;
   readonly digests: Digests;
+  /** Called for every answer before its digest is used. */
+  settle(answer: number): void;
 }
 
-type Both = readonly [Readings, Readings];
+export type Both = readonly [Readings, Readings];
 
 /** Every check the stage asks for, in the order of verdicts. What was found out for the stage asked before serves again where it asks the same. */
 export function checkQuestions(run: Judging, view: ScreenView, circuit: string): CheckQuestion[] {
@@ -31,7 +39,9 @@ export function checkQuestions(run: Judging, view: ScreenView, circuit: string):
     const mark = markOf(check.asked(demands), circuit);
     const before = kept.questions.get(check.id);
     if (before?.mark === mark) return before.question;
-    const question = checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) });
+    const question = check.composition === null
+      ? checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) })
+      : composedQuestion(demands, check, wholeFor(run, kept, { check, circuit, composition: check.composition }));
     kept.questions.set(check.id, { mark, question });
     return question;
   });
@@ -47,6 +57,8 @@ interface Kept {
   readonly standIn: StandIn;
   /** The last question of each check, by what the stage asked: a changed limit redoes the checks it touches, and no others. */
   readonly questions: Map<string, { readonly mark: string; readonly question: CheckQuestion }>;
+  /** The wholes of composed checks, by what the stage asks but for the limit. */
+  readonly wholes: Map<string, { readonly mark: string; readonly question: TermQuestion }>;
 }
 
 const KEPT = new WeakMap<ScreenView, Kept>();
@@ -55,7 +67,7 @@ function keptFor({ demands: { operating }, strict, classes }: Judging, view: Scr
   const surroundings = markOf([operating, strict, [...classes]], '');
   const before = KEPT.get(view);
   if (before?.surroundings === surroundings) return before;
-  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map() };
+  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map() };
   KEPT.set(view, kept);
   return kept;
 }
@@ -67,7 +79,8 @@ interface Asked {
 
 function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): CheckQuestion {
   const found = digests(run.demands.operating.nominalSupply);
-  return { check, digests: found, ...question(kept, (readings) => found.add(verdict(readings))) };
+  // Every answer has its verdict from the beginning.
+  return { check, digests: found, settle: () => undefined, ...question(kept, (readings) => found.add(verdict(readings))) };
 }
 
 /** A number read off the pessimistic readings of every part, by answer. */
@@ -76,9 +89,28 @@ export function valueQuestion(run: Judging, view: ScreenView, value: (worst: Rea
   return { values, ...question(keptFor(run, view), ([worst]) => values.push(value(worst)) - 1) };
 }
 
+interface Composed {
+  readonly check: AnyCheck;
+  readonly composition: AnyComposition;
+  readonly circuit: string;
+}
+
+/** Terms and whole of a composed check: a changed limit leaves them as they are. */
+function wholeFor({ demands }: Judging, kept: Kept, { check, composition, circuit }: Composed): TermQuestion {
+  const asked = check.asked(demands);
+  const mark = markOf(typeof asked === 'object' ? { ...asked, required: null, because: null } : asked, circuit);
+  const before = kept.wholes.get(check.id);
+  if (before?.mark === mark) return before.question;
+  const terms = composition.names.map((name) => termQuestion((ask) => question(kept, ask), (readings) => composition.term(name, demands, readings)));
+  const whole = wholeQuestion(demands, composition, terms);
+  kept.wholes.set(check.id, { mark, question: whole });
+  return whole;
+}
+
 function question({ view, standIn: { readings, become } }: Kept, decide: (readings: Both) => number): Question {
   return {
     tree: decisionTree((trait) => view.width(TRAITS[trait] ?? 'class')),
+    codes: (traits) => traits,
     answer(codeOf, path) {
       become((trait) => {
         const number = TRAIT_NUMBER.get(trait) ?? 0;

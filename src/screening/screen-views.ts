@@ -38,8 +38,8 @@ export function screenViews(run: Judging, views: readonly ScreenView[], request:
     places,
     judgedAt,
     fit: lazyList(places.length, (at) => judgedAt(member(places, at))),
-    undecided: joined(surveys, ({ undecided }) => undecided, judgedAt),
-    rejected: joined(surveys, rejectedIn, judgedAt),
+    undecided: joined(surveys, { count: ({ undecided }) => undecided.length, positions: ({ undecided }) => undecided }, judgedAt),
+    rejected: joined(surveys, { count: rejectedCount, positions: rejectedIn }, judgedAt),
     rejections: byFrequency(totals(surveys)),
     nearest: nearestOf(near, run.demands.operating.nominalSupply),
   };
@@ -57,26 +57,33 @@ function judgeOnce(run: Judging): SurveyedCatalog['judgedAt'] {
   };
 }
 
+interface Positions {
+  readonly count: (one: Survey) => number;
+  readonly positions: (one: Survey) => ArrayLike<number>;
+}
+
 /** The positions of all surveys one after another. Where they stand is found out when the list is first looked into. */
-function joined(surveys: readonly Survey[], positionsIn: (one: Survey) => Positions, judgedAt: SurveyedCatalog['judgedAt']): readonly JudgedPart[] {
-  const parts = surveys.map((one) => ({ view: one.view, positions: positionsIn(one) }));
-  const length = parts.reduce((sum, { positions }) => sum + positions.length, 0);
+function joined(surveys: readonly Survey[], { count, positions }: Positions, judgedAt: SurveyedCatalog['judgedAt']): readonly JudgedPart[] {
+  const length = surveys.reduce((sum, one) => sum + count(one), 0);
+  let found: readonly ArrayLike<number>[] | null = null;
   return lazyList(length, (at) => {
+    found ??= surveys.map(positions);
     let left = at;
-    for (const { view, positions } of parts) {
-      if (left < positions.length) return judgedAt({ view, position: member(positions, left) });
-      left -= positions.length;
+    for (const [number, { view }] of surveys.entries()) {
+      const places = found[number] ?? [];
+      if (left < places.length) return judgedAt({ view, position: member(places, left) });
+      left -= places.length;
     }
     throw new RangeError(`no part at ${at} of ${length}`);
   });
 }
 
-type Positions = ArrayLike<number>;
+const rejectedCount = ({ outcomes, fits, undecided }: Survey): number => outcomes.length - fits.length - undecided.length;
 
-function rejectedIn({ outcomes, fits, undecided }: Survey): Positions {
-  const rejected = new Uint32Array(outcomes.length - fits.length - undecided.length);
+function rejectedIn(one: Survey): Uint32Array {
+  const rejected = new Uint32Array(rejectedCount(one));
   let filled = 0;
-  outcomes.forEach((outcome, position) => {
+  one.outcomes.forEach((outcome, position) => {
     if (outcome === OUTCOME.rejected) rejected[filled++] = position;
   });
   return rejected;

@@ -2,7 +2,8 @@ import type { Figure, Parameter } from '../parts/figures.js';
 import type { Part, Tier } from '../parts/part.js';
 import type { ClassWorst, Outlook, PartUnderTest, ReadingRules } from '../parts/reading.js';
 import { readingsOf, type Readings } from '../parts/readings.js';
-import type { Piece, Trait } from '../parts/traits.js';
+import { TRAIT_NUMBER } from '../parts/screen-view.js';
+import { TRAITS, type Piece, type Trait } from '../parts/traits.js';
 import { remembering } from './remembering.js';
 
 /** Where a stand-in gets its pieces; asked once a trait, in the order they are first looked at. */
@@ -25,15 +26,17 @@ export interface StandIn {
 }
 
 export function standIn(tier: Tier, rules: StandInRules): StandIn {
-  const looked = new Map<Trait, Piece>();
+  // By trait; filled anew for every part, which a map takes longer for.
+  const looked = TRAITS.map((): Piece | null => null);
   const figures: Figure[] = [];
   let finder: PieceFinder | null = null;
   const look = (trait: Trait): Piece => {
-    const known = looked.get(trait);
-    if (known !== undefined) return known;
+    const number = TRAIT_NUMBER.get(trait) ?? 0;
+    const known = looked[number] ?? null;
+    if (known !== null) return known;
     if (finder === null) throw new RangeError('a stand-in that stands in for no part');
     const piece = finder(trait);
-    looked.set(trait, piece);
+    looked[number] = piece;
     if ('figures' in piece) figures.push(...piece.figures);
     return piece;
   };
@@ -42,7 +45,7 @@ export function standIn(tier: Tier, rules: StandInRules): StandIn {
   return {
     readings: [readings('pessimistic'), readings('optimistic')],
     become(find) {
-      looked.clear();
+      looked.fill(null);
       figures.length = 0;
       finder = find;
     },

@@ -1,10 +1,10 @@
 import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
 import type { Trait } from '../parts/traits.js';
 import { buffersFor, codesOf, segmentOf, type Buffers } from './buffers.js';
-import { costOf } from './cost.js';
 import { COUNTS, type Digest } from './digest.js';
 import type { Judging } from './judge.js';
 import { nearestKeeper, type Near } from './near.js';
+import { askWhileOpen, openPlan, type OpenPlan } from './open-parts.js';
 import { checkQuestions, valueQuestion, type CheckQuestion } from './question.js';
 
 /** A part that fits, with what its place in the order depends on. */
@@ -54,6 +54,7 @@ export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly =
     outcomes: new Uint8Array(view.size), fits: [], undecided: [], nearest: nearestKeeper(),
     fails: new Float64Array(questions.length),
     buffers: buffersFor(view, questions.length),
+    plan: openPlan(view, questions),
   };
   for (let segment = 0; segment * view.segment < view.size; segment += 1) surveySegment(counting, segment);
   const failing = new Map(questions.map(({ check }, at) => [check, counting.fails[at] ?? 0]));
@@ -72,46 +73,30 @@ interface Counting {
   readonly nearest: ReturnType<typeof nearestKeeper>;
   readonly fails: Float64Array;
   readonly buffers: Buffers;
+  /** In which order outcomes alone are asked for. */
+  readonly plan: OpenPlan;
 }
 
 function surveySegment(counting: Counting, segment: number): void {
-  const { view, questions, buffers } = counting;
+  const { view, questions, buffers, plan } = counting;
   const count = Math.min(view.segment, view.size - segment * view.segment);
   const codes = codesOf(view, segment, buffers);
-  buffers.sums.fill(0);
-  buffers.distances.fill(0);
   const ask = (at: number, only: Int32Array | null): void => {
     const [one, answers] = [questions[at], buffers.answers[at]];
     if (one === undefined || answers === undefined) return;
     one.tree.classify(segmentOf(one, { count, codes, only }), answers);
+    settle(one, { answers, count, only });
     addUp(counting, { one, at, answers, count, only });
   };
-  if (counting.outcomesOnly) askWhileOpen(counting, count, ask);
-  else questions.forEach((_, at) => ask(at, null));
+  if (counting.outcomesOnly) {
+    const left = askWhileOpen(plan, { segment, count, buffers, ask });
+    sortOutOpen(counting, { segment, count, codes, left });
+    return;
+  }
+  buffers.sums.fill(0);
+  buffers.distances.fill(0);
+  questions.forEach((_, at) => ask(at, null));
   sortOut(counting, { segment, count, codes });
-}
-
-/** The cheapest questions first, and each only about the parts that have not failed yet. */
-function askWhileOpen({ questions, buffers }: Counting, count: number, ask: (at: number, only: Int32Array | null) => void): void {
-  const { sums } = buffers;
-  const places = questions.map((_, at) => at).sort((a, b) => costOf(questions[a]?.check) - costOf(questions[b]?.check));
-  const open = buffers.open;
-  for (let part = 0; part < count; part += 1) open[part] = part;
-  let left = count;
-  for (const at of places) {
-    ask(at, open.subarray(0, left));
-    left = keepOpen(open, left, sums);
-  }
-}
-
-/** Closes up to the front what has not failed yet, and says how many that are. */
-function keepOpen(open: Int32Array, count: number, sums: Int32Array): number {
-  let left = 0;
-  for (let place = 0; place < count; place += 1) {
-    const part = open[place] ?? 0;
-    if (((sums[part] ?? 0) & (COUNTS.weak - 1)) === 0) open[left++] = part;
-  }
-  return left;
 }
 
 interface Answered {
@@ -120,6 +105,11 @@ interface Answered {
   readonly answers: Int32Array;
   readonly count: number;
   readonly only: Int32Array | null;
+}
+
+function settle(one: CheckQuestion, { answers, count, only }: Pick<Answered, 'answers' | 'count' | 'only'>): void {
+  const asked = only?.length ?? count;
+  for (let place = 0; place < asked; place += 1) one.settle(answers[only === null ? place : (only[place] ?? 0)] ?? 0);
 }
 
 /** Distances are added in the order of the verdicts, as they are for a part judged alone: the sums agree to the last bit. */
@@ -148,15 +138,30 @@ interface Place {
   readonly codes: (trait: number) => Int32Array;
 }
 
+/** All but those left open have failed. */
+function sortOutOpen(counting: Counting, { segment, count, codes, left }: Place & { readonly left: number }): void {
+  const { view, outcomes, undecided, buffers } = counting;
+  const first = segment * view.segment;
+  const fitting: number[] = [];
+  outcomes.fill(OUTCOME.rejected, first, first + count);
+  for (const at of buffers.open.subarray(0, left)) {
+    const isUndecided = (buffers.sums[at] ?? 0) >= COUNTS.unknown;
+    outcomes[first + at] = isUndecided ? OUTCOME.undecided : OUTCOME.fits;
+    if (isUndecided) undecided.push(first + at);
+    else fitting.push(at);
+  }
+  addFits(counting, { first, fitting, count, codes });
+}
+
 function sortOut(counting: Counting, { segment, count, codes }: Place): void {
-  const { view, outcomesOnly, outcomes, undecided, nearest, buffers } = counting;
+  const { view, outcomes, undecided, nearest, buffers } = counting;
   const first = segment * view.segment;
   const fitting: number[] = [];
   for (let at = 0; at < count; at += 1) {
     const sum = buffers.sums[at] ?? 0;
     if ((sum & (COUNTS.weak - 1)) !== 0) {
       outcomes[first + at] = OUTCOME.rejected;
-      if (!outcomesOnly) nearest.see(first + at, buffers.distances[at] ?? 0);
+      nearest.see(first + at, buffers.distances[at] ?? 0);
     } else if (sum >= COUNTS.unknown) {
       outcomes[first + at] = OUTCOME.undecided;
       undecided.push(first + at);

@@ -17,10 +17,10 @@ const vertex = fc.record({ room: fc.double({ min: -0.05, max: 1, noNaN: true }),
 const reading = fc.record({ value: fc.option(fc.double({ min: 0, max: 1, noNaN: true }), { freq: 12 }), basis: fc.constantFrom(...BASES) })
   .map(({ value, basis }): HeadroomReading => ({ value, basis, bound: value === null ? 0.02 : null, covers: value === null ? 1e-3 : null, slot: null, how: null }));
 
-/** A curve that need not rise with the current: nothing about it is taken for granted. */
+/** A curve that need not rise with the current: nothing about it is taken for granted but that it answers the same to the same question. */
 const curveOver = (vertices: readonly HeadroomVertex[], readings: readonly HeadroomReading[]): Curve => {
-  const known = new Map(vertices.map((one, at) => [one as unknown, readings[at]]));
-  return (question) => known.get(question) ?? { value: 0, bound: null, covers: null, basis: 'guaranteed', slot: null, how: null };
+  const known = new Map(vertices.map((one, at) => [one.current, readings[at]]));
+  return ({ current }) => known.get(current) ?? { value: 0, bound: null, covers: null, basis: 'guaranteed', slot: null, how: null };
 };
 
 function reader(curve: Curve, offset: number, brief: boolean): Readings {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { currentTerms, commonModeTerm, type ErrorTerm } from '../../src/checks/dc-error-terms.js';
+import { biasTerm, commonModeTerm, currentTerms, offsetCurrentTerm, type ErrorTerm } from '../../src/checks/dc-error-terms.js';
 import type { DcErrorDemand } from '../../src/demands/index.js';
 import type { Figure } from '../../src/parts/figures.js';
 import { readingsOf } from '../../src/parts/readings.js';
@@ -18,7 +18,14 @@ interface Asked {
 }
 
 function terms(figures: readonly Figure[], { demand = {}, outlook = 'pessimistic', classWorst }: Asked = {}): ErrorTerm[] {
-  return currentTerms({ ...ASKED, ...demand }, readingsOf(under(figures, { outlook, classWorst: classWorst ?? null })));
+  const asked = { ...ASKED, ...demand };
+  const readings = readingsOf(under(figures, { outlook, classWorst: classWorst ?? null }));
+  return currentTerms(asked, {
+    bias: () => biasTerm(asked, readings),
+    offset: () => offsetCurrentTerm(asked, readings.figure('offsetCurrent'), readings),
+    offsetOrClass: () => offsetCurrentTerm(asked, readings.figureOrClass('offsetCurrent'), readings),
+    bounded: () => (worst, best) => readings.bounded(worst, best),
+  }, readings);
 }
 
 const total = (all: readonly ErrorTerm[]): number => all.reduce((sum, one) => sum + (one.kind === 'value' ? one.term.value : 0), 0);

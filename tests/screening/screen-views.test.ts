@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { circuitMark, deriveDemands } from '../../src/demands/index.js';
-import { ORDERS, outlineAndRank, type RankedPart, screenAndRank } from '../../src/ranking/index.js';
+import { ORDERS, outlineAndRank, outlinesIn, type RankedPart, screenAndRank } from '../../src/ranking/index.js';
 import { buildStage, type Stage } from '../../src/stage/index.js';
 import { plausibleParts } from '../bench/plausible-part.js';
 import { dice } from '../simulate/random.js';
@@ -95,5 +95,33 @@ describe('one view asked again', () => {
         expect(again).toEqual(printedAs(shortlist(stage, rowSource(list), { ...ASKING, strict })));
       }
     }
+  });
+
+  it('has the outcomes of everything judged, however limits came and went before', () => {
+    const list = [...taken(13, 40), ...genericList.parts.filter((_, at) => at % 6 === 0)];
+    const text = readFileSync(join(FOLDER, 'soil-moisture-probe.yaml'), 'utf8');
+    const limit = fc.oneof(
+      fc.constantFrom('1 mV', '5 mV', '20 mV', '80 mV').map((value): [string, string] => ['limits.dcError', value]),
+      fc.constantFrom('2 µA', '90 µA', '2 mA').map((value): [string, string] => ['limits.supplyCurrent', value]),
+      fc.constantFrom('-20..60 °C', '0..85 °C').map((value): [string, string] => ['temperature', value]),
+    );
+    fc.assert(
+      fc.property(fc.array(fc.tuple(limit, limit, fc.boolean()), { minLength: 2, maxLength: 6 }), (asked) => {
+        const [source, rows] = [viewSource(list), rowSource(list)];
+        const outlines = outlinesIn(source, ASKING);
+        for (const [one, other, isWhole] of asked) {
+          const stage = stageOf(text, one[0] === other[0] ? [one] : [one, other]);
+          const marked = { demands: deriveDemands(stage), circuit: circuitMark(stage) };
+          if (isWhole) screenAndRank(marked, source, ASKING);
+          const { counts, first, ids } = outlines(marked);
+          const fresh = outlinesIn(viewSource(list), ASKING)(marked);
+          const judged = screenAndRank(marked, rows, ASKING);
+          const fit = judged.fit.flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
+          expect({ counts, first, ids }).toEqual({ counts: { parts: list.length, fit: fit.length, undecided: judged.screened.undecided.length, rejected: judged.screened.rejected.length }, first: fit[0] ?? null, ids: fit });
+          expect(ids).toEqual(fresh.ids);
+        }
+      }),
+      { numRuns: 12, seed: 3 },
+    );
   });
 });
