@@ -67,5 +67,5 @@ export { readStage, stageReader } from './spec/read.js';
 export { renderStageHelp } from './spec/schema.js';
 export { readSwept, sweptOverride, type SweptField } from './spec/sweep.js';
 export type { Override, SpecResult, StageSpec, Topology } from './spec/spec.js';
-export { buildStage, type Stage, type StageResult } from './stage/index.js';
+export { buildStage, withLimits, type Built, type Stage, type StageResult } from './stage/index.js';
 export type { Verdict } from './verdicts/verdict.js';

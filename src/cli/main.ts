@@ -1,5 +1,10 @@
+import { setFlagsFromString } from 'node:v8';
 import { EXIT } from './exit-code.js';
+import { lateOptimising } from './late-optimising.js';
 import { runCommandLine } from './run.js';
+
+const flag = lateOptimising(process.versions.v8);
+if (flag !== null) setFlagsFromString(flag);
 
 const answer = { unwritable: false };
 

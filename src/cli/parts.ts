@@ -64,8 +64,8 @@ function failingProblems(check: string, stage: string | undefined): Problem[] {
   return problems;
 }
 
-function failingChecks(report: ReturnType<typeof shortlist>): Map<string, string[]> {
-  return new Map(report.rejected.map((one) => [one.part.id, one.verdicts.filter((verdict) => verdict.outcome === 'fail').map((verdict) => verdict.check)]));
+function failingChecks(report: ReturnType<typeof shortlist>): Map<string, readonly string[]> {
+  return new Map(report.rejected.map((one) => [one.part.id, one.deciding]));
 }
 
 function matches(part: Part, words: readonly string[]): boolean {

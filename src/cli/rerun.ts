@@ -1,4 +1,4 @@
-import { buildStage, movableInputs, stageReader, type Changing, type Override, type Rerun, type StageSpec } from '../index.js';
+import { buildStage, movableInputs, stageReader, withLimits, type Built, type Changing, type Override, type Rerun, type Stage, type StageSpec } from '../index.js';
 
 /** A stage as a command was given it: the text of the file, null without one, and the options over it. */
 export interface GivenStage {
@@ -13,16 +13,25 @@ export interface GivenStage {
 export function rerunOf({ text, overrides }: GivenStage): Rerun {
   const read = stageReader(text);
   const known = new Map<string, ReturnType<Rerun>>();
+  let last: Built | null = null;
   return (more) => {
     const key = more.map(({ path, text: value }) => `${path}=${value}`).join('\n');
     const tried = known.get(key);
     if (tried !== undefined) return tried;
     const spec = read([...overrides, ...more]);
-    const built = spec.ok ? buildStage(spec.spec) : spec;
-    const stage = built.ok && 'stage' in built ? built.stage : null;
+    const stage: Stage | null = spec.ok ? stageOf(spec.spec, last) : null;
+    if (spec.ok && stage !== null) last = { spec: spec.spec, stage };
     known.set(key, stage);
     return stage;
   };
+}
+
+/** Built, or taken from the stage tried before where only the value of a limit differs. */
+function stageOf(spec: StageSpec, last: Built | null): Stage | null {
+  const kept = last === null ? null : withLimits(last, spec);
+  if (kept !== null) return kept;
+  const built = buildStage(spec);
+  return built.ok ? built.stage : null;
 }
 
 /** What a search for changes may use. */

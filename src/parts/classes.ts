@@ -6,8 +6,23 @@ import type { ClassWorst, Operating } from './reading.js';
 /** Figures that may be borrowed from a class: terms of the DC error and of the noise. */
 export const BORROWABLE = ['commonModeRejection', 'supplyRejection', 'openLoopGain', 'offsetDrift', 'offsetCurrent', 'noiseCorner', 'currentNoise'] as const satisfies readonly Parameter[];
 
+type Classes = ReadonlyMap<string, ClassWorst>;
+
+/** The last answer about each list: many stages in a row stand in the same surroundings. */
+const LAST = new WeakMap<readonly Part[], { readonly operating: Operating; readonly classes: Classes }>();
+
 /** Per class, the worst figure of its generic sets under the stage's conditions. */
-export function classesOf(parts: readonly Part[], operating: Operating): ReadonlyMap<string, ClassWorst> {
+export function classesOf(parts: readonly Part[], operating: Operating): Classes {
+  const last = LAST.get(parts);
+  if (last !== undefined && isSame(last.operating, operating)) return last.classes;
+  const classes = worstIn(parts, operating);
+  LAST.set(parts, { operating, classes });
+  return classes;
+}
+
+const isSame = (one: Operating, other: Operating): boolean => one.coldest === other.coldest && one.hottest === other.hottest && one.nominalSupply === other.nominalSupply;
+
+function worstIn(parts: readonly Part[], operating: Operating): Classes {
   const classes = new Map<string, Partial<Record<Parameter, number>>>();
   for (const part of parts) {
     if (part.tier !== 'generic' || part.class === null) continue;

@@ -46,14 +46,15 @@ export function headroomCurve(test: PartUnderTest, side: Side): (question: Headr
   const points = headroomPoints(test, side);
   const assumed = points.find(({ anywhere }) => anywhere);
   if (assumed !== undefined) return () => ({ value: assumed.value, bound: null, covers: null, basis: assumed.basis, slot: assumed.slot, how: assumed.how });
-  // Many vertices share a supply and what helps there.
+  // The vertices of a stage share a few supplies: the sets are laid once for each.
   const known = new Map<string, readonly PointSet[]>();
-  return (question) => {
-    const place = `${question.supply} ${question.assistingLoad}`;
-    const sets = known.get(place) ?? setsAround(points, side, question).map((set) => scaledFor(test.outlook, set));
-    known.set(place, sets);
-    return combine(sets.map((set) => readSet(set, test.outlook, question)));
+  const setsFor = (question: HeadroomQuestion): readonly PointSet[] => {
+    const key = `${question.supply} ${question.assistingLoad}`;
+    const sets = known.get(key) ?? setsAround(points, { side, outlook: test.outlook }, question);
+    known.set(key, sets);
+    return sets;
   };
+  return (question) => combine(setsFor(question).map((set) => readSet(set, test.outlook, question)));
 }
 
 /** The heaviest current any unassisted point of the side was measured at, A; points without a supply count as rated at `supply`. Null without points. */
@@ -67,23 +68,32 @@ export function heaviestPoint(test: PartUnderTest, side: Side, supply: number): 
 interface PointSet {
   /** As they count in the outlook. */
   readonly points: readonly Placed[];
-  /** Factor of the pessimistic reading when the set is rated above the vertex' supply. */
-  readonly scale: number;
+  /** What was done to them, in words; none where the set is rated at or below the vertex' supply. */
+  readonly scaled: readonly string[];
+}
+
+interface Read {
+  readonly side: Side;
+  readonly outlook: Outlook;
 }
 
 /** The sets that bound this vertex: rated nearest at or below its supply, and nearest above it. */
-function setsAround(points: readonly HeadroomPoint[], side: Side, question: HeadroomQuestion): PointSet[] {
+function setsAround(points: readonly HeadroomPoint[], { side, outlook }: Read, question: HeadroomQuestion): PointSet[] {
   const counting = points.filter((point) => counts(point, question));
   const ratings = [...new Set(counting.map((point) => point.supply ?? question.supply))].sort((a, b) => a - b);
   const below = ratings.filter((rating) => rating <= question.supply * (1 + TIGHT)).at(-1);
   const above = ratings.find((rating) => rating > question.supply * (1 + TIGHT));
-  const set = (rating: number, scale: number): PointSet => ({
-    points: place(counting.filter((point) => (point.supply ?? question.supply) === rating), side, rating),
-    scale,
-  });
+  const set = (rating: number, scale: number): PointSet => scaledSet(place(counting.filter((point) => (point.supply ?? question.supply) === rating), side, rating), outlook, scale);
   const sets = below === undefined ? [] : [set(below, 1)];
   if (above === undefined || question.supply <= THRESHOLD) return sets;
   return [...sets, set(above, (above - THRESHOLD) / (question.supply - THRESHOLD))];
+}
+
+/** `scale`: factor of the pessimistic reading when the set is rated above the vertex' supply. */
+function scaledSet(points: readonly Placed[], outlook: Outlook, scale: number): PointSet {
+  const taken = outlook === 'optimistic' ? 1 : scale;
+  const words = taken === 1 ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(scale.toPrecision(4))}`;
+  return { points: points.map((point) => ({ ...point, value: point.value * taken })), scaled: scale === 1 ? [] : [words] };
 }
 
 function counts(point: HeadroomPoint, question: HeadroomQuestion): boolean {
@@ -100,16 +110,10 @@ function place(points: readonly HeadroomPoint[], side: Side, supply: number): Pl
   return placed.filter((point, at) => at === 0 || point.current > (placed[at - 1]?.current ?? 0));
 }
 
-/** Only the pessimistic reading scales. */
-function scaledFor(outlook: Outlook, { points, scale }: PointSet): PointSet {
-  return outlook === 'optimistic' || scale === 1 ? { points, scale } : { points: points.map((point) => ({ ...point, value: point.value * scale })), scale };
-}
-
-function readSet({ points, scale }: PointSet, outlook: Outlook, question: HeadroomQuestion): SetReading {
+function readSet({ points, scaled }: PointSet, outlook: Outlook, question: HeadroomQuestion): SetReading {
   const heaviest = points.at(-1);
   if (heaviest === undefined) throw new RangeError('a head-room set without points');
-  const scaled = scale === 1 ? [] : [outlook === 'optimistic' ? 'rated at a higher supply, as printed' : `scaled from a higher supply × ${Number(scale.toPrecision(4))}`];
-  const estimated: Basis[] = scale === 1 ? [] : ['estimated'];
+  const estimated: Basis[] = scaled.length === 0 ? [] : ['estimated'];
   const reached = question.current <= heaviest.current * (1 + TIGHT);
   const inside = reached ? interpolate(points, question.current) : beyond(points, outlook, question.current);
   return {

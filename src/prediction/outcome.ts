@@ -9,6 +9,7 @@ import { idealTransfer, linearStage, type LinearStage } from './equations.js';
 import { isLoadUnknown, loopFrequency } from './loop-facts.js';
 import { noiseAt } from './noise.js';
 import { notesOf } from './notes.js';
+import { once } from './once.js';
 import { overTime, type OverTime } from './over-time.js';
 import type { Form, Predicted, Results } from './prediction.js';
 import type { Run } from './run.js';
@@ -24,21 +25,23 @@ export interface Told {
 }
 
 /** The stage with one outcome of the part's figures. */
-export function outcomeOf(stage: Stage, part: Part, { form, rules }: { readonly form: Outcome; readonly rules: ReadingRules }): Told {
-  const corner = cornerOf(stage, form);
+export function outcomeOf(stage: Stage, part: Part, { form: outcome, rules }: { readonly form: Outcome; readonly rules: ReadingRules }): Told {
+  const corner = cornerOf(stage, outcome);
   const kelvin = Math.max(Math.abs(stage.temperature.min - 25), Math.abs(stage.temperature.max - 25));
-  const amplifier = amplifierOf(part, rules, { form, place: { kelvin, supply: stage.supply.min } });
+  const amplifier = amplifierOf(part, rules, { form: outcome, place: { kelvin, supply: stage.supply.min } });
   const at = { supply: corner.supply, reference: corner.reference };
   if (amplifier.gainBandwidth === null) {
     return { form: { at, figures: amplifier.used, results: nothing(stage, words.missing(['gainBandwidth'])), notes: [] }, over: null, linear: null, around: null };
   }
   const { around, linear } = equationsOf(stage, amplifier, amplifier.gainBandwidth);
   const stable = stage.response.kind === 'oscillator' || isStable(linear);
-  const run = runOf({ stage, form, amplifier, around, linear, corner });
+  const run = runOf({ stage, form: outcome, amplifier, around, linear, corner });
   const over = stable ? overTime(run) : null;
-  const small = stage.response.kind === 'oscillator' ? {} : smallSignal(run, stable);
-  const results = { ...small, ...(over?.results ?? unstableResults(stage)) };
-  return { form: { at, figures: amplifier.used, results, notes: notesOf(run) }, over, linear: stable ? linear : null, around };
+  const form = once((): Form => {
+    const small = stage.response.kind === 'oscillator' ? {} : smallSignal(run, stable);
+    return { at, figures: amplifier.used, results: { ...small, ...(over?.results ?? unstableResults(stage)) }, notes: notesOf(run) };
+  });
+  return { get form() { return form(); }, over, linear: stable ? linear : null, around };
 }
 
 function equationsOf(stage: Stage, amplifier: Amplifier, gainBandwidth: number): { around: Around; linear: LinearStage } {

@@ -3,6 +3,7 @@ import type { Parameter } from '../parts/figures.js';
 import { idealTransfer } from './equations.js';
 import { oscillation } from './oscillation.js';
 import { isLoadUnknown, loopFrequency } from './loop-facts.js';
+import { once } from './once.js';
 import type { Predicted, Results, Waveform } from './prediction.js';
 import { rampRun } from './ramp.js';
 import { words } from './reasons.js';
@@ -29,10 +30,10 @@ export function overTime(run: Run): OverTime {
   if (stage.response.kind === 'oscillator') return oscillating(run);
   if (stage.response.kind === 'integrator' && stage.response.window !== null) return ramping(run);
   const isEdge = stage.shape === 'step' || stage.shape === 'pulse';
-  const stepped = stage.response.kind === 'integrator' && stage.resistors === null ? { results: { settling: absent(words.noRest) }, wave: null } : stepping(run);
-  if (isEdge) return { ...stepped, kind: 'step' };
+  const stepped = once(() => (stage.response.kind === 'integrator' && stage.resistors === null ? { results: { settling: absent(words.noRest) }, wave: null } : stepping(run)));
+  if (isEdge) return { ...stepped(), kind: 'step' };
   const waved = sine(run);
-  return { results: { ...stepped.results, ...waved.results }, wave: waved.wave, kind: 'sine' };
+  return { get results() { return { ...stepped().results, ...waved.results }; }, wave: waved.wave, kind: 'sine' };
 }
 
 /** What a wave tells. */

@@ -4,6 +4,7 @@ import type { ReadingRules } from '../parts/reading.js';
 import type { Stage } from '../stage/index.js';
 import { idealTransfer } from './equations.js';
 import { modelLimits } from './model-limits.js';
+import { once } from './once.js';
 import { outcomeOf, type Told } from './outcome.js';
 import type { FrequencyResponse, Prediction, Waveform } from './prediction.js';
 import { gridOf, responseOver } from './small-signal.js';
@@ -16,19 +17,21 @@ const RESPONSE_POINTS = 161;
 
 /**
  * The stage with this part in it, simulated in the typical and in the guaranteed worst outcome of its figures. A figure that is missing
- * takes away what depends on it, with the reason; the rest is predicted all the same.
+ * takes away what depends on it, with the reason; the rest is predicted all the same. What is costly is made when it is first looked at.
  */
 export function predictStage(stage: Stage, part: Part, rules: ReadingRules): Prediction {
   const typical = outcomeOf(stage, part, { form: 'typical', rules });
   const worst = outcomeOf(stage, part, { form: 'worst', rules });
+  const waveform = once(() => waveformOf(typical, worst));
+  const response = once(() => responseOf(stage, typical, worst));
   return {
     stage,
     part,
     wanted: wantedOf(stage, { gain: idealGain(stage, typical) }),
-    typical: typical.form,
-    worst: worst.form,
-    waveform: waveformOf(typical, worst),
-    response: responseOf(stage, typical, worst),
+    get typical() { return typical.form; },
+    get worst() { return worst.form; },
+    get waveform() { return waveform(); },
+    get response() { return response(); },
     limits: modelLimits(stage),
   };
 }

@@ -1,5 +1,6 @@
 import { magnitude, phase, type Complex } from '../formulas/complex.js';
 import { idealTransfer, statesAt } from './equations.js';
+import { least, most } from './extremes.js';
 import { limitsOf } from './limits-of.js';
 import { walk, type Place, type Walk } from './march.js';
 import type { Run, Wave } from './run.js';
@@ -61,8 +62,8 @@ function settledPeriod(going: Walk, { from, step, length }: { readonly from: Pla
   let last = onePeriod(going, from, { step, length });
   for (let count = 1; count < MOST_PERIODS; count += 1) {
     const next = onePeriod(going, last.end, { step, length });
-    const swing = Math.max(...next.output) - Math.min(...next.output);
-    const change = Math.max(...next.output.map((value, at) => Math.abs(value - (last.output[at] ?? 0))));
+    const swing = most(next.output) - least(next.output);
+    const change = next.output.reduce((largest, value, at) => Math.max(largest, Math.abs(value - (last.output[at] ?? 0))), 0);
     if (change <= SETTLED * swing) return next;
     last = next;
   }

@@ -49,6 +49,19 @@ const SCAN = 600;
 
 /** Looked for from far below the loop's own frequency to far above it; null when the gain never falls by 3 dB there. */
 export function bandOf(stage: LinearStage, about: number): Band | null {
+  const known = BANDS.get(stage) ?? new Map<number, Band | null>();
+  BANDS.set(stage, known);
+  const before = known.get(about);
+  if (before !== undefined) return before;
+  const found = bandFound(stage, about);
+  known.set(about, found);
+  return found;
+}
+
+/** Of each stage by where it was looked for: the small signal and the step both ask. */
+const BANDS = new WeakMap<LinearStage, Map<number, Band | null>>();
+
+function bandFound(stage: LinearStage, about: number): Band | null {
   const rest = gainAtRest(stage);
   if (rest === null || rest === 0) return null;
   const size = (frequency: number): number => magnitude(transferAt(stage, frequency) ?? { re: NaN, im: NaN }) / Math.abs(rest);

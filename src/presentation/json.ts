@@ -18,13 +18,27 @@ const SCHEMA_VERSION = 1;
 
 /** A JSON document: SI base units as numbers, unknown as null with a reason. Ends with one newline. */
 export function document(schema: string, body: Readonly<Record<string, unknown>>): string {
-  return `${JSON.stringify({ schema: `railfit/${schema}`, schemaVersion: SCHEMA_VERSION, ...body }, null, 2)}\n`;
+  return printed(documentOf(schema, body));
 }
 
-export function shortlistJson(report: Report, options: { readonly top: number; readonly all: boolean }): string {
+/** The same before it is printed, for a document that stands in another or on one line. */
+export const documentOf = (schema: string, body: Readonly<Record<string, unknown>>): object => ({ schema: `railfit/${schema}`, schemaVersion: SCHEMA_VERSION, ...body });
+
+const printed = (one: object): string => `${JSON.stringify(one, null, 2)}\n`;
+
+export const shortlistJson = (report: Report, options: ShortlistCut): string => printed(shortlistDocument(report, options));
+
+/** How much of a long list is told. */
+export interface ShortlistCut {
+  readonly top: number;
+  readonly all: boolean;
+}
+
+/** What `shortlist --json` prints. */
+export function shortlistDocument(report: Report, options: ShortlistCut): object {
   const origin: OriginOf = (part, slot) => report.origin(part, slot);
   const judged = (one: JudgedPart): object => judgedJson(one, origin);
-  return document('shortlist', {
+  return documentOf('shortlist', {
     ...demandsBody(report),
     counts: report.counts,
     fit: report.fit.slice(0, options.top).map((one) => rankedJson(one, origin)),

@@ -36,9 +36,16 @@ export function priceInEuro({ part }: Pick<Weighed, 'part'>): number | null {
   return part.price?.currency === 'EUR' ? part.price.amount : null;
 }
 
-function marginShare(judged: Weighed): number {
-  const scores = judged.verdicts.map(comfortOf).filter((score) => score !== null);
-  return scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
+/** Of verdicts that were weighed before: prices and weights are tried by the dozen, and the verdicts stay. */
+const MARGINS = new WeakMap<Weighed['verdicts'], number>();
+
+function marginShare({ verdicts }: Weighed): number {
+  const known = MARGINS.get(verdicts);
+  if (known !== undefined) return known;
+  const scores = verdicts.map(comfortOf).filter((score) => score !== null);
+  const share = scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
+  MARGINS.set(verdicts, share);
+  return share;
 }
 
 /** Unknown counts as the floor. */

@@ -41,8 +41,8 @@ export function placeOf(judged: JudgedPart, fit: readonly RankedPart[], order: O
   return { rank: leader, of: others.length + (kin === undefined ? 1 : 0) };
 }
 
-function candidateOf(judged: JudgedPart, weights?: ShareWeights): Candidate {
-  return { ...judged, merit: meritOf(judged, weights), tightest: tightestOf(judged) };
+function candidateOf(judged: JudgedPart): Candidate {
+  return { ...judged, merit: meritOf(judged), tightest: tightestOf(judged) };
 }
 
 /** The step that decides between two parts that fit, and its sign: below zero, the first is ahead. The order asked for is a step of its own. */
@@ -53,7 +53,7 @@ export interface Decision {
 
 /** How two parts that fit stand to each other in this order, with shares weighed otherwise where that is asked. */
 export function decisionBetween(order: Order, [one, other]: readonly [JudgedPart, JudgedPart], weights?: ShareWeights): Decision {
-  const [a, b] = [candidateOf(one, weights), candidateOf(other, weights)];
+  const [a, b] = [placedOf(one, weights), placedOf(other, weights)];
   const asked = FIRST[order](a, b);
   if (asked !== 0) return { by: order, sign: Math.sign(asked) };
   for (const { name, compare } of STEPS) {
@@ -61,6 +61,11 @@ export function decisionBetween(order: Order, [one, other]: readonly [JudgedPart
     if (difference !== 0) return { by: name, sign: Math.sign(difference) };
   }
   return { by: 'id', sign: 0 };
+}
+
+/** What places a part in the order, with shares weighed as asked. */
+function placedOf({ part, current, verdicts, proof, confirm }: JudgedPart, weights?: ShareWeights): Placed {
+  return { part, current, verdicts, proof, confirm, merit: meritOf({ part, current, verdicts }, weights) };
 }
 
 /** What decides between two: the steps of the order, each 0 when they are equal there. */

@@ -24,13 +24,18 @@ interface Column {
 
 const BUFFERS = new WeakMap<ScreenView, Buffers>();
 
+/** Another survey of the view writes over them. */
 export function buffersFor(view: ScreenView, questions: number): Buffers {
-  const size = sizeIn(view);
-  const numbers = (): Int32Array => new Int32Array(size);
-  const before = BUFFERS.get(view) ?? { answers: [], sums: numbers(), open: numbers(), distances: new Float64Array(size), current: numbers(), codes: [] };
-  const buffers = { ...before, answers: Array.from({ length: questions }, (_, at) => before.answers[at] ?? numbers()) };
+  const before = BUFFERS.get(view) ?? newBuffers(view, 0);
+  const buffers = { ...before, answers: Array.from({ length: questions }, (_, at) => before.answers[at] ?? new Int32Array(sizeIn(view))) };
   BUFFERS.set(view, buffers);
   return buffers;
+}
+
+/** A set that no other survey writes over. */
+export function newBuffers(view: ScreenView, questions: number): Buffers {
+  const numbers = (): Int32Array => new Int32Array(sizeIn(view));
+  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), distances: new Float64Array(sizeIn(view)), current: numbers(), codes: [] };
 }
 
 const sizeIn = (view: ScreenView): number => Math.min(view.segment, view.size);

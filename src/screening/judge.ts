@@ -52,6 +52,7 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
     proof: outcome === 'fits' ? (verdicts.every((verdict) => verdict.basis === 'guaranteed') ? 'limits' : 'typical') : null,
     likely: outcome === 'undecided' && isLikely(run, part),
     verdicts,
+    deciding: decidingOf(verdicts, outcome),
     confirm: outcome === 'fits' ? confirmations(verdicts) : [],
     hazards: hazardsOf(part, run.demands),
     current: worst.figure('quiescentCurrent')?.value ?? null,
@@ -99,6 +100,11 @@ export function notBuilt(demand: UnbuiltDemand): Verdict {
 export function outcomeOf(verdicts: readonly Verdict[]): PartOutcome {
   if (verdicts.some((verdict) => verdict.outcome === 'fail')) return 'does-not-fit';
   return verdicts.some((verdict) => verdict.outcome === 'unknown') ? 'undecided' : 'fits';
+}
+
+function decidingOf(verdicts: readonly Verdict[], outcome: PartOutcome): string[] {
+  const decisive = outcome === 'undecided' ? 'unknown' : 'fail';
+  return verdicts.filter((verdict) => verdict.outcome === decisive).map(({ check }) => check);
 }
 
 /** Likely: with every missing figure taken from its class, each generic set of the class in turn, all checks would pass. */

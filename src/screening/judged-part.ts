@@ -30,6 +30,8 @@ export interface JudgedPart {
   /** Undecided only: with its class's figures it would pass. */
   readonly likely: boolean;
   readonly verdicts: readonly Verdict[];
+  /** Ids of the checks the outcome rests on: those that fail, of an undecided part those that are open; none where all pass. */
+  readonly deciding: readonly string[];
   readonly confirm: readonly Confirmation[];
   /** What can go wrong though every check passes. */
   readonly hazards: readonly PartHazard[];

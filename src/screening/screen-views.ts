@@ -1,11 +1,13 @@
 import type { Demands } from '../demands/index.js';
 import type { ScreenView } from '../parts/screen-view.js';
+import { decidingIn } from './deciding.js';
 import { judgePart, type Judging } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
 import { lazyList } from './lazy-list.js';
 import { nearestOf } from './nearest.js';
 import { byFrequency, type Screened } from './screen.js';
 import { OUTCOME, survey, type Survey, type SurveyedFit, type SurveyRequest } from './survey.js';
+import { surveyedPart } from './surveyed-part.js';
 
 /** Demands with the mark of the circuit they belong to (`circuitMark`). */
 export interface Marked {
@@ -30,7 +32,7 @@ export interface SurveyedCatalog extends Screened {
 
 /** The same answer as `screen` over all parts of the views, in their order. */
 export function screenViews(run: Judging, views: readonly ScreenView[], request: SurveyRequest): SurveyedCatalog {
-  const surveys = views.map((view) => survey(run, view, request));
+  const surveys = views.filter(({ size }) => size > 0).map((view) => survey(run, view, request));
   const judgedAt = judgeOnce(run);
   const places = surveys.flatMap(({ fits }) => fits);
   const near = surveys.flatMap(({ view, nearest }) => nearest.map(({ position }) => judgedAt({ view, position })));
@@ -39,7 +41,7 @@ export function screenViews(run: Judging, views: readonly ScreenView[], request:
     judgedAt,
     fit: lazyList(places.length, (at) => judgedAt(member(places, at))),
     undecided: joined(surveys, { count: ({ undecided }) => undecided.length, positions: ({ undecided }) => undecided }, judgedAt),
-    rejected: joined(surveys, { count: rejectedCount, positions: rejectedIn }, judgedAt),
+    rejected: joined(surveys, { count: rejectedCount, positions: rejectedIn }, request.outcomesOnly === true ? judgedAt : listedAt(run, { views, judgedAt, circuit: request.circuit })),
     rejections: byFrequency(totals(surveys)),
     nearest: nearestOf(near, run.demands.operating.nominalSupply),
   };
@@ -60,6 +62,21 @@ function judgeOnce(run: Judging): SurveyedCatalog['judgedAt'] {
 interface Positions {
   readonly count: (one: Survey) => number;
   readonly positions: (one: Survey) => ArrayLike<number>;
+}
+
+interface Listing extends Pick<SurveyedCatalog, 'judgedAt'> {
+  readonly views: readonly ScreenView[];
+  readonly circuit: string;
+}
+
+/** A rejected part as the survey knows it: most lists tell of it only which checks it fails. */
+function listedAt(run: Judging, { views, judgedAt, circuit }: Listing): SurveyedCatalog['judgedAt'] {
+  const known = new Map(views.filter(({ size }) => size > 0).map((view) => [view, decidingIn(run, view, circuit)]));
+  return ({ view, position }) => {
+    const decided = known.get(view)?.(position);
+    if (decided === undefined) return judgedAt({ view, position });
+    return surveyedPart({ get part() { return view.part(position); }, outcome: 'does-not-fit', ...decided }, () => judgedAt({ view, position }));
+  };
 }
 
 /** The positions of all surveys one after another. Where they stand is found out when the list is first looked into. */

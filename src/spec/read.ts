@@ -7,6 +7,7 @@ import { readGain } from './gain.js';
 import { hazardContradictions } from './hazard-contradictions.js';
 import { readHazards } from './hazards.js';
 import { readLimits } from './limits.js';
+import { limitMoved, type Reading } from './moved-limit.js';
 import { applyOverrides } from './overrides.js';
 import { inOrder, problemAt } from './problems.js';
 import { readReference } from './reference.js';
@@ -40,18 +41,24 @@ export function readStage(text: string | null, options: ReadOptions = {}): SpecR
   return stageReader(text, options.file)(options.overrides ?? []);
 }
 
-/** As `readStage`, for one file under many options: the text is taken apart once. */
+/** As `readStage`, for one file under many options: the text is taken apart once, and where only a limit moves, only the limits are read again. */
 export function stageReader(text: string | null, file?: string): (overrides: readonly Override[]) => SpecResult {
   const opened = emptyDraft(text === null ? undefined : file, text !== null);
   const state = text === null ? 'open' : readFile(opened, text);
+  let last: Reading | null = null;
   return (overrides) => {
+    const moved = last === null ? null : limitMoved(last, overrides);
+    if (moved !== null) return { ok: true, spec: moved };
     const draft = copyOf(opened);
     if (state === 'empty' && overrides.length === 0) refuseEmpty(draft);
     if (state === 'unreadable' || (state === 'empty' && overrides.length === 0)) return { ok: false, problems: draft.problems };
     applyOverrides(draft, overrides);
     drawConsequences(draft);
     const spec = readFields(draft);
-    if (spec !== null && draft.problems.length === 0) return { ok: true, spec };
+    if (spec !== null && draft.problems.length === 0) {
+      last = { overrides, draft, spec };
+      return { ok: true, spec };
+    }
     return { ok: false, problems: inOrder(draft.problems, overrides.map(({ option }) => option)) };
   };
 }

@@ -1,2 +1,3 @@
 export { buildStage, type StageResult } from './build.js';
+export { withLimits, type Built } from './with-limits.js';
 export type { Asked, CurrentPeak, InputPoint, Span, Stage, StageLoad, StageResistors, Vertex } from './stage.js';

@@ -21,6 +21,16 @@ describe('the worst of a class', () => {
     expect(classesOf([partOf([min('slewRate', 1e6)], GENERIC)], AT_25).get('c1')).toEqual({});
   });
 
+  it('stands in the surroundings it is asked for, whatever was asked of the list before', () => {
+    const list = [partOf([min('openLoopGain', 2e5, { supply: 5 }), min('openLoopGain', 1e5, { supply: 3 })], GENERIC)];
+    const low = { ...AT_25, nominalSupply: 3 };
+    expect(classesOf(list, AT_25).get('c1')).toEqual({ openLoopGain: 2e5 });
+    expect(classesOf(list, low).get('c1')).toEqual({ openLoopGain: 1e5 });
+    expect(classesOf(list, { ...low })).toBe(classesOf(list, low));
+    expect(classesOf(list, AT_25).get('c1')).toEqual({ openLoopGain: 2e5 });
+    expect(classesOf([...list, ...list], low)).toEqual(classesOf(list, low));
+  });
+
   it('takes nothing from approved parts or from sets without a class', () => {
     const figures = [min('openLoopGain', 1)];
     expect(classesOf([partOf(figures, { class: 'c1' }), partOf(figures, { tier: 'generic' })], AT_25).size).toBe(0);

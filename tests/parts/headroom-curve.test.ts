@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Figure } from '../../src/parts/figures.js';
 import { headroomCurve, heaviestPoint, type HeadroomReading } from '../../src/parts/headroom-curve.js';
@@ -149,5 +150,16 @@ describe('the heaviest point of a side', () => {
     expect(heaviestPoint(under(figures), 'low', 5)).toMatchObject({ amperes: 3e-3 });
     expect(heaviestPoint(under([max('outputLowHeadroom', 0.1, ohms(2e3, 'supply'))]), 'low', 4)?.amperes).toBeCloseTo((4 - 0.1) / 2e3, 15);
     expect(heaviestPoint(under([]), 'low', 5)).toBeNull();
+  });
+});
+
+describe('a curve asked again and again', () => {
+  it('answers as a new one does, at any supply, current and load in any order', () => {
+    const figures = [low(0.05, 1e-3, 5), low(0.2, 4e-3, 5), low(0.08, 1e-3, 2.7), low(0.1, 1e-3), max('outputLowHeadroom', 0.02, ohms(2e3, 'ground', 5))];
+    const question = fc.record({ supply: fc.constantFrom(1.8, 2.7, 3, 5, 5.5), current: fc.constantFrom(0, 1e-3, 3e-3, 9e-3), assistingLoad: fc.constantFrom(null, 1e3, 10e3) });
+    fc.assert(fc.property(fc.constantFrom('pessimistic' as const, 'optimistic' as const), fc.array(question, { minLength: 2, maxLength: 12 }), (outlook, asked) => {
+      const curve = headroomCurve(under(figures, { outlook }), 'low');
+      for (const one of asked) expect(curve(one)).toEqual(headroomCurve(under(figures, { outlook }), 'low')(one));
+    }));
   });
 });

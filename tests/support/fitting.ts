@@ -22,6 +22,6 @@ interface Fitting extends Partial<Omit<JudgedPart, 'part'>> {
 export function fitting(id: string, { price = 1, tier = 'approved', ...more }: Fitting = {}): JudgedPart {
   return {
     part: partOf([], { id, tier, price: price === null ? null : euro(price) }),
-    outcome: 'fits', proof: 'limits', likely: false, verdicts: [passing('slew-rate', 2)], confirm: [], hazards: [], current: 100e-6, dynamicRange: null, batteryHours: null, ...more,
+    outcome: 'fits', proof: 'limits', likely: false, verdicts: [passing('slew-rate', 2)], deciding: [], confirm: [], hazards: [], current: 100e-6, dynamicRange: null, batteryHours: null, ...more,
   };
 }

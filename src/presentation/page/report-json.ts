@@ -1,17 +1,19 @@
-import { confirmationJson, document, shortlistJson } from '../json.js';
+import { confirmationJson, document, documentOf, shortlistDocument } from '../json.js';
 import { verdictJson } from '../verdict-json.js';
 import type { Report } from '../../report.js';
 import type { JudgedPart } from '../../screening/index.js';
 import type { ChosenPart, Review, ReviewedStage } from './review.js';
 
 /** The document `report`: what the page shows and what makes it again. Each stage carries the document that `shortlist --json` prints. */
-export function reportJson(review: Review): string {
-  const { name, time, tool, command, symbols, top, all } = review;
-  return document('report', { name, time, tool, command, symbols, top, all, stages: review.stages.map((stage) => stageJson(stage, review)) });
-}
+export const reportJson = (review: Review): string => document('report', bodyOf(review));
 
 /** The same on one line, as a page embeds it. */
-export const reportLine = (review: Review): string => JSON.stringify(JSON.parse(reportJson(review)));
+export const reportLine = (review: Review): string => JSON.stringify(documentOf('report', bodyOf(review)));
+
+function bodyOf(review: Review): Readonly<Record<string, unknown>> {
+  const { name, time, tool, command, symbols, top, all } = review;
+  return { name, time, tool, command, symbols, top, all, stages: review.stages.map((stage) => stageJson(stage, review)) };
+}
 
 function stageJson(stage: ReviewedStage, { top, all }: Review): object {
   const { file, sha256, text, changes, chosen, report } = stage;
@@ -22,7 +24,7 @@ function stageJson(stage: ReviewedStage, { top, all }: Review): object {
     changes: changes.map(({ path, text: value, option }) => ({ path, text: value, option })),
     chosen: chosen === null ? null : chosenJson(stage, chosen),
     outcomes: outcomesJson(report),
-    shortlist: JSON.parse(shortlistJson(report, { top, all })) as object,
+    shortlist: shortlistDocument(report, { top, all }),
   };
 }
 
@@ -38,7 +40,4 @@ function outcomesJson({ fit, undecided, rejected }: Report): object[] {
   return [...fits, ...[...undecided, ...rejected].map(outJson)];
 }
 
-function outJson({ part, outcome, verdicts }: JudgedPart): object {
-  const decisive = outcome === 'undecided' ? 'unknown' : 'fail';
-  return { part: part.id, outcome, rank: null, checks: verdicts.filter((verdict) => verdict.outcome === decisive).map(({ check }) => check) };
-}
+const outJson = ({ part, outcome, deciding }: JudgedPart): object => ({ part: part.id, outcome, rank: null, checks: deciding });

@@ -53,10 +53,10 @@ function commonest(words: readonly string[]): string | null {
   return first?.[0] ?? null;
 }
 
-function priced({ part, outcome, current, verdicts }: JudgedPart, rank: number | null, currency: string): PricedPart[] {
+function priced({ part, outcome, current, deciding }: JudgedPart, rank: number | null, currency: string): PricedPart[] {
   const { price } = part;
   if (price?.currency !== currency || current === null || !(current > 0) || !(price.amount > 0)) return [];
-  const fails = verdicts.find((verdict) => verdict.outcome === 'fail')?.check ?? null;
+  const fails = outcome === 'does-not-fit' ? (deciding[0] ?? null) : null;
   return [{ id: part.id, outcome, rank, current, price: price.amount, fails, onFront: false }];
 }
 

@@ -74,7 +74,7 @@ function reasonsTable(place: Place): Html {
     caption: 'Why the others are out (one part can fail several checks)',
     columns: [{ title: 'Check' }, { title: 'Parts that fail it', kind: 'number' }, { title: 'Of these fail nothing else', kind: 'number' }],
     rows: rejections.map(({ check, parts }) => {
-      const alone = rejected.filter(({ verdicts }) => verdicts.every((one) => (one.outcome === 'fail') === (one.check === check))).length;
+      const alone = rejected.filter(({ deciding }) => deciding.length === 1 && deciding[0] === check).length;
       return { id: idOf(place, 'reason', check), cells: [words(checkWords(check)), figure(String(parts), parts), figure(String(alone), alone)] };
     }),
   })}`;
@@ -93,8 +93,8 @@ ${tableOf({
 </details>`;
 }
 
-function outRow(place: Place, { part, verdicts }: JudgedPart): PageRow {
-  const failing = verdicts.filter(({ outcome }) => outcome === 'fail').map(({ check }) => checkWords(check));
+function outRow(place: Place, { part, deciding }: JudgedPart): PageRow {
+  const failing = deciding.map(checkWords);
   return { id: idOf(place, 'part', part.id), cells: [marked(foreign(part.id), part.id), words(part.tier), words(failing.join(', ')), figure(String(failing.length), failing.length)] };
 }
 

@@ -1,0 +1,56 @@
+import type { ScreenView } from '../parts/screen-view.js';
+import { codesOf, newBuffers, segmentOf, type Buffers } from './buffers.js';
+import { COUNTS } from './digest.js';
+import type { Judging } from './judge.js';
+import type { JudgedPart } from './judged-part.js';
+import { checkQuestions, valueQuestion, type CheckQuestion } from './question.js';
+
+/** What a survey knows of a part that does not fit, without judging it in words. */
+export type Decided = Pick<JudgedPart, 'deciding' | 'current'>;
+
+/**
+ * Which checks keep the parts of a view out. Asks the questions of the survey, so that what it found out serves again; a segment is gone
+ * through when a part of it is first asked about. Made right after the survey, while its questions are kept.
+ */
+export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number) => Decided {
+  const questions = checkQuestions(run, view, circuit);
+  const current = valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+  const asked: Asked = { view, questions, current };
+  let last: Answers | null = null;
+  return (position) => {
+    const segment = Math.floor(position / view.segment);
+    if (last?.segment !== segment) last = answersIn(asked, segment, last?.buffers ?? newBuffers(view, questions.length));
+    return decidedAt(asked, last.buffers, position - segment * view.segment);
+  };
+}
+
+interface Asked {
+  readonly view: ScreenView;
+  readonly questions: readonly CheckQuestion[];
+  readonly current: ReturnType<typeof valueQuestion>;
+}
+
+interface Answers {
+  readonly segment: number;
+  readonly buffers: Buffers;
+}
+
+function answersIn({ view, questions, current }: Asked, segment: number, buffers: Buffers): Answers {
+  const count = Math.min(view.segment, view.size - segment * view.segment);
+  const codes = codesOf(view, segment, buffers);
+  for (const [at, one] of questions.entries()) {
+    const answers = buffers.answers[at];
+    if (answers !== undefined) one.tree.classify(segmentOf(one, { count, codes }), answers);
+  }
+  current.tree.classify(segmentOf(current, { count, codes }), buffers.current);
+  return { segment, buffers };
+}
+
+function decidedAt({ questions, current }: Asked, { answers, current: values }: Buffers, at: number): Decided {
+  const failing = questions.filter((one, question) => {
+    const answer = answers[question]?.[at] ?? 0;
+    one.settle(answer);
+    return one.digests.counts[answer] === COUNTS.fail;
+  });
+  return { deciding: failing.map(({ check }) => check), current: current.values[values[at] ?? 0] ?? null };
+}
