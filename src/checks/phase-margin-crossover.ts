@@ -1,5 +1,7 @@
 /** Longest and shortest step of the search, in ln f; it ends this far below the gain bandwidth. */
 const [LONG, SHORT, REACH] = [0.25, 0.02, 40];
+/** From how far below 1 on a step is the longest, in ln|T|. */
+const FAR = 4 * LONG;
 
 /**
  * The highest frequency (Hz) where ln|T| is 0, whatever the shape below it: a downward search, then regula falsi. |T| of resistors
@@ -8,13 +10,40 @@ const [LONG, SHORT, REACH] = [0.25, 0.02, 40];
 export function crossoverOf(gain: (frequency: number) => number, gainBandwidth: number): number | null {
   const at = (position: number): number => gain(Math.exp(position));
   const top = Math.log(gainBandwidth) + 1;
-  let high = { position: top, left: at(top) };
-  while (high.left >= 0) high = { position: high.position + 1, left: at(high.position + 1) };
-  while (high.position > top - REACH) {
-    const position = high.position - Math.min(LONG, Math.max(SHORT, -high.left / 4));
-    const low = { position, left: at(position) };
-    if (low.left >= 0) return Math.exp(falsePosition(at, low, high));
-    high = low;
+  let position = top;
+  let left = at(top);
+  while (left >= 0) {
+    position += 1;
+    left = at(position);
+  }
+  return downwards(at, { position, left }, top - REACH);
+}
+
+/**
+ * The same of a loop whose |T| is nowhere above `most`/f (Hz; of resistors alone the gain bandwidth over the noise gain at DC). So much is known without
+ * looking: the places passed over are those where the search would take its longest step.
+ */
+export function boundedCrossover(gain: (frequency: number) => number, gainBandwidth: number, most: number): number | null {
+  const at = (position: number): number => gain(Math.exp(position));
+  const top = Math.log(gainBandwidth) + 1;
+  const far = Math.max(Math.log(most) + FAR + SLACK, top - REACH);
+  let position = top;
+  while (position - LONG > far) position -= LONG;
+  const left = at(position);
+  return left < 0 ? downwards(at, { position, left }, top - REACH) : crossoverOf(gain, gainBandwidth);
+}
+
+/** More than rounding of a logarithm. */
+const SLACK = 1e-9;
+
+function downwards(at: (position: number) => number, from: Place, end: number): number | null {
+  let { position, left } = from;
+  while (position > end) {
+    const next = position - Math.min(LONG, Math.max(SHORT, -left / 4));
+    const there = at(next);
+    if (there >= 0) return Math.exp(falsePosition(at, { position: next, left: there }, { position, left }));
+    position = next;
+    left = there;
   }
   return null;
 }
@@ -27,15 +56,16 @@ export interface Place {
 
 /** Where a function is 0 between two places of opposite sign: regula falsi with the stale end halved (Dowell & Jarratt, A modified regula falsi method, BIT 11, 1971, from memory). */
 export function falsePosition(at: (position: number) => number, low: Place, high: Place): number {
-  let [one, other] = [low, high];
-  for (let step = 0; step < 40 && Math.abs(other.position - one.position) > 1e-13 * Math.abs(one.position) + 1e-14; step += 1) {
-    const position = other.position - (other.left * (other.position - one.position)) / (other.left - one.left);
-    const next = { position, left: at(position) };
-    if (next.left === 0) return position;
-    if (next.left * other.left < 0) one = other;
-    else one = { ...one, left: one.left / 2 };
-    other = next;
-    if (Math.abs(next.left) < 1e-13) return position;
+  let { position: one, left: oneLeft } = low;
+  let { position: other, left: otherLeft } = high;
+  for (let step = 0; step < 40 && Math.abs(other - one) > 1e-13 * Math.abs(one) + 1e-14; step += 1) {
+    const position = other - (otherLeft * (other - one)) / (otherLeft - oneLeft);
+    const left = at(position);
+    if (left === 0) return position;
+    if (left * otherLeft < 0) [one, oneLeft] = [other, otherLeft];
+    else oneLeft /= 2;
+    [other, otherLeft] = [position, left];
+    if (Math.abs(left) < 1e-13) return position;
   }
-  return other.position;
+  return other;
 }

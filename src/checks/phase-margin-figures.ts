@@ -28,13 +28,15 @@ export interface LoopFigures {
 
 export function loopFigures(asked: Pick<PhaseMarginDemand, 'network'>, readings: Readings): LoopFigures {
   const speed = readings.spread('gainBandwidth');
+  const needsInput = !HELD.has(asked.network.minus.pin);
   return {
     speed,
     own: ownPole(readings, speed),
-    inputCapacitance: readings.figure('inputCapacitance'),
-    needsInput: !HELD.has(asked.network.minus.pin),
-    outputResistance: readings.figure('outputResistance'),
-    capacitiveLoad: readings.figure('capacitiveLoad'),
+    inputCapacitance: needsInput ? readings.figure('inputCapacitance') : null,
+    needsInput,
+    // Read where they count: what is not looked at makes no difference between parts.
+    get outputResistance() { return readings.figure('outputResistance'); },
+    get capacitiveLoad() { return readings.figure('capacitiveLoad'); },
   };
 }
 

@@ -26,12 +26,13 @@ export const phaseMargin: Check<PhaseMarginDemand> = {
 
 function judgePhaseMargin(asked: PhaseMarginDemand, readings: Readings): Finding {
   const figures = loopFigures(asked, readings);
-  const { speed, outputResistance } = figures;
+  const { speed } = figures;
   if (speed === null) return withoutSpeed(asked, figures);
   if (speed.ends === null) return whateverSuits(asked, speed);
-  const { load } = asked;
-  if (load.capacitance > 0 && outputResistance === null) return withoutOutputResistance(asked, figures, speed.ends);
-  const loop = loopOf(asked, figures, load.capacitance > 0 ? (outputResistance?.value ?? 0) : null);
+  const isLoaded = asked.load.capacitance > 0;
+  const outputResistance = isLoaded ? figures.outputResistance : null;
+  if (isLoaded && outputResistance === null) return withoutOutputResistance({ asked, figures, ends: speed.ends }, readings);
+  const loop = loopOf(asked, figures, isLoaded ? (outputResistance?.value ?? 0) : null);
   return measured({ asked, figures, speed, ends: speed.ends, loop }, readings);
 }
 
@@ -61,14 +62,14 @@ function measured(of: Measured, readings: Readings): Finding {
   const input = inputBasis(figures, { loop, ends, required });
   const terms = readings.brief ? [] : termsOf(of, worst, input);
   const passes = meets(required, worst.margin, sense);
-  const isUnityStable = (readings.figure('minimumStableGain')?.value ?? 1) <= 1;
+  const isUnityStable = (): boolean => (readings.figure('minimumStableGain')?.value ?? 1) <= 1;
   return {
     kind: 'numbers', required, unit, sense, offered: worst.margin, slot: speed.slot,
     basis: weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
     how: readings.brief ? null : `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
     terms,
     cautions: passes && !readings.brief && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
-    remedies: passes || readings.brief ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable),
+    remedies: passes || readings.brief ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable()),
   };
 }
 
@@ -119,7 +120,7 @@ function withoutSpeed(asked: PhaseMarginDemand, figures: LoopFigures): Finding {
 }
 
 /** The load pole has no figure: the maker's capacitive load decides, else only what is left without that pole is known. */
-function withoutOutputResistance(asked: PhaseMarginDemand, figures: LoopFigures, ends: Ends): Finding {
+function withoutOutputResistance({ asked, figures, ends }: Pick<Measured, 'asked' | 'figures' | 'ends'>, { brief }: Readings): Finding {
   const unloaded = loopOf(asked, figures, null);
   const known = worstMargin(unloaded, ends).margin;
   const { required, unit, sense } = asked;
@@ -129,10 +130,13 @@ function withoutOutputResistance(asked: PhaseMarginDemand, figures: LoopFigures,
   const stated = meets(required, known, sense) ? byCapacitiveLoad(asked, figures.capacitiveLoad, without) : null;
   if (stated !== null) return stated;
   const missing = [{ figure: 'outputResistance', kind: 'typ' }] as const;
-  return { kind: 'bound', required, unit, sense, known, basis, missing, cause: 'missing-figure', turnsAt: turningResistance({ ...unloaded, load: { ...asked.load, outputResistance: 0 } }, ends, required), cautions: notEnough(asked, figures) };
+  const bound = { kind: 'bound', required, unit, sense, known, basis, missing, cause: 'missing-figure' } as const;
+  if (brief) return bound;
+  return { ...bound, turnsAt: turningResistance({ ...unloaded, load: { ...asked.load, outputResistance: 0 } }, ends, required), cautions: notEnough(asked, figures) };
 }
 
 function notEnough({ load }: PhaseMarginDemand, { capacitiveLoad }: LoopFigures): string[] {
-  if (capacitiveLoad === null) return [];
+  // An assumed one is as good as can be on the best reading: no number to print.
+  if (capacitiveLoad === null || !Number.isFinite(capacitiveLoad.value)) return [];
   return [`the stated capacitive load of ${formatQuantity(capacitiveLoad.value, 'F')} does not settle ${formatQuantity(load.capacitance, 'F')} here`];
 }

@@ -1,4 +1,5 @@
-import { networksOf, type Loop } from '../checks/phase-margin-loop.js';
+import type { Loop } from '../checks/phase-margin-loop.js';
+import { networksOf } from '../checks/phase-margin-opened.js';
 import { add, divide, magnitude, multiply, subtract, type Complex } from '../formulas/complex.js';
 import { feedbackFactor } from '../formulas/feedback-loop.js';
 import { pinTransfers } from '../formulas/pin-network.js';

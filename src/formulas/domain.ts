@@ -10,7 +10,9 @@ export interface Interval {
 
 /** @throws RangeError naming the argument, its limit and its value. NaN and infinite values are always outside. */
 export function requireWithin(where: string, values: Named, interval: Interval): void {
-  for (const [name, value] of Object.entries(values)) {
+  // Names without their values: no list of pairs is made for what is nearly always inside.
+  for (const name of Object.keys(values)) {
+    const value = values[name] ?? NaN;
     if (!inside(value, interval)) throw new RangeError(`${where}: ${name} must be ${describe(interval)}, but is ${value}`);
   }
 }

@@ -1,7 +1,7 @@
 import { turningPoint } from './bisection.js';
 import { add, divide, magnitude, multiply, phase, subtract, type Complex } from './complex.js';
 import { requireNotNegative, requirePositive, requireWithin } from './domain.js';
-import { pinTransfers, type PinNetwork } from './pin-network.js';
+import { outputShare, pinTransfers, type PinNetwork } from './pin-network.js';
 
 const DEGREES = 180 / Math.PI;
 
@@ -27,8 +27,12 @@ export interface LoopAmplifier {
  * Source: Franco, Design with Operational Amplifiers and Analog Integrated Circuits (3rd ed. 2002), ch. 1 and 8 (from memory).
  */
 export function feedbackFactor(networks: FeedbackNetworks): (frequency: number) => Complex {
-  const { plus, minus } = transfersOf(networks);
-  return (frequency) => subtract(minus(frequency).fromOutput, plus(frequency).fromOutput);
+  const { plus, minus, plusCapacitance, minusCapacitance } = networks;
+  const back = outputShare(minus, minusCapacitance);
+  // Most stages return nothing to the + input.
+  if (plus.pin === 'ground' || plus.pin === 'input') return back;
+  const forth = outputShare(plus, plusCapacitance);
+  return (frequency) => subtract(back(frequency), forth(frequency));
 }
 
 /**

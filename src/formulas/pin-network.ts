@@ -89,10 +89,41 @@ export function pinTransfers(network: PinNetwork, pinCapacitance = 0): (frequenc
   return (frequency) => transferOf(mesh, reduceMesh(mesh, frequency, room));
 }
 
+/**
+ * The transfer from the output alone: all that a loop asks of its network.
+ * @param network elements in Ω and F, above 0
+ * @param pinCapacitance F from the pin to ground, at least 0
+ * @returns V/V as a function of the frequency in Hz
+ * @example outputShare({elements: [], pin: 'output'})(1e3) is 1
+ * Source: as pinResponse().
+ */
+export function outputShare(network: PinNetwork, pinCapacitance = 0): (frequency: number) => Complex {
+  if (HELD_NODES.includes(network.pin)) {
+    const { fromOutput } = heldPin(network.pin);
+    return () => fromOutput;
+  }
+  const mesh = starMesh(network.elements, network.pin, pinCapacitance);
+  if (mesh.inner === 0) return (frequency) => sharedAt(mesh, frequency);
+  const room = roomFor(mesh);
+  return (frequency) => transferOf(mesh, reduceMesh(mesh, frequency, room)).fromOutput;
+}
+
 function heldPin(pin: string): PinTransfer {
   const zero = { re: 0, im: 0 };
   const one = { re: 1, im: 0 };
   return { fromOutput: pin === 'output' ? one : zero, fromInput: pin === 'input' ? one : zero, impedance: zero };
+}
+
+/** As dividedAt(), of the output alone. */
+function sharedAt(mesh: Mesh, frequency: number): Complex {
+  const { conductance, capacitance } = mesh;
+  const a = cell(conductance, 1);
+  const p = cell(capacitance, 1) * 2 * Math.PI * frequency;
+  const x = a + cell(conductance, 2) + cell(conductance, 3);
+  const y = p + cell(capacitance, 2) * 2 * Math.PI * frequency + cell(capacitance, 3) * 2 * Math.PI * frequency;
+  const square = x * x + y * y;
+  if (!(square > 0 && square < Infinity)) return dividedAt(mesh, frequency).fromOutput;
+  return { re: (a * x + p * y) / square, im: (p * x - a * y) / square };
 }
 
 /** Without an inner node the branches of the pin are the star already: the sums of transferOf() with nothing to take out before. */

@@ -1,23 +1,28 @@
-import { weakest } from './basis.js';
+import { BASES, weakest } from './basis.js';
 import { DOUBLING_KELVIN, FET_BIAS_LIMIT } from './derating.js';
 import { figureSlot, type Figure } from './figures.js';
-import type { PartUnderTest, Reading } from './reading.js';
+import type { Operating, PartUnderTest, Reading } from './reading.js';
 import { basisOf, bestPossible, derate, factorText, howRead, limitsFirst, nearestSupply, usable } from './select.js';
 
 type InputCurrent = 'biasCurrent' | 'offsetCurrent';
 
 /**
  * Input currents over temperature: the figure rated at the lowest temperature at or above the stage's top; no stated
- * temperature means 25 °C. If only a cooler one exists, FET inputs double per 10 K.
+ * temperature means 25 °C. Of several there the strongest basis, then the worse value. If only a cooler one exists, FET inputs double per 10 K.
  */
 export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent): Reading | null {
   const all = nearestSupply(usable(test, parameter), test.operating.nominalSupply);
   const temperatures = all.map(ratedAt);
   const covering = temperatures.filter((rated) => rated >= test.operating.hottest);
   const rated = covering.length > 0 ? Math.min(...covering) : Math.max(...temperatures);
-  const figure = limitsFirst(all.filter((one) => ratedAt(one) === rated))[0];
+  const figure = worstOf(limitsFirst(all.filter((one) => ratedAt(one) === rated)), test.operating);
   if (figure === undefined) return null;
   return readCurrent(test, figure, covering.length === 0 && doubles(test) ? test.operating.hottest - rated : 0);
+}
+
+function worstOf(figures: readonly Figure[], operating: Operating): Figure | undefined {
+  const rank = (figure: Figure): number => BASES.indexOf(basisOf(figure, operating));
+  return [...figures].sort((a, b) => rank(a) - rank(b) || b.value - a.value)[0];
 }
 
 /** Degrees Celsius; the whole specified range counts as hot enough for anything. */
@@ -26,13 +31,12 @@ function ratedAt(figure: Figure): number {
   return rated === 'over' ? Number.POSITIVE_INFINITY : (rated ?? 25);
 }
 
-/** FET inputs, or inputs of unknown type whose bias current at its lowest temperature is below 1 nA. */
+/** FET inputs, or inputs of unknown type whose bias current at its lowest temperature is below 1 nA; of several printed there one is enough. */
 function doubles(test: PartUnderTest): boolean {
   if (test.part.inputType !== null) return test.part.inputType === 'fet';
   const printed = usable(test, 'biasCurrent');
   const coolest = Math.min(...printed.map(ratedAt));
-  const first = limitsFirst(printed.filter((figure) => ratedAt(figure) === coolest))[0];
-  return first !== undefined && first.value < FET_BIAS_LIMIT;
+  return limitsFirst(printed.filter((figure) => ratedAt(figure) === coolest)).some(({ value }) => value < FET_BIAS_LIMIT);
 }
 
 /** The word that tells a doubled current from a printed one. */

@@ -1,4 +1,4 @@
-import { weakest, type Basis } from './basis.js';
+import { BASES, weakest, type Basis } from './basis.js';
 import { headroomPoints, pointCurrent, type HeadroomPoint, type Side } from './headroom.js';
 import type { Outlook, PartUnderTest } from './reading.js';
 
@@ -44,7 +44,8 @@ const TIGHT = 1e-9;
 /** Reads a part's head-room curves once, then answers for any vertex. */
 export function headroomCurve(test: PartUnderTest, side: Side): (question: HeadroomQuestion) => HeadroomReading {
   const points = headroomPoints(test, side);
-  const assumed = points.find(({ anywhere }) => anywhere);
+  // Of several that hold at any current the worse: nothing says which one counts.
+  const [assumed] = points.filter(({ anywhere }) => anywhere).sort((a, b) => b.value - a.value);
   if (assumed !== undefined) return () => ({ value: assumed.value, bound: null, covers: null, basis: assumed.basis, slot: assumed.slot, how: assumed.how });
   // The vertices of a stage share a few supplies: the sets are laid once for each.
   const known = new Map<string, readonly PointSet[]>();
@@ -57,12 +58,14 @@ export function headroomCurve(test: PartUnderTest, side: Side): (question: Headr
   return (question) => combine(setsFor(question).map((set) => readSet(set, test.outlook, question)));
 }
 
-/** The heaviest current any unassisted point of the side was measured at, A; points without a supply count as rated at `supply`. Null without points. */
+/** The heaviest current any unassisted point of the side was measured at, A, of equal ones that on the stronger basis; points without a supply count as rated at `supply`. Null without points. */
 export function heaviestPoint(test: PartUnderTest, side: Side, supply: number): { amperes: number; slot: string; basis: Basis } | null {
   const placed = headroomPoints(test, side)
     .filter((point) => !point.assisted)
     .map((point) => ({ amperes: pointCurrent(point, side, point.supply ?? supply), slot: point.slot, basis: point.basis }));
-  return placed.reduce<(typeof placed)[number] | null>((best, next) => (best === null || next.amperes > best.amperes ? next : best), null);
+  const isHeavier = (next: (typeof placed)[number], best: (typeof placed)[number]): boolean =>
+    next.amperes > best.amperes || (next.amperes === best.amperes && BASES.indexOf(next.basis) < BASES.indexOf(best.basis));
+  return placed.reduce<(typeof placed)[number] | null>((best, next) => (best === null || isHeavier(next, best) ? next : best), null);
 }
 
 interface PointSet {

@@ -4,11 +4,12 @@ import { openCatalog } from '../../src/catalog/index.js';
 import { shortlist } from '../../src/engine.js';
 import { shortlistJson } from '../../src/presentation/json.js';
 import { readStage } from '../../src/spec/read.js';
+import type { Override } from '../../src/spec/spec.js';
 import { buildStage, type Stage } from '../../src/stage/index.js';
 import { COUNT10 } from './queries.js';
 
-function stageOf(file: string, limit?: string): Stage {
-  const read = readStage(readFileSync(file, 'utf8'), { file, overrides: limit === undefined ? [] : [{ path: 'limits.supplyCurrent', text: limit, option: '--set' }] });
+export function stageOf(file: string, overrides: readonly Override[] = []): Stage {
+  const read = readStage(readFileSync(file, 'utf8'), { file, overrides });
   if (!read.ok) throw new Error(read.problems[0]?.message);
   const built = buildStage(read.spec);
   if (!built.ok) throw new Error(built.problems[0]?.message);
@@ -22,7 +23,7 @@ export async function timeLibrary(file: string, stageFile: string): Promise<void
   const catalog = await openCatalog(file);
   const source = catalog.screenSource();
   for (const [name, limit] of [['first', undefined], ['again', undefined], ['changed', '80 µA']] as const) {
-    const stage = stageOf(stageFile, limit);
+    const stage = stageOf(stageFile, limit === undefined ? [] : [{ path: 'limits.supplyCurrent', text: limit, option: '--set' }]);
     const from = performance.now();
     shortlist(stage, source).fit.slice(0, 20);
     tell(name, from);

@@ -12,6 +12,7 @@ import { plausibleParts } from './plausible-part.js';
 import { COUNT10, JOB } from './queries.js';
 import { linesOf, tableOf, targetTable } from './targets.js';
 import { interleaved, TELLING, timed, type Measure } from './timing.js';
+import { wholeJob } from './whole-job.js';
 
 /** How many parts and runs; `--quick` fits into some two minutes on an idle machine. */
 interface Sizes {
@@ -45,6 +46,11 @@ async function bench(words: readonly string[]): Promise<void> {
   say('the sweeps, once');
   runs.set('sweep shipped', [sweepOf(files.shipped)]);
   runs.set('sweep middle', [sweepOf(files.middle)]);
+  if (hasShell()) {
+    say('the whole job as SQL, once');
+    runs.set('shortlist rows', [shortlistOf(files.rows)]);
+    runs.set('shell whole job rows', [timed('sqlite3', ['-readonly', files.rows], wholeJob(STAGE))]);
+  }
   const lines = linesOf(runs, { ...sizes, same });
   const text = [`${sizes.runs} runs, interleaved; medians. ${machine()}`, '', targetTable(lines), '', tableOf(runs), ''].join('\n');
   process.stdout.write(text);
@@ -94,8 +100,7 @@ function own({ large, middle, shipped }: Files): Measure[] {
 function others({ large, middle, rows }: Files, sizes: Sizes): Measure[] {
   const duckDb = duckDbScript(FOLDER, large);
   if (duckDb === null) say('no DuckDB: the package cannot be had here');
-  const hasShell = spawnSync('sqlite3', ['--version']).status === 0;
-  if (!hasShell) say('no sqlite3 shell on this machine (Debian: apt-get install sqlite3): S1, S4 and S7 are not measured');
+  if (!hasShell()) say('no sqlite3 shell on this machine (Debian: apt-get install sqlite3): S1, S4 and S7 are not measured');
   const csv = listFile(sizes.middle);
   return [
     { name: 'node COUNT10 middle', run: () => timed(process.execPath, countScript(middle)) },
@@ -103,9 +108,11 @@ function others({ large, middle, rows }: Files, sizes: Sizes): Measure[] {
     { name: `rows, part by part, ${sizes.rows}`, run: () => timed(process.execPath, [SELF, '--rows', rows]) },
     { name: 'import middle', run: () => importOf(csv) },
     ...(duckDb === null ? [] : [{ name: 'node + DuckDB COUNT10 large', run: () => timed(process.execPath, [duckDb]) }]),
-    ...(hasShell ? shell({ large, csv }) : []),
+    ...(hasShell() ? shell({ large, csv }) : []),
   ];
 }
+
+const hasShell = (): boolean => spawnSync('sqlite3', ['--version']).status === 0;
 
 function shell({ large, csv }: { large: string; csv: string }): Measure[] {
   return [

@@ -12,8 +12,8 @@ const MET = [
 ];
 
 /**
- * As much of the job as fits into SQL: the tally of every comparison and the twenty cheapest that meet all. It is the easier job: no head-room
- * curves, no loop, no classes, one reading, no second opinion on what is missing.
+ * As much of the job as somebody types: the tally of every comparison and the twenty cheapest that meet all. It is the easier job: no head-room
+ * curves, no loop, no classes, one reading, no second opinion on what is missing. What it takes with all of that is in `whole-job.ts`.
  */
 export const JOB = `select ${MET.map((condition) => `sum(not (${condition})), sum((${condition}) is null)`).join(', ')} from part where tier = 'approved' and withdrawn_at is null;
 select id from part where tier = 'approved' and withdrawn_at is null and ${MET.map((condition) => `(${condition})`).join(' and ')} order by price_amount, quiescent_current_max, id limit 20`;

@@ -26,7 +26,13 @@ function seconds(measure: string, milliseconds: number, most: number): Line {
   return { id: 'time', measure, target: `<= ${most} s`, figure: `${(milliseconds / 1000).toPrecision(3)} s`, met: milliseconds <= most * 1000 };
 }
 
-export function linesOf(runs: Runs, { large, middle, same }: { large: number; middle: number; same: boolean | null }): Line[] {
+/** A ratio nobody set a target for. */
+function beside(measure: string, over: number, under: number): Line {
+  const figure = over / under;
+  return { id: '-', measure, target: 'none', figure: Number.isNaN(figure) ? 'not measured here' : `${Number(figure.toPrecision(3))} (${Math.round(over)} ms / ${Math.round(under)} ms)`, met: null };
+}
+
+export function linesOf(runs: Runs, { large, middle, rows, same }: { large: number; middle: number; rows: number; same: boolean | null }): Line[] {
   const ms = (name: string, told?: string): number => median(runs, name, told);
   const memory = (name: string): number => ms(name, 'maxRSS') / 1024;
   const extra = memory('shortlist large') - memory('empty node');
@@ -36,6 +42,7 @@ export function linesOf(runs: Runs, { large, middle, same }: { large: number; mi
     ratio('S2', `shortlist, ${middle} parts / node + better-sqlite3 COUNT10`, { over: ms('shortlist middle'), under: ms('node COUNT10 middle'), most: 1.5 }),
     ratio('S3', 'shortlist, shipped catalog / empty node', { over: start, under: ms('empty node'), most: 2 }),
     ratio('S4', `shortlist, ${large} parts / the job in the sqlite3 shell`, { over: ms('shortlist large'), under: ms('shell job large'), most: 1 / 12 }),
+    beside(`shortlist, ${rows} parts / all of it but the phase margin as SQL in the shell, once`, ms('shortlist rows'), ms('shell whole job rows')),
     ratio('S5', `in the library, the same stage again, ${large} parts / COUNT10 in the process`, { over: ms('library large', 'again'), under: ms('library large', 'count'), most: 0.3 }),
     ratio('S6', `in the library, one limit changed, ${large} parts / COUNT10 in the process`, { over: ms('library large', 'changed'), under: ms('library large', 'count'), most: 0.04 }),
     ratio('S7', `import of ${middle} parts, canonical CSV / sqlite3 shell .import`, { over: ms('import middle'), under: ms('shell import middle'), most: 6 }),

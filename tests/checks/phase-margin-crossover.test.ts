@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { crossoverOf, falsePosition } from '../../src/checks/phase-margin-crossover.js';
+import { crossoverOf, boundedCrossover, falsePosition } from '../../src/checks/phase-margin-crossover.js';
 
 describe('the crossover of a loop gain', () => {
   it('is exact for one pole: GBW/NG', () => {
@@ -23,6 +23,29 @@ describe('the crossover of a loop gain', () => {
 
   it('lies above the gain bandwidth where the network lifts it', () => {
     expect(crossoverOf((frequency) => Math.log(1e9 / frequency), 1e6)! / 1e9).toBeCloseTo(1, 11);
+  });
+});
+
+describe('the crossover of a loop that is bounded', () => {
+  const hertz = (from: number, to: number): fc.Arbitrary<number> => fc.double({ min: Math.log(from), max: Math.log(to), noNaN: true }).map(Math.exp);
+
+  it('is that of the whole search to the last bit, from fewer places', () => {
+    fc.assert(
+      fc.property(hertz(1e2, 1e9), hertz(1, 1e5), hertz(1e2, 1e9), (gainBandwidth, noiseGain, pole) => {
+        const looks = { whole: 0, short: 0 };
+        const gain = (by: 'whole' | 'short') => (frequency: number): number => {
+          looks[by] += 1;
+          return Math.log(gainBandwidth / noiseGain / frequency / Math.hypot(1, frequency / pole));
+        };
+        expect(boundedCrossover(gain('short'), gainBandwidth, gainBandwidth / noiseGain)).toBe(crossoverOf(gain('whole'), gainBandwidth));
+        expect(looks.short).toBeLessThanOrEqual(looks.whole);
+        if (noiseGain > 8) expect(looks.short).toBeLessThan(looks.whole - 6);
+      }),
+    );
+  });
+
+  it('is none where nothing comes back', () => {
+    expect(boundedCrossover(() => -Infinity, 1e6, 0)).toBeNull();
   });
 });
 

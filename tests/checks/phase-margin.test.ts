@@ -62,6 +62,11 @@ describe('an output resistance not known', () => {
     expect(judge(hung(100e-12, { limits: { phaseMargin: value(60) } }), [...SPEED, max('capacitiveLoad', 200e-12)]).outcome).toBe('unknown');
   });
 
+  it('says nothing of a capacitive load that is only assumed and does not settle it: at best it is endless', () => {
+    const verdict = judge(hung(1e-9), [min('gainBandwidth', 1e6), typ('phaseMargin', 10), assumed(max('capacitiveLoad', 47e-12))]);
+    expect(verdict).toMatchObject({ outcome: 'fail', offered: null, cautions: [] });
+  });
+
   it('fails all the same where the rest of the loop falls short already', () => {
     const verdict = judge(hung(100e-12), [typ('gainBandwidth', 1e6), typ('phaseMargin', 40), typ('unityCrossover', 0.8e6), max('capacitiveLoad', 1e-9)]);
     expect(verdict).toMatchObject({ outcome: 'fail', offered: null });

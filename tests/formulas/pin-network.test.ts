@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { magnitude, subtract, type Complex } from '../../src/formulas/complex.js';
-import { pinResponse, pinResponses, pinTransfers, type PinNetwork } from '../../src/formulas/pin-network.js';
+import { outputShare, pinResponse, pinResponses, pinTransfers, type PinNetwork } from '../../src/formulas/pin-network.js';
 import { GROUND, solve, type Element } from '../support/nodal.js';
 import { anyNetwork, capacitor, decades, divider, DRIVEN, FOLLOWING, GROUNDED, resistor } from './networks.js';
 
@@ -53,6 +53,15 @@ describe('network at one input', () => {
         expect(magnitude(subtract(ours.fromOutput, output))).toBeLessThan(1e-8);
         expect(magnitude(subtract(ours.fromInput, input))).toBeLessThan(1e-8);
         expect(magnitude(subtract(ours.impedance, impedance))).toBeLessThan(1e-8 * magnitude(impedance));
+      }),
+    );
+  });
+  it('gives the share of the output alone the same to the last bit', () => {
+    expect(outputShare(FOLLOWING)(1e3)).toEqual({ re: 1, im: 0 });
+    expect(outputShare(divider(9e3, 1e3), 1e-12)(0).re).toBeCloseTo(0.1, 14);
+    fc.assert(
+      fc.property(fc.record(asked), ({ network, frequency, capacitance }) => {
+        expect(outputShare(network, capacitance)(frequency)).toEqual(pinTransfers(network, capacitance)(frequency).fromOutput);
       }),
     );
   });

@@ -36,6 +36,13 @@ describe('the rating that counts', () => {
     expect(bias([at(5e-12)], 35, { inputType: 'fet' })).toEqual([10e-12, 'estimated']);
   });
 
+  it('is of several at one temperature the worse of those on the strongest basis', () => {
+    // Nothing stated is 25 °C too.
+    const limits = [at(1e-12), at(5e-12, 25)];
+    for (const figures of [limits, limits.toReversed()]) expect(bias(figures, 25)).toEqual([5e-12, 'guaranteed']);
+    expect(bias([...limits, { ...at(9e-12, 25), assumed: true }], 25)).toEqual([5e-12, 'guaranteed']);
+  });
+
   it('may be over temperature: that covers any top, after every stated one', () => {
     expect(bias([at(5e-9, 'over'), at(1e-12, 25)], 200)).toEqual([5e-9, 'guaranteed']);
     expect(bias([at(5e-9, 'over'), at(1e-12, 85)], 60)).toEqual([1e-12, 'guaranteed']);

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Figure } from '../../src/parts/figures.js';
 import { headroomCurve, heaviestPoint, type HeadroomReading } from '../../src/parts/headroom-curve.js';
-import { amperes, max, ohms, typ, under } from '../support/parts.js';
+import { amperes, assumed, max, ohms, typ, under } from '../support/parts.js';
 
 const low = (volts: number, current: number, supply?: number): Figure => max('outputLowHeadroom', volts, amperes(current, supply));
 
@@ -127,6 +127,11 @@ describe('sets at several supplies', () => {
   });
 });
 
+it('of several head-rooms assumed without a load the worse counts, at any current', () => {
+  const points = [assumed(max('outputLowHeadroom', 0.02, { supply: 3 })), assumed(max('outputLowHeadroom', 0.06, { supply: 10 }))];
+  for (const figures of [points, points.toReversed()]) expect(at(figures, 5e-3)).toMatchObject({ value: 0.06, basis: 'assumed' });
+});
+
 describe('assisted points', () => {
   const helped = max('outputLowHeadroom', 0.005, ohms(10e3, 'ground', 5));
 
@@ -150,6 +155,9 @@ describe('the heaviest point of a side', () => {
     expect(heaviestPoint(under(figures), 'low', 5)).toMatchObject({ amperes: 3e-3 });
     expect(heaviestPoint(under([max('outputLowHeadroom', 0.1, ohms(2e3, 'supply'))]), 'low', 4)?.amperes).toBeCloseTo((4 - 0.1) / 2e3, 15);
     expect(heaviestPoint(under([]), 'low', 5)).toBeNull();
+    // 3 mA twice, once without a supply: the one that is stated carries it.
+    const twice = [low(0.2, 3e-3), low(0.2, 3e-3, 3)];
+    for (const points of [twice, twice.toReversed()]) expect(heaviestPoint(under(points), 'low', 5)).toMatchObject({ amperes: 3e-3, basis: 'guaranteed' });
   });
 });
 
