@@ -10,6 +10,7 @@ import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
 import type { CurrentImport } from './imports.js';
 import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
+import type { IncomingList } from './incoming.js';
 import { listInForce } from './list-in-force.js';
 import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
@@ -29,6 +30,7 @@ export { GUARDS } from './guards.js';
 export type { Guard, GuardName } from './guards.js';
 export type { ImportOptions, ImportResult } from './import-list.js';
 export type { CurrentImport, ImportCounts } from './imports.js';
+export type { IncomingList } from './incoming.js';
 export type { ListInForce } from './list-in-force.js';
 export type { Progress } from './progress.js';
 export type { SavedStage } from './saved-stages.js';
@@ -49,7 +51,7 @@ export interface Catalog {
   /** How many parts the approved list has. */
   approvedCount(): number;
   /** Replaces the approved list in one transaction; the same parts again are no change: only where they came from is kept anew. */
-  importList(list: ReadList, options?: ImportOptions): ImportResult;
+  importList(list: IncomingList, options?: ImportOptions): ImportResult;
   /** The approved part in force with this id; null when there is none. */
   approvedPart(partId: string): Part | null;
   /** The generic sets, by id. */
@@ -123,7 +125,7 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
   };
 }
 
-function asTier(list: ReadList, tier: ReadList['tier']): ReadList {
+function asTier(list: IncomingList, tier: IncomingList['tier']): IncomingList {
   if (list.tier !== tier) throw new RangeError(`a list read as ${list.tier} cannot become the ${tier} tier`);
   return list;
 }
