@@ -6,11 +6,9 @@ import type { Part, PartSource, Tier } from './parts/part.js';
 import { predictStage, type Prediction } from './prediction/index.js';
 import { outlineAndRank, outlinesIn, screenAndRank } from './ranking/index.js';
 import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
+import { RULES } from './rules.js';
 import { type JudgedPart, judgePart, judgingOf, lendersOf } from './screening/index.js';
 import type { Stage } from './stage/index.js';
-
-/** Version of the judging rules. */
-export const RULES = '1';
 
 const PLAIN: Asking = { strict: false, order: 'merit', assumed: [] };
 

@@ -1,7 +1,8 @@
 /** The public door: a stage and parts in, a judged and ranked report out, and its presenters. No database behind it. */
 export { CHECKS } from './checks/index.js';
 export { CHECK_IDS, type AnyDemand, type CheckId } from './demands/index.js';
-export { compare, demandsOf, explain, type ExplainRequest, predict, RULES, shortlist, sweepOver, withLookups, withWaysOut } from './engine.js';
+export { RULES } from './rules.js';
+export { compare, demandsOf, explain, type ExplainRequest, predict, shortlist, sweepOver, withLookups, withWaysOut } from './engine.js';
 export type { Change, Changes, Changing, Move, Rerun } from './explanation/index.js';
 export { assumedFigure, hasTwoEnds, limitKindOf, withAssumed } from './parts/assumption.js';
 export { sweptValues } from './explanation/index.js';

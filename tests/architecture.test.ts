@@ -22,7 +22,8 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   // What pictures show, from the same readings and loop as the checks; presenters see its types through the report.
   curves: { rooms: ['formulas', 'parts', 'stage', 'demands', 'checks', 'screening'], packages: [] },
   'report.ts': { rooms: ['curves', 'parts', 'stage', 'demands', 'verdicts', 'screening', 'ranking', 'explanation', 'prediction'], packages: [] },
-  'engine.ts': { rooms: ['curves', 'parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts', 'prediction'], packages: [] },
+  'rules.ts': { rooms: [], packages: [] },
+  'engine.ts': { rooms: ['rules.ts', 'curves', 'parts', 'stage', 'demands', 'verdicts', 'checks', 'screening', 'ranking', 'explanation', 'report.ts', 'prediction'], packages: [] },
   // Rooms below are types only, as a report carries them; a test of its own holds that.
   presentation: {
     rooms: ['quantities', 'report.ts', 'parts', 'stage', 'demands', 'prediction', 'verdicts', 'screening', 'ranking', 'explanation', 'curves'],
@@ -35,8 +36,8 @@ const TABLE: Readonly<Record<string, { readonly rooms: readonly string[]; readon
   },
   // The team's stage files: read from disk and judged again; which are kept stands in the catalog.
   saved: { rooms: ['quantities', 'spec', 'stage', 'parts', 'screening', 'engine.ts'], packages: ['node:fs', 'node:path'] },
-  'index.ts': { rooms: ['quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'explanation', 'engine.ts', 'report.ts', 'presentation', 'prediction'], packages: [] },
-  cli: { rooms: ['index.ts', 'catalog', 'intake', 'saved', 'quantities'], packages: ['commander', '@inquirer/prompts', 'node:'] },
+  'index.ts': { rooms: ['rules.ts', 'quantities', 'spec', 'stage', 'parts', 'demands', 'checks', 'verdicts', 'ranking', 'explanation', 'engine.ts', 'report.ts', 'presentation', 'prediction'], packages: [] },
+  cli: { rooms: ['index.ts', 'rules.ts', 'catalog', 'intake', 'saved', 'quantities'], packages: ['commander', '@inquirer/prompts', 'node:'] },
   migrations: { rooms: [], packages: ['kysely'] },
 };
 
