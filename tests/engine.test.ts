@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { demandsOf, explain, RULES, shortlist } from '../src/engine.js';
+import { demandsOf, explain, shortlist } from '../src/engine.js';
+import { RULES } from '../src/rules.js';
 import type { Part, PartSource } from '../src/parts/part.js';
 import { euro, FULL, max, partOf, replacing, typ } from './support/parts.js';
 import { dc, load, stageOf, stageSpec, value } from './support/stages.js';

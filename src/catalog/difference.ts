@@ -1,10 +1,9 @@
 import type Database from 'better-sqlite3';
-import type { ListRecord } from '../intake/list.js';
+import type { ReadList } from '../intake/list.js';
 import type { Part } from '../parts/part.js';
-import { contentHasher } from './content.js';
+import { contentHasher, contentOrder } from './content.js';
 import { isLifecycleBetter } from './guards.js';
 import { idsInForce } from './in-force.js';
-import { expectedRows, rowsInOrder, type IncomingList } from './incoming.js';
 import type { ImportCounts } from './imports.js';
 import { PART_COLUMNS } from './part-columns.js';
 import type { Cell } from './part-row.js';
@@ -16,18 +15,15 @@ import { watchScaling } from './scaling.js';
 export interface ChangedPart {
   readonly before: Part;
   readonly after: Part;
-  /** Of the new list: the record of the part, and its index. */
-  readonly record: ListRecord;
-  readonly index: number;
 }
 
-/** What becomes of one part of the new list. */
+/** What becomes of one part of the new list; in an array of bytes, one a part. */
 export const FATE = { unchanged: 0, changed: 1, added: 2 } as const;
 
 /** The difference between the list in force and a new one. Ids are compared, then everything that can change an answer. */
 export interface Difference {
-  /** In the order of the comparison, by id. */
-  readonly fates: readonly number[];
+  /** By index of the part in the list. */
+  readonly fates: Uint8Array;
   /** New ids, by id. */
   readonly added: readonly string[];
   /** The parts whose version changes, by id, before and after; the first `CHANGES_KEPT` of them. */
@@ -46,25 +42,29 @@ export interface Difference {
 export const CHANGES_KEPT = 1000;
 
 /** Compares part by part against the row in force, so that never more than one old part is held beside the new list. */
-export function compareLists(database: Database.Database, list: IncomingList, progress: Progress): Difference {
+export function compareLists(database: Database.Database, list: ReadList, progress: Progress): Difference {
+  const { parts, tier } = list;
   const inForce = database
     .prepare<[string, string], Cell[]>(`select ${PART_COLUMNS.join(', ')} from part where tier = ? and id = ? and withdrawn_at is null`)
     .raw();
-  const tally = newTally();
+  const tally = newTally(parts.length);
   const hasher = contentHasher();
-  const before = new Set(idsInForce(database, list.tier).sort());
-  const of = before.size;
-  for (const { part, record, index } of rowsInOrder(list)) {
+  const order = contentOrder(parts);
+  const before = idsInForce(database, tier);
+  const isFirst = before.length === 0;
+  order.forEach((index, done) => {
+    const part = parts[index];
+    if (part === undefined) return;
     const row = partToRow(part);
     hasher.add(row);
-    compareOne(tally, { index, part, record, row, old: before.delete(part.id) ? inForce.get(list.tier, part.id) : undefined });
-    progress(tally.fates.length, expectedRows(list, tally.fates.length));
-  }
-  return differenceOf(tally, { removed: [...before], inForce: of, contentSha256: hasher.digest() });
+    compareOne(tally, { index, part, row, old: isFirst ? undefined : inForce.get(tier, part.id) });
+    progress(done + 1, order.length);
+  });
+  return differenceOf(tally, { ids: new Set(parts.map(({ id }) => id)), before: before.sort(), contentSha256: hasher.digest() });
 }
 
 interface Tally {
-  readonly fates: number[];
+  readonly fates: Uint8Array;
   readonly added: string[];
   readonly changed: ChangedPart[];
   readonly scaling: ReturnType<typeof watchScaling>;
@@ -73,21 +73,20 @@ interface Tally {
   changes: number;
 }
 
-function newTally(): Tally {
-  return { fates: [], added: [], changed: [], scaling: watchScaling(), better: [], lifecycles: 0, changes: 0 };
+function newTally(parts: number): Tally {
+  return { fates: new Uint8Array(parts), added: [], changed: [], scaling: watchScaling(), better: [], lifecycles: 0, changes: 0 };
 }
 
 interface Pair {
   readonly index: number;
   readonly part: Part;
-  readonly record: ListRecord;
   readonly row: readonly Cell[];
   readonly old: readonly Cell[] | undefined;
 }
 
-function compareOne(tally: Tally, { index, part, record, row, old }: Pair): void {
+function compareOne(tally: Tally, { index, part, row, old }: Pair): void {
   if (old === undefined) {
-    tally.fates.push(FATE.added);
+    tally.fates[index] = FATE.added;
     tally.added.push(part.id);
     return;
   }
@@ -95,17 +94,22 @@ function compareOne(tally: Tally, { index, part, record, row, old }: Pair): void
   const before = isSame ? part : rowToPart(old);
   tally.scaling.see(before, part);
   if (before.lifecycle !== null && part.lifecycle !== null) tally.lifecycles += 1;
-  tally.fates.push(isSame ? FATE.unchanged : FATE.changed);
   if (isSame) return;
+  tally.fates[index] = FATE.changed;
   tally.changes += 1;
   if (isLifecycleBetter(before, part)) tally.better.push(part.id);
-  if (tally.changed.length < CHANGES_KEPT) tally.changed.push({ before, after: part, record, index });
+  if (tally.changed.length < CHANGES_KEPT) tally.changed.push({ before, after: part });
 }
 
-type Ends = Pick<Difference, 'removed' | 'inForce' | 'contentSha256'>;
+interface Ends {
+  readonly ids: ReadonlySet<string>;
+  readonly before: readonly string[];
+  readonly contentSha256: string;
+}
 
-function differenceOf(tally: Tally, { removed, inForce, contentSha256 }: Ends): Difference {
+function differenceOf(tally: Tally, { ids, before, contentSha256 }: Ends): Difference {
   const { fates, added, changed, changes, better, lifecycles } = tally;
+  const removed = before.filter((id) => !ids.has(id));
   const counts = { rows: fates.length, added: added.length, changed: changes, removed: removed.length, unchanged: fates.length - added.length - changes };
-  return { fates, added, changed, removed, counts, contentSha256, inForce, scaled: tally.scaling.found(), lifecycle: { better, known: lifecycles } };
+  return { fates, added, changed, removed, counts, contentSha256, inForce: before.length, scaled: tally.scaling.found(), lifecycle: { better, known: lifecycles } };
 }

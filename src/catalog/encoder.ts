@@ -23,8 +23,7 @@ interface Coding {
   readonly columns: readonly number[];
   /** Code by the cell, or by several as text. */
   readonly known: Map<Cell, number>;
-  /** The cells of each as JSON, as they are written: a long list has hundreds of thousands. */
-  readonly pieces: string[];
+  readonly pieces: (readonly Cell[])[];
   readonly codes: Uint32Array;
 }
 
@@ -57,7 +56,7 @@ export function encoder(database: Database.Database, expected: number): Encoder 
     finish() {
       if (parts % SEGMENT !== 0) flush();
       const insertTrait = database.prepare('insert into dictionary_trait (trait, pieces) values (?, ?)');
-      for (const { trait, pieces } of codings) insertTrait.run(trait, `[${pieces.join(',')}]`);
+      for (const { trait, pieces } of codings) insertTrait.run(trait, JSON.stringify(pieces));
       database.prepare('insert into dictionary (only, generation, form, parts, segment) select 1, generation, ?, ?, ? from part_generation').run(FORM, parts, SEGMENT);
     },
   };
@@ -72,7 +71,7 @@ function codeOf({ columns, known, pieces }: Coding, row: readonly Cell[]): numbe
   const code = known.get(key);
   if (code !== undefined) return code;
   known.set(key, pieces.length);
-  return pieces.push(JSON.stringify(columns.map((column) => row[column] ?? null))) - 1;
+  return pieces.push(columns.map((column) => row[column] ?? null)) - 1;
 }
 
 /** One cell that is filled alone, as it mostly is, is told by its place and value without making a text of all of them. */

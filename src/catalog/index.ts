@@ -10,7 +10,6 @@ import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
 import type { CurrentImport } from './imports.js';
 import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
-import type { IncomingList } from './incoming.js';
 import { listInForce } from './list-in-force.js';
 import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
@@ -30,7 +29,6 @@ export { GUARDS } from './guards.js';
 export type { Guard, GuardName } from './guards.js';
 export type { ImportOptions, ImportResult } from './import-list.js';
 export type { CurrentImport, ImportCounts } from './imports.js';
-export type { IncomingList } from './incoming.js';
 export type { ListInForce } from './list-in-force.js';
 export type { Progress } from './progress.js';
 export type { SavedStage } from './saved-stages.js';
@@ -51,7 +49,7 @@ export interface Catalog {
   /** How many parts the approved list has. */
   approvedCount(): number;
   /** Replaces the approved list in one transaction; the same parts again are no change: only where they came from is kept anew. */
-  importList(list: IncomingList, options?: ImportOptions): ImportResult;
+  importList(list: ReadList, options?: ImportOptions): ImportResult;
   /** The approved part in force with this id; null when there is none. */
   approvedPart(partId: string): Part | null;
   /** The generic sets, by id. */
@@ -125,7 +123,7 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
   };
 }
 
-function asTier(list: IncomingList, tier: IncomingList['tier']): IncomingList {
+function asTier(list: ReadList, tier: ReadList['tier']): ReadList {
   if (list.tier !== tier) throw new RangeError(`a list read as ${list.tier} cannot become the ${tier} tier`);
   return list;
 }

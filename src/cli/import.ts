@@ -1,6 +1,8 @@
 import { writeFileSync } from 'node:fs';
+import { readFile } from 'node:fs/promises';
+import { basename } from 'node:path';
 import { importJson, problemsCsv, renderDifference, renderImport, renderProblems, type ImportReport } from '../index.js';
-import type { Catalog, GuardName, IncomingList } from '../catalog/index.js';
+import type { Catalog, GuardName } from '../catalog/index.js';
 import type { Problem } from '../quantities/problem.js';
 import type { ReadList, RefusedList } from '../intake/list.js';
 import { withCatalog } from './catalog-file.js';
@@ -9,14 +11,13 @@ import { differenceOf } from './import-difference.js';
 import { guardProblems } from './import-guards.js';
 import type { ReadingOptions } from './import-options.js';
 import { importPatch, sheetProblem } from './import-patch.js';
-import { importStream } from './import-stream.js';
 import { importWatched } from './import-watched.js';
 import { watchingStages } from './kept-stages.js';
-import { openListFile, type ListFile } from './list-file.js';
 import { keepMapping, mappingText, readApproved, tellReading, type ApprovedFile } from './read-approved.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { styleFor, type Outcome, type Session } from './session.js';
 import { unreadable } from './stage-input.js';
+import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
 export interface ImportCommandOptions extends ReadingOptions {
   readonly dryRun?: boolean;
@@ -33,33 +34,20 @@ export interface ImportCommandOptions extends ReadingOptions {
 export async function runImport(session: Session, file: string | undefined, options: ImportCommandOptions): Promise<Outcome> {
   if (options.undo === true) return withCatalog(session, options, (catalog) => said(undone(catalog), session, options));
   if (file === undefined) throw new RequestError([commandProblem('C102', 'import: no FILE', { fix: 'railfit import approved.csv' })], EXIT.request);
-  const opened = await openedList(file);
-  try {
-    if (options.patch === true) return await patched({ bytes: opened.bytes(), name: opened.name }, session, options);
-    return await withCatalog(session, options, async (catalog) => (await importStream(opened, catalog, { session, options, ...TELLING })) ?? importWhole(opened, catalog, { session, options, file }));
-  } finally {
-    opened.close();
-  }
-}
-
-interface Importing {
-  readonly session: Session;
-  readonly options: ImportCommandOptions;
-  readonly file: string;
-}
-
-/** A list that is read as a whole before it is taken in. */
-async function importWhole(opened: ListFile, catalog: Catalog, { session, options, file }: Importing): Promise<Outcome> {
-  const list = await readApproved({ bytes: opened.bytes(), name: opened.name }, catalog, { session, options });
-  if (options.showMapping === true && list.ok) return { text: mappingText(list) ?? '', exit: EXIT.yes };
-  tellReading(list, session, options);
-  // Before the import: when the file cannot be written, nothing has been done.
-  if (options.errors !== undefined) writeProblems(options.errors, list.ok ? list.warnings : list.problems);
-  const sheet = list.ok ? sheetProblem(list, file) : null;
-  const report = !list.ok ? refused(list) : sheet === null ? await imported(catalog, list, { session, options }) : notAList(list, sheet);
-  const isIn = list.ok && (report.outcome === 'imported' || report.outcome === 'no-change');
-  const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
-  return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
+  const bytes = await bytesOf(file);
+  if (options.patch === true) return patched({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, session, options);
+  return withCatalog(session, options, async (catalog) => {
+    const list = await readApproved({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, catalog, { session, options });
+    if (options.showMapping === true && list.ok) return { text: mappingText(list) ?? '', exit: EXIT.yes };
+    tellReading(list, session, options);
+    // Before the import: when the file cannot be written, nothing has been done.
+    if (options.errors !== undefined) writeProblems(options.errors, list.ok ? list.warnings : list.problems);
+    const sheet = list.ok ? sheetProblem(list, file) : null;
+    const report = !list.ok ? refused(list) : sheet === null ? await imported(catalog, list, { session, options }) : notAList(list, sheet);
+    const isIn = list.ok && (report.outcome === 'imported' || report.outcome === 'no-change');
+    const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
+    return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
+  });
 }
 
 /** The filled cells of a look-up sheet. */
@@ -75,15 +63,15 @@ function notAList({ file, parts: { length } }: ReadList, problem: Problem): Impo
   return { outcome: 'refused', file, sha256: null, counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: 0 }, problems: [problem] };
 }
 
-async function openedList(file: string): Promise<ListFile> {
+async function bytesOf(file: string): Promise<Uint8Array> {
   try {
-    return await openListFile(file);
+    return file === STDIN ? await readStandardInput() : await readFile(file);
   } catch (error) {
     throw new RequestError([unreadable(file, error)], EXIT.surroundings, `Nothing was imported. (exit ${EXIT.surroundings})`);
   }
 }
 
-async function imported(catalog: Catalog, list: IncomingList, { session, options }: { session: Session; options: ImportCommandOptions }): Promise<ImportReport> {
+async function imported(catalog: Catalog, list: ReadList, { session, options }: { session: Session; options: ImportCommandOptions }): Promise<ImportReport> {
   const accepted = new Set(options.accept ?? []);
   const { result, stages } = await importWatched(catalog, list, { session, accept: accepted, dryRun: options.dryRun === true });
   const { outcome, counts } = result;
@@ -97,8 +85,6 @@ function refused(list: RefusedList): ImportReport {
   const counts = { rows: list.counts.rows, added: 0, changed: 0, removed: 0, unchanged: 0 };
   return { outcome: 'refused', file: list.file, sha256: null, counts, problems: list.problems, refused: { cells: list.counts.cells, parts: list.counts.parts } };
 }
-
-const TELLING = { imported, refused, said };
 
 function undone(catalog: Catalog): ImportReport {
   const { result, stages } = watchingStages(catalog, () => catalog.undo(), (did) => (did ? catalog.source() : null));

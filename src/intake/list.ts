@@ -57,27 +57,6 @@ export interface ReadList {
   readonly proposals: readonly ClassProposal[];
 }
 
-/** One part of a list on its way into the catalog. */
-export interface ListRow {
-  readonly part: Part;
-  readonly record: ListRecord;
-  /** Of the part in the list; what `sources.others` and `patched` are told by. */
-  readonly index: number;
-}
-
-/** A list that is read while it is taken in. Each walk over it reads the file anew, so that no more than a row of it is held. */
-export interface ListStream extends Pick<ReadList, 'ok' | 'file' | 'tier' | 'columns' | 'sources' | 'patched'> {
-  /** Of the bytes; known when `rows` has come to the end. */
-  readonly sha256: string;
-  /** Told about the whole list, known when `rows` has come to the end. */
-  readonly warnings: readonly Problem[];
-  /** How much of the file has been read, 0 to 1. */
-  share(): number;
-  readonly records: Iterable<ListRecord>;
-  /** By id. Throws at the end `ListRefused` with everything that is wrong, and `NeedsWhole` where this list cannot be read so. */
-  rows(): Iterable<ListRow>;
-}
-
 /** A cell of a look-up sheet a figure came from. */
 export type PatchedCell = Extract<Origin, { kind: 'cell' }>;
 
