@@ -21,8 +21,6 @@ export interface Failure {
 export function answerFor(error: unknown, failure: Failure): number {
   if (error instanceof RequestError) return refuse(error, failure);
   if (!(error instanceof CommanderError)) return reportFault(error, failure.argv, failure.session);
-  // Help and version have been written by then and are an answer.
-  if (error.exitCode === 0) return EXIT.yes;
   return refuse(new RequestError([fromCommander(error, failure)], EXIT.request), failure);
 }
 

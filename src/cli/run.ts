@@ -1,3 +1,4 @@
+import { CommanderError } from 'commander';
 import { EXIT } from './exit-code.js';
 import { makeProgram } from './program.js';
 import type { Session } from './session.js';
@@ -24,6 +25,8 @@ export async function runCommandLine(argv: readonly string[], world: Process): P
     await program.parseAsync([...argv], { from: 'user' });
     return exit;
   } catch (error) {
+    // Help and version have been written by then and are an answer: nothing more is loaded for them.
+    if (error instanceof CommanderError && error.exitCode === 0) return EXIT.yes;
     const { answerFor } = await import('./refusal.js');
     return answerFor(error, { argv, session, world, names: program.commands.map((command) => command.name()) });
   }
