@@ -1,6 +1,7 @@
 import type Database from 'better-sqlite3';
 import type { PartSource, Screening } from '../parts/part.js';
 import { viewOf, type ScreenView } from '../parts/screen-view.js';
+import { once } from '../quantities/once.js';
 import { CatalogError, guarded } from './catalog-error.js';
 import { catalogHash } from './content.js';
 import { freshSize, hasDictionary, rebuildDictionary } from './dictionary.js';
@@ -63,11 +64,6 @@ function sourceOf(database: Database.Database, file: string): PartSource {
     generic,
     find: (id) => guarded(file, () => partInForce(database, 'approved', id)) ?? generic.find((one) => one.id === id) ?? null,
   });
-}
-
-function once<Result>(make: () => Result): () => Result {
-  let made: { readonly result: Result } | null = null;
-  return () => (made ??= { result: make() }).result;
 }
 
 /** Not enumerable: a copy of the source with other parts in it, as `--assume` makes one, must not keep views of these. */

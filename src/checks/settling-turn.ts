@@ -2,7 +2,7 @@ import type { Loop, SettlingDemand } from '../demands/index.js';
 import { lowestHolding } from '../formulas/bisection.js';
 import { slewRateForSettling } from '../formulas/settling.js';
 import { stepPeakSlope, stepSettling } from '../formulas/step-response.js';
-import { BASES } from '../parts/basis.js';
+import { weaknessOf } from '../parts/basis.js';
 import type { Reading } from '../parts/reading.js';
 import type { TurningPoint } from '../verdicts/finding.js';
 import type { SettlingFigures } from './settling.js';
@@ -21,7 +21,7 @@ export function settlingTurn(asked: SettlingDemand, figures: SettlingFigures): T
   if (charging !== null && charging.current === null) return rate === null ? null : currentTurn(asked, figures, charging.load);
   const ofRate = rateTurn(asked, figures);
   if (rate === null || asked.closedLoop.form !== 'one-pole') return ofRate;
-  const isWeaker = BASES.indexOf(bandwidth.basis) > BASES.indexOf(rate.basis);
+  const isWeaker = weaknessOf(bandwidth.basis) > weaknessOf(rate.basis);
   return isWeaker ? (bandwidthTurn(asked, figures, rate) ?? ofRate) : (ofRate ?? bandwidthTurn(asked, figures, rate));
 }
 

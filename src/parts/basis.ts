@@ -2,9 +2,14 @@
 export const BASES = ['guaranteed', 'derated', 'estimated', 'assumed', 'borrowed'] as const;
 export type Basis = (typeof BASES)[number];
 
+/** Place of a basis in that order: the larger, the weaker. */
+export function weaknessOf(basis: Basis): number {
+  return BASES.indexOf(basis);
+}
+
 /** The weakest of several bases; `guaranteed` for none. */
 export function weakest(bases: readonly Basis[]): Basis {
   let weak = 0;
-  for (const basis of bases) weak = Math.max(weak, BASES.indexOf(basis));
+  for (const basis of bases) weak = Math.max(weak, weaknessOf(basis));
   return BASES[weak] ?? 'guaranteed';
 }

@@ -1,4 +1,4 @@
-import { BASES, weakest } from './basis.js';
+import { weakest, weaknessOf } from './basis.js';
 import { DOUBLING_KELVIN, FET_BIAS_LIMIT } from './derating.js';
 import { figureSlot, type Figure } from './figures.js';
 import type { Operating, PartUnderTest, Reading } from './reading.js';
@@ -21,7 +21,7 @@ export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent
 }
 
 function worstOf(figures: readonly Figure[], operating: Operating): Figure | undefined {
-  const rank = (figure: Figure): number => BASES.indexOf(basisOf(figure, operating));
+  const rank = (figure: Figure): number => weaknessOf(basisOf(figure, operating));
   return [...figures].sort((a, b) => rank(a) - rank(b) || b.value - a.value)[0];
 }
 

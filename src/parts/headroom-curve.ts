@@ -1,4 +1,4 @@
-import { BASES, weakest, type Basis } from './basis.js';
+import { weakest, weaknessOf, type Basis } from './basis.js';
 import { headroomPoints, pointCurrent, type HeadroomPoint, type Side } from './headroom.js';
 import type { Outlook, PartUnderTest } from './reading.js';
 
@@ -64,7 +64,7 @@ export function heaviestPoint(test: PartUnderTest, side: Side, supply: number): 
     .filter((point) => !point.assisted)
     .map((point) => ({ amperes: pointCurrent(point, side, point.supply ?? supply), slot: point.slot, basis: point.basis }));
   const isHeavier = (next: (typeof placed)[number], best: (typeof placed)[number]): boolean =>
-    next.amperes > best.amperes || (next.amperes === best.amperes && BASES.indexOf(next.basis) < BASES.indexOf(best.basis));
+    next.amperes > best.amperes || (next.amperes === best.amperes && weaknessOf(next.basis) < weaknessOf(best.basis));
   return placed.reduce<(typeof placed)[number] | null>((best, next) => (best === null || isHeavier(next, best) ? next : best), null);
 }
 

@@ -1,4 +1,4 @@
-import { BASES, weakest, type Basis } from './basis.js';
+import { weaknessOf, weakest, type Basis } from './basis.js';
 import { COLD_HOT_FACTOR, derateHeadroom, SUPPLY_REACH, TEMPERATURE_REACH, TYPICAL_FACTOR } from './derating.js';
 import { figureSlot, PARAMETERS, type Figure, type Parameter } from './figures.js';
 import type { Operating, Outlook, PartUnderTest, Reading } from './reading.js';
@@ -120,7 +120,7 @@ function preference(figure: Figure, operating: Operating): readonly number[] {
   const away = isAway(figure, operating) && COLD_HOT_FACTOR[figure.parameter] !== undefined;
   const basis = weakest([basisOf(figure, operating), ...(away ? (['estimated'] as const) : [])]);
   const worse = isMoreBetter(figure) ? figure.value : -figure.value;
-  return [BASES.indexOf(basis), temperatureRank(figure, operating), worse];
+  return [weaknessOf(basis), temperatureRank(figure, operating), worse];
 }
 
 const OVER_RANK = 1e4;

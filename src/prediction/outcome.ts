@@ -9,7 +9,7 @@ import { idealTransfer, linearStage, type LinearStage } from './equations.js';
 import { isLoadUnknown, loopFrequency } from './loop-facts.js';
 import { noiseAt } from './noise.js';
 import { notesOf } from './notes.js';
-import { once } from './once.js';
+import { once } from '../quantities/once.js';
 import { overTime, type OverTime } from './over-time.js';
 import type { Form, Predicted, Results } from './prediction.js';
 import type { Run } from './run.js';

@@ -3,7 +3,7 @@ import type { Parameter } from '../parts/figures.js';
 import { idealTransfer } from './equations.js';
 import { oscillation } from './oscillation.js';
 import { isLoadUnknown, loopFrequency } from './loop-facts.js';
-import { once } from './once.js';
+import { once } from '../quantities/once.js';
 import type { Predicted, Results, Waveform } from './prediction.js';
 import { rampRun } from './ramp.js';
 import { words } from './reasons.js';

@@ -4,7 +4,7 @@ import type { ReadingRules } from '../parts/reading.js';
 import type { Stage } from '../stage/index.js';
 import { idealTransfer } from './equations.js';
 import { modelLimits } from './model-limits.js';
-import { once } from './once.js';
+import { once } from '../quantities/once.js';
 import { outcomeOf, type Told } from './outcome.js';
 import type { FrequencyResponse, Prediction, Waveform } from './prediction.js';
 import { gridOf, responseOver } from './small-signal.js';

@@ -39,7 +39,7 @@ export function measure(read: ReadFigure, reading: Reading): Measured {
 }
 
 function notesOf(read: ReadFigure, unit: KnownUnit): string[] {
-  const cased = unit.wrongCase === undefined || unit.notes.length > 0 ? [] : [`unit written ${unit.wrongCase}: read as ${unit.canonical}`];
+  const cased = unit.wrongCase === undefined || unit.notes.length > 0 ? [] : [`unit written ${read.figure.unit?.text ?? unit.wrongCase}: read as ${unit.canonical}`];
   return [...(read.number.note === undefined ? [] : [read.number.note]), ...unit.notes, ...cased];
 }
 

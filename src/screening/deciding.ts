@@ -3,7 +3,7 @@ import { codesOf, newBuffers, segmentOf, type Buffers } from './buffers.js';
 import { COUNTS } from './digest.js';
 import type { Judging } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
-import { checkQuestions, valueQuestion, type CheckQuestion } from './question.js';
+import { checkQuestions, currentQuestion, type CheckQuestion } from './question.js';
 
 /** What a survey knows of a part that does not fit, without judging it in words. */
 export type Decided = Pick<JudgedPart, 'deciding' | 'current'>;
@@ -14,7 +14,7 @@ export type Decided = Pick<JudgedPart, 'deciding' | 'current'>;
  */
 export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number) => Decided {
   const questions = checkQuestions(run, view, circuit);
-  const current = valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+  const current = currentQuestion(run, view);
   const asked: Asked = { view, questions, current };
   let last: Answers | null = null;
   return (position) => {
@@ -27,7 +27,7 @@ export function decidingIn(run: Judging, view: ScreenView, circuit: string): (po
 interface Asked {
   readonly view: ScreenView;
   readonly questions: readonly CheckQuestion[];
-  readonly current: ReturnType<typeof valueQuestion>;
+  readonly current: ReturnType<typeof currentQuestion>;
 }
 
 interface Answers {

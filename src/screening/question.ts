@@ -83,8 +83,13 @@ function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): Che
   return { check, digests: found, settle: () => undefined, ...question(kept, (readings) => found.add(verdict(readings))) };
 }
 
+/** What a part draws, for the order: pessimistic quiescent current, A. */
+export function currentQuestion(run: Judging, view: ScreenView): ReturnType<typeof valueQuestion> {
+  return valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+}
+
 /** A number read off the pessimistic readings of every part, by answer. */
-export function valueQuestion(run: Judging, view: ScreenView, value: (worst: Readings) => number | null): Question & { readonly values: readonly (number | null)[] } {
+function valueQuestion(run: Judging, view: ScreenView, value: (worst: Readings) => number | null): Question & { readonly values: readonly (number | null)[] } {
   const values: (number | null)[] = [];
   return { values, ...question(keptFor(run, view), ([worst]) => values.push(value(worst)) - 1) };
 }

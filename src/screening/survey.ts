@@ -5,7 +5,7 @@ import { COUNTS, type Digest } from './digest.js';
 import type { Judging } from './judge.js';
 import { nearestKeeper, type Near } from './near.js';
 import { askWhileOpen, openPlan, type OpenPlan } from './open-parts.js';
-import { checkQuestions, valueQuestion, type CheckQuestion } from './question.js';
+import { checkQuestions, currentQuestion, type CheckQuestion } from './question.js';
 
 /** A part that fits, with what its place in the order depends on. */
 export interface SurveyedFit {
@@ -48,13 +48,13 @@ export interface SurveyRequest {
 /** Judges every part of a view: each check once per distinct combination of the pieces it looks at; then codes are added up. */
 export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): Survey {
   const questions = checkQuestions(run, view, circuit);
-  const current = valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+  const current = currentQuestion(run, view);
   const counting: Counting = {
-    run, view, questions, current, outcomesOnly,
+    run, view, questions, current,
     outcomes: new Uint8Array(view.size), fits: [], undecided: [], nearest: nearestKeeper(),
     fails: new Float64Array(questions.length),
     buffers: buffersFor(view, questions.length),
-    plan: openPlan(view, questions),
+    plan: outcomesOnly ? openPlan(view, questions) : null,
   };
   for (let segment = 0; segment * view.segment < view.size; segment += 1) surveySegment(counting, segment);
   const failing = new Map(questions.map(({ check }, at) => [check, counting.fails[at] ?? 0]));
@@ -65,16 +65,15 @@ interface Counting {
   readonly run: Judging;
   readonly view: ScreenView;
   readonly questions: readonly CheckQuestion[];
-  readonly current: ReturnType<typeof valueQuestion>;
-  readonly outcomesOnly: boolean;
+  readonly current: ReturnType<typeof currentQuestion>;
   readonly outcomes: Uint8Array;
   readonly fits: SurveyedFit[];
   readonly undecided: number[];
   readonly nearest: ReturnType<typeof nearestKeeper>;
   readonly fails: Float64Array;
   readonly buffers: Buffers;
-  /** In which order outcomes alone are asked for. */
-  readonly plan: OpenPlan;
+  /** In which order outcomes alone are asked for; null: everything is. */
+  readonly plan: OpenPlan | null;
 }
 
 function surveySegment(counting: Counting, segment: number): void {
@@ -88,7 +87,7 @@ function surveySegment(counting: Counting, segment: number): void {
     settle(one, { answers, count, only });
     addUp(counting, { one, at, answers, count, only });
   };
-  if (counting.outcomesOnly) {
+  if (plan !== null) {
     const left = askWhileOpen(plan, { segment, count, buffers, ask });
     sortOutOpen(counting, { segment, count, codes, left });
     return;

@@ -4,22 +4,15 @@ import Database from 'better-sqlite3';
 import { describe, expect, it } from 'vitest';
 import { freshSize, rebuildDictionary } from '../../src/catalog/dictionary.js';
 import { encoder } from '../../src/catalog/encoder.js';
-import { openCatalog, type Catalog, type GuardName } from '../../src/catalog/index.js';
+import { openCatalog, type Catalog } from '../../src/catalog/index.js';
 import { partToRow } from '../../src/catalog/part-row.js';
 import { shortlist } from '../../src/engine.js';
-import { readList } from '../../src/intake/read-list.js';
-import { writeList } from '../../src/intake/write-list.js';
-import type { ReadList } from '../../src/intake/list.js';
-import type { Part } from '../../src/parts/part.js';
 import { buildStage, type Stage } from '../../src/stage/index.js';
-import { plausibleParts } from '../bench/plausible-part.js';
-import { dice } from '../simulate/random.js';
 import { genericList } from '../support/generic-list.js';
 import { specOf } from '../support/stage-file.js';
 import { printedAs } from '../support/two-paths.js';
+import { ANY, listOf, nextList, plausible } from './plausible-lists.js';
 import { temporaryFolder } from './temporary.js';
-
-const ANY = { accept: new Set<GuardName>(['removed', 'scaled', 'lifecycle', 'older']) };
 
 function stage(name: string): Stage {
   const built = buildStage(specOf(readFileSync(join(import.meta.dirname, `../../catalog/stages/${name}.yaml`), 'utf8')));
@@ -29,26 +22,9 @@ function stage(name: string): Stage {
 
 const STAGES = [stage('thermistor-bridge'), stage('reference-buffer')];
 
-function plausible(seed: number, count: number): Part[] {
-  const parts = plausibleParts(dice(seed, 0));
-  return Array.from({ length: count }, () => parts.next().value as Part);
-}
-
-/** The parts as a list somebody sends. */
-function listOf(parts: readonly Part[], file: string): ReadList {
-  const read = readList(new TextEncoder().encode(writeList(parts, { raw: true })), { file, tier: 'approved' });
-  if (!read.ok) throw new Error(read.problems.map(({ message }) => message).join('\n'));
-  return read;
-}
-
 const FIRST = plausible(3, 24);
 const OTHERS = plausible(4, 24);
-/** Some unchanged, some with the figures of another, some gone, some new. */
-const SECOND: readonly Part[] = [
-  ...FIRST.slice(0, 10),
-  ...FIRST.slice(10, 16).map((part, at) => ({ ...part, figures: OTHERS[at]!.figures })),
-  ...OTHERS.slice(20).map((part) => ({ ...part, id: `NEW-${part.id}` })),
-];
+const SECOND = nextList(FIRST, OTHERS, { kept: 10, changed: 16, fresh: 20 });
 
 async function filled(options: { patience?: number } = {}): Promise<{ catalog: Catalog; file: string; database: Database.Database }> {
   const file = join(temporaryFolder(), 'catalog.sqlite');

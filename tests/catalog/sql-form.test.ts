@@ -4,23 +4,17 @@ import Database from 'better-sqlite3';
 import { describe, expect, it } from 'vitest';
 import { freshSize } from '../../src/catalog/dictionary.js';
 import { encoder } from '../../src/catalog/encoder.js';
-import { openCatalog, type Catalog, type GuardName } from '../../src/catalog/index.js';
+import { openCatalog, type Catalog } from '../../src/catalog/index.js';
 import { partToRow } from '../../src/catalog/part-row.js';
-import type { ReadList } from '../../src/intake/list.js';
-import { readList } from '../../src/intake/read-list.js';
-import { writeList } from '../../src/intake/write-list.js';
 import type { Part } from '../../src/parts/part.js';
 import { buildStage, type Stage } from '../../src/stage/index.js';
-import { plausibleParts } from '../bench/plausible-part.js';
 import { type Told, threeForms } from '../screening/sql-form/three-forms.js';
-import { dice } from '../simulate/random.js';
 import { genericList } from '../support/generic-list.js';
 import { specOf } from '../support/stage-file.js';
+import { ANY, listOf, nextList, plausible } from './plausible-lists.js';
 import { temporaryFolder } from './temporary.js';
 
 /** The same three answers as `tests/screening/sql-form.test.ts`, after all that can happen to a catalog. What SQL reads is the part table itself. */
-const ANY = { accept: new Set<GuardName>(['removed', 'scaled', 'lifecycle', 'older']) };
-
 /** Without the capacitance of its cable: that asks for a phase margin, which SQL does not answer. */
 function stage(): Stage {
   const text = readFileSync(join(import.meta.dirname, '../../catalog/stages/soil-moisture-probe.yaml'), 'utf8').replace(', capacitance: 100 pF', '');
@@ -29,25 +23,9 @@ function stage(): Stage {
   return built.stage;
 }
 
-function plausible(seed: number, count: number): Part[] {
-  const parts = plausibleParts(dice(seed, 0));
-  return Array.from({ length: count }, () => parts.next().value as Part);
-}
-
-function listOf(parts: readonly Part[], file: string): ReadList {
-  const read = readList(new TextEncoder().encode(writeList(parts, { raw: true })), { file, tier: 'approved' });
-  if (!read.ok) throw new Error(read.problems.map(({ message }) => message).join('\n'));
-  return read;
-}
-
 const FIRST = plausible(3, 40);
 const OTHERS = plausible(4, 40);
-/** Some as they were, some with the figures of another, some gone, some new. */
-const SECOND: readonly Part[] = [
-  ...FIRST.slice(0, 15),
-  ...FIRST.slice(15, 30).map((part, at) => ({ ...part, figures: OTHERS[at]!.figures })),
-  ...OTHERS.slice(32).map((part) => ({ ...part, id: `NEW-${part.id}` })),
-];
+const SECOND = nextList(FIRST, OTHERS, { kept: 15, changed: 30, fresh: 32 });
 
 async function filled(): Promise<{ catalog: Catalog; file: string }> {
   const file = join(temporaryFolder(), 'catalog.sqlite');

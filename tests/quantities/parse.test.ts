@@ -238,6 +238,7 @@ describe('Q-16, Q-17 noise and slew', () => {
   it('names the missing root', () => expect(refused('40 nV/Hz', 'vnoise', { headerUnit: 'nV/√Hz' })).toMatchObject({ code: 'Q004', fix: '40 nV/√Hz or 40 nV/rtHz' }));
   it.each(['0.6 V/us', '0.6 V/µs', '0.6 V/usec', '0.6V per µs', '0.6 V·µs⁻¹', '0.0006 V/ns', '600 V/ms', '6e5 V/s'])('%s', (text) => expect(nominal(text, 'slew')).toBe(600000));
   it('notes the siemens reading', () => expect(read('7 V/uS', 'slew')).toMatchObject({ nominal: 7e6, note: 'S read as seconds, not siemens' }));
+  it('notes a unit in the wrong case as it was typed', () => expect(read('2 khz', 'frequency')).toMatchObject({ nominal: 2000, note: 'unit written khz: read as kHz' }));
 });
 
 describe('Q-18 temperature and price', () => {

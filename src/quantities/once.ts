@@ -1,4 +1,4 @@
-/** What is made when it is first asked for, and then kept: the waveform alone needs no band, no noise and no settling. */
+/** What is made when it is first asked for, and then kept. */
 export function once<Made>(make: () => Made): () => Made {
   let made: { readonly value: Made } | null = null;
   return () => (made ??= { value: make() }).value;
