@@ -1,17 +1,16 @@
 import { createHash } from 'node:crypto';
 import type { Part } from '../parts/part.js';
-import type { Cell } from './part-row.js';
 
-/** SHA-256 over the content of the parts of one tier: rows of `partToRow` in `contentOrder`. Independent of file, line and time. */
+/** SHA-256 over the content of the parts of one tier: rows of `partToRow` as JSON in `contentOrder`. Independent of file, line and time. */
 export interface ContentHasher {
-  add(row: readonly Cell[]): void;
+  add(content: string): void;
   digest(): string;
 }
 
 export function contentHasher(): ContentHasher {
   const hash = createHash('sha256');
   return {
-    add: (row) => void hash.update(JSON.stringify(row)).update('\n'),
+    add: (content) => void hash.update(`${content}\n`),
     digest: () => hash.digest('hex'),
   };
 }

@@ -1,8 +1,7 @@
 import type Database from 'better-sqlite3';
-import type { Part } from '../parts/part.js';
 import { encoder, FORM } from './encoder.js';
 import { PART_COLUMNS } from './part-columns.js';
-import { partToRow, type Cell } from './part-row.js';
+import type { Cell } from './part-row.js';
 
 /** How many parts the dictionary holds; null when it is missing, of another form, or older than the part table. */
 export function freshSize(database: Database.Database): number | null {
@@ -17,17 +16,26 @@ export function hasDictionary(database: Database.Database): boolean {
 
 const WITH_DICTIONARY = 6;
 
-/** Makes the dictionary of the approved list just written. To be called in the transaction that wrote it, after the last change of a part. */
-export function encodeList(database: Database.Database, parts: readonly Part[]): void {
-  const byId = new Map(parts.map((part, at) => [part.id, at]));
-  const keys = database.prepare<[], [number, string]>("select key, id from part where tier = 'approved' and withdrawn_at is null").raw().all();
-  const { add, finish } = encoder(database, keys.length);
-  for (const [key, id] of keys.sort(byIdOf)) {
-    const part = parts[byId.get(id) ?? -1];
-    if (part === undefined) throw new RangeError(`part ${id} is in force, but not in the list that was written`);
-    add(key, partToRow(part));
-  }
-  finish();
+export interface EncodingInOrder {
+  readonly add: (id: string, key: number, row: readonly Cell[]) => void;
+  readonly finish: () => void;
+}
+
+/**
+ * Makes the dictionary of the approved list while it is written, in the transaction that writes it. Should its order be another than
+ * the dictionary's, it is made of the rows afterwards.
+ */
+export function encodingInOrder(database: Database.Database): EncodingInOrder {
+  const { add, finish } = encoder(database, Number.POSITIVE_INFINITY);
+  let [last, isInOrder] = ['', true];
+  return {
+    add(id, key, row) {
+      isInOrder &&= last < id;
+      last = id;
+      if (isInOrder) add(key, row);
+    },
+    finish: () => (isInOrder ? finish() : rebuildDictionary(database)),
+  };
 }
 
 /** Makes the dictionary anew from the part table, in a transaction of its own unless one is open. */

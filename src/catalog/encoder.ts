@@ -23,7 +23,8 @@ interface Coding {
   readonly columns: readonly number[];
   /** Code by the cell, or by several as text. */
   readonly known: Map<Cell, number>;
-  readonly pieces: (readonly Cell[])[];
+  /** The cells of each as JSON, as they are written: a long list has hundreds of thousands. */
+  readonly pieces: string[];
   readonly codes: Uint32Array;
 }
 
@@ -56,7 +57,7 @@ export function encoder(database: Database.Database, expected: number): Encoder 
     finish() {
       if (parts % SEGMENT !== 0) flush();
       const insertTrait = database.prepare('insert into dictionary_trait (trait, pieces) values (?, ?)');
-      for (const { trait, pieces } of codings) insertTrait.run(trait, JSON.stringify(pieces));
+      for (const { trait, pieces } of codings) insertTrait.run(trait, `[${pieces.join(',')}]`);
       database.prepare('insert into dictionary (only, generation, form, parts, segment) select 1, generation, ?, ?, ? from part_generation').run(FORM, parts, SEGMENT);
     },
   };
@@ -71,21 +72,22 @@ function codeOf({ columns, known, pieces }: Coding, row: readonly Cell[]): numbe
   const code = known.get(key);
   if (code !== undefined) return code;
   known.set(key, pieces.length);
-  return pieces.push(columns.map((column) => row[column] ?? null)) - 1;
+  return pieces.push(JSON.stringify(columns.map((column) => row[column] ?? null))) - 1;
 }
 
 /** One cell that is filled alone, as it mostly is, is told by its place and value without making a text of all of them. */
 function keyOf(columns: readonly number[], row: readonly Cell[]): Cell {
   const [first = 0] = columns;
   if (columns.length === 1) return row[first] ?? null;
+  const last = columns.at(-1) ?? first;
   let filled = 0;
   for (const column of columns) if ((row[column] ?? null) !== null) filled += 1;
   if (filled === 0) return null;
-  const alone = row[first] ?? null;
-  if (filled === 1 && typeof alone === 'number') return alone;
+  const [alone, points] = [row[first] ?? null, row[last] ?? null];
+  // Points are a text in brackets, which no text made of several cells begins with.
+  if (filled === 1 && (typeof alone === 'number' || typeof points === 'string')) return alone ?? points;
   let key = '';
   // Without escaping where nothing stands behind: the points, which are long.
-  const last = columns.at(-1);
   for (const column of columns) key += column === last ? String(row[column] ?? '') : `${JSON.stringify(row[column] ?? null)}|`;
   return key;
 }

@@ -44,12 +44,22 @@ export function isSuperseded(database: Database.Database, { tier, sha256 }: Pick
   return query.get(tier, sha256) !== undefined && currentImport(database, tier)?.sha256 !== sha256;
 }
 
-export function insertImport(database: Database.Database, { counts, columns, sources, ...values }: NewImport): number {
+/** What an import is known to be when its rows are written. */
+export type ImportEnd = Pick<NewImport, 'sha256' | 'contentSha256' | 'counts'>;
+
+/** Begins an import, to be completed in the same transaction. */
+export function insertImport(database: Database.Database, { columns, sources, ...values }: Omit<NewImport, keyof ImportEnd>): number {
   const insert = database.prepare(
     `insert into list_import (tier, file, sha256, content_sha256, imported_at, columns, sources, rows, added, changed, removed, unchanged)
-     values (@tier, @file, @sha256, @contentSha256, @importedAt, @columns, @sources, @rows, @added, @changed, @removed, @unchanged)`,
+     values (@tier, @file, '', '', @importedAt, @columns, @sources, 0, 0, 0, 0, 0)`,
   );
-  return Number(insert.run({ ...values, ...counts, columns: JSON.stringify(columns), sources: sourcesText(sources) }).lastInsertRowid);
+  return Number(insert.run({ ...values, columns: JSON.stringify(columns), sources: sourcesText(sources) }).lastInsertRowid);
+}
+
+export function completeImport(database: Database.Database, id: number, { sha256, contentSha256, counts }: ImportEnd): void {
+  database
+    .prepare('update list_import set sha256 = @sha256, content_sha256 = @contentSha256, rows = @rows, added = @added, changed = @changed, removed = @removed, unchanged = @unchanged where id = @id')
+    .run({ id, sha256, contentSha256, ...counts });
 }
 
 /** One import by its number. */

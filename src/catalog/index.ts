@@ -10,6 +10,7 @@ import { columnOf, columnTables } from './import-columns.js';
 import { currentImport } from './imports.js';
 import type { CurrentImport } from './imports.js';
 import { classesInForce, countInForce, idsInForce, partInForce, partsInForce } from './in-force.js';
+import type { IncomingList } from './incoming.js';
 import { listInForce } from './list-in-force.js';
 import type { ListInForce } from './list-in-force.js';
 import { originFinder } from './origins.js';
@@ -29,10 +30,13 @@ export { GUARDS } from './guards.js';
 export type { Guard, GuardName } from './guards.js';
 export type { ImportOptions, ImportResult } from './import-list.js';
 export type { CurrentImport, ImportCounts } from './imports.js';
+export type { IncomingList } from './incoming.js';
 export type { ListInForce } from './list-in-force.js';
 export type { Progress } from './progress.js';
 export type { SavedStage } from './saved-stages.js';
 export type { ColumnSubject, ScaledColumn } from './scaling.js';
+export { stageList } from './staged-list.js';
+export type { StagedList } from './staged-list.js';
 export type { WithdrawnPart } from './withdrawn.js';
 
 /** The file that keeps the parts. Every method throws `CatalogError` when the surroundings do not allow it. */
@@ -49,7 +53,7 @@ export interface Catalog {
   /** How many parts the approved list has. */
   approvedCount(): number;
   /** Replaces the approved list in one transaction; the same parts again are no change: only where they came from is kept anew. */
-  importList(list: ReadList, options?: ImportOptions): ImportResult;
+  importList(list: IncomingList, options?: ImportOptions): ImportResult;
   /** The approved part in force with this id; null when there is none. */
   approvedPart(partId: string): Part | null;
   /** The generic sets, by id. */
@@ -123,7 +127,7 @@ function catalogOf(database: Database.Database, { file, isNew }: { file: string;
   };
 }
 
-function asTier(list: ReadList, tier: ReadList['tier']): ReadList {
+function asTier(list: IncomingList, tier: IncomingList['tier']): IncomingList {
   if (list.tier !== tier) throw new RangeError(`a list read as ${list.tier} cannot become the ${tier} tier`);
   return list;
 }

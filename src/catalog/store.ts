@@ -1,59 +1,85 @@
 import type Database from 'better-sqlite3';
-import type { ReadList } from '../intake/list.js';
 import type { Tier } from '../parts/part.js';
-import { encodeList, rebuildDictionary } from './dictionary.js';
-import { encoder, type Encoder } from './encoder.js';
+import { contentHasher } from './content.js';
+import { encodingInOrder, rebuildDictionary } from './dictionary.js';
 import type { Difference } from './difference.js';
 import { FATE } from './difference.js';
-import { currentImport, insertImport, updateOrigin } from './imports.js';
-import { PART_COLUMNS } from './part-columns.js';
-import { partToRow } from './part-row.js';
+import { completeImport, currentImport, insertImport, updateOrigin, type ImportEnd } from './imports.js';
+import { lengthOf, rowsInOrder, type IncomingList, type IncomingRow } from './incoming.js';
+import { partInserter } from './part-inserter.js';
 import type { Progress } from './progress.js';
 
 /** The same parts in other bytes: where each figure came from is now this file. No version is made, so undo takes back what it did before. */
-export function refreshOrigins(database: Database.Database, list: ReadList, importId: number): void {
+export function refreshOrigins(database: Database.Database, list: IncomingList, importId: number): void {
   updateOrigin(database, importId, list);
   database.prepare('delete from record where import_id = ?').run(importId);
   const writeRecord = recordWriter(database, list, importId);
-  list.parts.forEach(({ id }, index) => writeRecord(id, index));
+  for (const row of rowsInOrder(list)) writeRecord(row);
 }
 
 export interface Writing {
-  readonly difference: Difference;
   readonly now: string | null;
   readonly progress: Progress;
 }
 
 /** Writes a difference: a new import, its versions and its records. To be run inside a transaction. */
-export function writeDifference(database: Database.Database, list: ReadList, { difference, now, progress }: Writing): void {
-  const { file, sha256, tier, columns, sources } = list;
+export function writeDifference(database: Database.Database, list: IncomingList, { difference, ...writing }: Writing & { readonly difference: Difference }): void {
   const { counts, contentSha256, removed, fates } = difference;
-  const importId = insertImport(database, { file, sha256, tier, columns, sources, counts, contentSha256, importedAt: now });
-  const withdraw = database.prepare('update part set withdrawn_at = ? where tier = ? and id = ? and withdrawn_at is null');
-  for (const id of removed) withdraw.run(importId, tier, id);
-  const insert = database.prepare(
-    `insert into part (import_id, ${PART_COLUMNS.join(', ')}) values (?, ${PART_COLUMNS.map(() => '?').join(', ')})`,
-  );
-  const writeRecord = recordWriter(database, list, importId);
-  const encoding = encodingOnTheWay(database, list, difference);
-  list.parts.forEach((part, index) => {
-    if (fates[index] === FATE.changed) withdraw.run(importId, tier, part.id);
-    if (fates[index] !== FATE.unchanged) {
-      const row = partToRow(part);
-      const { lastInsertRowid: key } = insert.run(importId, row);
-      encoding?.add(Number(key), row);
-    }
-    writeRecord(part.id, index);
-    progress(index + 1, list.parts.length);
-  });
-  if (encoding !== null) encoding.finish();
-  else if (tier === 'approved') encodeList(database, list.parts);
+  const writer = importWriter(database, list, writing);
+  for (const id of removed) writer.withdraw(id);
+  let at = 0;
+  for (const one of rowsInOrder(list)) writer.write(one, fates[at++] ?? FATE.added);
+  writer.finish({ sha256: list.sha256, contentSha256, counts });
 }
 
-/** A list of new versions alone, in the order of the dictionary, is encoded while it is written; any other afterwards. */
-function encodingOnTheWay(database: Database.Database, { tier, parts }: ReadList, { counts }: Difference): Encoder | null {
-  const isInOrder = parts.every(({ id }, at) => at === 0 || (parts[at - 1]?.id ?? '') < id);
-  return tier === 'approved' && counts.unchanged === 0 && isInOrder ? encoder(database, parts.length) : null;
+/** Writes the first list of a tier, with which there is nothing to compare: in one walk. */
+export function writeFirst(database: Database.Database, list: IncomingList, writing: Writing): Pick<Difference, 'added' | 'counts'> {
+  const writer = importWriter(database, list, writing);
+  const hasher = contentHasher();
+  const added: string[] = [];
+  for (const one of rowsInOrder(list)) {
+    hasher.add(one.content);
+    added.push(one.id);
+    writer.write(one, FATE.added);
+  }
+  const counts = { rows: added.length, added: added.length, changed: 0, removed: 0, unchanged: 0 };
+  writer.finish({ sha256: list.sha256, contentSha256: hasher.digest(), counts });
+  return { added, counts };
+}
+
+interface ImportWriter {
+  readonly withdraw: (id: string) => void;
+  readonly write: (one: IncomingRow, fate: number) => void;
+  readonly finish: (end: ImportEnd) => void;
+}
+
+function importWriter(database: Database.Database, list: IncomingList, { now, progress }: Writing): ImportWriter {
+  const { file, tier, columns, sources } = list;
+  const importId = insertImport(database, { file, tier, columns, sources, importedAt: now });
+  const end = database.prepare('update part set withdrawn_at = ? where tier = ? and id = ? and withdrawn_at is null');
+  const withdraw = (id: string): void => void end.run(importId, tier, id);
+  const insert = partInserter(database, importId);
+  const keyOf = database.prepare<[string, string], number>('select key from part where tier = ? and id = ? and withdrawn_at is null').pluck();
+  const writeRecord = recordWriter(database, list, importId);
+  const encoding = tier === 'approved' ? encodingInOrder(database) : null;
+  const length = lengthOf(list);
+  let written = 0;
+  return {
+    withdraw,
+    write(one, fate) {
+      const { id, row } = one;
+      if (fate === FATE.changed) withdraw(id);
+      const key = fate === FATE.unchanged ? (keyOf.get(tier, id) ?? 0) : insert(row);
+      encoding?.add(id, key, row);
+      writeRecord(one);
+      written += 1;
+      progress(written, length);
+    },
+    finish(known) {
+      encoding?.finish();
+      completeImport(database, importId, known);
+    },
+  };
 }
 
 /**
@@ -71,13 +97,11 @@ export function undoImport(database: Database.Database, tier: Tier): boolean {
   return true;
 }
 
-function recordWriter(database: Database.Database, list: ReadList, importId: number): (id: string, index: number) => void {
+function recordWriter(database: Database.Database, list: IncomingList, importId: number): (one: IncomingRow) => void {
   const insert = database.prepare('insert into record (import_id, part_id, line, row, cells, figures, patched) values (?, ?, ?, ?, ?, ?, ?)');
-  return (id, index) => {
-    const record = list.records[index];
-    if (record === undefined) return;
+  return ({ id, index, place: { line, row }, cells }) => {
     const others = list.sources.others.get(index);
     const patched = list.patched?.get(index);
-    insert.run(importId, id, record.line, record.row, JSON.stringify(record.cells), others === undefined ? null : JSON.stringify(Object.fromEntries(others)), patched === undefined ? null : JSON.stringify(patched));
+    insert.run(importId, id, line, row, cells(), others === undefined ? null : JSON.stringify(Object.fromEntries(others)), patched === undefined ? null : JSON.stringify(patched));
   };
 }

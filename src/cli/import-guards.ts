@@ -1,11 +1,11 @@
 import { figureSlot } from '../index.js';
-import type { Catalog, ColumnSubject, CurrentImport, Guard, GuardName, ImportResult, ScaledColumn } from '../catalog/index.js';
+import type { Catalog, ColumnSubject, CurrentImport, Guard, GuardName, ImportResult, IncomingList, ScaledColumn } from '../catalog/index.js';
 import { sourceColumn } from '../intake/list-sources.js';
-import type { ListColumn, ReadList } from '../intake/list.js';
+import type { ListColumn } from '../intake/list.js';
 import type { Problem } from '../quantities/problem.js';
 
 export interface GuardContext {
-  readonly list: ReadList;
+  readonly list: IncomingList;
   readonly result: ImportResult;
   readonly catalog: Pick<Catalog, 'columnsOf' | 'columnOf' | 'originIn'>;
   readonly accepted: ReadonlySet<GuardName>;
@@ -84,12 +84,11 @@ function isUntouched({ subject }: ScaledColumn, { list, result, catalog }: Guard
   const column = columnOf(subject, list);
   if (previous === null || column === undefined || subject.kind === 'price') return false;
   const slot = slotOf(subject);
-  const cells = new Map(list.parts.map(({ id }, index) => [id, list.records[index]?.cells[column.number - 1]?.trim()]));
-  const origins = result.changed.map(({ after }) => ({ origin: catalog.originIn(previous, after.id, slot), now: cells.get(after.id) }));
+  const origins = result.changed.map(({ after, cells }) => ({ origin: catalog.originIn(previous, after.id, slot), now: cells[column.number - 1]?.trim() }));
   return origins.length > 0 && origins.every(({ origin, now }) => origin?.kind === 'cell' && origin.cell.trim() === now);
 }
 
-function columnOf(subject: ColumnSubject, list: ReadList): ListColumn | undefined {
+function columnOf(subject: ColumnSubject, list: IncomingList): ListColumn | undefined {
   if (subject.kind === 'price') return list.columns.find(isPrice);
   return sourceColumn(list, slotOf(subject)) ?? undefined;
 }

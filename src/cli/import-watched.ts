@@ -1,6 +1,5 @@
 import type { StageChange } from '../index.js';
-import type { Catalog, GuardName, ImportResult } from '../catalog/index.js';
-import type { ReadList } from '../intake/list.js';
+import type { Catalog, GuardName, ImportResult, IncomingList } from '../catalog/index.js';
 import { interruptible } from './interruptible.js';
 import { sourceWith, watchingStages } from './kept-stages.js';
 import { progressBar } from './progress.js';
@@ -15,7 +14,7 @@ export interface WatchedImport {
 }
 
 /** The import itself, with a bar on the terminal and an open ear for Ctrl-C; and how the saved stages are answered before and after. */
-export async function importWatched(catalog: Catalog, list: ReadList, { session, accept, dryRun, basedOn }: WatchedImport): Promise<{ result: ImportResult; stages?: readonly StageChange[] }> {
+export async function importWatched(catalog: Catalog, list: IncomingList, { session, accept, dryRun, basedOn }: WatchedImport): Promise<{ result: ImportResult; stages?: readonly StageChange[] }> {
   const bar = progressBar(session, (text) => void process.stderr.write(text));
   const progress = { comparing: bar.step('comparing'), writing: bar.step('writing') };
   try {

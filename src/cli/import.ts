@@ -1,8 +1,6 @@
 import { writeFileSync } from 'node:fs';
-import { readFile } from 'node:fs/promises';
-import { basename } from 'node:path';
 import { importJson, problemsCsv, renderDifference, renderImport, renderProblems, type ImportReport } from '../index.js';
-import type { Catalog, GuardName } from '../catalog/index.js';
+import type { Catalog, GuardName, IncomingList, StagedList } from '../catalog/index.js';
 import type { Problem } from '../quantities/problem.js';
 import type { ReadList, RefusedList } from '../intake/list.js';
 import { withCatalog } from './catalog-file.js';
@@ -13,11 +11,11 @@ import type { ReadingOptions } from './import-options.js';
 import { importPatch, sheetProblem } from './import-patch.js';
 import { importWatched } from './import-watched.js';
 import { watchingStages } from './kept-stages.js';
-import { keepMapping, mappingText, readApproved, tellReading, type ApprovedFile } from './read-approved.js';
+import { openListFile, type ListFile } from './list-file.js';
+import { keepMapping, mappingText, readWhole, refusedUnread, tellReading } from './read-approved.js';
+import { readStaged } from './read-staged.js';
 import { commandProblem, RequestError } from './request-error.js';
 import { styleFor, type Outcome, type Session } from './session.js';
-import { unreadable } from './stage-input.js';
-import { readStandardInput, STDIN, STDIN_NAME } from './standard-input.js';
 
 export interface ImportCommandOptions extends ReadingOptions {
   readonly dryRun?: boolean;
@@ -34,24 +32,60 @@ export interface ImportCommandOptions extends ReadingOptions {
 export async function runImport(session: Session, file: string | undefined, options: ImportCommandOptions): Promise<Outcome> {
   if (options.undo === true) return withCatalog(session, options, (catalog) => said(undone(catalog), session, options));
   if (file === undefined) throw new RequestError([commandProblem('C102', 'import: no FILE', { fix: 'railfit import approved.csv' })], EXIT.request);
-  const bytes = await bytesOf(file);
-  if (options.patch === true) return patched({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, session, options);
-  return withCatalog(session, options, async (catalog) => {
-    const list = await readApproved({ bytes, name: file === STDIN ? STDIN_NAME : basename(file) }, catalog, { session, options });
-    if (options.showMapping === true && list.ok) return { text: mappingText(list) ?? '', exit: EXIT.yes };
+  const opened = await openListFile(file);
+  try {
+    if (options.patch === true) return await patched(opened, session, options);
+    return await withCatalog(session, options, (catalog) => taken(opened, catalog, { session, options, file }));
+  } finally {
+    opened.close();
+  }
+}
+
+interface Importing {
+  readonly session: Session;
+  readonly options: ImportCommandOptions;
+  readonly file: string;
+}
+
+/** Reads a list and takes it in. */
+async function taken(opened: ListFile, catalog: Catalog, { session, options, file }: Importing): Promise<Outcome> {
+  const list = (await readStaged(opened, catalog, { session, options })) ?? (await readWhole(opened, catalog, { session, options }));
+  if (!list.ok || 'rows' in list) return staged(list, catalog, { session, options });
+  if (options.showMapping === true) return { text: mappingText(list) ?? '', exit: EXIT.yes };
+  tellReading(list, session, options);
+  tellProblems(list.warnings, options);
+  const sheet = sheetProblem(list, file);
+  const report = sheet === null ? await imported(catalog, list, { session, options }) : notAList(list, sheet);
+  const isIn = report.outcome === 'imported' || report.outcome === 'no-change';
+  const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
+  return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
+}
+
+/** What was refused, or read with nothing to tell about the reading. */
+async function staged(list: StagedList | RefusedList, catalog: Catalog, { session, options }: Omit<Importing, 'file'>): Promise<Outcome> {
+  if (!list.ok) {
     tellReading(list, session, options);
-    // Before the import: when the file cannot be written, nothing has been done.
-    if (options.errors !== undefined) writeProblems(options.errors, list.ok ? list.warnings : list.problems);
-    const sheet = list.ok ? sheetProblem(list, file) : null;
-    const report = !list.ok ? refused(list) : sheet === null ? await imported(catalog, list, { session, options }) : notAList(list, sheet);
-    const isIn = list.ok && (report.outcome === 'imported' || report.outcome === 'no-change');
-    const unkept = isIn ? keepMapping(list.mapping, session, options) : [];
-    return said({ ...report, problems: [...report.problems, ...unkept] }, session, options);
-  });
+    tellProblems(list.problems, options);
+    return said(refused(list), session, options);
+  }
+  try {
+    tellProblems(list.warnings, options);
+    return said(await imported(catalog, list, { session, options }), session, options);
+  } finally {
+    list.close();
+  }
+}
+
+/** Before the import: when the file of problems cannot be written, nothing has been done. */
+function tellProblems(problems: readonly Problem[], { errors }: ImportCommandOptions): void {
+  if (errors !== undefined) writeProblems(errors, problems);
 }
 
 /** The filled cells of a look-up sheet. */
-async function patched(sheet: ApprovedFile, session: Session, options: ImportCommandOptions): Promise<Outcome> {
+async function patched(opened: ListFile, session: Session, options: ImportCommandOptions): Promise<Outcome> {
+  const tooLarge = refusedUnread(opened, options);
+  if (tooLarge !== null) return said(refused(tooLarge), session, options);
+  const sheet = { bytes: opened.bytes(), name: opened.name };
   return withCatalog(session, options, async (catalog) => {
     const report = await importPatch(sheet, catalog, { session, dryRun: options.dryRun === true, accept: new Set(options.accept ?? []) });
     if (options.errors !== undefined) writeProblems(options.errors, report.problems);
@@ -63,15 +97,7 @@ function notAList({ file, parts: { length } }: ReadList, problem: Problem): Impo
   return { outcome: 'refused', file, sha256: null, counts: { rows: length, added: 0, changed: 0, removed: 0, unchanged: 0 }, problems: [problem] };
 }
 
-async function bytesOf(file: string): Promise<Uint8Array> {
-  try {
-    return file === STDIN ? await readStandardInput() : await readFile(file);
-  } catch (error) {
-    throw new RequestError([unreadable(file, error)], EXIT.surroundings, `Nothing was imported. (exit ${EXIT.surroundings})`);
-  }
-}
-
-async function imported(catalog: Catalog, list: ReadList, { session, options }: { session: Session; options: ImportCommandOptions }): Promise<ImportReport> {
+async function imported(catalog: Catalog, list: IncomingList, { session, options }: { session: Session; options: ImportCommandOptions }): Promise<ImportReport> {
   const accepted = new Set(options.accept ?? []);
   const { result, stages } = await importWatched(catalog, list, { session, accept: accepted, dryRun: options.dryRun === true });
   const { outcome, counts } = result;

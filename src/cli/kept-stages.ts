@@ -1,6 +1,5 @@
 import type { PartSource, StageChange, StageStanding } from '../index.js';
-import type { Catalog } from '../catalog/index.js';
-import type { ReadList } from '../intake/list.js';
+import type { Catalog, IncomingList } from '../catalog/index.js';
 import type { Problem } from '../quantities/problem.js';
 import { foundPath, judgeAgain, shownPath, type JudgedAgain, type KeptStage, type StageAnswer, type StageFile } from '../saved/index.js';
 
@@ -20,9 +19,9 @@ export function watchingStages<R>(catalog: Catalog, work: () => R, after: (resul
 }
 
 /** What the catalog would answer from with this list in force. */
-export function sourceWith(list: ReadList, catalog: Pick<Catalog, 'source'>): PartSource {
+export function sourceWith(list: IncomingList, catalog: Pick<Catalog, 'source'>): PartSource {
   const source = catalog.source();
-  const parts = [...list.parts].sort((a, b) => (a.id < b.id ? -1 : Number(a.id > b.id)));
+  const parts = ('parts' in list ? [...list.parts] : Array.from(list.rows(), (one) => one.part())).sort((a, b) => (a.id < b.id ? -1 : Number(a.id > b.id)));
   return { parts: [...parts, ...source.parts.filter(({ tier }) => tier === 'generic')], sha256: source.sha256, origin: () => null };
 }
 

@@ -2,15 +2,16 @@ import { isatty } from 'node:tty';
 import type { Catalog } from '../catalog/index.js';
 import type { ClassProposal } from '../intake/class-proposal.js';
 import { mappingDocument } from '../intake/csvw.js';
-import type { ListOptions, ListResult } from '../intake/list.js';
+import type { ListOptions, ListResult, RefusedList } from '../intake/list.js';
 import type { ListMapping } from '../intake/mapping.js';
-import { readList } from '../intake/read-list.js';
+import { readList, refusedBySize } from '../intake/read-list.js';
 import { isWorkbook, readWorkbook } from '../intake/workbook.js';
 import { renderImportNotes } from '../index.js';
 import type { Problem } from '../quantities/problem.js';
 import { EXIT } from './exit-code.js';
 import { answersOf, type ReadingOptions } from './import-options.js';
 import { interruptible } from './interruptible.js';
+import type { ListFile } from './list-file.js';
 import { saveMapping, savedMappings } from './mapping-files.js';
 import { progressBar } from './progress.js';
 import { RequestError } from './request-error.js';
@@ -45,6 +46,19 @@ export async function readApproved({ bytes, name }: ApprovedFile, catalog: Catal
     if (isInterruption(error)) throw new RequestError([], EXIT.interrupted, `interrupted: nothing was imported (exit ${EXIT.interrupted})`);
     throw error;
   }
+}
+
+/** The same of a file that is not read yet, and is not when it is too large for a text. */
+export async function readWhole(opened: ListFile, catalog: Catalog, context: { session: Session; options: ReadingOptions }): Promise<ListResult> {
+  return refusedUnread(opened, context.options) ?? readApproved({ bytes: opened.bytes(), name: opened.name }, catalog, context);
+}
+
+/** A text over the limit, refused by its size alone. A workbook has limits of its own. */
+export function refusedUnread({ name, source }: ListFile, { large }: Pick<ReadingOptions, 'large'>): RefusedList | null {
+  const refused = refusedBySize({ file: name, length: source.length }, { large: large === true });
+  if (refused === null) return null;
+  for (const start of source.chunks()) return isWorkbook(start) ? null : refused;
+  return refused;
 }
 
 /** With a bar for a long list, and so that Ctrl-C ends it at once. */

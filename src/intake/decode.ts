@@ -1,5 +1,4 @@
-import { limitsOf } from './limits.js';
-import type { Encoding } from './limits.js';
+import { sizeFault, type Encoding } from './limits.js';
 import { firstBadByte } from './utf8.js';
 import { decodeWindows1252 } from './windows-1252.js';
 
@@ -19,11 +18,8 @@ export interface DecodeOptions {
  * UTF-8. `encoding` overrides. NUL bytes without the mark of UTF-16 are refused with what they look like.
  */
 export function decodeList(bytes: Uint8Array, { encoding, large = false }: DecodeOptions = {}): DecodeResult {
-  const limit = limitsOf(large).bytes;
-  if (bytes.length > limit) {
-    const fix = large ? 'split the list' : 'split the list, or lift the limit with --large';
-    return refuse('I105', `the file has ${bytes.length} bytes, the limit is ${limit / 1024 / 1024} MiB`, fix);
-  }
+  const size = sizeFault(bytes.length, large);
+  if (size !== null) return { ok: false, ...size };
   const mark = markOf(bytes);
   if (encoding !== undefined) return decodeAs(encoding, { bytes, from: mark?.encoding === encoding ? mark.length : 0 }, 'as given by --encoding');
   if (mark !== null) return decodeAs(mark.encoding, { bytes, from: mark.length }, 'byte-order mark, removed');

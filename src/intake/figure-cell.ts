@@ -26,7 +26,7 @@ export function figureCellReader(column: FigureColumn, decimal: DecimalRule): (c
     const earlier = known.get(cell);
     if (earlier !== undefined) return earlier;
     const read = readFigureCell(cell, column, decimal);
-    known.set(cell, read);
+    if (known.size < MOST_REMEMBERED) known.set(cell, read);
     return read;
   };
 }

@@ -30,6 +30,7 @@ export function figureReaders(columns: readonly ListColumn[], decimal: DecimalRu
     const read = valueReader(column.reading, decimal);
     return read === null ? [] : [{ column, read: remembered(read, isPerRow(column.reading, hasLoad)) }];
   });
+  const places = Uint32Array.from(readers, ({ column }) => column.number - 1);
   const load = columns.find(({ reading }) => reading.kind === 'load');
   const rails = columns.filter(({ reading }) => reading.kind === 'rail');
   // The canonical CSV says everything in columns; the descriptions of ordinary lists say what their columns do not.
@@ -37,10 +38,13 @@ export function figureReaders(columns: readonly ListColumn[], decimal: DecimalRu
   const description = isOrdinary ? columns.find(({ reading }) => reading.kind === 'identity' && reading.field === 'description') : undefined;
   return (record, sink) => {
     const row: RowContext = { load: load === undefined ? null : loadOf(load, record, { sink, decimal }), channels: sink.channels };
-    for (const { column, read } of readers) {
-      const cell = record.cells[column.number - 1] ?? '';
+    const { cells } = record;
+    for (let at = 0; at < places.length; at += 1) {
+      const cell = cells[places[at] ?? 0] ?? '';
       // As most cells of a wide table are.
-      if (cell !== '') readCell(cell, read, { column, row, sink });
+      if (cell === '') continue;
+      const reader = readers[at];
+      if (reader !== undefined) readCell(cell, reader.read, { column: reader.column, row, sink });
     }
     for (const column of rails) railCell(column, record, sink);
     const words = description === undefined || sink.found.rails !== null ? null : railWordsOf(sink.description ?? '');

@@ -23,24 +23,33 @@ export function idHabits(ids: readonly string[]): IdHabits {
   };
 }
 
-/** By length and position, how many ids have which digit there. */
-type Digits = ReadonlyMap<string, number>;
+/** By length of the id: how many there are, and how many of them have which digit where; `counts[10 · position + digit]`. */
+type Digits = ReadonlyMap<number, { all: number; readonly counts: number[] }>;
 
-function digitCounts(ids: readonly string[]): Map<string, number> {
-  const counts = new Map<string, number>();
-  const count = (key: string): void => void counts.set(key, (counts.get(key) ?? 0) + 1);
+function digitCounts(ids: readonly string[]): Digits {
+  const digits = new Map<number, { all: number; readonly counts: number[] }>();
   for (const id of ids) {
-    count(String(id.length));
-    for (const [at, character] of Array.from(id).entries()) if (/\d/u.test(character)) count(`${id.length} ${at} ${character}`);
+    const known = digits.get(id.length) ?? { all: 0, counts: new Array<number>(10 * id.length).fill(0) };
+    digits.set(id.length, known);
+    known.all += 1;
+    let at = 0;
+    for (const character of id) {
+      const digit = character.charCodeAt(0) - ZERO;
+      if (digit >= 0 && digit <= 9) known.counts[10 * at + digit] = (known.counts[10 * at + digit] ?? 0) + 1;
+      at += 1;
+    }
   }
-  return counts;
+  return digits;
 }
 
+const ZERO = 0x30;
+
 function lookAlike(id: string, digits: Digits): CellFault | null {
-  const all = digits.get(String(id.length)) ?? 0;
+  if (!/[OoIl]/u.test(id)) return null;
+  const { all, counts } = digits.get(id.length) ?? { all: 0, counts: [] };
   for (const [at, character] of Array.from(id).entries()) {
     const digit = TWINS[character];
-    const others = digit === undefined ? 0 : (digits.get(`${id.length} ${at} ${digit}`) ?? 0);
+    const others = digit === undefined ? 0 : (counts[10 * at + Number(digit)] ?? 0);
     if (digit === undefined || others < LEAST - 1 || others * 4 < all * 3) continue;
     const fix = id.slice(0, at) + digit + id.slice(at + 1);
     return { code: 'I404', reason: `letter ${character} where ${others} of ${all} ids have the digit ${digit}`, fix };

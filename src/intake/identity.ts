@@ -41,14 +41,21 @@ export function checkIdentities(read: readonly ReadPart[], options: ListOptions,
     if (fault !== null) add(at ?? one, fault);
     const habit = repeated || twin ? null : habits.fault(one.part.id);
     if (habit !== null) add(one, { field: 'id', severity: 'warning', fault: habit });
-    const all = [reserved(one.part, options), unknownClass(one.part, options.classes)];
-    for (const found of all) if (found !== null) add(one, found);
+    for (const found of ownFaults(one.part, options)) add(one, found);
     return !repeated;
   });
   return { kept, faults };
 }
 
-type Found = Pick<IdentityFault, 'field' | 'fault' | 'severity'>;
+/** What is wrong with the id and the class of a part whatever else is in the list. */
+export function ownFaults(part: Part, options: ListOptions): Found[] {
+  return [reserved(part, options), unknownClass(part, options.classes)].filter((found) => found !== null);
+}
+
+/** Ids that differ only in what is easily mistaken have the same key. */
+export const likenessOf = (id: string): string => foldId(id.replace(/\s+/gu, ''));
+
+export type Found = Pick<IdentityFault, 'field' | 'fault' | 'severity'>;
 
 interface Compared {
   readonly fault: Found | null;
@@ -67,7 +74,7 @@ function oddness({ part: { id }, record }: ReadPart, { idColumn, habits }: { idC
 
 function compareIds(one: ReadPart, seen: Map<string, ReadPart>, odd: (part: ReadPart) => number): Compared {
   const { id } = one.part;
-  const key = foldId(id.replace(/\s+/gu, ''));
+  const key = likenessOf(id);
   const earlier = id === '' ? undefined : seen.get(key);
   if (earlier === undefined) {
     if (id !== '') seen.set(key, one);

@@ -19,3 +19,11 @@ export const LIMITS: Limits = { bytes: 64 * 1024 * 1024, records: 200_000, colum
 const LARGE: Limits = { ...LIMITS, bytes: 384 * 1024 * 1024, records: 2_000_000 };
 
 export const limitsOf = (large: boolean): Limits => (large ? LARGE : LIMITS);
+
+/** What a file of so many bytes is refused with, before anything of it is read; null when it is not. */
+export function sizeFault(bytes: number, large: boolean): { readonly code: string; readonly reason: string; readonly fix: string; readonly line: number } | null {
+  const limit = limitsOf(large).bytes;
+  if (bytes <= limit) return null;
+  const fix = large ? 'split the list' : 'split the list, or lift the limit with --large';
+  return { code: 'I105', reason: `the file has ${bytes} bytes, the limit is ${limit / 1024 / 1024} MiB`, fix, line: 1 };
+}

@@ -7,6 +7,7 @@ import type { Layout } from './layout.js';
 import type { Encoding } from './limits.js';
 import type { ListSources } from './list-sources.js';
 import type { ListMapping } from './mapping.js';
+import type { TextTally } from './text-tally.js';
 import type { Workbook } from './workbook.js';
 
 /** One column of a list as it was read: what its cells mean and where they stand. */
@@ -55,6 +56,28 @@ export interface ReadList {
   readonly mapping: ListMapping | null;
   /** Classes the figures of parts without one are near to; not applied. */
   readonly proposals: readonly ClassProposal[];
+}
+
+/** One part of a list on its way into the catalog. */
+export interface ListRow {
+  readonly part: Part;
+  readonly record: ListRecord;
+  /** Of the part in the list; what `sources.others` and `patched` are told by. */
+  readonly index: number;
+}
+
+/** A list that is read row by row, so that no more than a row of it is held. */
+export interface ListStream extends Pick<ReadList, 'ok' | 'file' | 'tier' | 'columns' | 'sources' | 'patched'> {
+  /** Of the bytes; known when `rows` has come to the end. */
+  readonly sha256: string;
+  /** Told about the whole list, known when `rows` has come to the end. */
+  readonly warnings: readonly Problem[];
+  /** How much of the file has been read, 0 to 1. */
+  share(): number;
+  /** What its columns of text say, by number; known when `rows` has come to the end. */
+  readonly tallies: ReadonlyMap<number, TextTally>;
+  /** By id. Throws at the end `ListRefused` with everything that is wrong, and `NeedsWhole` where this list cannot be read so. */
+  rows(): Iterable<ListRow>;
 }
 
 /** A cell of a look-up sheet a figure came from. */

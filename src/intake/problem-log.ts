@@ -11,6 +11,9 @@ export interface FileFault {
   readonly line?: number;
 }
 
+/** More columns than any list has by far, so that row and column fit one number. */
+const WIDEST = 2 ** 20;
+
 /** Collects what is wrong with one list: counts everything, keeps up to the limit, tells a repeated note once per column. */
 export class ProblemLog {
   readonly file: string;
@@ -23,7 +26,9 @@ export class ProblemLog {
   readonly notes: string[] = [];
   readonly questions: ListQuestion[] = [];
   readonly #problems: Problem[] = [];
-  readonly #cells = new Set<string>();
+  readonly #later: Problem[] = [];
+  /** Row and column in one number. */
+  readonly #cells = new Set<number>();
   readonly #rows = new Set<number>();
   readonly #notes = new Set<string>();
 
@@ -37,13 +42,24 @@ export class ProblemLog {
     if (this.#problems.length < LIMITS.problems) this.#problems.push(problem);
   }
 
+  /** Counted now, kept behind everything that is added otherwise: what is found row by row and told of the list as a whole. */
+  addLater(problem: Problem): void {
+    if (problem.severity === 'error') this.#count(problem);
+    if (this.#later.length < LIMITS.problems) this.#later.push(problem);
+  }
+
+  /** How many are kept so far. */
+  get kept(): number {
+    return this.#problems.length + this.#later.length;
+  }
+
   addAll(problems: readonly Problem[]): void {
     for (const problem of problems) this.add(problem);
   }
 
   /** In file order: by row, then by column. */
   list(): readonly Problem[] {
-    return [...this.#problems].sort(
+    return [...this.#problems, ...this.#later].slice(0, LIMITS.problems).sort(
       (a, b) => (a.place?.row ?? 0) - (b.place?.row ?? 0) || (a.place?.column ?? 0) - (b.place?.column ?? 0),
     );
   }
@@ -62,7 +78,7 @@ export class ProblemLog {
     this.errors += 1;
     if (place?.row === undefined) return;
     if (place.row > this.headerRow) this.#rows.add(place.row);
-    if (place.column !== undefined) this.#cells.add(`${place.row},${place.column}`);
+    if (place.column !== undefined) this.#cells.add(place.row * WIDEST + place.column);
   }
 
   // Notes on how cells were read are told once per column: the first cell stands for the others.

@@ -11,9 +11,9 @@ import { layoutProblem, layoutQuestion } from './layout-question.js';
 import type { LaidOut, Layout } from './layout.js';
 import { laidOut, PLAIN_LAYOUT, proposedLayout } from './layout.js';
 import { finishedList, isOrdinary } from './finished-list.js';
-import { limitsOf } from './limits.js';
+import { limitsOf, sizeFault } from './limits.js';
 import { columnNotes, countNote, detectionNote } from './list-notes.js';
-import type { ListColumn, ListOptions, ListResult } from './list.js';
+import type { ListColumn, ListOptions, ListResult, RefusedList } from './list.js';
 import type { MatchedMapping } from './mapping.js';
 import { matchMapping } from './mapping.js';
 import { ProblemLog } from './problem-log.js';
@@ -54,6 +54,14 @@ export function readList(bytes: Uint8Array, options: ListOptions): ListResult {
   log.shape = { delimiter: split.delimiter, columns: split.records[0]?.cells.length ?? 0, decimal: null };
   if (split.undecided !== undefined) return askDelimiter(split, log);
   return readLaidOut({ options, log, bytes, decoded, split });
+}
+
+/** A text of so many bytes, refused before it is read; null when it may be read. */
+export function refusedBySize({ file, length }: { readonly file: string; readonly length: number }, { large = false }: Pick<ListOptions, 'large'>): RefusedList | null {
+  const fault = sizeFault(length, large);
+  if (fault === null) return null;
+  const { reason: message, ...rest } = fault;
+  return new ProblemLog(file).refuse({ message, ...rest });
 }
 
 /** A sheet of a workbook, in the same way; its places are rows, and the sheet is named with the file. */

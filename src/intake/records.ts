@@ -27,37 +27,86 @@ export interface Records {
  * is a fault and left out, and reading goes on at the next line; a quote that never closes has swallowed the rest.
  */
 export function recordsOf(text: string, delimiter: Delimiter): Records {
-  const reader = new RecordReader(text, delimiter.charCodeAt(0));
   const records: ListRecord[] = [];
   const faults: SplitFault[] = [];
-  for (let row = 1; !reader.isAtEnd(); row += 1) {
-    const line = reader.line;
-    const { cells, fault } = reader.record();
-    if (fault === null) records.push({ line, lineEnd: reader.lineOfEnd, row, cells });
-    else faults.push({ ...fault, line, row });
+  for (const one of recordStream([text], delimiter)) {
+    if ('cells' in one) records.push(one);
+    else faults.push(one);
   }
   return { records, faults };
+}
+
+/** The same of a text that comes in pieces, cut anywhere; no more of it is held than the record that is being read. */
+export function* recordStream(pieces: Iterable<string>, delimiter: Delimiter): Generator<ListRecord | SplitFault> {
+  const reader = new RecordReader(delimiter.charCodeAt(0));
+  const coming = pieces[Symbol.iterator]();
+  let isWhole = false;
+  for (let row = 1; ; ) {
+    const from = reader.place();
+    const read = reader.isAtEnd() ? null : reader.record();
+    if (!isWhole && reader.isAtEnd()) {
+      // What comes next may belong to this record. A long one is not read again for every piece.
+      reader.backTo(from);
+      const wanted = 2 * reader.left();
+      do {
+        const next = coming.next();
+        if (next.done === true) isWhole = true;
+        else reader.append(next.value);
+      } while (!isWhole && reader.left() < wanted);
+      continue;
+    }
+    if (read === null) return;
+    const { cells, fault } = read;
+    yield fault === null ? { line: from.line, lineEnd: reader.lineOfEnd, row, cells } : { ...fault, line: from.line, row };
+    row += 1;
+  }
 }
 
 const [QUOTE, CR, LF] = [0x22, 0x0d, 0x0a];
 
 type OpenFault = Omit<SplitFault, 'line' | 'row'>;
 
+/** Where reading has come to in the text that is held. */
+interface ReadingPlace {
+  readonly at: number;
+  readonly line: number;
+  readonly lineStart: number;
+}
+
 class RecordReader {
   /** Physical line of the place reading has come to. */
   line = 1;
   /** Physical line on which the last record ended. */
   lineOfEnd = 1;
-  readonly #text: string;
+  #text = '';
   readonly #delimiter: number;
   readonly #pooled = cellPool();
   #at = 0;
   #lineStart = 0;
   #width = 0;
 
-  constructor(text: string, delimiter: number) {
-    this.#text = text;
+  constructor(delimiter: number) {
     this.#delimiter = delimiter;
+  }
+
+  /** More of the text; what has been read of it is let go. */
+  append(piece: string): void {
+    this.#text = this.#text.slice(this.#at) + piece;
+    this.#lineStart -= this.#at;
+    this.#at = 0;
+  }
+
+  /** Characters that are there and not read yet. */
+  left(): number {
+    return this.#text.length - this.#at;
+  }
+
+  place(): ReadingPlace {
+    return { at: this.#at, line: this.line, lineStart: this.#lineStart };
+  }
+
+  backTo({ at, line, lineStart }: ReadingPlace): void {
+    [this.#at, this.line, this.#lineStart] = [at, line, lineStart];
   }
 
   isAtEnd(): boolean {

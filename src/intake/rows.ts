@@ -4,7 +4,8 @@ import type { CellFault } from './cell-fault.js';
 import { cellProblem } from './cell-fault.js';
 import type { DecimalRule } from './decimal-mark.js';
 import { contradictions } from './figure-rules.js';
-import type { ReadPart } from './identity.js';
+import type { Problem } from '../quantities/problem.js';
+import type { IdentityFault, ReadPart } from './identity.js';
 import { checkIdentities } from './identity.js';
 import type { ListColumn, ListOptions, ListRecord } from './list.js';
 import type { PartReader } from './part-reader.js';
@@ -26,11 +27,14 @@ export function readParts(rows: readonly ListRecord[], { columns, options, log, 
     return readRow(record, { readPart, log });
   });
   const { kept, faults } = checkIdentities(read, options, columns.find(isIdColumn)?.number ?? 1);
-  for (const { record, part, field, fault, severity } of faults) {
-    const column = columns.find(({ reading }) => reading.kind === 'identity' && reading.field === field);
-    if (column !== undefined) log.add(cellProblem(fault, { file: options.file, record, column, part }, severity));
-  }
+  for (const found of faults) for (const problem of identityProblem(found, columns, options.file)) log.add(problem);
   return kept;
+}
+
+/** A fault of an id or a class with its place; none where the list has no such column. */
+export function identityProblem({ record, part, field, fault, severity }: IdentityFault, columns: readonly ListColumn[], file: string): Problem[] {
+  const column = columns.find(({ reading }) => reading.kind === 'identity' && reading.field === field);
+  return column === undefined ? [] : [cellProblem(fault, { file, record, column, part }, severity)];
 }
 
 const isIdColumn = ({ reading }: ListColumn): boolean => reading.kind === 'identity' && reading.field === 'id';
@@ -40,7 +44,8 @@ interface PartReadingContext {
   readonly log: ProblemLog;
 }
 
-function readRow(record: ListRecord, { readPart, log }: PartReadingContext): ReadPart {
+/** The part of one row; what is wrong with its cells goes to the log. */
+export function readRow(record: ListRecord, { readPart, log }: PartReadingContext): ReadPart {
   const found: [ListColumn, CellFault, 'error' | 'warning'][] = [];
   const { part, sources, railOutputs } = readPart(record, (column, fault, severity) => void found.push([column, fault, severity]));
   const columnOf = (figure: Figure): ListColumn | undefined => sources[part.figures.indexOf(figure)];
