@@ -31,14 +31,12 @@ export function* rowsInOrder(list: IncomingList): Iterable<IncomingRow> {
   }
   const { parts, records } = list;
   for (const index of contentOrder(parts)) {
-    const [part, record = NO_RECORD] = [parts[index], records[index]];
-    if (part === undefined) continue;
+    const [part, record] = [parts[index], records[index]];
+    if (part === undefined || record === undefined) throw new RangeError(`part ${index} of ${list.file} has no record`);
     const row = partToRow(part);
     yield { id: part.id, row, content: JSON.stringify(row), index, place: record, part: () => part, cells: () => JSON.stringify(record.cells) };
   }
 }
-
-const NO_RECORD = { line: 0, row: 0, cells: [] };
 
 /** How many parts there are. */
 export const lengthOf = (list: IncomingList): number => ('rows' in list ? list.length : list.parts.length);

@@ -69,7 +69,8 @@ function importWriter(database: Database.Database, list: IncomingList, { now, pr
     write(one, fate) {
       const { id, row } = one;
       if (fate === FATE.changed) withdraw(id);
-      const key = fate === FATE.unchanged ? (keyOf.get(tier, id) ?? 0) : insert(row);
+      const key = fate === FATE.unchanged ? keyOf.get(tier, id) : insert(row);
+      if (key === undefined) throw new RangeError(`part ${id} is unchanged, but not in force`);
       encoding?.add(id, key, row);
       writeRecord(one);
       written += 1;

@@ -11,7 +11,7 @@ export function unknownKey(key: string, level: string): Complaint {
     return { code: 'S101', message: `${key} is written as one map in the other`, fix: howToWrite(key, true) };
   }
   const keys = acceptedKeys(level);
-  const meant = nearest(key, keys) ?? elsewhere(key);
+  const meant = nearest(key, keys) ?? endingIn(key, keys) ?? elsewhere(key);
   const where = level === '' ? 'a stage' : level;
   return { code: 'S101', message: `${shown(key)} is not a key of ${where}${hint(meant)} accepted: ${keys.join(', ')}`, fix: meant ?? spacedColon(key) ?? 'leave it out' };
 }
@@ -47,6 +47,13 @@ const writtenPaths = (): readonly string[] => knownPaths().filter((path) => !pat
 
 function hint(meant: string | undefined): string {
   return meant === undefined ? ';' : `, did you mean ${meant}?`;
+}
+
+/** The only key of this level that ends in what was typed as its last word: `current` among the limits is `supplyCurrent`. */
+function endingIn(key: string, keys: readonly string[]): string | undefined {
+  const word = fold(key);
+  const [found, ...more] = keys.filter((one) => /[A-Z][a-z]*$/u.exec(one)?.[0].toLowerCase() === word);
+  return more.length === 0 ? found : undefined;
 }
 
 /** The same last word at another level: `dcError` is `limits.dcError`; where several maps have it, the one that most topologies have. */
