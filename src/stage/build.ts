@@ -17,6 +17,7 @@ import type { Made, Maker, Settled } from './making.js';
 import { makeMultipleFeedback } from './multiple-feedback-low-pass.js';
 import { makeOscillator } from './relaxation-oscillator.js';
 import { referenceAt, referenceEnds } from './reference.js';
+import { rejectionCautions } from './rejection.js';
 import { rippleCautions } from './ripple.js';
 import { makeSallenKey } from './sallen-key-low-pass.js';
 import { settle } from './settle.js';
@@ -98,7 +99,7 @@ function assemble(spec: StageSpec, settled: Settled, made: Made): Stage {
     referenceResistance: reference.resistance?.value ?? 0,
     ends: endsOf(spec, reference),
     asked: askedOf(spec),
-    cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...rippleCautions(spec, circuit, { reference, centre: drive.centre }), ...made.cautions],
+    cautions: [...gainCautions(spec, circuit), ...bypassCautions(spec, circuit, { direct: peak, signal: signalPeak }), ...rippleCautions(spec, circuit, { reference, centre: drive.centre }), ...rejectionCautions(spec, circuit, { excitation: drive, reference }), ...made.cautions],
     assumptions: assumptionsOf(spec, circuit, [...settled.notes, ...made.fitNotes]),
   };
 }
