@@ -56,13 +56,18 @@ function gridOf(stage: Stage, network: Networks, part: PartCapacitances): NoiseG
   });
 }
 
-/** One grid serves every part that adds the same capacitance; one with a capacitor of its own is a circuit of its own. */
+/** So many circuits are kept of parts that bring a capacitor of their own: some 30 kB each. */
+const KEPT = 128;
+
+/** One grid serves every part that adds the same capacitances; where each brings a capacitor of its own, the latest are kept. */
 function remembered(make: (part: PartCapacitances) => NoiseGrid): NoiseDemand['grid'] {
-  const known = new Map<number, NoiseGrid>();
+  const known = new Map<string, NoiseGrid>();
   return (part) => {
-    if (part.feedback !== null) return make(part);
-    const grid = known.get(part.input) ?? make(part);
-    known.set(part.input, grid);
+    const key = `${part.input} ${part.feedback}`;
+    const grid = known.get(key) ?? make(part);
+    known.set(key, grid);
+    const [oldest] = known.keys();
+    if (known.size > KEPT && oldest !== undefined) known.delete(oldest);
     return grid;
   };
 }

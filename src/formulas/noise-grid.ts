@@ -1,3 +1,4 @@
+import { cell } from './cells.js';
 import { BOLTZMANN } from './constants.js';
 import { requirePositive, requireWithin } from './domain.js';
 import type { FeedbackNetworks } from './feedback-loop.js';
@@ -61,8 +62,9 @@ export function noiseGrid(stage: NoiseStage): NoiseGrid {
   const count = Math.ceil((to - from) / WIDEST);
   const edge = (k: number): number => from + ((to - from) * k) / count;
   const panels = Array.from({ length: count }, (_, k): Panel => [edge(k), edge(k + 1)]).flatMap((panel) => refined(panel, response, following));
-  const axis = withTail(panelAxis(panels, following), following);
-  return { following, resistors, ...axis, ...sampled(Array.from(axis.frequency, response), 4 * BOLTZMANN * temperature) };
+  const axis = withTail(panelAxis(panels.map(({ panel }) => panel), following), following);
+  const points = [...panels.flatMap(({ points: own }) => own), response(HIGHEST)];
+  return { following, resistors, ...axis, ...sampled(points, 4 * BOLTZMANN * temperature) };
 }
 
 /** One point more for all above: ∫ of 1/f² from there to infinity is its value there times that frequency. */
@@ -111,15 +113,19 @@ function stageResponse({ plus, minus, plusCapacitance = 0, minusCapacitance = 0 
   };
 }
 
+interface SampledPanel {
+  readonly panel: Panel;
+  readonly points: readonly StagePoint[];
+}
+
 /** Halves a panel until the noise gain of an ideal amplifier is resolved on it, where the filter lets anything through. */
-function refined([from, to]: Panel, response: (frequency: number) => StagePoint, following: FollowingFilter | null): readonly Panel[] {
-  const { frequency, filter } = panelAxis([[from, to]], following);
-  const values = Array.from(frequency, (f, i) => {
-    const { feedbackRe, feedbackIm } = response(f);
-    return ((filter[i] ?? NaN) * f) / (feedbackRe * feedbackRe + feedbackIm * feedbackIm);
-  });
+function refined(panel: Panel, response: (frequency: number) => StagePoint, following: FollowingFilter | null): readonly SampledPanel[] {
+  const [from, to] = panel;
+  const { frequency, filter } = panelAxis([panel], following);
+  const points = Array.from(frequency, response);
+  const values = points.map(({ feedbackRe, feedbackIm }, i) => (cell(filter, i) * cell(frequency, i)) / (feedbackRe * feedbackRe + feedbackIm * feedbackIm));
   const { integral, difference } = panelIntegral(values, to - from);
-  if (difference <= RESOLVED * integral || to - from < NARROWEST || (filter[0] ?? 0) < 1e-8) return [[from, to]];
+  if (difference <= RESOLVED * integral || to - from < NARROWEST || cell(filter, 0) < 1e-8) return [{ panel, points }];
   const middle = (from + to) / 2;
   return [...refined([from, middle], response, following), ...refined([middle, to], response, following)];
 }

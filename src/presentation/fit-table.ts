@@ -16,9 +16,9 @@ import { checkWords } from './words.js';
 export function fitLines(report: Report, style: Style): string[] {
   const shown = report.fit.slice(0, style.top);
   if (shown.length === 0) return [];
-  const hasBattery = report.fit.some(({ batteryHours }) => batteryHours !== null);
+  const hasBattery = shown.some(({ batteryHours }) => batteryHours !== null);
   const rows = shown.map((one) => rowOf(one, hasBattery, style));
-  return [...tableLines({ columns: columnsOf(report), rows }, style), ...more(report.fit.length - shown.length, 'fit', style)];
+  return [...tableLines({ columns: columnsOf(report, hasBattery), rows }, style), ...more(report.fit.length - shown.length, 'fit', style)];
 }
 
 /** How many were cut off; nothing is cut silently. */
@@ -26,7 +26,7 @@ export function more(left: number, verb: string, style: Style): string[] {
   return left <= 0 ? [] : paragraph(`… and ${left} more that ${verb} (--top ${left + style.top} shows all)`, style, { lead: ' ' });
 }
 
-function columnsOf({ fit }: Report): Column[] {
+function columnsOf({ fit }: Report, hasBattery: boolean): Column[] {
   const quantities = new Set(fit.map(({ part }) => part.price?.quantity ?? null).filter((quantity) => quantity !== null));
   const [quantity] = quantities;
   return [
@@ -40,7 +40,7 @@ function columnsOf({ fit }: Report): Column[] {
     { title: 'DC error\nat output', align: 'right', name: 'DC error at the output', moves: 3 },
     { title: 'Current\nmax', align: 'right', name: 'current', moves: 4 },
     { title: quantities.size === 1 ? `Price\nat ${quantity}` : 'Price', align: 'right', name: quantities.size === 1 ? `price at ${quantity}:` : 'price' },
-    ...(fit.some(({ batteryHours }) => batteryHours !== null) ? [{ title: 'Battery', align: 'right', name: 'battery', moves: 5 } as const] : []),
+    ...(hasBattery ? [{ title: 'Battery', align: 'right', name: 'battery', moves: 5 } as const] : []),
     { title: 'Proof', name: 'proof', moves: 2 },
   ];
 }

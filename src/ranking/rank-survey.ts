@@ -1,10 +1,10 @@
 import type { Part } from '../parts/part.js';
 import type { ScreenView } from '../parts/screen-view.js';
 import type { Trait } from '../parts/traits.js';
-import { lazyList, type JudgedPart, type SurveyedCatalog, type SurveyedFit } from '../screening/index.js';
+import { lazyList, surveyedPart, type JudgedPart, type SurveyedCatalog, type SurveyedFit } from '../screening/index.js';
 import { dominatorFinder } from './dominance.js';
 import { type Line, linesOf } from './family.js';
-import { meritOf } from './merit.js';
+import { meritOf, type Merit } from './merit.js';
 import type { Placed } from './placed.js';
 import { compareIn, tightestOf, type Order, type RankedPart } from './rank.js';
 
@@ -15,16 +15,26 @@ export function rankSurveyed({ places, judgedAt }: Pick<SurveyedCatalog, 'places
   return lazyList(lines.length, (at) => {
     const line = lines[at];
     if (line === undefined) throw new RangeError(`no line ${at} of ${lines.length}`);
-    const judged = judgedAt(line.first.fit);
-    return {
-      ...judged,
-      merit: meritOf(judged),
-      tightest: tightestOf(judged),
+    const { first, variants } = line;
+    const ranked: Pick<RankedPart, 'merit' | 'tightest' | 'rank' | 'dominatedBy' | 'variants'> = {
+      merit: first.merit,
+      get tightest() { return tightestOf(judgedAt(first.fit)); },
       rank: at + 1,
-      dominatedBy: dominator(line.first)?.part.id ?? null,
-      variants: line.variants.map(({ fit }) => judgedAt(fit)),
+      get dominatedBy() { return dominator(first)?.part.id ?? null; },
+      variants: variants.map((one) => fitting(one, judgedAt)),
     };
+    return withMore(fitting(first, judgedAt), ranked);
   });
+}
+
+/** A part that fits, as its digests tell of it. */
+function fitting({ fit, proof, current }: PlacedFit, judgedAt: SurveyedCatalog['judgedAt']): JudgedPart {
+  return surveyedPart({ get part() { return fit.view.part(fit.position); }, outcome: 'fits', proof, current, deciding: [] }, () => judgedAt(fit));
+}
+
+/** Both in one, with nothing looked at yet: a spread would ask every getter. */
+function withMore<Part extends object, More extends object>(part: Part, more: More): Part & More {
+  return Object.defineProperties(part, Object.getOwnPropertyDescriptors(more)) as Part & More;
 }
 
 /** Ids in that order, each variant a place of its own. */
@@ -44,6 +54,7 @@ function surveyedLines({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'j
 
 interface PlacedFit extends Placed {
   readonly fit: SurveyedFit;
+  readonly merit: Merit;
 }
 
 function placedOf(fit: SurveyedFit, judgedAt: (fit: SurveyedFit) => JudgedPart): PlacedFit {

@@ -5,22 +5,25 @@ import type { Judging } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
 import { checkQuestions, currentQuestion, type CheckQuestion } from './question.js';
 
-/** What a survey knows of a part that does not fit, without judging it in words. */
+/** What a survey knows of a part that does not fit or is open, without judging it in words. */
 export type Decided = Pick<JudgedPart, 'deciding' | 'current'>;
 
+/** What keeps a part out, or leaves it open. */
+export type Decisive = 'fail' | 'unknown';
+
 /**
- * Which checks keep the parts of a view out. Asks the questions of the survey, so that what it found out serves again; a segment is gone
+ * Which checks keep the parts of a view out or leave them open. Asks the questions of the survey, so that what it found out serves again; a segment is gone
  * through when a part of it is first asked about. Made right after the survey, while its questions are kept.
  */
-export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number) => Decided {
+export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number, decisive: Decisive) => Decided {
   const questions = checkQuestions(run, view, circuit);
   const current = currentQuestion(run, view);
   const asked: Asked = { view, questions, current };
   let last: Answers | null = null;
-  return (position) => {
+  return (position, decisive) => {
     const segment = Math.floor(position / view.segment);
     if (last?.segment !== segment) last = answersIn(asked, segment, last?.buffers ?? newBuffers(view, questions.length));
-    return decidedAt(asked, last.buffers, position - segment * view.segment);
+    return decidedAt(asked, last.buffers, { at: position - segment * view.segment, decisive });
   };
 }
 
@@ -46,11 +49,11 @@ function answersIn({ view, questions, current }: Asked, segment: number, buffers
   return { segment, buffers };
 }
 
-function decidedAt({ questions, current }: Asked, { answers, current: values }: Buffers, at: number): Decided {
-  const failing = questions.filter((one, question) => {
+function decidedAt({ questions, current }: Asked, { answers, current: values }: Buffers, { at, decisive }: { readonly at: number; readonly decisive: Decisive }): Decided {
+  const deciding = questions.filter((one, question) => {
     const answer = answers[question]?.[at] ?? 0;
     one.settle(answer);
-    return one.digests.counts[answer] === COUNTS.fail;
+    return one.digests.counts[answer] === COUNTS[decisive];
   });
-  return { deciding: failing.map(({ check }) => check), current: current.values[values[at] ?? 0] ?? null };
+  return { deciding: deciding.map(({ check }) => check), current: current.values[values[at] ?? 0] ?? null };
 }

@@ -8,4 +8,5 @@ export { screen, type Rejection, type Screened } from './screen.js';
 export { lazyList } from './lazy-list.js';
 export { type Marked, type OutcomeCounts, screenViews, type SurveyedCatalog } from './screen-views.js';
 export type { Digest } from './digest.js';
+export { surveyedPart } from './surveyed-part.js';
 export type { SurveyedFit } from './survey.js';

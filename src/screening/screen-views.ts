@@ -36,12 +36,13 @@ export function screenViews(run: Judging, views: readonly ScreenView[], request:
   const judgedAt = judgeOnce(run);
   const places = surveys.flatMap(({ fits }) => fits);
   const near = surveys.flatMap(({ view, nearest }) => nearest.map(({ position }) => judgedAt({ view, position })));
+  const listed = request.outcomesOnly === true ? () => judgedAt : listedAt(run, { views, judgedAt, circuit: request.circuit });
   return {
     places,
     judgedAt,
     fit: lazyList(places.length, (at) => judgedAt(member(places, at))),
-    undecided: joined(surveys, { count: ({ undecided }) => undecided.length, positions: ({ undecided }) => undecided }, judgedAt),
-    rejected: joined(surveys, { count: rejectedCount, positions: rejectedIn }, request.outcomesOnly === true ? judgedAt : listedAt(run, { views, judgedAt, circuit: request.circuit })),
+    undecided: joined(surveys, { count: ({ undecided }) => undecided.length, positions: ({ undecided }) => undecided }, listed('undecided')),
+    rejected: joined(surveys, { count: rejectedCount, positions: rejectedIn }, listed('does-not-fit')),
     rejections: byFrequency(totals(surveys)),
     nearest: nearestOf(near, run.demands.operating.nominalSupply),
   };
@@ -69,13 +70,13 @@ interface Listing extends Pick<SurveyedCatalog, 'judgedAt'> {
   readonly circuit: string;
 }
 
-/** A rejected part as the survey knows it: most lists tell of it only which checks it fails. */
-function listedAt(run: Judging, { views, judgedAt, circuit }: Listing): SurveyedCatalog['judgedAt'] {
+/** A part that does not fit or is open, as the survey knows it: most lists tell of it only which checks it fails or leaves open. */
+function listedAt(run: Judging, { views, judgedAt, circuit }: Listing): (outcome: 'undecided' | 'does-not-fit') => SurveyedCatalog['judgedAt'] {
   const known = new Map(views.filter(({ size }) => size > 0).map((view) => [view, decidingIn(run, view, circuit)]));
-  return ({ view, position }) => {
-    const decided = known.get(view)?.(position);
+  return (outcome) => ({ view, position }) => {
+    const decided = known.get(view)?.(position, outcome === 'undecided' ? 'unknown' : 'fail');
     if (decided === undefined) return judgedAt({ view, position });
-    return surveyedPart({ get part() { return view.part(position); }, outcome: 'does-not-fit', ...decided }, () => judgedAt({ view, position }));
+    return surveyedPart({ get part() { return view.part(position); }, outcome, proof: null, ...decided }, () => judgedAt({ view, position }));
   };
 }
 

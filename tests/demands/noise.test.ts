@@ -31,6 +31,17 @@ describe('the noise allowed', () => {
     expect(grid({ input: 1e-12, feedback: null })).not.toBe(grid(ALONE));
   });
 
+  it('keeps the latest circuits of parts that bring capacitors of their own, and makes an older one again the same', () => {
+    const { grid } = demandsOf(SPEC).noise!;
+    const own = { input: 2e-12, feedback: 1e-12 };
+    const first = grid(own);
+    expect(grid({ ...own })).toBe(first);
+    expect(grid({ ...own, feedback: 1.5e-12 }).feedbackRe).not.toEqual(first.feedbackRe);
+    for (let k = 0; k < 200; k += 1) grid({ input: 2e-12, feedback: (3 + k) * 1e-12 });
+    expect(grid(own)).not.toBe(first);
+    expect(grid(own)).toEqual(first);
+  });
+
   it('tells resistors of one name apart by the input they stand at', () => {
     const spec = stageSpec('difference', legs(swing(0.2, 0.3), swing(0, 0.1)), { resistors: fourResistors({ r1: 1e4, r2: 2e4, r3: 1e4, r4: 2e4 }), source: source(1e3), reference: midSupply(), limits: LIMITS });
     expect(demandsOf(spec).noise!.grid(ALONE).resistors).toEqual(['positive input', 'source, + input', 'to reference', 'feedback', 'input', 'source, − input']);

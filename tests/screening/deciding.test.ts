@@ -1,9 +1,11 @@
-// A rejected part of a survey tells which checks it fails before it is judged in words: both must say the same.
+// A part of a survey tells its outcome, and which checks it fails or leaves open, before it is judged in words: both must say the same.
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { shortlist } from '../../src/engine.js';
 import type { Part } from '../../src/parts/part.js';
+import type { RankedPart } from '../../src/ranking/index.js';
+import type { JudgedPart } from '../../src/screening/index.js';
 import type { ScreenView } from '../../src/parts/screen-view.js';
 import { buildStage, type Stage } from '../../src/stage/index.js';
 import { plausibleParts } from '../bench/plausible-part.js';
@@ -47,6 +49,31 @@ describe('a part that does not fit, as a survey knows it', () => {
       const { rejected } = shortlist(stageOf(name), views, ASKING);
       expect(rejected.map(({ part, outcome, deciding, current }) => ({ id: part.id, outcome, deciding, current }))).toEqual(rows.map(({ part, outcome, deciding, current }) => ({ id: part.id, outcome, deciding, current })));
     }
+  });
+
+  it.each(readdirSync(FOLDER).map((name) => ({ name })))('has the checks open, or the place, that it has part by part, on $name', ({ name }) => {
+    // Every other part without its offset or its current, so that some are open.
+    const some = list.map((part, at): Part => ({ ...part, figures: at % 2 === 0 ? part.figures : part.figures.filter(({ parameter }) => parameter !== (at % 4 === 1 ? 'quiescentCurrent' : 'offsetVoltage')) }));
+    const [rows, views] = [shortlist(stageOf(name), rowSource(some), ASKING), shortlist(stageOf(name), viewSource(some), ASKING)];
+    const short = ({ part, outcome, proof, deciding, current }: JudgedPart): object => ({ id: part.id, outcome, proof, deciding, current });
+    expect(views.undecided.map(short)).toEqual(rows.undecided.map(short));
+    const placed = (one: RankedPart): object => ({ ...short(one), rank: one.rank, merit: one.merit, tightest: one.tightest, dominatedBy: one.dominatedBy, variants: one.variants.map(short) });
+    expect(views.fit.map(placed)).toEqual(rows.fit.map(placed));
+    expect(views.fit.map((one) => ({ ...one }))).toEqual(rows.fit);
+  });
+
+  it('is judged in words only where words are asked for', () => {
+    const read: string[] = [];
+    const plain = viewSource(list);
+    const watched = (view: ScreenView): ScreenView => ({ ...view, part: (at) => { const part = view.part(at); read.push(part.id); return part; } });
+    const source = { ...plain, screening: { ...plain.screening!, views: plain.screening!.views.map(watched) } };
+    const { fit } = shortlist(stageOf('soil-moisture-probe.yaml'), source, ASKING);
+    const before = read.length;
+    const last = fit.at(-1)!;
+    expect({ outcome: last.outcome, rank: last.rank, deciding: last.deciding, current: typeof last.current }).toEqual({ outcome: 'fits', rank: fit.length, deciding: [], current: 'number' });
+    expect(read.length).toBe(before);
+    expect(last.verdicts.length).toBeGreaterThan(5);
+    expect(read.length).toBe(before + 1);
   });
 
   it('tells the rest of itself as the part judged whole', () => {
