@@ -45,7 +45,6 @@ describe.each([['A4', 595, 842], ['Letter', 612, 792]] as const)('printed on %s'
     const { page } = await opened().folder.show('review.html', { width: 1024 });
     const file = opened().folder.path(`${format}.pdf`);
     await page.pdf({ path: file, format, preferCSSPageSize: false });
-    await page.close();
     sheets = sheetsOf(file);
   }, PATIENCE);
   const texts = (): string[] => sheets.map(({ words }) => words.map(({ text }) => text).join(' '));

@@ -64,7 +64,6 @@ describe.each(Object.keys(PAGES))('%s', (name) => {
       const page = await shown(name, width, style);
       expect(await page.evaluate('document.documentElement.scrollWidth - document.documentElement.clientWidth')).toBeLessThanOrEqual(0);
       expect(await page.evaluate(FAULTS)).toEqual([]);
-      await page.close();
     });
   });
 });
@@ -75,7 +74,6 @@ describe('figures', () => {
     for (const style of [SETTINGS['as it comes'], SETTINGS['text at 200 %']]) {
       const page = await shown('full.html', 1600, style);
       sizes.push(await page.evaluate<number>("document.querySelector('#s1-plot-margins svg text').getBoundingClientRect().height"));
-      await page.close();
     }
     expect(sizes[1]! / sizes[0]!).toBeCloseTo(2, 1);
   });
@@ -95,6 +93,5 @@ describe('figures', () => {
     expect(await page.evaluate('getComputedStyle(document.activeElement).outlineStyle')).toBe('solid');
     for (let press = 0; press < 20; press += 1) await page.keyboard.press('ArrowRight');
     await expect.poll(() => page.evaluate<number>('document.activeElement.scrollLeft')).toBeGreaterThan(100);
-    await page.close();
   });
 });

@@ -1,17 +1,12 @@
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { afterEach } from 'vitest';
+import { onTestFinished } from 'vitest';
 
-const folders: string[] = [];
-
-/** A new folder that is removed after the test. */
+/** A new folder that is removed after the test that asks for it. */
 export function temporaryFolder(): string {
   const folder = mkdtempSync(join(tmpdir(), 'catalog-'));
-  folders.push(folder);
+  // Said per test, not once when this file is loaded: the files of a run share their modules.
+  onTestFinished(() => { rmSync(folder, { recursive: true, force: true }); });
   return folder;
 }
-
-afterEach(() => {
-  for (const folder of folders.splice(0)) rmSync(folder, { recursive: true, force: true });
-});

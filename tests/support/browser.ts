@@ -57,6 +57,8 @@ export interface View {
 export class PageFolder {
   private readonly folder = mkdtempSync(join(tmpdir(), 'railfit-page-'));
   private readonly browser: Browser;
+  /** One for all that is shown: a tab takes longer to start than a page to load. */
+  private tab: Page | null = null;
 
   constructor(browser: Browser) {
     this.browser = browser;
@@ -70,8 +72,11 @@ export class PageFolder {
     writeFileSync(this.path(name), text);
   }
 
+  /** Loads the page anew, in a tab that keeps nothing of what it showed before. It is the tab's until the next one is shown. */
   async show(name: string, { width, height = 900, scheme = 'light' }: View): Promise<Shown> {
-    const page = await this.browser.newPage({ viewport: { width, height }, colorScheme: scheme });
+    const page = await this.emptied();
+    await page.setViewportSize({ width, height });
+    await page.emulateMedia({ media: null, colorScheme: scheme });
     const address = pathToFileURL(this.path(name)).href;
     const said: string[] = [];
     const asked: string[] = [];
@@ -80,6 +85,14 @@ export class PageFolder {
     page.on('request', (request) => { if (request.url() !== address) asked.push(request.url()); });
     await page.goto(address);
     return { page, said, asked };
+  }
+
+  private async emptied(): Promise<Page> {
+    const page = (this.tab ??= await this.browser.newPage());
+    // What the page before still says is not heard by the one that comes.
+    await page.goto('about:blank');
+    for (const event of ['console', 'pageerror', 'request'] as const) await page.removeAllListeners(event, {});
+    return page;
   }
 
   remove(): void {
