@@ -62,11 +62,10 @@ const TOLD = 3;
 export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
   const { part, asking = PLAIN, changing } = request;
   const demands = deriveDemands(stage);
-  const { run, counts, fit } = outlineAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
+  const { run, counts, fit, lineOf } = outlineAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
   if (source.screening === undefined && !source.parts.includes(part)) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
   const judged = judgePart(run, part);
-  const isIt = (one: JudgedPart): boolean => one.part.id === part.id && one.part.tier === part.tier;
-  const ranked = judged.outcome !== 'fits' ? undefined : fit.find((line) => [line, ...line.variants].some(isIt));
+  const ranked = judged.outcome !== 'fits' ? null : lineOf(judged);
   return {
     stage,
     demands: listDemands(demands),
@@ -138,6 +137,10 @@ export interface Outline {
   readonly first: string | null;
   /** Ids of what fits, by rank, each variant a place of its own. */
   readonly fit: readonly string[];
+  /** By view of the source, the positions of what fits, rising. */
+  readonly fitting: readonly Int32Array[];
+  /** Ids, by rank, of what fits here and not in another answer from the same parts. */
+  readonly beyond: (other: Pick<Outline, 'fitting'>) => readonly string[];
 }
 
 /** Answers many stages in a row on the same parts, with the counts and the order of `shortlist`. */
@@ -145,7 +148,8 @@ export function outlinesOf(source: PartSource, asking: Asking = PLAIN): (stage: 
   const outline = outlinesIn(source, asking);
   return (stage) => {
     const outlined = outline({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
-    return { counts: outlined.counts, first: outlined.first, get fit() { return outlined.ids; } };
+    const { counts, first, fitting, beyond } = outlined;
+    return { counts, first, fitting, beyond, get fit() { return outlined.ids; } };
   };
 }
 

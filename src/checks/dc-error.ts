@@ -71,14 +71,23 @@ function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Tol
   return { ...sum, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(values) };
 }
 
-function againstLimit({ required, unit, sense }: DcErrorDemand, { known, missing, rss, borrowed, ...sum }: DcErrorSum): Finding {
-  const common = { required, unit, sense, ...sum };
+function againstLimit(asked: DcErrorDemand, sum: DcErrorSum, { brief }: Told): Finding {
+  if (brief) return brieflyAgainst(asked, sum);
+  const { required, unit, sense } = asked;
+  const { known, missing, rss, borrowed, ...told } = sum;
+  const common = { required, unit, sense, ...told };
   const [first] = missing;
   if (first !== undefined) {
     const turnsAt = missing.length === 1 && known < required ? first.turnsAt(required - known) : null;
     return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
   }
   return { kind: 'numbers', ...common, offered: known, ...(rss === undefined ? {} : { rss }), ...(borrowed === undefined ? {} : { borrowed }) };
+}
+
+/** The same numbers, and nothing spread: a sweep holds every part of a catalog against one limit after the other. */
+function brieflyAgainst({ required, unit, sense }: DcErrorDemand, { known, missing, basis, borrowed = 0 }: DcErrorSum): NumberFinding | BoundFinding {
+  if (missing.length > 0) return { kind: 'bound', required, unit, sense, basis, known, missing: [], cause: 'missing-figure' };
+  return { kind: 'numbers', required, unit, sense, basis, offered: known, borrowed };
 }
 
 /** One temperature, unless the offset stands at the cold end and currents that double at the hot one. */

@@ -2,9 +2,21 @@ import { toldTurn, turnsBetween, type Turn } from './turns.js';
 
 /** What holds at one value: the answer in short, or why there is none. */
 export type SweptState =
-  | { readonly counts: Counts; readonly first: string | null; readonly fit: readonly string[] }
+  | SweptAnswer
   /** The stage contradicts itself there, in words. */
   | { readonly contradiction: string };
+
+/** The answer in short. */
+interface SweptAnswer {
+  readonly counts: Counts;
+  readonly first: string | null;
+  /** Ids of what fits, by rank. */
+  readonly fit: readonly string[];
+  /** By view, the places of what fits. */
+  readonly fitting: readonly Int32Array[];
+  /** Ids, by rank, of what fits here and not there. */
+  readonly beyond: (other: Pick<SweptAnswer, 'fitting'>) => readonly string[];
+}
 
 interface Counts {
   readonly parts: number;
@@ -68,12 +80,14 @@ function isSameFirst(one: SweptState, other: SweptState): boolean {
 }
 
 function withParts(turn: Turn<SweptState>): SweptTurn {
-  const [before, after] = [fitting(turn.from), fitting(turn.to)];
-  const [wasIn, isIn] = [new Set(before), new Set(after)];
-  return { ...turn, gained: after.filter((id) => !wasIn.has(id)), lost: before.filter((id) => !isIn.has(id)) };
+  return { ...turn, gained: beyond(turn.to, turn.from), lost: beyond(turn.from, turn.to) };
 }
 
-const fitting = (state: SweptState): readonly string[] => ('contradiction' in state ? [] : state.fit);
+/** What fits in one state and not in the other; in a contradiction nothing does. */
+function beyond(one: SweptState, other: SweptState): readonly string[] {
+  if ('contradiction' in one) return [];
+  return 'contradiction' in other ? one.fit : one.beyond(other);
+}
 
 /** Values from one end to the other, both included, rising: even steps, or even ratios rounded to four digits. */
 export function sweptValues({ from, to, steps, scale }: { readonly from: number; readonly to: number; readonly steps: number; readonly scale: 'linear' | 'log' }): number[] {

@@ -11,11 +11,17 @@ type Rival = Pick<Placed, 'current' | 'verdicts' | 'proof'> & { readonly part: P
  * and better in one: on clamped margins an over-specified part can be dominated, on raw ones never (M10, RNK-10, -11).
  */
 export function dominatorsOf<P extends Rival>(all: readonly P[]): (P | null)[] {
-  return all.map(dominatorFinder(all));
+  return all.map(dominatorFinder(all.map((one) => ({ members: [one], firsts: () => [one] }))));
 }
 
-/** Finds the dominator of one part of the list at a time; the scores of the others are made when they are first compared. */
-export function dominatorFinder<P extends Rival>(all: readonly P[]): (one: P) => P | null {
+/** Some of a list that stand together: who is among them, and in which order those of them come that are in the list. */
+interface Together<P> {
+  readonly members: readonly P[];
+  readonly firsts: () => readonly P[];
+}
+
+/** Finds the dominator of one part at a time; scores are made when they are first compared, and the order where it is between dominators. */
+export function dominatorFinder<P extends Rival>(groups: readonly Together<P>[]): (one: P) => P | null {
   const known = new Map<P, readonly number[] | null>();
   const scores = (one: P): readonly number[] | null => {
     const found = known.get(one);
@@ -24,7 +30,14 @@ export function dominatorFinder<P extends Rival>(all: readonly P[]): (one: P) =>
     known.set(one, made);
     return made;
   };
-  return (mine) => all.find((theirs) => isCheaper(theirs, mine) && dominates(scores(theirs), scores(mine))) ?? null;
+  return (mine) => {
+    const isOver = (theirs: P): boolean => isCheaper(theirs, mine) && dominates(scores(theirs), scores(mine));
+    for (const { members, firsts } of groups) {
+      const found = members.some(isOver) ? firsts().find(isOver) : undefined;
+      if (found !== undefined) return found;
+    }
+    return null;
+  };
 }
 
 /** The first of the scores alone: they settle most pairs. */

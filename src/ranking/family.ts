@@ -25,6 +25,6 @@ export function linesOf<P extends Member>(ordered: readonly P[]): Line<P>[] {
 }
 
 /** A family holds within a tier and a proof: a variant that is only typical must not hide behind one that is proven. */
-function familyKey({ part, proof }: Member): string | null {
+export function familyKey({ part, proof }: Member): string | null {
   return part.family === null ? null : JSON.stringify([part.tier, proof, part.family]);
 }

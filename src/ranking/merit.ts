@@ -23,9 +23,20 @@ export const EQUAL: ShareWeights = { margins: 1, price: 1, current: 1 };
 
 /** Desirability of a part that fits: margins, price and current as a weighted geometric mean of three equal shares (M10). */
 export function meritOf(judged: Weighed, weights: ShareWeights = EQUAL): Merit {
-  const margins = marginShare(judged);
-  const price = onLogScale(priceInEuro(judged), PRICE);
-  const current = onLogScale(judged.current, CURRENT);
+  return meritFrom({ margins: marginShare(judged), price: priceInEuro(judged), current: judged.current }, weights);
+}
+
+/** What a merit is made of: the share of the margins, the price in EUR and the current in A. */
+interface Ingredients {
+  readonly margins: number;
+  readonly price: number | null;
+  readonly current: number | null;
+}
+
+/** Merit of a part whose margins were weighed before. */
+export function meritFrom({ margins, ...known }: Ingredients, weights: ShareWeights = EQUAL): Merit {
+  const price = onLogScale(known.price, PRICE);
+  const current = onLogScale(known.current, CURRENT);
   const shares = { margins, price, current };
   const total = weightedGeometricMean(SHARES.map((share) => ({ score: shares[share], weight: weights[share] })));
   return { total, margins, price, current };
@@ -42,10 +53,15 @@ const MARGINS = new WeakMap<Weighed['verdicts'], number>();
 function marginShare({ verdicts }: Weighed): number {
   const known = MARGINS.get(verdicts);
   if (known !== undefined) return known;
-  const scores = verdicts.map(comfortOf).filter((score) => score !== null);
-  const share = scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
+  const share = marginsFrom(verdicts.map(comfortOf));
   MARGINS.set(verdicts, share);
   return share;
+}
+
+/** Share of the margins, FLOOR..1, from how comfortable each is, in the order of the checks; null where a check has none. */
+export function marginsFrom(comforts: readonly (number | null)[]): number {
+  const scores = comforts.filter((score) => score !== null);
+  return scores.length === 0 ? 1 : weightedGeometricMean(scores.map((score) => ({ score, weight: 1 })));
 }
 
 /** Unknown counts as the floor. */

@@ -1,30 +1,39 @@
-import type { Part } from '../parts/part.js';
-import type { ScreenView } from '../parts/screen-view.js';
-import type { Trait } from '../parts/traits.js';
-import { lazyList, surveyedPart, type JudgedPart, type SurveyedCatalog, type SurveyedFit } from '../screening/index.js';
+import { type JudgedPart, lazyList, surveyedPart, type SurveyedCatalog, type SurveyedFit } from '../screening/index.js';
 import { dominatorFinder } from './dominance.js';
-import { type Line, linesOf } from './family.js';
-import { meritOf, type Merit } from './merit.js';
-import type { Placed } from './placed.js';
-import { compareIn, tightestOf, type Order, type RankedPart } from './rank.js';
+import { type PlacedFit, placedFit } from './placed-fit.js';
+import { firstIn, tightestOf, type Order, type RankedPart } from './rank.js';
+import { type SurveyOrder, surveyOrder } from './survey-order.js';
+
+type Surveyed = Pick<SurveyedCatalog, 'places' | 'judgedAt'>;
+
+/** Lines in order, and where a part of them stands. */
+export interface RankedSurvey {
+  readonly lines: readonly RankedPart[];
+  /** The line of a part that fits; null where it is not among them. */
+  lineOf(judged: JudgedPart): RankedPart | null;
+}
 
 /** The order of `rank` for parts that were surveyed: made of digests; a part is read when its line is looked at, or to break a tie. */
-export function rankSurveyed({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order = 'merit'): readonly RankedPart[] {
-  const lines = surveyedLines({ places, judgedAt }, order);
-  const dominator = dominatorFinder(lines.map(({ first }) => first));
-  return lazyList(lines.length, (at) => {
-    const line = lines[at];
-    if (line === undefined) throw new RangeError(`no line ${at} of ${lines.length}`);
-    const { first, variants } = line;
+export function rankSurveyed(survey: Surveyed, order: Order = 'merit'): RankedSurvey {
+  const ordered = orderOf(survey, order);
+  const dominator = dominatorFinder(ordered.ties);
+  const lines = lazyList(ordered.length, (at) => {
+    const { first, variants } = ordered.line(at);
     const ranked: Pick<RankedPart, 'merit' | 'tightest' | 'rank' | 'dominatedBy' | 'variants'> = {
-      merit: first.merit,
-      get tightest() { return tightestOf(judgedAt(first.fit)); },
+      get merit() { return first.merit; },
+      get tightest() { return tightestOf(survey.judgedAt(first.fit)); },
       rank: at + 1,
       get dominatedBy() { return dominator(first)?.part.id ?? null; },
-      variants: variants.map((one) => fitting(one, judgedAt)),
+      variants: variants.map((one) => fitting(one, survey.judgedAt)),
     };
-    return withMore(fitting(first, judgedAt), ranked);
+    return withMore(fitting(first, survey.judgedAt), ranked);
   });
+  const lineOf = ({ part: { id, tier }, current }: JudgedPart): RankedPart | null => {
+    // The id last: it has to be read.
+    const at = ordered.lineWith((one) => one.current === current && one.part.tier === tier && one.part.id === id);
+    return at === null ? null : (lines[at] ?? null);
+  };
+  return { lines, lineOf };
 }
 
 /** A part that fits, as its digests tell of it. */
@@ -38,40 +47,22 @@ function withMore<Part extends object, More extends object>(part: Part, more: Mo
 }
 
 /** Ids in that order, each variant a place of its own. */
-export function surveyedIds(survey: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): string[] {
-  return surveyedLines(survey, order).flatMap(({ first, variants }) => [first, ...variants].map(({ part }) => part.id));
+export function surveyedIds(survey: Surveyed, order: Order): string[] {
+  const ordered = orderOf(survey, order);
+  return Array.from({ length: ordered.length }, (_, at) => ordered.line(at)).flatMap(({ first, variants }) => [first, ...variants].map(({ part }) => part.id));
 }
 
 /** The id that stands first in that order, without ordering the others; null when nothing fits. */
-export function surveyedFirst({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): string | null {
-  const [first, ...others] = places.map((fit) => placedOf(fit, judgedAt));
-  return first === undefined ? null : others.reduce((best, one) => (compareIn(order, one, best) < 0 ? one : best), first).part.id;
+export function surveyedFirst(survey: Surveyed, order: Order): string | null {
+  return firstIn(order, placed(survey))?.part.id ?? null;
 }
 
-function surveyedLines({ places, judgedAt }: Pick<SurveyedCatalog, 'places' | 'judgedAt'>, order: Order): Line<PlacedFit>[] {
-  return linesOf(places.map((fit) => placedOf(fit, judgedAt)).sort((a, b) => compareIn(order, a, b)));
+/** Ids of some of the parts that fit, in that order. */
+export function surveyedAmong(survey: Surveyed, order: Order, isAmong: (fit: Pick<SurveyedFit, 'view' | 'position'>) => boolean): string[] {
+  const ordered = orderOf(survey, order);
+  return ordered.sorted(ordered.all.filter(({ fit }) => isAmong(fit))).map(({ part }) => part.id);
 }
 
-interface PlacedFit extends Placed {
-  readonly fit: SurveyedFit;
-  readonly merit: Merit;
-}
+const placed = ({ places, judgedAt }: Surveyed): PlacedFit[] => places.map((fit) => placedFit(fit, judgedAt));
 
-function placedOf(fit: SurveyedFit, judgedAt: (fit: SurveyedFit) => JudgedPart): PlacedFit {
-  const { view, current } = fit;
-  const verdicts = fit.digests.filter((digest) => digest !== null);
-  const { price } = piece(view, 'price', fit.price);
-  const { family } = piece(view, 'family', fit.family);
-  return {
-    fit, current, verdicts,
-    proof: fit.isGuaranteed ? 'limits' : 'typical',
-    merit: meritOf({ part: { price }, current, verdicts }),
-    part: { tier: view.tier, price, family, get id() { return view.id(fit.position); } },
-    // With nothing but limits behind it there is nothing to confirm.
-    get confirm() { return fit.isGuaranteed ? [] : judgedAt(fit).confirm; },
-  };
-}
-
-function piece<Name extends 'price' | 'family'>(view: ScreenView, trait: Name & Trait, code: number): Pick<Part, Name> {
-  return view.piece(trait, code) as Pick<Part, Name>;
-}
+const orderOf = (survey: Surveyed, order: Order): SurveyOrder => surveyOrder(placed(survey), order);

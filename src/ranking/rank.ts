@@ -99,6 +99,38 @@ export function compareIn(order: Order, a: Placed, b: Placed): number {
   return difference;
 }
 
+/** Order without reading: the steps before those for which a part that was only surveyed has to be read. */
+export function compareRoughly(order: Order, a: Placed, b: Placed): number {
+  let difference = FIRST[order](a, b);
+  for (const step of STEPS) {
+    if (difference !== 0 || step.name === 'estimates') return difference;
+    difference = step.compare(a, b);
+  }
+  return difference;
+}
+
+/** The first in the order, step by step: of those a step leaves behind nothing further is asked. Null of none. */
+export function firstIn<P extends Placed>(order: Order, all: readonly P[]): P | null {
+  let left = all;
+  for (const compare of [FIRST[order], ...STEPS.map((step) => step.compare)]) {
+    if (left.length < 2) break;
+    left = leastBy(left, compare);
+  }
+  return left[0] ?? null;
+}
+
+/** All that nothing comes before. */
+function leastBy<P extends Placed>(all: readonly P[], compare: (a: Placed, b: Placed) => number): readonly P[] {
+  let least: P[] = [];
+  for (const one of all) {
+    const [first] = least;
+    const difference = first === undefined ? -1 : compare(one, first);
+    if (difference < 0) least = [one];
+    else if (difference === 0) least.push(one);
+  }
+  return least;
+}
+
 function unknownLast(a: number | null, b: number | null): number {
   if (a === null || b === null) return Number(a === null) - Number(b === null);
   return a - b;

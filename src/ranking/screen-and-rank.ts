@@ -1,8 +1,8 @@
 import type { PartSource } from '../parts/part.js';
 import { type ScreenView, viewsOf } from '../parts/screen-view.js';
-import { type Judging, judgingOf, type Marked, type OutcomeCounts, screen, type Screened, screenViews } from '../screening/index.js';
+import { type Judging, judgingOf, type Marked, type OutcomeCounts, screen, type Screened, screenViews, type SurveyedCatalog } from '../screening/index.js';
 import { type Order, rank, type RankedPart } from './rank.js';
-import { rankSurveyed, surveyedFirst, surveyedIds } from './rank-survey.js';
+import { type RankedSurvey, rankSurveyed, surveyedAmong, surveyedFirst, surveyedIds } from './rank-survey.js';
 
 /** How the answer is asked for. */
 export interface RankRequest {
@@ -25,7 +25,7 @@ export function screenAndRank({ demands, circuit }: Marked, source: PartSource, 
     return { run, screened, fit: rank(screened.fit, order) };
   }
   const screened = screenViews(run, source.screening.views, { circuit });
-  return { run, screened, fit: rankSurveyed(screened, order) };
+  return { run, screened, fit: rankSurveyed(screened, order).lines };
 }
 
 /** What became of the parts, in numbers, and those that fit in order. */
@@ -33,6 +33,8 @@ export interface OutlinedAndRanked {
   readonly run: Judging;
   readonly counts: OutcomeCounts;
   readonly fit: readonly RankedPart[];
+  /** The line of a part that fits; null of any other. */
+  readonly lineOf: RankedSurvey['lineOf'];
 }
 
 /** Counts and order of `screenAndRank`; a part that fails a cheap check is not asked the dear ones. */
@@ -40,7 +42,8 @@ export function outlineAndRank({ demands, circuit }: Marked, source: PartSource,
   const run = judgingOf(demands, source, strict);
   const views = viewsIn(source);
   const screened = screenViews(run, views, { circuit, outcomesOnly: true });
-  return { run, counts: countsIn(screened, views), fit: rankSurveyed(screened, order) };
+  const ranked = rankSurveyed(screened, order);
+  return { run, counts: countsIn(screened, views), fit: ranked.lines, lineOf: (judged) => ranked.lineOf(judged) };
 }
 
 /** Without views of its own the parts are looked at, and only then. */
@@ -57,14 +60,48 @@ export interface OutlinedIds {
   readonly first: string | null;
   /** Ordered when they are first asked for. */
   readonly ids: readonly string[];
+  /** By view, the positions of what fits, rising. */
+  readonly fitting: readonly Int32Array[];
+  /** Ids, in order, of what fits here and not in another answer from the same parts. */
+  readonly beyond: (other: Pick<OutlinedIds, 'fitting'>) => readonly string[];
 }
 
-/** The short answer to many stages in a row: what was found out for one serves the next where it asks the same. */
+/**
+ * The short answer to many stages in a row: what was found out for one serves the next where it asks the same. Of each answer only counts
+ * and places are kept; who asks for more has the stage surveyed again.
+ */
 export function outlinesIn(source: PartSource, { strict, order }: RankRequest): (of: Marked) => OutlinedIds {
   const views = viewsIn(source);
   return ({ demands, circuit }) => {
-    const screened = screenViews(judgingOf(demands, source, strict), views, { circuit, outcomesOnly: true });
+    const surveyed = (): SurveyedCatalog => screenViews(judgingOf(demands, source, strict), views, { circuit, outcomesOnly: true });
+    const { counts, first, fitting } = inShort(surveyed(), views, order);
     let ids: readonly string[] | null = null;
-    return { counts: countsIn(screened, views), first: surveyedFirst(screened, order), get ids() { return (ids ??= surveyedIds(screened, order)); } };
+    return {
+      counts,
+      first,
+      fitting,
+      get ids() { return (ids ??= surveyedIds(surveyed(), order)); },
+      beyond: (other) => beyond({ views, fitting }, other, (isAmong) => surveyedAmong(surveyed(), order, isAmong)),
+    };
   };
+}
+
+/** A function of its own, so that nothing of the survey lives on with what is asked of the answer later. */
+function inShort(screened: SurveyedCatalog, views: readonly ScreenView[], order: Order): Pick<OutlinedIds, 'counts' | 'first' | 'fitting'> {
+  const fitting = views.map((view) => Int32Array.from(screened.places.filter((fit) => fit.view === view), ({ position }) => position));
+  return { counts: countsIn(screened, views), first: surveyedFirst(screened, order), fitting };
+}
+
+type IsAmong = Parameters<typeof surveyedAmong>[2];
+
+/** One alone needs no order. */
+function beyond({ views, fitting }: { readonly views: readonly ScreenView[]; readonly fitting: OutlinedIds['fitting'] }, other: Pick<OutlinedIds, 'fitting'>, ordered: (isAmong: IsAmong) => readonly string[]): readonly string[] {
+  const alone = views.map((view, at) => {
+    const there = new Set(other.fitting[at]);
+    return { view, positions: [...(fitting[at] ?? [])].filter((position) => !there.has(position)) };
+  });
+  const ids = alone.flatMap(({ view, positions }) => positions.slice(0, 2).map((position) => ({ view, position })));
+  if (ids.length < 2) return ids.map(({ view, position }) => view.id(position));
+  const among = new Map(alone.map(({ view, positions }) => [view, new Set(positions)]));
+  return ordered(({ view, position }) => among.get(view)?.has(position) === true);
 }

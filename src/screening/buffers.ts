@@ -10,6 +10,8 @@ export interface Buffers {
   readonly sums: Int32Array;
   /** Places of the parts still asked about. */
   readonly open: Int32Array;
+  /** By part: where it stands among those laid by. */
+  readonly places: Int32Array;
   readonly distances: Float64Array;
   readonly current: Int32Array;
   /** By trait. */
@@ -35,7 +37,7 @@ export function buffersFor(view: ScreenView, questions: number): Buffers {
 /** A set that no other survey writes over. */
 export function newBuffers(view: ScreenView, questions: number): Buffers {
   const numbers = (): Int32Array => new Int32Array(sizeIn(view));
-  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), distances: new Float64Array(sizeIn(view)), current: numbers(), codes: [] };
+  return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), places: numbers(), distances: new Float64Array(sizeIn(view)), current: numbers(), codes: [] };
 }
 
 const sizeIn = (view: ScreenView): number => Math.min(view.segment, view.size);

@@ -71,7 +71,7 @@ export function composedQuestion(demands: Demands, check: AnyCheck, whole: TermQ
     const optimistic = low === high ? pessimistic : findingOf(high);
     return pessimistic === null || optimistic === null ? null : decideBriefly(check, pessimistic, optimistic);
   };
-  return { ...whole, check: check.id, digests: found, settle: (answer) => found.settle(answer, () => verdictOf(answer)) };
+  return { ...whole, check: check.id, digests: found, settle: (answer) => found.settle(answer, verdictOf) };
 }
 
 /** The terms of one part after the other, in one outlook and then in the other; what is asked for goes to the path. */

@@ -1,4 +1,5 @@
 import type { BriefVerdict } from '../verdicts/decide.js';
+import { column } from './column.js';
 import { shortness } from './nearest.js';
 
 /** What the tally and the order need of a verdict; it holds for every part with the same pieces. */
@@ -12,39 +13,69 @@ export interface Digests {
   /** Null: the check does not apply. */
   add(verdict: BriefVerdict | null): number;
   /** The same for an answer whose number is known, unless it has its verdict already. */
-  settle(answer: number, verdict: () => BriefVerdict | null): void;
-  /** By answer: what it adds to the part's sum, and to its distance from fitting. */
-  readonly counts: readonly number[];
-  readonly distances: readonly number[];
-  /** Passes only: nothing else is ranked. */
-  readonly passes: readonly (Digest | null)[];
+  settle(answer: number, verdict: (answer: number) => BriefVerdict | null): void;
+  /** By answer: what it adds to the part's sum, and to its distance from fitting. They are replaced when an answer comes that has no place in them. */
+  readonly counts: Int32Array;
+  readonly distances: Float64Array;
+  /** What a pass is ranked by, one and the same object whenever it is asked for; null for any other answer. */
+  pass(answer: number): Digest | null;
 }
 
+/** Numbers in columns: there are as many answers as combinations, and of few of them more is asked than how they count. */
 export function digests(nominalSupply: number): Digests {
-  const counts: number[] = [];
-  const distances: number[] = [];
-  const passes: (Digest | null)[] = [];
+  const counts = column(Int32Array, UNSETTLED);
+  // Of a failure its distance, of a pass its margin.
+  const values = column(Float64Array, 0);
+  const spares = column(Float64Array, 0);
+  const kinds = column(Uint8Array, 0);
+  const kindList: Kind[] = [];
+  const passes = new Map<number, Digest>();
   const put = (answer: number, verdict: BriefVerdict | null): number => {
-    counts[answer] = verdict === null ? 0 : countOf(verdict);
-    distances[answer] = verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : 0;
-    passes[answer] = verdict?.outcome === 'pass' ? digestOf(verdict) : null;
+    counts.put(answer, verdict === null ? 0 : countOf(verdict));
+    values.put(answer, verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : (verdict?.margin ?? 0));
+    spares.put(answer, verdict?.spare ?? 0);
+    kinds.put(answer, verdict?.outcome === 'pass' ? kindOf(verdict, kindList) : 0);
     return answer;
   };
+  let added = 0;
   return {
-    counts, distances, passes,
-    add: (verdict) => put(counts.length, verdict),
+    get counts() { return counts.numbers(); },
+    get distances() { return values.numbers(); },
+    add: (verdict) => put(added++, verdict),
     settle(answer, verdict) {
-      if (counts[answer] === undefined) put(answer, verdict());
+      if (counts.at(answer) === UNSETTLED) put(answer, verdict(answer));
+    },
+    pass(answer) {
+      const kind = kindList[kinds.at(answer) - 1];
+      if (kind === undefined) return null;
+      const known = passes.get(answer) ?? digestOf(kind, { margin: values.at(answer), spare: spares.at(answer) });
+      passes.set(answer, known);
+      return known;
     },
   };
+}
+
+const UNSETTLED = -1;
+
+/** All of a digest but its numbers, and which of these there are: a check has few. */
+interface Kind extends Pick<Digest, 'check' | 'outcome' | 'basis' | 'standsOn'> {
+  readonly hasMargin: boolean;
+  readonly hasSpare: boolean;
+}
+
+/** Its number in the list, from 1. */
+function kindOf({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict, list: Kind[]): number {
+  const [hasMargin, hasSpare] = [margin !== null, spare !== null];
+  const known = list.findIndex((one) => one.basis === basis && one.standsOn === standsOn && one.hasMargin === hasMargin && one.hasSpare === hasSpare);
+  return known < 0 ? list.push({ check, outcome, basis, standsOn, hasMargin, hasSpare }) : known + 1;
+}
+
+function digestOf({ hasMargin, hasSpare, check, outcome, basis, standsOn }: Kind, { margin, spare }: { readonly margin: number; readonly spare: number }): Digest {
+  return { check, outcome, basis, standsOn, margin: hasMargin ? margin : null, spare: hasSpare ? spare : null };
 }
 
 function countOf({ outcome, basis }: BriefVerdict): number {
   if (outcome === 'fail') return COUNTS.fail;
   if (outcome === 'unknown') return COUNTS.unknown;
   return basis === 'guaranteed' ? 0 : COUNTS.weak;
-}
-
-function digestOf({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict): Digest {
-  return { check, outcome, basis, standsOn, margin, spare };
 }

@@ -1,8 +1,10 @@
 import type { ScreenView } from '../parts/screen-view.js';
 import type { Buffers } from './buffers.js';
 import { costOf } from './cost.js';
+import type { DecisionTree } from './decision-tree.js';
 import { COUNTS } from './digest.js';
 import type { CheckQuestion } from './question.js';
+import type { SurveyedFit } from './survey.js';
 
 /** The order in which a stage's questions are asked where one failure settles a part: places among the questions. */
 export interface OpenPlan {
@@ -20,11 +22,16 @@ interface KeptOpen {
   readonly segments: OpenSegment[];
 }
 
-interface OpenSegment {
+/** Parts of a segment that are open after the questions asked before; by place among them. */
+export interface OpenSegment {
   readonly open: Int32Array;
   readonly sums: Int32Array;
-  /** By question. */
+  /** By question, in the order these were asked. */
   readonly answers: readonly Int32Array[];
+  /** What is known of a part that fits, but for the digests of other questions; made when it first fits. */
+  readonly fits: (SurveyedFit | undefined)[];
+  /** Answers of the question asked next: one that differs by its limit alone has the same. */
+  next: { readonly tree: DecisionTree; readonly answers: Int32Array } | null;
 }
 
 /** What a view was last asked, and who was left open by a part of it. */
@@ -48,15 +55,27 @@ interface Asking {
   readonly segment: number;
   readonly count: number;
   readonly buffers: Buffers;
-  readonly ask: (at: number, only: Int32Array) => void;
+  /** Finds the answers of these parts. */
+  readonly classify: (at: number, only: Int32Array) => void;
+  /** Adds what the answers make of these parts to their sums. */
+  readonly add: (at: number, only: Int32Array) => void;
+  readonly tree: (at: number) => DecisionTree | undefined;
 }
 
-/** Asks the parts of a segment until they fail; says how many have not, and leaves their places at the front of `open`. */
-export function askWhileOpen({ same, others, kept, isKnown }: OpenPlan, asking: Asking): number {
+/** How many parts have not failed, their places at the front of `open`; and what was known of them before, if anything. */
+export interface LeftOpen {
+  readonly left: number;
+  readonly known: OpenSegment | null;
+}
+
+/** Asks the parts of a segment until they fail. */
+export function askWhileOpen({ same, others, kept, isKnown }: OpenPlan, asking: Asking): LeftOpen {
   const known = isKnown ? kept.segments[asking.segment] : undefined;
-  const left = known === undefined ? askAfresh(same, asking) : takeUp(known, same, asking);
-  if (known === undefined) kept.segments[asking.segment] = laidBy(same, left, asking.buffers);
-  return askOpen(others, left, asking);
+  if (known !== undefined) return { left: askKnown(known, others, asking), known };
+  const left = askAfresh(same, asking);
+  // The first stage of all has asked nothing before.
+  if (same.length > 0) kept.segments[asking.segment] = laidBy(same, left, asking.buffers);
+  return { left: askOpen(others, left, asking), known: null };
 }
 
 function askAfresh(places: readonly number[], asking: Asking): number {
@@ -66,10 +85,12 @@ function askAfresh(places: readonly number[], asking: Asking): number {
   return askOpen(places, asking.count, asking);
 }
 
-function askOpen(places: readonly number[], count: number, { buffers: { open, sums }, ask }: Asking): number {
+function askOpen(places: readonly number[], count: number, { buffers: { open, sums }, classify, add }: Asking): number {
   let left = count;
   for (const at of places) {
-    ask(at, open.subarray(0, left));
+    const only = open.subarray(0, left);
+    classify(at, only);
+    add(at, only);
     left = keepOpen(open, left, sums);
   }
   return left;
@@ -88,15 +109,31 @@ function keepOpen(open: Int32Array, count: number, sums: Int32Array): number {
 function laidBy(places: readonly number[], left: number, { open, sums, answers }: Buffers): OpenSegment {
   const parts = open.slice(0, left);
   const of = (column: Int32Array | undefined): Int32Array => parts.map((part) => column?.[part] ?? 0);
-  return { open: parts, sums: of(sums), answers: places.map((at) => of(answers[at])) };
+  return { open: parts, sums: of(sums), answers: places.map((at) => of(answers[at])), fits: [], next: null };
 }
 
-function takeUp({ open, sums, answers }: OpenSegment, places: readonly number[], { buffers }: Asking): number {
-  buffers.open.set(open);
-  open.forEach((part, place) => void (buffers.sums[part] = sums[place] ?? 0));
-  places.forEach((at, number) => {
-    const [column, known] = [buffers.answers[at], answers[number]];
-    if (column !== undefined && known !== undefined) open.forEach((part, place) => void (column[part] = known[place] ?? 0));
+/** Takes up the parts that were laid by and asks them the other questions. */
+function askKnown(known: OpenSegment, [first, ...others]: readonly number[], asking: Asking): number {
+  const { open, places, sums } = asking.buffers;
+  open.set(known.open);
+  known.open.forEach((part, place) => {
+    sums[part] = known.sums[place] ?? 0;
+    places[part] = place;
   });
-  return open.length;
+  if (first === undefined) return known.open.length;
+  answerNext(known, first, asking);
+  asking.add(first, known.open);
+  return askOpen(others, keepOpen(open, known.open.length, sums), asking);
+}
+
+function answerNext(known: OpenSegment, at: number, { buffers, classify, tree: treeOf }: Asking): void {
+  const [tree, column] = [treeOf(at), buffers.answers[at]];
+  if (tree === undefined || column === undefined) return;
+  if (known.next?.tree === tree) {
+    const { answers } = known.next;
+    known.open.forEach((part, place) => void (column[part] = answers[place] ?? 0));
+    return;
+  }
+  classify(at, known.open);
+  known.next = { tree, answers: known.open.map((part) => column[part] ?? 0) };
 }

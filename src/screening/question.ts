@@ -59,6 +59,8 @@ interface Kept {
   readonly questions: Map<string, { readonly mark: string; readonly question: CheckQuestion }>;
   /** The wholes of composed checks, by what the stage asks but for the limit. */
   readonly wholes: Map<string, { readonly mark: string; readonly question: TermQuestion }>;
+  /** Made when it is first asked. */
+  current: ValueQuestion | null;
 }
 
 const KEPT = new WeakMap<ScreenView, Kept>();
@@ -67,7 +69,7 @@ function keptFor({ demands: { operating }, strict, classes }: Judging, view: Scr
   const surroundings = markOf([operating, strict, [...classes]], '');
   const before = KEPT.get(view);
   if (before?.surroundings === surroundings) return before;
-  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map() };
+  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map(), current: null };
   KEPT.set(view, kept);
   return kept;
 }
@@ -83,15 +85,20 @@ function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): Che
   return { check, digests: found, settle: () => undefined, ...question(kept, (readings) => found.add(verdict(readings))) };
 }
 
-/** What a part draws, for the order: pessimistic quiescent current, A. */
-export function currentQuestion(run: Judging, view: ScreenView): ReturnType<typeof valueQuestion> {
-  return valueQuestion(run, view, (worst) => worst.figure('quiescentCurrent')?.value ?? null);
+/** A number read off the pessimistic readings of every part, by answer. */
+export interface ValueQuestion extends Question {
+  readonly values: readonly (number | null)[];
 }
 
-/** A number read off the pessimistic readings of every part, by answer. */
-function valueQuestion(run: Judging, view: ScreenView, value: (worst: Readings) => number | null): Question & { readonly values: readonly (number | null)[] } {
+/** What a part draws, for the order: pessimistic quiescent current, A. */
+export function currentQuestion(run: Judging, view: ScreenView): ValueQuestion {
+  const kept = keptFor(run, view);
+  return (kept.current ??= valueQuestion(kept, (worst) => worst.figure('quiescentCurrent')?.value ?? null));
+}
+
+function valueQuestion(kept: Kept, value: (worst: Readings) => number | null): ValueQuestion {
   const values: (number | null)[] = [];
-  return { values, ...question(keptFor(run, view), ([worst]) => values.push(value(worst)) - 1) };
+  return { values, ...question(kept, ([worst]) => values.push(value(worst)) - 1) };
 }
 
 interface Composed {

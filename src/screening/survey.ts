@@ -1,11 +1,11 @@
-import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
-import type { Trait } from '../parts/traits.js';
+import type { ScreenView } from '../parts/screen-view.js';
 import { buffersFor, codesOf, segmentOf, type Buffers } from './buffers.js';
 import { COUNTS, type Digest } from './digest.js';
 import type { Judging } from './judge.js';
 import { nearestKeeper, type Near } from './near.js';
-import { askWhileOpen, openPlan, type OpenPlan } from './open-parts.js';
+import { askWhileOpen, openPlan, type LeftOpen, type OpenPlan } from './open-parts.js';
 import { checkQuestions, currentQuestion, type CheckQuestion } from './question.js';
+import { fitsIn } from './survey-fits.js';
 
 /** A part that fits, with what its place in the order depends on. */
 export interface SurveyedFit {
@@ -61,7 +61,8 @@ export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly =
   return { view, outcomes: counting.outcomes, fits: counting.fits, undecided: counting.undecided, failing, nearest: counting.nearest.found() };
 }
 
-interface Counting {
+/** A survey while it is made. */
+export interface Counting {
   readonly run: Judging;
   readonly view: ScreenView;
   readonly questions: readonly CheckQuestion[];
@@ -80,21 +81,27 @@ function surveySegment(counting: Counting, segment: number): void {
   const { view, questions, buffers, plan } = counting;
   const count = Math.min(view.segment, view.size - segment * view.segment);
   const codes = codesOf(view, segment, buffers);
-  const ask = (at: number, only: Int32Array | null): void => {
+  const classify = (at: number, only: Int32Array | null): void => {
+    const [one, answers] = [questions[at], buffers.answers[at]];
+    if (one !== undefined && answers !== undefined) one.tree.classify(segmentOf(one, { count, codes, only }), answers);
+  };
+  const add = (at: number, only: Int32Array | null): void => {
     const [one, answers] = [questions[at], buffers.answers[at]];
     if (one === undefined || answers === undefined) return;
-    one.tree.classify(segmentOf(one, { count, codes, only }), answers);
     settle(one, { answers, count, only });
     addUp(counting, { one, at, answers, count, only });
   };
   if (plan !== null) {
-    const left = askWhileOpen(plan, { segment, count, buffers, ask });
+    const left = askWhileOpen(plan, { segment, count, buffers, classify, add, tree: (at) => questions[at]?.tree });
     sortOutOpen(counting, { segment, count, codes, left });
     return;
   }
   buffers.sums.fill(0);
   buffers.distances.fill(0);
-  questions.forEach((_, at) => ask(at, null));
+  questions.forEach((_, at) => {
+    classify(at, null);
+    add(at, null);
+  });
   sortOut(counting, { segment, count, codes });
 }
 
@@ -113,9 +120,7 @@ function settle(one: CheckQuestion, { answers, count, only }: Pick<Answered, 'an
 
 /** Distances are added in the order of the verdicts, as they are for a part judged alone: the sums agree to the last bit. */
 function addUp({ buffers: { sums, distances }, fails }: Counting, { one, at, answers, count, only }: Answered): void {
-  const { counts, distances: short } = one.digests;
-  const adds = Int32Array.from(counts);
-  const far = Float64Array.from(short);
+  const { counts: adds, distances: far } = one.digests;
   let failed = 0;
   const asked = only?.length ?? count;
   for (let place = 0; place < asked; place += 1) {
@@ -138,7 +143,7 @@ interface Place {
 }
 
 /** All but those left open have failed. */
-function sortOutOpen(counting: Counting, { segment, count, codes, left }: Place & { readonly left: number }): void {
+function sortOutOpen(counting: Counting, { segment, count, codes, left: { left, known } }: Place & { readonly left: LeftOpen }): void {
   const { view, outcomes, undecided, buffers } = counting;
   const first = segment * view.segment;
   const fitting: number[] = [];
@@ -149,7 +154,7 @@ function sortOutOpen(counting: Counting, { segment, count, codes, left }: Place 
     if (isUndecided) undecided.push(first + at);
     else fitting.push(at);
   }
-  addFits(counting, { first, fitting, count, codes });
+  for (const fit of fitsIn(counting, { first, fitting, count, codes, known })) counting.fits.push(fit);
 }
 
 function sortOut(counting: Counting, { segment, count, codes }: Place): void {
@@ -166,29 +171,5 @@ function sortOut(counting: Counting, { segment, count, codes }: Place): void {
       undecided.push(first + at);
     } else fitting.push(at);
   }
-  addFits(counting, { first, fitting, count, codes });
+  for (const fit of fitsIn(counting, { first, fitting, count, codes, known: null })) counting.fits.push(fit);
 }
-
-interface Fitting extends Omit<Place, 'segment'> {
-  readonly first: number;
-  readonly fitting: readonly number[];
-}
-
-function addFits({ view, questions, current, fits, buffers }: Counting, { first, fitting, count, codes }: Fitting): void {
-  if (fitting.length === 0) return;
-  current.tree.classify(segmentOf(current, { count, codes, only: Int32Array.from(fitting) }), buffers.current);
-  const [prices, families] = [codes(numberOf('price')), codes(numberOf('family'))];
-  for (const at of fitting) {
-    fits.push({
-      view,
-      position: first + at,
-      digests: questions.map(({ digests }, question) => digests.passes[buffers.answers[question]?.[at] ?? 0] ?? null),
-      isGuaranteed: ((buffers.sums[at] ?? 0) & (COUNTS.unknown - COUNTS.weak)) === 0,
-      current: current.values[buffers.current[at] ?? 0] ?? null,
-      price: prices[at] ?? 0,
-      family: families[at] ?? 0,
-    });
-  }
-}
-
-const numberOf = (trait: Trait): number => TRAIT_NUMBER.get(trait) ?? 0;

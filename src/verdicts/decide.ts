@@ -43,7 +43,7 @@ export function decideBriefly(check: CheckIdentity, pessimistic: Finding, optimi
 
 function outcomeOf(pessimistic: Finding, optimistic: Finding): Outcome {
   const worst = standingOf(pessimistic);
-  const best = standingOf(optimistic);
+  const best = optimistic === pessimistic ? worst : standingOf(optimistic);
   return worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
 }
 

@@ -65,7 +65,14 @@ describe('turns between two values', () => {
   });
 });
 
-const answer = (fit: number, first: string | null): SweptState => ({ counts: { parts: 9, fit, undecided: 0, rejected: 9 - fit }, first, fit: first === null ? [] : [first] });
+type Answered = Exclude<SweptState, { contradiction: string }>;
+
+/** One view of the parts A and B; where one of them comes first, it alone fits. */
+function answer(fit: number, first: string | null): Answered {
+  const ids = first === null ? [] : [first];
+  const fitting = [Int32Array.from(ids, (id) => 'AB'.indexOf(id))];
+  return { counts: { parts: 9, fit, undecided: 0, rejected: 9 - fit }, first, fit: ids, fitting, beyond: (other) => ids.filter((_, at) => other.fitting[0]?.includes(fitting[0]?.[at] ?? -1) !== true) };
+}
 
 describe('a sweep', () => {
   it('turns with the count, the first choice, and where there is no stage', () => {
@@ -88,7 +95,7 @@ describe('a sweep', () => {
     const asked: number[] = [];
     const swept = sweep([0, 250, 500], (value) => {
       asked.push(value);
-      return { counts: { parts: 999, fit: Math.floor(value), undecided: 0, rejected: 0 }, first: value < 300 ? 'A' : 'B', fit: [] };
+      return answer(Math.floor(value), value < 300 ? 'A' : 'B');
     });
     expect(swept.turnsOf).toBe('first');
     expect(swept.turns.map(({ to }) => ('first' in to ? to.first : null))).toEqual(['B']);

@@ -58,7 +58,7 @@ function answered(check: ReturnType<typeof sumCheck>, terms: readonly TermQuesti
   const into = new Int32Array(PARTS.length);
   question.tree.classify(segmentOf(question, { count: PARTS.length, codes: (trait) => columns[trait] ?? into }), into);
   into.forEach((answer) => question.settle(answer));
-  return { made, passes: [...into].map((answer) => question.digests.passes[answer]?.margin ?? null) };
+  return { made, passes: [...into].map((answer) => question.digests.pass(answer)?.margin ?? null) };
 }
 
 describe('a check put together from terms', () => {

@@ -109,16 +109,24 @@ describe('one view asked again', () => {
       fc.property(fc.array(fc.tuple(limit, limit, fc.boolean()), { minLength: 2, maxLength: 6 }), (asked) => {
         const [source, rows] = [viewSource(list), rowSource(list)];
         const outlines = outlinesIn(source, ASKING);
+        let before: ReturnType<typeof outlines> | null = null;
         for (const [one, other, isWhole] of asked) {
           const stage = stageOf(text, one[0] === other[0] ? [one] : [one, other]);
           const marked = { demands: deriveDemands(stage), circuit: circuitMark(stage) };
           if (isWhole) screenAndRank(marked, source, ASKING);
-          const { counts, first, ids } = outlines(marked);
+          const outline = outlines(marked);
+          const { counts, first, ids } = outline;
           const fresh = outlinesIn(viewSource(list), ASKING)(marked);
           const judged = screenAndRank(marked, rows, ASKING);
           const fit = judged.fit.flatMap((line) => [line, ...line.variants].map(({ part }) => part.id));
           expect({ counts, first, ids }).toEqual({ counts: { parts: list.length, fit: fit.length, undecided: judged.screened.undecided.length, rejected: judged.screened.rejected.length }, first: fit[0] ?? null, ids: fit });
           expect(ids).toEqual(fresh.ids);
+          if (before !== null) {
+            const earlier = before.ids;
+            expect(outline.beyond(before)).toEqual(ids.filter((id) => !earlier.includes(id)));
+            expect(before.beyond(outline)).toEqual(earlier.filter((id) => !ids.includes(id)));
+          }
+          before = outline;
         }
       }),
       { numRuns: 12, seed: 3 },
