@@ -1,4 +1,4 @@
-import { circuitMark, deriveDemands, listDemands } from './demands/index.js';
+import { deriveDemands, listDemands, oneCircuit } from './demands/index.js';
 import { cellsOf, changesFor, type Changing, comparedPart, compareParts, type LookupContext, lookupList, lookupsOf, sensitivitiesOf, sweep, type Swept, whyAhead, whyNothingFits } from './explanation/index.js';
 import { classesOf } from './parts/classes.js';
 import { curvesOf } from './curves/index.js';
@@ -20,7 +20,7 @@ export function demandsOf(stage: Stage): DemandsReport {
 /** The whole flow on one screen: stage and parts in, judged, ranked and told why. */
 export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLAIN): Report {
   const demands = deriveDemands(stage);
-  const { run, fit, screened } = screenAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
+  const { run, fit, screened } = screenAndRank({ demands, circuit: oneCircuit(stage).mark() }, source, asking);
   const data = dataOf(source);
   return {
     stage,
@@ -62,7 +62,7 @@ const TOLD = 3;
 export function explain(stage: Stage, source: PartSource, request: ExplainRequest): Explanation {
   const { part, asking = PLAIN, changing } = request;
   const demands = deriveDemands(stage);
-  const { run, counts, fit, lineOf } = outlineAndRank({ demands, circuit: circuitMark(stage) }, source, asking);
+  const { run, counts, fit, lineOf } = outlineAndRank({ demands, circuit: oneCircuit(stage).mark() }, source, asking);
   if (source.screening === undefined && !source.parts.includes(part)) throw new RangeError(`part ${part.id} is not in the catalog that was judged`);
   const judged = judgePart(run, part);
   const ranked = judged.outcome !== 'fits' ? null : lineOf(judged);
@@ -147,7 +147,7 @@ export interface Outline {
 export function outlinesOf(source: PartSource, asking: Asking = PLAIN): (stage: Stage) => Outline {
   const outline = outlinesIn(source, asking);
   return (stage) => {
-    const outlined = outline({ demands: deriveDemands(stage), circuit: circuitMark(stage) });
+    const outlined = outline({ demands: deriveDemands(stage), circuit: oneCircuit(stage).mark() });
     const { counts, first, fitting, beyond } = outlined;
     return { counts, first, fitting, beyond, get fit() { return outlined.ids; } };
   };

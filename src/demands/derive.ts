@@ -11,6 +11,7 @@ import { inputHigh, inputLow } from './input-range.js';
 import { junctionTemperature } from './junction-temperature.js';
 import { noise } from './noise.js';
 import { operatingOf } from './operating.js';
+import { oneCircuit } from './one-circuit.js';
 import { outputCurrent } from './output-current.js';
 import { outputHeadroom } from './output-headroom.js';
 import { overdrive } from './overdrive.js';
@@ -76,10 +77,11 @@ export function deriveDemands(stage: Stage): Demands {
 /** The same, each derived when it is first read: a stage that is tried for one check costs that check only. */
 export function demandsWhenAsked(stage: Stage): Demands {
   const known = new Map<string, unknown>();
+  const circuit = oneCircuit(stage);
   const demands = {};
-  for (const [name, derive] of Object.entries(DERIVING)) {
+  for (const [name, derive] of Object.entries<(stage: Stage) => unknown>(DERIVING)) {
     const get = (): unknown => {
-      if (!known.has(name)) known.set(name, derive(stage));
+      if (!known.has(name)) known.set(name, circuit.derived(name, stage, derive));
       return known.get(name);
     };
     Object.defineProperty(demands, name, { enumerable: true, get });

@@ -1,5 +1,6 @@
 export { demandsWhenAsked, deriveDemands } from './derive.js';
 export { circuitMark, markOf } from './circuit-mark.js';
+export { oneCircuit } from './one-circuit.js';
 export { CHECK_IDS } from './demand.js';
 export { listDemands } from './list-demands.js';
 export type {

@@ -36,13 +36,15 @@ export function checkQuestions(run: Judging, view: ScreenView, circuit: string):
   const { demands } = run;
   const kept = keptFor(run, view);
   const built = CHECKS.filter((check) => check.isAsked(demands)).map((check) => {
-    const mark = markOf(check.asked(demands), circuit);
+    const asked = check.asked(demands);
     const before = kept.questions.get(check.id);
+    if (before !== undefined && asked !== null && before.asked === asked && before.circuit === circuit) return before.question;
+    const mark = markOf(asked, circuit);
     if (before?.mark === mark) return before.question;
     const question = check.composition === null
       ? checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) })
       : composedQuestion(demands, check, wholeFor(run, kept, { check, circuit, composition: check.composition }));
-    kept.questions.set(check.id, { mark, question });
+    kept.questions.set(check.id, { asked, circuit, mark, question });
     return question;
   });
   const unbuilt = demands.unbuilt.map((demand) => checkQuestion(run, kept, { check: demand.check, verdict: () => notBuilt(demand) }));
@@ -52,11 +54,12 @@ export function checkQuestions(run: Judging, view: ScreenView, circuit: string):
 
 /** What is kept of a view in the surroundings it was last asked about. */
 interface Kept {
+  readonly around: readonly unknown[];
   readonly surroundings: string;
   readonly view: ScreenView;
   readonly standIn: StandIn;
   /** The last question of each check, by what the stage asked: a changed limit redoes the checks it touches, and no others. */
-  readonly questions: Map<string, { readonly mark: string; readonly question: CheckQuestion }>;
+  readonly questions: Map<string, { readonly asked: unknown; readonly circuit: string; readonly mark: string; readonly question: CheckQuestion }>;
   /** The wholes of composed checks, by what the stage asks but for the limit. */
   readonly wholes: Map<string, { readonly mark: string; readonly question: TermQuestion }>;
   /** Made when it is first asked. */
@@ -66,10 +69,12 @@ interface Kept {
 const KEPT = new WeakMap<ScreenView, Kept>();
 
 function keptFor({ demands: { operating }, strict, classes }: Judging, view: ScreenView): Kept {
-  const surroundings = markOf([operating, strict, [...classes]], '');
+  const around = [operating, strict, classes];
   const before = KEPT.get(view);
+  if (before?.around.every((one, at) => one === around[at]) === true) return before;
+  const surroundings = markOf([operating, strict, [...classes]], '');
   if (before?.surroundings === surroundings) return before;
-  const kept: Kept = { surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map(), current: null };
+  const kept: Kept = { around, surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map(), current: null };
   KEPT.set(view, kept);
   return kept;
 }
