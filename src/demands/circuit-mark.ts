@@ -1,8 +1,10 @@
-import type { LimitsSpec } from '../spec/spec.js';
 import type { Stage } from '../stage/index.js';
 
+/** Limits as they were asked. */
+export type Limits = Stage['asked']['limits'];
+
 /** Limits that only a part is held to: no circuit depends on what they say. */
-const BUDGETS: readonly (keyof LimitsSpec)[] = ['dcError', 'supplyCurrent', 'outputNoise', 'snr', 'distortion', 'phaseMargin'];
+const BUDGETS: readonly (keyof Limits)[] = ['dcError', 'supplyCurrent', 'outputNoise', 'snr', 'distortion', 'phaseMargin'];
 
 /**
  * A text that is equal for two stages of the same circuit in the same surroundings: what the functions of a demand (noise over
@@ -16,7 +18,7 @@ export function circuitMark(stage: Stage): string {
 }
 
 /** Limits the circuit depends on. */
-export function unbudgeted(limits: LimitsSpec): object {
+export function unbudgeted(limits: Limits): object {
   return Object.fromEntries(Object.entries(limits).filter(([name]) => !(BUDGETS as readonly string[]).includes(name)));
 }
 

@@ -1,6 +1,5 @@
-import type { LimitsSpec } from '../spec/spec.js';
 import type { Stage } from '../stage/index.js';
-import { circuitMark, markOf, unbudgeted } from './circuit-mark.js';
+import { circuitMark, type Limits, markOf, unbudgeted } from './circuit-mark.js';
 
 /**
  * What was worked out for stages of one circuit that differ in what their budgets say and in nothing else: a sweep and a search for
@@ -64,12 +63,12 @@ function isShared<Whole extends object>(one: Whole, other: Whole, but: keyof Who
   return names.every((name) => name === but || one[name] === other[name]);
 }
 
-const saysSame = (looked: ReadonlyMap<string, string>, limits: LimitsSpec): boolean => [...looked].every(([name, said]) => saidBy(limits, name) === said);
+const saysSame = (looked: ReadonlyMap<string, string>, limits: Limits): boolean => [...looked].every(([name, said]) => saidBy(limits, name) === said);
 
-const saidBy = (limits: LimitsSpec, name: string): string => markOf([(limits as Readonly<Record<string, unknown>>)[name] ?? null], '');
+const saidBy = (limits: Limits, name: string): string => markOf([(limits as Readonly<Record<string, unknown>>)[name] ?? null], '');
 
 /** The same limits, taking note of which are looked at; of all of them where they are listed. */
-function watched(limits: LimitsSpec, looked: Map<string, string>): LimitsSpec {
+function watched(limits: Limits, looked: Map<string, string>): Limits {
   const note = (name: string | symbol): void => {
     if (typeof name === 'string') looked.set(name, saidBy(limits, name));
   };
