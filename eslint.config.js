@@ -3,7 +3,7 @@ import tseslint from 'typescript-eslint';
 export default tseslint.config(
   { ignores: ['dist/', 'node_modules/', 'coverage/'] },
   {
-    files: ['src/**/*.ts', 'migrations/**/*.ts', 'tests/**/*.ts', 'vitest.config.ts'],
+    files: ['src/**/*.ts', 'migrations/**/*.ts', 'tests/**/*.ts'],
     extends: [...tseslint.configs.strictTypeChecked, ...tseslint.configs.stylisticTypeChecked],
     languageOptions: { parserOptions: { project: './tests/tsconfig.json', tsconfigRootDir: import.meta.dirname } },
     linterOptions: { reportUnusedDisableDirectives: 'error' },

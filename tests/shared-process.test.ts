@@ -1,4 +1,4 @@
-// The files of a run share two processes and the modules in them (vitest.config.ts), so each leaves both as it found them.
+// The files of a run share two processes and the modules in them (tests/vitest.config.ts), so each leaves both as it found them.
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';

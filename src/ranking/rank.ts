@@ -89,24 +89,27 @@ const FIRST: Record<Order, (a: Placed, b: Placed) => number> = {
   margin: (a, b) => leastMargin(b) - leastMargin(a),
 };
 
+/** From here on a part that was only surveyed has to be read. */
+const READ_FROM = STEPS.findIndex(({ name }) => name === 'estimates');
+const KNOWN_STEPS = STEPS.slice(0, READ_FROM);
+const READ_STEPS = STEPS.slice(READ_FROM);
+
 /** Step by step: the later ones cost more and seldom decide. */
 export function compareIn(order: Order, a: Placed, b: Placed): number {
-  let difference = FIRST[order](a, b);
-  for (const step of STEPS) {
-    if (difference !== 0) return difference;
-    difference = step.compare(a, b);
-  }
-  return difference;
+  return compareRoughly(order, a, b) || firstDifference(READ_STEPS, a, b);
 }
 
-/** Order without reading: the steps before those for which a part that was only surveyed has to be read. */
+/** Order without reading. */
 export function compareRoughly(order: Order, a: Placed, b: Placed): number {
-  let difference = FIRST[order](a, b);
-  for (const step of STEPS) {
-    if (difference !== 0 || step.name === 'estimates') return difference;
-    difference = step.compare(a, b);
+  return FIRST[order](a, b) || firstDifference(KNOWN_STEPS, a, b);
+}
+
+function firstDifference(steps: typeof STEPS, a: Placed, b: Placed): number {
+  for (const { compare } of steps) {
+    const difference = compare(a, b);
+    if (difference !== 0) return difference;
   }
-  return difference;
+  return 0;
 }
 
 /** The first in the order, step by step: of those a step leaves behind nothing further is asked. Null of none. */
