@@ -7,11 +7,9 @@ import { gainBandwidthForMagnitudeError, gainBandwidthForVectorError } from '../
 import { gainBandwidthForLoopError, type GainDeviation } from '../formulas/loop-error.js';
 import { gainBandwidthForTransimpedanceError } from '../formulas/transimpedance-error.js';
 import { formatQuantity } from '../quantities/format.js';
-import type { Stage } from '../stage/index.js';
+import { USUAL, type Stage } from '../stage/index.js';
 import { hasEdge, remembering, type Criterion } from './bandwidth-criteria.js';
 import { feedbackCapacitance } from './closed-loop.js';
-
-const DEFAULT_ERROR = 0.01;
 
 /** What the gain error asks of the bandwidth. Nothing without a frequency (a filter is then held to its corner), and of a step. */
 export function gainErrorCriterion(stage: Stage): Criterion[] {
@@ -82,7 +80,7 @@ function filterCriterion(stage: Stage, filter: Filter): Criterion {
   return { what: `${shape}, ${what} (rule of thumb, not counted: ${formatQuantity(rule, 'Hz')})`, needed: () => hertz };
 }
 
-const errorOf = (stage: Stage): number => stage.asked.limits.gainError?.value ?? DEFAULT_ERROR;
+const errorOf = (stage: Stage): number => stage.asked.limits.gainError?.value ?? USUAL.gainError;
 
 /** A shift of the corner means something of a filter only. */
 const kindOf = (stage: Stage): GainDeviation => (stage.asked.limits.gainErrorKind === 'vector' ? 'vector' : 'magnitude');

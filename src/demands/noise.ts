@@ -2,14 +2,12 @@ import { ELEMENTARY_CHARGE } from '../formulas/constants.js';
 import { noiseGrid, type NoiseGrid } from '../formulas/noise-grid.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
 import { formatDecibels, formatQuantity } from '../quantities/format.js';
-import type { Stage } from '../stage/index.js';
+import { USUAL, type Stage } from '../stage/index.js';
 import { withFeedbackCapacitor } from './feedback-capacitor.js';
 import type { NoiseDemand, PartCapacitances } from './noise-demand.js';
 import { openTransimpedance } from './stable-gain.js';
 
 const SOURCE = 'M4: all sources over the true bandwidth, added as squares (Franco, Design with Operational Amplifiers and Analog Integrated Circuits, 3rd ed. 2002, ch. 7; Motchenbacher & Connelly, Low-Noise Electronic System Design, 1993; both from memory)';
-/** Lowest frequency where nobody said how long one looks, Hz (common practice). */
-const LOWEST = 0.1;
 const KELVIN = 273.15;
 
 /** Noise the stage allows at its output, with everything of it but the amplifier. Null without a limit, and for the oscillator. */
@@ -84,7 +82,7 @@ function named({ plus, minus }: Networks): Networks {
 
 const hasResistance = ({ elements, pin }: PinNetwork): boolean => pin !== 'ground' && pin !== 'input' && pin !== 'output' && elements.some(({ kind }) => kind === 'resistor');
 
-const lowestOf = ({ observation }: Stage): number => (observation === null ? LOWEST : 1 / observation);
+const lowestOf = ({ observation }: Stage): number => (observation === null ? USUAL.lowestNoise : 1 / observation);
 
 /** LSB/√12 of the converter behind the stage, V (Bennett, Spectra of quantized signals, Bell Syst. Tech. J. 27, 1948). */
 function quantisation({ asked: { converter } }: Stage): number {

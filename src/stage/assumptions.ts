@@ -2,6 +2,7 @@ import { formatQuantity } from '../quantities/format.js';
 import type { SignalSpec, StageSpec, Topology } from '../spec/spec.js';
 import type { Circuit } from './circuit.js';
 import { gainForm } from './gain-form.js';
+import { USUAL } from './usual.js';
 
 /** Every default that was taken and everything done on the user's behalf, one sentence each, in a fixed order. */
 export function assumptionsOf(spec: StageSpec, circuit: Circuit, solved: readonly string[]): string[] {
@@ -82,21 +83,47 @@ function defaults(spec: StageSpec): string[] {
     [topology !== 'follower' && resistors?.tolerance === undefined, 'resistor tolerance 1 %'],
     [(WITH_CAPACITORS.includes(topology) || capacitors?.feedback !== undefined) && capacitors?.tolerance === undefined, 'capacitor tolerance 5 %'],
     [limits.swingLoss === undefined && !oscillates, 'swing loss 0 V: the whole wanted swing must be there'],
-    [limits.gainError === undefined && signal.frequency !== undefined && !oscillates, 'gain error 1 % at the top frequency'],
-    [!oscillates && unasked(spec) !== null, unasked(spec) ?? ''],
+    ...(oscillates ? [] : [usualGainError(spec), usualMargin(spec), usualNoise(spec), unasked(spec)]).map((sentence): [boolean, string] => [sentence !== null, sentence ?? '']),
     [spec.dutyCycle !== undefined && spec.battery !== undefined, 'battery life counts the stage as always on'],
     [supplyPeak === undefined, 'supply peak is the top of the supply'],
   ];
   return taken.filter(([applies]) => applies).map(([, sentence]) => sentence);
 }
 
+const FILTERS: readonly Topology[] = ['sallen-key-low-pass', 'multiple-feedback-low-pass'];
+
+/** A filter has a corner to keep, whatever the signal; an edge is held to its time. */
+function usualGainError({ topology, signal, limits }: StageSpec): string | null {
+  if (limits.gainError !== undefined) return null;
+  const error = formatQuantity(USUAL.gainError * 100, '%');
+  if (FILTERS.includes(topology)) {
+    const isCorner = (limits.gainErrorKind ?? (signal.frequency === undefined ? 'corner' : 'magnitude')) === 'corner';
+    const top = signal.frequency === undefined || isEdge(signal) ? 'the corner' : 'the top frequency';
+    return isCorner ? `corner off by at most ${error}` : `gain error ${error} up to ${top}`;
+  }
+  return signal.frequency === undefined || isEdge(signal) ? null : `gain error ${error} at the top frequency`;
+}
+
+function usualMargin({ load, limits }: StageSpec): string | null {
+  const { capacitance } = load ?? {};
+  if (limits.phaseMargin !== undefined || capacitance === undefined || capacitance.value === 0) return null;
+  return `phase margin ${formatQuantity(USUAL.phaseMargin, '°')} with the load of ${formatQuantity(capacitance.value, 'F')}`;
+}
+
+function usualNoise({ limits, signal }: StageSpec): string | null {
+  if (signal.observation !== undefined || (limits.outputNoise ?? limits.snr) === undefined) return null;
+  return `noise counted from ${formatQuantity(USUAL.lowestNoise, 'Hz')} on`;
+}
+
+const isEdge = ({ shape }: SignalSpec): boolean => shape === 'step' || shape === 'pulse';
+
 /** Which speed of the amplifier is not asked, since nothing says how fast the signal is. */
 function unasked({ topology, signal, limits }: StageSpec): string | null {
-  const isEdge = signal.shape === 'step' || signal.shape === 'pulse';
-  if (!isEdge && signal.frequency !== undefined) return null;
+  const hasEdge = isEdge(signal);
+  if (!hasEdge && signal.frequency !== undefined) return null;
   // A filter has a corner to keep, and settling asks a bandwidth, whatever the signal is.
-  const hasBandwidth = limits.settling !== undefined || topology === 'sallen-key-low-pass' || topology === 'multiple-feedback-low-pass';
-  if (!isEdge) return `no signal frequency: slew rate ${hasBandwidth ? 'is' : 'and gain bandwidth are'} not asked`;
+  const hasBandwidth = limits.settling !== undefined || FILTERS.includes(topology);
+  if (!hasEdge) return `no signal frequency: slew rate ${hasBandwidth ? 'is' : 'and gain bandwidth are'} not asked`;
   return signal.edge === undefined && limits.settling === undefined ? 'no edge: slew rate is not asked' : null;
 }
 

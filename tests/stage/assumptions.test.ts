@@ -30,6 +30,21 @@ describe('assumptions', () => {
     expect(lines('follower', dc(1, 2), { limits: { phaseMargin: value(45) } }).filter(stability)).toEqual([]);
   });
 
+  it('tell every limit nobody wrote, as the demand asks it', () => {
+    const usual = (...from: Parameters<typeof stageSpec>): readonly string[] => lines(...from).filter((line) => /^(phase margin|gain error|corner off|noise counted)/u.test(line));
+    const capacitive = { load: load(1e4, 'ground', 220e-12) };
+    expect(usual('follower', dc(1, 2, 1e3), capacitive)).toEqual(['gain error 1 % at the top frequency', 'phase margin 45° with the load of 220 pF']);
+    expect(usual('follower', dc(1, 2), { ...capacitive, limits: { phaseMargin: value(60) } })).toEqual([]);
+    expect(usual('follower', dc(1, 2), { load: load(1e4, 'ground', 0) })).toEqual([]);
+    expect(usual('follower', { ...dc(1, 2, 1e3), shape: 'step' })).toEqual([]);
+    const filter = { filter: { corner: value(1e3) } };
+    expect(usual('sallen-key-low-pass', dc(1, 2), filter)).toEqual(['corner off by at most 1 %']);
+    expect(usual('sallen-key-low-pass', dc(1, 2, 100), filter)).toEqual(['gain error 1 % up to the top frequency']);
+    expect(usual('sallen-key-low-pass', dc(1, 2), { ...filter, limits: { gainErrorKind: 'vector' } })).toEqual(['gain error 1 % up to the corner']);
+    expect(usual('follower', dc(1, 2), { limits: { outputNoise: value(1e-3) } })).toEqual(['noise counted from 100 mHz on']);
+    expect(usual('follower', { ...dc(1, 2), observation: value(10) }, { limits: { outputNoise: value(1e-3) } })).toEqual([]);
+  });
+
   it('tell where AC-coupled pulses stand, and that without an edge no slew rate is asked', () => {
     const pulse = (more: object) => lines('follower', { ...ac(0.5), shape: 'pulse', ...more }, { reference: midSupply() });
     expect(pulse({})).toEqual(expect.arrayContaining(['free duty: up to Vpp each side of the bias', 'no edge: slew rate is not asked']));
