@@ -5,8 +5,8 @@ import type { Style } from './style.js';
 /** Columns a text takes on a terminal; colour takes none. */
 export const displayWidth = (text: string): number => (NARROW.test(text) ? text.length : stringWidth(text));
 
-/** Characters that take one column each beside whatever stands next to them, which nearly all texts consist of: Latin, Greek, the trade's signs, lines and blocks. */
-const NARROW = /^[ -~\u00a0-\u00ac\u00ae-\u024f\u0391-\u03a1\u03a3-\u03c9\u2010-\u2015\u2018-\u2022\u2026\u2030\u2032\u2033\u2070\u2074-\u207b\u2190-\u2193\u2212\u221a\u221e\u2248\u2260\u2264\u2265\u2500-\u259f\u2713\u2717]*$/u;
+/** Characters that take one column each beside whatever stands next to them, which nearly all texts consist of: Latin, Greek, the trade's signs, lines and blocks, and the joint of what is to be pasted. */
+const NARROW = /^[ -~\u00a0-\u00ac\u00ae-\u024f\u0391-\u03a1\u03a3-\u03c9\u2010-\u2015\u2018-\u2022\u2026\u2030\u2032\u2033\u2070\u2074-\u207b\u2190-\u2193\u2212\u221a\u221e\u2248\u2260\u2264\u2265\u2500-\u259f\u2713\u2717\ue000]*$/u;
 
 export const padded = (text: string, width: number): string => text + ' '.repeat(Math.max(0, width - displayWidth(text)));
 export const padStart = (text: string, width: number): string => ' '.repeat(Math.max(0, width - displayWidth(text))) + text;
