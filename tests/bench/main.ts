@@ -1,5 +1,5 @@
 import { spawnSync } from 'node:child_process';
-import { existsSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { join, resolve } from 'node:path';
 import { writeList } from '../../src/intake/write-list.js';
@@ -10,7 +10,7 @@ import { duckDbScript } from './duckdb.js';
 import { answerFromRows, timeLibrary } from './library.js';
 import { plausibleParts } from './plausible-part.js';
 import { COUNT10, JOB } from './queries.js';
-import { linesOf, tableOf, targetTable } from './targets.js';
+import { linesOf, PAGE, tableOf, targetTable } from './targets.js';
 import { interleaved, TELLING, timed, type Measure } from './timing.js';
 import { wholeJob } from './whole-job.js';
 
@@ -26,7 +26,8 @@ interface Sizes {
 const FULL: Sizes = { large: 1_000_000, middle: 100_000, rows: 10_000, runs: 11 };
 const QUICK: Sizes = { large: 10_000, middle: 1000, rows: 1000, runs: 3 };
 const FOLDER = resolve('.cache/bench');
-const STAGE = resolve('catalog/stages/soil-moisture-probe.yaml');
+const STAGES = resolve('catalog/stages');
+const STAGE = join(STAGES, 'soil-moisture-probe.yaml');
 const COMMAND = resolve('dist/railfit.mjs');
 const SELF = process.argv[1] ?? '';
 
@@ -94,7 +95,13 @@ function own({ large, middle, shipped }: Files): Measure[] {
     { name: 'library large', run: () => timed(process.execPath, [SELF, '--library', large]) },
     { name: 'explain shipped', run: () => explainOf(shipped) },
     { name: 'explain middle', run: () => explainOf(middle) },
+    ...readdirSync(STAGES).sort().map((stage) => ({ name: `${PAGE}${stage}`, run: () => pageOf(stage, shipped) })),
   ];
+}
+
+/** The review page of a shipped stage, written. */
+function pageOf(stage: string, catalog: string): ReturnType<typeof timed> {
+  return timed(process.execPath, [...TELLING, COMMAND, 'report', join(STAGES, stage), '--catalog', catalog, '-o', join(FOLDER, 'page.html'), '--force']);
 }
 
 function others({ large, middle, rows }: Files, sizes: Sizes): Measure[] {

@@ -9,6 +9,9 @@ export interface Line {
   readonly met: boolean | null;
 }
 
+/** How the measures of review pages are named; the stage file follows. */
+export const PAGE = 'page of ';
+
 /** Runs by the name of what was run. */
 export type Runs = ReadonlyMap<string, readonly Run[]>;
 
@@ -37,6 +40,7 @@ export function linesOf(runs: Runs, { large, middle, rows, same }: { large: numb
   const memory = (name: string): number => ms(name, 'maxRSS') / 1024;
   const extra = memory('shortlist large') - memory('empty node');
   const start = ms('shortlist shipped');
+  const pages = [...runs.keys()].filter((name) => name.startsWith(PAGE)).map((name) => ({ name, milliseconds: ms(name) })).sort((a, b) => b.milliseconds - a.milliseconds);
   return [
     ratio('S1', `shortlist, ${large} parts / sqlite3 shell COUNT10`, { over: ms('shortlist large'), under: ms('shell COUNT10 large'), most: 1.2 }),
     ratio('S2', `shortlist, ${middle} parts / node + better-sqlite3 COUNT10`, { over: ms('shortlist middle'), under: ms('node COUNT10 middle'), most: 1.5 }),
@@ -53,6 +57,7 @@ export function linesOf(runs: Runs, { large, middle, rows, same }: { large: numb
     seconds(`explain with all changes, ${middle} parts`, ms('explain middle'), 1),
     seconds('sweep of a limit, 100 values, shipped catalog', ms('sweep shipped'), 5),
     seconds(`sweep of a limit, 100 values, ${middle} parts, once`, ms('sweep middle'), 5),
+    seconds(`review page of a shipped stage, written: the slowest, ${pages[0]?.name.slice(PAGE.length) ?? 'none'}`, pages[0]?.milliseconds ?? Number.NaN, 1),
     ratio('S10', `growth ${middle} to ${large} parts, start-up taken off`, { over: ms('shortlist large') - start, under: ms('shortlist middle') - start, most: 1.05 * (large / middle) }),
   ];
 }
