@@ -11,7 +11,7 @@ export function unknownKey(key: string, level: string): Complaint {
     return { code: 'S101', message: `${key} is written as one map in the other`, fix: howToWrite(key, true) };
   }
   const keys = acceptedKeys(level);
-  const meant = nearest(key, keys) ?? endingIn(key, keys) ?? elsewhere(key);
+  const meant = nearest(key, keys) ?? endingIn(key, keys) ?? ofKind(key, level) ?? elsewhere(key);
   const where = level === '' ? 'a stage' : level;
   return { code: 'S101', message: `${shown(key)} is not a key of ${where}${hint(meant)} accepted: ${keys.join(', ')}`, fix: meant ?? spacedColon(key) ?? 'leave it out' };
 }
@@ -53,6 +53,12 @@ function hint(meant: string | undefined): string {
 function endingIn(key: string, keys: readonly string[]): string | undefined {
   const word = fold(key);
   const [found, ...more] = keys.filter((one) => /[A-Z][a-z]*$/u.exec(one)?.[0].toLowerCase() === word);
+  return more.length === 0 ? found : undefined;
+}
+
+/** The only key of this level that takes what was typed as its name: the `voltage` of a reference is its `value`. */
+function ofKind(key: string, level: string): string | undefined {
+  const [found, ...more] = acceptedKeys(level).filter((one) => fieldAt(level === '' ? one : `${level}.${one}`)?.kind === fold(key));
   return more.length === 0 ? found : undefined;
 }
 

@@ -16,3 +16,9 @@ it('a word that ends no key is looked for elsewhere', () => {
 it('what is near by its letters comes first', () => {
   expect(unknownKey('error', 'limits').fix).toBe('dcError');
 });
+
+it('what takes a quantity of that name is meant, where one key alone does', () => {
+  expect(unknownKey('voltage', 'reference').fix).toBe('value');
+  expect(unknownKey('capacitance', 'reference').fix).toBe('bypass');
+  expect(unknownKey('voltage', 'limits').fix).not.toBe('value');
+});
