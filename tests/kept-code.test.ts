@@ -52,7 +52,10 @@ describe('the code kept at the build', () => {
     const alone = join(copy, 'alone.mjs');
     cpSync(BUILT, alone);
     const folder = join(copy, 'railfit');
+    const refusal = { status: 5, stdout: '', stderr: `error: the program is not built: ${folder} holds none (exit 5)\n   fix: npm run build\n` };
+    for (const name of readdirSync(folder)) rmSync(join(folder, name));
+    expect(run(alone)).toEqual(refusal);
     rmSync(folder, { recursive: true });
-    expect(run(alone)).toEqual({ status: 5, stdout: '', stderr: `error: the program is not built: ${folder} is missing (exit 5)\n   fix: npm run build\n` });
+    expect(run(alone)).toEqual(refusal);
   });
 });

@@ -7,7 +7,9 @@ const TERMINAL = { isTTY: true, columns: 100 };
 
 /** Runs what users run on every stage in `stages`, once, and keeps the code the engine compiled for it beside the program in `folder`. */
 export async function keepCode(folder: string, stages: string): Promise<void> {
-  const { runCommandLine, keep } = compiled(folder);
+  const program = compiled(folder);
+  if (program === null) throw new Error(`no program in ${folder}`);
+  const { runCommandLine, keep } = program;
   const scratch = mkdtempSync(join(tmpdir(), 'railfit-build-'));
   const answer = async (...words: string[]): Promise<string> => {
     const told: string[] = [];

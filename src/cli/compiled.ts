@@ -1,10 +1,10 @@
-import { readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
 import { setFlagsFromString } from 'node:v8';
 import { constants, Script } from 'node:vm';
 import { crc32 } from 'node:zlib';
-import { lateOptimising } from './late-optimising.js';
+import { optimiseLate } from './late-optimising.js';
 import type { runCommandLine } from './run.js';
 
 /** What the bundled program hands out. */
@@ -22,13 +22,14 @@ export interface Compiled extends Program {
 /**
  * The program bundled into `folder`, with the code kept when it was built. An engine that did not make that code refuses it and compiles
  * the program anew: slower, the same answers. The bundle carries a hash of its text in its name and the code carries the same name, so that
- * code of another program is never taken.
+ * code of another program is never taken. Null where there is no program.
  */
-export function compiled(folder: string): Compiled {
+export function compiled(folder: string): Compiled | null {
+  const name = existsSync(folder) ? readdirSync(folder).find((file) => file.endsWith('.cjs')) : undefined;
+  if (name === undefined) return null;
   // Before compiling: the engine takes only code that was made with the same flags. Code that ran once is not thrown away: it is to be kept.
-  for (const flag of ['--no-flush-bytecode', lateOptimising(process.versions.v8)]) if (flag !== null) setFlagsFromString(flag);
-  const name = readdirSync(folder).find((file) => file.endsWith('.cjs'));
-  if (name === undefined) throw new Error(`no program in ${folder}: run npm run build`);
+  setFlagsFromString('--no-flush-bytecode');
+  optimiseLate();
   const file = join(folder, name);
   const codeFile = file.replace(/cjs$/u, 'code');
   const text = `(function(exports,require,module,__filename,__dirname){${readFileSync(file, 'utf8')}\n})`;

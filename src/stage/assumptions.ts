@@ -74,20 +74,20 @@ function defaults(spec: StageSpec): string[] {
   const { topology, positions, reference, signal, source, load, temperature, resistors, capacitors, limits, supplyPeak } = spec;
   const oscillates = topology === 'relaxation-oscillator';
   const hasSource = topology !== 'summing' && !OWN_DRIVE.includes(topology);
-  const taken: [boolean, string][] = [
-    [positions['signal.coupling'] === undefined && !OWN_DRIVE.includes(topology), 'signal.coupling dc'],
-    [reference === undefined && signal.output === undefined && topology !== 'follower' && !oscillates, 'reference ground'],
-    [source === undefined && hasSource, 'source resistance 0 Ω'],
-    [load === undefined, 'no load at the output'],
-    [temperature === undefined, 'temperature 25 °C'],
-    [topology !== 'follower' && resistors?.tolerance === undefined, 'resistor tolerance 1 %'],
-    [(WITH_CAPACITORS.includes(topology) || capacitors?.feedback !== undefined) && capacitors?.tolerance === undefined, 'capacitor tolerance 5 %'],
-    [limits.swingLoss === undefined && !oscillates, 'swing loss 0 V: the whole wanted swing must be there'],
-    ...(oscillates ? [] : [usualGainError(spec), usualMargin(spec), usualNoise(spec), unasked(spec)]).map((sentence): [boolean, string] => [sentence !== null, sentence ?? '']),
-    [spec.dutyCycle !== undefined && spec.battery !== undefined, 'battery life counts the stage as always on'],
-    [supplyPeak === undefined, 'supply peak is the top of the supply'],
+  const taken: readonly (string | false | null)[] = [
+    positions['signal.coupling'] === undefined && !OWN_DRIVE.includes(topology) && 'signal.coupling dc',
+    reference === undefined && signal.output === undefined && topology !== 'follower' && !oscillates && 'reference ground',
+    source === undefined && hasSource && 'source resistance 0 Ω',
+    load === undefined && 'no load at the output',
+    temperature === undefined && 'temperature 25 °C',
+    topology !== 'follower' && resistors?.tolerance === undefined && 'resistor tolerance 1 %',
+    (WITH_CAPACITORS.includes(topology) || capacitors?.feedback !== undefined) && capacitors?.tolerance === undefined && 'capacitor tolerance 5 %',
+    limits.swingLoss === undefined && !oscillates && 'swing loss 0 V: the whole wanted swing must be there',
+    ...(oscillates ? [] : [usualGainError(spec), usualMargin(spec), usualNoise(spec), unasked(spec)]),
+    spec.dutyCycle !== undefined && spec.battery !== undefined && 'battery life counts the stage as always on',
+    supplyPeak === undefined && 'supply peak is the top of the supply',
   ];
-  return taken.filter(([applies]) => applies).map(([, sentence]) => sentence);
+  return taken.filter((sentence) => typeof sentence === 'string');
 }
 
 const FILTERS: readonly Topology[] = ['sallen-key-low-pass', 'multiple-feedback-low-pass'];

@@ -85,8 +85,10 @@ export function growthNotes(signal: SignalSpec, q: number, growth: Growth): stri
   const times = (factor: number): string => formatQuantity(factor, '1', { digits: 4 });
   const isWave = signal.shape === 'sine' || signal.shape === 'band-limited';
   if (isWave && signal.frequency === undefined) return q > PEAKING ? ['no signal frequency: the peak of the filter is not counted in the swing'] : [];
-  if (growth.largest <= 1) return [];
+  // What rounds to once is no growth anybody could see.
+  const grows = (factor: number): boolean => factor > 1 && times(factor) !== times(1);
+  if (!grows(growth.largest)) return [];
   const why = isWave ? 'the response peaks in the band' : signal.shape === 'step' ? 'a step overshoots' : 'pulses overshoot, each on top of the last at worst';
-  const nominal = growth.nominal > 1 ? `${times(growth.nominal)} times what the gain alone gives, and ` : '';
+  const nominal = grows(growth.nominal) ? `${times(growth.nominal)} times what the gain alone gives, and ` : '';
   return [`${why}: the output swings ${nominal}${times(growth.largest)} times with components at the ends of their tolerances`];
 }

@@ -80,6 +80,8 @@ describe('component ends', () => {
 describe('notes', () => {
   it('tell by how much the swing grows, or that a peak is not counted', () => {
     expect(growthNotes(band(1e3), 1, { nominal: 1.15, largest: 1.25 })[0]).toContain('1.15 times what the gain alone gives, and 1.25 times');
+    expect(growthNotes(band(1e3), 0.7077, { nominal: 1.000002, largest: 1.005 })).toEqual(['the response peaks in the band: the output swings 1.005 times with components at the ends of their tolerances']);
+    expect(growthNotes(band(1e3), 0.7077, { nominal: 1.000001, largest: 1.000002 })).toEqual([]);
     expect(growthNotes(dc(0, 1), 1, { nominal: 1, largest: 1 })).toEqual(['no signal frequency: the peak of the filter is not counted in the swing']);
     expect(growthNotes(dc(0, 1), 0.707, { nominal: 1, largest: 1 })).toEqual([]);
   });
