@@ -2,7 +2,7 @@ import { existsSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
 import { setFlagsFromString } from 'node:v8';
-import { constants, Script } from 'node:vm';
+import { Script } from 'node:vm';
 import { crc32 } from 'node:zlib';
 import { optimiseLate } from './late-optimising.js';
 import type { runCommandLine } from './run.js';
@@ -34,7 +34,7 @@ export function compiled(folder: string): Compiled | null {
   const codeFile = file.replace(/cjs$/u, 'code');
   const text = `(function(exports,require,module,__filename,__dirname){${readFileSync(file, 'utf8')}\n})`;
   const cachedData = keptCode(codeFile);
-  const script = new Script(text, { filename: file, ...(cachedData === null ? {} : { cachedData }), importModuleDynamically: constants.USE_MAIN_CONTEXT_DEFAULT_LOADER });
+  const script = new Script(text, { filename: file, ...(cachedData === null ? {} : { cachedData }) });
   const module: { exports: unknown } = { exports: {} };
   const run = script.runInThisContext() as (...given: unknown[]) => void;
   run(module.exports, createRequire(file), module, file, dirname(file));
