@@ -1,7 +1,7 @@
 import type { ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
 import type { Segment, Step } from './decision-tree.js';
-import type { CodeAt, Question } from './question.js';
+import type { CheckQuestion, CodeAt, Question } from './question.js';
 
 /** One small set for all segments of a view, whatever is asked of it: new memory costs more than the work done in it. */
 export interface Buffers {
@@ -54,14 +54,18 @@ export function codesOf(view: ScreenView, segment: number, { codes }: Buffers): 
   };
 }
 
-interface Asked {
+/** Parts of one segment that are asked about. */
+export interface AskedParts {
+  /** Position in the view of the segment's first part. */
+  readonly first: number;
   readonly count: number;
   readonly codes: (trait: number) => Int32Array;
+  /** Places in the segment; null: all of them. */
   readonly only?: Int32Array | null;
 }
 
 /** What a question's tree is asked about one segment. */
-export function segmentOf(one: Question, { count, codes, only = null }: Asked): Segment {
+export function segmentOf(one: Question, { count, codes, only = null }: Pick<AskedParts, 'count' | 'codes' | 'only'>): Segment {
   const code = one.codes((trait, at) => codes(trait)[at] ?? 0);
   return { count, only, code, grow: growing(one, code) };
 }
@@ -73,4 +77,9 @@ export function growing(one: Question, code: CodeAt): Segment['grow'] {
     const leaf = one.answer((trait) => code(trait, at), path);
     return { path, leaf };
   };
+}
+
+/** The answers of a tree, as a check's. */
+export function byTree(question: Question): Pick<CheckQuestion, 'classify' | 'numbering'> {
+  return { classify: (parts, into) => question.tree.classify(segmentOf(question, parts), into), numbering: question.tree };
 }

@@ -2,7 +2,7 @@ import type { AnyCheck, AnyComposition } from '../checks/index.js';
 import type { Demands } from '../demands/index.js';
 import type { Readings } from '../parts/readings.js';
 import { decideBriefly, type BriefVerdict } from '../verdicts/decide.js';
-import { growing } from './buffers.js';
+import { byTree, growing } from './buffers.js';
 import { decisionTree, type Step } from './decision-tree.js';
 import { digests } from './digest.js';
 import type { Both, CheckQuestion, Question } from './question.js';
@@ -63,7 +63,6 @@ const BRIEF = { brief: true } as const;
 
 /** A composed check: each of its wholes is held against the limit when a part turns up that has it. */
 export function composedQuestion(demands: Demands, check: AnyCheck, whole: TermQuestion): CheckQuestion {
-  const found = digests(demands.operating.nominalSupply);
   const findingOf = (one: unknown) => check.composition?.finding(demands, one, BRIEF) ?? null;
   const verdictOf = (answer: number): BriefVerdict | null => {
     const [low, high] = [whole.worst[answer], whole.best[answer]];
@@ -71,7 +70,8 @@ export function composedQuestion(demands: Demands, check: AnyCheck, whole: TermQ
     const optimistic = low === high ? pessimistic : findingOf(high);
     return pessimistic === null || optimistic === null ? null : decideBriefly(check, pessimistic, optimistic);
   };
-  return { ...whole, check: check.id, digests: found, settle: (answer) => found.settle(answer, verdictOf) };
+  const found = digests(demands.operating.nominalSupply, verdictOf);
+  return { check: check.id, digests: found, settle: (answer) => found.settle(answer), ...byTree(whole) };
 }
 
 /** The terms of one part after the other, in one outlook and then in the other; what is asked for goes to the path. */

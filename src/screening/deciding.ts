@@ -16,7 +16,7 @@ export type Decisive = 'fail' | 'unknown';
  * through when a part of it is first asked about. Made right after the survey, while its questions are kept.
  */
 export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number, decisive: Decisive) => Decided {
-  const questions = checkQuestions(run, view, circuit);
+  const questions = checkQuestions(run, view, { circuit });
   const current = currentQuestion(run, view);
   const asked: Asked = { view, questions, current };
   let last: Answers | null = null;
@@ -43,7 +43,7 @@ function answersIn({ view, questions, current }: Asked, segment: number, buffers
   const codes = codesOf(view, segment, buffers);
   for (const [at, one] of questions.entries()) {
     const answers = buffers.answers[at];
-    if (answers !== undefined) one.tree.classify(segmentOf(one, { count, codes }), answers);
+    if (answers !== undefined) one.classify({ first: segment * view.segment, count, codes }, answers);
   }
   current.tree.classify(segmentOf(current, { count, codes }), buffers.current);
   return { segment, buffers };

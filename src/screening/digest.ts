@@ -10,10 +10,8 @@ export const COUNTS = { fail: 1, weak: 1 << 10, unknown: 1 << 20 } as const;
 
 /** Verdicts of one check, by the number of the answer. */
 export interface Digests {
-  /** Null: the check does not apply. */
-  add(verdict: BriefVerdict | null): number;
-  /** The same for an answer whose number is known, unless it has its verdict already. */
-  settle(answer: number, verdict: (answer: number) => BriefVerdict | null): void;
+  /** Called before anything else is asked of an answer. */
+  settle(answer: number): void;
   /** By answer: what it adds to the part's sum, and to its distance from fitting. They are replaced when an answer comes that has no place in them. */
   readonly counts: Int32Array;
   readonly distances: Float64Array;
@@ -21,8 +19,17 @@ export interface Digests {
   pass(answer: number): Digest | null;
 }
 
-/** Numbers in columns: there are as many answers as combinations, and of few of them more is asked than how they count. */
-export function digests(nominalSupply: number): Digests {
+/** Digests that are put in answer by answer. */
+export interface AddedDigests extends Digests {
+  /** Null: the check does not apply. */
+  add(verdict: BriefVerdict | null): number;
+}
+
+/**
+ * Numbers in columns: there are as many answers as combinations, and of few of them more is asked than how they count. `verdictOf` judges an
+ * answer that was not added.
+ */
+export function digests(nominalSupply: number, verdictOf: (answer: number) => BriefVerdict | null = none): AddedDigests {
   const counts = column(Int32Array, UNSETTLED);
   // Of a failure its distance, of a pass its margin.
   const values = column(Float64Array, 0);
@@ -34,7 +41,7 @@ export function digests(nominalSupply: number): Digests {
     counts.put(answer, verdict === null ? 0 : countOf(verdict));
     values.put(answer, verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : (verdict?.margin ?? 0));
     spares.put(answer, verdict?.spare ?? 0);
-    kinds.put(answer, verdict?.outcome === 'pass' ? kindOf(verdict, kindList) : 0);
+    kinds.put(answer, verdict?.outcome === 'pass' ? numberOf(kindOf(verdict), kindList) : 0);
     return answer;
   };
   let added = 0;
@@ -42,8 +49,8 @@ export function digests(nominalSupply: number): Digests {
     get counts() { return counts.numbers(); },
     get distances() { return values.numbers(); },
     add: (verdict) => put(added++, verdict),
-    settle(answer, verdict) {
-      if (counts.at(answer) === UNSETTLED) put(answer, verdict(answer));
+    settle(answer) {
+      if (counts.at(answer) === UNSETTLED) put(answer, verdictOf(answer));
     },
     pass(answer) {
       const kind = kindList[kinds.at(answer) - 1];
@@ -55,7 +62,37 @@ export function digests(nominalSupply: number): Digests {
   };
 }
 
+/** The same where every part of a list has an answer of its own, numbered by its position: what a pass is ranked by is worked out again when it is asked for. */
+export function digestsByPart(size: number, { nominalSupply, verdictOf }: ByPart): Digests {
+  const counts = new Int32Array(size).fill(UNSETTLED);
+  const distances = new Float64Array(size);
+  const passes = new Map<number, Digest | null>();
+  return {
+    counts, distances,
+    settle(answer) {
+      if (counts[answer] !== UNSETTLED) return;
+      const verdict = verdictOf(answer);
+      counts[answer] = verdict === null ? 0 : countOf(verdict);
+      if (verdict?.outcome === 'fail') distances[answer] = shortness(verdict, nominalSupply);
+    },
+    pass(answer) {
+      const before = passes.get(answer);
+      if (before !== undefined) return before;
+      const verdict = verdictOf(answer);
+      const digest = verdict?.outcome === 'pass' ? digestOf(kindOf(verdict), { margin: verdict.margin ?? 0, spare: verdict.spare ?? 0 }) : null;
+      passes.set(answer, digest);
+      return digest;
+    },
+  };
+}
+
+interface ByPart {
+  readonly nominalSupply: number;
+  readonly verdictOf: (answer: number) => BriefVerdict | null;
+}
+
 const UNSETTLED = -1;
+const none = (): null => null;
 
 /** All of a digest but its numbers, and which of these there are: a check has few. */
 interface Kind extends Pick<Digest, 'check' | 'outcome' | 'basis' | 'standsOn'> {
@@ -63,11 +100,14 @@ interface Kind extends Pick<Digest, 'check' | 'outcome' | 'basis' | 'standsOn'> 
   readonly hasSpare: boolean;
 }
 
+function kindOf({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict): Kind {
+  return { check, outcome, basis, standsOn, hasMargin: margin !== null, hasSpare: spare !== null };
+}
+
 /** Its number in the list, from 1. */
-function kindOf({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict, list: Kind[]): number {
-  const [hasMargin, hasSpare] = [margin !== null, spare !== null];
-  const known = list.findIndex((one) => one.basis === basis && one.standsOn === standsOn && one.hasMargin === hasMargin && one.hasSpare === hasSpare);
-  return known < 0 ? list.push({ check, outcome, basis, standsOn, hasMargin, hasSpare }) : known + 1;
+function numberOf(kind: Kind, list: Kind[]): number {
+  const known = list.findIndex((one) => one.basis === kind.basis && one.standsOn === kind.standsOn && one.hasMargin === kind.hasMargin && one.hasSpare === kind.hasSpare);
+  return known < 0 ? list.push(kind) : known + 1;
 }
 
 function digestOf({ hasMargin, hasSpare, check, outcome, basis, standsOn }: Kind, { margin, spare }: { readonly margin: number; readonly spare: number }): Digest {

@@ -1,7 +1,6 @@
 import type { ScreenView } from '../parts/screen-view.js';
 import type { Buffers } from './buffers.js';
 import { costOf } from './cost.js';
-import type { DecisionTree } from './decision-tree.js';
 import { COUNTS } from './digest.js';
 import type { CheckQuestion } from './question.js';
 import type { SurveyedFit } from './survey.js';
@@ -31,7 +30,7 @@ export interface OpenSegment {
   /** What is known of a part that fits, but for the digests of other questions; made when it first fits. */
   readonly fits: (SurveyedFit | undefined)[];
   /** Answers of the question asked next: one that differs by its limit alone has the same. */
-  next: { readonly tree: DecisionTree; readonly answers: Int32Array } | null;
+  next: { readonly numbering: object; readonly answers: Int32Array } | null;
 }
 
 /** What a view was last asked, and who was left open by a part of it. */
@@ -59,7 +58,7 @@ interface Asking {
   readonly classify: (at: number, only: Int32Array) => void;
   /** Adds what the answers make of these parts to their sums. */
   readonly add: (at: number, only: Int32Array) => void;
-  readonly tree: (at: number) => DecisionTree | undefined;
+  readonly numbering: (at: number) => object | undefined;
 }
 
 /** How many parts have not failed, their places at the front of `open`; and what was known of them before, if anything. */
@@ -126,14 +125,14 @@ function askKnown(known: OpenSegment, [first, ...others]: readonly number[], ask
   return askOpen(others, keepOpen(open, known.open.length, sums), asking);
 }
 
-function answerNext(known: OpenSegment, at: number, { buffers, classify, tree: treeOf }: Asking): void {
-  const [tree, column] = [treeOf(at), buffers.answers[at]];
-  if (tree === undefined || column === undefined) return;
-  if (known.next?.tree === tree) {
+function answerNext(known: OpenSegment, at: number, { buffers, classify, numbering: numberingOf }: Asking): void {
+  const [numbering, column] = [numberingOf(at), buffers.answers[at]];
+  if (numbering === undefined || column === undefined) return;
+  if (known.next?.numbering === numbering) {
     const { answers } = known.next;
     known.open.forEach((part, place) => void (column[part] = answers[place] ?? 0));
     return;
   }
   classify(at, known.open);
-  known.next = { tree, answers: known.open.map((part) => column[part] ?? 0) };
+  known.next = { numbering, answers: known.open.map((part) => column[part] ?? 0) };
 }

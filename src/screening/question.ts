@@ -3,11 +3,14 @@ import { CHECK_IDS, markOf } from '../demands/index.js';
 import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
 import type { Readings } from '../parts/readings.js';
+import { byTree, type AskedParts } from './buffers.js';
 import { composedQuestion, termQuestion, type TermQuestion, wholeQuestion } from './composed-question.js';
 import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
 import { digests, type Digests } from './digest.js';
+import { partByPart } from './part-by-part.js';
 import { briefVerdictOn, notBuilt, type Judging } from './judge.js';
 import { standIn, type StandIn } from './stand-in.js';
+import type { SurveyRequest } from './survey.js';
 
 /** The code of one part in a trait, or in whatever else a question looks at. */
 export type CodeAt = (trait: number, at: number) => number;
@@ -22,29 +25,34 @@ export interface Question {
 }
 
 /** A check asked of every part. */
-export interface CheckQuestion extends Question {
+export interface CheckQuestion {
   readonly check: string;
   readonly digests: Digests;
-  /** Called for every answer before its digest is used. */
+  /** Writes the number of each part's answer to its place in the segment. */
+  classify(parts: AskedParts, into: Int32Array): void;
+  /** Called for every answer before its digest is used, while its segment is the one that was classified last. */
   settle(answer: number): void;
+  /** One and the same object for questions that number their answers alike. */
+  readonly numbering: object;
 }
 
 export type Both = readonly [Readings, Readings];
 
 /** Every check the stage asks for, in the order of verdicts. What was found out for the stage asked before serves again where it asks the same. */
-export function checkQuestions(run: Judging, view: ScreenView, circuit: string): CheckQuestion[] {
+export function checkQuestions(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): CheckQuestion[] {
   const { demands } = run;
   const kept = keptFor(run, view);
   const built = CHECKS.filter((check) => check.isAsked(demands)).map((check) => {
     const asked = check.asked(demands);
-    const before = kept.questions.get(check.id);
+    const form = check.composition !== null && outcomesOnly ? `${check.id} kept` : check.id;
+    const before = kept.questions.get(form);
     if (before !== undefined && asked !== null && before.asked === asked && before.circuit === circuit) return before.question;
     const mark = markOf(asked, circuit);
     if (before?.mark === mark) return before.question;
     const question = check.composition === null
       ? checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) })
-      : composedQuestion(demands, check, wholeFor(run, kept, { check, circuit, composition: check.composition }));
-    kept.questions.set(check.id, { asked, circuit, mark, question });
+      : composedFor(run, kept, { check, circuit, composition: check.composition, outcomesOnly });
+    kept.questions.set(form, { asked, circuit, mark, question });
     return question;
   });
   const unbuilt = demands.unbuilt.map((demand) => checkQuestion(run, kept, { check: demand.check, verdict: () => notBuilt(demand) }));
@@ -60,8 +68,8 @@ interface Kept {
   readonly standIn: StandIn;
   /** The last question of each check, by what the stage asked: a changed limit redoes the checks it touches, and no others. */
   readonly questions: Map<string, { readonly asked: unknown; readonly circuit: string; readonly mark: string; readonly question: CheckQuestion }>;
-  /** The wholes of composed checks, by what the stage asks but for the limit. */
-  readonly wholes: Map<string, { readonly mark: string; readonly question: TermQuestion }>;
+  /** Terms and wholes of composed checks, by what the stage asks but for the limit. */
+  readonly compositions: Map<string, KeptComposition>;
   /** Made when it is first asked. */
   current: ValueQuestion | null;
 }
@@ -74,7 +82,7 @@ function keptFor({ demands: { operating }, strict, classes }: Judging, view: Scr
   if (before?.around.every((one, at) => one === around[at]) === true) return before;
   const surroundings = markOf([operating, strict, [...classes]], '');
   if (before?.surroundings === surroundings) return before;
-  const kept: Kept = { around, surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), wholes: new Map(), current: null };
+  const kept: Kept = { around, surroundings, view, standIn: standIn(view.tier, { operating, strict, classes }), questions: new Map(), compositions: new Map(), current: null };
   KEPT.set(view, kept);
   return kept;
 }
@@ -87,7 +95,7 @@ interface Asked {
 function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): CheckQuestion {
   const found = digests(run.demands.operating.nominalSupply);
   // Every answer has its verdict from the beginning.
-  return { check, digests: found, settle: () => undefined, ...question(kept, (readings) => found.add(verdict(readings))) };
+  return { check, digests: found, settle: () => undefined, ...byTree(question(kept, (readings) => found.add(verdict(readings)))) };
 }
 
 /** A number read off the pessimistic readings of every part, by answer. */
@@ -110,18 +118,35 @@ interface Composed {
   readonly check: AnyCheck;
   readonly composition: AnyComposition;
   readonly circuit: string;
+  readonly outcomesOnly: boolean;
 }
 
-/** Terms and whole of a composed check: a changed limit leaves them as they are. */
-function wholeFor({ demands }: Judging, kept: Kept, { check, composition, circuit }: Composed): TermQuestion {
+/** A changed limit leaves it as it is. */
+interface KeptComposition {
+  readonly mark: string;
+  readonly terms: readonly TermQuestion[];
+  /** Made for limits that change: it takes room, and of all parts of a list it is too much. */
+  whole: TermQuestion | null;
+}
+
+/** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, from wholes that are kept. */
+function composedFor(run: Judging, kept: Kept, of: Composed): CheckQuestion {
+  const { check, composition, outcomesOnly } = of;
+  const { demands } = run;
+  const found = compositionFor(run, kept, of);
+  if (!outcomesOnly) return partByPart(demands, { check, terms: found.terms, size: kept.view.size });
+  return composedQuestion(demands, check, (found.whole ??= wholeQuestion(demands, composition, found.terms)));
+}
+
+function compositionFor({ demands }: Judging, kept: Kept, { check, composition, circuit }: Composed): KeptComposition {
   const asked = check.asked(demands);
   const mark = markOf(typeof asked === 'object' ? { ...asked, required: null, because: null } : asked, circuit);
-  const before = kept.wholes.get(check.id);
-  if (before?.mark === mark) return before.question;
+  const before = kept.compositions.get(check.id);
+  if (before?.mark === mark) return before;
   const terms = composition.names.map((name) => termQuestion((ask) => question(kept, ask), (readings) => composition.term(name, demands, readings)));
-  const whole = wholeQuestion(demands, composition, terms);
-  kept.wholes.set(check.id, { mark, question: whole });
-  return whole;
+  const made = { mark, terms, whole: null };
+  kept.compositions.set(check.id, made);
+  return made;
 }
 
 function question({ view, standIn: { readings, become } }: Kept, decide: (readings: Both) => number): Question {

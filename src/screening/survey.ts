@@ -1,5 +1,5 @@
 import type { ScreenView } from '../parts/screen-view.js';
-import { buffersFor, codesOf, segmentOf, type Buffers } from './buffers.js';
+import { buffersFor, codesOf, type Buffers } from './buffers.js';
 import { COUNTS, type Digest } from './digest.js';
 import type { Judging } from './judge.js';
 import { nearestKeeper, type Near } from './near.js';
@@ -47,7 +47,7 @@ export interface SurveyRequest {
 
 /** Judges every part of a view: each check once per distinct combination of the pieces it looks at; then codes are added up. */
 export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): Survey {
-  const questions = checkQuestions(run, view, circuit);
+  const questions = checkQuestions(run, view, { circuit, outcomesOnly });
   const current = currentQuestion(run, view);
   const counting: Counting = {
     run, view, questions, current,
@@ -83,7 +83,7 @@ function surveySegment(counting: Counting, segment: number): void {
   const codes = codesOf(view, segment, buffers);
   const classify = (at: number, only: Int32Array | null): void => {
     const [one, answers] = [questions[at], buffers.answers[at]];
-    if (one !== undefined && answers !== undefined) one.tree.classify(segmentOf(one, { count, codes, only }), answers);
+    if (one !== undefined && answers !== undefined) one.classify({ first: segment * view.segment, count, codes, only }, answers);
   };
   const add = (at: number, only: Int32Array | null): void => {
     const [one, answers] = [questions[at], buffers.answers[at]];
@@ -92,7 +92,7 @@ function surveySegment(counting: Counting, segment: number): void {
     addUp(counting, { one, at, answers, count, only });
   };
   if (plan !== null) {
-    const left = askWhileOpen(plan, { segment, count, buffers, classify, add, tree: (at) => questions[at]?.tree });
+    const left = askWhileOpen(plan, { segment, count, buffers, classify, add, numbering: (at) => questions[at]?.numbering });
     sortOutOpen(counting, { segment, count, codes, left });
     return;
   }

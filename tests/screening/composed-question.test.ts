@@ -5,8 +5,9 @@ import { CHECKS } from '../../src/checks/index.js';
 import { outputLow } from '../../src/checks/output-low.js';
 import type { Demands } from '../../src/demands/index.js';
 import { composedQuestion, type TermQuestion, wholeQuestion } from '../../src/screening/composed-question.js';
+import { COUNTS } from '../../src/screening/digest.js';
 import { decisionTree } from '../../src/screening/decision-tree.js';
-import { segmentOf } from '../../src/screening/buffers.js';
+import { partByPart } from '../../src/screening/part-by-part.js';
 import type { Finding } from '../../src/verdicts/finding.js';
 
 interface Sum {
@@ -56,7 +57,7 @@ function answered(check: ReturnType<typeof sumCheck>, terms: readonly TermQuesti
   const question = composedQuestion(DEMANDS, check.sealed, made);
   const columns = [0, 1].map((trait) => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0)));
   const into = new Int32Array(PARTS.length);
-  question.tree.classify(segmentOf(question, { count: PARTS.length, codes: (trait) => columns[trait] ?? into }), into);
+  question.classify({ first: 0, count: PARTS.length, codes: (trait) => columns[trait] ?? into }, into);
   into.forEach((answer) => question.settle(answer));
   return { made, passes: [...into].map((answer) => question.digests.pass(answer)?.margin ?? null) };
 }
@@ -78,6 +79,24 @@ describe('a check put together from terms', () => {
     const { passes } = answered(check, [termOf(0, ONE, [0.1, 0.1, 0.1]), termOf(1, [0, 0.5], [0, 0.5])]);
     expect(passes.map((margin) => margin !== null)).toEqual([true, false, false, false, false, false]);
     expect(check.calls.whole).toBe(6);
+  });
+
+  it('is part by part what it is by combinations', () => {
+    const terms = [termOf(0, ONE, [0.1, 0.1, 0.1]), termOf(1, [0, 0.5], [0, 0.5])];
+    const check = sumCheck({ required: 0.15, because: '' });
+    const question = partByPart(DEMANDS, { check: check.sealed, terms, size: 2 * PARTS.length });
+    const columns = [0, 1].map((trait) => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0)));
+    const into = new Int32Array(PARTS.length);
+    for (const first of [0, PARTS.length]) {
+      question.classify({ first, count: PARTS.length, codes: (trait) => columns[trait] ?? into }, into);
+      into.forEach((answer) => question.settle(answer));
+      expect([...into].map((answer) => question.digests.pass(answer)?.margin ?? null)).toEqual(answered(sumCheck({ required: 0.15, because: '' }), terms).passes);
+      expect([...into].map((answer) => question.digests.counts[answer])).toEqual([0, COUNTS.fail, COUNTS.unknown, COUNTS.fail, COUNTS.unknown, COUNTS.unknown]);
+    }
+    // Settled parts are not added up again; one that passes is, for what it is ranked by.
+    const before = check.calls.whole;
+    into.forEach((answer) => question.settle(answer));
+    expect(check.calls.whole).toBe(before);
   });
 
   it('is what the DC error and both head-rooms are', () => {

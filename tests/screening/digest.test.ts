@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { COUNTS, digests } from '../../src/screening/digest.js';
+import { COUNTS, digests, digestsByPart } from '../../src/screening/digest.js';
 import type { BriefVerdict } from '../../src/verdicts/decide.js';
 
 const number = fc.option(fc.double({ noNaN: true, noDefaultInfinity: true }));
@@ -36,11 +36,28 @@ describe('digests in columns', () => {
 
   it('keep the verdict an answer has', () => {
     fc.assert(fc.property(verdict, verdict, (first, second) => {
-      const kept = digests(5);
-      kept.settle(70, () => ({ ...first, outcome: 'fail' }));
-      kept.settle(70, () => ({ ...second, outcome: 'pass' }));
+      const judged = [{ ...first, outcome: 'fail' }, { ...second, outcome: 'pass' }] as const;
+      let asked = 0;
+      const kept = digests(5, () => judged[asked++] ?? null);
+      kept.settle(70);
+      kept.settle(70);
+      expect(asked).toBe(1);
       expect(kept.counts[70]).toBe(COUNTS.fail);
       expect(kept.pass(70)).toBeNull();
+    }));
+  });
+
+  it('are the same of answers that each belong to a part', () => {
+    fc.assert(fc.property(fc.array(fc.option(verdict), { minLength: 1, maxLength: 100 }), (all) => {
+      const kept = digests(5);
+      for (const one of all) kept.add(one);
+      const byPart = digestsByPart(all.length, { nominalSupply: 5, verdictOf: (answer) => all[answer] ?? null });
+      for (const at of all.keys()) {
+        byPart.settle(at);
+        expect([byPart.counts[at], byPart.pass(at)]).toEqual([kept.counts[at], kept.pass(at)]);
+        expect(byPart.pass(at)).toBe(byPart.pass(at));
+        if (all[at]?.outcome === 'fail') expect(byPart.distances[at]).toBe(kept.distances[at]);
+      }
     }));
   });
 });
