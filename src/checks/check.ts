@@ -43,10 +43,11 @@ export interface ComposedCheck<Asked, Found, Whole> extends Omit<Check<Asked>, '
 
 /** The same as a check: its judge works out every term the whole asks for. */
 export function composed<Asked extends object, Found, Whole>(check: ComposedCheck<Asked, Found, Whole>): ComposedCheck<Asked, Found, Whole> & Check<Asked> {
-  return { ...check, judge: (asked, readings) => check.finding(asked, check.whole(asked, knownOf(check, asked, readings), readings), readings) };
+  return { ...check, judge: (asked, readings) => check.finding(asked, check.whole(asked, knownOf(check.terms, { asked, readings }), readings), readings) };
 }
 
-function knownOf<Asked extends object, Found>({ terms }: Pick<ComposedCheck<Asked, Found, unknown>, 'terms'>, asked: Asked, readings: Readings): Known<Found> {
+/** Terms of one part, each worked out when it is asked for. */
+export function knownOf<Asked extends object, Found>(terms: ComposedCheck<Asked, Found, unknown>['terms'], { asked, readings }: { readonly asked: Asked; readonly readings: Readings }): Known<Found> {
   const names = Object.keys(terms) as (keyof Found)[];
   return Object.fromEntries(names.map((name) => [name, () => terms[name](asked, readings)])) as Known<Found>;
 }

@@ -6,6 +6,7 @@ import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
 import type { Spread } from '../parts/spread.js';
 import { formatQuantity } from '../quantities/format.js';
+import type { ComposedCheck, Known } from './check.js';
 
 /** Second pole of the part itself, Hz, and what it is known by. */
 export interface OwnPole {
@@ -22,21 +23,47 @@ export interface LoopFigures {
   /** What a pole is made of needs a figure only where there is such a pole. */
   readonly inputCapacitance: Reading | null;
   readonly needsInput: boolean;
+  /** Null also where nothing is loaded. */
+  readonly outputResistance: Reading | null;
+  /** Null also where the output resistance is known: it decides nothing then. */
+  readonly capacitiveLoad: Reading | null;
+}
+
+/** What the loop of a part is put together from, each read where it counts. */
+export interface LoopFound {
+  readonly speed: Spread | null;
+  /** Of the part itself, degrees. */
+  readonly angle: Reading | null;
+  readonly unityCrossover: Reading | null;
+  readonly inputCapacitance: Reading | null;
   readonly outputResistance: Reading | null;
   readonly capacitiveLoad: Reading | null;
 }
 
-export function loopFigures(asked: Pick<PhaseMarginDemand, 'network'>, readings: Readings): LoopFigures {
-  const speed = readings.spread('gainBandwidth');
+type Asked = Pick<PhaseMarginDemand, 'network' | 'load'>;
+
+/** One figure each: few of either, and nearly as many combinations as parts. */
+export const LOOP_TERMS: ComposedCheck<Asked, LoopFound, unknown>['terms'] = {
+  speed: (_, readings) => readings.spread('gainBandwidth'),
+  angle: (_, readings) => readings.figure('phaseMargin'),
+  unityCrossover: (_, readings) => readings.figure('unityCrossover'),
+  inputCapacitance: (_, readings) => readings.figure('inputCapacitance'),
+  outputResistance: (_, readings) => readings.figure('outputResistance'),
+  capacitiveLoad: (_, readings) => readings.figure('capacitiveLoad'),
+};
+
+/** The figures of one part, read where they count. */
+export function loopFigures(asked: Asked, found: Known<LoopFound>, told: Pick<Readings, 'brief'>): LoopFigures {
+  const speed = found.speed();
   const needsInput = !HELD.has(asked.network.minus.pin);
+  const outputResistance = asked.load.capacitance > 0 ? found.outputResistance() : null;
   return {
     speed,
-    own: ownPole(readings, speed),
-    inputCapacitance: needsInput ? readings.figure('inputCapacitance') : null,
+    own: ownPole(found, speed, told),
+    inputCapacitance: needsInput ? found.inputCapacitance() : null,
     needsInput,
-    // Read where they count: what is not looked at makes no difference between parts.
-    get outputResistance() { return readings.figure('outputResistance'); },
-    get capacitiveLoad() { return readings.figure('capacitiveLoad'); },
+    outputResistance,
+    capacitiveLoad: asked.load.capacitance > 0 && outputResistance === null ? found.capacitiveLoad() : null,
   };
 }
 
@@ -46,15 +73,15 @@ const HELD: ReadonlySet<string> = new Set(['output', 'input', 'ground']);
 const LEAST_ANGLE = 0.1;
 
 /** f2 = fu·tan PM from its stated unity-gain crossover and margin; without the crossover from its gain bandwidth. */
-function ownPole(readings: Readings, speed: Spread | null): OwnPole {
-  const margin = readings.figure('phaseMargin');
+function ownPole(found: Known<LoopFound>, speed: Spread | null, { brief }: Pick<Readings, 'brief'>): OwnPole {
+  const margin = found.angle();
   if (margin === null) return { hertz: Infinity, basis: 'assumed', slot: null, how: 'no margin of the part itself known: no excess phase counted' };
   const { slot, basis } = margin;
   const angle = Math.max(LEAST_ANGLE, margin.value);
-  const stated = readings.brief ? '' : `phase margin ${formatQuantity(margin.printed ?? margin.value, '°')} at unity gain`;
-  if (angle >= 90) return { hertz: Infinity, basis, slot, how: `${stated}: no excess phase` };
-  const crossover = readings.figure('unityCrossover');
+  const stated = brief ? '' : `phase margin ${formatQuantity(margin.printed ?? margin.value, '°')} at unity gain`;
+  if (angle >= 90) return { hertz: Infinity, basis, slot, how: brief ? '' : `${stated}: no excess phase` };
+  const crossover = found.unityCrossover();
   if (crossover !== null) return { hertz: Number.isFinite(crossover.value) ? excessPole(crossover.value, angle) : Infinity, basis, slot, how: stated };
   const hertz = speed?.printed == null ? Infinity : secondPoleForPhaseMargin(speed.printed, angle);
-  return { hertz, basis: 'estimated', slot, how: `${stated}, its crossover taken from the gain bandwidth` };
+  return { hertz, basis: 'estimated', slot, how: brief ? '' : `${stated}, its crossover taken from the gain bandwidth` };
 }

@@ -6,38 +6,72 @@ import type { Spread } from '../parts/spread.js';
 import { formatQuantity } from '../quantities/format.js';
 import { meets } from '../verdicts/compare.js';
 import type { Finding, Term, UndecidedFinding } from '../verdicts/finding.js';
-import type { Check } from './check.js';
+import { composed, type Known, type Unlimited } from './check.js';
 import { byCapacitiveLoad } from './phase-margin-capacitive-load.js';
-import { loopFigures, type LoopFigures } from './phase-margin-figures.js';
+import { LOOP_TERMS, loopFigures, type LoopFigures, type LoopFound } from './phase-margin-figures.js';
 import { atEitherEnd, phaseParts, worstMargin, type Ends, type Loop, type Margin } from './phase-margin-loop.js';
 import { phaseMarginRemedies } from './phase-margin-remedies.js';
 import { turningResistance, unknownInput } from './phase-margin-turns.js';
 
 /** Phase margin at the true crossover, with the load behind the output resistance and the capacitance of the part's input. */
-export const phaseMargin: Check<PhaseMarginDemand> = {
+export const phaseMargin = composed<PhaseMarginDemand, PhaseMarginFound, PartLoop>({
   id: 'phase-margin',
   title: 'phase margin',
   unit: '°',
   reads: ['gainBandwidth', 'phaseMargin', 'unityCrossover', 'outputResistance', 'capacitiveLoad', 'inputCapacitance', 'minimumStableGain'],
   hasMargin: true,
   asks: (demands) => demands['phase-margin'],
-  judge: judgePhaseMargin,
-};
+  terms: { ...LOOP_TERMS, stableGain: (_, readings) => readings.figure('minimumStableGain') },
+  whole: partLoop,
+  finding: againstLimit,
+});
 
-function judgePhaseMargin(asked: PhaseMarginDemand, readings: Readings): Finding {
-  const figures = loopFigures(asked, readings);
-  const { speed } = figures;
-  if (speed === null) return withoutSpeed(asked, figures);
-  if (speed.ends === null) return whateverSuits(asked, speed);
-  const isLoaded = asked.load.capacitance > 0;
-  const outputResistance = isLoaded ? figures.outputResistance : null;
-  if (isLoaded && outputResistance === null) return withoutOutputResistance({ asked, figures, ends: speed.ends }, readings);
-  const loop = loopOf(asked, figures, isLoaded ? (outputResistance?.value ?? 0) : null);
-  return measured({ asked, figures, speed, ends: speed.ends, loop }, readings);
+interface PhaseMarginFound extends LoopFound {
+  /** Read for remedies only. */
+  readonly stableGain: Reading | null;
 }
 
+/** The loop of this stage with one part, whatever margin is asked. */
+interface PartLoop {
+  readonly figures: LoopFigures;
+  /** Null: gain bandwidth or load are not known well enough. */
+  readonly closed: ClosedLoop | null;
+  readonly isUnityStable: () => boolean;
+}
+
+interface ClosedLoop {
+  readonly speed: Spread;
+  readonly ends: Ends;
+  readonly loop: Loop;
+  readonly worst: Margin;
+}
+
+function partLoop(asked: Unlimited<PhaseMarginDemand>, found: Known<PhaseMarginFound>, told: Told): PartLoop {
+  const figures = loopFigures(asked, found, told);
+  return { figures, closed: closedLoop(asked, figures), isUnityStable: () => (found.stableGain()?.value ?? 1) <= 1 };
+}
+
+function closedLoop(asked: Unlimited<PhaseMarginDemand>, figures: LoopFigures): ClosedLoop | null {
+  const { speed, outputResistance } = figures;
+  const ends = speed?.ends ?? null;
+  const isLoaded = asked.load.capacitance > 0;
+  if (speed === null || ends === null || (isLoaded && outputResistance === null)) return null;
+  const loop = loopOf(asked, figures, isLoaded ? (outputResistance?.value ?? 0) : null);
+  return { speed, ends, loop, worst: worstMargin(loop, ends) };
+}
+
+function againstLimit(asked: PhaseMarginDemand, part: PartLoop, told: Told): Finding {
+  const { figures: { speed }, closed } = part;
+  if (closed !== null) return measured({ ...part, asked, closed }, told);
+  if (speed === null) return withoutSpeed(asked, part.figures);
+  if (speed.ends === null) return whateverSuits(asked, speed);
+  return withoutOutputResistance({ asked, figures: part.figures, ends: speed.ends }, told);
+}
+
+type Told = Pick<Readings, 'brief'>;
+
 /** The loop of this stage with this part; output resistance null: nothing to load, or not to be counted. */
-function loopOf({ network, open, load }: PhaseMarginDemand, { own, inputCapacitance, needsInput }: LoopFigures, outputResistance: number | null): Loop {
+function loopOf({ network, open, load }: Pick<PhaseMarginDemand, 'network' | 'open' | 'load'>, { own, inputCapacitance, needsInput }: LoopFigures, outputResistance: number | null): Loop {
   return {
     network,
     open,
@@ -47,29 +81,25 @@ function loopOf({ network, open, load }: PhaseMarginDemand, { own, inputCapacita
   };
 }
 
-interface Measured {
+interface Measured extends PartLoop {
   readonly asked: PhaseMarginDemand;
-  readonly figures: LoopFigures;
-  readonly speed: Spread;
-  readonly ends: Ends;
-  readonly loop: Loop;
+  readonly closed: ClosedLoop;
 }
 
-function measured(of: Measured, readings: Readings): Finding {
-  const { asked, figures, speed, ends, loop } = of;
-  const worst = worstMargin(loop, ends);
+function measured(of: Measured, { brief }: Told): Finding {
+  const { asked, figures, closed: { speed, ends, loop, worst } } = of;
   const { required, unit, sense } = asked;
   const input = inputBasis(figures, { loop, ends, required });
-  const terms = readings.brief ? [] : termsOf(of, worst, input);
-  const passes = meets(required, worst.margin, sense);
-  const isUnityStable = (): boolean => (readings.figure('minimumStableGain')?.value ?? 1) <= 1;
+  const basis = weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]);
+  const offered = worst.margin;
+  if (brief) return { kind: 'numbers', required, unit, sense, offered, basis };
+  const passes = meets(required, offered, sense);
   return {
-    kind: 'numbers', required, unit, sense, offered: worst.margin, slot: speed.slot,
-    basis: weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]),
-    how: readings.brief ? null : `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
-    terms,
-    cautions: passes && !readings.brief && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
-    remedies: passes || readings.brief ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable()),
+    kind: 'numbers', required, unit, sense, offered, slot: speed.slot, basis,
+    how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
+    terms: termsOf(of, input),
+    cautions: passes && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
+    remedies: passes ? [] : phaseMarginRemedies({ asked, loop, ends }, of.isUnityStable()),
   };
 }
 
@@ -92,8 +122,8 @@ function inputBasis({ needsInput, inputCapacitance }: LoopFigures, { loop, ends,
 }
 
 /** Where the phase goes, degrees: the terms add up to the margin. */
-function termsOf({ figures, speed, loop }: Measured, { gainBandwidth }: Margin, inputBases: readonly Basis[]): Term[] {
-  const parts = phaseParts(loop, gainBandwidth);
+function termsOf({ figures, closed: { speed, loop, worst } }: Measured, inputBases: readonly Basis[]): Term[] {
+  const parts = phaseParts(loop, worst.gainBandwidth);
   if (parts === null) return [];
   const { own, inputCapacitance, needsInput, outputResistance } = figures;
   const crossover = `crossover at ${formatQuantity(parts.crossover, 'Hz')}`;
@@ -119,8 +149,14 @@ function withoutSpeed(asked: PhaseMarginDemand, figures: LoopFigures): Finding {
   return stated ?? ({ kind: 'undecided', required, unit, sense, cause: 'missing-figure', missing: [{ figure: 'gainBandwidth', kind: 'min' }] } satisfies UndecidedFinding);
 }
 
+interface WithoutResistance {
+  readonly asked: PhaseMarginDemand;
+  readonly figures: LoopFigures;
+  readonly ends: Ends;
+}
+
 /** The load pole has no figure: the maker's capacitive load decides, else only what is left without that pole is known. */
-function withoutOutputResistance({ asked, figures, ends }: Pick<Measured, 'asked' | 'figures' | 'ends'>, { brief }: Readings): Finding {
+function withoutOutputResistance({ asked, figures, ends }: WithoutResistance, { brief }: Told): Finding {
   const unloaded = loopOf(asked, figures, null);
   const known = worstMargin(unloaded, ends).margin;
   const { required, unit, sense } = asked;

@@ -1,4 +1,5 @@
-import { loopFigures } from '../checks/phase-margin-figures.js';
+import { knownOf } from '../checks/check.js';
+import { LOOP_TERMS, loopFigures } from '../checks/phase-margin-figures.js';
 import { loopFactor, marginAt, phaseParts, type Loop } from '../checks/phase-margin-loop.js';
 import type { PhaseMarginDemand } from '../demands/index.js';
 import { nearestSupply, usable } from '../parts/select.js';
@@ -42,7 +43,7 @@ function loopOf({ stage, demands, worst }: Standing): Loop | null {
   if (network === null || stage.response.kind === 'oscillator') return null;
   const hung = { capacitance: load?.capacitance ?? 0, resistance: load?.resistance ?? null, isolation: load?.isolation ?? 0 };
   const asked: Pick<PhaseMarginDemand, 'network' | 'open' | 'load'> = { network, open: demands['stable-gain']?.open ?? null, load: hung };
-  const figures = loopFigures(asked, worst);
+  const figures = loopFigures(asked, knownOf(LOOP_TERMS, { asked, readings: worst }), worst);
   const resistance = figures.outputResistance?.value ?? null;
   return {
     network,

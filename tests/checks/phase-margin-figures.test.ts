@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import { loopFigures, type OwnPole } from '../../src/checks/phase-margin-figures.js';
-import { readingsOf } from '../../src/parts/readings.js';
+import { knownOf } from '../../src/checks/check.js';
+import { LOOP_TERMS, loopFigures, type LoopFigures, type OwnPole } from '../../src/checks/phase-margin-figures.js';
+import type { PhaseMarginDemand } from '../../src/demands/index.js';
+import { readingsOf, type Readings } from '../../src/parts/readings.js';
 import type { Figure } from '../../src/parts/figures.js';
 import { assumed, max, typ, under } from '../support/parts.js';
 import { dc, demandsOf, resistors, stageSpec, value } from '../support/stages.js';
@@ -8,7 +10,8 @@ import { dc, demandsOf, resistors, stageSpec, value } from '../support/stages.js
 const LIMITS = { phaseMargin: value(60) };
 const FOLLOWER = demandsOf(stageSpec('follower', dc(1, 2), { limits: LIMITS }))['phase-margin']!;
 const AMPLIFIER = demandsOf(stageSpec('non-inverting', dc(0.1, 0.3), { resistors: resistors(70e3, 10e3), limits: LIMITS }))['phase-margin']!;
-const own = (figures: readonly Figure[], outlook: 'pessimistic' | 'optimistic' = 'pessimistic'): OwnPole => loopFigures(FOLLOWER, readingsOf(under(figures, { outlook }))).own;
+const figuresOf = (asked: PhaseMarginDemand, readings: Readings): LoopFigures => loopFigures(asked, knownOf(LOOP_TERMS, { asked, readings }), readings);
+const own = (figures: readonly Figure[], outlook: 'pessimistic' | 'optimistic' = 'pessimistic'): OwnPole => figuresOf(FOLLOWER, readingsOf(under(figures, { outlook }))).own;
 
 describe('the pole of the part itself', () => {
   it('lies at fu·tan PM', () => {
@@ -35,8 +38,11 @@ describe('the pole of the part itself', () => {
   });
 });
 
-it('the input capacitance is asked for only where the pin has an impedance', () => {
+it('a figure is read only where it counts', () => {
+  const loaded = { ...FOLLOWER, load: { ...FOLLOWER.load, capacitance: 1e-9 } };
   const readings = readingsOf(under([typ('inputCapacitance', 5e-12), max('capacitiveLoad', 1e-10)]));
-  expect(loopFigures(FOLLOWER, readings)).toMatchObject({ needsInput: false, capacitiveLoad: { value: 1e-10 }, outputResistance: null, speed: null });
-  expect(loopFigures(AMPLIFIER, readings)).toMatchObject({ needsInput: true, inputCapacitance: { value: 5e-12 } });
+  expect(figuresOf(loaded, readings)).toMatchObject({ needsInput: false, inputCapacitance: null, capacitiveLoad: { value: 1e-10 }, outputResistance: null, speed: null });
+  expect(figuresOf(AMPLIFIER, readings)).toMatchObject({ needsInput: true, inputCapacitance: { value: 5e-12 }, capacitiveLoad: null });
+  const known = readingsOf(under([typ('outputResistance', 100), max('capacitiveLoad', 1e-10)]));
+  expect(figuresOf(loaded, known)).toMatchObject({ capacitiveLoad: null, outputResistance: { printed: 100 } });
 });

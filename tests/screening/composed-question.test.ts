@@ -99,8 +99,8 @@ describe('a check put together from terms', () => {
     expect(check.calls.whole).toBe(before);
   });
 
-  it('is what the DC error and both head-rooms are', () => {
-    expect(CHECKS.filter(({ composition }) => composition !== null).map(({ id }) => id)).toEqual(['output-low', 'output-high', 'dc-error']);
+  it('is what the DC error, both head-rooms and the phase margin are', () => {
+    expect(CHECKS.filter(({ composition }) => composition !== null).map(({ id }) => id)).toEqual(['output-low', 'output-high', 'phase-margin', 'dc-error']);
     expect([Object.keys(outputLow.terms), Object.keys(dcError.terms)].map((names) => names.includes('offset'))).toEqual([true, true]);
   });
 });
