@@ -63,9 +63,15 @@ interface DcErrorSum extends Pick<NumberFinding, 'terms' | 'corner' | 'cautions'
 function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Told): DcErrorSum {
   const { reading: offset } = found.offset();
   const all = termsOf(asked, found, { brief });
-  const terms = all.flatMap((one) => (one.kind === 'value' ? [one.term] : []));
-  const values = terms.map((term) => term.value);
-  const sum = { known: worstCaseSum(values), missing: all.filter((one) => one.kind === 'missing'), basis: weakest(terms.map((term) => term.basis)), borrowed: borrowedSum(terms) };
+  const terms: Term[] = [];
+  const missing: DcErrorSum['missing'][number][] = [];
+  for (const one of all) {
+    if (one.kind === 'value') terms.push(one.term);
+    else if (one.kind === 'missing') missing.push(one);
+  }
+  const values = terms.map(({ value }) => value);
+  const bases = terms.map(({ basis }) => basis);
+  const sum = { known: worstCaseSum(values), missing, basis: weakest(bases), borrowed: bases.includes('borrowed') ? borrowedSum(terms) : 0 };
   if (brief) return sum;
   const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
   return { ...sum, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(values) };

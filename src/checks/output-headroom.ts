@@ -86,8 +86,7 @@ interface Share {
   readonly terms: readonly Term[];
   readonly value: number;
   readonly basis: Basis;
-  /** Caution when offset or drift is not known, given the spare left. */
-  caution(spare: number): string | null;
+  readonly unknowns: Unknowns;
 }
 
 function offsetShare({ noiseGain, kelvin }: HeadroomVertices, found: Known<HeadroomFound>): Share {
@@ -97,9 +96,9 @@ function offsetShare({ noiseGain, kelvin }: HeadroomVertices, found: Known<Headr
   const driftKnown = overTemperature || kelvin === 0 || drift !== null;
   return {
     terms,
-    value: terms.reduce((sum, term) => sum + term.value, 0),
+    value: (terms[0]?.value ?? 0) + (terms[1]?.value ?? 0),
     basis: weakest(terms.map(({ basis }) => basis)),
-    caution: (spare) => cautionFor(spare, { noiseGain, offsetKnown: offset !== null, driftKnown, kelvin }),
+    unknowns: { noiseGain, offsetKnown: offset !== null, driftKnown, kelvin },
   };
 }
 
@@ -129,41 +128,39 @@ interface At {
 
 function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const { share, reading } = at;
-  if (at.brief && reading.value !== null && meets(vertex.room, 0, 'at-most')) {
-    const basis = weakest([reading.basis, share.basis]);
-    return { kind: 'numbers', unit: 'V', sense: 'at-most', required: vertex.room, corner: vertex.corner, offered: reading.value + share.value, basis };
-  }
-  const common = { unit: 'V', sense: 'at-most' as const, required: vertex.room, corner: vertex.corner, turnsAt: turnsAt(vertex, at) };
-  const basis = weakest([reading.basis, share.basis]);
-  if (reading.value === null) return beyond(vertex, at, { ...common, basis, known: (reading.bound ?? 0) + share.value });
-  const offered = reading.value + share.value;
-  // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
-  if (!meets(vertex.room, 0, 'at-most') && meets(vertex.room, offered, 'at-most')) return bound(at, { ...common, basis, known: share.value });
-  const caution = share.caution(vertex.room - offered);
+  const bare = bareAt(vertex, at);
+  if (at.brief) return bare;
+  if (bare.kind === 'bound') return { ...bare, ...missingAt(vertex, at), turnsAt: turnsAt(vertex, at) };
+  const caution = cautionFor(vertex.room - bare.offered, share.unknowns);
   return {
-    kind: 'numbers', ...common, offered, basis, slot: reading.slot, how: reading.how,
-    terms: [headroomTerm(reading, reading.value, vertex), ...share.terms],
+    ...bare, slot: reading.slot, how: reading.how, turnsAt: turnsAt(vertex, at),
+    terms: [headroomTerm(reading, reading.value ?? 0, vertex), ...share.terms],
     cautions: caution === null ? [] : [caution],
   } satisfies NumberFinding;
 }
 
-function bound(at: At, common: Common): BoundFinding {
-  const figure = at.side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom';
-  const cause = at.reading.bound === null ? 'missing-figure' : 'beyond-data';
-  return { kind: 'bound', ...common, terms: at.share.terms, missing: [{ figure, kind: 'max' }], cause };
+/** The numbers that decide, and nothing told. */
+function bareAt(vertex: HeadroomVertex, { share, reading }: At): NumberFinding | BoundFinding {
+  const { room: required, corner } = vertex;
+  const basis = weakest([reading.basis, share.basis]);
+  const common = { unit: 'V', sense: 'at-most', required, corner, basis } as const;
+  if (reading.value === null) return { kind: 'bound', ...common, known: (reading.bound ?? 0) + share.value, missing: [], cause: 'missing-figure' };
+  const offered = reading.value + share.value;
+  // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
+  if (!meets(required, 0, 'at-most') && meets(required, offered, 'at-most')) return { kind: 'bound', ...common, known: share.value, missing: [], cause: 'missing-figure' };
+  return { kind: 'numbers', ...common, offered };
 }
 
-/** No point reaches the current that flows: the heaviest one's own head-room is the least it can be. */
-function beyond(vertex: HeadroomVertex, at: At, common: Common): BoundFinding {
-  const finding = bound(at, common);
-  const { bound: least, covers, slot, basis } = at.reading;
-  if (least === null || covers === null) return finding;
+/** What is missing for a number. Where no point reaches the current that flows, the heaviest one's own head-room is the least it can be. */
+function missingAt(vertex: HeadroomVertex, { side, reading, share }: At): Pick<BoundFinding, 'terms' | 'missing' | 'cause'> {
+  const missing = { figure: side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom', kind: 'max' } as const;
+  const { value, bound, covers, slot, basis, how } = reading;
+  const cause = bound === null ? 'missing-figure' : 'beyond-data';
+  if (value !== null || bound === null || covers === null) return { terms: share.terms, missing: [missing], cause };
   const { current, supply } = vertex;
-  const term: Term = { name: 'head-room of the heaviest point', value: least, slot, basis, figure: null, how: at.reading.how };
-  return { ...finding, terms: [term, ...at.share.terms], missing: finding.missing.map((one) => ({ ...one, beyond: { covers, current, supply } })) };
+  const term: Term = { name: 'head-room of the heaviest point', value: bound, slot, basis, figure: null, how };
+  return { terms: [term, ...share.terms], missing: [{ ...missing, beyond: { covers, current, supply } }], cause };
 }
-
-type Common = Pick<BoundFinding, 'unit' | 'sense' | 'required' | 'corner' | 'turnsAt' | 'basis' | 'known'>;
 
 function headroomTerm(reading: HeadroomReading, value: number, vertex: HeadroomVertex): Term {
   const at = vertex.current === 0 ? 'no current towards this rail' : `at ${formatQuantity(vertex.current, 'A')}`;

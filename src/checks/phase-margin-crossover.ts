@@ -33,6 +33,18 @@ export function boundedCrossover(gain: (frequency: number) => number, gainBandwi
   return left < 0 ? downwards(at, { position, left }, top - REACH) : crossoverOf(gain, gainBandwidth);
 }
 
+/**
+ * The same of a loop whose |T| falls by a decade or more in every decade and stands at 1 or below at `most` (Hz): the crossover lies no further below a
+ * place than |T| is below 1 there.
+ */
+export function laggingCrossover(gain: (frequency: number) => number, most: number): number {
+  const at = (position: number): number => gain(Math.exp(position));
+  const high = Math.log(most) + SLACK;
+  const left = at(high);
+  const low = high + left - SLACK;
+  return Math.exp(falsePosition(at, { position: low, left: at(low) }, { position: high, left }));
+}
+
 /** More than rounding of a logarithm. */
 const SLACK = 1e-9;
 

@@ -1,9 +1,9 @@
 import { withFeedbackCapacitor } from '../demands/index.js';
-import { divide, magnitude, phase } from '../formulas/complex.js';
+import { divide, magnitude, phase, type Complex } from '../formulas/complex.js';
 import { feedbackFactor } from '../formulas/feedback-loop.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
 import { maximallyFlatCapacitor } from '../formulas/transimpedance.js';
-import { boundedCrossover, crossoverOf } from './phase-margin-crossover.js';
+import { boundedCrossover, crossoverOf, laggingCrossover } from './phase-margin-crossover.js';
 import { loadedFactor, type Factor, type LoopNetworks } from './phase-margin-exact-load.js';
 import { loadAngle, loadSize } from './phase-margin-load.js';
 import type { Loop, PhaseParts } from './phase-margin-loop.js';
@@ -25,6 +25,10 @@ export interface Factors {
 
 /** What was found out about one network: its feedback factor by the capacitance at the − input, and the loops around it that were opened last. */
 interface Known {
+  /** As it takes part in the loop. */
+  readonly plus: PinNetwork;
+  readonly isExact: boolean;
+  readonly isResistive: boolean;
   readonly bare: Map<number, Factor>;
   readonly recent: { readonly loop: Loop; readonly opened: Opened }[];
 }
@@ -49,7 +53,9 @@ export function opened(loop: Loop): Opened {
 function knownOf(network: Loop['network']): Known {
   const before = KNOWN.get(network);
   if (before !== undefined) return before;
-  const known = { bare: new Map<number, Factor>(), recent: [] };
+  const { minus } = network;
+  const plus = heard(network.plus);
+  const known = { plus, isExact: isExact({ plus, minus }), isResistive: resistorsAlone(network), bare: new Map<number, Factor>(), recent: [] };
   KNOWN.set(network, known);
   return known;
 }
@@ -63,38 +69,45 @@ function isSame(one: Loop, other: Loop): boolean {
 function open(loop: Loop, known: Known): Opened {
   let made: Factors | null = null;
   const factorsAt = (gainBandwidth: number): Factors => (loop.open !== null ? factorsOf(loop, gainBandwidth, null) : (made ??= factorsOf(loop, gainBandwidth, known)));
-  const isResistive = resistorsAlone(loop);
-  const found = new Map<number, PhaseParts | null>();
+  const isResistive = loop.open === null && known.isResistive;
+  const onlyLags = isResistive && (loop.load === null || loop.load.isolation === 0);
+  const found: { readonly gainBandwidth: number; readonly parts: PhaseParts | null }[] = [];
   return {
-    onlyLags: isResistive && (loop.load === null || loop.load.isolation === 0),
+    onlyLags,
     factorsAt,
     partsAt(gainBandwidth) {
-      const before = found.get(gainBandwidth);
-      if (before !== undefined) return before;
-      const parts = partsOf(loop, { factors: factorsAt(gainBandwidth), gainBandwidth, isResistive });
-      found.set(gainBandwidth, parts);
+      // A part is asked about at its ends and one place between.
+      for (const before of found) if (before.gainBandwidth === gainBandwidth) return before.parts;
+      const parts = partsOf(loop, { factors: factorsAt(gainBandwidth), gainBandwidth, isResistive, onlyLags });
+      if (found.length < KEPT) found.push({ gainBandwidth, parts });
       return parts;
     },
   };
 }
 
+/** Ends, the place between them, and what a search between these comes back to. */
+const KEPT = 8;
+
 /** From the output to the − input, with a capacitance there at most: what comes back is most at DC, and a load takes from it. */
-function resistorsAlone({ network: { plus, minus }, open: chosen }: Loop): boolean {
+function resistorsAlone({ plus, minus }: Loop['network']): boolean {
   const { elements, pin } = minus;
   const isHeard = pin === 'output' || (feedsBack(minus) && elements.some(({ between }) => between.includes(pin)));
-  return chosen === null && !feedsBack(plus) && isHeard && elements.every(({ kind }) => kind === 'resistor');
+  return !feedsBack(plus) && isHeard && elements.every(({ kind }) => kind === 'resistor');
 }
 
 /** `known`: null where a capacitor of the network is chosen by the gain bandwidth. */
 function factorsOf(loop: Loop, gainBandwidth: number, known: Known | null): Factors {
   const { load } = loop;
-  const networks = networksOf(loop, gainBandwidth);
+  const networks = known === null ? networksOf(loop, gainBandwidth) : { plus: known.plus, minus: loop.network.minus, minusCapacitance: minusCapacitance(loop) };
   const bare = known === null ? feedbackFactor(networks) : bareOf(networks, known);
-  const loaded = load !== null && isExact(networks) ? loadedFactor(networks, load) : null;
+  const loaded = load !== null && (known?.isExact ?? isExact(networks)) ? loadedFactor(networks, load) : null;
   if (loaded !== null) return { bare, loaded, size: (frequency) => magnitude(loaded(frequency)) };
   const ofLoad = loadSize(load);
-  return { bare, loaded, size: (frequency) => magnitude(bare(frequency)) * ofLoad(frequency) };
+  return { bare, loaded, size: (frequency) => share(bare(frequency)) * ofLoad(frequency) };
 }
+
+/** Size of what comes back, V/V: too near to 1 for the care that hypot takes. */
+const share = ({ re, im }: Complex): number => Math.sqrt(re * re + im * im);
 
 function bareOf(networks: LoopNetworks, { bare }: Known): Factor {
   const before = bare.get(networks.minusCapacitance);
@@ -109,6 +122,7 @@ interface At {
   readonly factors: Factors;
   readonly gainBandwidth: number;
   readonly isResistive: boolean;
+  readonly onlyLags: boolean;
 }
 
 /**
@@ -116,9 +130,10 @@ interface At {
  * (Ro||RL)·CL and Riso·CL as M7 has them. One with capacitors of its own (filters, integrator, feedback capacitor, transimpedance)
  * loads the output resistance too: there Ro, Riso, RL and CL stand in one circuit with it, exactly.
  */
-function partsOf({ load, ownPole }: Loop, { factors: { bare, loaded, size }, gainBandwidth, isResistive }: At): PhaseParts | null {
-  const gain = (frequency: number): number => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.hypot(1, frequency / ownPole));
-  const crossover = isResistive ? boundedCrossover(gain, gainBandwidth, gainBandwidth * magnitude(bare(0))) : crossoverOf(gain, gainBandwidth);
+function partsOf({ load, ownPole }: Loop, { factors: { bare, loaded, size }, gainBandwidth, isResistive, onlyLags }: At): PhaseParts | null {
+  const gain = (frequency: number): number => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.sqrt(1 + (frequency / ownPole) ** 2));
+  const most = isResistive ? gainBandwidth * magnitude(bare(0)) : Infinity;
+  const crossover = onlyLags && most > 0 ? laggingCrossover(gain, most) : isResistive ? boundedCrossover(gain, gainBandwidth, most) : crossoverOf(gain, gainBandwidth);
   if (crossover === null) return null;
   const feedback = bare(crossover);
   return {
@@ -132,16 +147,21 @@ function partsOf({ load, ownPole }: Loop, { factors: { bare, loaded, size }, gai
 const DEGREES = 180 / Math.PI;
 
 /** Both networks with this part's capacitances and, where it is left to the part, its feedback capacitor. */
-export function networksOf({ network, open: chosen, inputCapacitance, stray = 0 }: Loop, gainBandwidth: number): LoopNetworks {
+export function networksOf(loop: Loop, gainBandwidth: number): LoopNetworks {
+  const { network, open: chosen, inputCapacitance } = loop;
   const flat = chosen === null ? null : maximallyFlatCapacitor({ feedback: chosen.feedback, inputCapacitance: chosen.inputCapacitance + inputCapacitance, gainBandwidth });
   const { plus, minus } = flat === null ? network : withFeedbackCapacitor(network, flat);
-  return { plus: feedsBack(plus) ? plus : SILENT, minus, minusCapacitance: inputCapacitance + stray };
+  return { plus: heard(plus), minus, minusCapacitance: minusCapacitance(loop) };
 }
 
+const minusCapacitance = ({ inputCapacitance, stray = 0 }: Loop): number => inputCapacitance + stray;
+
 /** A bypass shorts a leg and takes nothing from the output. */
-const isExact = ({ plus, minus }: LoopNetworks): boolean => [...plus.elements, ...minus.elements].some(({ kind, name }) => kind === 'capacitor' && name !== 'bypass');
+const isExact = ({ plus, minus }: Pick<LoopNetworks, 'plus' | 'minus'>): boolean => [...plus.elements, ...minus.elements].some(({ kind, name }) => kind === 'capacitor' && name !== 'bypass');
 
 const feedsBack = ({ elements, pin }: PinNetwork): boolean => pin === 'output' || elements.some(({ between }) => between.includes('output'));
+
+const heard = (network: PinNetwork): PinNetwork => (feedsBack(network) ? network : SILENT);
 
 /** A pin the output never reaches takes no part in the loop. */
 const SILENT: PinNetwork = { elements: [], pin: 'ground' };

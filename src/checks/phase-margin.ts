@@ -1,5 +1,5 @@
 import type { PhaseMarginDemand } from '../demands/index.js';
-import { weakest, type Basis } from '../parts/basis.js';
+import { weakest, weaknessOf, type Basis } from '../parts/basis.js';
 import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
 import type { Spread } from '../parts/spread.js';
@@ -89,11 +89,13 @@ interface Measured extends PartLoop {
 function measured(of: Measured, { brief }: Told): Finding {
   const { asked, figures, closed: { speed, ends, loop, worst } } = of;
   const { required, unit, sense } = asked;
-  const input = inputBasis(figures, { loop, ends, required });
-  const basis = weakest([speed.basis, figures.own.basis, ...input, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]);
+  const known = weakest([speed.basis, figures.own.basis, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]);
   const offered = worst.margin;
-  if (brief) return { kind: 'numbers', required, unit, sense, offered, basis };
   const passes = meets(required, offered, sense);
+  // Where nothing is told of it, it counts only in a pass, and where it can weaken that any further.
+  const input = brief && (!passes || isAssumed(known)) ? [] : inputBasis(figures, { loop, ends, required });
+  const basis = weakest([known, ...input]);
+  if (brief) return { kind: 'numbers', required, unit, sense, offered, basis };
   return {
     kind: 'numbers', required, unit, sense, offered, slot: speed.slot, basis,
     how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
@@ -103,6 +105,7 @@ function measured(of: Measured, { brief }: Told): Finding {
   };
 }
 
+const isAssumed = (basis: Basis): boolean => weaknessOf(basis) >= weaknessOf('assumed');
 const basisOf = (reading: Reading | null): Basis[] => (reading === null ? [] : [reading.basis]);
 
 /** No input has more than this (common practice, from memory), F. */

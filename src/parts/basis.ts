@@ -4,8 +4,10 @@ export type Basis = (typeof BASES)[number];
 
 /** Place of a basis in that order: the larger, the weaker. */
 export function weaknessOf(basis: Basis): number {
-  return BASES.indexOf(basis);
+  return WEAKNESS[basis];
 }
+
+const WEAKNESS = Object.fromEntries(BASES.map((basis, place) => [basis, place])) as Record<Basis, number>;
 
 /** The weakest of several bases; `guaranteed` for none. */
 export function weakest(bases: readonly Basis[]): Basis {

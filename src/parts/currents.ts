@@ -21,6 +21,7 @@ export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent
 }
 
 function worstOf(figures: readonly Figure[], operating: Operating): Figure | undefined {
+  if (figures.length < 2) return figures[0];
   const rank = (figure: Figure): number => weaknessOf(basisOf(figure, operating));
   return [...figures].sort((a, b) => rank(a) - rank(b) || b.value - a.value)[0];
 }
@@ -47,7 +48,7 @@ function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Readi
   const best = figure.assumed === true ? bestPossible(figure) : figure.value;
   const worst = figure.kind === 'typ' ? derate(figure) : figure.value;
   const value = test.outlook === 'optimistic' ? best : worst * growth;
-  const steps = [
+  const steps = test.brief === true ? [] : [
     ...(figure.kind === 'typ' ? [`typical ${factorText(derate({ ...figure, value: 1 }))}`] : []),
     ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, ${DOUBLING} per ${DOUBLING_KELVIN} K`] : []),
   ];

@@ -30,8 +30,9 @@ export function termQuestion(asking: (find: (readings: Both) => number) => Quest
 function alike(one: unknown, other: unknown): boolean {
   if (Object.is(one, other)) return true;
   if (typeof one !== 'object' || typeof other !== 'object' || one === null || other === null) return false;
-  const [members, others] = [Object.entries(one), Object.entries(other)];
-  return members.length === others.length && members.every(([name, value], at) => name === others[at]?.[0] && alike(value, others[at][1]));
+  const [members, others] = [one as Readonly<Record<string, unknown>>, other as Readonly<Record<string, unknown>>];
+  const [names, otherNames] = [Object.keys(members), Object.keys(others)];
+  return names.length === otherNames.length && names.every((name, at) => name === otherNames[at] && alike(members[name], others[name]));
 }
 
 /** The whole of a composed check: made once for every combination of answers of its terms. */

@@ -5,13 +5,16 @@ import type { Piece, Trait } from '../parts/traits.js';
 
 /** Readings that depend on the figures of their own parameter alone: made once per distinct piece, however many parts have it. */
 export function remembering(plain: Readings, look: (trait: Trait) => Piece): Readings {
-  const memories = new WeakMap<Piece, Map<string, unknown>>();
+  const memories = new Map<Piece, Map<string, unknown>>();
   const once = <Made>(trait: Trait, key: string, make: () => Made): Made => {
     const piece = look(trait);
-    const memory = memories.get(piece) ?? new Map<string, unknown>();
-    memories.set(piece, memory);
-    if (!memory.has(key)) memory.set(key, make());
-    return memory.get(key) as Made;
+    let memory = memories.get(piece);
+    if (memory === undefined) memories.set(piece, (memory = new Map<string, unknown>()));
+    const known = memory.get(key);
+    if (known !== undefined) return known as Made;
+    const made = make();
+    memory.set(key, made);
+    return made;
   };
   const figure: Readings['figure'] = (parameter, end) =>
     DEPENDENT.has(parameter) ? plain.figure(parameter, end) : once(parameter, end ?? 'figure', () => plain.figure(parameter, end));

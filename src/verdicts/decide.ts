@@ -69,6 +69,8 @@ const same = (a: string, b: string): boolean => a.trim().toLowerCase() === b.tri
 /** Of the vertices that decide, the one of least spare; one with a number before one with a bound. */
 function shownOf(finding: Exclude<Finding, WordFinding>, outcome: Outcome): SingleFinding {
   if (finding.kind !== 'vertices') return finding;
+  const [one, another] = finding.findings;
+  if (one !== undefined && another === undefined) return one;
   const ranked = deciding(finding.findings, outcome).sort((a, b) => rank(a) - rank(b) || spare(a) - spare(b));
   const first = ranked[0];
   if (first === undefined) throw new RangeError('a check over vertices has none');

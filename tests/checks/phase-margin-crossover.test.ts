@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { crossoverOf, boundedCrossover, falsePosition } from '../../src/checks/phase-margin-crossover.js';
+import { crossoverOf, boundedCrossover, falsePosition, laggingCrossover } from '../../src/checks/phase-margin-crossover.js';
 
 describe('the crossover of a loop gain', () => {
   it('is exact for one pole: GBW/NG', () => {
@@ -23,6 +23,30 @@ describe('the crossover of a loop gain', () => {
 
   it('lies above the gain bandwidth where the network lifts it', () => {
     expect(crossoverOf((frequency) => Math.log(1e9 / frequency), 1e6)! / 1e9).toBeCloseTo(1, 11);
+  });
+});
+
+describe('the crossover of a loop that only lags', () => {
+  const hertz = (from: number, to: number): fc.Arbitrary<number> => fc.double({ min: Math.log(from), max: Math.log(to), noNaN: true }).map(Math.exp);
+
+  it('is that of the whole search, from fewer places', () => {
+    fc.assert(
+      fc.property(hertz(1e2, 1e9), hertz(1, 1e5), hertz(1e2, 1e9), hertz(1e2, 1e9), (gainBandwidth, noiseGain, pole, other) => {
+        let looks = 0;
+        const gain = (frequency: number): number => Math.log(gainBandwidth / noiseGain / frequency / Math.hypot(1, frequency / pole) / Math.hypot(1, frequency / other));
+        const counted = (frequency: number): number => {
+          looks += 1;
+          return gain(frequency);
+        };
+        expect(laggingCrossover(counted, gainBandwidth / noiseGain) / crossoverOf(gain, gainBandwidth)!).toBeCloseTo(1, 10);
+        expect(looks).toBeLessThan(16);
+      }),
+      { numRuns: 1000 },
+    );
+  });
+
+  it('is the most there is where nothing takes from it', () => {
+    expect(laggingCrossover((frequency) => Math.log(1e6 / frequency), 1e6) / 1e6).toBeCloseTo(1, 11);
   });
 });
 
