@@ -143,12 +143,15 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
 function bareAt(vertex: HeadroomVertex, { share, reading }: At): NumberFinding | BoundFinding {
   const { room: required, corner } = vertex;
   const basis = weakest([reading.basis, share.basis]);
-  const common = { unit: 'V', sense: 'at-most', required, corner, basis } as const;
-  if (reading.value === null) return { kind: 'bound', ...common, known: (reading.bound ?? 0) + share.value, missing: [], cause: 'missing-figure' };
+  if (reading.value === null) return boundAt((reading.bound ?? 0) + share.value, { required, corner, basis });
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
-  if (!meets(required, 0, 'at-most') && meets(required, offered, 'at-most')) return { kind: 'bound', ...common, known: share.value, missing: [], cause: 'missing-figure' };
-  return { kind: 'numbers', ...common, offered };
+  if (!meets(required, 0, 'at-most') && meets(required, offered, 'at-most')) return boundAt(share.value, { required, corner, basis });
+  return { kind: 'numbers', unit: 'V', sense: 'at-most', required, corner, basis, offered };
+}
+
+function boundAt(known: number, { required, corner, basis }: Pick<HeadroomVertex, 'corner'> & Pick<BoundFinding, 'required' | 'basis'>): BoundFinding {
+  return { kind: 'bound', unit: 'V', sense: 'at-most', required, corner, basis, known, missing: [], cause: 'missing-figure' };
 }
 
 /** What is missing for a number. Where no point reaches the current that flows, the heaviest one's own head-room is the least it can be. */

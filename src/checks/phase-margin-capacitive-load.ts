@@ -13,6 +13,8 @@ export interface Unloaded {
   /** Degrees, without the part's own excess phase, which the maker's limit contains. */
   readonly margin: number;
   readonly basis: Basis;
+  /** Only the decision is wanted. */
+  readonly brief?: boolean;
 }
 
 /**
@@ -30,7 +32,7 @@ export function byCapacitiveLoad(asked: PhaseMarginDemand, stated: Reading | nul
   if (offered < required * (1 - 1e-9)) return null;
   return {
     kind: 'numbers', required, offered, unit: 'F', sense: 'at-least',
-    basis: weakest([stated.basis, unloaded.basis]), slot: stated.slot, how: howOf(stated, gain, share),
+    basis: weakest([stated.basis, unloaded.basis]), slot: stated.slot, how: unloaded.brief === true ? null : howOf(stated, gain, share),
     turnsAt: { figure: 'capacitiveLoad', kind: 'max', value: required / (gain * share), unit: 'F' },
   };
 }

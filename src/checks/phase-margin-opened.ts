@@ -62,7 +62,7 @@ function knownOf(network: Loop['network']): Known {
 
 function isSame(one: Loop, other: Loop): boolean {
   const [a, b] = [one.load, other.load];
-  return one.inputCapacitance === other.inputCapacitance && (one.stray ?? 0) === (other.stray ?? 0) && one.ownPole === other.ownPole && one.open === other.open &&
+  return one.ownPole === other.ownPole && one.inputCapacitance === other.inputCapacitance && (one.stray ?? 0) === (other.stray ?? 0) && one.open === other.open &&
     (a === b || (a !== null && b !== null && a.outputResistance === b.outputResistance && a.capacitance === b.capacitance && a.resistance === b.resistance && a.isolation === b.isolation));
 }
 

@@ -9,7 +9,7 @@ import type { Finding, Term, UndecidedFinding } from '../verdicts/finding.js';
 import { composed, type Known, type Unlimited } from './check.js';
 import { byCapacitiveLoad } from './phase-margin-capacitive-load.js';
 import { LOOP_TERMS, loopFigures, type LoopFigures, type LoopFound } from './phase-margin-figures.js';
-import { atEitherEnd, phaseParts, worstMargin, type Ends, type Loop, type Margin } from './phase-margin-loop.js';
+import { atEitherEnd, phaseParts, worstMargin, type Ends, type LoadedOutput, type Loop, type Margin } from './phase-margin-loop.js';
 import { phaseMarginRemedies } from './phase-margin-remedies.js';
 import { turningResistance, unknownInput } from './phase-margin-turns.js';
 
@@ -62,8 +62,8 @@ function closedLoop(asked: Unlimited<PhaseMarginDemand>, figures: LoopFigures): 
 
 function againstLimit(asked: PhaseMarginDemand, part: PartLoop, told: Told): Finding {
   const { figures: { speed }, closed } = part;
-  if (closed !== null) return measured({ ...part, asked, closed }, told);
-  if (speed === null) return withoutSpeed(asked, part.figures);
+  if (closed !== null) return measured({ asked, part, closed }, told);
+  if (speed === null) return withoutSpeed(asked, part.figures, told);
   if (speed.ends === null) return whateverSuits(asked, speed);
   return withoutOutputResistance({ asked, figures: part.figures, ends: speed.ends }, told);
 }
@@ -77,17 +77,23 @@ function loopOf({ network, open, load }: Pick<PhaseMarginDemand, 'network' | 'op
     open,
     inputCapacitance: needsInput ? (inputCapacitance?.value ?? 0) : 0,
     ownPole: own.hertz,
-    load: outputResistance === null || outputResistance === 0 ? null : { ...load, outputResistance },
+    load: outputResistance === null || outputResistance === 0 ? null : behind(outputResistance, load),
   };
 }
 
-interface Measured extends PartLoop {
+/** Member by member: a spread takes the engine longer than the rest of the loop, and there is one for every part. */
+function behind(outputResistance: number, { capacitance, resistance, isolation }: PhaseMarginDemand['load']): LoadedOutput {
+  return { outputResistance, capacitance, resistance, isolation };
+}
+
+interface Measured {
   readonly asked: PhaseMarginDemand;
+  readonly part: PartLoop;
   readonly closed: ClosedLoop;
 }
 
 function measured(of: Measured, { brief }: Told): Finding {
-  const { asked, figures, closed: { speed, ends, loop, worst } } = of;
+  const { asked, part: { figures, isUnityStable }, closed: { speed, ends, loop, worst } } = of;
   const { required, unit, sense } = asked;
   const known = weakest([speed.basis, figures.own.basis, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]);
   const offered = worst.margin;
@@ -101,7 +107,7 @@ function measured(of: Measured, { brief }: Told): Finding {
     how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
     terms: termsOf(of, input),
     cautions: passes && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
-    remedies: passes ? [] : phaseMarginRemedies({ asked, loop, ends }, of.isUnityStable()),
+    remedies: passes ? [] : phaseMarginRemedies({ asked, loop, ends }, isUnityStable()),
   };
 }
 
@@ -125,7 +131,7 @@ function inputBasis({ needsInput, inputCapacitance }: LoopFigures, { loop, ends,
 }
 
 /** Where the phase goes, degrees: the terms add up to the margin. */
-function termsOf({ figures, closed: { speed, loop, worst } }: Measured, inputBases: readonly Basis[]): Term[] {
+function termsOf({ part: { figures }, closed: { speed, loop, worst } }: Measured, inputBases: readonly Basis[]): Term[] {
   const parts = phaseParts(loop, worst.gainBandwidth);
   if (parts === null) return [];
   const { own, inputCapacitance, needsInput, outputResistance } = figures;
@@ -145,10 +151,10 @@ function whateverSuits({ required, unit, sense }: PhaseMarginDemand, { basis, sl
   return { kind: 'numbers', required, unit, sense, offered: Infinity, basis, slot, how };
 }
 
-function withoutSpeed(asked: PhaseMarginDemand, figures: LoopFigures): Finding {
+function withoutSpeed(asked: PhaseMarginDemand, figures: LoopFigures, { brief }: Told): Finding {
   const { load, required, unit, sense } = asked;
   // With nothing but the load in the loop the maker's limit needs no gain bandwidth.
-  const stated = load.capacitance > 0 && !figures.needsInput && figures.outputResistance === null ? byCapacitiveLoad(asked, figures.capacitiveLoad, { margin: 90, basis: 'guaranteed' }) : null;
+  const stated = load.capacitance > 0 && !figures.needsInput && figures.outputResistance === null ? byCapacitiveLoad(asked, figures.capacitiveLoad, { margin: 90, basis: 'guaranteed', brief }) : null;
   return stated ?? ({ kind: 'undecided', required, unit, sense, cause: 'missing-figure', missing: [{ figure: 'gainBandwidth', kind: 'min' }] } satisfies UndecidedFinding);
 }
 
@@ -166,7 +172,7 @@ function withoutOutputResistance({ asked, figures, ends }: WithoutResistance, { 
   const bare = { ...unloaded, ownPole: Infinity };
   const basis = weakest([figures.own.basis, ...inputBasis(figures, { loop: unloaded, ends, required })]);
   const without = { margin: worstMargin(bare, ends).margin, basis: weakest(inputBasis(figures, { loop: bare, ends, required })) };
-  const stated = meets(required, known, sense) ? byCapacitiveLoad(asked, figures.capacitiveLoad, without) : null;
+  const stated = meets(required, known, sense) ? byCapacitiveLoad(asked, figures.capacitiveLoad, { ...without, brief }) : null;
   if (stated !== null) return stated;
   const missing = [{ figure: 'outputResistance', kind: 'typ' }] as const;
   const bound = { kind: 'bound', required, unit, sense, known, basis, missing, cause: 'missing-figure' } as const;
