@@ -130,7 +130,7 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const { share, reading } = at;
   const bare = bareAt(vertex, at);
   if (at.brief) return bare;
-  if (bare.kind === 'bound') return { ...bare, ...missingAt(vertex, at), turnsAt: turnsAt(vertex, at) };
+  if (bare.kind === 'bound') return { ...bare, ...toldOfBound(vertex, at), turnsAt: turnsAt(vertex, at) };
   const caution = cautionFor(vertex.room - bare.offered, share.unknowns);
   return {
     ...bare, slot: reading.slot, how: reading.how, turnsAt: turnsAt(vertex, at),
@@ -139,30 +139,34 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   } satisfies NumberFinding;
 }
 
-/** The numbers that decide, and nothing told. */
-function bareAt(vertex: HeadroomVertex, { share, reading }: At): NumberFinding | BoundFinding {
+/** The numbers that decide and what is missing for one: nothing else is told, but the distortion asks for both. */
+function bareAt(vertex: HeadroomVertex, at: At): NumberFinding | BoundFinding {
   const { room: required, corner } = vertex;
+  const { share, reading } = at;
   const basis = weakest([reading.basis, share.basis]);
-  if (reading.value === null) return boundAt((reading.bound ?? 0) + share.value, { required, corner, basis });
+  if (reading.value === null) return boundAt(vertex, at, { known: (reading.bound ?? 0) + share.value, basis });
   const offered = reading.value + share.value;
   // No output swings beyond its rail, whatever head-room a list gives it: room below zero fails every part.
-  if (!meets(required, 0, 'at-most') && meets(required, offered, 'at-most')) return boundAt(share.value, { required, corner, basis });
+  if (!meets(required, 0, 'at-most') && meets(required, offered, 'at-most')) return boundAt(vertex, at, { known: share.value, basis });
   return { kind: 'numbers', unit: 'V', sense: 'at-most', required, corner, basis, offered };
 }
 
-function boundAt(known: number, { required, corner, basis }: Pick<HeadroomVertex, 'corner'> & Pick<BoundFinding, 'required' | 'basis'>): BoundFinding {
-  return { kind: 'bound', unit: 'V', sense: 'at-most', required, corner, basis, known, missing: [], cause: 'missing-figure' };
+function boundAt({ room: required, corner }: HeadroomVertex, { side, reading }: At, { known, basis }: Pick<BoundFinding, 'known' | 'basis'>): BoundFinding {
+  const cause = reading.bound === null ? 'missing-figure' : 'beyond-data';
+  return { kind: 'bound', unit: 'V', sense: 'at-most', required, corner, basis, known, missing: MISSING[side], cause };
 }
 
-/** What is missing for a number. Where no point reaches the current that flows, the heaviest one's own head-room is the least it can be. */
-function missingAt(vertex: HeadroomVertex, { side, reading, share }: At): Pick<BoundFinding, 'terms' | 'missing' | 'cause'> {
-  const missing = { figure: side === 'low' ? 'outputLowHeadroom' : 'outputHighHeadroom', kind: 'max' } as const;
+const MISSING = {
+  low: [{ figure: 'outputLowHeadroom', kind: 'max' }],
+  high: [{ figure: 'outputHighHeadroom', kind: 'max' }],
+} as const;
+
+/** What a bound is told with. Where no point reaches the current that flows, the heaviest one's own head-room is the least it can be. */
+function toldOfBound({ current, supply }: HeadroomVertex, { side, reading, share }: At): Pick<BoundFinding, 'terms' | 'missing'> {
   const { value, bound, covers, slot, basis, how } = reading;
-  const cause = bound === null ? 'missing-figure' : 'beyond-data';
-  if (value !== null || bound === null || covers === null) return { terms: share.terms, missing: [missing], cause };
-  const { current, supply } = vertex;
+  if (value !== null || bound === null || covers === null) return { terms: share.terms, missing: MISSING[side] };
   const term: Term = { name: 'head-room of the heaviest point', value: bound, slot, basis, figure: null, how };
-  return { terms: [term, ...share.terms], missing: [{ ...missing, beyond: { covers, current, supply } }], cause };
+  return { terms: [term, ...share.terms], missing: MISSING[side].map((one) => ({ ...one, beyond: { covers, current, supply } })) };
 }
 
 function headroomTerm(reading: HeadroomReading, value: number, vertex: HeadroomVertex): Term {
