@@ -38,16 +38,18 @@ function multiplied(of: Multiplied, reading: Reading | null, { brief }: Pick<Rea
     return { kind: 'missing', missing: { figure: of.figure, kind: of.kind }, turnsAt };
   }
   const value = of.divides ? of.multiplier / reading.value : of.multiplier * reading.value;
-  return { kind: 'value', term: termOf(of.name, value, { reading, unit: of.unit, how: brief ? '' : of.how() }) };
+  return { kind: 'value', term: termOf(of.name, value, { reading, unit: of.unit, how: brief ? null : of.how() }) };
 }
 
 export interface TermSource {
   readonly reading: Reading;
   readonly unit: string;
-  readonly how: string;
+  /** Null: nothing is told of it. */
+  readonly how: string | null;
 }
 
 export function termOf(name: string, value: number, { reading, unit, how }: TermSource): Term {
+  if (how === null) return { name, value, slot: reading.slot, basis: reading.basis, figure: null, how: null };
   const steps = [reading.how, how].filter((step) => step !== null && step !== '');
   const figure = { value: reading.printed ?? reading.value, unit };
   return { name, value, slot: reading.slot, basis: reading.basis, figure: Number.isFinite(figure.value) ? figure : null, how: steps.join(', ') };
@@ -117,8 +119,8 @@ export function offsetCurrentTerm(asked: ErrorQuestion, reading: Reading | null,
 export interface Currents {
   bias(): CurrentTerm;
   offset(): CurrentTerm;
-  /** The offset current, else the class's. */
-  offsetOrClass(): CurrentTerm;
+  /** The class's, for want of the part's own. */
+  ofClass(): CurrentTerm;
   bounded(): Readings['bounded'];
 }
 
@@ -132,7 +134,7 @@ export function currentTerms(asked: ErrorQuestion, currents: Currents, told: Pic
   const [bias, offset] = [currents.bias(), currents.offset()];
   if (offset.reading !== null) return [bias.term, offset.term];
   // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
-  if (bias.reading === null) return [matched <= NOTHING ? currents.offsetOrClass().term : bias.term];
+  if (bias.reading === null) return [matched <= NOTHING ? currents.ofClass().term : bias.term];
   return unknownOffsetCurrent(asked, { currents, bias: bias.reading, term: bias.term }, told);
 }
 
@@ -160,9 +162,9 @@ function unknownOffsetCurrent(asked: ErrorQuestion, { currents, bias, term }: Un
   const { sum, matched, half } = resistancesOf(asked);
   const whole = asked.noiseGain * sum * bias.value;
   const best = matched * bias.value;
-  const borrowed = currents.offsetOrClass();
+  const borrowed = currents.ofClass();
   if (borrowed.reading !== null && best + half * borrowed.reading.value < whole) return [term, borrowed.term];
-  const how = brief ? '' : `offset current not known, through ${formatQuantity(sum, 'Ω')}, ${gain(asked)}`;
+  const how = brief ? null : `offset current not known, through ${formatQuantity(sum, 'Ω')}, ${gain(asked)}`;
   const bounded = currents.bounded();
   return [{ kind: 'value', term: termOf('bias and offset current', bounded(whole, best), { reading: bias, unit: 'A', how }) }];
 }

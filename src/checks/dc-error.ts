@@ -1,7 +1,7 @@
 import type { Corner, DcErrorDemand } from '../demands/index.js';
 import { formatQuantity } from '../quantities/format.js';
-import { rootSumSquare, worstCaseSum } from '../formulas/dc-error.js';
-import { weakest } from '../parts/basis.js';
+import { addWorstCase, rootSumSquare } from '../formulas/dc-error.js';
+import { BASES, weaknessOf } from '../parts/basis.js';
 import { DOUBLING } from '../parts/currents.js';
 import type { OffsetReading } from '../parts/offset.js';
 import type { Reading } from '../parts/reading.js';
@@ -23,7 +23,7 @@ export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
     drift: driftTerm,
     bias: biasTerm,
     offsetCurrent: (asked, readings) => offsetCurrentTerm(asked, readings.figure('offsetCurrent'), readings),
-    offsetCurrentOrClass: (asked, readings) => offsetCurrentTerm(asked, readings.figureOrClass('offsetCurrent'), readings),
+    offsetCurrentOfClass: (asked, readings) => offsetCurrentTerm(asked, readings.ofClass('offsetCurrent'), readings),
     bounded: (_, readings) => (worst, best) => readings.bounded(worst, best),
     commonMode: commonModeTerm,
     supply: (_, readings) => readings.figureOrClass('supplyRejection'),
@@ -39,7 +39,7 @@ interface DcErrorFound {
   readonly drift: ErrorTerm;
   readonly bias: CurrentTerm;
   readonly offsetCurrent: CurrentTerm;
-  readonly offsetCurrentOrClass: CurrentTerm;
+  readonly offsetCurrentOfClass: CurrentTerm;
   readonly bounded: Readings['bounded'];
   readonly commonMode: ErrorTerm;
   /** What it adds depends on the supply the offset is rated at. */
@@ -57,24 +57,54 @@ function offsetOf(asked: ErrorQuestion, readings: Readings): DcErrorFound['offse
 /** The sum itself, whatever is allowed, V. */
 interface DcErrorSum extends Pick<NumberFinding, 'terms' | 'corner' | 'cautions' | 'basis' | 'rss' | 'borrowed'> {
   readonly known: number;
-  readonly missing: readonly Extract<ErrorTerm, { readonly kind: 'missing' }>[];
+  readonly missing: readonly MissingTerm[];
 }
 
-function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Told): DcErrorSum {
+type MissingTerm = Extract<ErrorTerm, { readonly kind: 'missing' }>;
+
+function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, told: Told): DcErrorSum {
+  const sum: Sum = { known: 0, borrowed: 0, weakness: 0, missing: [], terms: told.brief ? null : [] };
+  addAll(sum, asked, { found, told });
+  const { known, borrowed, missing, terms } = sum;
+  const basis = BASES[sum.weakness] ?? 'guaranteed';
+  if (terms === null) return { known, missing, basis, borrowed };
   const { reading: offset } = found.offset();
-  const all = termsOf(asked, found, { brief });
-  const terms: Term[] = [];
-  const missing: DcErrorSum['missing'][number][] = [];
-  for (const one of all) {
-    if (one.kind === 'value') terms.push(one.term);
-    else if (one.kind === 'missing') missing.push(one);
-  }
-  const values = terms.map(({ value }) => value);
-  const bases = terms.map(({ basis }) => basis);
-  const sum = { known: worstCaseSum(values), missing, basis: weakest(bases), borrowed: bases.includes('borrowed') ? borrowedSum(terms) : 0 };
-  if (brief) return sum;
   const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
-  return { ...sum, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(values) };
+  return { known, missing, basis, borrowed, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(terms.map(({ value }) => value)) };
+}
+
+/** What was added up so far. */
+interface Sum {
+  /** V. */
+  known: number;
+  /** V of it that is borrowed. */
+  borrowed: number;
+  /** Of the weakest basis in it. */
+  weakness: number;
+  readonly missing: MissingTerm[];
+  /** Null where they are not told: a survey adds up as many sums as there are parts. */
+  readonly terms: Term[] | null;
+}
+
+/** No drift beside an offset rated over temperature. */
+function addAll(sum: Sum, asked: ErrorQuestion, { found, told }: { readonly found: Known<DcErrorFound>; readonly told: Told }): void {
+  const { reading: offset, term } = found.offset();
+  add(sum, term);
+  if (offset?.overTemperature !== true) add(sum, found.drift());
+  for (const one of currentTerms(asked, { bias: found.bias, offset: found.offsetCurrent, ofClass: found.offsetCurrentOfClass, bounded: found.bounded }, told)) add(sum, one);
+  add(sum, found.commonMode());
+  add(sum, supplyTerm(asked, { offset, rejection: found.supply() }, told));
+  add(sum, found.output());
+}
+
+function add(sum: Sum, one: ErrorTerm): void {
+  if (one.kind === 'missing') sum.missing.push(one);
+  if (one.kind !== 'value') return;
+  const { value, basis } = one.term;
+  sum.known = addWorstCase(sum.known, value);
+  if (basis === 'borrowed') sum.borrowed = addWorstCase(sum.borrowed, value);
+  sum.weakness = Math.max(sum.weakness, weaknessOf(basis));
+  sum.terms?.push(one.term);
 }
 
 function againstLimit(asked: DcErrorDemand, sum: DcErrorSum, { brief }: Told): Finding {
@@ -113,16 +143,4 @@ function sourceCaution(asked: ErrorQuestion, bias: Reading | null): string[] {
 function fartherEnd(asked: ErrorQuestion, rated: number): number {
   const { min, max } = asked.supply;
   return Math.abs(min - rated) > Math.abs(max - rated) ? min : max;
-}
-
-/** No drift beside an offset rated over temperature. */
-function termsOf(asked: ErrorQuestion, found: Known<DcErrorFound>, told: Told): ErrorTerm[] {
-  const { reading: offset, term } = found.offset();
-  const drift = offset?.overTemperature === true ? [] : [found.drift()];
-  const currents = currentTerms(asked, { bias: found.bias, offset: found.offsetCurrent, offsetOrClass: found.offsetCurrentOrClass, bounded: found.bounded }, told);
-  return [term, ...drift, ...currents, found.commonMode(), supplyTerm(asked, { offset, rejection: found.supply() }, told), found.output()];
-}
-
-function borrowedSum(terms: readonly Term[]): number {
-  return worstCaseSum(terms.filter((term) => term.basis === 'borrowed').map((term) => term.value));
 }

@@ -41,7 +41,18 @@ export function biasError(currents: {
  * Source: definition of the worst case.
  */
 export function worstCaseSum(terms: readonly number[]): number {
-  return terms.reduce((sum, term) => sum + Math.abs(finite('worstCaseSum', term)), 0);
+  return terms.reduce((sum, term) => addWorstCase(sum, finite('worstCaseSum', term)), 0);
+}
+
+/**
+ * The same term by term: what there was and the magnitude of one more.
+ * @param sum and term any one unit
+ * @returns the same unit
+ * @example addWorstCase(0.003, -0.004) is 0.007
+ * Source: definition of the worst case.
+ */
+export function addWorstCase(sum: number, term: number): number {
+  return sum + Math.abs(term);
 }
 
 /**

@@ -22,6 +22,8 @@ export interface Readings {
   figure(parameter: Parameter, end?: RangeEnd): Reading | null;
   /** The figure, else the class's worst (pessimistic) or no contribution at all (optimistic), basis borrowed. */
   figureOrClass(parameter: Parameter): Reading | null;
+  /** What the class lends for want of the figure; null: nothing. */
+  ofClass(parameter: Parameter): Reading | null;
   /** The figure, else a value assumed for want of one: it can pass a check, not fail it. */
   figureOrAssumed(parameter: Parameter, assumed: Assumed, end?: RangeEnd): Reading | null;
   /** The figure with both its ends, for what is not worst at the least of it: a fast part is noisier and harder to load. */
@@ -32,8 +34,6 @@ export interface Readings {
   currentFromHeadroom(side: Side, supply: number): Reading | null;
   /** An unknown that known figures bound: its worst and its best. */
   bounded(worst: number, best: number): number;
-  /** True when borrowing for this parameter is possible at all. */
-  hasClass(parameter: Parameter): boolean;
   /** Only numbers that decide are wanted: remedies, which cost far more than the verdict, are left out. */
   readonly brief: boolean;
 }
@@ -51,6 +51,7 @@ export function readingsOf(test: PartUnderTest): Readings {
     identity: test.part,
     figure,
     figureOrClass: (parameter) => figure(parameter) ?? borrowed(test, parameter),
+    ofClass: (parameter) => borrowed(test, parameter),
     figureOrAssumed: (parameter, assumed, end) =>
       figure(parameter, end) ?? (isPrinted(test, parameter, end) ? null : assumedReading(test, assumed)),
     spread: (parameter) => spreadReading(test, parameter),
@@ -58,7 +59,6 @@ export function readingsOf(test: PartUnderTest): Readings {
     headroom: (side) => headroomCurve(test, side),
     currentFromHeadroom: (side, supply) => fromHeadroom(test, side, supply),
     bounded: (worst, best) => (test.outlook === 'pessimistic' ? worst : best),
-    hasClass: (parameter) => borrowed(test, parameter) !== null,
     brief: test.brief === true,
   };
 }

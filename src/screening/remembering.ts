@@ -23,13 +23,13 @@ export function remembering(plain: Readings, look: (trait: Trait) => Piece): Rea
     brief: plain.brief,
     figure,
     figureOrClass: (parameter) => figure(parameter) ?? plain.figureOrClass(parameter),
+    ofClass: (parameter) => plain.ofClass(parameter),
     figureOrAssumed: (parameter, assumed, end) => figure(parameter, end) ?? plain.figureOrAssumed(parameter, assumed, end),
     spread: (parameter) => once(parameter, 'spread', () => plain.spread(parameter)),
     offset: () => once('offsetVoltage', 'offset', () => plain.offset()),
     headroom: (side) => once(HEADROOM[side], 'curve', () => answered(plain.headroom(side))),
     currentFromHeadroom: (side, supply) => once(HEADROOM[side], `current ${supply}`, () => plain.currentFromHeadroom(side, supply)),
     bounded: (worst, best) => plain.bounded(worst, best),
-    hasClass: (parameter) => plain.hasClass(parameter),
   };
 }
 

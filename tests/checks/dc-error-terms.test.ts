@@ -23,7 +23,7 @@ function terms(figures: readonly Figure[], { demand = {}, outlook = 'pessimistic
   return currentTerms(asked, {
     bias: () => biasTerm(asked, readings),
     offset: () => offsetCurrentTerm(asked, readings.figure('offsetCurrent'), readings),
-    offsetOrClass: () => offsetCurrentTerm(asked, readings.figureOrClass('offsetCurrent'), readings),
+    ofClass: () => offsetCurrentTerm(asked, readings.ofClass('offsetCurrent'), readings),
     bounded: () => (worst, best) => readings.bounded(worst, best),
   }, readings);
 }
