@@ -2,6 +2,7 @@ import type { Demands } from '../demands/index.js';
 import type { Parameter } from '../parts/figures.js';
 import type { Identity, Readings } from '../parts/readings.js';
 import type { Finding } from '../verdicts/finding.js';
+import type { InNumbers, Row } from './in-numbers.js';
 
 /**
  * The contract of a check. It says what the stage asks, reads figures that are already resolved into one outlook, and hands
@@ -39,6 +40,8 @@ export interface ComposedCheck<Asked, Found, Whole> extends Omit<Check<Asked>, '
   readonly terms: { readonly [Name in keyof Found]: (asked: Unlimited<Asked>, readings: Readings) => Found[Name] };
   readonly whole: (asked: Unlimited<Asked>, known: Known<Found>, told: Told) => Whole;
   readonly finding: (asked: Asked, whole: Whole, told: Told) => Finding | null;
+  /** Where the decision is a matter of numbers alone: `whole` is made of the same ones. */
+  readonly inNumbers?: InNumbers<Asked, Found>;
 }
 
 /** The same as a check: its judge works out every term the whole asks for. */
@@ -58,6 +61,16 @@ export interface AnyComposition {
   term(name: string, demands: Demands, readings: Readings): unknown;
   readonly whole: (demands: Demands, known: Known<Readonly<Record<string, unknown>>>, told: Told) => unknown;
   finding(demands: Demands, whole: unknown, told: Told): Finding | null;
+  /** For one stage; null: it has no such form, or is not asked. */
+  inNumbers(demands: Demands): AnyNumbers | null;
+}
+
+/** A check in numbers with its question bound inside: terms in the order of `names`. */
+export interface AnyNumbers {
+  readonly terms: readonly { readonly width: number; readonly write: (one: unknown, to: { readonly row: Row; readonly at: number }) => void }[];
+  readonly finding: (row: Row) => Finding | null;
+  /** As the check has it; null: it has none. */
+  readonly side: ((row: Row) => Finding | null) | null;
 }
 
 /** A check with its question bound inside, so that all checks have one type. */
@@ -89,7 +102,7 @@ export function seal<Asked extends object>(check: Check<Asked>): AnyCheck {
   };
 }
 
-function compositionOf<Asked>({ terms, asks, whole, finding }: ComposedCheck<Asked, Readonly<Record<string, unknown>>, unknown>): AnyComposition {
+function compositionOf<Asked extends object>({ terms, asks, whole, finding, inNumbers }: ComposedCheck<Asked, Readonly<Record<string, unknown>>, unknown>): AnyComposition {
   const of = <Made>(demands: Demands, make: (asked: Asked) => Made): Made | null => {
     const asked = asks(demands);
     return asked === null ? null : make(asked);
@@ -99,5 +112,14 @@ function compositionOf<Asked>({ terms, asks, whole, finding }: ComposedCheck<Ask
     term: (name, demands, readings) => of(demands, (asked) => terms[name]?.(asked, readings)),
     whole: (demands, known, told) => of(demands, (asked) => whole(asked, known, told)),
     finding: (demands, found, told) => of(demands, (asked) => finding(asked, found, told)),
+    inNumbers: (demands) => of(demands, (asked) => (inNumbers === undefined ? null : numbersFor(inNumbers, asked))),
+  };
+}
+
+function numbersFor<Asked>({ terms, finding, side }: InNumbers<Asked, Readonly<Record<string, unknown>>>, asked: Asked): AnyNumbers {
+  return {
+    terms: Object.values(terms).map(({ width, write }) => ({ width, write: (one, to) => write(asked, one, to) })),
+    finding: (row) => finding(asked, row),
+    side: side === undefined ? null : (row) => side(asked, row),
   };
 }

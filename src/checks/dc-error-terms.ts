@@ -29,9 +29,12 @@ export type ErrorQuestion = Unlimited<DcErrorDemand>;
 /** Only rounding is left of a multiplier below this: a move of a picovolt, and far less of any other. */
 const NOTHING = 1e-12;
 
+/** With a multiplier of nothing a term needs no figure. */
+export const isNothing = (multiplier: number): boolean => multiplier <= NOTHING;
+
 /** A term that is a figure times (or a move over) something; nothing when the multiplier is zero: it needs no figure then. */
 function multiplied(of: Multiplied, reading: Reading | null, { brief }: Pick<Readings, 'brief'>): ErrorTerm {
-  if (of.multiplier <= NOTHING) return { kind: 'nothing' };
+  if (isNothing(of.multiplier)) return { kind: 'nothing' };
   if (reading === null) {
     const turn = (left: number): number => (of.divides ? of.multiplier / left : left / of.multiplier);
     const turnsAt = (left: number): TurningPoint => ({ figure: of.figure, kind: of.kind, value: turn(left), unit: of.unit });
@@ -73,19 +76,23 @@ export function commonModeTerm(asked: ErrorQuestion, readings: Readings): ErrorT
   return multiplied(of, readings.figureOrClass('commonModeRejection'), readings);
 }
 
-interface Supplied {
-  readonly offset: OffsetReading | null;
-  readonly rejection: Reading | null;
+/** Volts at the output per V/V of rejection: the distance of the supply from the one the offset is rated at, else from the nominal. */
+export function supplyMultiplier(asked: ErrorQuestion, offset: OffsetReading | null): number {
+  return asked.noiseGain * supplyMove(asked, offset);
 }
 
-/** Distance of the supply from the one the offset is rated at, else from the nominal. */
-export function supplyTerm(asked: ErrorQuestion, { offset, rejection }: Supplied, told: Pick<Readings, 'brief'>): ErrorTerm {
-  const rated = offset?.ratedSupply ?? asked.supply.nominal;
-  const move = Math.max(Math.abs(asked.supply.min - rated), Math.abs(asked.supply.max - rated));
-  const how = (): string => `over ${formatQuantity(move, 'V')} of supply, ${gain(asked)}`;
-  const of = { name: 'supply', figure: 'supplyRejection', kind: 'min', unit: 'V/V', multiplier: asked.noiseGain * move, divides: true, how } as const;
-  return multiplied(of, rejection, told);
+function supplyMove({ supply }: ErrorQuestion, offset: OffsetReading | null): number {
+  const rated = offset?.ratedSupply ?? supply.nominal;
+  return Math.max(Math.abs(supply.min - rated), Math.abs(supply.max - rated));
 }
+
+export function supplyTerm(asked: ErrorQuestion, { offset, rejection }: { readonly offset: OffsetReading | null; readonly rejection: Reading | null }): ErrorTerm {
+  const how = (): string => `over ${formatQuantity(supplyMove(asked, offset), 'V')} of supply, ${gain(asked)}`;
+  const of = { name: 'supply', figure: 'supplyRejection', kind: 'min', unit: 'V/V', multiplier: supplyMultiplier(asked, offset), divides: true, how } as const;
+  return multiplied(of, rejection, WORDS);
+}
+
+const WORDS = { brief: false } as const;
 
 export function outputTerm(asked: ErrorQuestion, readings: Readings): ErrorTerm {
   const multiplier = asked.noiseGain * asked.outputMove;
@@ -115,29 +122,6 @@ export function offsetCurrentTerm(asked: ErrorQuestion, reading: Reading | null,
   return { reading, term: multiplied({ name: 'offset current', figure: 'offsetCurrent', kind: 'max', unit: 'A', multiplier: half, how }, reading, { brief }) };
 }
 
-/** The currents of a part, each asked for when needed. */
-export interface Currents {
-  bias(): CurrentTerm;
-  offset(): CurrentTerm;
-  /** The class's, for want of the part's own. */
-  ofClass(): CurrentTerm;
-  bounded(): Readings['bounded'];
-}
-
-/**
- * Bias and offset current through the series resistances. With the offset current unknown the two pins may differ by the
- * whole bias current: then Ib·(Rp+Rn) stands for both, at best the offset current is nothing.
- */
-export function currentTerms(asked: ErrorQuestion, currents: Currents, told: Pick<Readings, 'brief'>): ErrorTerm[] {
-  const { sum, matched } = resistancesOf(asked);
-  if (sum === 0) return [];
-  const [bias, offset] = [currents.bias(), currents.offset()];
-  if (offset.reading !== null) return [bias.term, offset.term];
-  // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
-  if (bias.reading === null) return [matched <= NOTHING ? currents.ofClass().term : bias.term];
-  return unknownOffsetCurrent(asked, { currents, bias: bias.reading, term: bias.term }, told);
-}
-
 interface Resistances {
   /** Ω in series with both inputs. */
   readonly sum: number;
@@ -146,27 +130,15 @@ interface Resistances {
   readonly half: number;
 }
 
-function resistancesOf({ positive, negative, tolerance, noiseGain }: ErrorQuestion): Resistances {
+export function resistancesOf({ positive, negative, tolerance, noiseGain }: ErrorQuestion): Resistances {
   const sum = positive + negative;
   return { sum, matched: noiseGain * (Math.abs(positive - negative) + tolerance * sum), half: noiseGain * (sum / 2) };
 }
 
-interface UnknownOffsetCurrent {
-  readonly currents: Currents;
-  readonly bias: Reading;
-  readonly term: ErrorTerm;
-}
-
-/** The whole bias current may differ between the pins, unless the class's offset current says less. */
-function unknownOffsetCurrent(asked: ErrorQuestion, { currents, bias, term }: UnknownOffsetCurrent, { brief }: Pick<Readings, 'brief'>): ErrorTerm[] {
-  const { sum, matched, half } = resistancesOf(asked);
-  const whole = asked.noiseGain * sum * bias.value;
-  const best = matched * bias.value;
-  const borrowed = currents.ofClass();
-  if (borrowed.reading !== null && best + half * borrowed.reading.value < whole) return [term, borrowed.term];
-  const how = brief ? null : `offset current not known, through ${formatQuantity(sum, 'Ω')}, ${gain(asked)}`;
-  const bounded = currents.bounded();
-  return [{ kind: 'value', term: termOf('bias and offset current', bounded(whole, best), { reading: bias, unit: 'A', how }) }];
+/** The whole bias current (V at the output) in place of both, where what the pins differ by is not known. */
+export function wholeBiasTerm(asked: ErrorQuestion, bias: Reading, value: number): ErrorTerm {
+  const how = `offset current not known, through ${formatQuantity(resistancesOf(asked).sum, 'Ω')}, ${gain(asked)}`;
+  return { kind: 'value', term: termOf('bias and offset current', value, { reading: bias, unit: 'A', how }) };
 }
 
 const gain = (asked: ErrorQuestion): string => `× noise gain ${Number(asked.noiseGain.toPrecision(4))}`;

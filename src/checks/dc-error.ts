@@ -1,14 +1,18 @@
 import type { Corner, DcErrorDemand } from '../demands/index.js';
 import { formatQuantity } from '../quantities/format.js';
-import { addWorstCase, rootSumSquare } from '../formulas/dc-error.js';
-import { BASES, weaknessOf } from '../parts/basis.js';
+import { rootSumSquare } from '../formulas/dc-error.js';
 import { DOUBLING } from '../parts/currents.js';
-import type { OffsetReading } from '../parts/offset.js';
 import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
+import { BriefBound, BriefNumbers } from '../verdicts/brief-finding.js';
 import type { BoundFinding, Finding, NumberFinding, Term } from '../verdicts/finding.js';
 import { composed, type Known } from './check.js';
-import { biasTerm, commonModeTerm, currentTerms, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, supplyTerm, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
+import { countedTerms } from './dc-error-counted.js';
+import { basisOf, SUM_TERMS, totalOf, type DcErrorFound, type Total } from './dc-error-sum.js';
+import { biasTerm, commonModeTerm, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
+import { rowOf, type InNumbers } from './in-numbers.js';
+
+const NUMBERS: InNumbers<DcErrorDemand, DcErrorFound> = { terms: SUM_TERMS, finding: (asked, row) => decidedBy(asked, totalOf(asked, row)) };
 
 /** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (M5). */
 export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
@@ -31,21 +35,8 @@ export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
   },
   whole: summed,
   finding: againstLimit,
+  inNumbers: NUMBERS,
 });
-
-/** What the sum is put together from. */
-interface DcErrorFound {
-  readonly offset: { readonly reading: OffsetReading | null; readonly term: ErrorTerm };
-  readonly drift: ErrorTerm;
-  readonly bias: CurrentTerm;
-  readonly offsetCurrent: CurrentTerm;
-  readonly offsetCurrentOfClass: CurrentTerm;
-  readonly bounded: Readings['bounded'];
-  readonly commonMode: ErrorTerm;
-  /** What it adds depends on the supply the offset is rated at. */
-  readonly supply: Reading | null;
-  readonly output: ErrorTerm;
-}
 
 type Told = Pick<Readings, 'brief'>;
 
@@ -55,75 +46,42 @@ function offsetOf(asked: ErrorQuestion, readings: Readings): DcErrorFound['offse
 }
 
 /** The sum itself, whatever is allowed, V. */
-interface DcErrorSum extends Pick<NumberFinding, 'terms' | 'corner' | 'cautions' | 'basis' | 'rss' | 'borrowed'> {
-  readonly known: number;
-  readonly missing: readonly MissingTerm[];
+interface DcErrorSum {
+  readonly total: Total;
+  /** Null where only the decision is wanted. */
+  readonly told: ToldSum | null;
 }
 
-type MissingTerm = Extract<ErrorTerm, { readonly kind: 'missing' }>;
-
-function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, told: Told): DcErrorSum {
-  const sum: Sum = { known: 0, borrowed: 0, weakness: 0, missing: [], terms: told.brief ? null : [] };
-  addAll(sum, asked, { found, told });
-  const { known, borrowed, missing, terms } = sum;
-  const basis = BASES[sum.weakness] ?? 'guaranteed';
-  if (terms === null) return { known, missing, basis, borrowed };
-  const { reading: offset } = found.offset();
-  const corner = cornerOf(asked, fartherEnd(asked, offset?.ratedSupply ?? asked.supply.nominal), terms);
-  return { known, missing, basis, borrowed, terms, corner, cautions: sourceCaution(asked, found.bias().reading), rss: rootSumSquare(terms.map(({ value }) => value)) };
+interface ToldSum extends Pick<NumberFinding, 'corner' | 'cautions'> {
+  readonly terms: readonly Term[];
+  readonly missing: readonly Extract<ErrorTerm, { readonly kind: 'missing' }>[];
 }
 
-/** What was added up so far. */
-interface Sum {
-  /** V. */
-  known: number;
-  /** V of it that is borrowed. */
-  borrowed: number;
-  /** Of the weakest basis in it. */
-  weakness: number;
-  readonly missing: MissingTerm[];
-  /** Null where they are not told: a survey adds up as many sums as there are parts. */
-  readonly terms: Term[] | null;
+function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Told): DcErrorSum {
+  const row = rowOf(NUMBERS, asked, found);
+  const total = totalOf(asked, row);
+  if (brief) return { total, told: null };
+  const counted = countedTerms(asked, found, row);
+  const terms = counted.flatMap((one) => (one.kind === 'value' ? [one.term] : []));
+  const missing = counted.flatMap((one) => (one.kind === 'missing' ? [one] : []));
+  const corner = cornerOf(asked, fartherEnd(asked, found.offset().reading?.ratedSupply ?? asked.supply.nominal), terms);
+  return { total, told: { terms, missing, corner, cautions: sourceCaution(asked, found.bias().reading) } };
 }
 
-/** No drift beside an offset rated over temperature. */
-function addAll(sum: Sum, asked: ErrorQuestion, { found, told }: { readonly found: Known<DcErrorFound>; readonly told: Told }): void {
-  const { reading: offset, term } = found.offset();
-  add(sum, term);
-  if (offset?.overTemperature !== true) add(sum, found.drift());
-  for (const one of currentTerms(asked, { bias: found.bias, offset: found.offsetCurrent, ofClass: found.offsetCurrentOfClass, bounded: found.bounded }, told)) add(sum, one);
-  add(sum, found.commonMode());
-  add(sum, supplyTerm(asked, { offset, rejection: found.supply() }, told));
-  add(sum, found.output());
-}
-
-function add(sum: Sum, one: ErrorTerm): void {
-  if (one.kind === 'missing') sum.missing.push(one);
-  if (one.kind !== 'value') return;
-  const { value, basis } = one.term;
-  sum.known = addWorstCase(sum.known, value);
-  if (basis === 'borrowed') sum.borrowed = addWorstCase(sum.borrowed, value);
-  sum.weakness = Math.max(sum.weakness, weaknessOf(basis));
-  sum.terms?.push(one.term);
-}
-
-function againstLimit(asked: DcErrorDemand, sum: DcErrorSum, { brief }: Told): Finding {
-  if (brief) return brieflyAgainst(asked, sum);
-  const { required, unit, sense } = asked;
-  const { known, missing, rss, borrowed, ...told } = sum;
-  const common = { required, unit, sense, ...told };
+function againstLimit(asked: DcErrorDemand, { total, told }: DcErrorSum): Finding {
+  const decided = decidedBy(asked, total);
+  if (told === null) return decided;
+  const { missing, ...words } = told;
+  if (decided.kind === 'numbers') return { ...decided, ...words, rss: rootSumSquare(words.terms.map(({ value }) => value)) };
   const [first] = missing;
-  if (first !== undefined) {
-    const turnsAt = missing.length === 1 && known < required ? first.turnsAt(required - known) : null;
-    return { kind: 'bound', ...common, known, missing: missing.map((one) => one.missing), cause: 'missing-figure', turnsAt } satisfies BoundFinding;
-  }
-  return { kind: 'numbers', ...common, offered: known, ...(rss === undefined ? {} : { rss }), ...(borrowed === undefined ? {} : { borrowed }) };
+  const turnsAt = missing.length === 1 && total.known < asked.required ? (first?.turnsAt(asked.required - total.known) ?? null) : null;
+  return { ...decided, ...words, missing: missing.map((one) => one.missing), turnsAt };
 }
 
-/** The same numbers, and nothing spread: a sweep holds every part of a catalog against one limit after the other. */
-function brieflyAgainst({ required, unit, sense }: DcErrorDemand, { known, missing, basis, borrowed = 0 }: DcErrorSum): NumberFinding | BoundFinding {
-  if (missing.length > 0) return { kind: 'bound', required, unit, sense, basis, known, missing: [], cause: 'missing-figure' };
-  return { kind: 'numbers', required, unit, sense, basis, offered: known, borrowed };
+/** The numbers that decide: with a term missing the sum is only a bound. */
+function decidedBy(asked: DcErrorDemand, total: Total): NumberFinding | BoundFinding {
+  const basis = basisOf(total);
+  return total.missing > 0 ? new BriefBound(asked, basis, total.known) : new BriefNumbers(asked, basis, { offered: total.known, borrowed: total.borrowed });
 }
 
 /** One temperature, unless the offset stands at the cold end and currents that double at the hot one. */

@@ -70,4 +70,4 @@ export const CHECKS: readonly AnyCheck[] = [
   seal(overdrive),
 ];
 
-export type { AnyCheck, AnyComposition } from './check.js';
+export type { AnyCheck, AnyComposition, AnyNumbers } from './check.js';

@@ -6,6 +6,7 @@ import type { Readings } from '../parts/readings.js';
 import { meets } from '../verdicts/compare.js';
 import { bindingVertices, type Binding, type Curve } from './binding-vertices.js';
 import type { ComposedCheck, Known } from './check.js';
+import { shareOf } from './output-headroom-numbers.js';
 import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
@@ -96,7 +97,7 @@ function offsetShare({ noiseGain, kelvin }: HeadroomVertices, found: Known<Headr
   const driftKnown = overTemperature || kelvin === 0 || drift !== null;
   return {
     terms,
-    value: (terms[0]?.value ?? 0) + (terms[1]?.value ?? 0),
+    value: shareOf(offset?.value ?? NaN, drift?.value ?? NaN),
     basis: weakest(terms.map(({ basis }) => basis)),
     unknowns: { noiseGain, offsetKnown: offset !== null, driftKnown, kelvin },
   };

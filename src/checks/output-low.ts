@@ -1,6 +1,7 @@
 import type { HeadroomDemand } from '../demands/index.js';
 import type { VertexFindings } from '../verdicts/finding.js';
 import { composed } from './check.js';
+import { HEADROOM_NUMBERS } from './output-headroom-numbers.js';
 import { headroomFinding, headroomTerms, type HeadroomFound } from './output-headroom.js';
 
 /** Room the stage leaves the output above V- against what the part loses there at the current it must sink. */
@@ -15,4 +16,5 @@ export const outputLow = composed<HeadroomDemand, HeadroomFound, VertexFindings>
   // The rooms are the stage's own: there is no limit beside them.
   whole: (asked, found, told) => headroomFinding(asked, found, { side: 'low', brief: told.brief }),
   finding: (_, findings) => findings,
+  inNumbers: HEADROOM_NUMBERS,
 });

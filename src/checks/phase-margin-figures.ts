@@ -40,6 +40,12 @@ export interface LoopFound {
   readonly capacitiveLoad: Reading | null;
 }
 
+/** What the phase margin of a part is put together from. */
+export interface PhaseMarginFound extends LoopFound {
+  /** Read for remedies only. */
+  readonly stableGain: Reading | null;
+}
+
 type Asked = Pick<PhaseMarginDemand, 'network' | 'load'>;
 
 /** One figure each: few of either, and nearly as many combinations as parts. */
@@ -55,7 +61,7 @@ export const LOOP_TERMS: ComposedCheck<Asked, LoopFound, unknown>['terms'] = {
 /** The figures of one part, read where they count. */
 export function loopFigures(asked: Asked, found: Known<LoopFound>, told: Pick<Readings, 'brief'>): LoopFigures {
   const speed = found.speed();
-  const needsInput = !HELD.has(asked.network.minus.pin);
+  const needsInput = needsInputCapacitance(asked);
   const outputResistance = asked.load.capacitance > 0 ? found.outputResistance() : null;
   return {
     speed,
@@ -67,21 +73,38 @@ export function loopFigures(asked: Asked, found: Known<LoopFound>, told: Pick<Re
   };
 }
 
+/** Whether a capacitance at the - input makes a pole. */
+export const needsInputCapacitance = ({ network }: Pick<PhaseMarginDemand, 'network'>): boolean => !HELD.has(network.minus.pin);
+
 /** Pins without any impedance: a capacitance there makes no pole. */
 const HELD: ReadonlySet<string> = new Set(['output', 'input', 'ground']);
 /** A part stated with no margin at all oscillates by itself; the smallest angle keeps the form finite, degrees. */
 const LEAST_ANGLE = 0.1;
 
-/** f2 = fu·tan PM from its stated unity-gain crossover and margin; without the crossover from its gain bandwidth. */
+/** What the part's own second pole is made of: degrees and Hz as they are read, the gain bandwidth as printed; not a number: not known. */
+export interface OwnPoleFigures {
+  readonly angle: number;
+  readonly crossover: number;
+  readonly gainBandwidth: number;
+}
+
+/** f2 = fu·tan PM from its stated unity-gain crossover and margin; without the crossover from its gain bandwidth. Hz; Infinity: none. */
+export function ownPoleOf({ angle, crossover, gainBandwidth }: OwnPoleFigures): number {
+  const stated = Math.max(LEAST_ANGLE, angle);
+  // Also an angle that is not known.
+  if (!(stated < 90)) return Infinity;
+  if (!Number.isNaN(crossover)) return Number.isFinite(crossover) ? excessPole(crossover, stated) : Infinity;
+  return Number.isNaN(gainBandwidth) ? Infinity : secondPoleForPhaseMargin(gainBandwidth, stated);
+}
+
 function ownPole(found: Known<LoopFound>, speed: Spread | null, { brief }: Pick<Readings, 'brief'>): OwnPole {
   const margin = found.angle();
   if (margin === null) return { hertz: Infinity, basis: 'assumed', slot: null, how: 'no margin of the part itself known: no excess phase counted' };
   const { slot, basis } = margin;
-  const angle = Math.max(LEAST_ANGLE, margin.value);
   const stated = brief ? '' : `phase margin ${formatQuantity(margin.printed ?? margin.value, '°')} at unity gain`;
-  if (angle >= 90) return { hertz: Infinity, basis, slot, how: brief ? '' : `${stated}: no excess phase` };
+  if (margin.value >= 90) return { hertz: Infinity, basis, slot, how: brief ? '' : `${stated}: no excess phase` };
   const crossover = found.unityCrossover();
-  if (crossover !== null) return { hertz: Number.isFinite(crossover.value) ? excessPole(crossover.value, angle) : Infinity, basis, slot, how: stated };
-  const hertz = speed?.printed == null ? Infinity : secondPoleForPhaseMargin(speed.printed, angle);
+  const hertz = ownPoleOf({ angle: margin.value, crossover: crossover?.value ?? NaN, gainBandwidth: speed?.printed ?? NaN });
+  if (crossover !== null) return { hertz, basis, slot, how: stated };
   return { hertz, basis: 'estimated', slot, how: brief ? '' : `${stated}, its crossover taken from the gain bandwidth` };
 }

@@ -41,11 +41,41 @@ export function marginAt(loop: Loop, gainBandwidth: number): number {
 
 function marginIn(loop: Opened, gainBandwidth: number): number {
   const parts = loop.partsAt(gainBandwidth);
-  if (parts === null) return 180;
-  const margin = 90 + parts.feedback + parts.load + parts.own;
+  return parts === null ? 180 : marginOf(parts);
+}
+
+function marginOf({ feedback, load, own }: PhaseParts): number {
+  const margin = 90 + feedback + load + own;
   // Only upwards is it wrapped: lag beyond a full turn must not look like margin.
   return Math.max(-180, margin > 180 ? margin - 360 : margin);
 }
+
+/** Whether the smaller margin of the two ends is at least this, degrees. */
+export function isMarginLeft(loop: Loop, ends: Ends, least: number): boolean {
+  const bound = marginBound(opened(loop), ends, least);
+  return bound === null ? atEitherEnd(loop, ends) >= least : bound >= least;
+}
+
+/**
+ * The least margin over all gain bandwidths, or any other on the same side of `required` where that can be told without the crossover:
+ * a loop that only lags has less margin than where |T| is certainly above 1, and more than where it is certainly below.
+ */
+export function sideOfMargin(loop: Loop, ends: Ends, required: number): number {
+  return marginBound(opened(loop), ends, required) ?? worstMargin(loop, ends).margin;
+}
+
+/** Degrees; null: only the crossover tells. The margin is least at the most gain bandwidth. */
+function marginBound(loop: Opened, { most }: Ends, required: number): number | null {
+  const bounds = loop.boundsAt(most);
+  if (bounds === null) return null;
+  const low = marginOf(bounds.fastest());
+  if (low >= required + SURELY) return low;
+  const high = marginOf(bounds.slowest());
+  return high < required - SURELY ? high : null;
+}
+
+/** Degrees: far above rounding and the tolerance of a verdict. */
+const SURELY = 1e-5;
 
 /** The smaller margin of the two ends alone, degrees: enough to search with. */
 export function atEitherEnd(loop: Loop, { least, most }: Ends): number {

@@ -3,7 +3,7 @@ import { divide, magnitude, phase, type Complex } from '../formulas/complex.js';
 import { feedbackFactor } from '../formulas/feedback-loop.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
 import { maximallyFlatCapacitor } from '../formulas/transimpedance.js';
-import { boundedCrossover, crossoverOf, laggingCrossover } from './phase-margin-crossover.js';
+import { boundedCrossover, crossoverOf, laggingCrossover, leastCrossover } from './phase-margin-crossover.js';
 import { loadedFactor, type Factor, type LoopNetworks } from './phase-margin-exact-load.js';
 import { loadAngle, loadSize } from './phase-margin-load.js';
 import type { Loop, PhaseParts } from './phase-margin-loop.js';
@@ -14,6 +14,8 @@ export interface Opened {
   readonly onlyLags: boolean;
   factorsAt(gainBandwidth: number): Factors;
   partsAt(gainBandwidth: number): PhaseParts | null;
+  /** Where the phase goes at a frequency that is certainly not below the crossover, and at one that is certainly not above it. Null: without a search nothing is certain. */
+  boundsAt(gainBandwidth: number): { fastest(): PhaseParts; slowest(): PhaseParts } | null;
 }
 
 /** β of the loop at a gain bandwidth (Hz): by itself, with the load inside it (null: the load stands apart), and its size with the load. */
@@ -82,6 +84,7 @@ function open(loop: Loop, known: Known): Opened {
       if (found.length < KEPT) found.push({ gainBandwidth, parts });
       return parts;
     },
+    boundsAt: (gainBandwidth) => (onlyLags ? boundsOf(loop, factorsAt(gainBandwidth), gainBandwidth) : null),
   };
 }
 
@@ -130,11 +133,34 @@ interface At {
  * (Ro||RL)·CL and Riso·CL as M7 has them. One with capacitors of its own (filters, integrator, feedback capacitor, transimpedance)
  * loads the output resistance too: there Ro, Riso, RL and CL stand in one circuit with it, exactly.
  */
-function partsOf({ load, ownPole }: Loop, { factors: { bare, loaded, size }, gainBandwidth, isResistive, onlyLags }: At): PhaseParts | null {
-  const gain = (frequency: number): number => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.sqrt(1 + (frequency / ownPole) ** 2));
-  const most = isResistive ? gainBandwidth * magnitude(bare(0)) : Infinity;
+function partsOf(loop: Loop, { factors, gainBandwidth, isResistive, onlyLags }: At): PhaseParts | null {
+  const gain = gainOf(loop, factors, gainBandwidth);
+  const most = isResistive ? mostCrossover(factors, gainBandwidth) : Infinity;
   const crossover = onlyLags && most > 0 ? laggingCrossover(gain, most) : isResistive ? boundedCrossover(gain, gainBandwidth, most) : crossoverOf(gain, gainBandwidth);
-  if (crossover === null) return null;
+  return crossover === null ? null : phaseAt(loop, factors, crossover);
+}
+
+/** ln|T| by the frequency in Hz. */
+function gainOf({ ownPole }: Loop, { size }: Factors, gainBandwidth: number): (frequency: number) => number {
+  return (frequency) => Math.log(((gainBandwidth / frequency) * size(frequency)) / Math.sqrt(1 + (frequency / ownPole) ** 2));
+}
+
+/** Of resistors alone what comes back is most at DC: Hz, above any crossover. */
+const mostCrossover = ({ bare }: Factors, gainBandwidth: number): number => gainBandwidth * magnitude(bare(0));
+
+function boundsOf(loop: Loop, factors: Factors, gainBandwidth: number): ReturnType<Opened['boundsAt']> {
+  const most = mostCrossover(factors, gainBandwidth);
+  if (!(most > 0 && most < Infinity)) return null;
+  return {
+    fastest: () => phaseAt(loop, factors, most * ROUNDED),
+    slowest: () => phaseAt(loop, factors, leastCrossover(gainOf(loop, factors, gainBandwidth), most)),
+  };
+}
+
+/** Above what rounding of a frequency can be. */
+const ROUNDED = 1 + 1e-9;
+
+function phaseAt({ load, ownPole }: Loop, { bare, loaded }: Factors, crossover: number): PhaseParts {
   const feedback = bare(crossover);
   return {
     crossover,

@@ -8,8 +8,9 @@ import { meets } from '../verdicts/compare.js';
 import type { Finding, Term, UndecidedFinding } from '../verdicts/finding.js';
 import { composed, type Known, type Unlimited } from './check.js';
 import { byCapacitiveLoad } from './phase-margin-capacitive-load.js';
-import { LOOP_TERMS, loopFigures, type LoopFigures, type LoopFound } from './phase-margin-figures.js';
-import { atEitherEnd, phaseParts, worstMargin, type Ends, type LoadedOutput, type Loop, type Margin } from './phase-margin-loop.js';
+import { LOOP_TERMS, loopFigures, type LoopFigures, type PhaseMarginFound } from './phase-margin-figures.js';
+import { phaseParts, worstMargin, type Ends, type Loop, type Margin } from './phase-margin-loop.js';
+import { isInputAssumed, loopOf, marginFinding, MARGIN_NUMBERS } from './phase-margin-numbers.js';
 import { phaseMarginRemedies } from './phase-margin-remedies.js';
 import { turningResistance, unknownInput } from './phase-margin-turns.js';
 
@@ -24,12 +25,8 @@ export const phaseMargin = composed<PhaseMarginDemand, PhaseMarginFound, PartLoo
   terms: { ...LOOP_TERMS, stableGain: (_, readings) => readings.figure('minimumStableGain') },
   whole: partLoop,
   finding: againstLimit,
+  inNumbers: MARGIN_NUMBERS,
 });
-
-interface PhaseMarginFound extends LoopFound {
-  /** Read for remedies only. */
-  readonly stableGain: Reading | null;
-}
 
 /** The loop of this stage with one part, whatever margin is asked. */
 interface PartLoop {
@@ -56,7 +53,7 @@ function closedLoop(asked: Unlimited<PhaseMarginDemand>, figures: LoopFigures): 
   const ends = speed?.ends ?? null;
   const isLoaded = asked.load.capacitance > 0;
   if (speed === null || ends === null || (isLoaded && outputResistance === null)) return null;
-  const loop = loopOf(asked, figures, isLoaded ? (outputResistance?.value ?? 0) : null);
+  const loop = loopFigured(asked, figures, isLoaded ? (outputResistance?.value ?? 0) : 0);
   return { speed, ends, loop, worst: worstMargin(loop, ends) };
 }
 
@@ -70,20 +67,9 @@ function againstLimit(asked: PhaseMarginDemand, part: PartLoop, told: Told): Fin
 
 type Told = Pick<Readings, 'brief'>;
 
-/** The loop of this stage with this part; output resistance null: nothing to load, or not to be counted. */
-function loopOf({ network, open, load }: Pick<PhaseMarginDemand, 'network' | 'open' | 'load'>, { own, inputCapacitance, needsInput }: LoopFigures, outputResistance: number | null): Loop {
-  return {
-    network,
-    open,
-    inputCapacitance: needsInput ? (inputCapacitance?.value ?? 0) : 0,
-    ownPole: own.hertz,
-    load: outputResistance === null || outputResistance === 0 ? null : behind(outputResistance, load),
-  };
-}
-
-/** Member by member: a spread takes the engine longer than the rest of the loop, and there is one for every part. */
-function behind(outputResistance: number, { capacitance, resistance, isolation }: PhaseMarginDemand['load']): LoadedOutput {
-  return { outputResistance, capacitance, resistance, isolation };
+/** The loop of this stage with this part; output resistance 0: nothing to load, or not to be counted. */
+function loopFigured(asked: Unlimited<PhaseMarginDemand>, { own, inputCapacitance }: LoopFigures, outputResistance: number): Loop {
+  return loopOf(asked, { ownPole: own.hertz, inputCapacitance: inputCapacitance?.value ?? 0, outputResistance });
 }
 
 interface Measured {
@@ -94,16 +80,15 @@ interface Measured {
 
 function measured(of: Measured, { brief }: Told): Finding {
   const { asked, part: { figures, isUnityStable }, closed: { speed, ends, loop, worst } } = of;
-  const { required, unit, sense } = asked;
+  const { required, sense } = asked;
   const known = weakest([speed.basis, figures.own.basis, ...(loop.load === null ? [] : basisOf(figures.outputResistance))]);
-  const offered = worst.margin;
-  const passes = meets(required, offered, sense);
-  // Where nothing is told of it, it counts only in a pass, and where it can weaken that any further.
-  const input = brief && (!passes || isAssumed(known)) ? [] : inputBasis(figures, { loop, ends, required });
-  const basis = weakest([known, ...input]);
-  if (brief) return { kind: 'numbers', required, unit, sense, offered, basis };
+  const { needsInput, inputCapacitance } = figures;
+  const decided = marginFinding(asked, { loop, ends, weakness: weaknessOf(known), needsInput, inputWeakness: inputCapacitance === null ? NaN : weaknessOf(inputCapacitance.basis) }, worst.margin);
+  if (brief) return decided;
+  const passes = meets(required, worst.margin, sense);
+  const input = inputBasis(figures, { loop, ends, required });
   return {
-    kind: 'numbers', required, unit, sense, offered, slot: speed.slot, basis,
+    ...decided, basis: weakest([known, ...input]), slot: speed.slot,
     how: `at a gain bandwidth of ${formatQuantity(worst.gainBandwidth, 'Hz')}`,
     terms: termsOf(of, input),
     cautions: passes && input.includes('assumed') && figures.inputCapacitance === null ? unknownInput(loop, ends, required) : [],
@@ -111,11 +96,7 @@ function measured(of: Measured, { brief }: Told): Finding {
   };
 }
 
-const isAssumed = (basis: Basis): boolean => weaknessOf(basis) >= weaknessOf('assumed');
 const basisOf = (reading: Reading | null): Basis[] => (reading === null ? [] : [reading.basis]);
-
-/** No input has more than this (common practice, from memory), F. */
-const MOST_INPUT = 30e-12;
 
 interface At {
   readonly loop: Loop;
@@ -123,11 +104,11 @@ interface At {
   readonly required: number;
 }
 
-/** The capacitance of an input that is not known makes no pole here: an assumption, unless the margin would hold with the most an input has. */
-function inputBasis({ needsInput, inputCapacitance }: LoopFigures, { loop, ends, required }: At): Basis[] {
+/** What the input rests on. */
+function inputBasis({ needsInput, inputCapacitance }: LoopFigures, at: At): Basis[] {
   if (!needsInput) return [];
   if (inputCapacitance !== null) return [inputCapacitance.basis];
-  return atEitherEnd({ ...loop, stray: MOST_INPUT }, ends) >= required ? [] : ['assumed'];
+  return isInputAssumed(at) ? ['assumed'] : [];
 }
 
 /** Where the phase goes, degrees: the terms add up to the margin. */
@@ -166,7 +147,7 @@ interface WithoutResistance {
 
 /** The load pole has no figure: the maker's capacitive load decides, else only what is left without that pole is known. */
 function withoutOutputResistance({ asked, figures, ends }: WithoutResistance, { brief }: Told): Finding {
-  const unloaded = loopOf(asked, figures, null);
+  const unloaded = loopFigured(asked, figures, 0);
   const known = worstMargin(unloaded, ends).margin;
   const { required, unit, sense } = asked;
   const bare = { ...unloaded, ownPole: Infinity };

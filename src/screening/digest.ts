@@ -63,7 +63,7 @@ export function digests(nominalSupply: number, verdictOf: (answer: number) => Br
 }
 
 /** The same where every part of a list has an answer of its own, numbered by its position: what a pass is ranked by is worked out again when it is asked for. */
-export function digestsByPart(size: number, { nominalSupply, verdictOf }: ByPart): Digests {
+export function digestsByPart(size: number, { nominalSupply, verdictOf, countedOf = verdictOf }: ByPart): Digests {
   const counts = new Int32Array(size).fill(UNSETTLED);
   const distances = new Float64Array(size);
   const passes = new Map<number, Digest | null>();
@@ -71,9 +71,9 @@ export function digestsByPart(size: number, { nominalSupply, verdictOf }: ByPart
     counts, distances,
     settle(answer) {
       if (counts[answer] !== UNSETTLED) return;
-      const verdict = verdictOf(answer);
-      counts[answer] = verdict === null ? 0 : countOf(verdict);
-      if (verdict?.outcome === 'fail') distances[answer] = shortness(verdict, nominalSupply);
+      const counted = countedOf(answer);
+      counts[answer] = counted === null ? 0 : countOf(counted);
+      if (counted !== null && 'required' in counted && counted.outcome === 'fail') distances[answer] = shortness(counted, nominalSupply);
     },
     pass(answer) {
       const before = passes.get(answer);
@@ -89,7 +89,12 @@ export function digestsByPart(size: number, { nominalSupply, verdictOf }: ByPart
 interface ByPart {
   readonly nominalSupply: number;
   readonly verdictOf: (answer: number) => BriefVerdict | null;
+  /** The same where no more is wanted than how an answer counts. */
+  readonly countedOf?: (answer: number) => Counted | null;
 }
+
+/** How an answer counts: only of a failure a number is asked. */
+export type Counted = (Pick<BriefVerdict, 'basis'> & { readonly outcome: 'pass' | 'unknown' }) | BriefVerdict;
 
 const UNSETTLED = -1;
 const none = (): null => null;
@@ -114,7 +119,7 @@ function digestOf({ hasMargin, hasSpare, check, outcome, basis, standsOn }: Kind
   return { check, outcome, basis, standsOn, margin: hasMargin ? margin : null, spare: hasSpare ? spare : null };
 }
 
-function countOf({ outcome, basis }: BriefVerdict): number {
+function countOf({ outcome, basis }: Pick<BriefVerdict, 'outcome' | 'basis'>): number {
   if (outcome === 'fail') return COUNTS.fail;
   if (outcome === 'unknown') return COUNTS.unknown;
   return basis === 'guaranteed' ? 0 : COUNTS.weak;

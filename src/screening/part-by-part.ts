@@ -1,9 +1,11 @@
 import type { AnyCheck } from '../checks/index.js';
 import type { Demands } from '../demands/index.js';
-import { decideBriefly, type BriefVerdict } from '../verdicts/decide.js';
+import { BASES, type Basis } from '../parts/basis.js';
+import { decideBriefly, outcomeOf, type BriefVerdict } from '../verdicts/decide.js';
 import { segmentOf, type AskedParts } from './buffers.js';
 import type { TermQuestion } from './composed-question.js';
-import { digestsByPart } from './digest.js';
+import { digestsByPart, type Counted } from './digest.js';
+import { numberTables, type BothFindings } from './number-tables.js';
 import type { CheckQuestion } from './question.js';
 
 /** Terms of a composed check, and how many parts there are. */
@@ -22,15 +24,28 @@ const BRIEF = { brief: true } as const;
 export function partByPart(demands: Demands, { check, terms, size }: Composed): CheckQuestion {
   const looked = lookedUp(terms);
   const { composition } = check;
+  const numbers = composition?.inNumbers(demands) ?? null;
+  const tables = numbers === null ? null : numberTables(numbers, terms);
   const known = Object.fromEntries((composition?.names ?? []).map((name, number) => [name, () => looked.get(number)]));
   const finding = () => composition?.finding(demands, composition.whole(demands, known, BRIEF), BRIEF) ?? null;
-  const verdictOf = (position: number): BriefVerdict | null => {
+  const fromTerms = (position: number): BothFindings | null => {
     looked.start(position);
     const pessimistic = finding();
     const optimistic = looked.differ() ? finding() : pessimistic;
-    return pessimistic === null || optimistic === null ? null : decideBriefly(check, pessimistic, optimistic);
+    return pessimistic === null || optimistic === null ? null : { pessimistic, optimistic };
   };
-  const digests = digestsByPart(size, { nominalSupply: demands.operating.nominalSupply, verdictOf });
+  const findingsOf = (position: number): BothFindings | null => tables?.findings(looked.columns(), looked.placeOf(position)) ?? fromTerms(position);
+  const verdictOf = (position: number): BriefVerdict | null => {
+    const both = findingsOf(position);
+    return both === null ? null : decideBriefly(check, both.pessimistic, both.optimistic);
+  };
+  const countedOf = (position: number): Counted | null => {
+    const side = tables?.sides?.(looked.columns(), looked.placeOf(position)) ?? null;
+    if (side !== null) return countedBy(side) ?? verdictOf(position);
+    const both = findingsOf(position);
+    return both === null ? null : (countedBy(both) ?? decideBriefly(check, both.pessimistic, both.optimistic));
+  };
+  const digests = digestsByPart(size, { nominalSupply: demands.operating.nominalSupply, verdictOf, countedOf });
   return {
     check: check.id,
     digests,
@@ -42,6 +57,16 @@ export function partByPart(demands: Demands, { check, terms, size }: Composed): 
     },
   };
 }
+
+/** A pass or an open answer is no more than itself; null: of anything else the numbers are asked. */
+function countedBy({ pessimistic, optimistic }: BothFindings): Counted | null {
+  const outcome = outcomeOf(pessimistic, optimistic);
+  if (outcome === 'unknown') return OPEN;
+  return outcome === 'pass' && pessimistic.kind === 'numbers' ? PASSES[pessimistic.basis] : null;
+}
+
+const OPEN: Counted = { outcome: 'unknown', basis: null };
+const PASSES = Object.fromEntries(BASES.map((basis) => [basis, { outcome: 'pass', basis }])) as unknown as Record<Basis, Counted>;
 
 /** The terms of one part after the other, in one outlook and then in the other. A term is looked up for a whole segment when one of its parts asks for it. */
 function lookedUp(terms: readonly TermQuestion[]) {
@@ -61,6 +86,12 @@ function lookedUp(terms: readonly TermQuestion[]) {
     return column;
   };
   return {
+    /** Of every term, for the whole segment. */
+    columns(): readonly Int32Array[] {
+      for (let number = 0; number < isRead.length; number += 1) if (isRead[number] !== true) read(number);
+      return columns;
+    },
+    placeOf: (position: number): number => position - (segment?.first ?? 0),
     over(parts: AskedParts): void {
       segment = parts;
       isRead.fill(false);

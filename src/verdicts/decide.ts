@@ -1,6 +1,6 @@
 import { weakest, type Basis } from '../parts/basis.js';
 import { equal, marginOf, meets, spareOf } from './compare.js';
-import type { Finding, Remedy, SingleFinding, WordFinding } from './finding.js';
+import type { Finding, NumberFinding, Remedy, SingleFinding, WordFinding } from './finding.js';
 import { remarksOf, remediesOf } from './remarks.js';
 import type { Outcome, Reason, Verdict } from './verdict.js';
 
@@ -41,7 +41,8 @@ export function decideBriefly(check: CheckIdentity, pessimistic: Finding, optimi
   return numbersOf(check, { outcome, shown: shownOf(shown, outcome), basis: basisBehind(pessimistic, shown) });
 }
 
-function outcomeOf(pessimistic: Finding, optimistic: Finding): Outcome {
+/** What becomes of both readings. */
+export function outcomeOf(pessimistic: Finding, optimistic: Finding): Outcome {
   const worst = standingOf(pessimistic);
   const best = optimistic === pessimistic ? worst : standingOf(optimistic);
   return worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
@@ -51,16 +52,18 @@ const basisBehind = (pessimistic: Finding, shown: Exclude<Finding, WordFinding>)
 
 /** How one reading stands by itself. */
 export function standingOf(finding: Finding): Standing {
+  if (finding.kind === 'numbers') return standingOfNumbers(finding);
+  if (finding.kind === 'bound') return meets(finding.required, finding.known, finding.sense) ? 'open' : 'fail';
   if (finding.kind === 'words') return finding.required.some((word) => same(word, finding.offered)) ? 'pass' : 'fail';
   if (finding.kind === 'undecided') return 'open';
-  if (finding.kind === 'bound') return meets(finding.required, finding.known, finding.sense) ? 'open' : 'fail';
-  if (finding.kind === 'vertices') {
-    const standings = finding.findings.map(standingOf);
-    if (standings.includes('fail')) return 'fail';
-    return standings.includes('open') ? 'open' : 'pass';
-  }
-  if (!meets(finding.required, finding.offered, finding.sense)) return 'fail';
-  const tooMuch = (finding.borrowed ?? 0) > BORROWED_SHARE * Math.abs(finding.required) * (1 + 1e-9);
+  const standings = finding.findings.map(standingOf);
+  if (standings.includes('fail')) return 'fail';
+  return standings.includes('open') ? 'open' : 'pass';
+}
+
+function standingOfNumbers({ required, offered, sense, borrowed = 0 }: NumberFinding): Standing {
+  if (!meets(required, offered, sense)) return 'fail';
+  const tooMuch = borrowed > BORROWED_SHARE * Math.abs(required) * (1 + 1e-9);
   return tooMuch ? 'open' : 'pass';
 }
 

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { atEitherEnd, marginAt, worstMargin, type Loop } from '../../src/checks/phase-margin-loop.js';
+import { atEitherEnd, isMarginLeft, marginAt, sideOfMargin, worstMargin, type Loop } from '../../src/checks/phase-margin-loop.js';
 import { opened } from '../../src/checks/phase-margin-opened.js';
 import { decades, divider, FOLLOWING, GROUNDED } from '../formulas/networks.js';
 
@@ -51,6 +51,40 @@ describe('a loop that only lags', () => {
     );
   });
 
+  it('turns no less at a frequency that is surely not below its crossover, and no more at one that is surely not above', () => {
+    fc.assert(
+      fc.property(lagging, speeds, (loop, { most }) => {
+        const one = opened(loop);
+        const [parts, bounds] = [one.partsAt(most), one.boundsAt(most)];
+        if (parts === null || bounds === null) throw new Error('a loop that only lags has both');
+        const turned = ({ feedback, load, own }: typeof parts): number => feedback + load + own;
+        expect(bounds.fastest().crossover).toBeGreaterThanOrEqual(parts.crossover);
+        expect(bounds.slowest().crossover).toBeLessThanOrEqual(parts.crossover * (1 + 1e-9));
+        expect(turned(bounds.fastest())).toBeLessThanOrEqual(turned(parts) + 1e-6);
+        expect(turned(bounds.slowest())).toBeGreaterThanOrEqual(turned(parts) - 1e-6);
+      }),
+    );
+  });
+
+  it('is on the side of a limit that its crossover puts it on', () => {
+    let early = 0;
+    fc.assert(
+      fc.property(lagging, speeds, fc.double({ min: 1, max: 89, noNaN: true }), (loop, ends, required) => {
+        const worst = worstMargin(loop, ends).margin;
+        const side = sideOfMargin(loop, ends, required);
+        expect(side >= required).toBe(worst >= required);
+        expect(isMarginLeft(loop, ends, required)).toBe(atEitherEnd(loop, ends) >= required);
+        if (side !== worst) early += 1;
+      }),
+      { numRuns: 500 },
+    );
+    expect(early).toBeGreaterThan(100);
+    const at = { loop: { ...BARE, ownPole: 3e6, load: LOAD }, ends: { least: 1e6, most: 2e6 } };
+    const exact = worstMargin(at.loop, at.ends).margin;
+    // At the limit itself, and nearer to it than can be told beforehand, the crossover decides.
+    for (const required of [exact, exact + 1e-7, exact - 1e-7]) expect(sideOfMargin(at.loop, at.ends, required)).toBe(exact);
+  });
+
   it('is none where something leads: an isolation resistor, a capacitor of the network, feedback to the + input, a capacitor left to the part', () => {
     const capacitor = { name: 'feedback capacitor', kind: 'capacitor', value: 1e-12, between: ['output', 'n'] } as const;
     const leading: Loop[] = [
@@ -60,6 +94,6 @@ describe('a loop that only lags', () => {
       { ...BARE, open: { feedback: 70e3, inputCapacitance: 50e-12 } },
       { ...BARE, network: { ...DIVIDER, minus: { elements: DIVIDER.minus.elements, pin: 'elsewhere' } } },
     ];
-    for (const loop of leading) expect(opened(loop).onlyLags).toBe(false);
+    for (const loop of leading) expect([opened(loop).onlyLags, opened(loop).boundsAt(1e6)]).toEqual([false, null]);
   });
 });

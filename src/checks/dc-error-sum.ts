@@ -1,0 +1,159 @@
+import type { DcErrorDemand } from '../demands/index.js';
+import { addWorstCase } from '../formulas/dc-error.js';
+import { BASES, weaknessOf, type Basis } from '../parts/basis.js';
+import type { OffsetReading } from '../parts/offset.js';
+import type { Reading } from '../parts/reading.js';
+import type { Readings } from '../parts/readings.js';
+import { isNothing, resistancesOf, supplyMultiplier, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
+import type { InNumbers, NumbersOf, Row } from './in-numbers.js';
+
+/** What the sum is put together from. */
+export interface DcErrorFound {
+  readonly offset: { readonly reading: OffsetReading | null; readonly term: ErrorTerm };
+  readonly drift: ErrorTerm;
+  readonly bias: CurrentTerm;
+  readonly offsetCurrent: CurrentTerm;
+  readonly offsetCurrentOfClass: CurrentTerm;
+  readonly bounded: Readings['bounded'];
+  readonly commonMode: ErrorTerm;
+  /** What it adds depends on the supply the offset is rated at. */
+  readonly supply: Reading | null;
+  readonly output: ErrorTerm;
+}
+
+/** Where the numbers of the terms stand in a row: volts at the output, amperes or V/V (not a number: missing), each with the weakness of its basis behind it. */
+const AT = {
+  offset: 0, isOver: 2, supplyMultiplier: 3,
+  drift: 4,
+  bias: 6, currentWeakness: 7, biasError: 8,
+  offsetCurrent: 10, offsetCurrentError: 12,
+  ofClass: 14, ofClassError: 16,
+  isWorst: 18,
+  commonMode: 19,
+  rejection: 21, rejectionWeakness: 22,
+  output: 23,
+} as const;
+
+type Asked = DcErrorDemand;
+
+const ADDEND: NumbersOf<Asked, ErrorTerm> = { width: 2, write: (_, one, { row, at }) => writeAddend(one, row, at) };
+
+const CURRENT: NumbersOf<Asked, CurrentTerm> = {
+  width: 4,
+  write(_, { reading, term }, { row, at }) {
+    writeReading(reading, row, at);
+    writeAddend(term, row, at + 2);
+  },
+};
+
+/** The terms in numbers, in the order of `AT`. */
+export const SUM_TERMS: InNumbers<Asked, DcErrorFound>['terms'] = {
+  offset: {
+    width: 4,
+    write(asked, { reading, term }, { row, at }) {
+      writeAddend(term, row, at);
+      row[at + 2] = reading?.overTemperature === true ? 1 : 0;
+      row[at + 3] = supplyMultiplier(asked, reading);
+    },
+  },
+  drift: ADDEND,
+  bias: CURRENT,
+  offsetCurrent: CURRENT,
+  offsetCurrentOfClass: CURRENT,
+  bounded: { width: 1, write: (_, bounded, { row, at }) => void (row[at] = bounded(1, 0)) },
+  commonMode: ADDEND,
+  supply: { width: 2, write: (_, reading, { row, at }) => writeReading(reading, row, at) },
+  output: ADDEND,
+};
+
+function writeAddend(one: ErrorTerm, row: Row, at: number): void {
+  row[at] = one.kind === 'value' ? one.term.value : one.kind === 'missing' ? NaN : 0;
+  row[at + 1] = one.kind === 'value' ? weaknessOf(one.term.basis) : 0;
+}
+
+function writeReading(reading: Reading | null, row: Row, at: number): void {
+  row[at] = reading?.value ?? NaN;
+  row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
+}
+
+/** Which terms stand for the currents: the two of the part, or what is known of them. */
+export type CurrentsCounted = 'none' | 'both' | 'bias' | 'of-class' | 'bias-and-class' | 'whole-bias';
+
+/**
+ * Bias and offset current through the series resistances. With the offset current unknown the two pins may differ by the whole bias
+ * current, unless the class's offset current says less: then Ib·(Rp+Rn) stands for both, at best the offset current is nothing.
+ */
+export function currentsIn(asked: ErrorQuestion, row: Row): CurrentsCounted {
+  const { sum, matched, half } = resistancesOf(asked);
+  if (sum === 0) return 'none';
+  if (!Number.isNaN(at(row, AT.offsetCurrent))) return 'both';
+  const bias = at(row, AT.bias);
+  // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
+  if (Number.isNaN(bias)) return isNothing(matched) ? 'of-class' : 'bias';
+  const withClass = matched * bias + half * at(row, AT.ofClass);
+  return withClass < asked.noiseGain * sum * bias ? 'bias-and-class' : 'whole-bias';
+}
+
+/** What the bias current adds where it stands for the offset current too, V. */
+export function wholeBiasIn(asked: ErrorQuestion, row: Row): number {
+  const { sum, matched } = resistancesOf(asked);
+  const bias = at(row, AT.bias);
+  return at(row, AT.isWorst) === 1 ? asked.noiseGain * sum * bias : matched * bias;
+}
+
+/** No drift is charged beside an offset rated over temperature. */
+export const hasDrift = (row: Row): boolean => at(row, AT.isOver) === 0;
+
+/** The sum in numbers, V. */
+export interface Total {
+  known: number;
+  /** How much of it is borrowed. */
+  borrowed: number;
+  weakness: number;
+  /** How many terms are missing. */
+  missing: number;
+}
+
+export const basisOf = ({ weakness }: Total): Basis => BASES[weakness] ?? 'guaranteed';
+
+/** Adds up the terms that count, in the order they are told. */
+export function totalOf(asked: ErrorQuestion, row: Row): Total {
+  const total: Total = { known: 0, borrowed: 0, weakness: 0, missing: 0 };
+  addAt(total, row, AT.offset);
+  if (hasDrift(row)) addAt(total, row, AT.drift);
+  addCurrents(total, asked, row);
+  addAt(total, row, AT.commonMode);
+  const move = at(row, AT.supplyMultiplier);
+  if (!isNothing(move)) add(total, move / at(row, AT.rejection), at(row, AT.rejectionWeakness));
+  addAt(total, row, AT.output);
+  return total;
+}
+
+function addCurrents(total: Total, asked: ErrorQuestion, row: Row): void {
+  const counted = currentsIn(asked, row);
+  if (counted === 'none') return;
+  if (counted === 'whole-bias') {
+    add(total, wholeBiasIn(asked, row), at(row, AT.currentWeakness));
+    return;
+  }
+  if (counted !== 'of-class') addAt(total, row, AT.biasError);
+  if (counted === 'both') addAt(total, row, AT.offsetCurrentError);
+  else if (counted !== 'bias') addAt(total, row, AT.ofClassError);
+}
+
+const BORROWED = weaknessOf('borrowed');
+
+const at = (row: Row, place: number): number => row[place] ?? NaN;
+
+/** A volt figure with its weakness beside it. */
+const addAt = (total: Total, row: Row, place: number): void => add(total, at(row, place), at(row, place + 1));
+
+function add(total: Total, value: number, weakness: number): void {
+  if (Number.isNaN(value)) {
+    total.missing += 1;
+    return;
+  }
+  total.known = addWorstCase(total.known, value);
+  if (weakness === BORROWED) total.borrowed = addWorstCase(total.borrowed, value);
+  if (weakness > total.weakness) total.weakness = weakness;
+}

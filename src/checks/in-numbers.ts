@@ -1,0 +1,36 @@
+import type { BoundFinding, NumberFinding } from '../verdicts/finding.js';
+import type { Known, Unlimited } from './check.js';
+
+/** What the terms of one part are in numbers, term after term in their order. */
+export type Row = Float64Array;
+
+/** A term in numbers: always as many of them. */
+export interface NumbersOf<Asked, One> {
+  readonly width: number;
+  /** Writes them to the row from `at` on. */
+  readonly write: (asked: Unlimited<Asked>, one: One, to: { readonly row: Row; readonly at: number }) => void;
+}
+
+/**
+ * The numbers of a check put together from terms. Its `whole` is worked out from them too; by themselves they decide about one part after
+ * the other without touching anything but numbers that lie side by side.
+ */
+export interface InNumbers<Asked, Found> {
+  readonly terms: { readonly [Name in keyof Found]: NumbersOf<Asked, Found[Name]> };
+  /** Null: this part cannot be told from numbers alone. */
+  readonly finding: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
+  /** The same but for the number offered: any on the same side of the limit, where that takes less work. */
+  readonly side?: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
+}
+
+/** The row of one part whose terms are at hand. */
+export function rowOf<Asked, Found>({ terms }: InNumbers<Asked, Found>, asked: Unlimited<Asked>, known: Known<Found>): Row {
+  const names = Object.keys(terms) as (keyof Found)[];
+  const row = new Float64Array(names.reduce((sum, name) => sum + terms[name].width, 0));
+  let at = 0;
+  for (const name of names) {
+    terms[name].write(asked, known[name](), { row, at });
+    at += terms[name].width;
+  }
+  return row;
+}

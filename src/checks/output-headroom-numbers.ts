@@ -1,0 +1,74 @@
+import type { HeadroomDemand } from '../demands/index.js';
+import { BASES, weaknessOf } from '../parts/basis.js';
+import { BriefNumbers } from '../verdicts/brief-finding.js';
+import { meets } from '../verdicts/compare.js';
+import type { NumberFinding } from '../verdicts/finding.js';
+import type { HeadroomFound } from './output-headroom.js';
+import type { InNumbers, Row } from './in-numbers.js';
+
+/** Vertices that can decide are one or two of a stage's; a part with more is told from its terms. */
+const MOST = 3;
+
+/** Where the numbers stand in a row: how many vertices (not a number: not told by them alone), rooms and head-rooms there, V; offset and drift at the output, V (not a number: not known). */
+const AT = { vertices: 0, curveWeakness: 1, places: 2, offset: 2 + 2 * MOST, offsetWeakness: 3 + 2 * MOST, isOver: 4 + 2 * MOST, drift: 5 + 2 * MOST, driftWeakness: 6 + 2 * MOST } as const;
+
+/** A head-room check in numbers. */
+export const HEADROOM_NUMBERS: InNumbers<HeadroomDemand, HeadroomFound> = {
+  terms: {
+    curve: { width: AT.offset, write: (_, { binding }, { row, at }) => writeCurve(binding, row, at) },
+    offset: {
+      width: 3,
+      write(_, { term, overTemperature }, { row, at }) {
+        row[at] = term?.value ?? NaN;
+        row[at + 1] = weaknessOf(term?.basis ?? 'guaranteed');
+        row[at + 2] = overTemperature ? 1 : 0;
+      },
+    },
+    drift: {
+      width: 2,
+      write(_, term, { row, at }) {
+        row[at] = term?.value ?? NaN;
+        row[at + 1] = weaknessOf(term?.basis ?? 'guaranteed');
+      },
+    },
+  },
+  finding: atVertices,
+};
+
+function writeCurve(binding: HeadroomFound['curve']['binding'], row: Row, at: number): void {
+  const isTold = binding !== null && binding.places.length <= MOST;
+  row[at] = isTold ? binding.places.length : NaN;
+  row[at + 1] = weaknessOf(binding?.basis ?? 'guaranteed');
+  for (let place = 0; place < MOST; place += 1) {
+    const one = isTold ? binding.places[place] : undefined;
+    row[at + AT.places + 2 * place] = one?.vertex.room ?? NaN;
+    row[at + AT.places + 2 * place + 1] = one?.reading.value ?? NaN;
+  }
+}
+
+/** What the offset takes of the room, V: drift adds to an offset that is known and does not hold over temperature already. Not a number: not known. */
+export function shareOf(offset: number, drift: number): number {
+  return Number.isNaN(offset) ? 0 : Number.isNaN(drift) ? offset : offset + drift;
+}
+
+/** Of the vertices the one that is told: of least spare, and one that fails before one that holds. */
+function atVertices({ unit, sense }: HeadroomDemand, row: Row): NumberFinding | null {
+  const count = at(row, AT.vertices);
+  if (Number.isNaN(count)) return null;
+  const [offset, drift] = [at(row, AT.offset), at(row, AT.isOver) === 1 ? NaN : at(row, AT.drift)];
+  const share = shareOf(offset, drift);
+  let required = 0;
+  let offered = 0;
+  let holds = true;
+  for (let place = 0; place < count; place += 1) {
+    const room = at(row, AT.places + 2 * place);
+    const needed = at(row, AT.places + 2 * place + 1) + share;
+    const passes = meets(room, needed, 'at-most');
+    if (place > 0 && (passes === holds ? room - needed >= required - offered : passes)) continue;
+    [required, offered, holds] = [room, needed, passes];
+  }
+  const weakest = Number.isNaN(offset) ? at(row, AT.curveWeakness) : Math.max(at(row, AT.curveWeakness), at(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : at(row, AT.driftWeakness));
+  return new BriefNumbers({ required, unit, sense }, BASES[weakest] ?? 'guaranteed', { offered, borrowed: 0 });
+}
+
+const at = (row: Row, place: number): number => row[place] ?? NaN;

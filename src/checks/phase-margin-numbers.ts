@@ -1,0 +1,122 @@
+import type { PhaseMarginDemand } from '../demands/index.js';
+import { BASES, weaknessOf } from '../parts/basis.js';
+import type { Reading } from '../parts/reading.js';
+import { BriefNumbers } from '../verdicts/brief-finding.js';
+import { meets } from '../verdicts/compare.js';
+import type { NumberFinding } from '../verdicts/finding.js';
+import type { InNumbers, NumbersOf, Row } from './in-numbers.js';
+import { needsInputCapacitance, ownPoleOf, type PhaseMarginFound } from './phase-margin-figures.js';
+import { isMarginLeft, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
+
+/** Where the numbers stand in a row: Hz, degrees, F and Ω (not a number: not known), each with the weakness of its basis behind it. */
+const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWeakness: 5, crossover: 6, input: 8, inputWeakness: 9, resistance: 10, resistanceWeakness: 11 } as const;
+
+type Asked = PhaseMarginDemand;
+
+const READING: NumbersOf<Asked, Reading | null> = {
+  width: 2,
+  write(_, reading, { row, at }) {
+    row[at] = reading?.value ?? NaN;
+    row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
+  },
+};
+const NOTHING = { width: 0, write: () => undefined } as const;
+
+/** The phase margin in numbers, where gain bandwidth and output resistance are known as far as they count. */
+export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
+  terms: {
+    speed: {
+      width: 4,
+      write(_, speed, { row, at }) {
+        row[at] = speed?.ends?.least ?? NaN;
+        row[at + 1] = speed?.ends?.most ?? NaN;
+        row[at + 2] = speed?.printed ?? NaN;
+        row[at + 3] = weaknessOf(speed?.basis ?? 'guaranteed');
+      },
+    },
+    angle: READING,
+    unityCrossover: READING,
+    inputCapacitance: READING,
+    outputResistance: READING,
+    // Neither decides about a loop that is known.
+    capacitiveLoad: NOTHING,
+    stableGain: NOTHING,
+  },
+  finding: (asked, row) => inLoop(asked, row, (numbers) => worstMargin(numbers.loop, numbers.ends).margin),
+  side: (asked, row) => inLoop(asked, row, (numbers) => sideOfMargin(numbers.loop, numbers.ends, asked.required)),
+};
+
+function inLoop(asked: Asked, row: Row, offeredBy: (numbers: LoopNumbers) => number): NumberFinding | null {
+  const numbers = loopIn(asked, row);
+  return numbers === null ? null : marginFinding(asked, numbers, offeredBy(numbers));
+}
+
+/** All that decides about a loop, in numbers. */
+export interface LoopNumbers {
+  readonly loop: Loop;
+  readonly ends: Ends;
+  /** Of gain bandwidth, excess phase and, where there is a load, output resistance. */
+  readonly weakness: number;
+  readonly needsInput: boolean;
+  /** Not a number: the capacitance is not known. */
+  readonly inputWeakness: number;
+}
+
+/** Null: no loop, or one whose load stands behind nobody knows what. */
+function loopIn(asked: Asked, row: Row): LoopNumbers | null {
+  const [least, most] = [at(row, AT.least), at(row, AT.most)];
+  const isLoaded = asked.load.capacitance > 0;
+  const outputResistance = isLoaded ? at(row, AT.resistance) : 0;
+  if (Number.isNaN(most) || Number.isNaN(outputResistance)) return null;
+  const needsInput = needsInputCapacitance(asked);
+  const input = needsInput ? at(row, AT.input) : NaN;
+  const own = { angle: at(row, AT.angle), crossover: at(row, AT.crossover), gainBandwidth: at(row, AT.printed) };
+  const ofAngle = Number.isNaN(own.angle) ? ASSUMED : own.angle >= 90 || !Number.isNaN(own.crossover) ? at(row, AT.angleWeakness) : ESTIMATED;
+  return {
+    loop: loopOf(asked, { ownPole: ownPoleOf(own), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance }),
+    ends: { least, most },
+    weakness: Math.max(at(row, AT.speedWeakness), ofAngle, outputResistance === 0 ? 0 : at(row, AT.resistanceWeakness)),
+    needsInput,
+    inputWeakness: Number.isNaN(input) ? NaN : at(row, AT.inputWeakness),
+  };
+}
+
+interface LoopFigured {
+  readonly ownPole: number;
+  readonly inputCapacitance: number;
+  /** Ω; 0: nothing to load, or not to be counted. */
+  readonly outputResistance: number;
+}
+
+/** The loop of a stage with one part. */
+export function loopOf({ network, open, load }: Pick<PhaseMarginDemand, 'network' | 'open' | 'load'>, { ownPole, inputCapacitance, outputResistance }: LoopFigured): Loop {
+  return { network, open, inputCapacitance, ownPole, load: outputResistance === 0 ? null : behind(outputResistance, load) };
+}
+
+/** Member by member: a spread takes the engine longer than the rest of the loop, and there is one for every part. */
+function behind(outputResistance: number, { capacitance, resistance, isolation }: PhaseMarginDemand['load']): LoadedOutput {
+  return { outputResistance, capacitance, resistance, isolation };
+}
+
+/** What decides. What the input rests on counts in a pass alone, and where it can weaken that any further. */
+export function marginFinding(asked: Asked, { loop, ends, weakness, needsInput, inputWeakness }: LoopNumbers, offered: number): NumberFinding {
+  const { required, sense } = asked;
+  let weakest = weakness;
+  if (needsInput && meets(required, offered, sense)) {
+    if (!Number.isNaN(inputWeakness)) weakest = Math.max(weakness, inputWeakness);
+    else if (weakness < ASSUMED && isInputAssumed({ loop, ends, required })) weakest = ASSUMED;
+  }
+  return new BriefNumbers(asked, BASES[weakest] ?? 'assumed', { offered, borrowed: 0 });
+}
+
+/** No input has more than this (common practice, from memory), F. */
+const MOST_INPUT = 30e-12;
+
+/** The capacitance of an input that is not known makes no pole here: an assumption, unless the margin would hold with the most an input has. */
+export function isInputAssumed({ loop: { network, open, inputCapacitance, ownPole, load }, ends, required }: { readonly loop: Loop; readonly ends: Ends; readonly required: number }): boolean {
+  return !isMarginLeft({ network, open, inputCapacitance, stray: MOST_INPUT, ownPole, load }, ends, required);
+}
+
+const [ESTIMATED, ASSUMED] = [weaknessOf('estimated'), weaknessOf('assumed')];
+
+const at = (row: Row, place: number): number => row[place] ?? NaN;

@@ -1,0 +1,113 @@
+import type { AnyNumbers } from '../checks/index.js';
+import type { Finding } from '../verdicts/finding.js';
+import type { TermQuestion } from './composed-question.js';
+
+/** Both readings of one part. */
+export interface BothFindings {
+  readonly pessimistic: Finding;
+  readonly optimistic: Finding;
+}
+
+/** The answers of each term as numbers side by side, in either outlook. */
+export interface NumberTables {
+  /** Both findings of the part with these answers, term by term at `place`; null: numbers alone do not tell. */
+  findings: FindingsAt;
+  /** The same where what is offered need only be on its side of the limit; null: no less work than the findings themselves. */
+  readonly sides: FindingsAt | null;
+}
+
+type FindingsAt = (columns: readonly Int32Array[], place: number) => BothFindings | null;
+
+/** Tables that grow with the answers. */
+export function numberTables({ terms, finding, side }: AnyNumbers, questions: readonly TermQuestion[]): NumberTables {
+  const tables = questions.map((question, number) => tableOf(question, terms[number] ?? NOTHING));
+  const row = new Float64Array(terms.reduce((sum, { width }) => sum + width, 0));
+  /** Whether both readings have these numbers. */
+  const fillWorst = (columns: readonly Int32Array[], place: number): boolean => {
+    let [at, isSame] = [0, true];
+    for (let number = 0; number < tables.length; number += 1) {
+      const [table, column] = [tables[number], columns[number]];
+      if (table === undefined || column === undefined) continue;
+      const answer = column[place] ?? 0;
+      if (answer >= table.known) reach(table, answer);
+      if (table.same[answer] !== 1) isSame = false;
+      at = copy(table.worst, { answer, width: table.width, row, at });
+    }
+    return isSame;
+  };
+  const fillBest = (columns: readonly Int32Array[], place: number): void => {
+    let at = 0;
+    for (let number = 0; number < tables.length; number += 1) {
+      const [table, column] = [tables[number], columns[number]];
+      if (table !== undefined && column !== undefined) at = copy(table.best, { answer: column[place] ?? 0, width: table.width, row, at });
+    }
+  };
+  const both = (one: AnyNumbers['finding']): FindingsAt => (columns, place) => {
+    const isSame = fillWorst(columns, place);
+    const pessimistic = one(row);
+    if (pessimistic === null) return null;
+    if (isSame) return { pessimistic, optimistic: pessimistic };
+    fillBest(columns, place);
+    const optimistic = one(row);
+    return optimistic === null ? null : { pessimistic, optimistic };
+  };
+  return { findings: both(finding), sides: side === null ? null : both(side) };
+}
+
+type InNumbers = AnyNumbers['terms'][number];
+
+const NOTHING: InNumbers = { width: 0, write: () => undefined };
+
+/** By answer; as far as `known`. */
+interface Table {
+  readonly question: TermQuestion;
+  readonly width: number;
+  readonly write: InNumbers['write'];
+  known: number;
+  worst: Float64Array<ArrayBuffer>;
+  best: Float64Array<ArrayBuffer>;
+  /** 1: both readings have the same numbers. */
+  same: Uint8Array<ArrayBuffer>;
+}
+
+const FIRST = 64;
+
+function tableOf(question: TermQuestion, { width, write }: InNumbers): Table {
+  return { question, width, write, known: 0, worst: new Float64Array(FIRST * width), best: new Float64Array(FIRST * width), same: new Uint8Array(FIRST) };
+}
+
+/** Has the numbers of this answer ready. */
+function reach(table: Table, answer: number): void {
+  const { question, width, write } = table;
+  for (; table.known <= answer; table.known += 1) {
+    const { known } = table;
+    if (known === table.same.length) {
+      table.worst = enlarged(table.worst, new Float64Array(2 * known * width));
+      table.best = enlarged(table.best, new Float64Array(2 * known * width));
+      table.same = enlarged(table.same, new Uint8Array(2 * known));
+    }
+    const [low, high] = [question.worst[known], question.best[known]];
+    write(low, { row: table.worst, at: known * width });
+    write(high, { row: table.best, at: known * width });
+    table.same[known] = low === high ? 1 : 0;
+  }
+}
+
+interface Copying {
+  readonly answer: number;
+  readonly width: number;
+  readonly row: Float64Array;
+  readonly at: number;
+}
+
+/** Numbers of one answer into the row; where the next belong. */
+function copy(from: Float64Array, { answer, width, row, at }: Copying): number {
+  const first = answer * width;
+  for (let number = 0; number < width; number += 1) row[at + number] = from[first + number] ?? NaN;
+  return at + width;
+}
+
+function enlarged<Numbers extends Float64Array<ArrayBuffer> | Uint8Array<ArrayBuffer>>(before: Numbers, larger: Numbers): Numbers {
+  larger.set(before);
+  return larger;
+}
