@@ -1,6 +1,6 @@
 import type { OpenTransimpedance } from '../demands/index.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
-import { opened, type Opened } from './phase-margin-opened.js';
+import { opened, phaseBounds, type Opened } from './phase-margin-opened.js';
 
 /** What hangs behind the amplifier's open-loop output resistance: Ω and F; resistance null: a capacitance alone. */
 export interface LoadedOutput {
@@ -52,7 +52,7 @@ function marginOf({ feedback, load, own }: PhaseParts): number {
 
 /** Whether the smaller margin of the two ends is at least this, degrees. */
 export function isMarginLeft(loop: Loop, ends: Ends, least: number): boolean {
-  const bound = marginBound(opened(loop), ends, least);
+  const bound = marginBound(loop, ends, least);
   return bound === null ? atEitherEnd(loop, ends) >= least : bound >= least;
 }
 
@@ -61,12 +61,12 @@ export function isMarginLeft(loop: Loop, ends: Ends, least: number): boolean {
  * a loop that only lags has less margin than where |T| is certainly above 1, and more than where it is certainly below.
  */
 export function sideOfMargin(loop: Loop, ends: Ends, required: number): number {
-  return marginBound(opened(loop), ends, required) ?? worstMargin(loop, ends).margin;
+  return marginBound(loop, ends, required) ?? worstMargin(loop, ends).margin;
 }
 
 /** Degrees; null: only the crossover tells. The margin is least at the most gain bandwidth. */
-function marginBound(loop: Opened, { most }: Ends, required: number): number | null {
-  const bounds = loop.boundsAt(most);
+function marginBound(loop: Loop, { most }: Ends, required: number): number | null {
+  const bounds = phaseBounds(loop, most);
   if (bounds === null) return null;
   const low = marginOf(bounds.fastest());
   if (low >= required + SURELY) return low;

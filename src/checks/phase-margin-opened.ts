@@ -14,8 +14,6 @@ export interface Opened {
   readonly onlyLags: boolean;
   factorsAt(gainBandwidth: number): Factors;
   partsAt(gainBandwidth: number): PhaseParts | null;
-  /** Where the phase goes at a frequency that is certainly not below the crossover, and at one that is certainly not above it. Null: without a search nothing is certain. */
-  boundsAt(gainBandwidth: number): { fastest(): PhaseParts; slowest(): PhaseParts } | null;
 }
 
 /** β of the loop at a gain bandwidth (Hz): by itself, with the load inside it (null: the load stands apart), and its size with the load. */
@@ -72,7 +70,7 @@ function open(loop: Loop, known: Known): Opened {
   let made: Factors | null = null;
   const factorsAt = (gainBandwidth: number): Factors => (loop.open !== null ? factorsOf(loop, gainBandwidth, null) : (made ??= factorsOf(loop, gainBandwidth, known)));
   const isResistive = loop.open === null && known.isResistive;
-  const onlyLags = isResistive && (loop.load === null || loop.load.isolation === 0);
+  const onlyLags = lags(loop, known);
   const found: { readonly gainBandwidth: number; readonly parts: PhaseParts | null }[] = [];
   return {
     onlyLags,
@@ -84,9 +82,11 @@ function open(loop: Loop, known: Known): Opened {
       if (found.length < KEPT) found.push({ gainBandwidth, parts });
       return parts;
     },
-    boundsAt: (gainBandwidth) => (onlyLags ? boundsOf(loop, factorsAt(gainBandwidth), gainBandwidth) : null),
   };
 }
+
+/** Nothing leads: resistors alone, and a load that is not isolated. */
+const lags = ({ open: chosen, load }: Loop, { isResistive }: Known): boolean => chosen === null && isResistive && (load === null || load.isolation === 0);
 
 /** Ends, the place between them, and what a search between these comes back to. */
 const KEPT = 8;
@@ -148,7 +148,17 @@ function gainOf({ ownPole }: Loop, { size }: Factors, gainBandwidth: number): (f
 /** Of resistors alone what comes back is most at DC: Hz, above any crossover. */
 const mostCrossover = ({ bare }: Factors, gainBandwidth: number): number => gainBandwidth * magnitude(bare(0));
 
-function boundsOf(loop: Loop, factors: Factors, gainBandwidth: number): ReturnType<Opened['boundsAt']> {
+/** Where the phase goes at a frequency that is certainly not below the crossover, and at one that is certainly not above it. */
+export interface PhaseBounds {
+  fastest(): PhaseParts;
+  slowest(): PhaseParts;
+}
+
+/** Of a loop that only lags, without a search and without opening it; null: of any other nothing is certain. */
+export function phaseBounds(loop: Loop, gainBandwidth: number): PhaseBounds | null {
+  const known = knownOf(loop.network);
+  if (!lags(loop, known)) return null;
+  const factors = factorsOf(loop, gainBandwidth, known);
   const most = mostCrossover(factors, gainBandwidth);
   if (!(most > 0 && most < Infinity)) return null;
   return {

@@ -30,21 +30,44 @@ export function dominatorFinder<P extends Rival>(groups: readonly Together<P>[])
     known.set(one, made);
     return made;
   };
+  let costs: Costs<P> | null = null;
   return (mine) => {
-    const isOver = (theirs: P): boolean => isCheaper(theirs, mine) && dominates(scores(theirs), scores(mine));
-    for (const { members, firsts } of groups) {
-      const found = members.some(isOver) ? firsts().find(isOver) : undefined;
+    const { all, groupOf, prices, currents } = (costs ??= costsOf(groups));
+    const isOver = (theirs: P): boolean => dominates(scores(theirs), scores(mine));
+    const [price, current] = [priceInEuro(mine) ?? NaN, mine.current ?? NaN];
+    // Settled to have no dominator in it that leads a line.
+    let passed = -1;
+    for (let at = 0; at < all.length; at += 1) {
+      // The first of the scores alone settle most pairs; what is not known is below nothing.
+      if (!((prices[at] ?? NaN) <= price && (currents[at] ?? NaN) <= current)) continue;
+      const [theirs, group] = [all[at], groupOf[at] ?? 0];
+      if (theirs === undefined || group === passed || !isOver(theirs)) continue;
+      const found = groups[group]?.firsts().find(isOver);
       if (found !== undefined) return found;
+      passed = group;
     }
     return null;
   };
 }
 
-/** The first of the scores alone: they settle most pairs. */
-function isCheaper(theirs: Rival, mine: Rival): boolean {
-  if (theirs.current === null || mine.current === null || theirs.current > mine.current) return false;
-  const [price, asked] = [priceInEuro(theirs), priceInEuro(mine)];
-  return price !== null && asked !== null && price <= asked;
+/** Members of all groups one after the other, with what they cost: EUR and A, not a number where it is not known. */
+interface Costs<P> {
+  readonly all: readonly P[];
+  readonly groupOf: Int32Array;
+  readonly prices: Float64Array;
+  readonly currents: Float64Array;
+}
+
+/** Numbers side by side: every line of a list is held against all that fits. */
+function costsOf<P extends Rival>(groups: readonly Together<P>[]): Costs<P> {
+  const all = groups.flatMap(({ members }) => members);
+  const groupOf = new Int32Array(all.length);
+  let filled = 0;
+  groups.forEach(({ members }, group) => {
+    groupOf.fill(group, filled, filled + members.length);
+    filled += members.length;
+  });
+  return { all, groupOf, prices: Float64Array.from(all, (one) => priceInEuro(one) ?? NaN), currents: Float64Array.from(all, ({ current }) => current ?? NaN) };
 }
 
 /** Larger is better throughout; null when price or current is not known: then nothing can be said. */
