@@ -112,11 +112,12 @@ function compositionOf<Asked extends object>({ terms, asks, whole, finding, inNu
     term: (name, demands, readings) => of(demands, (asked) => terms[name]?.(asked, readings)),
     whole: (demands, known, told) => of(demands, (asked) => whole(asked, known, told)),
     finding: (demands, found, told) => of(demands, (asked) => finding(asked, found, told)),
-    inNumbers: (demands) => of(demands, (asked) => (inNumbers === undefined ? null : numbersFor(inNumbers, asked))),
+    inNumbers: (demands) => of(demands, (asked) => (inNumbers === undefined ? null : numbersFor(inNumbers, Object.keys(terms), asked))),
   };
 }
 
-function numbersFor<Asked>({ terms, finding, side }: InNumbers<Asked, Readonly<Record<string, unknown>>>, asked: Asked): AnyNumbers {
+function numbersFor<Asked>({ terms, finding, side }: InNumbers<Asked, Readonly<Record<string, unknown>>>, names: readonly string[], asked: Asked): AnyNumbers {
+  if (Object.keys(terms).join() !== names.join()) throw new RangeError(`numbers of ${Object.keys(terms).join()} for the terms ${names.join()}`);
   return {
     terms: Object.values(terms).map(({ width, write }) => ({ width, write: (one, to) => write(asked, one, to) })),
     finding: (row) => finding(asked, row),

@@ -1,4 +1,4 @@
-import { currentsIn, hasDrift, wholeBiasIn, type DcErrorFound } from './dc-error-sum.js';
+import { currentOf, currentsIn, hasDrift, wholeBiasIn, type DcErrorFound } from './dc-error-sum.js';
 import { supplyTerm, wholeBiasTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
 import type { Known } from './check.js';
 import type { Row } from './in-numbers.js';
@@ -12,10 +12,10 @@ export function countedTerms(asked: ErrorQuestion, found: Known<DcErrorFound>, r
 
 /** Those that stand for the currents. */
 export function currentTerms(asked: ErrorQuestion, found: Known<DcErrorFound>, row: Row): ErrorTerm[] {
-  const { reading, term } = found.bias();
+  const { reading, term } = currentOf(found, 'bias');
   switch (currentsIn(asked, row)) {
     case 'none': return [];
-    case 'both': return [term, found.offsetCurrent().term];
+    case 'both': return [term, currentOf(found, 'offsetCurrent').term];
     case 'bias': return [term];
     case 'of-class': return [found.offsetCurrentOfClass().term];
     case 'bias-and-class': return [term, found.offsetCurrentOfClass().term];

@@ -4,15 +4,18 @@ import { BASES, weaknessOf, type Basis } from '../parts/basis.js';
 import type { OffsetReading } from '../parts/offset.js';
 import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
-import { isNothing, resistancesOf, supplyMultiplier, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
+import type { Known } from './check.js';
+import { isNothing, resistancesOf, supplyMultiplier, type ByDoubling, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
 import type { InNumbers, NumbersOf, Row } from './in-numbers.js';
 
 /** What the sum is put together from. */
 export interface DcErrorFound {
   readonly offset: { readonly reading: OffsetReading | null; readonly term: ErrorTerm };
   readonly drift: ErrorTerm;
-  readonly bias: CurrentTerm;
-  readonly offsetCurrent: CurrentTerm;
+  /** Whether currents of this input double over temperature. */
+  readonly doubles: boolean;
+  readonly bias: ByDoubling;
+  readonly offsetCurrent: ByDoubling;
   readonly offsetCurrentOfClass: CurrentTerm;
   readonly bounded: Readings['bounded'];
   readonly commonMode: ErrorTerm;
@@ -25,26 +28,35 @@ export interface DcErrorFound {
 const AT = {
   offset: 0, isOver: 2, supplyMultiplier: 3,
   drift: 4,
-  bias: 6, currentWeakness: 7, biasError: 8,
-  offsetCurrent: 10, offsetCurrentError: 12,
-  ofClass: 14, ofClassError: 16,
-  isWorst: 18,
-  commonMode: 19,
-  rejection: 21, rejectionWeakness: 22,
-  output: 23,
+  doubles: 6,
+  bias: 7, offsetCurrent: 15, ofClass: 23,
+  isWorst: 27,
+  commonMode: 28,
+  rejection: 30, rejectionWeakness: 31,
+  output: 32,
 } as const;
+
+/** Where the numbers of a current stand from its own place on: A as read, and V at the output. Of an input that doubles they stand behind those of one that does not. */
+const [WEAKNESS, ERROR, DOUBLING] = [1, 2, 4] as const;
 
 type Asked = DcErrorDemand;
 
 const ADDEND: NumbersOf<Asked, ErrorTerm> = { width: 2, write: (_, one, { row, at }) => writeAddend(one, row, at) };
 
-const CURRENT: NumbersOf<Asked, CurrentTerm> = {
-  width: 4,
-  write(_, { reading, term }, { row, at }) {
-    writeReading(reading, row, at);
-    writeAddend(term, row, at + 2);
+const CURRENT: NumbersOf<Asked, CurrentTerm> = { width: 4, write: (_, one, { row, at }) => writeCurrent(one, row, at) };
+
+const BY_DOUBLING: NumbersOf<Asked, ByDoubling> = {
+  width: 8,
+  write(_, { steady, doubling }, { row, at }) {
+    writeCurrent(steady, row, at);
+    writeCurrent(doubling, row, at + DOUBLING);
   },
 };
+
+function writeCurrent({ reading, term }: CurrentTerm, row: Row, at: number): void {
+  writeReading(reading, row, at);
+  writeAddend(term, row, at + ERROR);
+}
 
 /** The terms in numbers, in the order of `AT`. */
 export const SUM_TERMS: InNumbers<Asked, DcErrorFound>['terms'] = {
@@ -57,8 +69,9 @@ export const SUM_TERMS: InNumbers<Asked, DcErrorFound>['terms'] = {
     },
   },
   drift: ADDEND,
-  bias: CURRENT,
-  offsetCurrent: CURRENT,
+  doubles: { width: 1, write: (_, doubles, { row, at }) => void (row[at] = doubles ? 1 : 0) },
+  bias: BY_DOUBLING,
+  offsetCurrent: BY_DOUBLING,
   offsetCurrentOfClass: CURRENT,
   bounded: { width: 1, write: (_, bounded, { row, at }) => void (row[at] = bounded(1, 0)) },
   commonMode: ADDEND,
@@ -76,6 +89,15 @@ function writeReading(reading: Reading | null, row: Row, at: number): void {
   row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
 }
 
+/** A current as this input has it. */
+export function currentOf(found: Known<Pick<DcErrorFound, 'doubles' | 'bias' | 'offsetCurrent'>>, name: 'bias' | 'offsetCurrent'): CurrentTerm {
+  const { steady, doubling } = found[name]();
+  return found.doubles() ? doubling : steady;
+}
+
+/** The same in numbers: where it stands. */
+const placeOf = (row: Row, place: number): number => (at(row, AT.doubles) === 1 ? place + DOUBLING : place);
+
 /** Which terms stand for the currents: the two of the part, or what is known of them. */
 export type CurrentsCounted = 'none' | 'both' | 'bias' | 'of-class' | 'bias-and-class' | 'whole-bias';
 
@@ -86,8 +108,8 @@ export type CurrentsCounted = 'none' | 'both' | 'bias' | 'of-class' | 'bias-and-
 export function currentsIn(asked: ErrorQuestion, row: Row): CurrentsCounted {
   const { sum, matched, half } = resistancesOf(asked);
   if (sum === 0) return 'none';
-  if (!Number.isNaN(at(row, AT.offsetCurrent))) return 'both';
-  const bias = at(row, AT.bias);
+  if (!Number.isNaN(at(row, placeOf(row, AT.offsetCurrent)))) return 'both';
+  const bias = at(row, placeOf(row, AT.bias));
   // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
   if (Number.isNaN(bias)) return isNothing(matched) ? 'of-class' : 'bias';
   const withClass = matched * bias + half * at(row, AT.ofClass);
@@ -97,7 +119,7 @@ export function currentsIn(asked: ErrorQuestion, row: Row): CurrentsCounted {
 /** What the bias current adds where it stands for the offset current too, V. */
 export function wholeBiasIn(asked: ErrorQuestion, row: Row): number {
   const { sum, matched } = resistancesOf(asked);
-  const bias = at(row, AT.bias);
+  const bias = at(row, placeOf(row, AT.bias));
   return at(row, AT.isWorst) === 1 ? asked.noiseGain * sum * bias : matched * bias;
 }
 
@@ -132,13 +154,14 @@ export function totalOf(asked: ErrorQuestion, row: Row): Total {
 function addCurrents(total: Total, asked: ErrorQuestion, row: Row): void {
   const counted = currentsIn(asked, row);
   if (counted === 'none') return;
+  const bias = placeOf(row, AT.bias);
   if (counted === 'whole-bias') {
-    add(total, wholeBiasIn(asked, row), at(row, AT.currentWeakness));
+    add(total, wholeBiasIn(asked, row), at(row, bias + WEAKNESS));
     return;
   }
-  if (counted !== 'of-class') addAt(total, row, AT.biasError);
-  if (counted === 'both') addAt(total, row, AT.offsetCurrentError);
-  else if (counted !== 'bias') addAt(total, row, AT.ofClassError);
+  if (counted !== 'of-class') addAt(total, row, bias + ERROR);
+  if (counted === 'both') addAt(total, row, placeOf(row, AT.offsetCurrent) + ERROR);
+  else if (counted !== 'bias') addAt(total, row, AT.ofClass + ERROR);
 }
 
 const BORROWED = weaknessOf('borrowed');

@@ -1,4 +1,5 @@
 import type { DcErrorDemand } from '../demands/index.js';
+import type { InputCurrent } from '../parts/currents.js';
 import type { LimitKind, Parameter } from '../parts/figures.js';
 import type { OffsetReading } from '../parts/offset.js';
 import type { Reading } from '../parts/reading.js';
@@ -107,12 +108,22 @@ export interface CurrentTerm {
   readonly term: ErrorTerm;
 }
 
+/** A current of an input that does not double over temperature, and of one that does: few lists of currents, and many together with what tells the type of an input. */
+export interface ByDoubling {
+  readonly steady: CurrentTerm;
+  readonly doubling: CurrentTerm;
+}
+
+/** Each made of the current as it is read then. */
+export function byDoubling(parameter: InputCurrent, readings: Readings, term: (reading: Reading | null) => CurrentTerm): ByDoubling {
+  return { steady: term(readings.inputCurrent(parameter, false)), doubling: term(readings.inputCurrent(parameter, true)) };
+}
+
 /** Bias current through what the series resistances differ by. */
-export function biasTerm(asked: ErrorQuestion, readings: Readings): CurrentTerm {
-  const reading = readings.figure('biasCurrent');
+export function biasTerm(asked: ErrorQuestion, reading: Reading | null, { brief }: Pick<Readings, 'brief'>): CurrentTerm {
   const { matched } = resistancesOf(asked);
   const how = (): string => `through ${formatQuantity(matched / asked.noiseGain, 'Ω')}, ${gain(asked)}`;
-  return { reading, term: multiplied({ name: 'bias current', figure: 'biasCurrent', kind: 'max', unit: 'A', multiplier: matched, how }, reading, readings) };
+  return { reading, term: multiplied({ name: 'bias current', figure: 'biasCurrent', kind: 'max', unit: 'A', multiplier: matched, how }, reading, { brief }) };
 }
 
 /** Half the offset current through both resistances; `reading` is what it is read as. */

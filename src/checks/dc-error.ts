@@ -8,8 +8,8 @@ import { BriefBound, BriefNumbers } from '../verdicts/brief-finding.js';
 import type { BoundFinding, Finding, NumberFinding, Term } from '../verdicts/finding.js';
 import { composed, type Known } from './check.js';
 import { countedTerms } from './dc-error-counted.js';
-import { basisOf, SUM_TERMS, totalOf, type DcErrorFound, type Total } from './dc-error-sum.js';
-import { biasTerm, commonModeTerm, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
+import { basisOf, currentOf, SUM_TERMS, totalOf, type DcErrorFound, type Total } from './dc-error-sum.js';
+import { biasTerm, byDoubling, commonModeTerm, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
 import { rowOf, type InNumbers } from './in-numbers.js';
 
 const NUMBERS: InNumbers<DcErrorDemand, DcErrorFound> = { terms: SUM_TERMS, finding: (asked, row) => decidedBy(asked, totalOf(asked, row)) };
@@ -25,8 +25,9 @@ export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
   terms: {
     offset: offsetOf,
     drift: driftTerm,
-    bias: biasTerm,
-    offsetCurrent: (asked, readings) => offsetCurrentTerm(asked, readings.figure('offsetCurrent'), readings),
+    doubles: (_, readings) => readings.inputDoubles(),
+    bias: (asked, readings) => byDoubling('biasCurrent', readings, (reading) => biasTerm(asked, reading, readings)),
+    offsetCurrent: (asked, readings) => byDoubling('offsetCurrent', readings, (reading) => offsetCurrentTerm(asked, reading, readings)),
     offsetCurrentOfClass: (asked, readings) => offsetCurrentTerm(asked, readings.ofClass('offsetCurrent'), readings),
     bounded: (_, readings) => (worst, best) => readings.bounded(worst, best),
     commonMode: commonModeTerm,
@@ -65,7 +66,7 @@ function summed(asked: ErrorQuestion, found: Known<DcErrorFound>, { brief }: Tol
   const terms = counted.flatMap((one) => (one.kind === 'value' ? [one.term] : []));
   const missing = counted.flatMap((one) => (one.kind === 'missing' ? [one] : []));
   const corner = cornerOf(asked, fartherEnd(asked, found.offset().reading?.ratedSupply ?? asked.supply.nominal), terms);
-  return { total, told: { terms, missing, corner, cautions: sourceCaution(asked, found.bias().reading) } };
+  return { total, told: { terms, missing, corner, cautions: sourceCaution(asked, currentOf(found, 'bias').reading) } };
 }
 
 function againstLimit(asked: DcErrorDemand, { total, told }: DcErrorSum): Finding {

@@ -4,20 +4,25 @@ import { figureSlot, type Figure } from './figures.js';
 import type { Operating, PartUnderTest, Reading } from './reading.js';
 import { basisOf, bestPossible, derate, factorText, howRead, limitsFirst, nearestSupply, usable } from './select.js';
 
-type InputCurrent = 'biasCurrent' | 'offsetCurrent';
+export type InputCurrent = 'biasCurrent' | 'offsetCurrent';
 
 /**
  * Input currents over temperature: the figure rated at the lowest temperature at or above the stage's top; no stated
  * temperature means 25 °C. Of several there the strongest basis, then the worse value. If only a cooler one exists, FET inputs double per 10 K.
  */
 export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent): Reading | null {
+  return inputCurrentOf(test, parameter, () => inputDoubles(test));
+}
+
+/** The same where it is known whether currents of this input double. */
+export function inputCurrentOf(test: PartUnderTest, parameter: InputCurrent, doubles: () => boolean): Reading | null {
   const all = nearestSupply(usable(test, parameter), test.operating.nominalSupply);
   const temperatures = all.map(ratedAt);
   const covering = temperatures.filter((rated) => rated >= test.operating.hottest);
   const rated = covering.length > 0 ? Math.min(...covering) : Math.max(...temperatures);
   const figure = worstOf(limitsFirst(all.filter((one) => ratedAt(one) === rated)), test.operating);
   if (figure === undefined) return null;
-  return readCurrent(test, figure, covering.length === 0 && doubles(test) ? test.operating.hottest - rated : 0);
+  return readCurrent(test, figure, covering.length === 0 && doubles() ? test.operating.hottest - rated : 0);
 }
 
 function worstOf(figures: readonly Figure[], operating: Operating): Figure | undefined {
@@ -33,7 +38,7 @@ function ratedAt(figure: Figure): number {
 }
 
 /** FET inputs, or inputs of unknown type whose bias current at its lowest temperature is below 1 nA; of several printed there one is enough. */
-function doubles(test: PartUnderTest): boolean {
+export function inputDoubles(test: PartUnderTest): boolean {
   if (test.part.inputType !== null) return test.part.inputType === 'fet';
   const printed = usable(test, 'biasCurrent');
   const coolest = Math.min(...printed.map(ratedAt));

@@ -1,5 +1,5 @@
 import type { Basis } from './basis.js';
-import { inputCurrentReading } from './currents.js';
+import { inputCurrentOf, inputCurrentReading, inputDoubles, type InputCurrent } from './currents.js';
 import { PARAMETERS, type Parameter } from './figures.js';
 import type { Side } from './headroom.js';
 import { headroomCurve, heaviestPoint, REACH, type HeadroomQuestion, type HeadroomReading } from './headroom-curve.js';
@@ -20,6 +20,10 @@ export interface Readings {
   readonly identity: Identity;
   /** `end` names the end of a range parameter (supply voltage, temperature). */
   figure(parameter: Parameter, end?: RangeEnd): Reading | null;
+  /** An input current as one that doubles over temperature, or as one that does not: figures of its own alone. */
+  inputCurrent(parameter: InputCurrent, doubles: boolean): Reading | null;
+  /** Whether currents of this input double. */
+  inputDoubles(): boolean;
   /** The figure, else the class's worst (pessimistic) or no contribution at all (optimistic), basis borrowed. */
   figureOrClass(parameter: Parameter): Reading | null;
   /** What the class lends for want of the figure; null: nothing. */
@@ -50,6 +54,8 @@ export function readingsOf(test: PartUnderTest): Readings {
   return {
     identity: test.part,
     figure,
+    inputCurrent: (parameter, doubles) => inputCurrentOf(test, parameter, () => doubles),
+    inputDoubles: () => inputDoubles(test),
     figureOrClass: (parameter) => figure(parameter) ?? borrowed(test, parameter),
     ofClass: (parameter) => borrowed(test, parameter),
     figureOrAssumed: (parameter, assumed, end) =>

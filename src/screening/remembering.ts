@@ -22,6 +22,8 @@ export function remembering(plain: Readings, look: (trait: Trait) => Piece): Rea
     identity: plain.identity,
     brief: plain.brief,
     figure,
+    inputCurrent: (parameter, doubles) => once(parameter, doubles ? 'doubling' : 'steady', () => plain.inputCurrent(parameter, doubles)),
+    inputDoubles: () => plain.inputDoubles(),
     figureOrClass: (parameter) => figure(parameter) ?? plain.figureOrClass(parameter),
     ofClass: (parameter) => plain.ofClass(parameter),
     figureOrAssumed: (parameter, assumed, end) => figure(parameter, end) ?? plain.figureOrAssumed(parameter, assumed, end),
