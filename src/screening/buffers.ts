@@ -35,15 +35,18 @@ export function buffersFor(view: ScreenView, questions: number): Buffers {
 }
 
 /** A set that no other survey writes over. */
-export function newBuffers(view: ScreenView, questions: number): Buffers {
+export function newBuffers(view: Sized, questions: number): Buffers {
   const numbers = (): Int32Array => new Int32Array(sizeIn(view));
   return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), places: numbers(), distances: new Float64Array(sizeIn(view)), current: numbers(), codes: [] };
 }
 
-const sizeIn = (view: ScreenView): number => Math.min(view.segment, view.size);
+/** How the parts of a view come. */
+type Sized = Pick<ScreenView, 'size' | 'segment'>;
+
+const sizeIn = (view: Sized): number => Math.min(view.segment, view.size);
 
 /** Codes of one trait in this segment, read when first asked for. */
-export function codesOf(view: ScreenView, segment: number, { codes }: Buffers): (trait: number) => Int32Array {
+export function codesOf(view: Sized & Pick<ScreenView, 'codes'>, segment: number, { codes }: Buffers): (trait: number) => Int32Array {
   return (trait) => {
     const column = (codes[trait] ??= { codes: new Int32Array(sizeIn(view)), segment: -1 });
     if (column.segment !== segment) {

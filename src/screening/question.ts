@@ -44,7 +44,7 @@ export function checkQuestions(run: Judging, view: ScreenView, { circuit, outcom
   const kept = keptFor(run, view);
   const built = CHECKS.filter((check) => check.isAsked(demands)).map((check) => {
     const asked = check.asked(demands);
-    const form = check.composition !== null && outcomesOnly ? `${check.id} kept` : check.id;
+    const form = outcomesOnly && check.composition !== null ? `${check.id} of those open` : check.id;
     const before = kept.questions.get(form);
     if (before !== undefined && asked !== null && before.asked === asked && before.circuit === circuit) return before.question;
     const mark = markOf(asked, circuit);
@@ -127,6 +127,8 @@ interface KeptComposition {
   readonly terms: readonly TermQuestion[];
   /** Made for limits that change: it takes room, and of all parts of a list it is too much. */
   whole: TermQuestion | null;
+  /** How many limits were asked about where only outcomes are wanted. */
+  limits: number;
 }
 
 /** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, from wholes that are kept. */
@@ -134,8 +136,14 @@ function composedFor(run: Judging, kept: Kept, of: Composed): CheckQuestion {
   const { check, composition, outcomesOnly } = of;
   const { demands } = run;
   const found = compositionFor(run, kept, of);
-  if (!outcomesOnly) return partByPart(demands, { check, terms: found.terms, size: kept.view.size });
+  if (!outcomesOnly || !keepsWholes(found, composition.inNumbers(demands)?.side !== null)) return partByPart(demands, { check, terms: found.terms, view: kept.view });
   return composedQuestion(demands, check, (found.whole ??= wholeQuestion(demands, composition, found.terms)));
+}
+
+/** What terms make is kept where one limit comes after the other, and of a loop from the first on: a sum of numbers that is wanted once is made in less time than it is kept. */
+function keepsWholes(found: KeptComposition, isLoop: boolean): boolean {
+  found.limits += 1;
+  return isLoop || found.limits > 1;
 }
 
 function compositionFor({ demands }: Judging, kept: Kept, { check, composition, circuit }: Composed): KeptComposition {
@@ -144,7 +152,7 @@ function compositionFor({ demands }: Judging, kept: Kept, { check, composition, 
   const before = kept.compositions.get(check.id);
   if (before?.mark === mark) return before;
   const terms = composition.names.map((name) => termQuestion((ask) => question(kept, ask), (readings) => composition.term(name, demands, readings)));
-  const made = { mark, terms, whole: null };
+  const made = { mark, terms, whole: null, limits: 0 };
   kept.compositions.set(check.id, made);
   return made;
 }

@@ -8,6 +8,7 @@ import { composedQuestion, type TermQuestion, wholeQuestion } from '../../src/sc
 import { COUNTS } from '../../src/screening/digest.js';
 import { decisionTree } from '../../src/screening/decision-tree.js';
 import { partByPart } from '../../src/screening/part-by-part.js';
+import { TRAITS, type Trait } from '../../src/parts/traits.js';
 import type { Finding } from '../../src/verdicts/finding.js';
 
 interface Sum {
@@ -84,15 +85,18 @@ describe('a check put together from terms', () => {
   it('is part by part what it is by combinations', () => {
     const terms = [termOf(0, ONE, [0.1, 0.1, 0.1]), termOf(1, [0, 0.5], [0, 0.5])];
     const check = sumCheck({ required: 0.15, because: '' });
-    const question = partByPart(DEMANDS, { check: check.sealed, terms, size: 2 * PARTS.length });
-    const columns = [0, 1].map((trait) => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0)));
+    const codesIn = (trait: number): Int32Array => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0));
+    const view = { size: 2 * PARTS.length, segment: PARTS.length, codes: (trait: string, _: number, into: Int32Array) => into.set(codesIn(TRAITS.indexOf(trait as Trait))) };
+    const question = partByPart(DEMANDS, { check: check.sealed, terms, view });
+    const columns = [0, 1].map(codesIn);
     const into = new Int32Array(PARTS.length);
     for (const first of [0, PARTS.length]) {
       question.classify({ first, count: PARTS.length, codes: (trait) => columns[trait] ?? into }, into);
       into.forEach((answer) => question.settle(answer));
-      expect([...into].map((answer) => question.digests.pass(answer)?.margin ?? null)).toEqual(answered(sumCheck({ required: 0.15, because: '' }), terms).passes);
       expect([...into].map((answer) => question.digests.counts[answer])).toEqual([0, COUNTS.fail, COUNTS.unknown, COUNTS.fail, COUNTS.unknown, COUNTS.unknown]);
     }
+    // Also of a part in a segment that was not asked about last.
+    for (const first of [0, PARTS.length]) expect(PARTS.map((_, at) => question.digests.pass(first + at)?.margin ?? null)).toEqual(answered(sumCheck({ required: 0.15, because: '' }), terms).passes);
     // Settled parts are not added up again; one that passes is, for what it is ranked by.
     const before = check.calls.whole;
     into.forEach((answer) => question.settle(answer));
