@@ -3,14 +3,14 @@ import type { JudgedPart } from '../screening/index.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import { aboutPart, more, partName } from './fit-table.js';
 import { paragraph } from './layout.js';
+import { likelyFirst } from './likely-first.js';
 import { toned, type Style } from './style.js';
 import { unknownText } from './verdict-words.js';
 import { checkWords } from './words.js';
 
 /** What cannot be decided, likely parts first: what is missing, and what it would have to be. */
 export function undecidedLines({ undecided }: Report, style: Style): string[] {
-  const ordered = [...undecided].sort((a, b) => Number(b.likely) - Number(a.likely));
-  const shown = ordered.slice(0, style.top);
+  const shown = likelyFirst(undecided, style.top);
   return [
     ...unbuiltLines(undecided, style),
     ...shown.flatMap((one) => undecidedPart(one, style)),
@@ -18,9 +18,9 @@ export function undecidedLines({ undecided }: Report, style: Style): string[] {
   ];
 }
 
-/** A check this version lacks leaves every part open: said once. */
-function unbuiltLines(undecided: readonly JudgedPart[], style: Style): string[] {
-  const checks = new Set(undecided.flatMap(({ verdicts }) => verdicts.filter(isUnbuilt).map(({ check }) => checkWords(check))));
+/** A check this version lacks leaves every part open: said once, and any of them tells. */
+function unbuiltLines([first]: readonly JudgedPart[], style: Style): string[] {
+  const checks = new Set(first?.verdicts.filter(isUnbuilt).map(({ check }) => checkWords(check)));
   return checks.size === 0 ? [] : paragraph(`This version does not judge ${[...checks].join(', ')}: while the stage asks for it no part is proven to fit.`, style, { lead: ' ' });
 }
 

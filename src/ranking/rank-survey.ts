@@ -38,7 +38,7 @@ export function rankSurveyed(survey: Surveyed, order: Order = 'merit'): RankedSu
 
 /** A part that fits, as its digests tell of it. */
 function fitting({ fit, proof, current }: PlacedFit, judgedAt: SurveyedCatalog['judgedAt']): JudgedPart {
-  return surveyedPart({ get part() { return fit.view.part(fit.position); }, outcome: 'fits', proof, current, deciding: [] }, () => judgedAt(fit));
+  return surveyedPart({ get part() { return fit.view.part(fit.position); }, outcome: 'fits', proof, current, deciding: [], likely: false }, () => judgedAt(fit));
 }
 
 /** Both in one, with nothing looked at yet: a spread would ask every getter. */

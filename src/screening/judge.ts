@@ -107,11 +107,11 @@ function decidingOf(verdicts: readonly Verdict[], outcome: PartOutcome): string[
   return verdicts.filter((verdict) => verdict.outcome === decisive).map(({ check }) => check);
 }
 
-/** Likely: with every missing figure taken from its class, each generic set of the class in turn, all checks would pass. */
-function isLikely(run: Judging, part: Part): boolean {
+/** Likely, of an undecided part: with every missing figure taken from its class, each generic set of the class in turn, all checks would pass. */
+export function isLikely(run: Judging, part: Part): boolean {
   if (run.demands.unbuilt.length > 0 || run.strict) return false;
   const completed = completions(part, part.class === null ? [] : (run.sets.get(part.class) ?? []));
-  return completed.length > 0 && completed.every((whole) => passes(run, readingsOf({ part: whole, ...rulesFor(run, whole), outlook: 'pessimistic' })));
+  return completed.length > 0 && completed.every((whole) => passes(run, readingsOf({ part: whole, ...rulesFor(run, whole), outlook: 'pessimistic', brief: true })));
 }
 
 function passes(run: Judging, readings: Readings): boolean {

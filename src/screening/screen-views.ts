@@ -1,7 +1,8 @@
 import type { Demands } from '../demands/index.js';
+import type { Part } from '../parts/part.js';
 import type { ScreenView } from '../parts/screen-view.js';
 import { decidingIn } from './deciding.js';
-import { judgePart, type Judging } from './judge.js';
+import { isLikely, judgePart, type Judging } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
 import { lazyList } from './lazy-list.js';
 import { nearestOf } from './nearest.js';
@@ -76,7 +77,9 @@ function listedAt(run: Judging, { views, judgedAt, circuit }: Listing): (outcome
   return (outcome) => ({ view, position }) => {
     const decided = known.get(view)?.(position, outcome === 'undecided' ? 'unknown' : 'fail');
     if (decided === undefined) return judgedAt({ view, position });
-    return surveyedPart({ get part() { return view.part(position); }, outcome, proof: null, ...decided }, () => judgedAt({ view, position }));
+    const part = (): Part => view.part(position);
+    const found = { get part() { return part(); }, get likely() { return outcome === 'undecided' && isLikely(run, part()); }, outcome, proof: null, ...decided };
+    return surveyedPart(found, () => judgedAt({ view, position }));
   };
 }
 

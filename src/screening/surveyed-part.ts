@@ -1,7 +1,7 @@
 import type { JudgedPart } from './judged-part.js';
 
 /** What a survey knows of a part. */
-export type Surveyed = Pick<JudgedPart, 'part' | 'outcome' | 'proof' | 'deciding' | 'current'>;
+export type Surveyed = Pick<JudgedPart, 'part' | 'outcome' | 'proof' | 'deciding' | 'current' | 'likely'>;
 
 /** A part as a survey knows it: what is listed of it is at hand, and it is judged in words when more is looked at. */
 export function surveyedPart(known: Surveyed, judge: () => JudgedPart): JudgedPart {
@@ -11,7 +11,7 @@ export function surveyedPart(known: Surveyed, judge: () => JudgedPart): JudgedPa
     get proof() { return known.proof; },
     get deciding() { return known.deciding; },
     get current() { return known.current; },
-    get likely() { return judge().likely; },
+    get likely() { return known.likely; },
     get verdicts() { return judge().verdicts; },
     get confirm() { return judge().confirm; },
     get hazards() { return judge().hazards; },

@@ -2,6 +2,7 @@ import type { JudgedPart } from '../../../screening/index.js';
 import type { Verdict } from '../../../verdicts/verdict.js';
 import { compared } from '../../amounts.js';
 import { aboutPart } from '../../fit-table.js';
+import { likelyFirst } from '../../likely-first.js';
 import { comparisonText, cornerText, shortfall, unknownText } from '../../verdict-words.js';
 import { checkWords, counted } from '../../words.js';
 import { EMPTY, figure, marked, quoted, words } from '../cell.js';
@@ -47,7 +48,7 @@ function missRow(place: Place, { part }: JudgedPart, verdict: Verdict): PageRow 
 
 function undecidedTable(place: Place): Html {
   const { undecided } = place.stage.report;
-  const shown = [...undecided].sort((a, b) => Number(b.likely) - Number(a.likely)).slice(0, place.review.top);
+  const shown = likelyFirst(undecided, place.review.top);
   const rows = shown.flatMap((one) => one.verdicts.filter(({ outcome }) => outcome === 'unknown').map((verdict) => openRow(place, one, verdict)));
   const table = tableOf({
     id: idOf(place, 'undecided'),
