@@ -108,7 +108,7 @@ export interface CurrentTerm {
   readonly term: ErrorTerm;
 }
 
-/** A current of an input that does not double over temperature, and of one that does: few lists of currents, and many together with what tells the type of an input. */
+/** A current as it is of an input whose currents do not double over temperature, and of one whose do: lists print few of either, and many together with what tells the type of an input. */
 export interface ByDoubling {
   readonly steady: CurrentTerm;
   readonly doubling: CurrentTerm;

@@ -35,7 +35,7 @@ export function buffersFor(view: ScreenView, questions: number): Buffers {
 }
 
 /** A set that no other survey writes over. */
-export function newBuffers(view: Sized, questions: number): Buffers {
+export function newBuffers(view: ScreenView, questions: number): Buffers {
   const numbers = (): Int32Array => new Int32Array(sizeIn(view));
   return { answers: Array.from({ length: questions }, numbers), sums: numbers(), open: numbers(), places: numbers(), distances: new Float64Array(sizeIn(view)), current: numbers(), codes: [] };
 }
@@ -46,7 +46,7 @@ type Sized = Pick<ScreenView, 'size' | 'segment'>;
 const sizeIn = (view: Sized): number => Math.min(view.segment, view.size);
 
 /** Codes of one trait in this segment, read when first asked for. */
-export function codesOf(view: Sized & Pick<ScreenView, 'codes'>, segment: number, { codes }: Buffers): (trait: number) => Int32Array {
+export function codesOf(view: Sized & Pick<ScreenView, 'codes'>, segment: number, { codes }: Pick<Buffers, 'codes'>): (trait: number) => Int32Array {
   return (trait) => {
     const column = (codes[trait] ??= { codes: new Int32Array(sizeIn(view)), segment: -1 });
     if (column.segment !== segment) {

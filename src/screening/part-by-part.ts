@@ -3,7 +3,7 @@ import type { Demands } from '../demands/index.js';
 import type { ScreenView } from '../parts/screen-view.js';
 import { BASES, type Basis } from '../parts/basis.js';
 import { decideBriefly, outcomeOf, type BriefVerdict } from '../verdicts/decide.js';
-import { codesOf, growing, newBuffers, segmentOf, type AskedParts } from './buffers.js';
+import { codesOf, growing, segmentOf, type AskedParts } from './buffers.js';
 import type { TermQuestion } from './composed-question.js';
 import { digestsByPart, type Counted } from './digest.js';
 import { numberTables, type BothFindings } from './number-tables.js';
@@ -96,7 +96,7 @@ function askedColumns(terms: readonly TermQuestion[]) {
 
 /** The terms of any one part, in one outlook and then in the other; each looked up when it is asked for. */
 function onePart(terms: readonly TermQuestion[], view: Composed['view']) {
-  const buffers = newBuffers(view, 0);
+  const buffers = { codes: [] };
   const single = terms.map(() => new Int32Array(1));
   let at = 0;
   let codes: (trait: number) => Int32Array = () => new Int32Array(0);

@@ -131,19 +131,17 @@ interface KeptComposition {
   limits: number;
 }
 
-/** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, from wholes that are kept. */
+/** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, and of a loop from the first on, from wholes that are kept. */
 function composedFor(run: Judging, kept: Kept, of: Composed): CheckQuestion {
   const { check, composition, outcomesOnly } = of;
   const { demands } = run;
   const found = compositionFor(run, kept, of);
-  if (!outcomesOnly || !keepsWholes(found, composition.inNumbers(demands)?.side !== null)) return partByPart(demands, { check, terms: found.terms, view: kept.view });
+  if (outcomesOnly) found.limits += 1;
+  const isLoop = composition.inNumbers(demands)?.side !== null;
+  // A sum of numbers that is wanted once is made in less time than it is kept.
+  const isKept = outcomesOnly && (isLoop || found.limits > 1);
+  if (!isKept) return partByPart(demands, { check, terms: found.terms, view: kept.view });
   return composedQuestion(demands, check, (found.whole ??= wholeQuestion(demands, composition, found.terms)));
-}
-
-/** What terms make is kept where one limit comes after the other, and of a loop from the first on: a sum of numbers that is wanted once is made in less time than it is kept. */
-function keepsWholes(found: KeptComposition, isLoop: boolean): boolean {
-  found.limits += 1;
-  return isLoop || found.limits > 1;
 }
 
 function compositionFor({ demands }: Judging, kept: Kept, { check, composition, circuit }: Composed): KeptComposition {
