@@ -13,26 +13,45 @@ export interface PlacedFit extends Placed {
 }
 
 export function placedFit(fit: SurveyedFit, judgedAt: SurveyedCatalog['judgedAt']): PlacedFit {
-  const { view, current } = fit;
-  let [verdicts, merit]: [readonly Digest[] | null, Merit | null] = [null, null];
-  const part = partOf(fit);
-  return {
-    fit, current, part,
-    get verdicts() { return (verdicts ??= fit.digests.filter((digest) => digest !== null)); },
-    proof: fit.isGuaranteed ? 'limits' : 'typical',
-    get merit() { return (merit ??= meritAt(view, fit, priceInEuro({ part }))); },
-    // With nothing but limits behind it there is nothing to confirm.
-    get confirm() { return fit.isGuaranteed ? [] : judgedAt(fit).confirm; },
-  };
+  return new LazilyPlaced(fit, judgedAt);
 }
 
-function partOf({ view, position, price, family }: SurveyedFit): PlacedFit['part'] {
-  return {
-    tier: view.tier,
-    price: piece(view, 'price', price).price,
-    family: piece(view, 'family', family).family,
-    get id() { return view.id(position); },
-  };
+/** A class: a sweep makes every part that fits one at each value, and an object with getters of its own is dear to make. */
+class LazilyPlaced implements PlacedFit {
+  readonly fit: SurveyedFit;
+  readonly current: number | null;
+  readonly proof: Placed['proof'];
+  private readonly judgedAt: SurveyedCatalog['judgedAt'];
+  private knownPart: PlacedFit['part'] | null = null;
+  private knownVerdicts: readonly Digest[] | null = null;
+  private knownMerit: Merit | null = null;
+
+  constructor(fit: SurveyedFit, judgedAt: SurveyedCatalog['judgedAt']) {
+    this.fit = fit;
+    this.current = fit.current;
+    this.proof = fit.isGuaranteed ? 'limits' : 'typical';
+    this.judgedAt = judgedAt;
+  }
+
+  get part(): PlacedFit['part'] { return (this.knownPart ??= new SurveyedIdentity(this.fit)); }
+  get verdicts(): readonly Digest[] { return (this.knownVerdicts ??= this.fit.digests.filter((digest) => digest !== null)); }
+  get merit(): Merit { return (this.knownMerit ??= meritAt(this.fit.view, this.fit, priceInEuro(this))); }
+  // With nothing but limits behind it there is nothing to confirm.
+  get confirm(): Placed['confirm'] { return this.fit.isGuaranteed ? [] : this.judgedAt(this.fit).confirm; }
+}
+
+/** Who a surveyed part is, looked up when it is asked. */
+class SurveyedIdentity implements Pick<Part, 'id' | 'tier' | 'price' | 'family'> {
+  private readonly fit: SurveyedFit;
+
+  constructor(fit: SurveyedFit) {
+    this.fit = fit;
+  }
+
+  get id(): string { return this.fit.view.id(this.fit.position); }
+  get tier(): Part['tier'] { return this.fit.view.tier; }
+  get price(): Part['price'] { return piece(this.fit.view, 'price', this.fit.price).price; }
+  get family(): Part['family'] { return piece(this.fit.view, 'family', this.fit.family).family; }
 }
 
 function piece<Name extends 'price' | 'family'>(view: ScreenView, trait: Name & Trait, code: number): Pick<Part, Name> {
