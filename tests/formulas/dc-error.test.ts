@@ -1,5 +1,6 @@
 import { describe } from 'vitest';
 import {
+  addWorstCase,
   biasCurrentAt,
   biasError,
   followerGainError,
@@ -16,6 +17,7 @@ describe('DC error', () => {
   example('biasCurrentAt(1e-12, 25, 85)', () => biasCurrentAt(1e-12, 25, 85), 64e-12);
   example('biasError', () => biasError({ bias: 1e-9, offset: 0.2e-9, plus: 10e3, minus: 9e3 }), 2.9e-6);
   example('worstCaseSum([0.003, -0.004])', () => worstCaseSum([0.003, -0.004]), 0.007);
+  example('addWorstCase(0.003, -0.004)', () => addWorstCase(0.003, -0.004), 0.007);
   example('rootSumSquare([0.003, 0.004, 0.012])', () => rootSumSquare([0.003, 0.004, 0.012]), 0.013);
   const errors = {
     offset: 0.5e-3,
