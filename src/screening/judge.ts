@@ -41,8 +41,8 @@ export function lendersOf(source: Pick<PartSource, 'parts' | 'screening'>): read
   return source.screening?.generic ?? source.parts;
 }
 
-/** Every check of one part; none stops another. */
-export function judgePart(run: Judging, part: Part): JudgedPart {
+/** Every check of one part; none stops another. `known`: whether it is likely, where that was found out before. */
+export function judgePart(run: Judging, part: Part, known: Partial<Pick<JudgedPart, 'likely'>> = {}): JudgedPart {
   const verdicts = verdictsOf(run, part);
   const outcome = outcomeOf(verdicts);
   const worst = readingsOf({ part, ...rulesFor(run, part), outlook: 'pessimistic' });
@@ -50,7 +50,7 @@ export function judgePart(run: Judging, part: Part): JudgedPart {
     part,
     outcome,
     proof: outcome === 'fits' ? (verdicts.every((verdict) => verdict.basis === 'guaranteed') ? 'limits' : 'typical') : null,
-    likely: outcome === 'undecided' && isLikely(run, part),
+    likely: outcome === 'undecided' && (known.likely ?? isLikely(run, part)),
     verdicts,
     deciding: decidingOf(verdicts, outcome),
     confirm: outcome === 'fits' ? confirmations(verdicts) : [],

@@ -1,5 +1,4 @@
 import type { Demands } from '../demands/index.js';
-import type { Part } from '../parts/part.js';
 import type { ScreenView } from '../parts/screen-view.js';
 import { decidingIn } from './deciding.js';
 import { isLikely, judgePart, type Judging } from './judge.js';
@@ -34,10 +33,11 @@ export interface SurveyedCatalog extends Screened {
 /** The same answer as `screen` over all parts of the views, in their order. */
 export function screenViews(run: Judging, views: readonly ScreenView[], request: SurveyRequest): SurveyedCatalog {
   const surveys = views.filter(({ size }) => size > 0).map((view) => survey(run, view, request));
-  const judgedAt = judgeOnce(run);
+  const once = judgeOnce(run);
+  const { judgedAt } = once;
   const places = surveys.flatMap(({ fits }) => fits);
   const near = surveys.flatMap(({ view, nearest }) => nearest.map(({ position }) => judgedAt({ view, position })));
-  const listed = request.outcomesOnly === true ? () => judgedAt : listedAt(run, { views, judgedAt, circuit: request.circuit });
+  const listed = request.outcomesOnly === true ? () => judgedAt : listedAt(run, { views, ...once, circuit: request.circuit });
   return {
     places,
     judgedAt,
@@ -49,15 +49,31 @@ export function screenViews(run: Judging, views: readonly ScreenView[], request:
   };
 }
 
-/** A part that several lists show is read and judged once. */
-function judgeOnce(run: Judging): SurveyedCatalog['judgedAt'] {
-  const known = new Map<ScreenView, Map<number, JudgedPart>>();
-  return ({ view, position }) => {
-    const ofView = known.get(view) ?? new Map<number, JudgedPart>();
+/** A part at a place, read and judged in words once, however many lists show it. */
+interface JudgedOnce {
+  readonly judgedAt: SurveyedCatalog['judgedAt'];
+  /** Whether an undecided part is likely to fit: no words are made for that. */
+  readonly likelyAt: (place: Parameters<SurveyedCatalog['judgedAt']>[0]) => boolean;
+}
+
+function judgeOnce(run: Judging): JudgedOnce {
+  const known = new Map<ScreenView, Map<number, { judged: JudgedPart | null; likely?: boolean }>>();
+  const found = ({ view, position }: Parameters<SurveyedCatalog['judgedAt']>[0]) => {
+    const ofView = known.get(view) ?? new Map<number, { judged: JudgedPart | null; likely?: boolean }>();
     known.set(view, ofView);
-    const judged = ofView.get(position) ?? judgePart(run, view.part(position));
-    ofView.set(position, judged);
-    return judged;
+    const one = ofView.get(position) ?? { judged: null };
+    ofView.set(position, one);
+    return one;
+  };
+  return {
+    judgedAt(place) {
+      const one = found(place);
+      return (one.judged ??= judgePart(run, place.view.part(place.position), one));
+    },
+    likelyAt(place) {
+      const one = found(place);
+      return (one.likely ??= one.judged?.likely ?? isLikely(run, place.view.part(place.position)));
+    },
   };
 }
 
@@ -66,19 +82,18 @@ interface Positions {
   readonly positions: (one: Survey) => ArrayLike<number>;
 }
 
-interface Listing extends Pick<SurveyedCatalog, 'judgedAt'> {
+interface Listing extends JudgedOnce {
   readonly views: readonly ScreenView[];
   readonly circuit: string;
 }
 
 /** A part that does not fit or is open, as the survey knows it: most lists tell of it only which checks it fails or leaves open. */
-function listedAt(run: Judging, { views, judgedAt, circuit }: Listing): (outcome: 'undecided' | 'does-not-fit') => SurveyedCatalog['judgedAt'] {
+function listedAt(run: Judging, { views, judgedAt, likelyAt, circuit }: Listing): (outcome: 'undecided' | 'does-not-fit') => SurveyedCatalog['judgedAt'] {
   const known = new Map(views.filter(({ size }) => size > 0).map((view) => [view, decidingIn(run, view, circuit)]));
   return (outcome) => ({ view, position }) => {
     const decided = known.get(view)?.(position, outcome === 'undecided' ? 'unknown' : 'fail');
     if (decided === undefined) return judgedAt({ view, position });
-    const part = (): Part => view.part(position);
-    const found = { get part() { return part(); }, get likely() { return outcome === 'undecided' && isLikely(run, part()); }, outcome, proof: null, ...decided };
+    const found = { get part() { return view.part(position); }, get likely() { return outcome === 'undecided' && likelyAt({ view, position }); }, outcome, proof: null, ...decided };
     return surveyedPart(found, () => judgedAt({ view, position }));
   };
 }
