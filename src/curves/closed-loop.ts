@@ -1,5 +1,5 @@
 import type { Loop } from '../checks/phase-margin-loop.js';
-import { networksOf } from '../checks/phase-margin-opened.js';
+import { networksOf } from '../checks/phase-margin-factors.js';
 import { add, divide, magnitude, multiply, subtract, type Complex } from '../formulas/complex.js';
 import { feedbackFactor } from '../formulas/feedback-loop.js';
 import { pinTransfers } from '../formulas/pin-network.js';

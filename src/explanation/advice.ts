@@ -1,5 +1,5 @@
 import type { Probe } from '../screening/index.js';
-import { standingOf } from '../verdicts/decide.js';
+import { standingOf } from '../verdicts/standing.js';
 import type { SingleFinding } from '../verdicts/finding.js';
 import type { Errand } from './boundary.js';
 import { setting, type Advice, type Change, type Changing } from './changing.js';

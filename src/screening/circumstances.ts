@@ -5,7 +5,7 @@ import { judgeRipple } from '../checks/supply-ripple.js';
 import type { Demands } from '../demands/index.js';
 import type { Part } from '../parts/part.js';
 import type { Readings } from '../parts/readings.js';
-import { standingOf } from '../verdicts/decide.js';
+import { standingOf } from '../verdicts/standing.js';
 import type { Finding, Missing } from '../verdicts/finding.js';
 
 /** What the stage says can happen to it, and what a part makes of it; null, or what is missing, where no figure says. SI units. */

@@ -1,7 +1,8 @@
 import { weakest, type Basis } from '../parts/basis.js';
-import { equal, marginOf, meets, spareOf } from './compare.js';
-import type { Finding, NumberFinding, Remedy, SingleFinding, WordFinding } from './finding.js';
+import { equal, marginOf, spareOf } from './compare.js';
+import type { Finding, Remedy, SingleFinding, WordFinding } from './finding.js';
 import { remarksOf, remediesOf } from './remarks.js';
+import { outcomeOf, standingOf, type Standing } from './standing.js';
 import type { Outcome, Reason, Verdict } from './verdict.js';
 
 /** What decide needs to know of a check to word its verdict. */
@@ -11,11 +12,6 @@ export interface CheckIdentity {
   /** False for head-rooms and temperatures: a ratio says nothing there. */
   readonly hasMargin: boolean;
 }
-
-/** Share of a limit that borrowed terms may make up in a pass. */
-const BORROWED_SHARE = 0.1;
-
-type Standing = 'pass' | 'fail' | 'open';
 
 /** The only place findings become verdicts: pass on both readings passes, fail on the best reading fails, all else is unknown. */
 export function decide(check: CheckIdentity, pessimistic: Finding, optimistic: Finding): Verdict {
@@ -41,33 +37,7 @@ export function decideBriefly(check: CheckIdentity, pessimistic: Finding, optimi
   return numbersOf(check, { outcome, shown: shownOf(shown, outcome), basis: basisBehind(pessimistic, shown) });
 }
 
-/** What becomes of both readings. */
-export function outcomeOf(pessimistic: Finding, optimistic: Finding): Outcome {
-  const worst = standingOf(pessimistic);
-  const best = optimistic === pessimistic ? worst : standingOf(optimistic);
-  return worst === 'pass' && best === 'pass' ? 'pass' : best === 'fail' && worst !== 'pass' ? 'fail' : 'unknown';
-}
-
 const basisBehind = (pessimistic: Finding, shown: Exclude<Finding, WordFinding>): Basis => basisOf(pessimistic.kind === 'words' || pessimistic.kind === 'undecided' ? shown : pessimistic);
-
-/** How one reading stands by itself. */
-export function standingOf(finding: Finding): Standing {
-  if (finding.kind === 'numbers') return standingOfNumbers(finding);
-  if (finding.kind === 'bound') return meets(finding.required, finding.known, finding.sense) ? 'open' : 'fail';
-  if (finding.kind === 'words') return finding.required.some((word) => same(word, finding.offered)) ? 'pass' : 'fail';
-  if (finding.kind === 'undecided') return 'open';
-  const standings = finding.findings.map(standingOf);
-  if (standings.includes('fail')) return 'fail';
-  return standings.includes('open') ? 'open' : 'pass';
-}
-
-function standingOfNumbers({ required, offered, sense, borrowed = 0 }: NumberFinding): Standing {
-  if (!meets(required, offered, sense)) return 'fail';
-  const tooMuch = borrowed > BORROWED_SHARE * Math.abs(required) * (1 + 1e-9);
-  return tooMuch ? 'open' : 'pass';
-}
-
-const same = (a: string, b: string): boolean => a.trim().toLowerCase() === b.trim().toLowerCase();
 
 /** Of the vertices that decide, the one of least spare; one with a number before one with a bound. */
 function shownOf(finding: Exclude<Finding, WordFinding>, outcome: Outcome): SingleFinding {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { decide, standingOf } from '../../src/verdicts/decide.js';
+import { decide } from '../../src/verdicts/decide.js';
+import { standingOf } from '../../src/verdicts/standing.js';
 import type { BoundFinding, Finding, NumberFinding, SingleFinding, UndecidedFinding } from '../../src/verdicts/finding.js';
 
 const CHECK = { id: 'dc-error', title: 'DC error', hasMargin: true };
