@@ -6,7 +6,7 @@ import type { Reading } from '../parts/reading.js';
 import type { Readings } from '../parts/readings.js';
 import type { Known } from './check.js';
 import { isNothing, resistancesOf, supplyMultiplier, type ByDoubling, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
-import type { InNumbers, NumbersOf, Row } from './in-numbers.js';
+import { numberAt, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
 
 /** What the sum is put together from. */
 export interface DcErrorFound {
@@ -54,7 +54,7 @@ const BY_DOUBLING: NumbersOf<Asked, ByDoubling> = {
 };
 
 function writeCurrent({ reading, term }: CurrentTerm, row: Row, at: number): void {
-  writeReading(reading, row, at);
+  writeReading(reading, { row, at });
   writeAddend(term, row, at + ERROR);
 }
 
@@ -75,18 +75,13 @@ export const SUM_TERMS: InNumbers<Asked, DcErrorFound>['terms'] = {
   offsetCurrentOfClass: CURRENT,
   bounded: { width: 1, write: (_, bounded, { row, at }) => void (row[at] = bounded(1, 0)) },
   commonMode: ADDEND,
-  supply: { width: 2, write: (_, reading, { row, at }) => writeReading(reading, row, at) },
+  supply: { width: 2, write: (_, reading, to) => writeReading(reading, to) },
   output: ADDEND,
 };
 
 function writeAddend(one: ErrorTerm, row: Row, at: number): void {
   row[at] = one.kind === 'value' ? one.term.value : one.kind === 'missing' ? NaN : 0;
   row[at + 1] = one.kind === 'value' ? weaknessOf(one.term.basis) : 0;
-}
-
-function writeReading(reading: Reading | null, row: Row, at: number): void {
-  row[at] = reading?.value ?? NaN;
-  row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
 }
 
 /** A current as this input has it. */
@@ -96,7 +91,7 @@ export function currentOf(found: Known<Pick<DcErrorFound, 'doubles' | 'bias' | '
 }
 
 /** The same in numbers: where it stands. */
-const placeOf = (row: Row, place: number): number => (at(row, AT.doubles) === 1 ? place + DOUBLING : place);
+const placeOf = (row: Row, place: number): number => (numberAt(row, AT.doubles) === 1 ? place + DOUBLING : place);
 
 /** Which terms stand for the currents: the two of the part, or what is known of them. */
 export type CurrentsCounted = 'none' | 'both' | 'bias' | 'of-class' | 'bias-and-class' | 'whole-bias';
@@ -108,23 +103,23 @@ export type CurrentsCounted = 'none' | 'both' | 'bias' | 'of-class' | 'bias-and-
 export function currentsIn(asked: ErrorQuestion, row: Row): CurrentsCounted {
   const { sum, matched, half } = resistancesOf(asked);
   if (sum === 0) return 'none';
-  if (!Number.isNaN(at(row, placeOf(row, AT.offsetCurrent)))) return 'both';
-  const bias = at(row, placeOf(row, AT.bias));
+  if (!Number.isNaN(numberAt(row, placeOf(row, AT.offsetCurrent)))) return 'both';
+  const bias = numberAt(row, placeOf(row, AT.bias));
   // Matched pins leave nothing of the bias current to charge, but what they differ by is not known then.
   if (Number.isNaN(bias)) return isNothing(matched) ? 'of-class' : 'bias';
-  const withClass = matched * bias + half * at(row, AT.ofClass);
+  const withClass = matched * bias + half * numberAt(row, AT.ofClass);
   return withClass < asked.noiseGain * sum * bias ? 'bias-and-class' : 'whole-bias';
 }
 
 /** What the bias current adds where it stands for the offset current too, V. */
 export function wholeBiasIn(asked: ErrorQuestion, row: Row): number {
   const { sum, matched } = resistancesOf(asked);
-  const bias = at(row, placeOf(row, AT.bias));
-  return at(row, AT.isWorst) === 1 ? asked.noiseGain * sum * bias : matched * bias;
+  const bias = numberAt(row, placeOf(row, AT.bias));
+  return numberAt(row, AT.isWorst) === 1 ? asked.noiseGain * sum * bias : matched * bias;
 }
 
 /** No drift is charged beside an offset rated over temperature. */
-export const hasDrift = (row: Row): boolean => at(row, AT.isOver) === 0;
+export const hasDrift = (row: Row): boolean => numberAt(row, AT.isOver) === 0;
 
 /** The sum in numbers, V. */
 export interface Total {
@@ -145,8 +140,8 @@ export function totalOf(asked: ErrorQuestion, row: Row): Total {
   if (hasDrift(row)) addAt(total, row, AT.drift);
   addCurrents(total, asked, row);
   addAt(total, row, AT.commonMode);
-  const move = at(row, AT.supplyMultiplier);
-  if (!isNothing(move)) add(total, move / at(row, AT.rejection), at(row, AT.rejectionWeakness));
+  const move = numberAt(row, AT.supplyMultiplier);
+  if (!isNothing(move)) add(total, move / numberAt(row, AT.rejection), numberAt(row, AT.rejectionWeakness));
   addAt(total, row, AT.output);
   return total;
 }
@@ -156,7 +151,7 @@ function addCurrents(total: Total, asked: ErrorQuestion, row: Row): void {
   if (counted === 'none') return;
   const bias = placeOf(row, AT.bias);
   if (counted === 'whole-bias') {
-    add(total, wholeBiasIn(asked, row), at(row, bias + WEAKNESS));
+    add(total, wholeBiasIn(asked, row), numberAt(row, bias + WEAKNESS));
     return;
   }
   if (counted !== 'of-class') addAt(total, row, bias + ERROR);
@@ -166,10 +161,8 @@ function addCurrents(total: Total, asked: ErrorQuestion, row: Row): void {
 
 const BORROWED = weaknessOf('borrowed');
 
-const at = (row: Row, place: number): number => row[place] ?? NaN;
-
 /** A volt figure with its weakness beside it. */
-const addAt = (total: Total, row: Row, place: number): void => add(total, at(row, place), at(row, place + 1));
+const addAt = (total: Total, row: Row, place: number): void => add(total, numberAt(row, place), numberAt(row, place + 1));
 
 function add(total: Total, value: number, weakness: number): void {
   if (Number.isNaN(value)) {

@@ -1,3 +1,4 @@
+import { weaknessOf, type Basis } from '../parts/basis.js';
 import type { BoundFinding, NumberFinding } from '../verdicts/finding.js';
 import type { Known, Unlimited } from './check.js';
 
@@ -21,6 +22,15 @@ export interface InNumbers<Asked, Found> {
   readonly finding: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
   /** The same but for the number offered: any on the same side of the limit, where that takes less work. */
   readonly side?: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
+}
+
+/** A number of a row; not a number: not known. */
+export const numberAt = (row: Row, place: number): number => row[place] ?? NaN;
+
+/** A reading, or anything with a value and a basis, as two numbers: the value (not a number: none), and how weak its basis is. */
+export function writeReading(one: { readonly value: number; readonly basis: Basis } | null, { row, at }: { readonly row: Row; readonly at: number }): void {
+  row[at] = one?.value ?? NaN;
+  row[at + 1] = weaknessOf(one?.basis ?? 'guaranteed');
 }
 
 /** The row of one part whose terms are at hand. */

@@ -4,7 +4,7 @@ import { BriefNumbers } from '../verdicts/brief-finding.js';
 import { meets } from '../verdicts/compare.js';
 import type { NumberFinding } from '../verdicts/finding.js';
 import type { HeadroomFound } from './output-headroom.js';
-import type { InNumbers, Row } from './in-numbers.js';
+import { numberAt, writeReading, type InNumbers, type Row } from './in-numbers.js';
 
 /** Vertices that can decide are one or two of a stage's; a part with more is told from its terms. */
 const MOST = 3;
@@ -19,18 +19,11 @@ export const HEADROOM_NUMBERS: InNumbers<HeadroomDemand, HeadroomFound> = {
     offset: {
       width: 3,
       write(_, { term, overTemperature }, { row, at }) {
-        row[at] = term?.value ?? NaN;
-        row[at + 1] = weaknessOf(term?.basis ?? 'guaranteed');
+        writeReading(term, { row, at });
         row[at + 2] = overTemperature ? 1 : 0;
       },
     },
-    drift: {
-      width: 2,
-      write(_, term, { row, at }) {
-        row[at] = term?.value ?? NaN;
-        row[at + 1] = weaknessOf(term?.basis ?? 'guaranteed');
-      },
-    },
+    drift: { width: 2, write: (_, term, to) => writeReading(term, to) },
   },
   finding: atVertices,
 };
@@ -53,22 +46,20 @@ export function shareOf(offset: number, drift: number): number {
 
 /** Of the vertices the one that is told: of least spare, and one that fails before one that holds. */
 function atVertices({ unit, sense }: HeadroomDemand, row: Row): NumberFinding | null {
-  const count = at(row, AT.vertices);
+  const count = numberAt(row, AT.vertices);
   if (Number.isNaN(count)) return null;
-  const [offset, drift] = [at(row, AT.offset), at(row, AT.isOver) === 1 ? NaN : at(row, AT.drift)];
+  const [offset, drift] = [numberAt(row, AT.offset), numberAt(row, AT.isOver) === 1 ? NaN : numberAt(row, AT.drift)];
   const share = shareOf(offset, drift);
   let required = 0;
   let offered = 0;
   let holds = true;
   for (let place = 0; place < count; place += 1) {
-    const room = at(row, AT.places + 2 * place);
-    const needed = at(row, AT.places + 2 * place + 1) + share;
+    const room = numberAt(row, AT.places + 2 * place);
+    const needed = numberAt(row, AT.places + 2 * place + 1) + share;
     const passes = meets(room, needed, 'at-most');
     if (place > 0 && (passes === holds ? room - needed >= required - offered : passes)) continue;
     [required, offered, holds] = [room, needed, passes];
   }
-  const weakest = Number.isNaN(offset) ? at(row, AT.curveWeakness) : Math.max(at(row, AT.curveWeakness), at(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : at(row, AT.driftWeakness));
+  const weakest = Number.isNaN(offset) ? numberAt(row, AT.curveWeakness) : Math.max(numberAt(row, AT.curveWeakness), numberAt(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : numberAt(row, AT.driftWeakness));
   return new BriefNumbers({ required, unit, sense }, BASES[weakest] ?? 'guaranteed', { offered, borrowed: 0 });
 }
-
-const at = (row: Row, place: number): number => row[place] ?? NaN;

@@ -4,7 +4,7 @@ import type { Reading } from '../parts/reading.js';
 import { BriefNumbers } from '../verdicts/brief-finding.js';
 import { meets } from '../verdicts/compare.js';
 import type { NumberFinding } from '../verdicts/finding.js';
-import type { InNumbers, NumbersOf, Row } from './in-numbers.js';
+import { numberAt, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
 import { needsInputCapacitance, ownPoleOf, type PhaseMarginFound } from './phase-margin-figures.js';
 import { isMarginLeft, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
 
@@ -13,13 +13,7 @@ const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWea
 
 type Asked = PhaseMarginDemand;
 
-const READING: NumbersOf<Asked, Reading | null> = {
-  width: 2,
-  write(_, reading, { row, at }) {
-    row[at] = reading?.value ?? NaN;
-    row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
-  },
-};
+const READING: NumbersOf<Asked, Reading | null> = { width: 2, write: (_, reading, to) => writeReading(reading, to) };
 const NOTHING = { width: 0, write: () => undefined } as const;
 
 /** The phase margin in numbers, where gain bandwidth and output resistance are known as far as they count. */
@@ -64,20 +58,20 @@ export interface LoopNumbers {
 
 /** Null: no loop, or one whose load stands behind nobody knows what. */
 function loopIn(asked: Asked, row: Row): LoopNumbers | null {
-  const [least, most] = [at(row, AT.least), at(row, AT.most)];
+  const [least, most] = [numberAt(row, AT.least), numberAt(row, AT.most)];
   const isLoaded = asked.load.capacitance > 0;
-  const outputResistance = isLoaded ? at(row, AT.resistance) : 0;
+  const outputResistance = isLoaded ? numberAt(row, AT.resistance) : 0;
   if (Number.isNaN(most) || Number.isNaN(outputResistance)) return null;
   const needsInput = needsInputCapacitance(asked);
-  const input = needsInput ? at(row, AT.input) : NaN;
-  const own = { angle: at(row, AT.angle), crossover: at(row, AT.crossover), gainBandwidth: at(row, AT.printed) };
-  const ofAngle = Number.isNaN(own.angle) ? ASSUMED : own.angle >= 90 || !Number.isNaN(own.crossover) ? at(row, AT.angleWeakness) : ESTIMATED;
+  const input = needsInput ? numberAt(row, AT.input) : NaN;
+  const own = { angle: numberAt(row, AT.angle), crossover: numberAt(row, AT.crossover), gainBandwidth: numberAt(row, AT.printed) };
+  const ofAngle = Number.isNaN(own.angle) ? ASSUMED : own.angle >= 90 || !Number.isNaN(own.crossover) ? numberAt(row, AT.angleWeakness) : ESTIMATED;
   return {
     loop: loopOf(asked, { ownPole: ownPoleOf(own), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance }),
     ends: { least, most },
-    weakness: Math.max(at(row, AT.speedWeakness), ofAngle, outputResistance === 0 ? 0 : at(row, AT.resistanceWeakness)),
+    weakness: Math.max(numberAt(row, AT.speedWeakness), ofAngle, outputResistance === 0 ? 0 : numberAt(row, AT.resistanceWeakness)),
     needsInput,
-    inputWeakness: Number.isNaN(input) ? NaN : at(row, AT.inputWeakness),
+    inputWeakness: Number.isNaN(input) ? NaN : numberAt(row, AT.inputWeakness),
   };
 }
 
@@ -118,5 +112,3 @@ export function isInputAssumed({ loop: { network, open, inputCapacitance, ownPol
 }
 
 const [ESTIMATED, ASSUMED] = [weaknessOf('estimated'), weaknessOf('assumed')];
-
-const at = (row: Row, place: number): number => row[place] ?? NaN;

@@ -56,10 +56,16 @@ interface JudgedOnce {
   readonly likelyAt: (place: Parameters<SurveyedCatalog['judgedAt']>[0]) => boolean;
 }
 
+/** What was found out so far. */
+interface Found {
+  judged: JudgedPart | null;
+  likely?: boolean;
+}
+
 function judgeOnce(run: Judging): JudgedOnce {
-  const known = new Map<ScreenView, Map<number, { judged: JudgedPart | null; likely?: boolean }>>();
-  const found = ({ view, position }: Parameters<SurveyedCatalog['judgedAt']>[0]) => {
-    const ofView = known.get(view) ?? new Map<number, { judged: JudgedPart | null; likely?: boolean }>();
+  const known = new Map<ScreenView, Map<number, Found>>();
+  const found = ({ view, position }: Parameters<SurveyedCatalog['judgedAt']>[0]): Found => {
+    const ofView = known.get(view) ?? new Map<number, Found>();
     known.set(view, ofView);
     const one = ofView.get(position) ?? { judged: null };
     ofView.set(position, one);
