@@ -39,9 +39,9 @@ function writeCurve(binding: HeadroomFound['curve']['binding'], row: Row, at: nu
   }
 }
 
-/** What the offset takes of the room, V: drift adds to an offset that is known and does not hold over temperature already. Not a number: not known. */
+/** What is known of what offset and drift take of the room, V; drift is given where the offset does not hold over temperature already. Not a number: not known. */
 export function shareOf(offset: number, drift: number): number {
-  return Number.isNaN(offset) ? 0 : Number.isNaN(drift) ? offset : offset + drift;
+  return (Number.isNaN(offset) ? 0 : offset) + (Number.isNaN(drift) ? 0 : drift);
 }
 
 /** Of the vertices the one that is told: of least spare, and one that fails before one that holds. */
@@ -60,6 +60,6 @@ function atVertices({ unit, sense }: HeadroomDemand, row: Row): NumberFinding | 
     if (place > 0 && (passes === holds ? room - needed >= required - offered : passes)) continue;
     [required, offered, holds] = [room, needed, passes];
   }
-  const weakest = Number.isNaN(offset) ? numberAt(row, AT.curveWeakness) : Math.max(numberAt(row, AT.curveWeakness), numberAt(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : numberAt(row, AT.driftWeakness));
+  const weakest = Math.max(numberAt(row, AT.curveWeakness), Number.isNaN(offset) ? 0 : numberAt(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : numberAt(row, AT.driftWeakness));
   return new BriefNumbers({ required, unit, sense }, BASES[weakest] ?? 'guaranteed', { offered, borrowed: 0 });
 }

@@ -7,7 +7,7 @@ import { meets } from '../verdicts/compare.js';
 import { bindingVertices, type Binding, type Curve } from './binding-vertices.js';
 import type { ComposedCheck, Known } from './check.js';
 import { shareOf } from './output-headroom-numbers.js';
-import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, VertexFindings } from '../verdicts/finding.js';
+import type { BoundFinding, NumberFinding, SingleFinding, Term, TurningPoint, Uncharged, VertexFindings } from '../verdicts/finding.js';
 import { formatQuantity } from '../quantities/format.js';
 
 /** Vertices with their room, and what the offset is multiplied by. */
@@ -93,7 +93,7 @@ interface Share {
 function offsetShare({ noiseGain, kelvin }: HeadroomVertices, found: Known<HeadroomFound>): Share {
   const { term: offset, overTemperature } = found.offset();
   const drift = overTemperature ? null : found.drift();
-  const terms = offset === null ? [] : drift === null ? [offset] : [offset, drift];
+  const terms = [offset, drift].filter((term) => term !== null);
   const driftKnown = overTemperature || kelvin === 0 || drift !== null;
   return {
     terms,
@@ -110,13 +110,16 @@ interface Unknowns {
   readonly kelvin: number;
 }
 
-/** Where offset or drift is not known: at which value the spare is used up. */
-function cautionFor(spare: number, unknowns: Unknowns): string | null {
-  if (spare < 0) return null;
-  const left = spare / unknowns.noiseGain;
-  if (!unknowns.offsetKnown) return `offset not known and not charged: ${formatQuantity(left, 'V', { round: 'down' })} of offset uses the spare up`;
-  if (unknowns.driftKnown) return null;
-  return `offset drift not known and not charged: ${formatQuantity(left / unknowns.kelvin, 'V/K', { round: 'down' })} uses the spare up`;
+/** Where offset or drift is not known: at which value the spare is used up. Of both the offset is told. */
+function unchargedFor(spare: number, { noiseGain, kelvin, offsetKnown, driftKnown }: Unknowns): Uncharged | null {
+  if (spare < 0 || (offsetKnown && driftKnown)) return null;
+  const left = spare / noiseGain;
+  return offsetKnown ? { figure: 'offsetDrift', kind: 'max', value: left / kelvin, unit: 'V/K' } : { figure: 'offsetVoltage', kind: 'max', value: left, unit: 'V' };
+}
+
+function cautionFor({ figure, value, unit }: Uncharged): string {
+  const [name, of] = figure === 'offsetDrift' ? ['offset drift', ''] : ['offset', ' of offset'];
+  return `${name} not known and not charged: ${formatQuantity(value, unit, { round: 'down' })}${of} uses the spare up`;
 }
 
 interface At {
@@ -132,11 +135,11 @@ function findingAt(vertex: HeadroomVertex, at: At): SingleFinding {
   const bare = bareAt(vertex, at);
   if (at.brief) return bare;
   if (bare.kind === 'bound') return { ...bare, ...toldOfBound(vertex, at), turnsAt: turnsAt(vertex, at) };
-  const caution = cautionFor(vertex.room - bare.offered, share.unknowns);
+  const uncharged = unchargedFor(vertex.room - bare.offered, share.unknowns);
   return {
     ...bare, slot: reading.slot, how: reading.how, turnsAt: turnsAt(vertex, at),
     terms: [headroomTerm(reading, reading.value ?? 0, vertex), ...share.terms],
-    cautions: caution === null ? [] : [caution],
+    ...(uncharged === null ? {} : { cautions: [cautionFor(uncharged)], uncharged }),
   } satisfies NumberFinding;
 }
 

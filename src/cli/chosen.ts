@@ -50,7 +50,8 @@ function resolved(question: Question, id: string, by: 'named' | 'saved'): Choice
   if (found.ok) return { chosen: chosenPart(report, id, by), origin: report.origin, note: null };
   const was = catalog.withdrawn(id);
   if (was !== null) return asItWas(question, was, by);
-  if (by === 'named') throw new RequestError([found.problem], EXIT.request);
+  // Kept once, the catalog may have changed since; written in the file or on the command line, it is a slip.
+  if (by === 'named' || question.inFile === id) throw new RequestError([found.problem], EXIT.request);
   return { chosen: chosenPart(report, null, 'first'), origin: report.origin, note: `note: ${id}, kept with ${question.file ?? 'the stage'}, is not in the catalog; the report is about the first in order` };
 }
 

@@ -35,9 +35,15 @@ export async function runSweep(session: Session, operand: string | undefined, op
     if (answer.points.every(({ state }) => 'contradiction' in state)) throw new RequestError(problemsAt(swept, field.from), EXIT.request, `At none of these values of ${field.path} is this a stage. (exit ${EXIT.request})`);
     const { path, from, to, unit, kind, keeps } = field;
     const isShare = kind === 'fraction' || kind === 'share';
-    const report: SweepReport = { ...answer, stage: swept.stage, over: { path, from, to, unit, isShare, scale, keeps }, asking };
+    const report: SweepReport = { ...answer, stage: swept.stage === null ? null : assumingThroughout(swept.stage, [field.from, field.to].map(stageAt)), over: { path, from, to, unit, isShare, scale, keeps }, asking };
     return { text: written(report, session, options), exit: EXIT.yes };
   });
+}
+
+/** What is assumed at one value of the field and not at another is no assumption of the sweep. */
+function assumingThroughout(stage: Stage, ends: readonly (Stage | string)[]): Stage {
+  const built = ends.filter((end) => typeof end !== 'string');
+  return { ...stage, assumptions: stage.assumptions.filter((sentence) => built.every(({ assumptions }) => assumptions.includes(sentence))) };
 }
 
 function written(report: SweepReport, session: Session, options: SweepOptions): string {

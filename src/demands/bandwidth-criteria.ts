@@ -78,5 +78,5 @@ export function remembering(of: (x: number) => number): (x: number) => number {
 }
 
 function withNoiseGain({ noiseGain }: Stage, { form }: ClosedLoop): string {
-  return form === 'one-pole' ? `noise gain ${formatQuantity(noiseGain.nominal, 'V/V')}, ` : '';
+  return form === 'one-pole' ? `noise gain ${formatQuantity(noiseGain.nominal, 'V/V')} at nominal resistors, ` : '';
 }

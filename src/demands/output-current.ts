@@ -16,7 +16,7 @@ export function outputCurrent(stage: Stage): OutputCurrentDemand {
     required,
     unit: 'A',
     sense: 'at-least',
-    because: `${formatQuantity(required, 'A')} ${worst.side === 'high' ? 'out of' : 'into'} the output at the peak, feedback network included${withoutFrequency(stage)}`,
+    because: `${formatQuantity(required, 'A')} ${worst.side === 'high' ? 'out of' : 'into'} the output at the peak, feedback network included, resistors nominal${withoutFrequency(stage)}`,
     source: SOURCE,
     peaks: peaks.filter((peak) => peak.amperes > NOTHING),
     corner: worst.corner,

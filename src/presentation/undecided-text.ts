@@ -29,7 +29,7 @@ const isUnbuilt = ({ reason }: Verdict): boolean => reason === 'not-built';
 function undecidedPart(one: JudgedPart, style: Style): string[] {
   const open = one.verdicts.filter((verdict) => verdict.outcome === 'unknown');
   const built = open.filter((verdict) => !isUnbuilt(verdict));
-  const reasons = reasonsOf(built);
+  const reasons = reasonsOf(open.length === 1 ? built.map((verdict) => decidingAll(verdict, one.verdicts)) : built);
   const about = aboutPart(one.part);
   const likely = one.likely ? 'likely to fit (its class would); ' : '';
   const lead = ` ${toned('?', 'open', style)}  `;
@@ -50,4 +50,12 @@ function reasonsOf(verdicts: readonly Verdict[]): string[] {
 /** One open check decides the part; several only themselves. */
 function withFits(reasons: readonly string[], open: number): string {
   return open === 1 ? reasons.join('').replace('passes if', 'fits if') : reasons.join('; ');
+}
+
+/** One open check decides at the value that the checks which passed over the same figure hold at too. */
+function decidingAll(open: Verdict, verdicts: readonly Verdict[]): Verdict {
+  const turn = open.decidesAt;
+  if (turn === null) return open;
+  const passedOver = verdicts.flatMap(({ uncharged }) => (uncharged?.figure === turn.figure && uncharged.kind === turn.kind ? [uncharged.value] : []));
+  return { ...open, decidesAt: { ...turn, value: Math.min(turn.value, ...passedOver) } };
 }

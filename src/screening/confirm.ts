@@ -1,3 +1,4 @@
+import type { TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import type { Confirmation } from './judged-part.js';
 
@@ -21,7 +22,7 @@ function merged(known: Confirmation, one: Confirmation): Confirmation {
 }
 
 function weakPoints(verdict: Verdict): Confirmation[] {
-  const needed = verdict.turnsAt === null ? null : { kind: verdict.turnsAt.kind, value: verdict.turnsAt.value, unit: verdict.turnsAt.unit };
+  const needed = verdict.turnsAt === null ? null : neededOf(verdict.turnsAt);
   const checks = [verdict.check];
   // A term with no figure of its own (the noise of a resistor over a typical bandwidth) is nothing anybody can look up.
   const terms = verdict.terms.filter((term) => term.basis !== 'guaranteed' && (term.slot !== null || term.basis === 'borrowed' || term.basis === 'assumed'));
@@ -37,6 +38,11 @@ function weakPoints(verdict: Verdict): Confirmation[] {
   if (needed?.value === 0 && verdict.sense === 'at-least') return [];
   const figure = parameterOf(verdict.slot) ?? verdict.turnsAt?.figure ?? verdict.check;
   return [{ figure, slot: verdict.slot, basis: verdict.basis ?? 'assumed', how: verdict.how, checks, needed }];
+}
+
+/** The turning point without the figure it is of: that of the confirmation may be one of its terms. */
+function neededOf({ kind, value, unit, condition }: TurningPoint): NonNullable<Confirmation['needed']> {
+  return { kind, value, unit, ...(condition === undefined ? {} : { condition }) };
 }
 
 /** `slewRate.typ@V5` → slewRate. */

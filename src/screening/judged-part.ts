@@ -1,6 +1,6 @@
 import type { Basis } from '../parts/basis.js';
-import type { LimitKind } from '../parts/figures.js';
 import type { Part } from '../parts/part.js';
+import type { TurningPoint } from '../verdicts/finding.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import type { BatteryLife } from './battery.js';
 import type { DynamicRange } from './dynamic-range.js';
@@ -18,7 +18,7 @@ export interface Confirmation {
   /** Checks that rest on it. */
   readonly checks: readonly string[];
   /** The limit that would still pass, SI, where one figure decides. */
-  readonly needed: { readonly kind: LimitKind; readonly value: number; readonly unit: string } | null;
+  readonly needed: Omit<TurningPoint, 'figure'> | null;
 }
 
 /** One part with all its verdicts, in the order of the checks. */

@@ -17,7 +17,11 @@ export function contradictionsOf(spec: StageSpec, stage: Stage, rebuild: Rebuild
     const built = rebuild(tried);
     return built !== null && supplyContradictions(tried).length <= idle(spec) && isWithinSupply(built) && outputDisagrees(tried, built) === null;
   };
-  const found = [beyondSupply(spec, stage, () => wayInside(spec, stage, { rebuild, accepts })), outputDisagrees(spec, stage)];
+  const acceptsAtCorners = (tried: StageSpec): boolean => {
+    const built = accepts(tried) ? rebuild(tried) : null;
+    return built !== null && built.output.min >= -SLACK && built.output.max <= built.supply.min + SLACK;
+  };
+  const found = [beyondSupply(spec, stage, () => wayInside(spec, stage, { rebuild, accepts, acceptsAtCorners })), outputDisagrees(spec, stage)];
   return [...found.filter((one) => one !== null), ...supplyContradictions(spec), ...hazardContradictions(spec)];
 }
 

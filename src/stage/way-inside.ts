@@ -11,6 +11,8 @@ interface Trial {
   readonly rebuild: Rebuild;
   /** Whether the changed specification is free of the contradiction. */
   readonly accepts: (spec: StageSpec) => boolean;
+  /** Whether it is so at the corners too: tolerances of resistors and signal, the lowest supply. */
+  readonly acceptsAtCorners: (spec: StageSpec) => boolean;
 }
 
 /**
@@ -103,7 +105,7 @@ function toleranceOf({ reference }: StageSpec): number {
 /** Steps of 5 %, from just below the gain there is to a hundredth of it. */
 const STEPS = Array.from({ length: 90 }, (_, at) => 0.95 ** (at + 1));
 
-/** The largest of these gains that does it as the reference stands, else the largest that does it with another reference. */
+/** The largest of these gains that does it as the reference stands, at the corners where one does; else the largest that does it with another reference. */
 function lowerGain(spec: StageSpec, stage: Stage, trial: Trial): string | null {
   const form = gainForm(stage.topology);
   if (form === null || passesItsInput(stage) || isFitted(spec)) return null;
@@ -111,7 +113,7 @@ function lowerGain(spec: StageSpec, stage: Stage, trial: Trial): string | null {
   const gains = STEPS.map((step) => Number((Math.abs(stage.gain) * step).toPrecision(3))).filter((gain) => gain > least);
   const sign = form === 'inverting' ? '-' : '';
   const at = (gain: number): StageSpec => ({ ...spec, gain: { value: gain, text: String(gain) } });
-  const alone = gains.find((gain) => trial.accepts(at(gain)));
+  const alone = gains.find((gain) => trial.acceptsAtCorners(at(gain))) ?? gains.find((gain) => trial.accepts(at(gain)));
   if (alone !== undefined) return `write gain: ${sign}${alone}`;
   for (const gain of gains) {
     const reference = anotherReference(at(gain), trial);

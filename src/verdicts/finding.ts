@@ -24,6 +24,9 @@ export interface TurningPoint {
   readonly condition?: { readonly current: number; readonly supply: number };
 }
 
+/** A figure that is not known and passed over, and its value from which on the check would no longer pass. */
+export type Uncharged = Omit<TurningPoint, 'condition'>;
+
 /** A missing figure that kept a check from being decided. */
 export interface Missing {
   readonly figure: Parameter | 'phaseReversal' | 'inputClamp' | 'channels' | 'package' | 'qualification' | 'status' | 'lifecycle' | 'price';
@@ -62,6 +65,7 @@ export interface Remarks {
   readonly remedies?: readonly Remedy[];
   /** Numbers that belong to the finding and are not compared: size of a step, how often it comes. */
   readonly measures?: readonly Measure[];
+  readonly uncharged?: Uncharged;
 }
 
 /** A number beside a finding, worst reading, SI. */

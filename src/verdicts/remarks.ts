@@ -9,12 +9,13 @@ export function remediesOf(pessimistic: Finding): readonly Remedy[] {
 /** What stands beside the numbers shown; fields that do not apply are left out. */
 export function remarksOf(shown: SingleFinding, remedies: readonly Remedy[]): Remarks {
   if (shown.kind === 'undecided') return {};
-  const { adds, termUnit, notes, measures } = shown;
+  const { adds, termUnit, notes, measures, uncharged } = shown;
   return {
     ...(adds === undefined ? {} : { adds }),
     ...(termUnit === undefined ? {} : { termUnit }),
     ...(notes === undefined || notes.length === 0 ? {} : { notes }),
     ...(measures === undefined ? {} : { measures }),
+    ...(uncharged === undefined ? {} : { uncharged }),
     ...(remedies.length === 0 ? {} : { remedies }),
   };
 }

@@ -51,7 +51,7 @@ describe('a head-room in numbers', () => {
     expect(HEADROOM_NUMBERS.finding(demand(none), rowFor(none, [0.1]))).toBeNull();
   });
 
-  it('takes of the offset what is known: no drift without an offset', () => {
-    expect([shareOf(0.01, 0.002), shareOf(0.01, NaN), shareOf(NaN, 0.002)]).toEqual([0.012, 0.01, 0]);
+  it('takes of offset and drift what is known', () => {
+    expect([shareOf(0.01, 0.002), shareOf(0.01, NaN), shareOf(NaN, 0.002), shareOf(NaN, NaN)]).toEqual([0.012, 0.01, 0.002, 0]);
   });
 });

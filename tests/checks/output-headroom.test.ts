@@ -50,11 +50,21 @@ describe("the offset's share", () => {
     const none = judge(SPEC, [POINT]);
     expect(none).toMatchObject({ outcome: 'pass', offered: 0.05 });
     expect(none.cautions).toHaveLength(1);
+    expect(none.uncharged?.figure).toBe('offsetVoltage');
     expect(none.cautions[0]).toMatch(/^offset not known and not charged: (\d+\.\d+) mV of offset uses the spare up$/u);
     // Rounded down to three digits: never more than there is.
     expect(Number(/(\d+\.\d+) mV/u.exec(none.cautions[0] ?? '')?.[1])).toBe(Math.floor(left * 1e4) / 10);
     expect(judge(SPEC, [POINT, max('offsetVoltage', 1e-3)]).cautions[0]).toMatch(/^offset drift not known and not charged: [\d.]+ [µm]V\/(?:°C|K) uses the spare up$/u);
     expect(judge({ ...SPEC, temperature: between(25, 25) }, [POINT, max('offsetVoltage', 1e-3)]).cautions).toEqual([]);
+  });
+
+  it('charges a drift that is known beside an offset that is not: what is left is for the offset', () => {
+    const verdict = judge(SPEC, [POINT, max('offsetDrift', 2e-6)]);
+    expect(verdict.offered).toBeCloseTo(0.05 + NG * 2e-6 * 45, 12);
+    const { value: turn = 0, ...of } = verdict.uncharged ?? {};
+    expect(of).toEqual({ figure: 'offsetVoltage', kind: 'max', unit: 'V' });
+    const withOffset = (volts: number): string => judge(SPEC, [POINT, max('offsetDrift', 2e-6), max('offsetVoltage', volts)]).outcome;
+    expect([withOffset(turn * 0.999), withOffset(turn * 1.001)]).toEqual(['pass', 'fail']);
   });
 
   it('is in what is known without a head-room, and fails alone where it exceeds the room', () => {

@@ -80,7 +80,7 @@ describe('guided entry, recorded on a pseudo-terminal', () => {
       "
       error[S201]: the output is asked to swing 3.2 V..41.6 V, above the 5 V supply: no amplifier on this
         supply does that (see gain, supply)
-         fix: write gain: 9.28
+         fix: write gain: 8.81
               or back, to change an answer before this one
       "
     `);
@@ -127,7 +127,7 @@ describe('guided entry, recorded on a pseudo-terminal', () => {
       > What hangs on the output, and where does it go?
         [10 kΩ to ground, 100 pF; Enter: nothing] 10 kΩ to ground
         Asks     output current at least 455 µA: 455 µA out of the output at the peak, feedback network
-                 included
+                 included, resistors nominal
         Assumed  Stability: the part's own compensation is assumed to hold
       > Up to which frequency must it follow?
         [2 kHz, 20 Hz..2 kHz; Enter: speed is not judged] 1 kHz

@@ -1,4 +1,4 @@
-import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -85,6 +85,11 @@ describe('railfit report', { timeout: 120_000 }, () => {
   });
 
   it('is about the part the stage file names, before the one that is kept', async () => {
+    writeFileSync(at('slip.yaml'), `${readFileSync(PROBE, 'utf8')}part: HOUSE-60\n`);
+    const slip = await railfit('report', at('slip.yaml'), '-o', at('slip.html'), ...TIME);
+    expect(slip).toMatchObject({ exit: 2, stdout: '' });
+    expect(slip.stderr).toContain('HOUSE-60');
+    expect(existsSync(at('slip.html'))).toBe(false);
     writeFileSync(at('named.yaml'), `${readFileSync(PROBE, 'utf8')}part: HOUSE-06\n`);
     await railfit('stages', 'add', at('named.yaml'), '--part', 'HOUSE-03');
     const { stdout } = await railfit('report', at('named.yaml'), '--json', ...TIME);

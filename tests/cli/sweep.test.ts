@@ -56,6 +56,12 @@ describe('railfit sweep', () => {
     expect(text).toContain('from 2.64001 V on: a stage again; 0 fit');
   }, 120_000);
 
+  it('assumes nothing about the field that is swept', async () => {
+    const told = async (over: string): Promise<string> => (await workplace().run(['sweep', PROBE, '--over', over, '--steps', '2'])).stdout.replaceAll(/\s+/gu, ' ');
+    expect(await told('limits.dcError=5..50 mV')).toContain('phase margin 45');
+    expect(await told('limits.phaseMargin=30 °..60 °')).not.toContain('phase margin 45');
+  }, 120_000);
+
   it.each([40, 60, 100])('stands within %d columns, in ASCII too', async (width) => {
     const { stdout } = await workplace().run(['sweep', PROBE, '--over', 'temperature=20..85 °C', '--steps', '3', '--ascii'], { env: { COLUMNS: String(width) } });
     expect(stdout).toMatch(/^[\n\u0020-\u007e]+$/u);

@@ -48,9 +48,9 @@ describe('gain bandwidth of steps', () => {
     const limits = { settling: { within: value(1e-6), to: value(2 ** -13) } };
     const settles = stageSpec('follower', step(0.1, 0.3, 10e-6), { limits });
     expect(needOf(settles)).toBeCloseTo((13 * Math.log(2)) / (2 * Math.PI * 1e-6), 3);
-    expect(demandsOf(settles)['gain-bandwidth']!.because).toMatch(/^noise gain 1 V\/V, settling within .* an edge of 10 µs from 10 % to 90 % asks /u);
+    expect(demandsOf(settles)['gain-bandwidth']!.because).toMatch(/^noise gain 1 V\/V at nominal resistors, settling within .* an edge of 10 µs from 10 % to 90 % asks /u);
     const quick = stageSpec('follower', step(0.1, 0.3, 1e-8), { limits });
-    expect(demandsOf(quick)['gain-bandwidth']!.because).toMatch(/^noise gain 1 V\/V, an edge of 10 ns/u);
+    expect(demandsOf(quick)['gain-bandwidth']!.because).toMatch(/^noise gain 1 V\/V at nominal resistors, an edge of 10 ns/u);
   });
 });
 

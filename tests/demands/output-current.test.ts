@@ -32,7 +32,7 @@ describe('peak output current', () => {
 
   it('says when the capacitance is left out for want of a frequency', () => {
     expect(demandsOf(stageSpec('follower', dc(1, 4), { load: load(1e3, 'ground', 1e-9) }))['output-current'].because).toBe(
-      '4 mA out of the output at the peak, feedback network included; neither frequency nor edge, so the load capacitance is left out',
+      '4 mA out of the output at the peak, feedback network included, resistors nominal; neither frequency nor edge, so the load capacitance is left out',
     );
   });
 

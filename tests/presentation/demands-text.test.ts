@@ -25,7 +25,7 @@ describe('what a stage asks', () => {
      output high          at most 313 mV         highest output 2.69 V, least room on a supply of 3 V;
                                                  method [3]
      output current       at least 297 µA        297 µA out of the output at the peak, feedback network
-                                                 included; method [4]
+                                                 included, resistors nominal; method [4]
      slew rate            at least 15.6 mV/µs    1.242 V peak at 2 kHz; method [5]
      gain bandwidth       at least 112 kHz       noise gain 8 V/V, magnitude error 1 % at 2 kHz;
                                                  method [6]
@@ -92,7 +92,7 @@ describe('what a stage asks', () => {
         method [3]
      output current at least 297 uA
         297 uA out of the output at the peak, feedback network
-        included; method [4]
+        included, resistors nominal; method [4]
      slew rate at least 15.6 mV/us
         1.242 V peak at 2 kHz; method [5]
      gain bandwidth at least 112 kHz

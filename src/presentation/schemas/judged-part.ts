@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { count } from './measures.js';
 import { price } from './price.js';
-import { basis, figureValue, verdict } from './verdict.js';
+import { basis, figureValue, point, verdict } from './verdict.js';
 
 export const tier = z.enum(['approved', 'generic']).meta({ id: 'tier', description: 'approved: on the approved list; generic: a class of parts, not something to order' });
 export const outcome = z.enum(['fits', 'undecided', 'does-not-fit']).meta({ id: 'outcome', description: 'Any failing check: does not fit; else any unknown one: undecided; else fits' });
@@ -48,7 +48,7 @@ export const confirmation = z
     basis,
     how: z.string().nullable(),
     checks: z.array(z.string()).describe('Checks that rest on it'),
-    needed: z.strictObject(figureValue).nullable().describe('The limit that would still pass, where one figure decides'),
+    needed: z.strictObject({ ...figureValue, condition: point.optional() }).nullable().describe('The limit that would still pass, where one figure decides'),
   })
   .meta({ id: 'confirmation', title: 'Confirmation', description: 'A figure a fit rests on that is not a limit' });
 

@@ -30,7 +30,7 @@ const term = z
 const offered = z.union([z.number(), z.string(), z.null()]);
 const margin = z.number().nullable().describe('Offered to required for at-least, required to offered for at-most; 1 is met exactly; null for head-rooms, temperatures and words');
 
-const point = z.strictObject({ current: z.number(), supply: z.number() }).describe('Of a head-room: current towards the rail in A and supply in V it must hold at');
+export const point = z.strictObject({ current: z.number(), supply: z.number() }).describe('Of a head-room: current towards the rail in A and supply in V it must hold at');
 
 const missing = z.strictObject({
   figure: z.string(),

@@ -166,7 +166,7 @@ describe('an interview', () => {
         Assumed  Supply peak is the top of the supply
       What hangs on the output, and where does it go?
         Asks     output current at least 289 µA: 289 µA out of the output at the peak, feedback network
-                 included
+                 included, resistors nominal
         Assumed  Stability: the part's own compensation is assumed to hold
       Up to which frequency must it follow?
         Asks     slew rate at least 15.6 mV/µs: 1.242 V peak at 2 kHz

@@ -78,7 +78,7 @@ create temp table needed as select known.key, vertex.high, vertex.v, room, coale
 /** What the offset takes of the room, as far as it is known. */
 function share({ noiseGain, kelvin }: HeadroomDemand, outlook: Outlook): string {
   const drift = `case when coalesce(offset_over, 0) then 0.0 else coalesce(offsetDrift_${outlook}, 0.0) * ${real(kelvin)} end`;
-  return `coalesce(${real(noiseGain)} * (offsetVoltage_${outlook} + ${drift}), 0.0)`;
+  return `(${real(noiseGain)} * (coalesce(offsetVoltage_${outlook}, 0.0) + ${drift}))`;
 }
 
 /** `spared_low`, `spared_high`: every vertex judged. Room below zero fails every part; without a number more than the room already is a fail, anything else is open. */
@@ -88,7 +88,7 @@ function sparedTable(demand: HeadroomDemand, high: boolean): string {
     return `case when not ${meets('room', '0.0', 'at-most')} then 0 when ${own} is not null then ${meets('room', `(${own} + ${share(demand, outlook)})`, 'at-most')}
       when ${meets('room', `(bound_${outlook} + ${share(demand, outlook)})`, 'at-most')} then null else 0 end`;
   };
-  const drift = `case when coalesce(offset_over, 0) or ${flag(demand.kelvin === 0)} or offsetVoltage_w is null then 0 else coalesce(offsetDrift_basis, 0) end`;
+  const drift = `case when coalesce(offset_over, 0) or ${flag(demand.kelvin === 0)} then 0 else coalesce(offsetDrift_basis, 0) end`;
   return `create temp table spared_${high ? 'high' : 'low'} as select key, ${stands('w')} as w, ${stands('b')} as b, max(basis, coalesce(offsetVoltage_basis, 0), ${drift}) as vertex_basis, room - worst - ${share(demand, 'w')} as spare
   from needed join known using (key) where high = ${flag(high)}`;
 }
