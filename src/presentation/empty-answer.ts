@@ -48,7 +48,7 @@ function railReasons(report: Report): string[] {
 function railReason(report: Report, check: 'output-low' | 'output-high'): string {
   const { stage } = report;
   const beyond = beyondRail(stage, check);
-  if (beyond !== null) return beyondReason(beyond, check);
+  if (beyond !== null) return beyondReason(beyond, check, stage);
   const reach = reachOf(report, check);
   const asked = check === 'output-low' ? lowest(stage) : highest(stage);
   const kept = stage.asked.margins.outputHeadroom;
@@ -64,11 +64,14 @@ function beyondRail({ vertices }: Stage, check: 'output-low' | 'output-high'): V
   return room(worst) < -1e-9 * worst.supply ? worst : null;
 }
 
-function beyondReason({ supply, reference, output }: Vertex, check: 'output-low' | 'output-high'): string {
+function beyondReason({ supply, reference, output }: Vertex, check: 'output-low' | 'output-high', { topology }: Stage): string {
   const corner = [`supply ${amount(supply, 'V')}`, ...(reference === 0 ? [] : [`reference ${amount(reference, 'V')}`]), 'resistors at their ends'];
   const end = check === 'output-low' ? 'below ground' : 'above the supply';
-  return `At the worst corner (${corner.join(', ')}) the output is asked to ${amount(output, 'V')}, ${end}: lower the gain, tighten the tolerance, or let input and reference share one source.`;
+  return `At the worst corner (${corner.join(', ')}) the output is asked to ${amount(output, 'V')}, ${end}: ${SHARED.has(topology) ? `tighten the tolerance of the resistors, for what both inputs share comes through them, or ${check === 'output-low' ? 'raise' : 'lower'} the reference` : 'lower the gain, tighten the tolerance, or let input and reference share one source'}.`;
 }
+
+/** Both inputs stand on a voltage of their own, which hardly falls with the gain. */
+const SHARED: ReadonlySet<Stage['topology']> = new Set(['difference', 'high-side-sense']);
 
 function lowest({ vertices }: Stage): string {
   const least = vertices.reduce((best, next) => (next.output < best.output ? next : best));

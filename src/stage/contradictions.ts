@@ -13,15 +13,12 @@ const SLACK = 1e-12;
 
 /** Everything about the finished stage that no amplifier can satisfy, found before any part is looked at (EX-14). */
 export function contradictionsOf(spec: StageSpec, stage: Stage, rebuild: Rebuild): Problem[] {
-  const accepts = (tried: StageSpec): boolean => {
+  const accepting = (isInside: (built: Stage) => boolean) => (tried: StageSpec): boolean => {
     const built = rebuild(tried);
-    return built !== null && supplyContradictions(tried).length <= idle(spec) && isWithinSupply(built) && outputDisagrees(tried, built) === null;
+    return built !== null && supplyContradictions(tried).length <= idle(spec) && isInside(built) && outputDisagrees(tried, built) === null;
   };
-  const acceptsAtCorners = (tried: StageSpec): boolean => {
-    const built = accepts(tried) ? rebuild(tried) : null;
-    return built !== null && built.output.min >= -SLACK && built.output.max <= built.supply.min + SLACK;
-  };
-  const found = [beyondSupply(spec, stage, () => wayInside(spec, stage, { rebuild, accepts, acceptsAtCorners })), outputDisagrees(spec, stage)];
+  const trial = { rebuild, accepts: accepting(isWithinSupply), acceptsAtCorners: accepting(isWithinAtCorners) };
+  const found = [beyondSupply(spec, stage, () => wayInside(spec, stage, trial)), outputDisagrees(spec, stage)];
   return [...found.filter((one) => one !== null), ...supplyContradictions(spec), ...hazardContradictions(spec)];
 }
 
@@ -29,6 +26,9 @@ export function contradictionsOf(spec: StageSpec, stage: Stage, rebuild: Rebuild
 const idle = (spec: StageSpec): number => supplyContradictions(spec).filter(({ code }) => code === 'S206').length;
 
 const isBelow = (stage: Stage): boolean => stage.outputNominal.min < -SLACK;
+
+/** Within the lowest supply, with resistors and signal at their ends. */
+const isWithinAtCorners = ({ output, supply }: Stage): boolean => output.min >= -SLACK && output.max <= supply.min + SLACK;
 
 function isWithinSupply(stage: Stage): boolean {
   return !isBelow(stage) && stage.outputNominal.max <= stage.supply.nominal * (1 + 1e-9) + SLACK;

@@ -65,6 +65,7 @@ export interface Remarks {
   readonly remedies?: readonly Remedy[];
   /** Numbers that belong to the finding and are not compared: size of a step, how often it comes. */
   readonly measures?: readonly Measure[];
+  /** Where a figure is passed over: the check holds up to this value of it. */
   readonly uncharged?: Uncharged;
 }
 
