@@ -6,7 +6,9 @@ import { TRAIT_COLUMNS } from './trait-columns.js';
 /** Parts in one segment: its codes are read, and its sums kept, in one go. */
 export const SEGMENT = 1 << 16;
 /** Changes when the tables of the dictionary mean something else; one of another form is made anew. */
-export const FORM = 2;
+export const FORM = 3;
+/** Between the pieces of a trait, each written as JSON, which has no line ends of its own. */
+export const BETWEEN_PIECES = '\n';
 /** The trait under which the keys of the rows are kept, in the order of the parts. */
 export const KEYS = 'row key';
 
@@ -57,7 +59,7 @@ export function encoder(database: Database.Database, expected: number): Encoder 
     finish() {
       if (parts % SEGMENT !== 0) flush();
       const insertTrait = database.prepare('insert into dictionary_trait (trait, pieces) values (?, ?)');
-      for (const { trait, pieces } of codings) insertTrait.run(trait, `[${pieces.join(',')}]`);
+      for (const { trait, pieces } of codings) insertTrait.run(trait, pieces.join(BETWEEN_PIECES));
       database.prepare('insert into dictionary (only, generation, form, parts, segment) select 1, generation, ?, ?, ? from part_generation').run(FORM, parts, SEGMENT);
     },
   };

@@ -1,7 +1,7 @@
 import type Database from 'better-sqlite3';
 import { pieceAt, type ScreenView } from '../parts/screen-view.js';
 import type { Piece, Trait } from '../parts/traits.js';
-import { KEYS, SEGMENT } from './encoder.js';
+import { BETWEEN_PIECES, KEYS, SEGMENT } from './encoder.js';
 import { PART_COLUMNS } from './part-columns.js';
 import { rowToPart, type Cell } from './part-row.js';
 import { pieceFrom } from './trait-columns.js';
@@ -15,7 +15,7 @@ export function storedView(database: Database.Database, size: number): ScreenVie
   const ids = new Map<number, string>();
   const known = new Map<Trait, StoredPieces>();
   const stored = (trait: Trait): StoredPieces => {
-    const found = known.get(trait) ?? { cells: JSON.parse(pieces.get(trait) ?? '[]') as Cell[][], made: [] };
+    const found = known.get(trait) ?? { texts: (pieces.get(trait) ?? '').split(BETWEEN_PIECES), made: [] };
     known.set(trait, found);
     return found;
   };
@@ -35,7 +35,7 @@ export function storedView(database: Database.Database, size: number): ScreenVie
     tier: 'approved',
     size,
     segment: SEGMENT,
-    width: (trait) => stored(trait).cells.length,
+    width: (trait) => stored(trait).texts.length,
     piece: (trait, code) => pieceOf(trait, stored(trait), code),
     codes(trait, segment, into) {
       const [width, bytes] = read(trait, segment);
@@ -60,13 +60,14 @@ function onceEach(make: (segment: number) => Buffer): (segment: number) => Buffe
 }
 
 interface StoredPieces {
-  readonly cells: readonly (readonly Cell[])[];
-  /** Made of their cells when they are first looked at. */
+  /** The cells of each as JSON. */
+  readonly texts: readonly string[];
+  /** Made of their cells when they are first looked at: of a long list few are. */
   readonly made: (Piece | undefined)[];
 }
 
-function pieceOf(trait: Trait, { cells, made }: StoredPieces, code: number): Piece {
-  const piece = made[code] ?? pieceFrom(trait, pieceAt(cells, code));
+function pieceOf(trait: Trait, { texts, made }: StoredPieces, code: number): Piece {
+  const piece = made[code] ?? pieceFrom(trait, JSON.parse(pieceAt(texts, code)) as Cell[]);
   made[code] = piece;
   return piece;
 }

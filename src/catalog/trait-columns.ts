@@ -25,10 +25,9 @@ export function pieceFrom(trait: Trait, cells: readonly Cell[]): Piece {
     return pieceOf({ ...identityOf(row), figures: [] }, trait);
   }
   const figures: Figure[] = [];
-  columns.forEach((column, at) => {
-    const cell = cells[at] ?? null;
-    const figureColumn = FIGURE_COLUMNS[column - IDENTITY_COLUMNS.length];
+  for (const [at, cell] of cells.entries()) {
+    const figureColumn = cell === null ? undefined : FIGURE_COLUMNS[(columns[at] ?? 0) - IDENTITY_COLUMNS.length];
     if (cell !== null && figureColumn !== undefined) addFigures(figures, figureColumn, cell);
-  });
-  return { figures: figures.sort(compareFigures) };
+  }
+  return { figures: figures.length < 2 ? figures : figures.sort(compareFigures) };
 }

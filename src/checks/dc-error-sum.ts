@@ -3,7 +3,6 @@ import { addWorstCase } from '../formulas/dc-error.js';
 import { BASES, weaknessOf, type Basis } from '../parts/basis.js';
 import type { OffsetReading } from '../parts/offset.js';
 import type { Reading } from '../parts/reading.js';
-import type { Readings } from '../parts/readings.js';
 import type { Known } from './check.js';
 import { isNothing, resistancesOf, supplyMultiplier, type ByDoubling, type CurrentTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
 import { numberAt, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
@@ -17,7 +16,8 @@ export interface DcErrorFound {
   readonly bias: ByDoubling;
   readonly offsetCurrent: ByDoubling;
   readonly offsetCurrentOfClass: CurrentTerm;
-  readonly bounded: Readings['bounded'];
+  /** Whether what is not known counts as its worst. */
+  readonly isWorst: boolean;
   readonly commonMode: ErrorTerm;
   /** What it adds depends on the supply the offset is rated at. */
   readonly supply: Reading | null;
@@ -73,7 +73,7 @@ export const SUM_TERMS: InNumbers<Asked, DcErrorFound>['terms'] = {
   bias: BY_DOUBLING,
   offsetCurrent: BY_DOUBLING,
   offsetCurrentOfClass: CURRENT,
-  bounded: { width: 1, write: (_, bounded, { row, at }) => void (row[at] = bounded(1, 0)) },
+  isWorst: { width: 1, write: (_, isWorst, { row, at }) => void (row[at] = isWorst ? 1 : 0) },
   commonMode: ADDEND,
   supply: { width: 2, write: (_, reading, to) => writeReading(reading, to) },
   output: ADDEND,

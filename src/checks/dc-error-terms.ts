@@ -116,7 +116,9 @@ export interface ByDoubling {
 
 /** Each made of the current as it is read then. */
 export function byDoubling(parameter: InputCurrent, readings: Readings, term: (reading: Reading | null) => CurrentTerm): ByDoubling {
-  return { steady: term(readings.inputCurrent(parameter, false)), doubling: term(readings.inputCurrent(parameter, true)) };
+  const { steady, doubling } = readings.inputCurrents(parameter);
+  const made = term(steady);
+  return { steady: made, doubling: doubling === steady ? made : term(doubling) };
 }
 
 /** Bias current through what the series resistances differ by. */

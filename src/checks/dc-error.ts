@@ -29,7 +29,7 @@ export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({
     bias: (asked, readings) => byDoubling('biasCurrent', readings, (reading) => biasTerm(asked, reading, readings)),
     offsetCurrent: (asked, readings) => byDoubling('offsetCurrent', readings, (reading) => offsetCurrentTerm(asked, reading, readings)),
     offsetCurrentOfClass: (asked, readings) => offsetCurrentTerm(asked, readings.ofClass('offsetCurrent'), readings),
-    bounded: (_, readings) => (worst, best) => readings.bounded(worst, best),
+    isWorst: (_, readings) => readings.bounded(1, 0) === 1,
     commonMode: commonModeTerm,
     supply: (_, readings) => readings.figureOrClass('supplyRejection'),
     output: outputTerm,

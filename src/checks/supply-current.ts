@@ -25,7 +25,7 @@ export const supplyCurrent: Check<SupplyCurrentDemand> = {
 
 function perPackage(one: Reading, readings: Readings): Reading {
   const channels = readings.identity.channels ?? 1;
-  const how = [one.how, `× ${channels} sections`].filter((step) => step !== null).join(', ');
+  const how = readings.brief ? null : [one.how, `× ${channels} sections`].filter((step) => step !== null).join(', ');
   return { ...one, value: one.value * channels, how };
 }
 

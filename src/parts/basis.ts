@@ -9,6 +9,11 @@ export function weaknessOf(basis: Basis): number {
 
 const WEAKNESS = Object.fromEntries(BASES.map((basis, place) => [basis, place])) as Record<Basis, number>;
 
+/** The weaker of two. */
+export function weaker(one: Basis, other: Basis): Basis {
+  return weaknessOf(other) > weaknessOf(one) ? other : one;
+}
+
 /** The weakest of several bases; `guaranteed` for none. */
 export function weakest(bases: readonly Basis[]): Basis {
   let weak = 0;

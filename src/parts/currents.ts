@@ -1,4 +1,4 @@
-import { weakest, weaknessOf } from './basis.js';
+import { weaker, weaknessOf } from './basis.js';
 import { DOUBLING_KELVIN, FET_BIAS_LIMIT } from './derating.js';
 import { figureSlot, type Figure } from './figures.js';
 import type { Operating, PartUnderTest, Reading } from './reading.js';
@@ -11,18 +11,35 @@ export type InputCurrent = 'biasCurrent' | 'offsetCurrent';
  * temperature means 25 °C. Of several there the strongest basis, then the worse value. If only a cooler one exists, FET inputs double per 10 K.
  */
 export function inputCurrentReading(test: PartUnderTest, parameter: InputCurrent): Reading | null {
-  return inputCurrentOf(test, parameter, () => inputDoubles(test));
+  const chosen = chosenOf(test, parameter);
+  if (chosen === null) return null;
+  return readCurrent(test, chosen.figure, chosen.cooler > 0 && inputDoubles(test) ? chosen.cooler : 0);
 }
 
-/** The same where it is known whether currents of this input double. */
-export function inputCurrentOf(test: PartUnderTest, parameter: InputCurrent, doubles: () => boolean): Reading | null {
+/** An input current as it is of an input whose currents do not double over temperature, and of one whose do: one and the same object where that says the same. */
+export interface BothCurrents {
+  readonly steady: Reading | null;
+  readonly doubling: Reading | null;
+}
+
+/** Figures of the current's own alone. */
+export function inputCurrents(test: PartUnderTest, parameter: InputCurrent): BothCurrents {
+  const chosen = chosenOf(test, parameter);
+  if (chosen === null) return NEITHER;
+  const steady = readCurrent(test, chosen.figure, 0);
+  return { steady, doubling: chosen.cooler > 0 ? readCurrent(test, chosen.figure, chosen.cooler) : steady };
+}
+
+const NEITHER: BothCurrents = { steady: null, doubling: null };
+
+/** The figure that counts, and by how many kelvin the stage is hotter than anything it is rated at. */
+function chosenOf(test: PartUnderTest, parameter: InputCurrent): { readonly figure: Figure; readonly cooler: number } | null {
   const all = nearestSupply(usable(test, parameter), test.operating.nominalSupply);
   const temperatures = all.map(ratedAt);
   const covering = temperatures.filter((rated) => rated >= test.operating.hottest);
   const rated = covering.length > 0 ? Math.min(...covering) : Math.max(...temperatures);
   const figure = worstOf(limitsFirst(all.filter((one) => ratedAt(one) === rated)), test.operating);
-  if (figure === undefined) return null;
-  return readCurrent(test, figure, covering.length === 0 && doubles() ? test.operating.hottest - rated : 0);
+  return figure === undefined ? null : { figure, cooler: covering.length === 0 ? test.operating.hottest - rated : 0 };
 }
 
 function worstOf(figures: readonly Figure[], operating: Operating): Figure | undefined {
@@ -49,7 +66,7 @@ export function inputDoubles(test: PartUnderTest): boolean {
 export const DOUBLING = 'doubling';
 
 function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Reading {
-  const growth = 2 ** (kelvin / DOUBLING_KELVIN);
+  const growth = kelvin === 0 ? 1 : 2 ** (kelvin / DOUBLING_KELVIN);
   const best = figure.assumed === true ? bestPossible(figure) : figure.value;
   const worst = figure.kind === 'typ' ? derate(figure) : figure.value;
   const value = test.outlook === 'optimistic' ? best : worst * growth;
@@ -57,6 +74,6 @@ function readCurrent(test: PartUnderTest, figure: Figure, kelvin: number): Readi
     ...(figure.kind === 'typ' ? [`typical ${factorText(derate({ ...figure, value: 1 }))}`] : []),
     ...(kelvin > 0 ? [`${factorText(growth)} for ${Number(kelvin.toPrecision(4))} K, ${DOUBLING} per ${DOUBLING_KELVIN} K`] : []),
   ];
-  const basis = weakest([basisOf(figure, test.operating), ...(kelvin > 0 ? (['estimated'] as const) : [])]);
-  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, steps.length === 0 ? null : steps.join(', ')) };
+  const basis = weaker(basisOf(figure, test.operating), kelvin > 0 ? 'estimated' : 'guaranteed');
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: test.brief === true ? null : howRead(test.outlook, figure, steps.length === 0 ? null : steps.join(', ')) };
 }

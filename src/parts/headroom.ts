@@ -63,7 +63,7 @@ function pointOf(test: PartUnderTest, side: Side, figure: Figure): HeadroomPoint
     value: test.outlook === 'optimistic' ? best : pessimistic,
     basis: weakest(bases),
     slot: figureSlot(figure),
-    how: howOf(test.outlook, figure, factor),
+    how: test.brief === true ? null : howOf(test.outlook, figure, factor),
     assisted: load?.kind === 'resistance' && load.to === (side === 'low' ? 'ground' : 'supply'),
     anywhere,
   };

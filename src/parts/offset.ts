@@ -24,7 +24,7 @@ export function offsetReading(test: PartUnderTest): OffsetReading | null {
     kind: figure.kind,
     basis: basisOf(figure, test.operating),
     slot: figureSlot(figure),
-    how: howRead(test.outlook, figure, figure.kind === 'typ' ? `typical ${factorText(derate({ ...figure, value: 1 }))}` : null),
+    how: test.brief === true ? null : howRead(test.outlook, figure, figure.kind === 'typ' ? `typical ${factorText(derate({ ...figure, value: 1 }))}` : null),
     overTemperature: rated === 'over',
     ratedSupply: figure.condition.supply ?? null,
   };
@@ -32,6 +32,7 @@ export function offsetReading(test: PartUnderTest): OffsetReading | null {
 
 /** The nearest supply, then 25 °C before other temperatures, then the larger. */
 function pick(figures: readonly Figure[], test: PartUnderTest): Figure | undefined {
-  const near = nearestSupply(figures, test.operating.nominalSupply).sort((a, b) => b.value - a.value);
+  if (figures.length < 2) return figures[0];
+  const near = [...nearestSupply(figures, test.operating.nominalSupply)].sort((a, b) => b.value - a.value);
   return near.find((figure) => (figure.condition.temperature ?? 25) === 25) ?? near[0];
 }

@@ -1,5 +1,5 @@
 import type { Basis } from './basis.js';
-import { inputCurrentOf, inputCurrentReading, inputDoubles, type InputCurrent } from './currents.js';
+import { inputCurrentReading, inputCurrents, inputDoubles, type BothCurrents, type InputCurrent } from './currents.js';
 import { PARAMETERS, type Parameter } from './figures.js';
 import type { Side } from './headroom.js';
 import { headroomCurve, heaviestPoint, REACH, type HeadroomQuestion, type HeadroomReading } from './headroom-curve.js';
@@ -20,8 +20,8 @@ export interface Readings {
   readonly identity: Identity;
   /** `end` names the end of a range parameter (supply voltage, temperature). */
   figure(parameter: Parameter, end?: RangeEnd): Reading | null;
-  /** An input current as one that doubles over temperature, or as one that does not: figures of its own alone. */
-  inputCurrent(parameter: InputCurrent, doubles: boolean): Reading | null;
+  /** An input current as one that doubles over temperature, and as one that does not: figures of its own alone. */
+  inputCurrents(parameter: InputCurrent): BothCurrents;
   /** Whether currents of this input double. */
   inputDoubles(): boolean;
   /** The figure, else the class's worst (pessimistic) or no contribution at all (optimistic), basis borrowed. */
@@ -54,7 +54,7 @@ export function readingsOf(test: PartUnderTest): Readings {
   return {
     identity: test.part,
     figure,
-    inputCurrent: (parameter, doubles) => inputCurrentOf(test, parameter, () => doubles),
+    inputCurrents: (parameter) => inputCurrents(test, parameter),
     inputDoubles: () => inputDoubles(test),
     figureOrClass: (parameter) => figure(parameter) ?? borrowed(test, parameter),
     ofClass: (parameter) => borrowed(test, parameter),

@@ -1,4 +1,4 @@
-import { weaknessOf, weakest, type Basis } from './basis.js';
+import { weaker, weaknessOf, type Basis } from './basis.js';
 import { COLD_HOT_FACTOR, derateHeadroom, SUPPLY_REACH, TEMPERATURE_REACH, TYPICAL_FACTOR } from './derating.js';
 import { figureSlot, PARAMETERS, type Figure, type Parameter } from './figures.js';
 import type { Operating, Outlook, PartUnderTest, Reading } from './reading.js';
@@ -6,13 +6,20 @@ import type { Operating, Outlook, PartUnderTest, Reading } from './reading.js';
 /** The reading of a parameter by the ordinary rules: limits first, then nearest supply, strongest basis, temperature. Null when missing. */
 export function scalarReading(test: PartUnderTest, parameter: Parameter, end?: RangeEnd): Reading | null {
   const all = usable(test, parameter).filter((figure) => end === undefined || figure.kind === end);
-  const figures = nearestSupply(limitsFirst(all), test.operating.nominalSupply);
-  const keyed = figures.map((figure) => ({ reading: readScalar(test, figure), key: preference(figure, test.operating) }));
-  return keyed.sort((a, b) => compareKeys(a.key, b.key))[0]?.reading ?? null;
+  const figure = preferred(nearestSupply(limitsFirst(all), test.operating.nominalSupply), test.operating);
+  return figure === undefined ? null : readScalar(test, figure);
+}
+
+function preferred(figures: readonly Figure[], operating: Operating): Figure | undefined {
+  // Most parts print one figure of a kind.
+  if (figures.length < 2) return figures[0];
+  const keyed = figures.map((figure) => ({ figure, key: preference(figure, operating) }));
+  return keyed.sort((a, b) => compareKeys(a.key, b.key))[0]?.figure;
 }
 
 /** A typical figure counts only where no limit is known. */
 export function limitsFirst(figures: readonly Figure[]): readonly Figure[] {
+  if (figures.length < 2) return figures;
   const limits = figures.filter((figure) => figure.kind !== 'typ');
   return limits.length > 0 ? limits : figures;
 }
@@ -29,7 +36,8 @@ export function usable(test: PartUnderTest, parameter: Parameter): Figure[] {
 }
 
 /** Of figures rated at several supplies, those rated nearest (as a ratio) to the nominal one; unstated counts as rated there. */
-export function nearestSupply(figures: readonly Figure[], nominal: number): Figure[] {
+export function nearestSupply(figures: readonly Figure[], nominal: number): readonly Figure[] {
+  if (figures.length < 2) return figures;
   const distance = (figure: Figure): number => Math.abs(Math.log((figure.condition.supply ?? nominal) / nominal));
   const least = Math.min(...figures.map(distance));
   return figures.filter((figure) => distance(figure) <= least + 1e-9);
@@ -54,18 +62,17 @@ export function isFarSupply(figure: Figure, nominal: number): boolean {
 
 /** Basis of a figure before temperature is looked at. */
 export function basisOf(figure: Figure, operating: Operating): Basis {
-  const bases: Basis[] = [figure.kind === 'typ' ? 'derated' : 'guaranteed'];
-  if (figure.assumed === true || isFarSupply(figure, operating.nominalSupply)) bases.push('assumed');
-  return weakest(bases);
+  if (figure.assumed === true || isFarSupply(figure, operating.nominalSupply)) return 'assumed';
+  return figure.kind === 'typ' ? 'derated' : 'guaranteed';
 }
 
 function readScalar(test: PartUnderTest, figure: Figure): Reading {
   const away = isAway(figure, test.operating) ? COLD_HOT_FACTOR[figure.parameter] : undefined;
-  const basis = weakest([basisOf(figure, test.operating), ...(away === undefined ? [] : (['estimated'] as const))]);
+  const basis = weaker(basisOf(figure, test.operating), away === undefined ? 'guaranteed' : 'estimated');
   const typical = figure.kind === 'typ' ? derate(figure) : figure.value;
   const best = figure.assumed === true ? bestPossible(figure) : figure.value;
   const value = test.outlook === 'optimistic' ? best : typical * (away ?? 1);
-  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: howRead(test.outlook, figure, howOf(figure, away)) };
+  return { value, printed: figure.value, kind: figure.kind, basis, slot: figureSlot(figure), how: test.brief === true ? null : howRead(test.outlook, figure, howOf(figure, away)) };
 }
 
 /** An assumed value can pass a check, not fail it: on the best reading it is as good as can be. */
@@ -118,7 +125,7 @@ export function factorText(factor: number): string {
 /** Smaller is preferred: strongest basis, then the temperature that covers the stage most closely, then the worse value. */
 function preference(figure: Figure, operating: Operating): readonly number[] {
   const away = isAway(figure, operating) && COLD_HOT_FACTOR[figure.parameter] !== undefined;
-  const basis = weakest([basisOf(figure, operating), ...(away ? (['estimated'] as const) : [])]);
+  const basis = weaker(basisOf(figure, operating), away ? 'estimated' : 'guaranteed');
   const worse = isMoreBetter(figure) ? figure.value : -figure.value;
   return [weaknessOf(basis), temperatureRank(figure, operating), worse];
 }

@@ -70,7 +70,7 @@ export interface AskedParts {
 /** What a question's tree is asked about one segment. */
 export function segmentOf(one: Question, { count, codes, only = null }: Pick<AskedParts, 'count' | 'codes' | 'only'>): Segment {
   const code = one.codes((trait, at) => codes(trait)[at] ?? 0);
-  return { count, only, code, grow: growing(one, code) };
+  return { count, only, code, columns: one.looksAtTraits ? codes : null, grow: growing(one, code) };
 }
 
 /** Answers for a part of whose combination nothing is known yet. */

@@ -5,7 +5,8 @@ import { decideBriefly, type BriefVerdict } from '../verdicts/decide.js';
 import { byTree, growing } from './buffers.js';
 import { decisionTree, type Step } from './decision-tree.js';
 import { digests } from './digest.js';
-import type { Both, CheckQuestion, Question } from './question.js';
+import type { CheckQuestion, Question } from './question.js';
+import type { BothReadings } from './remembering.js';
 
 /** A term of a composed check, worked out once for every distinct set of figures it looks at. */
 export interface TermQuestion extends Question {
@@ -15,11 +16,12 @@ export interface TermQuestion extends Question {
 }
 
 /** `asking` makes a question of what is to be found out from a part's readings. */
-export function termQuestion(asking: (find: (readings: Both) => number) => Question, term: (readings: Readings) => unknown): TermQuestion {
+export function termQuestion(asking: (find: (readings: BothReadings) => number) => Question, term: (readings: Readings) => unknown): TermQuestion {
   const worst: unknown[] = [];
   const best: unknown[] = [];
-  const asked = asking(([pessimistic, optimistic]) => {
-    const [low, high] = [term(pessimistic), term(optimistic)];
+  const asked = asking(({ pessimistic, optimistic, differ }) => {
+    const low = term(pessimistic);
+    const high = differ() ? term(optimistic) : low;
     best.push(alike(low, high) ? low : high);
     return worst.push(low) - 1;
   });
@@ -44,6 +46,7 @@ export function wholeQuestion(demands: Demands, { names, whole }: AnyComposition
     worst, best,
     // How many answers a term will have is not known beforehand.
     tree: decisionTree(() => null),
+    looksAtTraits: false,
     codes(traits) {
       const segments = terms.map((term) => ({ code: traits, grow: growing(term, traits) }));
       return (number, at) => {

@@ -52,7 +52,7 @@ function answersIn({ view, questions, current }: Asked, segment: number, buffers
 function decidedAt({ questions, current }: Asked, { answers, current: values }: Buffers, { at, decisive }: { readonly at: number; readonly decisive: Decisive }): Decided {
   const deciding = questions.filter((one, question) => {
     const answer = answers[question]?.[at] ?? 0;
-    one.settle(answer);
+    one.settle?.(answer);
     return one.digests.counts[answer] === COUNTS[decisive];
   });
   return { deciding: deciding.map(({ check }) => check), current: current.values[values[at] ?? 0] ?? null };

@@ -28,6 +28,8 @@ export interface Segment {
   /** Places of the parts that are asked about; null: all of them. */
   readonly only: Int32Array | null;
   code(trait: number, at: number): number;
+  /** The same codes, all of a trait together; null: they come one by one. */
+  readonly columns: ((trait: number) => Int32Array) | null;
   grow(at: number): Grown;
 }
 
@@ -77,9 +79,9 @@ export function decisionTree(width: (trait: number) => number | null): DecisionT
     }
     setChild(parent, -1 - leaf);
   };
-  /** The answer for one part, growing the tree where it ends; 0: it was grown. */
-  const descend = (segment: Pick<Segment, 'code' | 'grow'>, at: number): number => {
-    let child = root;
+  /** The answer for one part, from this child of the tree on; the tree grows where it ends. */
+  const descend = (segment: Pick<Segment, 'code' | 'grow'>, at: number, from: number): number => {
+    let child = from;
     while (child > 0) {
       const base = nodes.base(child);
       const code = segment.code(nodes.trait(child), at);
@@ -91,25 +93,20 @@ export function decisionTree(width: (trait: number) => number | null): DecisionT
     return -1 - grown.leaf;
   };
   return {
-    answer: (segment, at) => -1 - descend(segment, at),
+    answer: (segment, at) => -1 - descend(segment, at, root),
     classify(segment, into) {
       const { only } = segment;
       const asked = only?.length ?? segment.count;
       if (asked === 0) return;
-      const first = descend(segment, only?.[0] ?? 0);
+      // Whoever is asked first plants the root.
+      descend(segment, only?.[0] ?? 0, root);
       const base = root > 0 ? nodes.base(root) : -1;
-      if (base < 0) {
-        for (let place = 0; place < asked; place += 1) {
-          const at = only === null ? place : (only[place] ?? 0);
-          into[at] = -1 - (root < 0 ? first : descend(segment, at));
-        }
-        return;
-      }
-      const trait = nodes.trait(root);
+      const column = base < 0 ? null : (segment.columns?.(nodes.trait(root)) ?? null);
+      // Most questions look at one trait for most parts: there the answer stands in a table, one look away.
       for (let place = 0; place < asked; place += 1) {
         const at = only === null ? place : (only[place] ?? 0);
-        const child = table[base + segment.code(trait, at)] ?? 0;
-        into[at] = -1 - (child < 0 ? child : descend(segment, at));
+        const child = column === null ? root : (table[base + (column[at] ?? 0)] ?? 0);
+        into[at] = -1 - (child < 0 ? child : descend(segment, at, child));
       }
     },
   };

@@ -13,6 +13,7 @@ import type { JudgedPart, PartOutcome } from './judged-part.js';
 import { confirmations } from './confirm.js';
 import { dynamicRange } from './dynamic-range.js';
 import { hazardsOf } from './hazards.js';
+import type { BothReadings } from './remembering.js';
 
 /** What stays the same for all parts of one run. */
 export interface Judging {
@@ -79,9 +80,9 @@ export function verdictOn(check: AnyCheck, demands: Demands, [worst, best]: read
 }
 
 /** The same decision in numbers only; the readings should be brief. */
-export function briefVerdictOn(check: AnyCheck, demands: Demands, [worst, best]: readonly [Readings, Readings]): BriefVerdict | null {
-  const pessimistic = check.judge(demands, worst);
-  const optimistic = check.judge(demands, best);
+export function briefVerdictOn(check: AnyCheck, demands: Demands, readings: BothReadings): BriefVerdict | null {
+  const pessimistic = check.judge(demands, readings.pessimistic);
+  const optimistic = readings.differ() ? check.judge(demands, readings.optimistic) : pessimistic;
   return pessimistic === null || optimistic === null ? null : decideBriefly(check, pessimistic, optimistic);
 }
 

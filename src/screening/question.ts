@@ -2,12 +2,12 @@ import { CHECKS, type AnyCheck, type AnyComposition } from '../checks/index.js';
 import { CHECK_IDS, markOf } from '../demands/index.js';
 import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
-import type { Readings } from '../parts/readings.js';
 import { byTree, type AskedParts } from './buffers.js';
 import { composedQuestion, termQuestion, type TermQuestion, wholeQuestion } from './composed-question.js';
 import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
 import { digests, type Digests } from './digest.js';
 import { partByPart } from './part-by-part.js';
+import type { BothReadings } from './remembering.js';
 import { briefVerdictOn, notBuilt, type Judging } from './judge.js';
 import { standIn, type StandIn } from './stand-in.js';
 import type { SurveyRequest } from './survey.js';
@@ -18,6 +18,8 @@ export type CodeAt = (trait: number, at: number) => number;
 /** Something asked of every part of a view, with the answers found so far. */
 export interface Question {
   readonly tree: DecisionTree;
+  /** Whether it looks at the traits themselves. */
+  readonly looksAtTraits: boolean;
   /** What the question looks at, from the traits of the parts in one segment. */
   codes(traits: CodeAt): CodeAt;
   /** Answers the part whose codes these are; what it looked at goes to `path`. */
@@ -30,13 +32,11 @@ export interface CheckQuestion {
   readonly digests: Digests;
   /** Writes the number of each part's answer to its place in the segment. */
   classify(parts: AskedParts, into: Int32Array): void;
-  /** Called for every answer before its digest is used, while its segment is the one that was classified last. */
-  settle(answer: number): void;
+  /** Called for every answer before its digest is used, while its segment is the one that was classified last; null: every answer has its verdict from the beginning. */
+  readonly settle: ((answer: number) => void) | null;
   /** One and the same object for questions that number their answers alike. */
   readonly numbering: object;
 }
-
-export type Both = readonly [Readings, Readings];
 
 /** Every check the stage asks for, in the order of verdicts. What was found out for the stage asked before serves again where it asks the same. */
 export function checkQuestions(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): CheckQuestion[] {
@@ -50,7 +50,7 @@ export function checkQuestions(run: Judging, view: ScreenView, { circuit, outcom
     const mark = markOf(asked, circuit);
     if (before?.mark === mark) return before.question;
     const question = check.composition === null
-      ? checkQuestion(run, kept, { check: check.id, verdict: (readings: Both) => briefVerdictOn(check, demands, readings) })
+      ? checkQuestion(run, kept, { check: check.id, verdict: (readings) => briefVerdictOn(check, demands, readings) })
       : composedFor(run, kept, { check, circuit, composition: check.composition, outcomesOnly });
     kept.questions.set(form, { asked, circuit, mark, question });
     return question;
@@ -89,13 +89,12 @@ function keptFor({ demands: { operating }, strict, classes }: Judging, view: Scr
 
 interface Asked {
   readonly check: string;
-  readonly verdict: (readings: Both) => ReturnType<typeof briefVerdictOn>;
+  readonly verdict: (readings: BothReadings) => ReturnType<typeof briefVerdictOn>;
 }
 
 function checkQuestion(run: Judging, kept: Kept, { check, verdict }: Asked): CheckQuestion {
   const found = digests(run.demands.operating.nominalSupply);
-  // Every answer has its verdict from the beginning.
-  return { check, digests: found, settle: () => undefined, ...byTree(question(kept, (readings) => found.add(verdict(readings)))) };
+  return { check, digests: found, settle: null, ...byTree(question(kept, (readings) => found.add(verdict(readings)))) };
 }
 
 /** A number read off the pessimistic readings of every part, by answer. */
@@ -106,12 +105,12 @@ export interface ValueQuestion extends Question {
 /** What a part draws, for the order: pessimistic quiescent current, A. */
 export function currentQuestion(run: Judging, view: ScreenView): ValueQuestion {
   const kept = keptFor(run, view);
-  return (kept.current ??= valueQuestion(kept, (worst) => worst.figure('quiescentCurrent')?.value ?? null));
+  return (kept.current ??= valueQuestion(kept, ({ pessimistic }) => pessimistic.figure('quiescentCurrent')?.value ?? null));
 }
 
-function valueQuestion(kept: Kept, value: (worst: Readings) => number | null): ValueQuestion {
+function valueQuestion(kept: Kept, value: (readings: BothReadings) => number | null): ValueQuestion {
   const values: (number | null)[] = [];
-  return { values, ...question(kept, ([worst]) => values.push(value(worst)) - 1) };
+  return { values, ...question(kept, (readings) => values.push(value(readings)) - 1) };
 }
 
 interface Composed {
@@ -155,9 +154,10 @@ function compositionFor({ demands }: Judging, kept: Kept, { check, composition, 
   return made;
 }
 
-function question({ view, standIn: { readings, become } }: Kept, decide: (readings: Both) => number): Question {
+function question({ view, standIn: { readings, become } }: Kept, decide: (readings: BothReadings) => number): Question {
   return {
     tree: decisionTree((trait) => view.width(TRAITS[trait] ?? 'class')),
+    looksAtTraits: true,
     codes: (traits) => traits,
     answer(codeOf, path) {
       become((trait) => {

@@ -4,7 +4,7 @@ import type { ClassWorst, Outlook, PartUnderTest, ReadingRules } from '../parts/
 import { readingsOf, type Readings } from '../parts/readings.js';
 import { TRAIT_NUMBER } from '../parts/screen-view.js';
 import { TRAITS, type Piece, type Trait } from '../parts/traits.js';
-import { remembering } from './remembering.js';
+import { remembering, type BothReadings } from './remembering.js';
 
 /** Where a stand-in gets its pieces; asked once a trait, in the order they are first looked at. */
 export type PieceFinder = (trait: Trait) => Piece;
@@ -19,8 +19,7 @@ export interface StandInRules extends Omit<ReadingRules, 'classWorst'> {
  * finding holds for every part that has them. One stand-in serves for one part after the other.
  */
 export interface StandIn {
-  /** Pessimistic and optimistic. */
-  readonly readings: readonly [Readings, Readings];
+  readonly readings: BothReadings;
   /** Stands in for another part from now on. */
   readonly become: (find: PieceFinder) => void;
 }
@@ -41,10 +40,12 @@ export function standIn(tier: Tier, rules: StandInRules): StandIn {
     return piece;
   };
   const part = partLike(tier, figures, look);
-  const readings = (outlook: Outlook): Readings => remembering(readingsOf(testOf(part, { ...rules, outlook, look: (parameter) => void look(parameter) })), look);
+  const plain = (outlook: Outlook): Readings => readingsOf(testOf(part, { ...rules, outlook, look: (parameter) => void look(parameter) }));
+  const readings = remembering({ pessimistic: plain('pessimistic'), optimistic: plain('optimistic') }, look);
   return {
-    readings: [readings('pessimistic'), readings('optimistic')],
+    readings,
     become(find) {
+      readings.start();
       looked.fill(null);
       figures.length = 0;
       finder = find;

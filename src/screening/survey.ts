@@ -114,6 +114,7 @@ interface Answered {
 }
 
 function settle(one: CheckQuestion, { answers, count, only }: Pick<Answered, 'answers' | 'count' | 'only'>): void {
+  if (one.settle === null) return;
   const asked = only?.length ?? count;
   for (let place = 0; place < asked; place += 1) one.settle(answers[only === null ? place : (only[place] ?? 0)] ?? 0);
 }

@@ -59,7 +59,7 @@ function answered(check: ReturnType<typeof sumCheck>, terms: readonly TermQuesti
   const columns = [0, 1].map((trait) => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0)));
   const into = new Int32Array(PARTS.length);
   question.classify({ first: 0, count: PARTS.length, codes: (trait) => columns[trait] ?? into }, into);
-  into.forEach((answer) => question.settle(answer));
+  into.forEach((answer) => question.settle?.(answer));
   return { made, passes: [...into].map((answer) => question.digests.pass(answer)?.margin ?? null) };
 }
 
@@ -92,14 +92,14 @@ describe('a check put together from terms', () => {
     const into = new Int32Array(PARTS.length);
     for (const first of [0, PARTS.length]) {
       question.classify({ first, count: PARTS.length, codes: (trait) => columns[trait] ?? into }, into);
-      into.forEach((answer) => question.settle(answer));
+      into.forEach((answer) => question.settle?.(answer));
       expect([...into].map((answer) => question.digests.counts[answer])).toEqual([0, COUNTS.fail, COUNTS.unknown, COUNTS.fail, COUNTS.unknown, COUNTS.unknown]);
     }
     // Also of a part in a segment that was not asked about last.
     for (const first of [0, PARTS.length]) expect(PARTS.map((_, at) => question.digests.pass(first + at)?.margin ?? null)).toEqual(answered(sumCheck({ required: 0.15, because: '' }), terms).passes);
     // Settled parts are not added up again; one that passes is, for what it is ranked by.
     const before = check.calls.whole;
-    into.forEach((answer) => question.settle(answer));
+    into.forEach((answer) => question.settle?.(answer));
     expect(check.calls.whole).toBe(before);
   });
 
