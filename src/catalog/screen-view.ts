@@ -8,14 +8,15 @@ import { pieceFrom } from './trait-columns.js';
 
 /** The approved list as its dictionary has it. The dictionary must be fresh, and stay so while the view is used. */
 export function storedView(database: Database.Database, size: number): ScreenView {
-  const pieces = database.prepare<[string], string>('select pieces from dictionary_trait where trait = ?').pluck();
+  // As bytes: the engine makes a text of them in a fraction of the time the driver does.
+  const pieces = database.prepare<[string], Buffer>('select cast(pieces as blob) from dictionary_trait where trait = ?').pluck();
   const codes = database.prepare<[string, number], [number, Buffer]>('select width, codes from dictionary_segment where trait = ? and segment = ?').raw();
   const row = database.prepare<[number], Cell[]>(`select ${PART_COLUMNS.join(', ')} from part where key = ?`).raw();
   const id = database.prepare<[number], string>('select id from part where key = ?').pluck();
   const ids = new Map<number, string>();
   const known = new Map<Trait, StoredPieces>();
   const stored = (trait: Trait): StoredPieces => {
-    const found = known.get(trait) ?? { texts: (pieces.get(trait) ?? '').split(BETWEEN_PIECES), made: [] };
+    const found = known.get(trait) ?? { texts: (pieces.get(trait)?.toString('utf8') ?? '').split(BETWEEN_PIECES), made: [] };
     known.set(trait, found);
     return found;
   };

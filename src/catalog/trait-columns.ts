@@ -1,7 +1,7 @@
 import { compareFigures } from '../parts/figure-order.js';
 import type { Figure } from '../parts/figures.js';
 import { isParameter, pieceOf, TRAITS, type Piece, type Trait } from '../parts/traits.js';
-import { FIGURE_COLUMNS, IDENTITY_COLUMNS, PART_COLUMNS } from './part-columns.js';
+import { FIGURE_COLUMNS, IDENTITY_COLUMNS, PART_COLUMNS, type FigureColumn } from './part-columns.js';
 import { addFigures, identityOf, type Cell } from './part-row.js';
 
 /** Columns that are not called as their trait. */
@@ -16,18 +16,23 @@ function columnsOf(trait: Trait): number[] {
   return names.map((name) => PART_COLUMNS.indexOf(name));
 }
 
+/** Of a parameter: what its cells hold. */
+const FIGURES_OF = new Map<Trait, FigureColumn[]>();
+for (const column of FIGURE_COLUMNS) FIGURES_OF.set(column.parameter, [...(FIGURES_OF.get(column.parameter) ?? []), column]);
+
 /** The piece of a part whose row has these cells in the columns of the trait. */
 export function pieceFrom(trait: Trait, cells: readonly Cell[]): Piece {
-  const columns = TRAIT_COLUMNS.get(trait) ?? [];
   if (!isParameter(trait)) {
+    const columns = TRAIT_COLUMNS.get(trait) ?? [];
     const row = new Array<Cell>(PART_COLUMNS.length).fill(null);
     columns.forEach((column, at) => { row[column] = cells[at] ?? null; });
     return pieceOf({ ...identityOf(row), figures: [] }, trait);
   }
   const figures: Figure[] = [];
-  for (const [at, cell] of cells.entries()) {
-    const figureColumn = cell === null ? undefined : FIGURE_COLUMNS[(columns[at] ?? 0) - IDENTITY_COLUMNS.length];
-    if (cell !== null && figureColumn !== undefined) addFigures(figures, figureColumn, cell);
+  const columns = FIGURES_OF.get(trait) ?? [];
+  for (let at = 0; at < columns.length; at += 1) {
+    const [column, cell] = [columns[at], cells[at] ?? null];
+    if (cell !== null && column !== undefined) addFigures(figures, column, cell);
   }
   return { figures: figures.length < 2 ? figures : figures.sort(compareFigures) };
 }

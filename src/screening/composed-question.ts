@@ -3,7 +3,7 @@ import type { Demands } from '../demands/index.js';
 import type { Readings } from '../parts/readings.js';
 import { decideBriefly, type BriefVerdict } from '../verdicts/decide.js';
 import { byTree, growing } from './buffers.js';
-import { decisionTree, type Step } from './decision-tree.js';
+import { DecisionTree, type Step } from './decision-tree.js';
 import { digests } from './digest.js';
 import type { CheckQuestion, Question } from './question.js';
 import type { BothReadings } from './remembering.js';
@@ -45,10 +45,10 @@ export function wholeQuestion(demands: Demands, { names, whole }: AnyComposition
   return {
     worst, best,
     // How many answers a term will have is not known beforehand.
-    tree: decisionTree(() => null),
+    tree: new DecisionTree(() => null),
     looksAtTraits: false,
     codes(traits) {
-      const segments = terms.map((term) => ({ code: traits, grow: growing(term, traits) }));
+      const segments = terms.map((term) => ({ code: traits, columns: null, grow: growing(term, traits) }));
       return (number, at) => {
         const [term, segment] = [terms[number], segments[number]];
         return term === undefined || segment === undefined ? 0 : term.tree.answer(segment, at);

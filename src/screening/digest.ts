@@ -73,13 +73,15 @@ export function digestsByPart(size: number, { nominalSupply, verdictOf, countedO
       if (counts[answer] !== UNSETTLED) return;
       const counted = countedOf(answer);
       counts[answer] = counted === null ? 0 : countOf(counted);
-      if (counted !== null && 'required' in counted && counted.outcome === 'fail') distances[answer] = shortness(counted, nominalSupply);
+      if (counted === null || !('required' in counted)) return;
+      if (counted.outcome === 'fail') distances[answer] = shortness(counted, nominalSupply);
+      if (counted.outcome === 'pass') passes.set(answer, digestFor(counted));
     },
     pass(answer) {
       const before = passes.get(answer);
       if (before !== undefined) return before;
       const verdict = verdictOf(answer);
-      const digest = verdict?.outcome === 'pass' ? digestOf(kindOf(verdict), { margin: verdict.margin ?? 0, spare: verdict.spare ?? 0 }) : null;
+      const digest = verdict?.outcome === 'pass' ? digestFor(verdict) : null;
       passes.set(answer, digest);
       return digest;
     },
@@ -117,6 +119,11 @@ function numberOf(kind: Kind, list: Kind[]): number {
 
 function digestOf({ hasMargin, hasSpare, check, outcome, basis, standsOn }: Kind, { margin, spare }: { readonly margin: number; readonly spare: number }): Digest {
   return { check, outcome, basis, standsOn, margin: hasMargin ? margin : null, spare: hasSpare ? spare : null };
+}
+
+/** A digest of its own, for an answer that one part has. */
+function digestFor({ check, outcome, basis, standsOn, margin, spare }: BriefVerdict): Digest {
+  return { check, outcome, basis, standsOn, margin, spare };
 }
 
 function countOf({ outcome, basis }: Pick<BriefVerdict, 'outcome' | 'basis'>): number {

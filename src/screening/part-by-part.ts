@@ -13,6 +13,8 @@ import type { CheckQuestion } from './question.js';
 /** Terms of a composed check, and the parts it is asked of. */
 interface Composed {
   readonly check: AnyCheck;
+  /** What a pass is ranked by is wanted of most parts that pass. */
+  readonly ranksPasses: boolean;
   readonly terms: readonly TermQuestion[];
   readonly view: Pick<ScreenView, 'size' | 'segment' | 'codes'>;
 }
@@ -23,7 +25,7 @@ const BRIEF = { brief: true } as const;
  * A composed check asked of one part after the other. Figures are few, so its terms stand in tables; their combinations are nearly as many as
  * the parts, so that looking one up would take longer than adding it up. How a part counts is kept, whatever it was made of is not.
  */
-export function partByPart(demands: Demands, { check, terms, view }: Composed): CheckQuestion {
+export function partByPart(demands: Demands, { check, terms, view, ranksPasses }: Composed): CheckQuestion {
   const asked = askedColumns(terms);
   const one = onePart(terms, view);
   const { composition } = check;
@@ -46,7 +48,8 @@ export function partByPart(demands: Demands, { check, terms, view }: Composed): 
     const side = tables?.sides?.(asked.columns(), place) ?? null;
     if (side !== null) return countedBy(side) ?? verdictOf(position);
     const both = tables?.findings(asked.columns(), place) ?? fromTerms(position);
-    return both === null ? null : (countedBy(both) ?? decideBriefly(check, both.pessimistic, both.optimistic));
+    if (both === null) return null;
+    return (ranksPasses ? null : countedBy(both)) ?? decideBriefly(check, both.pessimistic, both.optimistic);
   };
   const digests = digestsByPart(view.size, { nominalSupply: demands.operating.nominalSupply, verdictOf, countedOf });
   return {
@@ -110,7 +113,7 @@ function onePart(terms: readonly TermQuestion[], view: Composed['view']) {
   };
   const answerOf = (term: TermQuestion): number => {
     const code = term.codes((trait, place) => codes(trait)[place] ?? 0);
-    return term.tree.answer({ code, grow: growing(term, code) }, at);
+    return term.tree.answer({ code, columns: term.looksAtTraits ? codes : null, grow: growing(term, code) }, at);
   };
   return {
     /** One answer each, at place 0. */

@@ -4,7 +4,7 @@ import { TRAIT_NUMBER, type ScreenView } from '../parts/screen-view.js';
 import { TRAITS } from '../parts/traits.js';
 import { byTree, type AskedParts } from './buffers.js';
 import { composedQuestion, termQuestion, type TermQuestion, wholeQuestion } from './composed-question.js';
-import { decisionTree, type DecisionTree, type Step } from './decision-tree.js';
+import { DecisionTree, type Step } from './decision-tree.js';
 import { digests, type Digests } from './digest.js';
 import { partByPart } from './part-by-part.js';
 import type { BothReadings } from './remembering.js';
@@ -138,8 +138,8 @@ function composedFor(run: Judging, kept: Kept, of: Composed): CheckQuestion {
   if (outcomesOnly) found.limits += 1;
   const isLoop = composition.inNumbers(demands)?.side !== null;
   // A sum of numbers that is wanted once is made in less time than it is kept.
-  const isKept = outcomesOnly && (isLoop || found.limits > 1);
-  if (!isKept) return partByPart(demands, { check, terms: found.terms, view: kept.view });
+  const isKept = outcomesOnly && found.limits > 1;
+  if (!isKept) return partByPart(demands, { check, terms: found.terms, view: kept.view, ranksPasses: outcomesOnly });
   return composedQuestion(demands, check, (found.whole ??= wholeQuestion(demands, composition, found.terms)));
 }
 
@@ -156,7 +156,7 @@ function compositionFor({ demands }: Judging, kept: Kept, { check, composition, 
 
 function question({ view, standIn: { readings, become } }: Kept, decide: (readings: BothReadings) => number): Question {
   return {
-    tree: decisionTree((trait) => view.width(TRAITS[trait] ?? 'class')),
+    tree: new DecisionTree((trait) => view.width(TRAITS[trait] ?? 'class')),
     looksAtTraits: true,
     codes: (traits) => traits,
     answer(codeOf, path) {

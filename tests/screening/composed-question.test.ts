@@ -6,7 +6,7 @@ import { outputLow } from '../../src/checks/output-low.js';
 import type { Demands } from '../../src/demands/index.js';
 import { composedQuestion, type TermQuestion, wholeQuestion } from '../../src/screening/composed-question.js';
 import { COUNTS } from '../../src/screening/digest.js';
-import { decisionTree } from '../../src/screening/decision-tree.js';
+import { DecisionTree } from '../../src/screening/decision-tree.js';
 import { partByPart } from '../../src/screening/part-by-part.js';
 import { TRAITS, type Trait } from '../../src/parts/traits.js';
 import type { Finding } from '../../src/verdicts/finding.js';
@@ -38,7 +38,7 @@ function sumCheck(asked: Sum) {
 /** A term whose answer is the code of one trait. */
 function termOf(trait: number, worst: readonly number[], best: readonly number[]): TermQuestion {
   return {
-    worst, best, tree: decisionTree(() => worst.length), codes: (traits) => traits,
+    worst, best, tree: new DecisionTree(() => worst.length), looksAtTraits: true, codes: (traits) => traits,
     answer: (codeOf, path) => {
       const code = codeOf(trait);
       path.push({ trait, code });
@@ -82,12 +82,12 @@ describe('a check put together from terms', () => {
     expect(check.calls.whole).toBe(6);
   });
 
-  it('is part by part what it is by combinations', () => {
+  it.each([true, false])('is part by part what it is by combinations, what passes are ranked by kept: %s', (ranksPasses) => {
     const terms = [termOf(0, ONE, [0.1, 0.1, 0.1]), termOf(1, [0, 0.5], [0, 0.5])];
     const check = sumCheck({ required: 0.15, because: '' });
     const codesIn = (trait: number): Int32Array => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0));
     const view = { size: 2 * PARTS.length, segment: PARTS.length, codes: (trait: string, _: number, into: Int32Array) => into.set(codesIn(TRAITS.indexOf(trait as Trait))) };
-    const question = partByPart(DEMANDS, { check: check.sealed, terms, view });
+    const question = partByPart(DEMANDS, { check: check.sealed, terms, view, ranksPasses });
     const columns = [0, 1].map(codesIn);
     const into = new Int32Array(PARTS.length);
     for (const first of [0, PARTS.length]) {
