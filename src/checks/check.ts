@@ -69,8 +69,7 @@ export interface AnyComposition {
 export interface AnyNumbers {
   readonly terms: readonly { readonly width: number; readonly write: (one: unknown, to: { readonly row: Row; readonly at: number }) => void }[];
   readonly finding: (row: Row) => Finding | null;
-  /** As the check has it; null: it has none. */
-  readonly side: ((row: Row) => Finding | null) | null;
+  readonly stands: (row: Row) => number;
 }
 
 /** A check with its question bound inside, so that all checks have one type. */
@@ -116,11 +115,11 @@ function compositionOf<Asked extends object>({ terms, asks, whole, finding, inNu
   };
 }
 
-function numbersFor<Asked>({ terms, finding, side }: InNumbers<Asked, Readonly<Record<string, unknown>>>, names: readonly string[], asked: Asked): AnyNumbers {
+function numbersFor<Asked>({ terms, finding, stands }: InNumbers<Asked, Readonly<Record<string, unknown>>>, names: readonly string[], asked: Asked): AnyNumbers {
   if (Object.keys(terms).join() !== names.join()) throw new RangeError(`numbers of ${Object.keys(terms).join()} for the terms ${names.join()}`);
   return {
     terms: Object.values(terms).map(({ width, write }) => ({ width, write: (one, to) => write(asked, one, to) })),
     finding: (row) => finding(asked, row),
-    side: side === undefined ? null : (row) => side(asked, row),
+    stands: (row) => stands(asked, row),
   };
 }

@@ -10,9 +10,16 @@ import { composed, type Known } from './check.js';
 import { countedTerms } from './dc-error-counted.js';
 import { basisOf, currentOf, SUM_TERMS, totalOf, type DcErrorFound, type Total } from './dc-error-sum.js';
 import { biasTerm, byDoubling, commonModeTerm, driftTerm, offsetCurrentTerm, offsetTerm, outputTerm, type ErrorQuestion, type ErrorTerm } from './dc-error-terms.js';
-import { rowOf, type InNumbers } from './in-numbers.js';
+import { boundStands, numbersStand, rowOf, type InNumbers } from './in-numbers.js';
 
-const NUMBERS: InNumbers<DcErrorDemand, DcErrorFound> = { terms: SUM_TERMS, finding: (asked, row) => decidedBy(asked, totalOf(asked, row)) };
+const NUMBERS: InNumbers<DcErrorDemand, DcErrorFound> = {
+  terms: SUM_TERMS,
+  finding: (asked, row) => decidedBy(asked, totalOf(asked, row)),
+  stands(asked, row) {
+    const { known, borrowed, weakness, missing } = totalOf(asked, row);
+    return missing > 0 ? boundStands(asked, known) : numbersStand(asked, { offered: known, borrowed, weakness });
+  },
+};
 
 /** Sum of the magnitudes of all DC errors at the output, worst corner, against its limit (M5). */
 export const dcError = composed<DcErrorDemand, DcErrorFound, DcErrorSum>({

@@ -1,5 +1,8 @@
+import type { NumberDemand } from '../demands/index.js';
 import { weaknessOf, type Basis } from '../parts/basis.js';
+import { meets } from '../verdicts/compare.js';
 import type { BoundFinding, NumberFinding } from '../verdicts/finding.js';
+import { standingOfNumbers } from '../verdicts/standing.js';
 import type { Known, Unlimited } from './check.js';
 
 /** What the terms of one part are in numbers, term after term in their order. */
@@ -20,8 +23,22 @@ export interface InNumbers<Asked, Found> {
   readonly terms: { readonly [Name in keyof Found]: NumbersOf<Asked, Found[Name]> };
   /** Null: this part cannot be told from numbers alone. */
   readonly finding: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
-  /** The same but for the number offered: any on the same side of the limit, where that takes less work. */
-  readonly side?: (asked: Asked, row: Row) => NumberFinding | BoundFinding | null;
+  /** How that finding stands against the limit, without making it: there is one for every part, and only of a few more is asked. One of `STANDS`. */
+  readonly stands: (asked: Asked, row: Row) => number;
+}
+
+/** How one reading stands, as a number: what passes has the weakness of its basis added. */
+export const STANDS = { untold: -1, fails: 0, open: 1, passes: 2 } as const;
+
+/** A number against its limit; `borrowed`: how much of it is. */
+export function numbersStand({ required, sense }: NumberDemand, of: { readonly offered: number; readonly borrowed: number; readonly weakness: number }): number {
+  const standing = standingOfNumbers({ required, sense, offered: of.offered, borrowed: of.borrowed });
+  return standing === 'fail' ? STANDS.fails : standing === 'open' ? STANDS.open : STANDS.passes + of.weakness;
+}
+
+/** A bound against its limit. */
+export function boundStands({ required, sense }: NumberDemand, known: number): number {
+  return meets(required, known, sense) ? STANDS.open : STANDS.fails;
 }
 
 /** A number of a row; not a number: not known. */

@@ -71,3 +71,4 @@ export const CHECKS: readonly AnyCheck[] = [
 ];
 
 export type { AnyCheck, AnyComposition, AnyNumbers } from './check.js';
+export { STANDS } from './in-numbers.js';

@@ -4,7 +4,7 @@ import { BriefNumbers } from '../verdicts/brief-finding.js';
 import { meets } from '../verdicts/compare.js';
 import type { NumberFinding } from '../verdicts/finding.js';
 import type { HeadroomFound } from './output-headroom.js';
-import { numberAt, writeReading, type InNumbers, type Row } from './in-numbers.js';
+import { numberAt, STANDS, writeReading, type InNumbers, type Row } from './in-numbers.js';
 
 /** Vertices that can decide are one or two of a stage's; a part with more is told from its terms. */
 const MOST = 3;
@@ -26,6 +26,7 @@ export const HEADROOM_NUMBERS: InNumbers<HeadroomDemand, HeadroomFound> = {
     drift: { width: 2, write: (_, term, to) => writeReading(term, to) },
   },
   finding: atVertices,
+  stands: standsAtVertices,
 };
 
 function writeCurve(binding: HeadroomFound['curve']['binding'], row: Row, at: number): void {
@@ -44,11 +45,27 @@ export function shareOf(offset: number, drift: number): number {
   return (Number.isNaN(offset) ? 0 : offset) + (Number.isNaN(drift) ? 0 : drift);
 }
 
+function standsAtVertices(_: HeadroomDemand, row: Row): number {
+  const count = numberAt(row, AT.vertices);
+  if (Number.isNaN(count)) return STANDS.untold;
+  const [offset, drift] = [numberAt(row, AT.offset), driftIn(row)];
+  const share = shareOf(offset, drift);
+  for (let place = 0; place < count; place += 1) {
+    if (!meets(numberAt(row, AT.places + 2 * place), numberAt(row, AT.places + 2 * place + 1) + share, 'at-most')) return STANDS.fails;
+  }
+  return STANDS.passes + weaknessIn(row, offset, drift);
+}
+
+const driftIn = (row: Row): number => (numberAt(row, AT.isOver) === 1 ? NaN : numberAt(row, AT.drift));
+
+const weaknessIn = (row: Row, offset: number, drift: number): number =>
+  Math.max(numberAt(row, AT.curveWeakness), Number.isNaN(offset) ? 0 : numberAt(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : numberAt(row, AT.driftWeakness));
+
 /** Of the vertices the one that is told: of least spare, and one that fails before one that holds. */
 function atVertices({ unit, sense }: HeadroomDemand, row: Row): NumberFinding | null {
   const count = numberAt(row, AT.vertices);
   if (Number.isNaN(count)) return null;
-  const [offset, drift] = [numberAt(row, AT.offset), numberAt(row, AT.isOver) === 1 ? NaN : numberAt(row, AT.drift)];
+  const [offset, drift] = [numberAt(row, AT.offset), driftIn(row)];
   const share = shareOf(offset, drift);
   let required = 0;
   let offered = 0;
@@ -60,6 +77,5 @@ function atVertices({ unit, sense }: HeadroomDemand, row: Row): NumberFinding | 
     if (place > 0 && (passes === holds ? room - needed >= required - offered : passes)) continue;
     [required, offered, holds] = [room, needed, passes];
   }
-  const weakest = Math.max(numberAt(row, AT.curveWeakness), Number.isNaN(offset) ? 0 : numberAt(row, AT.offsetWeakness), Number.isNaN(drift) ? 0 : numberAt(row, AT.driftWeakness));
-  return new BriefNumbers({ required, unit, sense }, BASES[weakest] ?? 'guaranteed', { offered, borrowed: 0 });
+  return new BriefNumbers({ required, unit, sense }, BASES[weaknessIn(row, offset, drift)] ?? 'guaranteed', { offered, borrowed: 0 });
 }

@@ -4,7 +4,7 @@ import type { Reading } from '../parts/reading.js';
 import { BriefNumbers } from '../verdicts/brief-finding.js';
 import { meets } from '../verdicts/compare.js';
 import type { NumberFinding } from '../verdicts/finding.js';
-import { numberAt, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
+import { numberAt, STANDS, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
 import { needsInputCapacitance, ownPoleOf, type PhaseMarginFound } from './phase-margin-figures.js';
 import { isMarginLeft, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
 
@@ -36,14 +36,17 @@ export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
     capacitiveLoad: NOTHING,
     stableGain: NOTHING,
   },
-  finding: (asked, row) => inLoop(asked, row, (numbers) => worstMargin(numbers.loop, numbers.ends).margin),
-  side: (asked, row) => inLoop(asked, row, (numbers) => sideOfMargin(numbers.loop, numbers.ends, asked.required)),
+  finding(asked, row) {
+    const numbers = loopIn(asked, row);
+    return numbers === null ? null : marginFinding(asked, numbers, worstMargin(numbers.loop, numbers.ends).margin);
+  },
+  stands(asked, row) {
+    const numbers = loopIn(asked, row);
+    if (numbers === null) return STANDS.untold;
+    const offered = sideOfMargin(numbers.loop, numbers.ends, asked.required);
+    return meets(asked.required, offered, asked.sense) ? STANDS.passes + weaknessIn(asked, numbers, offered) : STANDS.fails;
+  },
 };
-
-function inLoop(asked: Asked, row: Row, offeredBy: (numbers: LoopNumbers) => number): NumberFinding | null {
-  const numbers = loopIn(asked, row);
-  return numbers === null ? null : marginFinding(asked, numbers, offeredBy(numbers));
-}
 
 /** All that decides about a loop, in numbers. */
 export interface LoopNumbers {
@@ -93,14 +96,14 @@ function behind(outputResistance: number, { capacitance, resistance, isolation }
 }
 
 /** What decides. What the input rests on counts in a pass alone, and where it can weaken that any further. */
-export function marginFinding(asked: Asked, { loop, ends, weakness, needsInput, inputWeakness }: LoopNumbers, offered: number): NumberFinding {
-  const { required, sense } = asked;
-  let weakest = weakness;
-  if (needsInput && meets(required, offered, sense)) {
-    if (!Number.isNaN(inputWeakness)) weakest = Math.max(weakness, inputWeakness);
-    else if (weakness < ASSUMED && isInputAssumed({ loop, ends, required })) weakest = ASSUMED;
-  }
-  return new BriefNumbers(asked, BASES[weakest] ?? 'assumed', { offered, borrowed: 0 });
+export function marginFinding(asked: Asked, numbers: LoopNumbers, offered: number): NumberFinding {
+  return new BriefNumbers(asked, BASES[weaknessIn(asked, numbers, offered)] ?? 'assumed', { offered, borrowed: 0 });
+}
+
+function weaknessIn({ required, sense }: Asked, { loop, ends, weakness, needsInput, inputWeakness }: LoopNumbers, offered: number): number {
+  if (!needsInput || !meets(required, offered, sense)) return weakness;
+  if (!Number.isNaN(inputWeakness)) return Math.max(weakness, inputWeakness);
+  return weakness < ASSUMED && isInputAssumed({ loop, ends, required }) ? ASSUMED : weakness;
 }
 
 /** No input has more than this (common practice, from memory), F. */

@@ -12,9 +12,12 @@ export const COUNTS = { fail: 1, weak: 1 << 10, unknown: 1 << 20 } as const;
 export interface Digests {
   /** Called before anything else is asked of an answer. */
   settle(answer: number): void;
-  /** By answer: what it adds to the part's sum, and to its distance from fitting. They are replaced when an answer comes that has no place in them. */
+  /** By answer: what it adds to the part's sum. Replaced when an answer comes that has no place in it. */
   readonly counts: Int32Array;
-  readonly distances: Float64Array;
+  /** By answer: what it adds to the part's distance from fitting, as `counts`; null: it is worked out for few. */
+  readonly distances: Float64Array | null;
+  /** The same for one answer. */
+  distance(answer: number): number;
   /** What a pass is ranked by, one and the same object whenever it is asked for; null for any other answer. */
   pass(answer: number): Digest | null;
 }
@@ -48,6 +51,7 @@ export function digests(nominalSupply: number, verdictOf: (answer: number) => Br
   return {
     get counts() { return counts.numbers(); },
     get distances() { return values.numbers(); },
+    distance: (answer) => (counts.at(answer) === COUNTS.fail ? values.at(answer) : 0),
     add: (verdict) => put(added++, verdict),
     settle(answer) {
       if (counts.at(answer) === UNSETTLED) put(answer, verdictOf(answer));
@@ -62,20 +66,21 @@ export function digests(nominalSupply: number, verdictOf: (answer: number) => Br
   };
 }
 
-/** The same where every part of a list has an answer of its own, numbered by its position: what a pass is ranked by is worked out again when it is asked for. */
+/** The same where every part of a list has an answer of its own, numbered by its position: how far a failure is off and what a pass is ranked by are worked out when they are asked for. */
 export function digestsByPart(size: number, { nominalSupply, verdictOf, countedOf = verdictOf }: ByPart): Digests {
   const counts = new Int32Array(size).fill(UNSETTLED);
-  const distances = new Float64Array(size);
   const passes = new Map<number, Digest | null>();
   return {
-    counts, distances,
+    counts,
+    distances: null,
+    distance(answer) {
+      const verdict = counts[answer] === COUNTS.fail ? verdictOf(answer) : null;
+      return verdict === null ? 0 : shortness(verdict, nominalSupply);
+    },
     settle(answer) {
       if (counts[answer] !== UNSETTLED) return;
       const counted = countedOf(answer);
       counts[answer] = counted === null ? 0 : countOf(counted);
-      if (counted === null || !('required' in counted)) return;
-      if (counted.outcome === 'fail') distances[answer] = shortness(counted, nominalSupply);
-      if (counted.outcome === 'pass') passes.set(answer, digestFor(counted));
     },
     pass(answer) {
       const before = passes.get(answer);
@@ -95,8 +100,8 @@ interface ByPart {
   readonly countedOf?: (answer: number) => Counted | null;
 }
 
-/** How an answer counts: only of a failure a number is asked. */
-export type Counted = (Pick<BriefVerdict, 'basis'> & { readonly outcome: 'pass' | 'unknown' }) | BriefVerdict;
+/** How an answer counts. */
+export type Counted = Pick<BriefVerdict, 'outcome' | 'basis'>;
 
 const UNSETTLED = -1;
 const none = (): null => null;

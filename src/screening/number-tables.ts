@@ -1,4 +1,4 @@
-import type { AnyNumbers } from '../checks/index.js';
+import { STANDS, type AnyNumbers } from '../checks/index.js';
 import type { Finding } from '../verdicts/finding.js';
 import type { TermQuestion } from './composed-question.js';
 
@@ -11,15 +11,19 @@ export interface BothFindings {
 /** The answers of each term as numbers side by side, in either outlook. */
 export interface NumberTables {
   /** Both findings of the part with these answers, term by term at `place`; null: numbers alone do not tell. */
-  findings: FindingsAt;
-  /** The same where what is offered need only be on its side of the limit; null: no less work than the findings themselves. */
-  readonly sides: FindingsAt | null;
+  findings(columns: readonly Int32Array[], place: number): BothFindings | null;
+  /** How both stand, without making them. */
+  stands(columns: readonly Int32Array[], place: number): BothStanding;
 }
 
-type FindingsAt = (columns: readonly Int32Array[], place: number) => BothFindings | null;
+/** Each one of `STANDS`. The same object is filled anew for every part. */
+export interface BothStanding {
+  worst: number;
+  best: number;
+}
 
 /** Tables that grow with the answers. */
-export function numberTables({ terms, finding, side }: AnyNumbers, questions: readonly TermQuestion[]): NumberTables {
+export function numberTables({ terms, finding, stands }: AnyNumbers, questions: readonly TermQuestion[]): NumberTables {
   const tables = questions.map((question, number) => tableOf(question, terms[number] ?? NOTHING));
   const row = new Float64Array(terms.reduce((sum, { width }) => sum + width, 0));
   /** Whether both readings have these numbers. */
@@ -42,16 +46,31 @@ export function numberTables({ terms, finding, side }: AnyNumbers, questions: re
       if (table !== undefined && column !== undefined) at = copy(table.best, { answer: column[place] ?? 0, width: table.width, row, at });
     }
   };
-  const both = (one: AnyNumbers['finding']): FindingsAt => (columns, place) => {
-    const isSame = fillWorst(columns, place);
-    const pessimistic = one(row);
-    if (pessimistic === null) return null;
-    if (isSame) return { pessimistic, optimistic: pessimistic };
-    fillBest(columns, place);
-    const optimistic = one(row);
-    return optimistic === null ? null : { pessimistic, optimistic };
+  const standing: BothStanding = { worst: 0, best: 0 };
+  return {
+    findings(columns, place) {
+      const isSame = fillWorst(columns, place);
+      const pessimistic = finding(row);
+      if (pessimistic === null) return null;
+      if (isSame) return { pessimistic, optimistic: pessimistic };
+      fillBest(columns, place);
+      const optimistic = finding(row);
+      return optimistic === null ? null : { pessimistic, optimistic };
+    },
+    stands(columns, place) {
+      const isSame = fillWorst(columns, place);
+      const worst = stands(row);
+      let best = worst;
+      // What fails or passes in one reading only is open; what is not told in one is told in none.
+      if (!isSame && worst !== STANDS.untold) {
+        fillBest(columns, place);
+        best = stands(row);
+      }
+      standing.worst = best === STANDS.untold ? best : worst;
+      standing.best = best;
+      return standing;
+    },
   };
-  return { findings: both(finding), sides: side === null ? null : both(side) };
 }
 
 type InNumbers = AnyNumbers['terms'][number];

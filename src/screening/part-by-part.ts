@@ -1,20 +1,17 @@
-import type { AnyCheck } from '../checks/index.js';
+import { STANDS, type AnyCheck } from '../checks/index.js';
 import type { Demands } from '../demands/index.js';
 import type { ScreenView } from '../parts/screen-view.js';
-import { BASES, type Basis } from '../parts/basis.js';
+import { BASES } from '../parts/basis.js';
 import { decideBriefly, type BriefVerdict } from '../verdicts/decide.js';
-import { outcomeOf } from '../verdicts/standing.js';
 import { codesOf, growing, segmentOf, type AskedParts } from './buffers.js';
 import type { TermQuestion } from './composed-question.js';
 import { digestsByPart, type Counted } from './digest.js';
-import { numberTables, type BothFindings } from './number-tables.js';
+import { numberTables, type BothFindings, type BothStanding } from './number-tables.js';
 import type { CheckQuestion } from './question.js';
 
 /** Terms of a composed check, and the parts it is asked of. */
 interface Composed {
   readonly check: AnyCheck;
-  /** What a pass is ranked by is wanted of most parts that pass. */
-  readonly ranksPasses: boolean;
   readonly terms: readonly TermQuestion[];
   readonly view: Pick<ScreenView, 'size' | 'segment' | 'codes'>;
 }
@@ -25,7 +22,7 @@ const BRIEF = { brief: true } as const;
  * A composed check asked of one part after the other. Figures are few, so its terms stand in tables; their combinations are nearly as many as
  * the parts, so that looking one up would take longer than adding it up. How a part counts is kept, whatever it was made of is not.
  */
-export function partByPart(demands: Demands, { check, terms, view, ranksPasses }: Composed): CheckQuestion {
+export function partByPart(demands: Demands, { check, terms, view }: Composed): CheckQuestion {
   const asked = askedColumns(terms);
   const one = onePart(terms, view);
   const { composition } = check;
@@ -40,16 +37,15 @@ export function partByPart(demands: Demands, { check, terms, view, ranksPasses }
     return pessimistic === null || optimistic === null ? null : { pessimistic, optimistic };
   };
   const verdictOf = (position: number): BriefVerdict | null => {
-    const both = tables?.findings(one.columns(position), 0) ?? fromTerms(position);
+    const isAtHand = asked.holds(position);
+    const both = tables?.findings(isAtHand ? asked.columns() : one.columns(position), isAtHand ? asked.placeOf(position) : 0) ?? fromTerms(position);
     return both === null ? null : decideBriefly(check, both.pessimistic, both.optimistic);
   };
   const countedOf = (position: number): Counted | null => {
-    const place = asked.placeOf(position);
-    const side = tables?.sides?.(asked.columns(), place) ?? null;
-    if (side !== null) return countedBy(side) ?? verdictOf(position);
-    const both = tables?.findings(asked.columns(), place) ?? fromTerms(position);
-    if (both === null) return null;
-    return (ranksPasses ? null : countedBy(both)) ?? decideBriefly(check, both.pessimistic, both.optimistic);
+    const standing = tables?.stands(asked.columns(), asked.placeOf(position)) ?? UNTOLD;
+    if (standing.worst !== STANDS.untold) return countedBy(standing);
+    const both = fromTerms(position);
+    return both === null ? null : decideBriefly(check, both.pessimistic, both.optimistic);
   };
   const digests = digestsByPart(view.size, { nominalSupply: demands.operating.nominalSupply, verdictOf, countedOf });
   return {
@@ -66,23 +62,35 @@ export function partByPart(demands: Demands, { check, terms, view, ranksPasses }
   };
 }
 
-/** A pass or an open answer is no more than itself; null: of anything else the numbers are asked. */
-function countedBy({ pessimistic, optimistic }: BothFindings): Counted | null {
-  const outcome = outcomeOf(pessimistic, optimistic);
-  if (outcome === 'unknown') return OPEN;
-  return outcome === 'pass' && pessimistic.kind === 'numbers' ? PASSES[pessimistic.basis] : null;
+const UNTOLD: BothStanding = { worst: STANDS.untold, best: STANDS.untold };
+
+/** The outcome as `outcomeOf` has it. */
+function countedBy({ worst, best }: BothStanding): Counted {
+  if (worst >= STANDS.passes && best >= STANDS.passes) return PASSES[worst - STANDS.passes] ?? OPEN;
+  return best === STANDS.fails && worst < STANDS.passes ? FAILS : OPEN;
 }
 
 const OPEN: Counted = { outcome: 'unknown', basis: null };
-const PASSES = Object.fromEntries(BASES.map((basis) => [basis, { outcome: 'pass', basis }])) as unknown as Record<Basis, Counted>;
+const FAILS: Counted = { outcome: 'fail', basis: null };
+/** By weakness. */
+const PASSES: readonly Counted[] = BASES.map((basis) => ({ outcome: 'pass', basis }));
 
 /** The answers of all terms for the parts that were asked about last; looked up when one of them is settled. */
 function askedColumns(terms: readonly TermQuestion[]) {
   let parts: AskedParts | null = null;
   let isRead = false;
   let columns = terms.map(() => new Int32Array(0));
+  /** By place: when it was read last. */
+  let marks = new Int32Array(0);
+  let reading = 0;
   const read = ({ count, codes, only }: AskedParts): void => {
-    if ((columns[0]?.length ?? 0) < count) columns = terms.map(() => new Int32Array(count));
+    if (marks.length < count) {
+      columns = terms.map(() => new Int32Array(count));
+      marks = new Int32Array(count);
+    }
+    reading += 1;
+    if (only == null) marks.fill(reading);
+    else for (const at of only) marks[at] = reading;
     terms.forEach((term, number) => term.tree.classify(segmentOf(term, { count, codes, only: only ?? null }), columns[number] ?? new Int32Array(count)));
   };
   return {
@@ -95,6 +103,8 @@ function askedColumns(terms: readonly TermQuestion[]) {
       return columns;
     },
     placeOf: (position: number): number => position - (parts?.first ?? 0),
+    /** Whether the answers of this part are in the columns. */
+    holds: (position: number): boolean => isRead && parts !== null && marks[position - parts.first] === reading,
   };
 }
 

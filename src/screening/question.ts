@@ -130,16 +130,15 @@ interface KeptComposition {
   limits: number;
 }
 
-/** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, and of a loop from the first on, from wholes that are kept. */
+/** A check put together from terms: part by part, or, where one limit after the other is asked about the few that are open, from wholes that are kept. */
 function composedFor(run: Judging, kept: Kept, of: Composed): CheckQuestion {
   const { check, composition, outcomesOnly } = of;
   const { demands } = run;
   const found = compositionFor(run, kept, of);
   if (outcomesOnly) found.limits += 1;
-  const isLoop = composition.inNumbers(demands)?.side !== null;
-  // A sum of numbers that is wanted once is made in less time than it is kept.
+  // What is wanted once is made in less time than it is kept.
   const isKept = outcomesOnly && found.limits > 1;
-  if (!isKept) return partByPart(demands, { check, terms: found.terms, view: kept.view, ranksPasses: outcomesOnly });
+  if (!isKept) return partByPart(demands, { check, terms: found.terms, view: kept.view });
   return composedQuestion(demands, check, (found.whole ??= wholeQuestion(demands, composition, found.terms)));
 }
 

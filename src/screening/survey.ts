@@ -119,7 +119,7 @@ function settle(one: CheckQuestion, { answers, count, only }: Pick<Answered, 'an
   for (let place = 0; place < asked; place += 1) one.settle(answers[only === null ? place : (only[place] ?? 0)] ?? 0);
 }
 
-/** Distances are added in the order of the verdicts, as they are for a part judged alone: the sums agree to the last bit. */
+/** Of the distances what is known by answer: the rest is added for the parts that can be among the nearest. */
 function addUp({ buffers: { sums, distances }, fails }: Counting, { one, at, answers, count, only }: Answered): void {
   const { counts: adds, distances: far } = one.digests;
   let failed = 0;
@@ -132,7 +132,7 @@ function addUp({ buffers: { sums, distances }, fails }: Counting, { one, at, ans
     sums[part] = (sums[part] ?? 0) + add;
     if (add !== COUNTS.fail) continue;
     failed += 1;
-    distances[part] = (distances[part] ?? 0) + (far[answer] ?? 0);
+    if (far !== null) distances[part] = (distances[part] ?? 0) + (far[answer] ?? 0);
   }
   fails[at] = (fails[at] ?? 0) + failed;
 }
@@ -158,6 +158,13 @@ function sortOutOpen(counting: Counting, { segment, count, codes, left: { left, 
   for (const fit of fitsIn(counting, { first, fitting, count, codes, known })) counting.fits.push(fit);
 }
 
+/** Added in the order of the verdicts, as for a part judged alone: the sums agree to the last bit. */
+function distanceOf({ questions, buffers }: Counting, part: number): number {
+  let distance = 0;
+  for (const [at, { digests }] of questions.entries()) distance += digests.distance(buffers.answers[at]?.[part] ?? 0);
+  return distance;
+}
+
 function sortOut(counting: Counting, { segment, count, codes }: Place): void {
   const { view, outcomes, undecided, nearest, buffers } = counting;
   const first = segment * view.segment;
@@ -166,7 +173,7 @@ function sortOut(counting: Counting, { segment, count, codes }: Place): void {
     const sum = buffers.sums[at] ?? 0;
     if ((sum & (COUNTS.weak - 1)) !== 0) {
       outcomes[first + at] = OUTCOME.rejected;
-      nearest.see(first + at, buffers.distances[at] ?? 0);
+      if (nearest.wants(buffers.distances[at] ?? 0)) nearest.see(first + at, distanceOf(counting, at));
     } else if (sum >= COUNTS.unknown) {
       outcomes[first + at] = OUTCOME.undecided;
       undecided.push(first + at);

@@ -25,7 +25,8 @@ export function standingOf(finding: Finding): Standing {
   return standings.includes('open') ? 'open' : 'pass';
 }
 
-function standingOfNumbers({ required, offered, sense, borrowed = 0 }: NumberFinding): Standing {
+/** A number against its limit. */
+export function standingOfNumbers({ required, offered, sense, borrowed = 0 }: Pick<NumberFinding, 'required' | 'offered' | 'sense' | 'borrowed'>): Standing {
   if (!meets(required, offered, sense)) return 'fail';
   const tooMuch = borrowed > BORROWED_SHARE * Math.abs(required) * (1 + 1e-9);
   return tooMuch ? 'open' : 'pass';

@@ -82,12 +82,12 @@ describe('a check put together from terms', () => {
     expect(check.calls.whole).toBe(6);
   });
 
-  it.each([true, false])('is part by part what it is by combinations, what passes are ranked by kept: %s', (ranksPasses) => {
+  it('is part by part what it is by combinations', () => {
     const terms = [termOf(0, ONE, [0.1, 0.1, 0.1]), termOf(1, [0, 0.5], [0, 0.5])];
     const check = sumCheck({ required: 0.15, because: '' });
     const codesIn = (trait: number): Int32Array => Int32Array.from(PARTS.map((codes) => codes[trait] ?? 0));
     const view = { size: 2 * PARTS.length, segment: PARTS.length, codes: (trait: string, _: number, into: Int32Array) => into.set(codesIn(TRAITS.indexOf(trait as Trait))) };
-    const question = partByPart(DEMANDS, { check: check.sealed, terms, view, ranksPasses });
+    const question = partByPart(DEMANDS, { check: check.sealed, terms, view });
     const columns = [0, 1].map(codesIn);
     const into = new Int32Array(PARTS.length);
     for (const first of [0, PARTS.length]) {

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { expect, it } from 'vitest';
-import type { AnyNumbers } from '../../src/checks/index.js';
+import { STANDS, type AnyNumbers } from '../../src/checks/index.js';
 import type { TermQuestion } from '../../src/screening/composed-question.js';
+import { DecisionTree } from '../../src/screening/decision-tree.js';
 import { numberTables } from '../../src/screening/number-tables.js';
 import { BriefNumbers } from '../../src/verdicts/brief-finding.js';
 
@@ -14,12 +15,12 @@ const ADDING: AnyNumbers = {
     { width: 2, write: (one, { row, at }) => row.set(one as Pair, at) },
   ],
   finding: (row) => (Number.isNaN(row[0]) ? null : new BriefNumbers({ required: 1, unit: 'V', sense: 'at-most' }, 'guaranteed', { offered: (row[0] ?? 0) + (row[1] ?? 0) * (row[2] ?? 0), borrowed: 0 })),
-  side: null,
+  stands: (row) => (Number.isNaN(row[0]) ? STANDS.untold : (row[0] ?? 0) + (row[1] ?? 0) * (row[2] ?? 0) <= 1 ? STANDS.passes : STANDS.fails),
 };
 
 function question(worst: unknown[], best: unknown[]): TermQuestion {
   const never = (): never => { throw new Error('not asked here'); };
-  return { worst, best, tree: { classify: never, answer: never }, codes: never, answer: never };
+  return { worst, best, tree: new DecisionTree(() => null), looksAtTraits: false, codes: never, answer: never };
 }
 
 it('the numbers of a part are those of its answers, in either outlook, also of answers that came later', () => {
@@ -43,6 +44,8 @@ it('the numbers of a part are those of its answers, in either outlook, also of a
       expect(found?.pessimistic).toMatchObject({ offered: one + x * y });
       expect(found?.optimistic).toMatchObject({ offered: (same ? one : one + 1) + x * (alike ? y : y + 1) });
       expect(found?.optimistic === found?.pessimistic).toBe(same && alike);
+      const standing = (offered: number): number => (offered <= 1 ? STANDS.passes : STANDS.fails);
+      expect(tables.stands(columns, place)).toEqual({ worst: standing(one + x * y), best: standing((same ? one : one + 1) + x * (alike ? y : y + 1)) });
     });
   }));
 });
@@ -50,7 +53,10 @@ it('the numbers of a part are those of its answers, in either outlook, also of a
 it('a part that numbers do not tell has none, in either outlook', () => {
   const tables = numberTables(ADDING, [question([NaN, 1], [1, NaN]), question([[0, 0]], [[0, 0]])]);
   const columns = [Int32Array.of(0, 1), Int32Array.of(0, 0)];
-  expect([tables.findings(columns, 0), tables.findings(columns, 1), tables.sides]).toEqual([null, null, null]);
+  for (const place of [0, 1]) {
+    expect(tables.findings(columns, place)).toBeNull();
+    expect(tables.stands(columns, place).worst).toBe(STANDS.untold);
+  }
 });
 
 function push({ worst, best }: TermQuestion, low: unknown, high: unknown): void {
