@@ -13,7 +13,7 @@ export interface Binding {
 }
 
 /** Volts: far above what rounding and the tolerance of a comparison can turn, far below what matters. */
-const CLOSE = 1e-6;
+export const CLOSE = 1e-6;
 
 /**
  * What the offset takes is the same at every vertex, so the least room left by the curve alone stays the least.

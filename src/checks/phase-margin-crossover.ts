@@ -45,11 +45,6 @@ export function laggingCrossover(gain: (frequency: number) => number, most: numb
   return Math.exp(falsePosition(at, { position: low, left: at(low) }, { position: high, left }));
 }
 
-/** What that crossover is certainly not below, Hz. */
-export function leastCrossover(gain: (frequency: number) => number, most: number): number {
-  return Math.exp(Math.log(most) + gain(most) - SLACK);
-}
-
 /** More than rounding of a logarithm. */
 const SLACK = 1e-9;
 

@@ -21,6 +21,13 @@ interface Known {
   readonly isExact: boolean;
   readonly isResistive: boolean;
   readonly bare: Map<number, Factor>;
+  readonly lags: Map<number, InputLag>;
+}
+
+/** What resistors alone and a capacitance at the − input make of the output: V/V at DC, and s (times a frequency in Hz the tangent of the lag there). */
+export interface InputLag {
+  readonly share: number;
+  readonly time: number;
 }
 
 const KNOWN = new WeakMap<Loop['network'], Known>();
@@ -32,7 +39,7 @@ function knownOf(network: Loop['network']): Known {
   if (before !== undefined) return before;
   const { minus } = network;
   const plus = heard(network.plus);
-  const known = { plus, isExact: isExact({ plus, minus }), isResistive: resistorsAlone(network), bare: new Map<number, Factor>() };
+  const known = { plus, isExact: isExact({ plus, minus }), isResistive: resistorsAlone(network), bare: new Map<number, Factor>(), lags: new Map<number, InputLag>() };
   KNOWN.set(network, known);
   return known;
 }
@@ -64,6 +71,34 @@ export function factorsOf(loop: Loop, gainBandwidth: number): Factors {
 
 /** Size of what comes back, V/V: too near to 1 for the care that hypot takes. */
 const share = ({ re, im }: Complex): number => Math.sqrt(re * re + im * im);
+
+/** Of a network of resistors alone. */
+export function inputLagOf(loop: Loop): InputLag {
+  const known = knownOf(loop.network);
+  const capacitance = minusCapacitance(loop);
+  const before = known.lags.get(capacitance);
+  if (before !== undefined) return before;
+  if (known.lags.size >= CAPACITANCES) known.lags.clear();
+  const lag = lagIn(bareOf({ plus: known.plus, minus: loop.network.minus, minusCapacitance: capacitance }, known), capacitance);
+  known.lags.set(capacitance, lag);
+  return lag;
+}
+
+function lagIn(bare: Factor, capacitance: number): InputLag {
+  const share = magnitude(bare(0));
+  if (capacitance === 0) return { share, time: 0 };
+  // The tangent is taken where it is near 1: farther off rounding would tell.
+  const timeAt = (frequency: number): number => {
+    const { re, im } = bare(frequency);
+    return -im / re / frequency;
+  };
+  let time = timeAt(SOMEWHERE);
+  for (let step = 0; step < 2 && time > 0; step += 1) time = timeAt(1 / time);
+  return { share, time };
+}
+
+/** Hz. */
+const SOMEWHERE = 1e6;
 
 function bareOf(networks: LoopNetworks, { bare }: Known): Factor {
   const before = bare.get(networks.minusCapacitance);

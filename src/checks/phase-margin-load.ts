@@ -16,7 +16,7 @@ export function loadAngle(load: LoadedOutput | null, frequency: number): number 
 }
 
 /** 2π·(R||RL)·CL, seconds: times the frequency it is the tangent of the angle. The zero stands at Riso, the pole at Ro + Riso. */
-function slope({ resistance, capacitance }: LoadedOutput, ohms: number): number {
+export function slope({ resistance, capacitance }: LoadedOutput, ohms: number): number {
   const parallel = resistance === null ? ohms : (ohms * resistance) / (ohms + resistance);
   return 2 * Math.PI * parallel * capacitance;
 }

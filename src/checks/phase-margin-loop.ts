@@ -1,6 +1,7 @@
 import type { OpenTransimpedance } from '../demands/index.js';
 import type { PinNetwork } from '../formulas/pin-network.js';
-import { opened, phaseBounds, type Opened } from './phase-margin-opened.js';
+import { highestCrossover, lagsOf, lowestCrossover, marginThere } from './phase-margin-lags.js';
+import { opened, type Opened } from './phase-margin-opened.js';
 
 /** What hangs behind the amplifier's open-loop output resistance: Ω and F; resistance null: a capacitance alone. */
 export interface LoadedOutput {
@@ -64,13 +65,15 @@ export function sideOfMargin(loop: Loop, ends: Ends, required: number): number {
   return marginBound(loop, ends, required) ?? worstMargin(loop, ends).margin;
 }
 
-/** Degrees; null: only the crossover tells. The margin is least at the most gain bandwidth. */
+/** Degrees, without a search and without opening the loop; null: only the crossover tells. The margin is least at the most gain bandwidth. */
 function marginBound(loop: Loop, { most }: Ends, required: number): number | null {
-  const bounds = phaseBounds(loop, most);
-  if (bounds === null) return null;
-  const low = marginOf(bounds.fastest());
+  const lags = lagsOf(loop);
+  if (lags === null) return null;
+  const highest = highestCrossover(lags, most);
+  if (!(highest > 0 && highest < Infinity)) return null;
+  const low = marginThere(lags, highest);
   if (low >= required + SURELY) return low;
-  const high = marginOf(bounds.slowest());
+  const high = marginThere(lags, lowestCrossover(lags, most));
   return high < required - SURELY ? high : null;
 }
 

@@ -9,7 +9,7 @@ import { needsInputCapacitance, ownPoleOf, type PhaseMarginFound } from './phase
 import { isMarginLeft, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
 
 /** Where the numbers stand in a row: Hz, degrees, F and Ω (not a number: not known), each with the weakness of its basis behind it. */
-const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWeakness: 5, crossover: 6, input: 8, inputWeakness: 9, resistance: 10, resistanceWeakness: 11 } as const;
+const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWeakness: 5, crossover: 6, input: 8, inputWeakness: 9, resistance: 10, resistanceWeakness: 11, capacitiveLoad: 12 } as const;
 
 type Asked = PhaseMarginDemand;
 
@@ -33,7 +33,7 @@ export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
     inputCapacitance: READING,
     outputResistance: READING,
     // Neither decides about a loop that is known.
-    capacitiveLoad: NOTHING,
+    capacitiveLoad: { width: 1, write: (_, reading, { row, at }) => void (row[at] = reading?.value ?? NaN) },
     stableGain: NOTHING,
   },
   finding(asked, row) {
@@ -42,11 +42,22 @@ export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
   },
   stands(asked, row) {
     const numbers = loopIn(asked, row);
-    if (numbers === null) return STANDS.untold;
+    if (numbers === null) return standsUnloaded(asked, row);
     const offered = sideOfMargin(numbers.loop, numbers.ends, asked.required);
     return meets(asked.required, offered, asked.sense) ? STANDS.passes + weaknessIn(asked, numbers, offered) : STANDS.fails;
   },
 };
+
+/** With a load behind nobody knows what, and no load stated by the maker, what is left without it is a bound: enough of it leaves the part open. */
+function standsUnloaded(asked: Asked, row: Row): number {
+  const [least, most] = [numberAt(row, AT.least), numberAt(row, AT.most)];
+  if (Number.isNaN(most) || !Number.isNaN(numberAt(row, AT.capacitiveLoad))) return STANDS.untold;
+  const input = needsInputCapacitance(asked) ? numberAt(row, AT.input) : NaN;
+  const loop = loopOf(asked, { ownPole: ownPoleIn(row), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance: 0 });
+  return meets(asked.required, sideOfMargin(loop, { least, most }, asked.required), asked.sense) ? STANDS.open : STANDS.fails;
+}
+
+const ownPoleIn = (row: Row): number => ownPoleOf({ angle: numberAt(row, AT.angle), crossover: numberAt(row, AT.crossover), gainBandwidth: numberAt(row, AT.printed) });
 
 /** All that decides about a loop, in numbers. */
 export interface LoopNumbers {
@@ -67,10 +78,10 @@ function loopIn(asked: Asked, row: Row): LoopNumbers | null {
   if (Number.isNaN(most) || Number.isNaN(outputResistance)) return null;
   const needsInput = needsInputCapacitance(asked);
   const input = needsInput ? numberAt(row, AT.input) : NaN;
-  const own = { angle: numberAt(row, AT.angle), crossover: numberAt(row, AT.crossover), gainBandwidth: numberAt(row, AT.printed) };
-  const ofAngle = Number.isNaN(own.angle) ? ASSUMED : own.angle >= 90 || !Number.isNaN(own.crossover) ? numberAt(row, AT.angleWeakness) : ESTIMATED;
+  const angle = numberAt(row, AT.angle);
+  const ofAngle = Number.isNaN(angle) ? ASSUMED : angle >= 90 || !Number.isNaN(numberAt(row, AT.crossover)) ? numberAt(row, AT.angleWeakness) : ESTIMATED;
   return {
-    loop: loopOf(asked, { ownPole: ownPoleOf(own), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance }),
+    loop: loopOf(asked, { ownPole: ownPoleIn(row), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance }),
     ends: { least, most },
     weakness: Math.max(numberAt(row, AT.speedWeakness), ofAngle, outputResistance === 0 ? 0 : numberAt(row, AT.resistanceWeakness)),
     needsInput,

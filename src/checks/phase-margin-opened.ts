@@ -1,5 +1,5 @@
 import { divide, magnitude, phase } from '../formulas/complex.js';
-import { boundedCrossover, crossoverOf, laggingCrossover, leastCrossover } from './phase-margin-crossover.js';
+import { boundedCrossover, crossoverOf, laggingCrossover } from './phase-margin-crossover.js';
 import { factorsOf, isResistive, onlyLags, type Factors } from './phase-margin-factors.js';
 import { loadAngle } from './phase-margin-load.js';
 import type { Loop, PhaseParts } from './phase-margin-loop.js';
@@ -75,27 +75,6 @@ function gainOf({ ownPole }: Loop, { size }: Factors, gainBandwidth: number): (f
 
 /** Of resistors alone what comes back is most at DC: Hz, above any crossover. */
 const mostCrossover = ({ bare }: Factors, gainBandwidth: number): number => gainBandwidth * magnitude(bare(0));
-
-/** Where the phase goes at a frequency that is certainly not below the crossover, and at one that is certainly not above it. */
-export interface PhaseBounds {
-  fastest(): PhaseParts;
-  slowest(): PhaseParts;
-}
-
-/** Of a loop that only lags, without a search and without opening it; null: of any other nothing is certain. */
-export function phaseBounds(loop: Loop, gainBandwidth: number): PhaseBounds | null {
-  if (!onlyLags(loop)) return null;
-  const factors = factorsOf(loop, gainBandwidth);
-  const most = mostCrossover(factors, gainBandwidth);
-  if (!(most > 0 && most < Infinity)) return null;
-  return {
-    fastest: () => phaseAt(loop, factors, most * ROUNDED),
-    slowest: () => phaseAt(loop, factors, leastCrossover(gainOf(loop, factors, gainBandwidth), most)),
-  };
-}
-
-/** Above what rounding of a frequency can be. */
-const ROUNDED = 1 + 1e-9;
 
 function phaseAt({ load, ownPole }: Loop, { bare, loaded }: Factors, crossover: number): PhaseParts {
   const feedback = bare(crossover);
