@@ -23,19 +23,32 @@ export interface Unloaded {
  * input-capacitance pole takes is taken off. Null where it cannot decide: a margin above 45° is asked, or it is not enough.
  */
 export function byCapacitiveLoad(asked: PhaseMarginDemand, stated: Reading | null, unloaded: Unloaded): NumberFinding | null {
-  if (stated === null || asked.required > MEANT) return null;
-  const gain = Math.max(1, asked.noiseGain / statedGain(stated.slot));
+  if (stated === null || !decidesByLoad(asked)) return null;
+  const gain = gainOver(asked, stated);
   const share = shareLeft(unloaded.margin);
   const offered = stated.value * gain * share;
   const required = asked.load.capacitance;
-  // Not by the tolerance of a verdict: a picofarad is much of a capacitance.
-  if (offered < required * (1 - 1e-9)) return null;
+  if (isShort(offered, required)) return null;
   return {
     kind: 'numbers', required, offered, unit: 'F', sense: 'at-least',
     basis: weakest([stated.basis, unloaded.basis]), slot: stated.slot, how: unloaded.brief === true ? null : howOf(stated, gain, share),
     turnsAt: { figure: 'capacitiveLoad', kind: 'max', value: required / (gain * share), unit: 'F' },
   };
 }
+
+/** A limit that stands for so much margin decides about no more. */
+export const decidesByLoad = ({ required }: Pick<PhaseMarginDemand, 'required'>): boolean => required <= MEANT;
+
+/** What the maker's limit amounts to at the noise gain of the stage, F. */
+export const loadAtGain = (asked: Pick<PhaseMarginDemand, 'noiseGain'>, stated: Reading): number => stated.value * gainOver(asked, stated);
+
+/** Whether so much (F) is enough where this margin is left without the load, degrees. */
+export const isLoadEnough = ({ load }: Pick<PhaseMarginDemand, 'load'>, atGain: number, margin: number): boolean => !isShort(atGain * shareLeft(margin), load.capacitance);
+
+const gainOver = ({ noiseGain }: Pick<PhaseMarginDemand, 'noiseGain'>, stated: Reading): number => Math.max(1, noiseGain / statedGain(stated.slot));
+
+/** Not by the tolerance of a verdict: a picofarad is much of a capacitance. */
+const isShort = (offered: number, required: number): boolean => offered < required * (1 - 1e-9);
 
 function howOf(stated: Reading, gain: number, share: number): string {
   return [

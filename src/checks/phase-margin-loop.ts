@@ -65,6 +65,13 @@ export function sideOfMargin(loop: Loop, ends: Ends, required: number): number {
   return marginBound(loop, ends, required) ?? worstMargin(loop, ends).margin;
 }
 
+/** What the least margin is certainly not below, degrees; -180 where nothing is certain. */
+export function leastMargin(loop: Loop, { most }: Ends): number {
+  const lags = lagsOf(loop);
+  const highest = lags === null ? Infinity : highestCrossover(lags, most);
+  return lags !== null && highest > 0 && highest < Infinity ? marginThere(lags, highest) - SURELY : -180;
+}
+
 /** Degrees, without a search and without opening the loop; null: only the crossover tells. The margin is least at the most gain bandwidth. */
 function marginBound(loop: Loop, { most }: Ends, required: number): number | null {
   const lags = lagsOf(loop);

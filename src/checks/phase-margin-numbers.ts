@@ -5,11 +5,12 @@ import { BriefNumbers } from '../verdicts/brief-finding.js';
 import { meets } from '../verdicts/compare.js';
 import type { NumberFinding } from '../verdicts/finding.js';
 import { numberAt, STANDS, writeReading, type InNumbers, type NumbersOf, type Row } from './in-numbers.js';
+import { decidesByLoad, isLoadEnough, loadAtGain } from './phase-margin-capacitive-load.js';
 import { needsInputCapacitance, ownPoleOf, type PhaseMarginFound } from './phase-margin-figures.js';
-import { isMarginLeft, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
+import { isMarginLeft, leastMargin, sideOfMargin, worstMargin, type Ends, type LoadedOutput, type Loop } from './phase-margin-loop.js';
 
-/** Where the numbers stand in a row: Hz, degrees, F and Ω (not a number: not known), each with the weakness of its basis behind it. */
-const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWeakness: 5, crossover: 6, input: 8, inputWeakness: 9, resistance: 10, resistanceWeakness: 11, capacitiveLoad: 12 } as const;
+/** Where the numbers stand in a row: Hz, degrees, F, Ω and F at the noise gain of the stage (not a number: not known), each with the weakness of its basis behind it. */
+const AT = { least: 0, most: 1, printed: 2, speedWeakness: 3, angle: 4, angleWeakness: 5, crossover: 6, input: 8, inputWeakness: 9, resistance: 10, resistanceWeakness: 11, load: 12, loadWeakness: 13 } as const;
 
 type Asked = PhaseMarginDemand;
 
@@ -32,8 +33,14 @@ export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
     unityCrossover: READING,
     inputCapacitance: READING,
     outputResistance: READING,
-    // Neither decides about a loop that is known.
-    capacitiveLoad: { width: 1, write: (_, reading, { row, at }) => void (row[at] = reading?.value ?? NaN) },
+    capacitiveLoad: {
+      width: 2,
+      write(asked, reading, { row, at }) {
+        row[at] = reading === null ? NaN : loadAtGain(asked, reading);
+        row[at + 1] = weaknessOf(reading?.basis ?? 'guaranteed');
+      },
+    },
+    // For remedies alone.
     stableGain: NOTHING,
   },
   finding(asked, row) {
@@ -48,13 +55,23 @@ export const MARGIN_NUMBERS: InNumbers<Asked, PhaseMarginFound> = {
   },
 };
 
-/** With a load behind nobody knows what, and no load stated by the maker, what is left without it is a bound: enough of it leaves the part open. */
+/** With a load behind nobody knows what, what is left without it is a bound: enough of it leaves the part open, unless the load the maker states is enough. */
 function standsUnloaded(asked: Asked, row: Row): number {
-  const [least, most] = [numberAt(row, AT.least), numberAt(row, AT.most)];
-  if (Number.isNaN(most) || !Number.isNaN(numberAt(row, AT.capacitiveLoad))) return STANDS.untold;
-  const input = needsInputCapacitance(asked) ? numberAt(row, AT.input) : NaN;
-  const loop = loopOf(asked, { ownPole: ownPoleIn(row), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance: 0 });
-  return meets(asked.required, sideOfMargin(loop, { least, most }, asked.required), asked.sense) ? STANDS.open : STANDS.fails;
+  const ends = { least: numberAt(row, AT.least), most: numberAt(row, AT.most) };
+  const load = numberAt(row, AT.load);
+  if (Number.isNaN(ends.most) || load === Infinity) return STANDS.untold;
+  const needsInput = needsInputCapacitance(asked);
+  const input = needsInput ? numberAt(row, AT.input) : NaN;
+  const figured = { ownPole: ownPoleIn(row), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance: 0 };
+  const { required, sense } = asked;
+  if (!meets(required, sideOfMargin(loopOf(asked, figured), ends, required), sense)) return STANDS.fails;
+  if (Number.isNaN(load) || !decidesByLoad(asked)) return STANDS.open;
+  // The maker's limit contains the part's own excess phase.
+  const bare = loopOf(asked, { ...figured, ownPole: Infinity });
+  const isEnough = isLoadEnough(asked, load, leastMargin(bare, ends)) || isLoadEnough(asked, load, worstMargin(bare, ends).margin);
+  if (!isEnough) return STANDS.open;
+  const ofInput = !needsInput ? 0 : !Number.isNaN(input) ? numberAt(row, AT.inputWeakness) : isInputAssumed({ loop: bare, ends, required }) ? ASSUMED : 0;
+  return STANDS.passes + Math.max(numberAt(row, AT.loadWeakness), ofInput);
 }
 
 const ownPoleIn = (row: Row): number => ownPoleOf({ angle: numberAt(row, AT.angle), crossover: numberAt(row, AT.crossover), gainBandwidth: numberAt(row, AT.printed) });
