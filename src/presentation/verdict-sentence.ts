@@ -14,7 +14,8 @@ export function verdictSentence(verdict: Verdict): string {
   if (value === null) return `${verdict.title}: ${why(verdict)}; ${RELATION[sense]} ${formatComparison(limited.value, limited.value, limited.unit, sense)[1]}`;
   const said = spoken(verdict.check, verdict.spare === 0 ? required : value, unit);
   const [shown, limit] = formatComparison(said.value, limited.value, said.unit, sense);
-  const partly = typeof offered === 'number' ? '' : 'at least ';
+  // Of a bound that is not enough yet nothing is better than what is known of it.
+  const partly = typeof offered === 'number' ? '' : sense === 'at-most' ? 'at least ' : 'at most ';
   const ending = verdict.outcome === 'unknown' ? `: ${why(verdict)}` : verdict.outcome === 'fail' ? ': does not hold' : '';
   return `${verdict.title} ${partly}${shown}, ${RELATION[sense]} ${limit}${ending}`;
 }

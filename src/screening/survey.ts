@@ -45,10 +45,27 @@ export interface SurveyRequest {
   readonly outcomesOnly?: boolean;
 }
 
-/** Judges every part of a view: each check once per distinct combination of the pieces it looks at; then codes are added up. */
+/** The last survey of a view in which everything was asked, with the questions it answers. */
+const LAST = new WeakMap<ScreenView, { readonly questions: readonly object[]; readonly survey: Survey }>();
+
+/** Judges every part of a view: each check once per distinct combination of the pieces it looks at; then codes are added up. Asked the same again, it has the same answer. */
 export function survey(run: Judging, view: ScreenView, { circuit, outcomesOnly = false }: SurveyRequest): Survey {
   const questions = checkQuestions(run, view, { circuit, outcomesOnly });
   const current = currentQuestion(run, view);
+  if (outcomesOnly) return surveyed({ run, view, questions, current, outcomesOnly });
+  const before = LAST.get(view);
+  if (before !== undefined && isSame(before.questions, [...questions, current])) return before.survey;
+  const made = surveyed({ run, view, questions, current, outcomesOnly });
+  LAST.set(view, { questions: [...questions, current], survey: made });
+  return made;
+}
+
+/** A question is the same object where the stage asks the same in the same surroundings. */
+const isSame = (some: readonly object[], others: readonly object[]): boolean => some.length === others.length && some.every((one, at) => one === others[at]);
+
+type Surveying = Pick<Counting, 'run' | 'view' | 'questions' | 'current'> & { readonly outcomesOnly: boolean };
+
+function surveyed({ run, view, questions, current, outcomesOnly }: Surveying): Survey {
   const counting: Counting = {
     run, view, questions, current,
     outcomes: new Uint8Array(view.size), fits: [], undecided: [], nearest: nearestKeeper(),

@@ -94,7 +94,7 @@ function numbersOf(check: CheckIdentity, { outcome, shown, basis }: Pick<Decided
     spare: compared ? tidy(spareOf(shown.required, offered, shown.sense), shown.required, offered) : null,
     basis: outcome === 'unknown' ? null : basis,
     standsOn: shown.kind === 'undecided' ? null : basis,
-    known: shown.kind === 'bound' && (shown.known !== 0 || outcome === 'fail') ? shown.known : null,
+    known: shown.kind === 'bound' && (shown.known !== 0 || outcome === 'fail') ? finite(shown.known) : null,
   };
 }
 

@@ -70,6 +70,14 @@ describe('sentences about checks', () => {
     }
   });
 
+  it('of a bound say which way the rest of it goes: of what must be at least something no more is known', () => {
+    const [atLeast, atMost] = (['at-least', 'at-most'] as const).map((sense) => of('unknown').find((verdict) => verdict.known !== null && verdict.sense === sense));
+    if (atLeast === undefined || atMost === undefined) throw new Error('no such bound among the samples');
+    expect(verdictSentence(atLeast)).toMatch(/ at most \d.*, needs at least /u);
+    expect(verdictSentence(atMost)).toMatch(/ at least \d.*, allowed at most /u);
+    expect(verdictSentence({ ...atLeast, known: null })).toMatch(/: a figure is missing .*; needs at least /u);
+  });
+
   it('of an open check give the reason', () => {
     for (const verdict of of('unknown')) {
       expect(verdict.reason, verdict.check).not.toBeNull();

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { decide } from '../../src/verdicts/decide.js';
+import { decide, decideBriefly } from '../../src/verdicts/decide.js';
 import { standingOf } from '../../src/verdicts/standing.js';
 import type { BoundFinding, Finding, NumberFinding, SingleFinding, UndecidedFinding } from '../../src/verdicts/finding.js';
 
@@ -61,6 +61,12 @@ describe('a bound', () => {
   it('beyond the limit on the optimistic reading is a fail: offered null, known', () => {
     expect(verdict(bound(12), bound(11))).toMatchObject({ outcome: 'fail', offered: null, known: 11 });
     expect(verdict(bound(12), bound(9)).outcome).toBe('unknown');
+  });
+
+  it('that is as good as can be tells nothing of what is known', () => {
+    const open = verdict(bound(Infinity, { sense: 'at-least' }));
+    expect(open).toMatchObject({ outcome: 'unknown', offered: null, known: null });
+    expect(decideBriefly(CHECK, bound(Infinity, { sense: 'at-least' }), bound(Infinity, { sense: 'at-least' })).known).toBeNull();
   });
 });
 
