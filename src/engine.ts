@@ -7,7 +7,7 @@ import { predictStage, type Prediction } from './prediction/index.js';
 import { outlineAndRank, outlinesIn, screenAndRank } from './ranking/index.js';
 import type { Asking, Comparison, DataUsed, DemandsReport, Explanation, PredictedInstead, PredictionReport, Report } from './report.js';
 import { RULES } from './rules.js';
-import { type JudgedPart, judgePart, judgingOf, lendersOf } from './screening/index.js';
+import { judgedMisses, type JudgedPart, judgePart, judgingOf, lendersOf, surveyedMisses } from './screening/index.js';
 import type { Stage } from './stage/index.js';
 
 const PLAIN: Asking = { strict: false, order: 'merit', assumed: [] };
@@ -44,7 +44,12 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
 export function withWaysOut(report: Report, source: PartSource, changing: Changing): Report {
   if (report.fit.length > 0 || report.counts.parts === 0) return report;
   const { stage, rejected, undecided, asking } = report;
-  const search = { stage, source, screened: { rejected, undecided }, strict: asking.strict, order: asking.order };
+  const circuit = oneCircuit(stage);
+  // Parts of a list with views are not read for it.
+  const misses = source.screening === undefined
+    ? judgedMisses([...rejected, ...undecided])
+    : surveyedMisses({ demands: deriveDemands(stage), circuit: circuit.mark() }, source, asking.strict);
+  const search = { stage, source, misses, strict: asking.strict, order: asking.order };
   return { ...report, nothingFits: whyNothingFits(search, changing) };
 }
 

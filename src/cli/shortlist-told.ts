@@ -17,8 +17,17 @@ export interface Told {
 export function told(report: Report, source: PartSource, { session, options, context }: Told): Pick<Outcome, 'text'> {
   if (options.lookups === true) return lookedUp(withLookups(report, source), { session, options, context });
   if (options.csv === true) return { text: shortlistCsv(report) };
-  const isLong = report.undecided.filter(({ part }) => part.tier === 'approved').length > MOST_SEARCHED;
-  return { text: renderShortlist(isLong ? report : withLookups(report, source), styleFor(session, options), context) };
+  return { text: renderShortlist(isLong(report) ? report : withLookups(report, source), styleFor(session, options), context) };
+}
+
+/** No more parts are read than are counted. */
+function isLong({ undecided }: Report): boolean {
+  let approved = 0;
+  for (const { part } of undecided) {
+    if (part.tier === 'approved') approved += 1;
+    if (approved > MOST_SEARCHED) return true;
+  }
+  return false;
 }
 
 function lookedUp(report: Report, { session, options, context }: Told): Pick<Outcome, 'text'> {

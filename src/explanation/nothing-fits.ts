@@ -1,7 +1,7 @@
-import { demandsWhenAsked } from '../demands/index.js';
+import { demandsWhenAsked, oneCircuit } from '../demands/index.js';
 import type { PartSource } from '../parts/part.js';
-import { rank, type Order } from '../ranking/index.js';
-import { judgePart, judgingOf, lendersOf, probePart, type JudgedPart, type Screened } from '../screening/index.js';
+import { type Order, outlinesIn } from '../ranking/index.js';
+import { type JudgedPart, lendersOf, type Miss } from '../screening/index.js';
 import type { Stage } from '../stage/index.js';
 import { changesFor } from './changes.js';
 import { setting, type Change, type Changing } from './changing.js';
@@ -30,7 +30,8 @@ export interface NothingFits {
 export interface EmptySearch {
   readonly stage: Stage;
   readonly source: PartSource;
-  readonly screened: Pick<Screened, 'rejected' | 'undecided'>;
+  /** The parts that do not fit, then those that cannot be decided. */
+  readonly misses: Iterable<Miss>;
   readonly strict: boolean;
   readonly order: Order;
 }
@@ -44,17 +45,18 @@ const EACH_WAY = 2;
 
 /** Looks among the nearest parts for the smallest changes, and counts what each lets in. */
 export function whyNothingFits(search: EmptySearch, changing: Changing): NothingFits {
-  const { stage, source, screened, strict } = search;
+  const { stage, source, misses, strict } = search;
   const movers = moversOf(changing, stage);
   const mayMove = (check: string): boolean => movers.some(({ touches }) => touches?.includes(check) === true);
-  const looked = nearestEachWay([...screened.rejected, ...screened.undecided], movers);
+  const looked = nearestEachWay(misses, movers);
   const found = looked.flatMap(({ part }) => changesFor({ stage, part, parts: lendersOf(source), strict }, changing).options);
   const rails = isRailWanted(stage);
   const options = smallestEach(found).sort((a, b) => (rails ? Number(isSwing(b)) - Number(isSwing(a)) : 0) || a.factor - b.factor || a.moves.length - b.moves.length);
-  const count = (option: Change): CountedChange | null => countedOf(option, search, { changing, movers });
+  const outline = outlinesIn(source, search);
+  const count = (option: Change): CountedChange | null => countedOf(option, changing, outline);
   const counted = withoutLarger(options.slice(0, MOST_COUNTED).flatMap((option) => count(option) ?? []));
   const changes = counted.flatMap((least, at) => [least, ...(at === 0 ? widened(least, { movers, search, count }) : [])]);
-  return { conflict: conflictOf(screened.rejected, mayMove), changes: changes.slice(0, MOST_OPTIONS), looked: looked.length };
+  return { conflict: conflictOf(misses, mayMove), changes: changes.slice(0, MOST_OPTIONS), looked: looked.length };
 }
 
 interface Widening {
@@ -89,32 +91,46 @@ const NO_ROOM = 1e-3;
 
 export const isSwing = ({ moves }: Change): boolean => moves.length === 1 && moves[0]?.path === 'limits.swingLoss';
 
-/** The parts that no fixed input keeps out, nearest first, a few of each set of failing checks. */
-function nearestEachWay(parts: readonly JudgedPart[], movers: readonly Mover[]): JudgedPart[] {
+/** The parts that no fixed input keeps out, nearest first, a few of each set of failing checks; of equals the first of the catalog. */
+function nearestEachWay(misses: Iterable<Miss>, movers: readonly Mover[]): JudgedPart[] {
   const any = movers.some(({ touches }) => touches === null);
   const touched = new Set(movers.flatMap(({ touches }) => touches ?? []));
   const operating = movers.some(({ path }) => /^(?:supply|temperature)/u.test(path));
   const mayTurn = (check: string): boolean => touched.has(check) || (any && (operating || !OWN_LIMIT.has(check)));
-  const open = parts.filter((one) => notPassing(one).every(mayTurn));
-  const ordered = open.map((one) => ({ one, way: notPassing(one).join(' '), far: farOf(one) })).sort((a, b) => a.far - b.far || (a.one.part.id < b.one.part.id ? -1 : 1));
-  const seen = new Map<string, number>();
-  return ordered
-    .filter(({ way }) => {
-      seen.set(way, (seen.get(way) ?? 0) + 1);
-      return (seen.get(way) ?? 0) <= EACH_WAY;
-    })
-    .slice(0, LOOKED)
-    .map(({ one }) => one);
+  const ways = new Map<string, Far[]>();
+  for (const miss of misses) {
+    if (!miss.unmet.every(mayTurn)) continue;
+    const way = miss.unmet.join(' ');
+    const nearest = ways.get(way) ?? [];
+    ways.set(way, nearest);
+    const far = farOf(miss);
+    const last = nearest[EACH_WAY - 1];
+    if (last !== undefined && far >= last.far) continue;
+    const before = nearest.findIndex((one) => far < one.far);
+    nearest.splice(before < 0 ? nearest.length : before, 0, { miss, far });
+    nearest.splice(EACH_WAY);
+  }
+  // Sorting leaves equals in their order.
+  return [...ways.values()].flat().sort((a, b) => a.far - b.far).slice(0, LOOKED).map(({ miss }) => miss.judged());
+}
+
+interface Far {
+  readonly miss: Miss;
+  readonly far: number;
 }
 
 /** Checks that turn with their own limit alone, at the same supply and temperature: no signal and no resistor helps them. */
 const OWN_LIMIT: ReadonlySet<string> = new Set(['supply-current', 'price', ...Object.values(WORD_CHECKS)]);
 
-const notPassing = ({ verdicts }: JudgedPart): string[] => verdicts.filter(({ outcome }) => outcome !== 'pass').map(({ check }) => check);
-
 /** The largest ratio by which a check misses, as a logarithm; head-rooms by their share of the swing asked. */
-function farOf({ verdicts }: JudgedPart): number {
-  return Math.max(...verdicts.filter(({ outcome }) => outcome !== 'pass').map(({ margin, spare }) => (margin !== null && margin > 0 ? Math.abs(Math.log(margin)) : Math.abs(spare ?? 1))));
+function farOf(miss: Miss): number {
+  let far = 0;
+  for (const check of miss.unmet) {
+    const verdict = miss.verdict(check);
+    const margin = verdict?.margin ?? null;
+    far = Math.max(far, margin !== null && margin > 0 ? Math.abs(Math.log(margin)) : Math.abs(verdict?.spare ?? 1));
+  }
+  return far;
 }
 
 /** Of changes that move the same fields the one with the least factor. */
@@ -128,15 +144,10 @@ function smallestEach(options: readonly Change[]): Change[] {
   return [...least.values()];
 }
 
-/** The whole catalog under the change. Parts that fail a check it does not touch stay out and are not judged again. */
-function countedOf(option: Change, { source, screened, strict, order }: EmptySearch, { changing, movers }: { readonly changing: Changing; readonly movers: readonly Mover[] }): CountedChange | null {
+/** The whole catalog under the change: what was found out of it serves again but for the checks the change touches. */
+function countedOf(option: Change, changing: Changing, outline: ReturnType<typeof outlinesIn>): CountedChange | null {
   const moved = changing.rerun(option.moves.map(({ path, text }) => setting(path, text)));
   if (moved === null) return null;
-  const touching = option.moves.map(({ path }) => movers.find((mover) => mover.path === path)?.touches ?? null);
-  const touched = touching.includes(null) ? null : new Set(touching.flatMap((checks) => checks ?? []));
-  const open = [...screened.rejected, ...screened.undecided].filter((one) => touched === null || notPassing(one).every((check) => touched.has(check)));
-  const run = judgingOf(demandsWhenAsked(moved), source, strict);
-  const fit = open.filter(({ part }) => probePart(run, part).fits()).map(({ part }) => judgePart(run, part));
-  const first = rank(fit, order)[0];
-  return first === undefined ? null : { ...option, lets: fit.length, first: first.part.id };
+  const { counts, first } = outline({ demands: demandsWhenAsked(moved), circuit: oneCircuit(moved).mark() });
+  return first === null ? null : { ...option, lets: counts.fit, first };
 }

@@ -1,4 +1,5 @@
-import type { JudgedPart } from '../screening/index.js';
+import type { Miss } from '../screening/index.js';
+import type { BriefVerdict } from '../verdicts/decide.js';
 import type { Verdict } from '../verdicts/verdict.js';
 import type { Change } from './changing.js';
 import { factorOf, type Mover } from './movers.js';
@@ -12,13 +13,14 @@ const WIDER = 5;
  * After the least move of one upper limit that lets a part in, the one that lets in most for a little more: what the other parts need
  * that fail nothing but checks of this limit. Null where no more come in.
  */
-export function widerOf(least: CountedChange, mover: Mover, { stage, screened }: Pick<EmptySearch, 'stage' | 'screened'>): Change | null {
+export function widerOf(least: CountedChange, mover: Mover, { stage, misses }: Pick<EmptySearch, 'stage' | 'misses'>): Change | null {
   const [move] = least.moves;
   const { touches, input } = mover;
   if (least.moves.length !== 1 || move?.value == null || touches === null || mover.direction !== 'up' || input.form !== 'value') return null;
   const from = mover.from;
   const most = Math.min(mover.most, from + WIDER * (move.value - from));
-  const needs = [...screened.rejected, ...screened.undecided].flatMap((part) => needOf(part, { touches, from }) ?? []);
+  const needs: number[] = [];
+  for (const miss of misses) needs.push(...needOf(miss, { touches, from, most }));
   const wanted = Math.max(...needs.filter((value) => value <= most));
   if (!(wanted > move.value)) return null;
   const options = { digits: fewDigits(wanted, input.unit, 'up'), round: 'up' } as const;
@@ -27,13 +29,23 @@ export function widerOf(least: CountedChange, mover: Mover, { stage, screened }:
   return { ...least, moves: [{ ...move, text: `${input.before ?? ''}${writtenValue(wanted, input.unit, options)}`, value, boundary: wanted, factor }], factor };
 }
 
-/** The limit with which a part passes that fails nothing else, as its worst readings say: to be judged again before it is told. */
-function needOf({ verdicts }: JudgedPart, { touches, from }: { readonly touches: readonly string[]; readonly from: number }): number | null {
-  const open = verdicts.filter(({ outcome }) => outcome !== 'pass');
-  if (!open.every(({ check }) => touches.includes(check))) return null;
-  const needs = open.map((verdict) => offeredAtWorst(verdict, from));
-  return needs.includes(null) ? null : Math.max(...needs.map(Number));
+interface Within {
+  readonly touches: readonly string[];
+  readonly from: number;
+  readonly most: number;
 }
+
+/** The limit with which a part passes that fails nothing else, as its worst readings say: to be judged again before it is told. None beyond the most. */
+function needOf(miss: Miss, { touches, from, most }: Within): number[] {
+  if (!miss.unmet.every((check) => touches.includes(check))) return [];
+  // One reading of each is at hand: what it needs already, the other one needs at least as well.
+  if (miss.unmet.some((check) => offeredOf(miss.verdict(check), from) > most)) return [];
+  const needs = miss.judged().verdicts.flatMap((verdict) => (verdict.outcome === 'pass' ? [] : [offeredAtWorst(verdict, from)]));
+  return needs.includes(null) ? [] : [Math.max(...needs.map(Number))];
+}
+
+const offeredOf = (verdict: BriefVerdict | null, from: number): number =>
+  typeof verdict?.offered === 'number' && typeof verdict.required === 'number' ? verdict.offered - verdict.required + from : 0;
 
 /** Where the limit itself is compared, what is offered; else (room at a rail) the limit and what is short. */
 function offeredAtWorst({ offered, offeredBest, required, sense }: Verdict, from: number): number | null {

@@ -96,27 +96,29 @@ interface Reach {
   readonly otherwise: boolean;
 }
 
-/** The least head-room a part needs at that rail, on its worst reading; of those that fail nothing else where there are any. */
+/** The least head-room a part needs at that rail, on its worst reading; of those that fail nothing else where there are any. Of a long list nobody is asked who fails other checks too. */
 function reachOf({ rejected }: Report, check: string): Reach | null {
-  const found = rejected.flatMap((part): Reach[] => {
+  const reaches = (parts: readonly JudgedPart[], otherwise: boolean): Reach[] => parts.flatMap((part): Reach[] => {
     const verdict = part.verdicts.find((one) => one.check === check);
     const values = [verdict?.offered, verdict?.offeredBest].filter((value) => typeof value === 'number');
-    const otherwise = part.verdicts.every((one) => one.outcome !== 'fail' || RAILS.has(one.check));
     return values.length === 0 ? [] : [{ part, needs: Math.max(...values), otherwise }];
   });
-  const better = (best: Reach | null, next: Reach): Reach =>
-    best === null || (next.otherwise !== best.otherwise ? next.otherwise : next.needs < best.needs) ? next : best;
-  return found.reduce<Reach | null>(better, null);
+  const least = (found: readonly Reach[]): Reach | null => found.reduce<Reach | null>((best, next) => (best === null || next.needs < best.needs ? next : best), null);
+  return least(reaches(rejected.filter(failsAtRails), true)) ?? (rejected.length > LONG ? null : least(reaches(rejected, false)));
 }
 
+const LONG = 2000;
+
 const RAILS: ReadonlySet<string> = new Set(['output-low', 'output-high']);
+
+/** And nowhere else; known without judging it in words. */
+const failsAtRails = ({ deciding }: JudgedPart): boolean => deciding.every((check) => RAILS.has(check));
 
 /** What would have to be given up at the rails for a part that fails nothing else, V, rounded up; null when there is none. */
 export function swingLossToTry(report: Report): number | null {
   if (beyondRail(report.stage, 'output-low') !== null || beyondRail(report.stage, 'output-high') !== null) return null;
-  const short = report.rejected.flatMap((part) => {
+  const short = report.rejected.filter(failsAtRails).flatMap((part) => {
     const failing = part.verdicts.filter((one) => one.outcome === 'fail');
-    if (!failing.every((one) => RAILS.has(one.check))) return [];
     const needs = failing.map(({ offered, offeredBest, required }) =>
       typeof offered === 'number' && typeof offeredBest === 'number' && typeof required === 'number' ? Math.max(offered, offeredBest) - required : null,
     );

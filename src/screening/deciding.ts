@@ -18,27 +18,31 @@ export type Decisive = 'fail' | 'unknown';
 export function decidingIn(run: Judging, view: ScreenView, circuit: string): (position: number, decisive: Decisive) => Decided {
   const questions = checkQuestions(run, view, { circuit });
   const current = currentQuestion(run, view);
-  const asked: Asked = { view, questions, current };
+  const asked: AskedOf = { view, questions, current };
   let last: Answers | null = null;
   return (position, decisive) => {
     const segment = Math.floor(position / view.segment);
-    if (last?.segment !== segment) last = answersIn(asked, segment, last?.buffers ?? newBuffers(view, questions.length));
+    if (last?.segment !== segment) last = answersIn(asked, segment, last?.buffers ?? null);
     return decidedAt(asked, last.buffers, { at: position - segment * view.segment, decisive });
   };
 }
 
-interface Asked {
+/** What the parts of a view are asked. */
+export interface AskedOf {
   readonly view: ScreenView;
   readonly questions: readonly CheckQuestion[];
   readonly current: ReturnType<typeof currentQuestion>;
 }
 
-interface Answers {
+/** The answers in one segment, until another is asked about with the same buffers. */
+export interface Answers {
   readonly segment: number;
   readonly buffers: Buffers;
 }
 
-function answersIn({ view, questions, current }: Asked, segment: number, buffers: Buffers): Answers {
+/** `before`: buffers that need not hold what they hold; null: there are none yet. */
+export function answersIn({ view, questions, current }: AskedOf, segment: number, before: Buffers | null): Answers {
+  const buffers = before ?? newBuffers(view, questions.length);
   const count = Math.min(view.segment, view.size - segment * view.segment);
   const codes = codesOf(view, segment, buffers);
   for (const [at, one] of questions.entries()) {
@@ -49,7 +53,7 @@ function answersIn({ view, questions, current }: Asked, segment: number, buffers
   return { segment, buffers };
 }
 
-function decidedAt({ questions, current }: Asked, { answers, current: values }: Buffers, { at, decisive }: { readonly at: number; readonly decisive: Decisive }): Decided {
+function decidedAt({ questions, current }: AskedOf, { answers, current: values }: Buffers, { at, decisive }: { readonly at: number; readonly decisive: Decisive }): Decided {
   const deciding = questions.filter((one, question) => {
     const answer = answers[question]?.[at] ?? 0;
     one.settle?.(answer);

@@ -18,6 +18,8 @@ export interface Digests {
   readonly distances: Float64Array | null;
   /** The same for one answer. */
   distance(answer: number): number;
+  /** The verdict of an answer that fails or is open; null for any other. */
+  miss(answer: number): BriefVerdict | null;
   /** What a pass is ranked by, one and the same object whenever it is asked for; null for any other answer. */
   pass(answer: number): Digest | null;
 }
@@ -40,10 +42,12 @@ export function digests(nominalSupply: number, verdictOf: (answer: number) => Br
   const kinds = column(Uint8Array, 0);
   const kindList: Kind[] = [];
   const passes = new Map<number, Digest>();
+  const misses = new Map<number, BriefVerdict>();
   const put = (answer: number, verdict: BriefVerdict | null): number => {
     counts.put(answer, verdict === null ? 0 : countOf(verdict));
     values.put(answer, verdict?.outcome === 'fail' ? shortness(verdict, nominalSupply) : (verdict?.margin ?? 0));
     spares.put(answer, verdict?.spare ?? 0);
+    if (verdict !== null && verdict.outcome !== 'pass') misses.set(answer, verdict);
     kinds.put(answer, verdict?.outcome === 'pass' ? numberOf(kindOf(verdict), kindList) : 0);
     return answer;
   };
@@ -52,6 +56,7 @@ export function digests(nominalSupply: number, verdictOf: (answer: number) => Br
     get counts() { return counts.numbers(); },
     get distances() { return values.numbers(); },
     distance: (answer) => (counts.at(answer) === COUNTS.fail ? values.at(answer) : 0),
+    miss: (answer) => misses.get(answer) ?? null,
     add: (verdict) => put(added++, verdict),
     settle(answer) {
       if (counts.at(answer) === UNSETTLED) put(answer, verdictOf(answer));
@@ -77,6 +82,7 @@ export function digestsByPart(size: number, { nominalSupply, verdictOf, countedO
       const verdict = counts[answer] === COUNTS.fail ? verdictOf(answer) : null;
       return verdict === null ? 0 : shortness(verdict, nominalSupply);
     },
+    miss: (answer) => (counts[answer] === COUNTS.fail || counts[answer] === COUNTS.unknown ? verdictOf(answer) : null),
     settle(answer) {
       if (counts[answer] !== UNSETTLED) return;
       const counted = countedOf(answer);

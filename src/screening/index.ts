@@ -5,6 +5,7 @@ export type { DynamicRange } from './dynamic-range.js';
 export type { PartHazard } from './hazards.js';
 export type { Confirmation, JudgedPart, PartOutcome } from './judged-part.js';
 export { screen, type Rejection, type Screened } from './screen.js';
+export { judgedMisses, type Miss, surveyedMisses } from './misses.js';
 export { lazyList } from './lazy-list.js';
 export { type Marked, type OutcomeCounts, screenViews, type SurveyedCatalog } from './screen-views.js';
 export type { Digest } from './digest.js';
