@@ -44,11 +44,10 @@ export function shortlist(stage: Stage, source: PartSource, asking: Asking = PLA
 export function withWaysOut(report: Report, source: PartSource, changing: Changing): Report {
   if (report.fit.length > 0 || report.counts.parts === 0) return report;
   const { stage, rejected, undecided, asking } = report;
-  const circuit = oneCircuit(stage);
   // Parts of a list with views are not read for it.
   const misses = source.screening === undefined
     ? judgedMisses([...rejected, ...undecided])
-    : surveyedMisses({ demands: deriveDemands(stage), circuit: circuit.mark() }, source, asking.strict);
+    : surveyedMisses({ demands: deriveDemands(stage), circuit: oneCircuit(stage).mark() }, source, asking.strict);
   const search = { stage, source, misses, strict: asking.strict, order: asking.order };
   return { ...report, nothingFits: whyNothingFits(search, changing) };
 }

@@ -60,8 +60,7 @@ function standsUnloaded(asked: Asked, row: Row): number {
   const ends = { least: numberAt(row, AT.least), most: numberAt(row, AT.most) };
   const load = numberAt(row, AT.load);
   if (Number.isNaN(ends.most) || load === Infinity) return STANDS.untold;
-  const needsInput = needsInputCapacitance(asked);
-  const input = needsInput ? numberAt(row, AT.input) : NaN;
+  const [needsInput, input] = [needsInputCapacitance(asked), inputIn(asked, row)];
   const figured = { ownPole: ownPoleIn(row), inputCapacitance: Number.isNaN(input) ? 0 : input, outputResistance: 0 };
   const { required, sense } = asked;
   if (!meets(required, sideOfMargin(loopOf(asked, figured), ends, required), sense)) return STANDS.fails;
@@ -73,6 +72,9 @@ function standsUnloaded(asked: Asked, row: Row): number {
   const ofInput = !needsInput ? 0 : !Number.isNaN(input) ? numberAt(row, AT.inputWeakness) : isInputAssumed({ loop: bare, ends, required }) ? ASSUMED : 0;
   return STANDS.passes + Math.max(numberAt(row, AT.loadWeakness), ofInput);
 }
+
+/** F; not a number: not known, or of no account. */
+const inputIn = (asked: Asked, row: Row): number => (needsInputCapacitance(asked) ? numberAt(row, AT.input) : NaN);
 
 const ownPoleIn = (row: Row): number => ownPoleOf({ angle: numberAt(row, AT.angle), crossover: numberAt(row, AT.crossover), gainBandwidth: numberAt(row, AT.printed) });
 
@@ -93,8 +95,7 @@ function loopIn(asked: Asked, row: Row): LoopNumbers | null {
   const isLoaded = asked.load.capacitance > 0;
   const outputResistance = isLoaded ? numberAt(row, AT.resistance) : 0;
   if (Number.isNaN(most) || Number.isNaN(outputResistance)) return null;
-  const needsInput = needsInputCapacitance(asked);
-  const input = needsInput ? numberAt(row, AT.input) : NaN;
+  const [needsInput, input] = [needsInputCapacitance(asked), inputIn(asked, row)];
   const angle = numberAt(row, AT.angle);
   const ofAngle = Number.isNaN(angle) ? ASSUMED : angle >= 90 || !Number.isNaN(numberAt(row, AT.crossover)) ? numberAt(row, AT.angleWeakness) : ESTIMATED;
   return {

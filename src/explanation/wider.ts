@@ -19,9 +19,11 @@ export function widerOf(least: CountedChange, mover: Mover, { stage, misses }: P
   if (least.moves.length !== 1 || move?.value == null || touches === null || mover.direction !== 'up' || input.form !== 'value') return null;
   const from = mover.from;
   const most = Math.min(mover.most, from + WIDER * (move.value - from));
-  const needs: number[] = [];
-  for (const miss of misses) needs.push(...needOf(miss, { touches, from, most }));
-  const wanted = Math.max(...needs.filter((value) => value <= most));
+  let wanted = -Infinity;
+  for (const miss of misses) {
+    const need = needOf(miss, { touches, from, most });
+    if (need !== null && need <= most) wanted = Math.max(wanted, need);
+  }
   if (!(wanted > move.value)) return null;
   const options = { digits: fewDigits(wanted, input.unit, 'up'), round: 'up' } as const;
   const value = printedAs(wanted, input.unit, options);
@@ -35,13 +37,13 @@ interface Within {
   readonly most: number;
 }
 
-/** The limit with which a part passes that fails nothing else, as its worst readings say: to be judged again before it is told. None beyond the most. */
-function needOf(miss: Miss, { touches, from, most }: Within): number[] {
-  if (!miss.unmet.every((check) => touches.includes(check))) return [];
+/** The limit with which a part passes that fails nothing else, as its worst readings say: to be judged again before it is told. Null: more than the most, or no limit helps. */
+function needOf(miss: Miss, { touches, from, most }: Within): number | null {
+  if (!miss.unmet.every((check) => touches.includes(check))) return null;
   // One reading of each is at hand: what it needs already, the other one needs at least as well.
-  if (miss.unmet.some((check) => offeredOf(miss.verdict(check), from) > most)) return [];
+  if (miss.unmet.some((check) => offeredOf(miss.verdict(check), from) > most)) return null;
   const needs = miss.judged().verdicts.flatMap((verdict) => (verdict.outcome === 'pass' ? [] : [offeredAtWorst(verdict, from)]));
-  return needs.includes(null) ? [] : [Math.max(...needs.map(Number))];
+  return needs.includes(null) ? null : Math.max(...needs.map(Number));
 }
 
 const offeredOf = (verdict: BriefVerdict | null, from: number): number =>

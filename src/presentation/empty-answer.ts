@@ -96,18 +96,20 @@ interface Reach {
   readonly otherwise: boolean;
 }
 
-/** The least head-room a part needs at that rail, on its worst reading; of those that fail nothing else where there are any. Of a long list nobody is asked who fails other checks too. */
+/** The least head-room a part needs at that rail, on its worst reading; of those that fail nothing else where there are any. */
 function reachOf({ rejected }: Report, check: string): Reach | null {
   const reaches = (parts: readonly JudgedPart[], otherwise: boolean): Reach[] => parts.flatMap((part): Reach[] => {
     const verdict = part.verdicts.find((one) => one.check === check);
     const values = [verdict?.offered, verdict?.offeredBest].filter((value) => typeof value === 'number');
     return values.length === 0 ? [] : [{ part, needs: Math.max(...values), otherwise }];
   });
+  if (rejected.length > LONG) return null;
   const least = (found: readonly Reach[]): Reach | null => found.reduce<Reach | null>((best, next) => (best === null || next.needs < best.needs ? next : best), null);
-  return least(reaches(rejected.filter(failsAtRails), true)) ?? (rejected.length > LONG ? null : least(reaches(rejected, false)));
+  return least(reaches(rejected.filter(failsAtRails), true)) ?? least(reaches(rejected, false));
 }
 
-const LONG = 2000;
+/** Of a longer list the parts are not gone through one by one: what lets one in was looked for already. */
+const LONG = 20_000;
 
 const RAILS: ReadonlySet<string> = new Set(['output-low', 'output-high']);
 
@@ -116,6 +118,7 @@ const failsAtRails = ({ deciding }: JudgedPart): boolean => deciding.every((chec
 
 /** What would have to be given up at the rails for a part that fails nothing else, V, rounded up; null when there is none. */
 export function swingLossToTry(report: Report): number | null {
+  if (report.rejected.length > LONG) return null;
   if (beyondRail(report.stage, 'output-low') !== null || beyondRail(report.stage, 'output-high') !== null) return null;
   const short = report.rejected.filter(failsAtRails).flatMap((part) => {
     const failing = part.verdicts.filter((one) => one.outcome === 'fail');

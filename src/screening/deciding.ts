@@ -53,11 +53,15 @@ export function answersIn({ view, questions, current }: AskedOf, segment: number
   return { segment, buffers };
 }
 
+/** How an answer counts, of a segment that was asked about last. */
+export function countAt({ settle, digests }: CheckQuestion, answer: number): number {
+  settle?.(answer);
+  return digests.counts[answer] ?? 0;
+}
+
 function decidedAt({ questions, current }: AskedOf, { answers, current: values }: Buffers, { at, decisive }: { readonly at: number; readonly decisive: Decisive }): Decided {
   const deciding = questions.filter((one, question) => {
-    const answer = answers[question]?.[at] ?? 0;
-    one.settle?.(answer);
-    return one.digests.counts[answer] === COUNTS[decisive];
+    return countAt(one, answers[question]?.[at] ?? 0) === COUNTS[decisive];
   });
   return { deciding: deciding.map(({ check }) => check), current: current.values[values[at] ?? 0] ?? null };
 }

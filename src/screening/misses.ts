@@ -1,7 +1,6 @@
 import type { PartSource } from '../parts/part.js';
-import type { ScreenView } from '../parts/screen-view.js';
 import type { BriefVerdict } from '../verdicts/decide.js';
-import { answersIn, type Answers, type AskedOf } from './deciding.js';
+import { answersIn, type Answers, type AskedOf, countAt } from './deciding.js';
 import { COUNTS } from './digest.js';
 import { judgePart, type Judging, judgingOf } from './judge.js';
 import type { JudgedPart } from './judged-part.js';
@@ -36,28 +35,32 @@ export function judgedMisses(judged: readonly JudgedPart[]): Miss[] {
 
 /**
  * The parts of a source with views that do not fit, then those that cannot be decided, each in the order of the catalog: told from what the survey
- * knows, without reading them. Can be gone through again and again; nothing of a part is kept.
+ * knows, without reading them. Can be gone through again and again, whatever other stage is asked in between; nothing of a part is kept.
  */
 export function surveyedMisses({ demands, circuit }: Marked, source: PartSource, strict: boolean): Iterable<Miss> {
   const run = judgingOf(demands, source, strict);
   const views = (source.screening?.views ?? []).filter(({ size }) => size > 0);
+  const surveyed = views.map((view): Surveyed => ({
+    run,
+    outcomes: survey(run, view, { circuit }).outcomes,
+    asked: { view, questions: checkQuestions(run, view, { circuit }), current: currentQuestion(run, view) },
+  }));
   return {
     * [Symbol.iterator]() {
-      for (const outcome of [OUTCOME.rejected, OUTCOME.undecided]) for (const view of views) yield* missesIn({ run, view, circuit }, outcome);
+      for (const outcome of [OUTCOME.rejected, OUTCOME.undecided]) for (const one of surveyed) yield* missesIn(one, outcome);
     },
   };
 }
 
-interface Looked {
+interface Surveyed {
   readonly run: Judging;
-  readonly view: ScreenView;
-  readonly circuit: string;
+  readonly outcomes: Uint8Array;
+  readonly asked: AskedOf;
 }
 
-function* missesIn({ run, view, circuit }: Looked, wanted: number): Generator<Miss> {
-  const { outcomes } = survey(run, view, { circuit });
-  const asked: AskedOf = { view, questions: checkQuestions(run, view, { circuit }), current: currentQuestion(run, view) };
-  const namesOf = namesIn(asked.questions.map(({ check }) => check));
+function* missesIn({ run, outcomes, asked }: Surveyed, wanted: number): Generator<Miss> {
+  const { view, questions } = asked;
+  const namesOf = namesIn(questions.map(({ check }) => check));
   let answers: Answers | null = null;
   for (let position = 0; position < view.size; position += 1) {
     if (outcomes[position] !== wanted) continue;
@@ -77,10 +80,8 @@ function missAt({ run, asked: { view, questions }, namesOf }: Telling, { segment
   const at = position - segment * view.segment;
   const answerOf = (question: number): number => buffers.answers[question]?.[at] ?? 0;
   let [fails, unmet] = [0, 0];
-  questions.forEach(({ settle, digests }, question) => {
-    const answer = answerOf(question);
-    settle?.(answer);
-    const count = digests.counts[answer] ?? 0;
+  questions.forEach((one, question) => {
+    const count = countAt(one, answerOf(question));
     if (count === COUNTS.fail) fails += 2 ** question;
     if (count === COUNTS.fail || count === COUNTS.unknown) unmet += 2 ** question;
   });
